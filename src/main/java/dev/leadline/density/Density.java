@@ -1,0 +1,35 @@
+package dev.leadline.density;
+
+/// A probability density on the real line. Immutable, safe for all threads.
+///
+/// Every function is a pure function of its argument, takes `NaN` to `NaN`, and is bit-stable (see `numeric`).
+/// Both tails have their own functions: `1 - cdf(x)` is 0 exactly where a sign-off looks.
+public interface Density {
+    double pdf(double x);
+
+    /// Natural logarithm of the density; `-∞` outside the support.
+    double logPdf(double x);
+
+    double cdf(double x);
+
+    /// `P(X > x)`.
+    double survival(double x);
+
+    /// The x with `cdf(x) = p`; ends of the support at 0 and 1, `NaN` outside `[0, 1]`.
+    double quantile(double p);
+
+    /// The x with `survival(x) = q`; accurate for tiny q, where `quantile(1 - q)` is not.
+    double upperQuantile(double q);
+
+    /// `∞` where infinite, `NaN` where undefined.
+    double mean();
+
+    /// `∞` where infinite, `NaN` where undefined.
+    double variance();
+
+    Support support();
+
+    /// The density as a standardised shape, shifted and scaled: `location + scale * shape`. Tables are built, and
+    /// shared, per shape.
+    Standardised standardised();
+}

@@ -1,0 +1,63 @@
+package dev.leadline.model;
+
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+import java.util.SequencedMap;
+
+/// A project as it was written, before anything was checked: what a file holds and what the window edits.
+///
+/// Every part stands where the project file has it, so that a problem found later can name its place there. Empty
+/// optionals are fields that were not written; [Question#of] knows the defaults.
+public record Draft(
+        String title,
+        String notes,
+        boolean safety,
+        List<ConstantDraft> constants,
+        List<InputDraft> inputs,
+        List<String> steps,
+        List<AskDraft> asks,
+        Optional<ReferenceDraft> reference,
+        OptionalDouble confidence,
+        Optional<ToleranceDraft> tolerance,
+        Optional<StopDraft> stop,
+        OptionalLong seed,
+        List<LaneDraft> lanes) {
+
+    public Draft {
+        constants = List.copyOf(constants);
+        inputs = List.copyOf(inputs);
+        steps = List.copyOf(steps);
+        asks = List.copyOf(asks);
+        lanes = List.copyOf(lanes);
+    }
+
+    public record ConstantDraft(String name, double value, String unit, String label, String source) {}
+
+    /// @param from how its values come about
+    public record InputDraft(String name, String unit, String label, String provenance, From from) {}
+
+    public sealed interface From {
+        /// A random variable with a density.
+        record Density(DensityDraft density) implements From {}
+
+        /// An integration variable; over an infinite range with a density to draw from.
+        record Range(double low, double high, Optional<DensityDraft> drawFrom) implements From {}
+    }
+
+    /// A member of a family; the names of the parameters are those of the file.
+    public record DensityDraft(String family, SequencedMap<String, Double> parameters) {}
+
+    /// @param estimand word of the file, as `probability`
+    public record AskDraft(String estimand, String formula, String unit, String label) {}
+
+    public record ReferenceDraft(double value, OptionalDouble error, String source) {}
+
+    /// @param when `either` or `both` where absolute and relative are both given; empty means either
+    public record ToleranceDraft(OptionalDouble absolute, OptionalDouble relative, Optional<String> when) {}
+
+    public record StopDraft(String rule, OptionalLong draws, OptionalDouble seconds) {}
+
+    public record LaneDraft(String name, String points) {}
+}

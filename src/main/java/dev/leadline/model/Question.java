@@ -1,0 +1,28 @@
+package dev.leadline.model;
+
+import dev.leadline.formula.Working;
+import java.util.List;
+import java.util.Optional;
+
+/// What is asked: answers wanted, formulas, inputs, reference, tolerance. Checked and immutable.
+///
+/// @param working the compiled formulas; its columns are `inputs`, its components those of `asks` in order
+/// @param reference of the first answer
+/// @param tolerance on the first answer
+public record Question(
+        String title,
+        String notes,
+        boolean safety,
+        List<Constant> constants,
+        List<Input> inputs,
+        Working working,
+        List<Ask> asks,
+        Optional<Reference> reference,
+        double confidence,
+        Optional<Tolerance> tolerance) {
+    public Question {
+        constants = List.copyOf(constants);
+        inputs = List.copyOf(inputs);
+        asks = List.copyOf(asks);
+    }
+}
