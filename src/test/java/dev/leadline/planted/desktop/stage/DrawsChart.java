@@ -1,0 +1,6 @@
+package dev.leadline.planted.desktop.stage;
+
+import org.jfree.chart.JFreeChart;
+
+/// Draws a chart in a package that also shows nodes.
+record DrawsChart(JFreeChart chart) {}

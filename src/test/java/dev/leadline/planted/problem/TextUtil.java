@@ -1,0 +1,4 @@
+package dev.leadline.planted.problem;
+
+/// Named after nothing.
+final class TextUtil {}
