@@ -1,5 +1,7 @@
 package dev.leadline.stream;
 
+import java.util.Objects;
+
 /// Where random numbers stand: equal addresses give equal numbers, on any machine, in any order.
 ///
 /// @param seed of the run, 0 or more
@@ -10,4 +12,14 @@ package dev.leadline.stream;
 public record Address(long seed, Purpose purpose, String lane, int replicate, String input, long item) {
     /// Stands for every lane; no lane can be called so.
     public static final String SHARED = "*";
+
+    public Address {
+        Objects.requireNonNull(purpose);
+        Objects.requireNonNull(lane);
+        Objects.requireNonNull(input);
+        if (seed < 0 || replicate < 0 || item < 0) {
+            throw new IllegalArgumentException(
+                    "seed " + seed + ", replicate " + replicate + ", item " + item + ": none may be negative");
+        }
+    }
 }

@@ -3,5 +3,16 @@ package dev.leadline.stream;
 /// What random numbers are drawn for; numbers of different purposes are independent.
 public enum Purpose {
     /// Draws that enter a result.
-    RUN
+    RUN(1);
+
+    private final int number;
+
+    Purpose(int number) {
+        this.number = number;
+    }
+
+    /// Stands for the purpose in the address: a recorded run keeps its digits only as long as this never changes.
+    int number() {
+        return number;
+    }
 }
