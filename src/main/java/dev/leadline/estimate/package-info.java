@@ -1,0 +1,6 @@
+/// What is asked for, and what has to be kept of the draws to answer it.
+///
+/// An [Estimand][dev.leadline.estimate.Estimand] names what is asked; an
+/// [Accumulator][dev.leadline.estimate.Accumulator] keeps the moments of the observations, in memory that does not grow
+/// with their number.
+package dev.leadline.estimate;

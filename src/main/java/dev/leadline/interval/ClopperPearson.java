@@ -1,0 +1,86 @@
+package dev.leadline.interval;
+
+import java.util.Optional;
+import org.apache.commons.statistics.distribution.BetaDistribution;
+
+/// The exact interval of Clopper and Pearson for a probability, from hits among independent draws.
+///
+/// Source: Clopper and Pearson (1934), Biometrika 26, 404-413.
+public final class ClopperPearson {
+    /// Word of the project file and of the commands.
+    public static final String KIND = "clopper-pearson";
+
+    private static final String ASSUMPTION = "The draws are independent; nothing else is taken for granted.";
+
+    private ClopperPearson() {}
+
+    /// The two-sided interval. With failed evaluations it holds whatever those would have been: its lower limit takes
+    /// them for misses, its upper one for hits.
+    ///
+    /// @param hits among the draws that could be evaluated
+    /// @param n draws that could be evaluated
+    /// @param failed draws that could not
+    /// @param level of confidence, between 0 and 1
+    public static Interval of(long hits, long n, long failed, double level) {
+        check(hits, n, failed, level);
+        long all = n + failed;
+        if (all == 0) {
+            return new Interval(
+                    Double.NaN, Double.NaN, level, KIND, ASSUMPTION, Optional.of("an interval needs at least 1 draw"));
+        }
+        double tail = (1 - level) / 2;
+        return new Interval(
+                low(hits, all, tail),
+                high(hits + failed, all, tail),
+                level,
+                KIND,
+                ASSUMPTION,
+                note(hits, n, failed, level));
+    }
+
+    private static Optional<String> note(long hits, long n, long failed, double level) {
+        String bracket = failed == 0
+                ? ""
+                : "; " + failed + " failed evaluations count as misses in the lower limit and as hits in the upper one";
+        String percent = Rounded.percent(level);
+        if (hits == 0 && n > 0) {
+            return Optional.of("no hit in " + n + " draws: below " + Rounded.up(upperLimit(0, n, failed, level))
+                    + " with " + percent + " one-sided confidence" + bracket);
+        }
+        if (hits == n && n > 0) {
+            return Optional.of("every one of " + n + " draws is a hit: above "
+                    + Rounded.down(lowerLimit(hits, n, failed, level)) + " with " + percent + " one-sided confidence"
+                    + bracket);
+        }
+        return failed == 0 ? Optional.empty() : Optional.of(bracket.substring(2));
+    }
+
+    /// The one-sided upper limit: not above it with confidence `level`.
+    public static double upperLimit(long hits, long n, long failed, double level) {
+        check(hits, n, failed, level);
+        return high(hits + failed, n + failed, 1 - level);
+    }
+
+    /// The one-sided lower limit: not below it with confidence `level`.
+    public static double lowerLimit(long hits, long n, long failed, double level) {
+        check(hits, n, failed, level);
+        return low(hits, n + failed, 1 - level);
+    }
+
+    private static void check(long hits, long n, long failed, double level) {
+        if (hits < 0 || hits > n || failed < 0) {
+            throw new IllegalArgumentException(hits + " hits of " + n + " draws, " + failed + " failed");
+        }
+        if (!(level > 0 && level < 1)) {
+            throw new IllegalArgumentException("level " + level + " is not between 0 and 1");
+        }
+    }
+
+    private static double low(long k, long n, double tail) {
+        return k == 0 ? 0 : BetaDistribution.of(k, n - k + 1).inverseCumulativeProbability(tail);
+    }
+
+    private static double high(long k, long n, double tail) {
+        return k == n ? 1 : BetaDistribution.of(k + 1, n - k).inverseSurvivalProbability(tail);
+    }
+}

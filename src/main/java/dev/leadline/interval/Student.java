@@ -1,0 +1,58 @@
+package dev.leadline.interval;
+
+import dev.leadline.estimate.Accumulator;
+import java.util.Optional;
+import org.apache.commons.statistics.distribution.TDistribution;
+
+/// Student's t interval for a mean of independent observations.
+public final class Student {
+    /// Word of the project file and of the commands.
+    public static final String KIND = "student";
+
+    private static final String ASSUMPTION =
+            "The mean of so many independent observations is close to normal, which needs a finite variance.";
+
+    private Student() {}
+
+    /// The interval of one component.
+    public static Interval of(Accumulator sums, int k, double level) {
+        return of(sums.mean(k), sums.standardError(k), sums.count(), level);
+    }
+
+    /// @param standardError of the mean; exactly 0 where every observation is equal, and then there is no interval
+    /// @param n observations
+    /// @param level of confidence, between 0 and 1
+    public static Interval of(double mean, double standardError, long n, double level) {
+        if (!(level > 0 && level < 1)) {
+            throw new IllegalArgumentException("level " + level + " is not between 0 and 1");
+        }
+        if (n < 2) {
+            return none(
+                    level, "an interval needs at least 2 observations; so far there " + (n == 1 ? "is 1" : "are " + n));
+        }
+        if (standardError == 0) {
+            return none(
+                    level,
+                    "every value seen so far is equal (" + mean
+                            + "): no spread to build an interval from; at most a part" + " of probability below 3/n = "
+                            + Rounded.up(3.0 / n) + " may be unseen");
+        }
+        double half = quantile(n - 1, (1 - level) / 2) * standardError;
+        if (!Double.isFinite(half) || !Double.isFinite(mean)) {
+            return none(level, "the values are too large for an interval: their squares overflow");
+        }
+        return new Interval(mean - half, mean + half, level, KIND, ASSUMPTION, Optional.empty());
+    }
+
+    private static Interval none(double level, String note) {
+        return new Interval(Double.NaN, Double.NaN, level, KIND, ASSUMPTION, Optional.of(note));
+    }
+
+    /// The t with `P(T > t) = tail`.
+    ///
+    /// @param degrees of freedom, 1 or more
+    /// @param tail in (0, 1/2]
+    static double quantile(long degrees, double tail) {
+        return TDistribution.of(degrees).inverseSurvivalProbability(tail);
+    }
+}
