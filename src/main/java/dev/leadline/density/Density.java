@@ -10,6 +10,16 @@ public interface Density {
     /// Natural logarithm of the density; `-∞` outside the support.
     double logPdf(double x);
 
+    /// The same for a block; equal bits.
+    ///
+    /// @param x `n` values from index 0
+    /// @param logs filled; not the same array as `x`
+    default void logPdf(double[] x, double[] logs, int n) {
+        for (int i = 0; i < n; i++) {
+            logs[i] = logPdf(x[i]);
+        }
+    }
+
     double cdf(double x);
 
     /// `P(X > x)`.

@@ -10,14 +10,51 @@ import java.util.Optional;
 /// @param remedy what could be done about it
 public record Ground(String code, Status status, Optional<Strength> strength, String text, Optional<String> remedy) {
     public enum Status {
-        SHOWN,
-        DOUBTED,
-        NOT_DONE
+        SHOWN("shown"),
+        DOUBTED("doubted"),
+        NOT_DONE("not-done");
+
+        private final String word;
+
+        Status(String word) {
+            this.word = word;
+        }
+
+        public String word() {
+            return word;
+        }
     }
 
+    /// Of a doubt; the strongest last.
     public enum Strength {
-        NOTE,
-        CAUTION,
-        OBJECTION
+        NOTE("note"),
+        CAUTION("caution"),
+        OBJECTION("objection");
+
+        private final String word;
+
+        Strength(String word) {
+            this.word = word;
+        }
+
+        public String word() {
+            return word;
+        }
+    }
+
+    static Ground shown(String code, String text) {
+        return new Ground(code, Status.SHOWN, Optional.empty(), text, Optional.empty());
+    }
+
+    static Ground doubted(String code, Strength strength, String text, String remedy) {
+        return new Ground(code, Status.DOUBTED, Optional.of(strength), text, Optional.of(remedy));
+    }
+
+    static Ground notDone(String code, String text, String remedy) {
+        return new Ground(code, Status.NOT_DONE, Optional.empty(), text, Optional.of(remedy));
+    }
+
+    public boolean objects() {
+        return strength.filter(Strength.OBJECTION::equals).isPresent();
     }
 }

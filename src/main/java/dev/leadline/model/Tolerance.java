@@ -4,5 +4,32 @@ import java.util.OptionalDouble;
 
 /// The numerical tolerance: how far the half-width of the first answer may reach.
 ///
+/// @param absolute in the unit of the answer
+/// @param relative part of the true value
 /// @param both true where absolute and relative must both be met, false where either will do
-public record Tolerance(OptionalDouble absolute, OptionalDouble relative, boolean both) {}
+public record Tolerance(OptionalDouble absolute, OptionalDouble relative, boolean both) {
+
+    /// The largest half-width that meets it; 0 where there is no estimate.
+    ///
+    /// Relative to the true value, not to the estimate: where `h <= r |m| / (1 + r)` and the interval `m ± h` holds
+    /// the true value, that value is at least `|m| / (1 + r)` in size, and h at most r of it.
+    public double allowed(double estimate) {
+        double relatively = relative.isPresent()
+                ? relative.getAsDouble() * Math.abs(estimate) / (1 + relative.getAsDouble())
+                : Double.NaN;
+        double allowed;
+        if (absolute.isEmpty()) {
+            allowed = relatively;
+        } else if (relative.isEmpty()) {
+            allowed = absolute.getAsDouble();
+        } else {
+            allowed =
+                    both ? Math.min(absolute.getAsDouble(), relatively) : Math.max(absolute.getAsDouble(), relatively);
+        }
+        return Double.isNaN(allowed) ? 0 : allowed;
+    }
+
+    public boolean met(double estimate, double halfWidth) {
+        return halfWidth <= allowed(estimate);
+    }
+}

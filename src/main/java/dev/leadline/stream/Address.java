@@ -22,4 +22,9 @@ public record Address(long seed, Purpose purpose, String lane, int replicate, St
                     "seed " + seed + ", replicate " + replicate + ", item " + item + ": none may be negative");
         }
     }
+
+    /// The same place, for another input.
+    public Address forInput(String name) {
+        return new Address(seed, purpose, lane, replicate, name, item);
+    }
 }

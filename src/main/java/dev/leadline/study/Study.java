@@ -1,47 +1,176 @@
 package dev.leadline.study;
 
+import dev.leadline.engine.LaneRun;
+import dev.leadline.engine.Recipe;
+import dev.leadline.engine.Workers;
+import dev.leadline.ground.Grounds;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
+import dev.leadline.study.StudyState.Activity;
+import java.util.Comparator;
+import java.util.List;
+import java.util.concurrent.CountDownLatch;
+import java.util.concurrent.ExecutionException;
 import java.util.function.Consumer;
 
 /// A whole run of all lanes in the background, with live grounds. Safe for all threads.
+///
+/// One conducting thread hands out items and merges them; lanes take turns, the one with the fewest draws first.
 public final class Study implements AutoCloseable {
-    private Study() {}
+    private final Question question;
+    private final Plan plan;
+    private final Workers workers;
+    private final Consumer<StudyState> listener;
+    private final CountDownLatch ended = new CountDownLatch(1);
+    private final StopWatch watch = new StopWatch();
+
+    private final Object gate = new Object();
+    private boolean paused;
+    private boolean stopping;
+
+    private volatile StudyState state = new StudyState(Activity.PREPARING, List.of());
+    private volatile Throwable fault;
+
+    private Study(Question question, Plan plan, int threads, Consumer<StudyState> listener) {
+        this.question = question;
+        this.plan = plan;
+        this.workers = new Workers(threads);
+        this.listener = listener;
+    }
 
     /// Starts at once.
     ///
     /// @param threads workers; the results do not depend on it
-    /// @param listener gets newer and newer states from some worker thread, the finished one last; must return soon
+    /// @param listener gets newer and newer states from some other thread, the finished one last; must return soon
     public static Study start(Question question, Plan plan, int threads, Consumer<StudyState> listener) {
-        throw new UnsupportedOperationException();
+        var study = new Study(question, plan, threads, listener);
+        Thread.ofPlatform().daemon().name("leadline-study").start(study::conduct);
+        return study;
     }
 
     /// Keeps what was computed; [#resume] goes on to the same bits as if nothing had happened.
     public void pause() {
-        throw new UnsupportedOperationException();
+        synchronized (gate) {
+            paused = true;
+        }
     }
 
     public void resume() {
-        throw new UnsupportedOperationException();
+        synchronized (gate) {
+            paused = false;
+            gate.notifyAll();
+        }
     }
 
     /// Ends the run with what has been merged.
     public void stop() {
-        throw new UnsupportedOperationException();
+        synchronized (gate) {
+            stopping = true;
+            gate.notifyAll();
+        }
+        workers.cancel();
     }
 
-    /// Waits for the finished state; throws what a worker threw.
+    /// Waits for the finished state.
+    ///
+    /// @throws IllegalStateException where a fault of ours ended the run; its cause is the fault
     public StudyState await() throws InterruptedException {
-        throw new UnsupportedOperationException();
+        ended.await();
+        if (fault != null) {
+            throw new IllegalStateException("the run ended by a fault", fault);
+        }
+        return state;
     }
 
     public StudyState state() {
-        throw new UnsupportedOperationException();
+        return state;
     }
 
     /// Stops, and waits for the workers to end.
     @Override
     public void close() {
-        throw new UnsupportedOperationException();
+        stop();
+        workers.close();
+    }
+
+    private void conduct() {
+        try (workers) {
+            publish(state);
+            var recipes = plan.lanes().stream()
+                    .map(lane -> Recipe.of(question, lane, plan.seed()))
+                    .toList();
+            var runs = recipes.stream()
+                    .map(recipe -> new LaneRun(recipe, plan.stop(), workers))
+                    .toList();
+            watch.start();
+            run(runs);
+            publish(look(Activity.FINISHED, runs));
+        } catch (ExecutionException e) {
+            fail(e.getCause());
+        } catch (Throwable e) {
+            fail(e);
+        } finally {
+            ended.countDown();
+        }
+    }
+
+    private void run(List<LaneRun> runs) throws InterruptedException, ExecutionException {
+        publish(look(Activity.RUNNING, runs));
+        while (true) {
+            var next = runs.stream().filter(run -> !run.finished()).min(Comparator.comparingLong(LaneRun::draws));
+            if (next.isEmpty()) {
+                return;
+            }
+            if (!mayGoOn(runs)) {
+                runs.forEach(run -> run.stop(watch.seconds()));
+                return;
+            }
+            if (next.get().advance(watch.seconds())) {
+                publish(look(Activity.RUNNING, runs));
+            }
+        }
+    }
+
+    /// Waits while paused.
+    private boolean mayGoOn(List<LaneRun> runs) throws InterruptedException {
+        if (pausing()) {
+            watch.pause();
+            publish(look(Activity.PAUSED, runs));
+            synchronized (gate) {
+                while (paused && !stopping) {
+                    gate.wait();
+                }
+            }
+            watch.start();
+            publish(look(Activity.RUNNING, runs));
+        }
+        synchronized (gate) {
+            return !stopping;
+        }
+    }
+
+    private boolean pausing() {
+        synchronized (gate) {
+            return paused && !stopping;
+        }
+    }
+
+    private StudyState look(Activity activity, List<LaneRun> runs) {
+        return new StudyState(
+                activity,
+                runs.stream()
+                        .map(LaneRun::trace)
+                        .map(trace -> new LaneState(trace, Grounds.of(question, trace)))
+                        .toList());
+    }
+
+    private void fail(Throwable cause) {
+        fault = cause;
+        publish(new StudyState(Activity.FAILED, state.lanes()));
+    }
+
+    private void publish(StudyState newer) {
+        state = newer;
+        listener.accept(newer);
     }
 }

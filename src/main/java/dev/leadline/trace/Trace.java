@@ -1,17 +1,27 @@
 package dev.leadline.trace;
 
+import dev.leadline.estimate.Accumulator;
 import java.util.List;
 import java.util.Optional;
 
-/// What a lane has shown so far. Immutable.
+/// What a lane has shown so far. Immutable: nobody changes the accumulators in it.
 ///
 /// @param lane its name
 /// @param scheme in words
 /// @param marks oldest first; empty before the first item is in
+/// @param blocks sums of consecutive blocks of draws, at most 64 (see [Blocks])
 /// @param failures the first 20
 /// @param stopReason empty while the lane runs or pauses
-public record Trace(String lane, String scheme, List<Mark> marks, List<Failure> failures, Optional<String> stopReason) {
+public record Trace(
+        String lane,
+        String scheme,
+        List<Mark> marks,
+        List<Accumulator> blocks,
+        List<Failure> failures,
+        Optional<String> stopReason) {
     public Trace {
+        marks = List.copyOf(marks);
+        blocks = List.copyOf(blocks);
         failures = List.copyOf(failures);
     }
 
@@ -21,5 +31,29 @@ public record Trace(String lane, String scheme, List<Mark> marks, List<Failure> 
 
     public boolean finished() {
         return stopReason.isPresent();
+    }
+
+    /// Sums of every observation.
+    public Accumulator total() {
+        return merged(blocks);
+    }
+
+    /// Sums of about the first half of the observations, then of the rest; two empty ones below two blocks.
+    public List<Accumulator> halves() {
+        int middle = 0;
+        long half = blocks.stream().mapToLong(Accumulator::count).sum() / 2;
+        for (long before = 0; middle < blocks.size() && before < half; middle++) {
+            before += blocks.get(middle).count();
+        }
+        return List.of(merged(blocks.subList(0, middle)), merged(blocks.subList(middle, blocks.size())));
+    }
+
+    private static Accumulator merged(List<Accumulator> parts) {
+        if (parts.isEmpty()) {
+            return new Accumulator(0);
+        }
+        var sum = parts.getFirst().copy();
+        parts.subList(1, parts.size()).forEach(sum::merge);
+        return sum;
     }
 }

@@ -1,0 +1,138 @@
+package dev.leadline.engine;
+
+import dev.leadline.estimate.Accumulator;
+import dev.leadline.model.Stop;
+import dev.leadline.trace.Answers;
+import dev.leadline.trace.Blocks;
+import dev.leadline.trace.Failure;
+import dev.leadline.trace.Mark;
+import dev.leadline.trace.Trace;
+import java.util.ArrayDeque;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.Queue;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.Future;
+
+/// A lane on its way: items handed to workers, their sums merged in item order, marks set, the end found. Confined to
+/// the
+/// thread that conducts the study.
+///
+/// Stopping looks at the merged prefix of items only; what workers computed beyond it is thrown away. Hence the same
+/// bits
+/// for any number of workers.
+public final class LaneRun {
+    private static final double NEXT_MARK = 1.01;
+
+    private final Recipe recipe;
+    private final Stop stop;
+    private final long budget;
+    private final Items items;
+    private final Workers workers;
+    private final Queue<Future<Optional<ItemSums>>> ahead = new ArrayDeque<>();
+
+    private final Accumulator total;
+    private final Blocks blocks = new Blocks();
+    private final List<Mark> marks = new ArrayList<>();
+    private final List<Failure> failures = new ArrayList<>();
+    private long submitted;
+    private long draws;
+    private Optional<String> stopReason = Optional.empty();
+
+    public LaneRun(Recipe recipe, Stop stop, Workers workers) {
+        this.recipe = recipe;
+        this.stop = stop;
+        this.items = recipe.items();
+        this.workers = workers;
+        this.total = new Accumulator(recipe.program().outputs());
+        int whole = recipe.lane().scheme().points().drawsPerObservation();
+        this.budget = stop.draws() / whole * whole;
+    }
+
+    /// Merges the next item of work.
+    ///
+    /// @param seconds computed so far
+    /// @return whether there is a new mark
+    public boolean advance(double seconds) throws InterruptedException, ExecutionException {
+        submitAhead();
+        var sums = ahead.remove().get();
+        if (sums.isEmpty()) {
+            return end("stopped by hand", seconds);
+        }
+        merge(sums.get());
+        if (draws >= budget) {
+            return end(String.format(Locale.ROOT, "all %,d draws made", draws), seconds);
+        }
+        if (stop.seconds().isPresent() && seconds >= stop.seconds().getAsDouble()) {
+            return end("time used up", seconds);
+        }
+        if (marks.isEmpty() || draws >= NEXT_MARK * marks.getLast().draws()) {
+            mark(seconds);
+            return true;
+        }
+        return false;
+    }
+
+    /// Ends with what has been merged.
+    public void stop(double seconds) {
+        if (!finished()) {
+            end("stopped by hand", seconds);
+        }
+    }
+
+    public boolean finished() {
+        return stopReason.isPresent();
+    }
+
+    public long draws() {
+        return draws;
+    }
+
+    public Trace trace() {
+        return new Trace(
+                recipe.lane().name(),
+                recipe.lane().scheme().points().word(),
+                marks,
+                blocks.snapshot(),
+                failures,
+                stopReason);
+    }
+
+    private void submitAhead() {
+        while (ahead.size() < workers.ahead()) {
+            Item item = items.at(submitted);
+            if (item.firstDraw() >= budget) {
+                return;
+            }
+            submitted++;
+            ahead.add(workers.submit(recipe, item.first(budget - item.firstDraw())));
+        }
+    }
+
+    private void merge(ItemSums item) {
+        total.merge(item.sums());
+        blocks.add(item.sums());
+        draws += item.item().draws();
+        for (var failure : item.failures()) {
+            if (failures.size() < ItemSums.KEPT) {
+                failures.add(failure);
+            }
+        }
+    }
+
+    private boolean end(String reason, double seconds) {
+        stopReason = Optional.of(reason);
+        ahead.forEach(item -> item.cancel(false));
+        ahead.clear();
+        if (draws > 0 && (marks.isEmpty() || marks.getLast().draws() < draws)) {
+            mark(seconds);
+        }
+        return true;
+    }
+
+    private void mark(double seconds) {
+        marks.add(new Mark(draws, seconds, Answers.of(recipe.question(), total)));
+    }
+}

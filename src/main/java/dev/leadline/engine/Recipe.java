@@ -1,0 +1,103 @@
+package dev.leadline.engine;
+
+import dev.leadline.density.Density;
+import dev.leadline.density.Inversion;
+import dev.leadline.formula.Program;
+import dev.leadline.model.Ask;
+import dev.leadline.model.Input;
+import dev.leadline.model.Input.Role;
+import dev.leadline.model.Lane;
+import dev.leadline.model.Question;
+import dev.leadline.stream.Address;
+import dev.leadline.stream.Purpose;
+import java.util.ArrayList;
+import java.util.List;
+
+/// Everything that the draws of a lane follow from, made ready: compiled formulas, inversion tables, the layout of
+/// points.
+/// Immutable, safe for all threads; each worker takes a [Sampler] of its own.
+public final class Recipe {
+    private final Question question;
+    private final Lane lane;
+    private final long seed;
+    private final List<String> names;
+    private final List<Inversion> inversions;
+    private final List<Integer> weighing;
+    private final double volume;
+
+    private Recipe(Question question, Lane lane, long seed) {
+        this.question = question;
+        this.lane = lane;
+        this.seed = seed;
+        this.names = question.inputs().stream().map(Input::name).toList();
+        this.inversions = question.inputs().stream()
+                .map(input -> Inversion.of(input.drawn()))
+                .toList();
+        var unbounded = new ArrayList<Integer>();
+        double product = 1;
+        for (int j = 0; j < question.inputs().size(); j++) {
+            switch (question.inputs().get(j).role()) {
+                case Role.Random() -> {}
+                case Role.Range(double low, double high) -> product *= high - low;
+                case Role.UnboundedRange _ -> unbounded.add(j);
+            }
+        }
+        this.weighing = List.copyOf(unbounded);
+        this.volume = product;
+    }
+
+    /// Builds the inversion tables that are not in the cache yet: up to 100 ms for each new shape.
+    public static Recipe of(Question question, Lane lane, long seed) {
+        return new Recipe(question, lane, seed);
+    }
+
+    public Sampler sampler() {
+        return new Sampler(this);
+    }
+
+    public Items items() {
+        return new Items(lane.scheme().points().drawsPerObservation());
+    }
+
+    public Question question() {
+        return question;
+    }
+
+    Address address(long item) {
+        return new Address(seed, Purpose.RUN, lane.name(), 0, "", item);
+    }
+
+    Lane lane() {
+        return lane;
+    }
+
+    List<String> names() {
+        return names;
+    }
+
+    Inversion inversion(int input) {
+        return inversions.get(input);
+    }
+
+    Density drawn(int input) {
+        return question.inputs().get(input).drawn();
+    }
+
+    /// Inputs whose draws count `1 / pdf`.
+    List<Integer> weighing() {
+        return weighing;
+    }
+
+    /// What every outcome is multiplied by: the volume of the bounded ranges of integration.
+    double volume() {
+        return volume;
+    }
+
+    Program program() {
+        return question.working().program();
+    }
+
+    List<Ask> asks() {
+        return question.asks();
+    }
+}

@@ -1,0 +1,157 @@
+package dev.leadline.engine;
+
+import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Estimand;
+import dev.leadline.formula.Program;
+import dev.leadline.numeric.Exp;
+import dev.leadline.scheme.Cursor;
+import dev.leadline.trace.Failure;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.BooleanSupplier;
+
+/// Makes the draws of an item of work and accumulates them. Scratch of one worker, confined to it; what it returns
+/// is a pure function of the recipe and the item.
+public final class Sampler {
+    private final Recipe recipe;
+    private final Program program;
+    private final Program.Workspace workspace;
+    private final double[][] columns;
+    private final double[][] outcomes;
+    private final double[] weights;
+    private final double[] logPdf;
+
+    Sampler(Recipe recipe) {
+        this.recipe = recipe;
+        this.program = recipe.program();
+        this.workspace = program.workspace();
+        this.columns = new double[recipe.names().size()][];
+        for (int j = 0; j < columns.length; j++) {
+            if (program.uses(j) || recipe.weighing().contains(j)) {
+                columns[j] = new double[Program.BLOCK];
+            }
+        }
+        this.outcomes = new double[program.outputs()][Program.BLOCK];
+        boolean weighs = !recipe.weighing().isEmpty();
+        this.weights = weighs ? new double[Program.BLOCK] : new double[0];
+        this.logPdf = weighs ? new double[Program.BLOCK] : new double[0];
+    }
+
+    /// @param cancelled looked at between blocks of draws
+    /// @return empty where cancelled
+    public Optional<ItemSums> compute(Item item, BooleanSupplier cancelled) {
+        var cursor = open(item);
+        var sums = new Accumulator(outcomes.length);
+        var failures = new ArrayList<Failure>();
+        for (int from = 0; from < item.draws(); from += Program.BLOCK) {
+            if (cancelled.getAsBoolean()) {
+                return Optional.empty();
+            }
+            int rows = Math.min(Program.BLOCK, item.draws() - from);
+            draw(cursor, rows);
+            program.evaluate(columns, rows, outcomes, workspace);
+            observe(rows);
+            long excluded = sums.excluded();
+            sums.add(outcomes, 0, rows);
+            if (sums.excluded() > excluded) {
+                keepFailures(item.firstDraw() + from, rows, failures);
+            }
+        }
+        return Optional.of(new ItemSums(item, sums, List.copyOf(failures)));
+    }
+
+    /// Inputs of the draw with index `draw` in the lane; an input that nothing depends on is drawn all the same.
+    double[] inputs(long draw) {
+        for (int j = 0; j < columns.length; j++) {
+            if (columns[j] == null) {
+                columns[j] = new double[Program.BLOCK];
+            }
+        }
+        var item = recipe.items().holding(draw);
+        var cursor = open(item);
+        long from = item.firstDraw();
+        draw(cursor, Program.BLOCK);
+        while (from + Program.BLOCK <= draw) {
+            draw(cursor, Program.BLOCK);
+            from += Program.BLOCK;
+        }
+        int row = (int) (draw - from);
+        return Arrays.stream(columns).mapToDouble(column -> column[row]).toArray();
+    }
+
+    private Cursor open(Item item) {
+        return recipe.lane().scheme().points().open(recipe.address(item.index()), recipe.names());
+    }
+
+    private void draw(Cursor cursor, int rows) {
+        cursor.next(columns, rows);
+        for (int j = 0; j < columns.length; j++) {
+            if (columns[j] != null) {
+                recipe.inversion(j).fill(columns[j], columns[j], rows);
+            }
+        }
+    }
+
+    /// Turns outcomes into components of observations: integrals are weighed; an event is 1 or 0 as it is.
+    private void observe(int rows) {
+        weigh(rows);
+        for (int k = 0; k < outcomes.length; k++) {
+            switch (recipe.asks().get(k).estimand()) {
+                case Estimand.Mean _, Estimand.Probability _ -> {}
+                case Estimand.Integral _ -> multiply(outcomes[k], rows);
+            }
+        }
+    }
+
+    private void weigh(int rows) {
+        if (weights.length == 0) {
+            return;
+        }
+        Arrays.fill(weights, 0, rows, 0);
+        for (int j : recipe.weighing()) {
+            recipe.drawn(j).logPdf(columns[j], logPdf, rows);
+            for (int i = 0; i < rows; i++) {
+                weights[i] -= logPdf[i];
+            }
+        }
+        Exp.exp(weights, weights, rows);
+    }
+
+    private void multiply(double[] outcome, int rows) {
+        double volume = recipe.volume();
+        if (weights.length == 0) {
+            for (int i = 0; i < rows; i++) {
+                outcome[i] *= volume;
+            }
+        } else {
+            for (int i = 0; i < rows; i++) {
+                outcome[i] *= volume * weights[i];
+            }
+        }
+    }
+
+    private void keepFailures(long firstDraw, int rows, List<Failure> failures) {
+        for (int i = 0; i < rows && failures.size() < ItemSums.KEPT; i++) {
+            if (!finite(i)) {
+                failures.add(new Failure(firstDraw + i, row(i)));
+            }
+        }
+    }
+
+    private boolean finite(int row) {
+        for (double[] outcome : outcomes) {
+            if (!Double.isFinite(outcome[row])) {
+                return false;
+            }
+        }
+        return true;
+    }
+
+    private List<Double> row(int row) {
+        return Arrays.stream(columns)
+                .map(column -> column == null ? Double.NaN : column[row])
+                .toList();
+    }
+}

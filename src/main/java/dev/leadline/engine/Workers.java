@@ -1,0 +1,46 @@
+package dev.leadline.engine;
+
+import java.util.IdentityHashMap;
+import java.util.Map;
+import java.util.Optional;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.concurrent.Future;
+
+/// Threads that compute items of work. Safe for all threads.
+public final class Workers implements AutoCloseable {
+    private final int threads;
+    private final ExecutorService pool;
+    private final ThreadLocal<Map<Recipe, Sampler>> samplers = ThreadLocal.withInitial(IdentityHashMap::new);
+    private volatile boolean cancelled;
+
+    public Workers(int threads) {
+        this.threads = threads;
+        this.pool = Executors.newFixedThreadPool(
+                threads,
+                Thread.ofPlatform().daemon().name("leadline-worker-", 1).factory());
+    }
+
+    /// How many items to have under way at once, so that no worker waits for the one that merges.
+    int ahead() {
+        return 2 * threads + 1;
+    }
+
+    /// @return empty where cancelled before its end
+    Future<Optional<ItemSums>> submit(Recipe recipe, Item item) {
+        return pool.submit(
+                () -> samplers.get().computeIfAbsent(recipe, Recipe::sampler).compute(item, () -> cancelled));
+    }
+
+    /// Lets workers drop what they are at, between two blocks of draws.
+    public void cancel() {
+        cancelled = true;
+    }
+
+    @Override
+    public void close() {
+        cancel();
+        pool.shutdown();
+        pool.close();
+    }
+}

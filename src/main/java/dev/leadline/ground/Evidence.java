@@ -1,0 +1,27 @@
+package dev.leadline.ground;
+
+import dev.leadline.estimate.Accumulator;
+import dev.leadline.model.Question;
+import dev.leadline.trace.Answer;
+import dev.leadline.trace.Trace;
+import java.util.List;
+
+/// What grounds are judged by: a question, what a lane has shown of it, and the sums that follow.
+///
+/// @param answers at the newest mark
+/// @param total sums of every observation
+/// @param halves sums of the first and of the second half
+record Evidence(Question question, Trace trace, List<Answer> answers, Accumulator total, List<Accumulator> halves) {
+    static Evidence of(Question question, Trace trace) {
+        return new Evidence(question, trace, trace.last().orElseThrow().answers(), trace.total(), trace.halves());
+    }
+
+    /// What to call an answer in a sentence, with a colon; nothing where there is only one.
+    String of(int answer) {
+        if (answers.size() == 1) {
+            return "";
+        }
+        String label = answers.get(answer).label();
+        return (label.isEmpty() ? "answer " + (answer + 1) : label) + ": ";
+    }
+}

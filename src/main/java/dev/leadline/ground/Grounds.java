@@ -1,0 +1,51 @@
+package dev.leadline.ground;
+
+import dev.leadline.ground.Ground.Strength;
+import dev.leadline.model.Question;
+import dev.leadline.trace.Trace;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+
+/// The reasons for and against signing what a lane has shown.
+public final class Grounds {
+    private Grounds() {}
+
+    /// Doubts first, strongest first, then what was shown, then what was not done; none before the first mark.
+    public static List<Ground> of(Question question, Trace trace) {
+        if (trace.last().isEmpty()) {
+            return List.of();
+        }
+        var evidence = Evidence.of(question, trace);
+        var grounds = new ArrayList<Ground>();
+        for (int k = 0; k < evidence.answers().size(); k++) {
+            Spread.judge(evidence, k).ifPresent(grounds::add);
+            Hits.judge(evidence, k).ifPresent(grounds::add);
+            Settled.judge(evidence, k).ifPresent(grounds::add);
+            Skewness.judge(evidence, k).ifPresent(grounds::add);
+        }
+        grounds.add(FailedEvaluations.judge(evidence));
+        NumericalTolerance.judge(evidence).ifPresent(grounds::add);
+        grounds.add(AgainstReference.judge(evidence));
+        grounds.add(Ground.notDone(
+                "tail",
+                "Whether rare, large outcomes make the variance infinite was not examined",
+                "Look at the largest outcomes by hand before signing a mean"));
+        grounds.add(Ground.notDone(
+                "rehearsal",
+                "Whether this interval holds for this question was not rehearsed",
+                "Repeat the run with other seeds and compare the intervals"));
+        grounds.sort(Comparator.comparing(Ground::status, Comparator.comparingInt(Grounds::rank))
+                .thenComparing(
+                        ground -> ground.strength().map(Strength::ordinal).orElse(0), Comparator.reverseOrder()));
+        return List.copyOf(grounds);
+    }
+
+    private static int rank(Ground.Status status) {
+        return switch (status) {
+            case DOUBTED -> 0;
+            case SHOWN -> 1;
+            case NOT_DONE -> 2;
+        };
+    }
+}

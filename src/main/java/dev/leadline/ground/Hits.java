@@ -1,0 +1,42 @@
+package dev.leadline.ground;
+
+import dev.leadline.ground.Ground.Strength;
+import java.util.Optional;
+
+/// Whether an event has been seen often enough, and its opposite too. The rarer of the two counts; 25 of it is common
+/// practice.
+final class Hits {
+    private static final long ENOUGH = 25;
+
+    private Hits() {}
+
+    static Optional<Ground> judge(Evidence evidence, int k) {
+        var answer = evidence.answers().get(k);
+        if (answer.hits().isEmpty() || answer.observations() == 0) {
+            return Optional.empty();
+        }
+        long hits = answer.hits().getAsLong();
+        long misses = answer.observations() - hits;
+        long rarer = Math.min(hits, misses);
+        String of = evidence.of(k);
+        String what = hits <= misses ? "hit" : "miss";
+        String draws = Numbers.count(answer.observations());
+        if (rarer >= ENOUGH) {
+            return Optional.of(Ground.shown(
+                    "hits", of + "%s %s in %s draws".formatted(Numbers.count(rarer), plural(what), draws)));
+        }
+        String text = rarer == 0
+                ? "no %s in %s draws: a part of probability below %s may be unseen"
+                        .formatted(what, draws, Numbers.value(3.0 / answer.observations()))
+                : "only %d %s in %s draws".formatted(rarer, rarer == 1 ? what : plural(what), draws);
+        return Optional.of(Ground.doubted(
+                "hits",
+                Strength.CAUTION,
+                of + text,
+                "Make more draws: %d %s or more are wanted".formatted(ENOUGH, plural(what))));
+    }
+
+    private static String plural(String what) {
+        return what.equals("hit") ? "hits" : "misses";
+    }
+}

@@ -1,0 +1,35 @@
+package dev.leadline.ground;
+
+import dev.leadline.estimate.Estimand;
+import dev.leadline.ground.Ground.Strength;
+import java.util.Optional;
+
+/// Whether there are enough observations for a Student interval in spite of lopsided outcomes: n of at least 25 times
+/// the
+/// squared skewness (Cochran's rule; common practice).
+final class Skewness {
+    private static final double PER_SQUARE = 25;
+
+    private Skewness() {}
+
+    static Optional<Ground> judge(Evidence evidence, int k) {
+        var sums = evidence.total();
+        double skewness = sums.count() < 3 ? Double.NaN : sums.skewness(k);
+        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability || Double.isNaN(skewness)) {
+            return Optional.empty();
+        }
+        double wanted = PER_SQUARE * skewness * skewness;
+        String text = evidence.of(k)
+                + "skewness %s asks for %s observations; there are %s"
+                        .formatted(
+                                Numbers.ratio(skewness), Numbers.count(Math.ceil(wanted)), Numbers.count(sums.count()));
+        return Optional.of(
+                sums.count() >= wanted
+                        ? Ground.shown("skewness", text)
+                        : Ground.doubted(
+                                "skewness",
+                                Strength.CAUTION,
+                                text,
+                                "Make more draws: until then the interval misses more often than it says"));
+    }
+}

@@ -1,0 +1,50 @@
+package dev.leadline.trace;
+
+import dev.leadline.estimate.Accumulator;
+import java.util.ArrayList;
+import java.util.List;
+
+/// The draws of a lane in at most 64 consecutive blocks of about equal size, so that halves can be compared and any
+/// interval recomputed later. Confined to the run that feeds it.
+///
+/// A block closes once it has reached the current length; when there are 64, neighbours merge and the length doubles.
+/// What it holds depends on the order of the items alone.
+public final class Blocks {
+    private static final int MOST = 64;
+
+    private final List<Accumulator> blocks = new ArrayList<>();
+    private long length = 1;
+    private boolean open;
+
+    /// @param item the sums of the next item of work; not changed
+    public void add(Accumulator item) {
+        if (open) {
+            blocks.getLast().merge(item);
+        } else {
+            if (blocks.size() == MOST) {
+                halve();
+            }
+            blocks.add(item.copy());
+        }
+        open = attempted(blocks.getLast()) < length;
+    }
+
+    /// Copies, oldest draws first.
+    public List<Accumulator> snapshot() {
+        return blocks.stream().map(Accumulator::copy).toList();
+    }
+
+    private void halve() {
+        for (int i = 0; i < MOST / 2; i++) {
+            var merged = blocks.get(2 * i);
+            merged.merge(blocks.get(2 * i + 1));
+            blocks.set(i, merged);
+        }
+        blocks.subList(MOST / 2, MOST).clear();
+        length = Math.max(2 * length, attempted(blocks.getFirst()));
+    }
+
+    private static long attempted(Accumulator block) {
+        return block.count() + block.excluded();
+    }
+}

@@ -1,0 +1,45 @@
+package dev.leadline.engine;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+
+class ItemsTest {
+    @Test
+    void growFrom64To65536() {
+        var items = new Items(1);
+        assertEquals(new Item(0, 0, 64), items.at(0));
+        assertEquals(new Item(7, 448, 64), items.at(7));
+        assertEquals(new Item(8, 512, 128), items.at(8));
+        assertEquals(new Item(80, 523_776, 65_536), items.at(80));
+        assertEquals(65_536, items.at(1_000_000_000).draws());
+    }
+
+    @ParameterizedTest(name = "{0} draws in an observation")
+    @ValueSource(ints = {1, 2, 30, 100, 1000})
+    void followEachOtherWithoutGapInWholeObservations(int drawsPerObservation) {
+        var items = new Items(drawsPerObservation);
+        long next = 0;
+        for (long k = 0; k < 200; k++) {
+            Item item = items.at(k);
+            assertEquals(next, item.firstDraw(), "item " + k);
+            assertEquals(0, item.draws() % drawsPerObservation, "item " + k);
+            assertTrue(item.draws() >= Math.min(65_536, 64L << Math.min(10, k / 8)), "item " + k);
+            next += item.draws();
+        }
+    }
+
+    @ParameterizedTest(name = "{0} draws in an observation")
+    @ValueSource(ints = {1, 2, 30, 1000})
+    void findTheItemThatHoldsADraw(int drawsPerObservation) {
+        var items = new Items(drawsPerObservation);
+        for (long k = 0; k < 120; k++) {
+            Item item = items.at(k);
+            assertEquals(item, items.holding(item.firstDraw()));
+            assertEquals(item, items.holding(item.firstDraw() + item.draws() - 1));
+        }
+    }
+}

@@ -1,0 +1,110 @@
+package dev.leadline.engine;
+
+import dev.leadline.density.Catalogue;
+import dev.leadline.density.Density;
+import dev.leadline.estimate.Estimand;
+import dev.leadline.formula.Working;
+import dev.leadline.model.Ask;
+import dev.leadline.model.Input;
+import dev.leadline.model.Input.Role;
+import dev.leadline.model.Lane;
+import dev.leadline.model.Plan;
+import dev.leadline.model.Question;
+import dev.leadline.model.Reference;
+import dev.leadline.model.Stop;
+import dev.leadline.model.Tolerance;
+import dev.leadline.scheme.Points;
+import dev.leadline.scheme.Scheme;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/// Small questions for tests, built part by part.
+public final class Questions {
+    private final List<Input> inputs = new ArrayList<>();
+    private final List<String> steps = new ArrayList<>();
+    private final List<Ask> asks = new ArrayList<>();
+    private Optional<Reference> reference = Optional.empty();
+    private Optional<Tolerance> tolerance = Optional.empty();
+
+    public Questions uniform(String name, double from, double to) {
+        return input(name, density("uniform", Map.of("from", from, "to", to)), new Role.Random());
+    }
+
+    public Questions normal(String name) {
+        return input(name, density("normal", Map.of("mean", 0.0, "sd", 1.0)), new Role.Random());
+    }
+
+    public Questions range(String name, double low, double high) {
+        return input(name, density("uniform", Map.of("from", low, "to", high)), new Role.Range(low, high));
+    }
+
+    /// Over the whole line, drawn from a normal density.
+    public Questions line(String name, double sd) {
+        return input(
+                name,
+                density("normal", Map.of("mean", 0.0, "sd", sd)),
+                new Role.UnboundedRange(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY));
+    }
+
+    public Questions step(String line) {
+        steps.add(line);
+        return this;
+    }
+
+    public Questions mean(String formula) {
+        return ask(new Estimand.Mean(), formula);
+    }
+
+    public Questions integral(String formula) {
+        return ask(new Estimand.Integral(), formula);
+    }
+
+    public Questions probability(String formula) {
+        return ask(new Estimand.Probability(), formula);
+    }
+
+    public Questions reference(double value) {
+        reference = Optional.of(new Reference(value, 0, "test"));
+        return this;
+    }
+
+    public Questions absoluteTolerance(double absolute) {
+        tolerance = Optional.of(new Tolerance(OptionalDouble.of(absolute), OptionalDouble.empty(), false));
+        return this;
+    }
+
+    public Question build() {
+        var working = Working.of(
+                inputs.stream().map(Input::name).toList(),
+                new LinkedHashMap<>(),
+                steps,
+                asks.stream().map(Ask::formula).toList());
+        return new Question("", "", false, List.of(), inputs, working, asks, reference, .95, tolerance);
+    }
+
+    public static Lane lane(String name) {
+        return new Lane(name, new Scheme(new Points.Independent()));
+    }
+
+    public static Plan plan(long draws, long seed) {
+        return new Plan(new Stop(draws, OptionalDouble.empty()), seed, List.of(lane("A")));
+    }
+
+    private Questions input(String name, Density density, Role role) {
+        inputs.add(new Input(name, "", "", "", "", density, role));
+        return this;
+    }
+
+    private Questions ask(Estimand estimand, String formula) {
+        asks.add(new Ask(estimand, formula, "", ""));
+        return this;
+    }
+
+    private static Density density(String family, Map<String, Double> parameters) {
+        return Catalogue.family(family).orElseThrow().of(parameters);
+    }
+}
