@@ -1,0 +1,82 @@
+package dev.leadline.chart;
+
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
+import java.util.regex.Pattern;
+
+/// Numbers and units as a printed figure sets them: raised exponents, a true minus, thousands apart. Independent of
+/// the locale.
+final class Typeset {
+    private static final String RAISED = "⁰¹²³⁴⁵⁶⁷⁸⁹";
+    private static final Pattern EXPONENT = Pattern.compile("(?<=\\p{L})\\^?(-?[1-9])(?![\\p{L}\\d.])");
+
+    private Typeset() {}
+
+    /// `10⁻⁵`; `1` and `10` stay as they are.
+    static String power(int exponent) {
+        return switch (exponent) {
+            case 0 -> "1";
+            case 1 -> "10";
+            default -> "10" + raised(Integer.toString(exponent));
+        };
+    }
+
+    /// A unit with raised exponents: `m2` and `m^2` become `m²`.
+    static String unit(String unit) {
+        return EXPONENT.matcher(unit).replaceAll(found -> raised(found.group(1)));
+    }
+
+    /// With every digit that `value` has: `18,400.5`, `−0.25`.
+    static String plain(BigDecimal value) {
+        String digits = value.abs().toPlainString();
+        int point = digits.indexOf('.') < 0 ? digits.length() : digits.indexOf('.');
+        var text = new StringBuilder(digits);
+        for (int i = point - 3; i > 0; i -= 3) {
+            text.insert(i, ',');
+        }
+        return value.signum() < 0 ? "−" + text : text.toString();
+    }
+
+    static String count(long count) {
+        return plain(BigDecimal.valueOf(count));
+    }
+
+    /// The value as it was typed, at most `digits` significant ones: `1.2568×10⁻⁵`.
+    static String number(double value, int digits) {
+        if (!Double.isFinite(value)) {
+            return Double.isNaN(value) ? "none" : value > 0 ? "∞" : "−∞";
+        }
+        return scientific(
+                BigDecimal.valueOf(value).round(new MathContext(digits)).stripTrailingZeros());
+    }
+
+    /// The value rounded to the second significant digit of its error; to six digits where there is no error.
+    static String rounded(double value, double error) {
+        if (!(error > 0 && Double.isFinite(error)) || !Double.isFinite(value)) {
+            return number(value, 6);
+        }
+        var e = BigDecimal.valueOf(error).round(new MathContext(2));
+        return scientific(BigDecimal.valueOf(value)
+                .setScale(e.precision() == 1 ? e.scale() + 1 : e.scale(), RoundingMode.HALF_EVEN));
+    }
+
+    private static String scientific(BigDecimal value) {
+        int exponent = value.precision() - value.scale() - 1;
+        if (value.signum() == 0) {
+            return "0";
+        }
+        if (exponent >= -3 && exponent < 7) {
+            return plain(value.scale() < 0 ? value.setScale(0) : value);
+        }
+        return plain(value.movePointLeft(exponent)) + "×" + power(exponent);
+    }
+
+    private static String raised(String digits) {
+        var text = new StringBuilder();
+        for (char c : digits.toCharArray()) {
+            text.append(c == '-' ? '⁻' : RAISED.charAt(c - '0'));
+        }
+        return text.toString();
+    }
+}
