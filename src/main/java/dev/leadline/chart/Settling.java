@@ -57,10 +57,10 @@ public record Settling(
     }
 
     /// The strip of the numerical tolerance: latest estimate ± tolerance, of the lane whose latest interval is the
-    /// shortest, since its answer is the one to sign. The tolerance is met once that lane's band, which the
-    estimate
-    /// need not halve, is no longer than the strip is high. Empty without a tolerance or an estimate, or where the
-    /// tolerance is relative and the estimate 0.
+    /// shortest, since its answer is the one to sign. That lane has met the tolerance once its band is no longer
+    than
+    /// the strip is high. Empty without a tolerance or an estimate, or where the tolerance is relative and the
+    /// estimate 0.
     public Optional<Range> strip() {
         return tolerance.flatMap(asked -> sharpest().flatMap(point -> around(point.estimate(), asked)));
     }
