@@ -56,11 +56,10 @@ public record Settling(
                 traces.stream().map(trace -> Series.of(trace, answer)).toList());
     }
 
-    /// The strip of the numerical tolerance: latest estimate ± tolerance, of the lane whose latest interval is the
-    /// shortest, since its answer is the one to sign. That lane has met the tolerance once its band is no longer
-    than
-    /// the strip is high. Empty without a tolerance or an estimate, or where the tolerance is relative and the
-    /// estimate 0.
+    /// The strip of the numerical tolerance: latest estimate ± tolerance, of the lane whose latest interval is
+    /// the shortest, since its answer is the one to sign. That lane has met the tolerance once its band is no
+    /// longer than the strip is high. Empty without a tolerance or an estimate, or where the tolerance is
+    /// relative and the estimate 0.
     public Optional<Range> strip() {
         return tolerance.flatMap(asked -> sharpest().flatMap(point -> around(point.estimate(), asked)));
     }
