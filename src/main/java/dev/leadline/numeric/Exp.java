@@ -17,7 +17,7 @@ public final class Exp {
     /// Adding this to a double of modest size rounds it to an integer, which then stands in the low mantissa bits.
     static final double ROUND = 0x1.8p52;
 
-    private static final double PER_LN2 = 1.4426950408889634;
+    static final double PER_LN2 = 1.4426950408889634;
     private static final double LN2 = 0x1.62e42fefa39efp-1;
     private static final double LN2_TAIL = 0x1.abc9e3b39803fp-56;
 
@@ -48,7 +48,7 @@ public final class Exp {
         double inside = clamp(x);
         double t = Math.fma(inside, PER_LN2, ROUND);
         long bits = Double.doubleToRawLongBits(t);
-        return power(reduce(inside, t - ROUND)) * half(bits) * otherHalf(bits);
+        return reduced(inside, t - ROUND) * half(bits) * otherHalf(bits);
     }
 
     /// `e^x` of the first `n` values.
@@ -74,7 +74,7 @@ public final class Exp {
         for (int i = 0; i < m; i++) {
             double shifted = Math.fma(a[i], PER_LN2, ROUND);
             t[i] = shifted;
-            a[i] = power(reduce(a[i], shifted - ROUND));
+            a[i] = reduced(a[i], shifted - ROUND);
         }
         for (int i = 0; i < m; i++) {
             long k = Double.doubleToRawLongBits(t[i]) << 52;
@@ -88,7 +88,7 @@ public final class Exp {
             double inside = clamp(a[i]);
             double shifted = Math.fma(inside, PER_LN2, ROUND);
             t[i] = shifted;
-            a[i] = power(reduce(inside, shifted - ROUND));
+            a[i] = reduced(inside, shifted - ROUND);
         }
         for (int i = 0; i < m; i++) u[i] = otherHalf(Double.doubleToRawLongBits(t[i]));
         for (int i = 0; i < m; i++) t[i] = half(Double.doubleToRawLongBits(t[i]));
@@ -105,12 +105,27 @@ public final class Exp {
         return Math.max(LOWEST, Math.min(HIGHEST, x));
     }
 
-    private static double reduce(double x, double k) {
-        return Math.fma(k, -LN2_TAIL, Math.fma(k, -LN2, x));
+    /// `e^(x - k ln 2)`, the difference carried to twice the working precision.
+    private static double reduced(double x, double k) {
+        double r1 = Math.fma(k, -LN2, x);
+        double r = Math.fma(k, -LN2_TAIL, r1);
+        double tail = Math.fma(k, -LN2_TAIL, r1 - r);
+        double high = 1 + r;
+        return high + Math.fma(r * r, series(r), Math.fma(tail, high, (1 - high) + r));
     }
 
-    /// `e^r` for `|r| <= ln(2)/2`.
-    private static double power(double r) {
+    /// `e^(x + xTail - k ln 2)`, where `xTail` may be so large that only its square is negligible.
+    static double reduced(double x, double xTail, double k) {
+        double r1 = Math.fma(k, -LN2, x);
+        double r = Math.fma(k, -LN2_TAIL, r1);
+        double tail = Math.fma(k, -LN2_TAIL, r1 - r) + xTail;
+        double high = 1 + r;
+        double low = Math.fma(r * r, series(r), (1 - high) + r);
+        return high + Math.fma(tail, high + low, low);
+    }
+
+    /// `(e^r - 1 - r) / r^2` for `|r| <= ln(2)/2`.
+    private static double series(double r) {
         double p = Math.fma(C11, r, C10);
         p = Math.fma(p, r, C9);
         p = Math.fma(p, r, C8);
@@ -119,18 +134,16 @@ public final class Exp {
         p = Math.fma(p, r, C5);
         p = Math.fma(p, r, C4);
         p = Math.fma(p, r, C3);
-        p = Math.fma(p, r, 0.5);
-        p = Math.fma(p, r, 1);
-        return Math.fma(p, r, 1);
+        return Math.fma(p, r, 0.5);
     }
 
     /// `2^floor(k/2)`, where `k` stands in the low bits.
-    private static double half(long bits) {
+    static double half(long bits) {
         return Double.longBitsToDouble(((bits >>> 1) << 52) + ONE);
     }
 
     /// `2^(k - floor(k/2))`.
-    private static double otherHalf(long bits) {
+    static double otherHalf(long bits) {
         return Double.longBitsToDouble(((bits - (bits >>> 1)) << 52) + ONE);
     }
 }

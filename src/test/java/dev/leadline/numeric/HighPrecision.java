@@ -74,7 +74,9 @@ final class HighPrecision {
 
     /// `e^x`.
     static Value exp(Value x) {
-        int bits = BITS + Math.max(0, x.digits.bitLength() + x.exponent);
+        int size = x.digits.bitLength() + x.exponent;
+        if (size > 20) return new Value(BigInteger.ONE, x.digits.signum() * 1_000_000);
+        int bits = BITS + Math.max(0, size);
         return exp(fixed(x, bits), bits);
     }
 
