@@ -5,7 +5,8 @@ package dev.leadline.numeric;
 /// `erfc(x) = e^(-x^2) S(x)` for `x >= 0`, with [a polynomial for `S`][NormalTail] and the square carried as a pair of
 /// doubles; `erf` is an odd polynomial below 1 and `1 - erfc` above.
 ///
-/// Special values: `erf(±0)` is `±0`, `erf(±∞)` is ±1, `erfc(+∞)` is 0, `erfc(-∞)` is 2, NaN gives NaN. `erfc` is subnormal
+/// Special values: `erf(±0)` is `±0`, `erf(±∞)` is ±1, `erfc(+∞)` is 0, `erfc(-∞)` is 2, NaN gives NaN. `erfc` is
+/// subnormal
 /// from 26.5433 on and 0 from 27.2265 on.
 ///
 /// Error: `erf` 1.5 ulp, `erfc` 3 ulp (`ErrorFunctionTest`).
@@ -128,8 +129,7 @@ public final class ErrorFunction {
             long bits = Double.doubleToRawLongBits(x[i]);
             long isNear = -(((bits & ~SIGN) - ONE) >>> 63); // all ones or all zeros
             long signed = Double.doubleToRawLongBits(far[i]) | (bits & SIGN);
-            far[i] = Double.longBitsToDouble(
-                    (Double.doubleToRawLongBits(near[i]) & isNear) | (signed & ~isNear));
+            far[i] = Double.longBitsToDouble((Double.doubleToRawLongBits(near[i]) & isNear) | (signed & ~isNear));
         }
     }
 }

@@ -2,11 +2,13 @@ package dev.leadline.numeric;
 
 /// The standard normal distribution: density, distribution function and quantile, with the same bits on every machine.
 ///
-/// `Φ(x) = e^(-x^2/2) S(-x/√2) / 2` for `x <= 0`, with [a polynomial for `S`][NormalTail] and half the square carried as a
+/// `Φ(x) = e^(-x^2/2) S(-x/√2) / 2` for `x <= 0`, with [a polynomial for `S`][NormalTail] and half the square carried
+/// as a
 /// pair of doubles, and `1 - Φ(-x)` above. The upper tail is `cdf(-x)`: the distribution is symmetric, and so are these
 /// functions, to the bit.
 ///
-/// Special values: `cdf(-∞)` is 0, `cdf(+∞)` is 1, `pdf(±∞)` is 0, NaN gives NaN. `cdf` is subnormal below -37.519 and 0
+/// Special values: `cdf(-∞)` is 0, `cdf(+∞)` is 1, `pdf(±∞)` is 0, NaN gives NaN. `cdf` is subnormal below -37.519 and
+/// 0
 /// below -38.486.
 ///
 /// Error: `cdf` 3 ulp, `pdf` 2 ulp (`NormalTest`).
