@@ -5,19 +5,10 @@ import java.util.Optional;
 
 /// Every family that there is.
 public final class Catalogue {
-    private static final List<Family> FAMILIES = List.of(
-            Uniform.FAMILY,
-            Normal.FAMILY,
-            Lognormal.FAMILY,
-            Triangular.FAMILY,
-            Exponential.FAMILY,
-            Weibull.FAMILY,
-            Gumbel.FAMILY);
-
     private Catalogue() {}
 
     public static List<Family> families() {
-        return FAMILIES;
+        throw new UnsupportedOperationException();
     }
 
     public static Optional<Family> family(String name) {

@@ -10,12 +10,13 @@ public interface Density {
     /// Natural logarithm of the density; `-∞` outside the support.
     double logPdf(double x);
 
-    /// [#logPdf(double)] of the first `n` values, with the same bits as one by one.
+    /// The same for a block; equal bits.
     ///
-    /// @param out filled with the logarithms; may be `x`
-    default void logPdf(double[] x, double[] out, int n) {
+    /// @param x `n` values from index 0
+    /// @param logs filled; not the same array as `x`
+    default void logPdf(double[] x, double[] logs, int n) {
         for (int i = 0; i < n; i++) {
-            out[i] = logPdf(x[i]);
+            logs[i] = logPdf(x[i]);
         }
     }
 

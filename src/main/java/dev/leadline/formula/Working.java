@@ -1,43 +1,140 @@
 package dev.leadline.formula;
 
+import dev.leadline.formula.Names.Meaning;
+import dev.leadline.problem.Place;
+import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.SequencedMap;
+import java.util.stream.Stream;
 
 /// The formulas of a question, checked together: its steps and what is asked. Immutable, safe for all threads.
 public final class Working {
-    private Working() {}
+    private final List<Step> steps;
+    private final List<Formula> asked;
+    private final List<Problem> notes;
+    private final Program program;
+    private final Program everyStep;
+    private final List<Boolean> events;
+
+    private Working(
+            List<Step> steps,
+            List<Formula> asked,
+            List<Problem> notes,
+            Program program,
+            Program everyStep,
+            List<Boolean> events) {
+        this.steps = List.copyOf(steps);
+        this.asked = List.copyOf(asked);
+        this.notes = List.copyOf(notes);
+        this.program = program;
+        this.everyStep = everyStep;
+        this.events = List.copyOf(events);
+    }
 
     /// @param inputs names, in the order of the columns of draws
     /// @param constants values by name
     /// @param steps lines `name = formula   # comment`, in any order
     /// @param asked formulas, one for each component of an observation
-    /// @throws Refusal with every problem found, at the paths `steps[i]` and `asked[i]`
+    /// @throws Refusal with every problem found, at `inputs[i]`, `constants[i]`, `steps[i]` and `asked[i]`
     public static Working of(
             List<String> inputs, SequencedMap<String, Double> constants, List<String> steps, List<String> asked) {
-        throw new UnsupportedOperationException();
+        var declarations = new Declarations();
+        for (int i = 0; i < inputs.size(); i++) {
+            declarations.declare(inputs.get(i), new Meaning.Input(), Place.of("inputs[" + i + "]"));
+        }
+        int index = 0;
+        for (var constant : constants.entrySet()) {
+            declarations.declare(
+                    constant.getKey(),
+                    new Meaning.Constant(constant.getValue()),
+                    Place.of("constants[" + index++ + "]"));
+        }
+        List<StepLine> lines = split(steps, declarations);
+        check(lines, asked, declarations);
+        return compile(inputs, lines, asked, declarations);
     }
 
     public List<Step> steps() {
-        throw new UnsupportedOperationException();
+        return steps;
     }
 
     public List<Formula> asked() {
-        throw new UnsupportedOperationException();
+        return asked;
+    }
+
+    /// What is allowed but may surprise: names that hide a constant which every formula knows.
+    public List<Problem> notes() {
+        return notes;
     }
 
     /// Inputs to the components asked for.
     public Program program() {
-        throw new UnsupportedOperationException();
+        return program;
     }
 
     /// Inputs to every step, in the order of [#steps()], then to the components asked for.
     public Program everyStep() {
-        throw new UnsupportedOperationException();
+        return everyStep;
     }
 
     /// Whether the formula asked at `index` is an event (its value can only be 0, 1 or `NaN`).
     public boolean isEvent(int index) {
-        throw new UnsupportedOperationException();
+        return events.get(index);
+    }
+
+    /// Lines that are no steps are reported and left out, so that those which use them are checked all the same.
+    private static List<StepLine> split(List<String> steps, Declarations declarations) {
+        List<StepLine> lines = new ArrayList<>();
+        for (int i = 0; i < steps.size(); i++) {
+            String path = "steps[" + i + "]";
+            try {
+                StepLine line = StepLine.of(steps.get(i), path);
+                declarations.declare(
+                        line.name().text(),
+                        new Meaning.Step(),
+                        Place.of(line.name().span()).in(path));
+                lines.add(line);
+            } catch (Refusal refusal) {
+                declarations.report(refusal.problems(), path);
+            }
+        }
+        return lines;
+    }
+
+    private static void check(List<StepLine> lines, List<String> asked, Declarations declarations) {
+        Names names = declarations.names();
+        lines.forEach(line -> declarations.report(line.check(names), line.path()));
+        for (int i = 0; i < asked.size(); i++) {
+            declarations.report(Reader.check(asked.get(i), names), "asked[" + i + "]");
+        }
+        if (!declarations.problems().isEmpty()) throw new Refusal(declarations.problems());
+    }
+
+    private static Working compile(
+            List<String> inputs, List<StepLine> lines, List<String> asked, Declarations declarations) {
+        var writer = new ExpressionWriter(inputs, declarations.names());
+        StepOrder.of(lines).forEach(line -> writer.step(line.name().text(), line.tokens()));
+        List<Integer> stepNodes =
+                lines.stream().map(line -> writer.stepNode(line.name().text())).toList();
+        List<Integer> askedNodes = new ArrayList<>();
+        List<Formula> formulas = new ArrayList<>();
+        for (String text : asked) {
+            List<Token> tokens = Reader.meaningful(Tokens.of(text));
+            askedNodes.add(writer.write(tokens));
+            formulas.add(new Formula(text, Tokens.canonical(tokens)));
+        }
+        Expression expression = writer.expression();
+        return new Working(
+                lines.stream().map(StepLine::step).toList(),
+                formulas,
+                declarations.notes(),
+                Program.of(expression, inputs.size(), askedNodes),
+                Program.of(
+                        expression,
+                        inputs.size(),
+                        Stream.concat(stepNodes.stream(), askedNodes.stream()).toList()),
+                askedNodes.stream().map(expression::isEvent).toList());
     }
 }

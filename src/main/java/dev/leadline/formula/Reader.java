@@ -1,0 +1,72 @@
+package dev.leadline.formula;
+
+import dev.leadline.formula.Token.Kind;
+import dev.leadline.problem.Place;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Span;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.SequencedSet;
+
+/// Reads formulas: their words for an editor, and what is wrong with them before anything is computed.
+public final class Reader {
+    static final int LONGEST = 100_000;
+
+    private Reader() {}
+
+    /// The words, numbers, marks and comments of any text; for colours, never fails.
+    public static List<Token> tokens(String text) {
+        return List.copyOf(Tokens.of(text));
+    }
+
+    /// The names that a formula uses, in the order in which they first stand; functions and the constants that every
+    /// formula knows are not among them. Never fails.
+    public static SequencedSet<String> names(String text) {
+        var names = new LinkedHashSet<String>();
+        for (Token token : Tokens.of(text)) {
+            if (token.kind() == Kind.NAME && !Functions.constants().containsKey(token.text())) names.add(token.text());
+        }
+        return names;
+    }
+
+    /// What is wrong with a formula, from left to right; empty where it can be computed.
+    ///
+    /// Everything that cannot be read is named, and every unknown name once. Of faults in the order of the words
+    /// only the first is, since what follows is often not meant as it stands.
+    public static List<Problem> check(String text, Names names) {
+        if (text.length() > LONGEST) return List.of(tooLong(text.length()));
+        return check(meaningful(Tokens.of(text)), names, text.length());
+    }
+
+    /// @param tokens without comments
+    /// @param end where the formula ends
+    static List<Problem> check(List<Token> tokens, Names names, int end) {
+        if (tokens.isEmpty()) {
+            return List.of(Problem.of("formula is empty").at(Place.of(new Span(end, end))));
+        }
+        List<Problem> problems = new ArrayList<>(Reading.unreadable(tokens));
+        boolean readable = problems.isEmpty();
+        problems.addAll(Reading.unknown(tokens, names));
+        if (readable) {
+            Grammar.firstFault(tokens, names)
+                    .filter(fault -> problems.stream()
+                            .noneMatch(problem -> problem.place().equals(fault.place())))
+                    .ifPresent(problems::add);
+        }
+        problems.sort(Comparator.comparingInt(
+                problem -> problem.place().span().orElseThrow().from()));
+        return List.copyOf(problems);
+    }
+
+    static List<Token> meaningful(List<Token> tokens) {
+        return tokens.stream().filter(token -> token.kind() != Kind.COMMENT).toList();
+    }
+
+    static Problem tooLong(int length) {
+        return Problem.of("formula has %d characters, more than %d".formatted(length, LONGEST))
+                .tryThis("write parts of it as steps")
+                .at(Place.of(new Span(0, length)));
+    }
+}
