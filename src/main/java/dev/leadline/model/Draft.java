@@ -5,11 +5,13 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalLong;
 import java.util.SequencedMap;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /// A project as it was written, before anything was checked: what a file holds and what the window edits.
 ///
 /// Every part stands where the project file has it, so that a problem found later can name its place there. Empty
-/// optionals are fields that were not written; [Question#of] knows the defaults.
+/// optionals are fields that were not written; [Project#of] knows the defaults.
 public record Draft(
         String title,
         String notes,
@@ -24,6 +26,12 @@ public record Draft(
         Optional<StopDraft> stop,
         OptionalLong seed,
         List<LaneDraft> lanes) {
+
+    /// Most constants, inputs or steps of a project.
+    public static final int MOST_ROWS = 1000;
+
+    private static final Pattern STEP = Pattern.compile("\\$\\.steps\\[(\\d{1,9})]");
+    private static final Pattern ASK = Pattern.compile("\\$\\.ask(?:\\[(\\d{1,9})])?\\.\\w+");
 
     public Draft {
         constants = List.copyOf(constants);
@@ -60,4 +68,25 @@ public record Draft(
     public record StopDraft(String rule, OptionalLong draws, OptionalDouble seconds) {}
 
     public record LaneDraft(String name, String points) {}
+
+    /// The JSON path of the formula asked at `index`: one ask stands by itself in a file, several in a list.
+    public String askPath(int index) {
+        String place = asks.size() == 1 ? "$.ask" : "$.ask[" + index + "]";
+        return place + "." + asks.get(index).estimand();
+    }
+
+    /// The text of the formula that stands at a JSON path, so that a place in it can be shown.
+    public Optional<String> formulaAt(String path) {
+        Matcher step = STEP.matcher(path);
+        if (step.matches()) {
+            int index = Integer.parseInt(step.group(1));
+            return index < steps.size() ? Optional.of(steps.get(index)) : Optional.empty();
+        }
+        Matcher ask = ASK.matcher(path);
+        if (ask.matches()) {
+            int index = ask.group(1) == null ? 0 : Integer.parseInt(ask.group(1));
+            return index < asks.size() ? Optional.of(asks.get(index).formula()) : Optional.empty();
+        }
+        return Optional.empty();
+    }
 }

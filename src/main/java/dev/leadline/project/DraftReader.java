@@ -1,0 +1,352 @@
+package dev.leadline.project;
+
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.AskDraft;
+import dev.leadline.model.Draft.ConstantDraft;
+import dev.leadline.model.Draft.DensityDraft;
+import dev.leadline.model.Draft.From;
+import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.LaneDraft;
+import dev.leadline.model.Draft.ReferenceDraft;
+import dev.leadline.model.Draft.StopDraft;
+import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.problem.Place;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.SequencedMap;
+
+/// Takes a project's JSON apart. Here stands which fields there are and what kind of value each has; what the values
+/// may be is for [Project][dev.leadline.model.Project] to say.
+final class DraftReader {
+
+    static final long FORMAT = 1;
+
+    private static final int NAME = 200;
+    private static final int LINE = 10_000;
+    private static final int FORMULA = 100_000;
+
+    private static final int MOST_ASKS = 100;
+
+    private static final String LEAVE_OUT = "Leave it out.";
+    private static final String ONLY_INDEPENDENT = "Leave it out: inputs are drawn independently of one another.";
+    private static final String ONLY_PLAIN =
+            "Leave it out: lanes here draw independent points from the inputs' densities.";
+    private static final String ONLY_FIXED = "Leave it out: {\"rule\": \"fixed\"} takes draws and seconds.";
+    private static final String ONLY_FAMILIES = "Use a family; the command families lists them.";
+    private static final String ONLY_VALUES =
+            "Give the value itself: {\"value\": 0.12, \"error\": 1e-4, \"source\": \"…\"}.";
+
+    private static final Map<String, String> WHOLE_LATER = Map.of(
+            "dependence",
+            ONLY_INDEPENDENT,
+            "bounds",
+            LEAVE_OUT,
+            "logbook",
+            "Leave it out: no run is written to a logbook.");
+    private static final Map<String, String> LANE_LATER = each(
+            ONLY_PLAIN,
+            "drawFrom",
+            "nominalShare",
+            "controlVariates",
+            "replicates",
+            "cells",
+            "scrambling",
+            "particles",
+            "repetitions");
+    private static final Map<String, String> STOP_LATER = each(ONLY_FIXED, "hits", "guard");
+    private static final Map<String, String> REFERENCE_LATER = each(ONLY_VALUES, "formula", "quadrature");
+    private static final Map<String, String> DENSITY_LATER = each(
+            ONLY_FAMILIES,
+            "mixture",
+            "formula",
+            "data",
+            "column",
+            "kind",
+            "bandwidth",
+            "truncate",
+            "breaks",
+            "log",
+            "fitted");
+    private static final List<String> ASKS = List.of("mean", "integral", "probability");
+    private static final List<String> ASKS_LATER =
+            List.of("quantile", "tailMean", "ratio", "standardDeviation", "distribution");
+    private static final Map<String, String> ASK_LATER =
+            each("Leave it out: it belongs to an answer that is not available.", "at", "coverage");
+
+    private final Problems problems;
+    private boolean indicesHold = true;
+
+    private DraftReader(Problems problems) {
+        this.problems = problems;
+    }
+
+    static Draft read(Json json, Problems problems) {
+        var whole = Fields.of(JsonPath.WHOLE, json, "a project {\"leadline\": 1, …}", problems);
+        return new DraftReader(problems).draft(whole.orElseThrow(() -> new Refusal(problems.found())));
+    }
+
+    private Draft draft(Fields whole) {
+        checkFormat(whole);
+        Draft draft = new Draft(
+                whole.text("title", LINE),
+                whole.text("notes", JsonReader.MOST_TEXT),
+                whole.flag("safety"),
+                constants(whole),
+                inputs(whole),
+                steps(whole),
+                asks(whole),
+                whole.object("reference", "a reference {\"value\": …}").map(this::reference),
+                whole.number("confidence"),
+                whole.object("tolerance", "a tolerance {\"absolute\": …}").map(this::tolerance),
+                whole.object("stop", "a stop rule {\"rule\": \"fixed\", \"draws\": …}")
+                        .map(this::stop),
+                whole.count("seed"),
+                lanes(whole));
+        onlyOff(whole, "commonRandomNumbers");
+        onlyAuto(whole);
+        whole.close(WHOLE_LATER);
+        if (!indicesHold) {
+            throw new Refusal(problems.found());
+        }
+        return draft;
+    }
+
+    private void checkFormat(Fields whole) {
+        if (!whole.has("leadline")) {
+            problems.add(Problem.of("\"leadline\": 1 is missing")
+                    .because("It says that the file is a project, and of which version of the format.")
+                    .tryThis("Write it as the first field, or see whether the right file was given.")
+                    .at(Place.of(whole.pathOf("leadline"))));
+            return;
+        }
+        long format = whole.count("leadline").orElse(FORMAT);
+        if (format != FORMAT) {
+            Problem problem = Problem.of("the project format is %d but must be %d".formatted(format, FORMAT))
+                    .at(Place.of(whole.pathOf("leadline")));
+            throw new Refusal(
+                    format > FORMAT ? problem.tryThis("Open it with a newer Leadline; this one cannot.") : problem);
+        }
+    }
+
+    private List<ConstantDraft> constants(Fields whole) {
+        return each(whole, "constants", Draft.MOST_ROWS, "a constant {\"name\": …, \"value\": …}", fields -> {
+            var constant = new ConstantDraft(
+                    fields.requiredText("name", NAME),
+                    fields.requiredNumber("value"),
+                    fields.text("unit", NAME),
+                    fields.text("label", LINE),
+                    fields.text("source", LINE));
+            fields.close(Map.of());
+            return constant;
+        });
+    }
+
+    private List<InputDraft> inputs(Fields whole) {
+        return each(whole, "inputs", Draft.MOST_ROWS, "an input {\"name\": …, \"density\": …}", fields -> {
+            var input = new InputDraft(
+                    fields.requiredText("name", NAME),
+                    fields.text("unit", NAME),
+                    fields.text("label", LINE),
+                    fields.text("provenance", LINE),
+                    from(fields));
+            fields.close(Map.of());
+            return input;
+        });
+    }
+
+    private From from(Fields input) {
+        boolean range = input.has("range");
+        if (range == input.has("density")) {
+            problems.add(Problem.of(
+                            range ? "the input has a density and a range" : "the input has neither density nor range")
+                    .because("A random variable has a density, an integration variable has a range.")
+                    .tryThis(range ? "Remove one of them." : "Give one of them.")
+                    .at(Place.of(input.path())));
+        }
+        var density = density(input, "density");
+        var drawFrom = density(input, "drawFrom");
+        if (range) {
+            return range(input, drawFrom);
+        }
+        if (drawFrom.isPresent()) {
+            problems.add(Fields.unavailable("\"drawFrom\" beside a density", ONLY_PLAIN)
+                    .at(Place.of(input.pathOf("drawFrom"))));
+        }
+        return new From.Density(density.orElse(new DensityDraft("", new LinkedHashMap<>())));
+    }
+
+    private From range(Fields input, Optional<DensityDraft> drawFrom) {
+        List<Json> ends = input.list("range", JsonReader.MOST_TEXT);
+        if (ends.size() != 2) {
+            if (input.take("range").orElseThrow() instanceof Json.Elements) {
+                problems.add(Problem.of("range has %d ends but must have 2".formatted(ends.size()))
+                        .because("It is [low, high]; an end may be \"-inf\" or \"inf\".")
+                        .at(Place.of(input.pathOf("range"))));
+            }
+            return new From.Range(Double.NaN, Double.NaN, drawFrom);
+        }
+        return new From.Range(end(input, ends, 0), end(input, ends, 1), drawFrom);
+    }
+
+    private double end(Fields input, List<Json> ends, int index) {
+        return switch (ends.get(index)) {
+            case Json.Number number -> number.value();
+            case Json.Text(String text) when text.equals("-inf") -> Double.NEGATIVE_INFINITY;
+            case Json.Text(String text) when text.equals("inf") -> Double.POSITIVE_INFINITY;
+            case Json other -> {
+                problems.add(Problem.of("an end of the range is %s but must be a number, \"-inf\" or \"inf\""
+                                .formatted(Shown.what(other)))
+                        .at(Place.of(JsonPath.element(input.pathOf("range"), index))));
+                yield Double.NaN;
+            }
+        };
+    }
+
+    private Optional<DensityDraft> density(Fields input, String name) {
+        return input.object(name, "a density {\"family\": …}").map(fields -> {
+            boolean later = fields.names().stream().anyMatch(DENSITY_LATER::containsKey);
+            String family = later ? fields.text("family", NAME) : fields.requiredText("family", NAME);
+            SequencedMap<String, Double> parameters = new LinkedHashMap<>();
+            for (String parameter : fields.names()) {
+                if (!parameter.equals("family") && !DENSITY_LATER.containsKey(parameter)) {
+                    parameters.put(parameter, fields.requiredNumber(parameter));
+                }
+            }
+            fields.close(DENSITY_LATER);
+            return new DensityDraft(family, parameters);
+        });
+    }
+
+    private List<String> steps(Fields whole) {
+        List<String> steps = new ArrayList<>();
+        for (Json json : whole.list("steps", Draft.MOST_ROWS)) {
+            if (json instanceof Json.Text(String line) && line.length() <= FORMULA) {
+                steps.add(line);
+            } else {
+                problems.add(Problem.of("a step is %s but must be a text of at most %,d characters"
+                                .formatted(Shown.what(json), FORMULA))
+                        .tryThis("Write it as \"name = formula   # unit\".")
+                        .at(Place.of(JsonPath.element(whole.pathOf("steps"), steps.size()))));
+                steps.add("");
+            }
+        }
+        return steps;
+    }
+
+    private List<AskDraft> asks(Fields whole) {
+        if (whole.take("ask").orElse(new Json.Null()) instanceof Json.Elements) {
+            return each(whole, "ask", MOST_ASKS, "what is asked {\"mean\": …}", this::ask);
+        }
+        return whole.object("ask", "what is asked {\"mean\": …}").map(this::ask).stream()
+                .toList();
+    }
+
+    private AskDraft ask(Fields fields) {
+        List<String> words = fields.names().stream()
+                .filter(name -> ASKS.contains(name) || ASKS_LATER.contains(name))
+                .toList();
+        if (words.size() != 1) {
+            problems.add(Problem.of(
+                            words.isEmpty()
+                                    ? "nothing is asked here"
+                                    : "%s are asked in one place".formatted(String.join(" and ", words)))
+                    .because("Each answer names one of %s.".formatted(String.join(", ", ASKS)))
+                    .tryThis("Several answers from the same draws are a list: [{\"mean\": …}, {\"probability\": …}].")
+                    .at(Place.of(fields.path())));
+        }
+        ASKS.forEach(fields::has);
+        String word = words.isEmpty() ? "" : words.getFirst();
+        if (ASKS_LATER.contains(word)) {
+            fields.take(word);
+            problems.add(Fields.unavailable(Shown.quoted(word), "Ask for one of %s.".formatted(String.join(", ", ASKS)))
+                    .at(Place.of(fields.pathOf(word))));
+        }
+        var ask = new AskDraft(
+                word,
+                ASKS.contains(word) ? fields.text(word, FORMULA) : "",
+                fields.text("unit", NAME),
+                fields.text("label", LINE));
+        fields.close(ASK_LATER);
+        return ask;
+    }
+
+    private ReferenceDraft reference(Fields fields) {
+        boolean later = fields.names().stream().anyMatch(REFERENCE_LATER::containsKey);
+        var reference = new ReferenceDraft(
+                later ? fields.number("value").orElse(Double.NaN) : fields.requiredNumber("value"),
+                fields.number("error"),
+                fields.text("source", LINE));
+        fields.close(REFERENCE_LATER);
+        return reference;
+    }
+
+    private ToleranceDraft tolerance(Fields fields) {
+        var when = fields.has("when") ? Optional.of(fields.text("when", NAME)) : Optional.<String>empty();
+        var tolerance = new ToleranceDraft(fields.number("absolute"), fields.number("relative"), when);
+        fields.close(Map.of());
+        return tolerance;
+    }
+
+    private StopDraft stop(Fields fields) {
+        var stop = new StopDraft(fields.requiredText("rule", NAME), fields.count("draws"), fields.number("seconds"));
+        fields.close(STOP_LATER);
+        return stop;
+    }
+
+    private List<LaneDraft> lanes(Fields whole) {
+        List<LaneDraft> lanes =
+                each(whole, "lanes", Draft.MOST_ROWS, "a lane {\"name\": \"A\", \"points\": …}", fields -> {
+                    var lane = new LaneDraft(fields.requiredText("name", NAME), fields.requiredText("points", NAME));
+                    fields.close(LANE_LATER);
+                    return lane;
+                });
+        if (lanes.isEmpty() && whole.take("lanes").orElse(new Json.Null()) instanceof Json.Elements) {
+            problems.add(Problem.of("there is no lane in lanes")
+                    .tryThis("Leave the field out for one lane A of independent points.")
+                    .at(Place.of(whole.pathOf("lanes"))));
+        }
+        return lanes;
+    }
+
+    private void onlyOff(Fields whole, String name) {
+        if (whole.flag(name)) {
+            problems.add(Fields.unavailable("\"%s\": true".formatted(name), LEAVE_OUT)
+                    .at(Place.of(whole.pathOf(name))));
+        }
+    }
+
+    private void onlyAuto(Fields whole) {
+        String interval = whole.text("interval", NAME);
+        if (whole.has("interval") && !interval.equals("auto") && !interval.isEmpty()) {
+            problems.add(Fields.unavailable(
+                            "the interval %s".formatted(Shown.quoted(interval)),
+                            "Leave it out: exact binomial for probabilities, Student t otherwise.")
+                    .at(Place.of(whole.pathOf("interval"))));
+        }
+    }
+
+    private interface Part<T> {
+        T of(Fields fields);
+    }
+
+    private <T> List<T> each(Fields whole, String name, int most, String expected, Part<T> part) {
+        List<T> parts = new ArrayList<>();
+        List<Json> list = whole.list(name, most);
+        for (int i = 0; i < list.size(); i++) {
+            Fields.of(JsonPath.element(whole.pathOf(name), i), list.get(i), expected, problems)
+                    .ifPresentOrElse(fields -> parts.add(part.of(fields)), () -> indicesHold = false);
+        }
+        return parts;
+    }
+
+    private static Map<String, String> each(String instead, String... names) {
+        Map<String, String> all = new LinkedHashMap<>();
+        List.of(names).forEach(name -> all.put(name, instead));
+        return all;
+    }
+}

@@ -1,0 +1,136 @@
+package dev.leadline.project;
+
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.AskDraft;
+import dev.leadline.model.Draft.ConstantDraft;
+import dev.leadline.model.Draft.DensityDraft;
+import dev.leadline.model.Draft.From;
+import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.LaneDraft;
+import dev.leadline.model.Draft.ReferenceDraft;
+import dev.leadline.model.Draft.StopDraft;
+import dev.leadline.model.Draft.ToleranceDraft;
+import java.util.List;
+import java.util.OptionalDouble;
+import java.util.function.Function;
+
+/// A draft as JSON, its fields in the order of the format. What is empty is left out, and so is a number that is not
+/// finite: an unfinished draft can be saved, and says what it lacks when it is read.
+final class DraftWriter {
+
+    private DraftWriter() {}
+
+    static Json write(Draft draft) {
+        var whole = Json.object().put("leadline", Json.of(DraftReader.FORMAT));
+        whole.putUnlessEmpty("title", draft.title()).putUnlessEmpty("notes", draft.notes());
+        if (draft.safety()) {
+            whole.put("safety", Json.of(true));
+        }
+        list(whole, "constants", draft.constants(), DraftWriter::constant);
+        list(whole, "inputs", draft.inputs(), DraftWriter::input);
+        list(whole, "steps", draft.steps(), Json::of);
+        if (draft.asks().size() == 1) {
+            whole.put("ask", ask(draft.asks().getFirst()));
+        } else {
+            list(whole, "ask", draft.asks(), DraftWriter::ask);
+        }
+        draft.reference().ifPresent(reference -> whole.put("reference", reference(reference)));
+        number(whole, "confidence", draft.confidence());
+        draft.tolerance().ifPresent(tolerance -> whole.put("tolerance", tolerance(tolerance)));
+        draft.stop().ifPresent(stop -> whole.put("stop", stop(stop)));
+        draft.seed().ifPresent(seed -> whole.put("seed", Json.of(seed)));
+        list(whole, "lanes", draft.lanes(), DraftWriter::lane);
+        return whole.build();
+    }
+
+    private static Json constant(ConstantDraft constant) {
+        var fields = Json.object().put("name", constant.name());
+        number(fields, "value", constant.value());
+        return fields.putUnlessEmpty("unit", constant.unit())
+                .putUnlessEmpty("label", constant.label())
+                .putUnlessEmpty("source", constant.source())
+                .build();
+    }
+
+    private static Json input(InputDraft input) {
+        var fields = Json.object()
+                .put("name", input.name())
+                .putUnlessEmpty("unit", input.unit())
+                .putUnlessEmpty("label", input.label())
+                .putUnlessEmpty("provenance", input.provenance());
+        switch (input.from()) {
+            case From.Density(var density) -> fields.put("density", density(density));
+            case From.Range(double low, double high, var drawFrom) -> {
+                fields.put("range", Json.list(List.of(end(low), end(high))));
+                drawFrom.ifPresent(density -> fields.put("drawFrom", density(density)));
+            }
+        }
+        return fields.build();
+    }
+
+    private static Json end(double end) {
+        if (Double.isInfinite(end)) {
+            return Json.of(end < 0 ? "-inf" : "inf");
+        }
+        return Json.orNull(end);
+    }
+
+    private static Json density(DensityDraft density) {
+        var fields = Json.object().put("family", density.family());
+        density.parameters().forEach((name, value) -> number(fields, name, value));
+        return fields.build();
+    }
+
+    private static Json ask(AskDraft ask) {
+        return Json.object()
+                .put(ask.estimand(), ask.formula())
+                .putUnlessEmpty("unit", ask.unit())
+                .putUnlessEmpty("label", ask.label())
+                .build();
+    }
+
+    private static Json reference(ReferenceDraft reference) {
+        var fields = Json.object();
+        number(fields, "value", reference.value());
+        number(fields, "error", reference.error());
+        return fields.putUnlessEmpty("source", reference.source()).build();
+    }
+
+    private static Json tolerance(ToleranceDraft tolerance) {
+        var fields = Json.object();
+        number(fields, "absolute", tolerance.absolute());
+        number(fields, "relative", tolerance.relative());
+        tolerance.when().ifPresent(when -> fields.put("when", when));
+        return fields.build();
+    }
+
+    private static Json stop(StopDraft stop) {
+        var fields = Json.object().put("rule", stop.rule());
+        stop.draws().ifPresent(draws -> fields.put("draws", Json.of(draws)));
+        number(fields, "seconds", stop.seconds());
+        return fields.build();
+    }
+
+    private static Json lane(LaneDraft lane) {
+        return Json.object()
+                .put("name", lane.name())
+                .put("points", lane.points())
+                .build();
+    }
+
+    private static <T> void list(Json.Builder fields, String name, List<T> parts, Function<T, Json> json) {
+        if (!parts.isEmpty()) {
+            fields.put(name, Json.list(parts.stream().map(json).toList()));
+        }
+    }
+
+    private static void number(Json.Builder fields, String name, OptionalDouble value) {
+        value.ifPresent(number -> number(fields, name, number));
+    }
+
+    private static void number(Json.Builder fields, String name, double value) {
+        if (Double.isFinite(value)) {
+            fields.put(name, Json.of(value));
+        }
+    }
+}
