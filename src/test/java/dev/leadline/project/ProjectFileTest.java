@@ -1,0 +1,205 @@
+package dev.leadline.project;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.AskDraft;
+import dev.leadline.model.Draft.ConstantDraft;
+import dev.leadline.model.Draft.DensityDraft;
+import dev.leadline.model.Draft.From;
+import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.LaneDraft;
+import dev.leadline.model.Draft.ReferenceDraft;
+import dev.leadline.model.Draft.StopDraft;
+import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.problem.Refusal;
+import java.io.IOException;
+import java.nio.ByteBuffer;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
+import java.nio.file.attribute.PosixFilePermissions;
+import java.util.Arrays;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+import java.util.SplittableRandom;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+class ProjectFileTest {
+
+    /// Every field that a draft can hold.
+    private static final Draft FULL = new Draft(
+            "Load on a mooring — \"windy\"",
+            "Two lines:\nthe second has a tab\t and a \\.",
+            true,
+            List.of(new ConstantDraft("g", 9.80665, "m/s2", "gravity", "by definition"), constant("n", -1e-300)),
+            List.of(
+                    new InputDraft(
+                            "v", "m/s", "gust", "31 maxima", new From.Density(density("gumbel", "location", 24.5))),
+                    new InputDraft("x", "m", "", "", new From.Range(0, 420, Optional.empty())),
+                    new InputDraft(
+                            "z",
+                            "",
+                            "",
+                            "",
+                            new From.Range(
+                                    Double.NEGATIVE_INFINITY,
+                                    Double.POSITIVE_INFINITY,
+                                    Optional.of(density("normal", "sd", 2))))),
+            List.of("q = 0.5*v^2   # Pa"),
+            List.of(new AskDraft("integral", "q*x", "m3", "volume"), new AskDraft("mean", "q", "", "")),
+            Optional.of(new ReferenceDraft(1.2568e-5, OptionalDouble.of(4e-9), "closed form")),
+            OptionalDouble.of(.99),
+            Optional.of(new ToleranceDraft(OptionalDouble.of(25), OptionalDouble.of(.1), Optional.of("both"))),
+            Optional.of(new StopDraft("fixed", OptionalLong.of(200_000_000), OptionalDouble.of(.5))),
+            OptionalLong.of(Long.MAX_VALUE),
+            List.of(new LaneDraft("A", "independent"), new LaneDraft("B", "scrambled-sobol")));
+
+    private static ConstantDraft constant(String name, double value) {
+        return new ConstantDraft(name, value, "", "", "");
+    }
+
+    private static DensityDraft density(String family, String parameter, double value) {
+        return new DensityDraft(family, new LinkedHashMap<>(Map.of(parameter, value)));
+    }
+
+    @Test
+    void readsBackWhatItWrote() {
+        String text = ProjectFile.format(FULL);
+        assertEquals(FULL, ProjectFile.parse(text), text);
+        assertEquals(text, ProjectFile.format(ProjectFile.parse(text)));
+        assertTrue(text.startsWith("{\n  \"leadline\": 1,\n"), text);
+    }
+
+    @Test
+    void asksOfOneStandByThemselvesOrInAList() {
+        var inList = ProjectFile.parse("{\"leadline\": 1, \"ask\": [{\"mean\": \"x\"}]}");
+        assertEquals(inList, ProjectFile.parse("{\"leadline\": 1, \"ask\": {\"mean\": \"x\"}}"));
+    }
+
+    @Test
+    void savesWhatIsUnfinished() {
+        var unfinished = ProjectFile.format(new Draft(
+                "",
+                "",
+                false,
+                List.of(constant("", Double.NaN)),
+                List.of(new InputDraft("", "", "", "", new From.Density(new DensityDraft("", new LinkedHashMap<>())))),
+                List.of(""),
+                List.of(new AskDraft("mean", "", "", "")),
+                Optional.empty(),
+                OptionalDouble.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                OptionalLong.empty(),
+                List.of()));
+        var reading = ProjectFile.examine(unfinished.getBytes(StandardCharsets.UTF_8));
+        assertEquals(
+                List.of("$.constants[0].value"),
+                reading.problems().stream().map(p -> p.place().path()).toList());
+        assertEquals(1, reading.draft().inputs().size());
+    }
+
+    @Test
+    void takesAByteOrderMark() {
+        assertEquals(
+                "x",
+                ProjectFile.parse("\ufeff{\"leadline\": 1, \"title\": \"x\"}").title());
+    }
+
+    @Test
+    void writesWholeFilesAndKeepsPermissions(@TempDir Path folder) throws IOException {
+        Path file = folder.resolve("a.leadline");
+        ProjectFile.write(file, FULL);
+        assertEquals(FULL, ProjectFile.read(file));
+        Files.setPosixFilePermissions(file, PosixFilePermissions.fromString("rw-r-----"));
+        ProjectFile.write(file, FULL);
+        assertEquals("rw-r-----", PosixFilePermissions.toString(Files.getPosixFilePermissions(file)));
+        try (Stream<Path> left = Files.list(folder)) {
+            assertEquals(List.of(file), left.toList());
+        }
+    }
+
+    @Test
+    void followsALinkInsteadOfReplacingIt(@TempDir Path folder) throws IOException {
+        Path file = Files.writeString(folder.resolve("a.leadline"), "old");
+        Path link = Files.createSymbolicLink(folder.resolve("link.leadline"), file);
+        ProjectFile.write(link, FULL);
+        assertTrue(Files.isSymbolicLink(link));
+        assertEquals(FULL, ProjectFile.read(file));
+    }
+
+    @Test
+    void refusesToWriteWhereItCannot(@TempDir Path folder) throws IOException {
+        Path notes = Files.writeString(folder.resolve("notes.txt"), "keep me");
+        for (Path place : List.of(folder.resolve("nowhere/a.leadline"), notes.resolve("a.leadline"), folder)) {
+            var refusal = assertThrows(Refusal.class, () -> ProjectFile.write(place, FULL), place.toString());
+            assertTrue(refusal.problems().getFirst().primary().endsWith("cannot be written"), refusal.getMessage());
+        }
+        assertEquals("keep me", Files.readString(notes));
+        try (Stream<Path> left = Files.list(folder)) {
+            assertEquals(List.of(notes), left.toList());
+        }
+    }
+
+    @Test
+    void refusesWhatIsNoFile(@TempDir Path folder) throws IOException {
+        Files.writeString(folder.resolve("mooring-line.leadline"), "{}");
+        var refusal = assertThrows(Refusal.class, () -> ProjectFile.read(folder.resolve("moring-line.leadline")));
+        assertTrue(refusal.problems().getFirst().hint().orElseThrow().contains("mooring-line.leadline"));
+        assertThrows(Refusal.class, () -> ProjectFile.read(folder));
+        Path large = folder.resolve("large.leadline");
+        try (var channel = Files.newByteChannel(large, StandardOpenOption.CREATE_NEW, StandardOpenOption.WRITE)) {
+            channel.position(ProjectFile.MOST_BYTES).write(ByteBuffer.wrap(new byte[1]));
+        }
+        assertThrows(Refusal.class, () -> ProjectFile.read(large));
+    }
+
+    /// Bytes changed, dropped, doubled and moved at random: whatever comes, it is a draft or a refusal.
+    @Test
+    void givesADraftOrARefusalWhateverTheBytes() {
+        byte[] sound = ProjectFile.format(FULL).getBytes(StandardCharsets.UTF_8);
+        int drafts = 0;
+        for (long seed = 0; seed < 20_000; seed++) {
+            byte[] bytes = mutated(sound, new SplittableRandom(seed));
+            try {
+                String text = ProjectFile.format(ProjectFile.parse(bytes));
+                assertArrayEquals(
+                        text.getBytes(StandardCharsets.UTF_8),
+                        ProjectFile.format(ProjectFile.parse(text)).getBytes(StandardCharsets.UTF_8));
+                drafts++;
+            } catch (Refusal refusal) {
+                assertFalse(refusal.problems().isEmpty());
+            } catch (RuntimeException | StackOverflowError | AssertionError e) {
+                throw new AssertionError("seed " + seed + ": " + e, e);
+            }
+        }
+        assertTrue(drafts > 100 && drafts < 19_900, drafts + " of 20,000 were drafts: the mutations test little");
+    }
+
+    private static byte[] mutated(byte[] sound, SplittableRandom random) {
+        byte[] bytes = sound.clone();
+        for (int edits = random.nextInt(1, 4); edits > 0; edits--) {
+            int at = random.nextInt(bytes.length);
+            int length = Math.min(random.nextInt(1, 12), bytes.length - at);
+            switch (random.nextInt(4)) {
+                case 0 -> bytes[at] = (byte) random.nextInt(256);
+                case 1 -> bytes[at] = (byte) "{}[]\",:0-.eEtfn\\ ".charAt(random.nextInt(17));
+                case 2 -> System.arraycopy(bytes, at, bytes, random.nextInt(bytes.length - length + 1), length);
+                default -> bytes = Arrays.copyOf(bytes, Math.max(1, bytes.length - random.nextInt(40)));
+            }
+        }
+        return bytes;
+    }
+}
