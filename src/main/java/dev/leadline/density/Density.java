@@ -10,13 +10,12 @@ public interface Density {
     /// Natural logarithm of the density; `-∞` outside the support.
     double logPdf(double x);
 
-    /// The same for a block; equal bits.
+    /// [#logPdf(double)] of the first `n` values, with the same bits as one by one.
     ///
-    /// @param x `n` values from index 0
-    /// @param logs filled; not the same array as `x`
-    default void logPdf(double[] x, double[] logs, int n) {
+    /// @param out filled with the logarithms; may be `x`
+    default void logPdf(double[] x, double[] out, int n) {
         for (int i = 0; i < n; i++) {
-            logs[i] = logPdf(x[i]);
+            out[i] = logPdf(x[i]);
         }
     }
 

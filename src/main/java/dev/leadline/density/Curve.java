@@ -1,0 +1,13 @@
+package dev.leadline.density;
+
+/// How the quantiles of a shape are computed for many draws. Immutable.
+interface Curve {
+    /// The quantiles of `location + scale * shape`, monotone in u.
+    void fill(double[] u, double[] x, int n, double location, double scale);
+
+    /// Largest error in probability that was measured.
+    double uError();
+
+    /// SHA-256 of what decides the bits.
+    String hash();
+}

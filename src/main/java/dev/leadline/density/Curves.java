@@ -1,0 +1,45 @@
+package dev.leadline.density;
+
+import java.util.LinkedHashMap;
+import java.util.Map;
+import java.util.concurrent.CancellationException;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.FutureTask;
+
+/// The curves of the shapes used last, so that inputs of one shape share one. Safe for all threads: a shape that two
+/// threads ask for at once is built once, by the thread that asked first.
+final class Curves {
+    /// About 160 kB each.
+    private static final int KEPT = 128;
+
+    private static final Map<Density, FutureTask<Curve>> LAST_USED = new LinkedHashMap<>(16, 0.75f, true) {
+        private static final long serialVersionUID = 1;
+
+        @Override
+        protected boolean removeEldestEntry(Map.Entry<Density, FutureTask<Curve>> eldest) {
+            return size() > KEPT;
+        }
+    };
+
+    private Curves() {}
+
+    static Curve of(Density shape) {
+        FutureTask<Curve> task;
+        synchronized (LAST_USED) {
+            task = LAST_USED.computeIfAbsent(shape, _ -> new FutureTask<>(() -> build(shape)));
+        }
+        task.run();
+        try {
+            return task.get();
+        } catch (InterruptedException e) {
+            Thread.currentThread().interrupt();
+            throw new CancellationException();
+        } catch (ExecutionException e) {
+            throw new IllegalStateException("no table of " + shape, e.getCause());
+        }
+    }
+
+    static Curve build(Density shape) {
+        return shape instanceof ClosedForm form ? new Exact(shape, form) : TableFit.of(shape);
+    }
+}

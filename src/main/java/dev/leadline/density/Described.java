@@ -1,0 +1,102 @@
+package dev.leadline.density;
+
+import dev.leadline.problem.Nearest;
+import dev.leadline.problem.Place;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.TreeSet;
+import java.util.stream.Collectors;
+
+/// A family, described by its name, its use and its entries. Immutable.
+record Described(String name, String use, List<Entry> ways) implements Family {
+
+    Described(String name, String use, Entry... ways) {
+        this(name, use, List.of(ways));
+    }
+
+    @Override
+    public List<List<Parameter>> entries() {
+        return ways.stream().map(Entry::parameters).toList();
+    }
+
+    @Override
+    public Density of(Map<String, Double> parameters) {
+        refuseUnknown(parameters.keySet());
+        var entry = entryOf(parameters.keySet());
+        refuseMissing(entry, parameters);
+        double[] values = entry.rules().stream()
+                .mapToDouble(rule -> parameters.containsKey(rule.name())
+                        ? parameters.get(rule.name())
+                        : rule.otherwise().orElseThrow())
+                .toArray();
+        entry.check(values);
+        return refuseOverflow(entry.maker().apply(values));
+    }
+
+    private void refuseUnknown(Set<String> given) {
+        var known = ways.stream().flatMap(way -> way.names().stream()).collect(Collectors.toSet());
+        var problems = new ArrayList<Problem>();
+        for (String name : given) {
+            if (!known.contains(name)) {
+                var problem = Problem.of("%s has no parameter %s".formatted(this.name, name))
+                        .because("It is entered by " + choices() + ".")
+                        .at(Place.of(name));
+                problems.add(Nearest.to(name, known)
+                        .map(near -> problem.tryThis("Did you mean " + near + "?"))
+                        .orElse(problem));
+            }
+        }
+        if (!problems.isEmpty()) {
+            throw new Refusal(problems);
+        }
+    }
+
+    /// The first entry that has all the given names.
+    private Entry entryOf(Set<String> given) {
+        return ways.stream()
+                .filter(way -> way.names().containsAll(given))
+                .findFirst()
+                .orElseThrow(
+                        () -> new Refusal(Problem.of(and(new TreeSet<>(given)) + " do not go together in one density")
+                                .because("%s is entered by %s.".formatted(name, choices()))
+                                .tryThis("Leave out those of the other way.")));
+    }
+
+    private void refuseMissing(Entry entry, Map<String, Double> parameters) {
+        var missing = entry.rules().stream()
+                .filter(rule -> rule.otherwise().isEmpty() && parameters.get(rule.name()) == null)
+                .map(rule -> Problem.of(rule.name() + " is missing")
+                        .because("%s is entered by %s.".formatted(name, choices()))
+                        .at(Place.of(rule.name())))
+                .toList();
+        if (!missing.isEmpty()) {
+            throw new Refusal(missing);
+        }
+    }
+
+    /// A draw must be a number; the smallest probability drawn is `2^-53`.
+    private static Density refuseOverflow(Density density) {
+        if (Double.isFinite(density.quantile(0x1p-53)) && Double.isFinite(density.upperQuantile(0x1p-53))) {
+            return density;
+        }
+        throw new Refusal(Problem.of("some draws of this density would exceed the largest number there is, 1.8e308")
+                .because("An infinite draw would make every mean infinite or meaningless.")
+                .tryThis("Check the unit of the parameters, or take a lighter tail."));
+    }
+
+    private String choices() {
+        return ways.stream().map(way -> and(new LinkedHashSet<>(way.names()))).collect(Collectors.joining(", or by "));
+    }
+
+    private static String and(Set<String> names) {
+        var all = names.stream().toList();
+        return all.size() == 1
+                ? all.getFirst()
+                : String.join(", ", all.subList(0, all.size() - 1)) + " and " + all.getLast();
+    }
+}

@@ -1,0 +1,47 @@
+package dev.leadline.density;
+
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.function.Function;
+
+/// One way to enter a member of a family: parameters that go together, what each must be, and what they must be to one
+/// another. Immutable.
+///
+/// A family's record checks itself with the entry of its components, so that no member exists that breaks a rule.
+///
+/// @param between what is wrong between values that are each allowed; asked only for such values
+/// @param maker the member, from the values in the order of `rules`
+record Entry(List<Rule> rules, Function<double[], List<Problem>> between, Function<double[], Density> maker) {
+
+    static Entry of(Function<double[], Density> maker, Rule... rules) {
+        return new Entry(List.of(rules), _ -> List.of(), maker);
+    }
+
+    Entry and(Function<double[], List<Problem>> newBetween) {
+        return new Entry(rules, newBetween, maker);
+    }
+
+    List<String> names() {
+        return rules.stream().map(Rule::name).toList();
+    }
+
+    List<Parameter> parameters() {
+        return rules.stream().map(Rule::parameter).toList();
+    }
+
+    /// @throws Refusal with every problem found
+    void check(double... values) {
+        var problems = new ArrayList<Problem>();
+        for (int i = 0; i < values.length; i++) {
+            rules.get(i).broken(values[i]).ifPresent(problems::add);
+        }
+        if (problems.isEmpty()) {
+            problems.addAll(between.apply(values));
+        }
+        if (!problems.isEmpty()) {
+            throw new Refusal(problems);
+        }
+    }
+}

@@ -1,0 +1,93 @@
+package dev.leadline.density;
+
+import static dev.leadline.density.Rule.finite;
+import static dev.leadline.density.Rule.positive;
+
+import dev.leadline.numeric.Exp;
+import org.apache.commons.numbers.gamma.Erfc;
+import org.apache.commons.numbers.gamma.InverseErfc;
+
+/// The normal density.
+///
+/// Error: relative 1e-13 in both tails (`CatalogueTest`).
+public record Normal(double mean, double sd) implements Scaled {
+    private static final Entry ENTRY = Entry.of(
+            v -> new Normal(v[0], v[1]),
+            finite("mean", "middle value"),
+            positive("sd", "standard deviation", "The normal density divides by its standard deviation.")
+                    .tryThis("For a fixed value use a constant."));
+
+    static final Family FAMILY = new Described(
+            "normal", "sums of many small effects; measurement errors; a value with its uncertainty", ENTRY);
+
+    public Normal {
+        ENTRY.check(mean, sd);
+    }
+
+    @Override
+    public double location() {
+        return mean;
+    }
+
+    @Override
+    public double scale() {
+        return sd;
+    }
+
+    @Override
+    public Density standard() {
+        return new Standard();
+    }
+
+    /// The normal density of mean 0 and standard deviation 1.
+    record Standard() implements Shape {
+        private static final double HALF_LOG_2PI = 0.9189385332046728;
+        private static final double PER_SQRT_2PI = 0.3989422804014327;
+        private static final double SQRT_2 = 1.4142135623730951;
+
+        @Override
+        public double pdf(double z) {
+            return PER_SQRT_2PI * Exp.exp(-0.5 * z * z);
+        }
+
+        @Override
+        public double logPdf(double z) {
+            return -0.5 * z * z - HALF_LOG_2PI;
+        }
+
+        @Override
+        public double cdf(double z) {
+            return 0.5 * Erfc.value(-z / SQRT_2);
+        }
+
+        @Override
+        public double survival(double z) {
+            return 0.5 * Erfc.value(z / SQRT_2);
+        }
+
+        @Override
+        public double inner(double p) {
+            return -SQRT_2 * InverseErfc.value(2 * p);
+        }
+
+        @Override
+        public double upperInner(double q) {
+            return SQRT_2 * InverseErfc.value(2 * q);
+        }
+
+        @Override
+        public double mean() {
+            return 0;
+        }
+
+        @Override
+        public double variance() {
+            return 1;
+        }
+
+        @Override
+        public Support support() {
+            return new Support(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
+        }
+    }
+}

@@ -1,0 +1,76 @@
+package dev.leadline.density;
+
+import dev.leadline.problem.Place;
+import dev.leadline.problem.Problem;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.DoublePredicate;
+
+/// What one parameter must be, checked so that `NaN` fails. Immutable.
+///
+/// @param words what it must be, as `greater than 0`
+/// @param holds whether a finite value is allowed
+/// @param why why it matters; may be empty
+/// @param hint what to try; may be empty
+/// @param otherwise the value where it is left out; empty where it must be given
+record Rule(
+        String name,
+        String use,
+        String words,
+        DoublePredicate holds,
+        String why,
+        String hint,
+        OptionalDouble otherwise) {
+
+    /// Any finite number.
+    static Rule finite(String name, String use) {
+        return new Rule(name, use, "a finite number", _ -> true, "", "", OptionalDouble.empty());
+    }
+
+    /// @param why why it must be positive
+    static Rule positive(String name, String use, String why) {
+        return new Rule(name, use, "greater than 0", v -> v > 0, why, "", OptionalDouble.empty());
+    }
+
+    /// @param why why these limits
+    static Rule between(double least, double most, String name, String use, String why) {
+        String words = "at least " + number(least) + " and at most " + number(most);
+        return new Rule(name, use, words, v -> v >= least && v <= most, why, "", OptionalDouble.empty());
+    }
+
+    Rule tryThis(String newHint) {
+        return new Rule(name, use, words, holds, why, newHint, otherwise);
+    }
+
+    Rule or(double value) {
+        return new Rule(name, use, words, holds, why, hint, OptionalDouble.of(value));
+    }
+
+    Parameter parameter() {
+        String rule = otherwise.isPresent() ? words + "; " + number(otherwise.getAsDouble()) + " if left out" : words;
+        return new Parameter(name, rule, otherwise.isPresent(), use);
+    }
+
+    Optional<Problem> broken(double value) {
+        if (Double.isFinite(value) && holds.test(value)) {
+            return Optional.empty();
+        }
+        boolean onlyFinite = Double.isInfinite(value) && holds.test(value);
+        return Optional.of(problem(name, value, onlyFinite ? "a finite number" : words, why, hint));
+    }
+
+    /// The sentence of every refused value.
+    static Problem problem(String name, double value, String words, String why, String hint) {
+        var said = Problem.of(name + " is " + number(value) + " but must be " + words)
+                .at(Place.of(name));
+        var explained = why.isEmpty() ? said : said.because(why);
+        return hint.isEmpty() ? explained : explained.tryThis(hint);
+    }
+
+    /// A number as a person writes it: no `.0` behind a whole number.
+    static String number(double value) {
+        return value == Math.rint(value) && Math.abs(value) < 1e15
+                ? Long.toString((long) value)
+                : Double.toString(value).replace("Infinity", "∞").replace('E', 'e');
+    }
+}

@@ -1,0 +1,209 @@
+package dev.leadline.density;
+
+import static dev.leadline.density.Rule.finite;
+
+import dev.leadline.numeric.Log;
+import dev.leadline.problem.Problem;
+import java.util.ArrayList;
+import java.util.List;
+
+/// The triangular density: rising in a straight line from `from` to `mode`, falling in one from there to `to`. The mode
+/// may be at an end.
+///
+/// Error: 8 ulp in both tails (`CatalogueTest`).
+public record Triangular(double from, double mode, double to) implements Scaled {
+    private static final Entry ENTRY = Entry.of(
+                    v -> new Triangular(v[0], v[1], v[2]),
+                    finite("from", "least value"),
+                    finite("mode", "most likely value"),
+                    finite("to", "largest value"))
+            .and(v -> problems(v[0], v[1], v[2]));
+
+    static final Family FAMILY = new Described(
+            "triangular", "least, most likely and largest value are known; the sum of two uniform effects", ENTRY);
+
+    public Triangular {
+        ENTRY.check(from, mode, to);
+    }
+
+    private static List<Problem> problems(double from, double mode, double to) {
+        var problems = new ArrayList<>(Uniform.rising("from", from, "to", to));
+        if (problems.isEmpty() && !(mode >= from && mode <= to)) {
+            problems.add(Rule.problem(
+                    "mode",
+                    mode,
+                    "between from, " + Rule.number(from) + ", and to, " + Rule.number(to),
+                    "The most likely value lies within the range.",
+                    ""));
+        }
+        return problems;
+    }
+
+    @Override
+    public double location() {
+        return from;
+    }
+
+    @Override
+    public double scale() {
+        return to - from;
+    }
+
+    @Override
+    public Standard standard() {
+        return new Standard((mode - from) / scale(), (to - mode) / scale());
+    }
+
+    @Override
+    public double pdf(double x) {
+        return Math.min(standard().rising(fromLow(x)), standard().mirrored().rising(fromHigh(x))) / scale();
+    }
+
+    @Override
+    public double logPdf(double x) {
+        return Log.log(pdf(x));
+    }
+
+    @Override
+    public void logPdf(double[] x, double[] out, int n) {
+        for (int i = 0; i < n; i++) {
+            out[i] = logPdf(x[i]);
+        }
+    }
+
+    @Override
+    public double cdf(double x) {
+        return standard().below(fromLow(x), fromHigh(x));
+    }
+
+    @Override
+    public double survival(double x) {
+        return standard().mirrored().below(fromHigh(x), fromLow(x));
+    }
+
+    @Override
+    public double quantile(double p) {
+        return at(
+                p,
+                standard().mode(),
+                standard().quantile(p),
+                standard().mirrored().upperQuantile(p));
+    }
+
+    @Override
+    public double upperQuantile(double q) {
+        return at(
+                1 - q,
+                standard().mode(),
+                standard().upperQuantile(q),
+                standard().mirrored().quantile(q));
+    }
+
+    /// The point at these distances from the ends, measured from the nearer one.
+    private double at(double p, double middle, double fromLow, double fromHigh) {
+        return p > middle ? Math.fma(-scale(), fromHigh, to) : Math.fma(scale(), fromLow, from);
+    }
+
+    @Override
+    public double mean() {
+        return from / 3 + mode / 3 + to / 3;
+    }
+
+    @Override
+    public Support support() {
+        return new Support(from, to);
+    }
+
+    private double fromLow(double x) {
+        return (x - from) / scale();
+    }
+
+    private double fromHigh(double x) {
+        return (to - x) / scale();
+    }
+
+    /// The triangular density between 0 and 1.
+    ///
+    /// @param mode distance of the mode from 0
+    /// @param rest distance of the mode from 1
+    record Standard(double mode, double rest) implements Shape, ClosedForm {
+
+        Standard mirrored() {
+            return new Standard(rest, mode);
+        }
+
+        /// The rising side, continued; infinite from the mode on where there is no rising side.
+        private double rising(double z) {
+            return z < 0 ? 0 : mode == 0 ? Double.isNaN(z) ? z : Double.POSITIVE_INFINITY : 2 * (z / mode);
+        }
+
+        /// The mass below the point that lies `z` from 0 and `y` from 1.
+        private double below(double z, double y) {
+            if (z <= 0) {
+                return 0;
+            }
+            if (y <= 0) {
+                return 1;
+            }
+            return z < mode ? z * (z / mode) : Math.min(mode + (z - mode) * (1 + y / rest), 1);
+        }
+
+        @Override
+        public double pdf(double z) {
+            return Math.min(rising(z), mirrored().rising(1 - z));
+        }
+
+        @Override
+        public double logPdf(double z) {
+            return Log.log(pdf(z));
+        }
+
+        @Override
+        public double cdf(double z) {
+            return below(z, 1 - z);
+        }
+
+        @Override
+        public double survival(double z) {
+            return mirrored().below(1 - z, z);
+        }
+
+        @Override
+        public double inner(double p) {
+            return p <= mode ? Math.sqrt(mode * p) : mode + (p - mode) / (1 + Math.sqrt((1 - p) / rest));
+        }
+
+        @Override
+        public double upperInner(double q) {
+            return q <= rest ? 1 - Math.sqrt(rest * q) : Math.sqrt(mode * (1 - q));
+        }
+
+        /// The rising side up to the mode, plus what the falling side adds beyond it, which is exactly 0 below.
+        @Override
+        public void fill(double[] u, double[] x, int n) {
+            double turn = mode;
+            double perRest = rest > 0 ? 1 / rest : 0;
+            double ofRest = rest;
+            for (int i = 0; i < n; i++) {
+                double v = u[i];
+                double beyond = Math.max(v - turn, 0) / (1 + Math.sqrt(Math.min(1 - v, ofRest) * perRest));
+                x[i] = Math.sqrt(turn * Math.min(v, turn)) + beyond;
+            }
+        }
+
+        @Override
+        public double mean() {
+            return (1 + mode) / 3;
+        }
+
+        @Override
+        public double variance() {
+            return (1 - mode * rest) / 18;
+        }
+
+        @Override
+        public Support support() {
+            return new Support(0, 1);
+        }
+    }
+}

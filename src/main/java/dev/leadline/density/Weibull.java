@@ -1,0 +1,121 @@
+package dev.leadline.density;
+
+import static dev.leadline.density.Rule.between;
+import static dev.leadline.density.Rule.finite;
+import static dev.leadline.density.Rule.positive;
+
+import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.Log;
+
+/// The Weibull density for lifetimes: `survival(x) = exp(-((x - from) / scale)^shape)` from `from` on.
+///
+/// Error: relative 1e-12 in both tails (`CatalogueTest`).
+public record Weibull(double shape, double scale, double from) implements Scaled {
+    private static final Entry ENTRY = Entry.of(
+            v -> new Weibull(v[0], v[1], v[2]),
+            between(0.01, 1e6, "shape", "below 1 early failures, above 1 wear", Standard.LIMITS),
+            positive(
+                    "scale",
+                    "63.2 % of the values are below from + scale",
+                    "The Weibull density divides by its scale."),
+            finite("from", "least value").or(0));
+
+    static final Family FAMILY = new Described("weibull", "lifetimes, strengths, wind speeds", ENTRY);
+
+    public Weibull {
+        ENTRY.check(shape, scale, from);
+    }
+
+    @Override
+    public double location() {
+        return from;
+    }
+
+    @Override
+    public Density standard() {
+        return new Standard(shape);
+    }
+
+    /// The Weibull density of scale 1 from 0 on.
+    record Standard(double shape) implements Shape, Linked {
+        private static final String LIMITS =
+                "Beyond these limits its values are too far apart or too close for numbers of 16 digits.";
+
+        /// `z^shape`.
+        private double power(double z) {
+            return StrictMath.pow(z, shape);
+        }
+
+        @Override
+        public double pdf(double z) {
+            if (z == 0) {
+                return shape < 1 ? Double.POSITIVE_INFINITY : shape == 1 ? 1 : 0;
+            }
+            double power = power(z);
+            return z < 0 || power > 1e4 ? 0 : shape * (power / z) * Exp.exp(-power);
+        }
+
+        @Override
+        public double logPdf(double z) {
+            return z <= 0 ? Log.log(pdf(z)) : Log.log(shape) + (shape - 1) * Log.log(z) - power(z);
+        }
+
+        @Override
+        public double cdf(double z) {
+            return z < 0 ? 0 : -StrictMath.expm1(-power(z));
+        }
+
+        @Override
+        public double survival(double z) {
+            return z < 0 ? 1 : Exp.exp(-power(z));
+        }
+
+        @Override
+        public double inner(double p) {
+            return StrictMath.pow(-StrictMath.log1p(-p), 1 / shape);
+        }
+
+        @Override
+        public double upperInner(double q) {
+            return StrictMath.pow(-Log.log(q), 1 / shape);
+        }
+
+        @Override
+        public Link link() {
+            return Link.LOG;
+        }
+
+        @Override
+        public double linked(double p) {
+            return Log.log(-StrictMath.log1p(-p)) / shape;
+        }
+
+        @Override
+        public double upperLinked(double q) {
+            return Log.log(-Log.log(q)) / shape;
+        }
+
+        @Override
+        public double mean() {
+            return GammaFunction.gamma(1 + 1 / shape);
+        }
+
+        @Override
+        public double variance() {
+            double mean = mean();
+            return mean * mean * StrictMath.expm1(excess(1 / shape));
+        }
+
+        /// `log Γ(1 + 2e) - 2 log Γ(1 + e)`.
+        private static double excess(double e) {
+            return e <= 0.25
+                    ? GammaFunction.logGammaExcess(e)
+                    : GammaFunction.logGamma(1 + 2 * e) - 2 * GammaFunction.logGamma(1 + e);
+        }
+
+        @Override
+        public Support support() {
+            return new Support(0, Double.POSITIVE_INFINITY);
+        }
+    }
+}

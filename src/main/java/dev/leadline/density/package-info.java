@@ -1,0 +1,27 @@
+/// Densities: families with the rules of their parameters, and draws of them by inversion.
+///
+/// Start with [Catalogue][dev.leadline.density.Catalogue], which lists the families,
+/// [Density][dev.leadline.density.Density], what every member can answer, and
+/// [Inversion][dev.leadline.density.Inversion], which turns probabilities into draws.
+///
+/// A member is made by [Family.of][dev.leadline.density.Family#of(java.util.Map)] from named values, and refused with
+/// every problem that was found; the records (`new Gumbel(24.5, 2.6)`) refuse the same values with the same words.
+///
+/// Draws: every density is `location + scale * shape`. The quantile function of the shape is tabulated once, measured,
+/// and shared by all densities of that shape; a draw costs one polynomial of degree 5. The hash of the table stands in
+/// the run record: the tables are built from functions that have the same bits everywhere (kernels of `numeric`,
+/// `StrictMath`, arithmetic), and if one ever differed the record would say so.
+///
+/// How to add a family:
+/// 1. One file, `Name.java`: a record whose components are the parameters as the project file calls them, with an
+///    `Entry` for each way to enter it, a `FAMILY` that describes it, and a nested `Standard`, the shape at location 0
+///    and scale 1, whose components are only what distinguishes shapes. Both tails need their own functions. Where the
+///    quantiles span hundreds of decades, `Standard` is also `Linked`; where the quantile is a square root or less, it
+///    has a `ClosedForm`.
+/// 2. One line in `Catalogue`.
+/// 3. One table, `src/test/resources/density/name.csv`, from a source that is not this code (see `tables.py` there).
+///
+/// The tests of the catalogue then find it: round trips, both tails, moments, the table of draws, refused parameters.
+///
+/// May use: `numeric`, `formula`, `problem`.
+package dev.leadline.density;

@@ -1,0 +1,179 @@
+package dev.leadline.density;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.Arrays;
+import java.util.SplittableRandom;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/// Draws against the distribution function, at points that the building of the table did not choose.
+class InversionTest {
+    private static final long SEED = 20261201;
+    private static final int BLOCK = 1024;
+
+    static Stream<Density> densities() {
+        return Examples.all();
+    }
+
+    /// The error is measured in the tail's own probability, down to the smallest that is drawn; a value is as good as
+    /// the doubles two below and two above, since the value of the shape is rounded, then shifted and scaled.
+    @ParameterizedTest
+    @MethodSource("densities")
+    void hitsTheProbability(Density density) {
+        var inversion = Inversion.of(density);
+        assertTrue(inversion.uError() <= 1e-12, () -> "stated " + inversion.uError());
+        var random = new SplittableRandom(SEED);
+        var u = new double[BLOCK];
+        var x = new double[BLOCK];
+        for (int block = 0; block < 20; block++) {
+            for (int i = 0; i < BLOCK; i++) {
+                u[i] = block % 2 == 0 ? anywhere(random) : inTail(random);
+            }
+            inversion.fill(u, x, BLOCK);
+            for (int i = 0; i < BLOCK; i++) {
+                boolean lower = u[i] <= 0.5;
+                double p = lower ? u[i] : 1 - u[i];
+                double slack = Math.min(1e-12, 1e-9 * p);
+                double below = Math.nextDown(Math.nextDown(x[i]));
+                double above = Math.nextUp(Math.nextUp(x[i]));
+                double least = lower ? density.cdf(below) : density.survival(above);
+                double most = lower ? density.cdf(above) : density.survival(below);
+                assertTrue(
+                        p >= least - slack && p <= most + slack,
+                        density + ", seed " + SEED + ": u " + u[i] + " gives " + x[i] + ", probabilities " + least
+                                + " to " + most);
+            }
+        }
+    }
+
+    /// Around every border of every cell, and at random neighbours.
+    @ParameterizedTest
+    @MethodSource("densities")
+    void neverFallsBack(Density density) {
+        var inversion = Inversion.of(density);
+        var border = new double[3 * 2 * 52 * 64 + 1];
+        int n = 0;
+        for (int octave = 2; octave <= 53; octave++) {
+            for (int cell = 0; cell < 64; cell++) {
+                double p = StrictMath.scalb(1 + cell / 64.0, -octave);
+                for (double q : new double[] {p, 1 - p}) {
+                    border[n++] = q;
+                    border[n++] = Math.nextDown(q);
+                    border[n++] = Math.nextUp(q);
+                }
+            }
+        }
+        border[n++] = 0.5;
+        var u = Arrays.stream(border, 0, n).filter(v -> v < 1).sorted().toArray();
+        increasing(inversion, density, u);
+
+        var random = new SplittableRandom(SEED);
+        for (int block = 0; block < 50; block++) {
+            var near = new double[BLOCK];
+            near[0] = block % 2 == 0 ? anywhere(random) : inTail(random);
+            for (int i = 1; i < BLOCK; i++) {
+                near[i] = near[i - 1] + Math.max(0x1p-53, Math.ulp(near[i - 1]));
+            }
+            increasing(
+                    inversion, density, Arrays.stream(near).filter(v -> v < 1).toArray());
+        }
+    }
+
+    private static void increasing(Inversion inversion, Density density, double[] u) {
+        var x = new double[u.length];
+        inversion.fill(u, x, u.length);
+        for (int i = 1; i < u.length; i++) {
+            int k = i;
+            assertTrue(
+                    x[i] >= x[i - 1],
+                    () -> density + ": u " + u[k - 1] + ", " + u[k] + " give " + x[k - 1] + ", " + x[k]);
+        }
+    }
+
+    /// Kolmogorov-Smirnov: false alarms in one of 10^6 runs of a density; it notices a shift of the distribution
+    /// function by .012.
+    @ParameterizedTest
+    @MethodSource("densities")
+    void drawsFollowTheDensity(Density density) {
+        int n = 200_000;
+        var random = new SplittableRandom(SEED);
+        var x = new double[n];
+        for (int i = 0; i < n; i++) {
+            x[i] = anywhere(random);
+        }
+        Inversion.of(density).fill(x, x, n);
+        Arrays.sort(x);
+        double distance = 0;
+        for (int i = 0; i < n; i++) {
+            double p = density.cdf(x[i]);
+            distance = Math.max(distance, Math.max((i + 1.0) / n - p, p - (double) i / n));
+        }
+        double limit = Math.sqrt(Math.log(2e6) / (2.0 * n));
+        double seen = distance;
+        assertTrue(distance < limit, () -> density + ", seed " + SEED + ": distance " + seen + ", limit " + limit);
+    }
+
+    @ParameterizedTest
+    @MethodSource("densities")
+    void sameTableTwice(Density density) {
+        var shape = density.standardised().shape();
+        assertEquals(Curves.build(shape).hash(), Curves.build(shape).hash());
+        assertEquals(Curves.build(shape).hash(), Inversion.of(density).hash());
+    }
+
+    @Test
+    void hashTellsShapesApart() {
+        assertNotEquals(
+                Inversion.of(new Exponential(1)).hash(),
+                Inversion.of(new Normal(0, 1)).hash());
+        assertNotEquals(
+                Inversion.of(new Triangular(0, 1, 3)).hash(),
+                Inversion.of(new Triangular(0, 2, 3)).hash());
+    }
+
+    @Test
+    void membersOfOneShapeShareATable() {
+        assertTrue(Curves.of(new Normal(3, 4).standard()) == Curves.of(new Normal(-1, 0.1).standard()));
+    }
+
+    @Test
+    void probabilitiesThatAreNeverDrawnAreStillRight() {
+        var u = new double[] {0, 1e-300, 0x1p-60, 0.5, 1, Double.NaN};
+        var normal = new Normal(0, 1);
+        var x = new double[u.length];
+        Inversion.of(normal).fill(u, x, u.length);
+        assertEquals(Double.NEGATIVE_INFINITY, x[0]);
+        assertEquals(normal.quantile(1e-300), x[1]);
+        assertEquals(normal.quantile(0x1p-60), x[2]);
+        assertEquals(0, x[3], 1e-16);
+        assertEquals(Double.POSITIVE_INFINITY, x[4]);
+        assertTrue(Double.isNaN(x[5]));
+    }
+
+    @Test
+    void fillsInPlaceAndNoFurther() {
+        var u = new double[] {0.25, 0.5, 0.75, 0.125};
+        var x = new double[4];
+        var inversion = Inversion.of(new Gumbel(0, 1));
+        inversion.fill(u, x, 3);
+        assertEquals(0, x[3]);
+        inversion.fill(u, u, 3);
+        assertEquals(0.125, u[3]);
+        assertTrue(Arrays.equals(x, 0, 3, u, 0, 3));
+    }
+
+    private static double anywhere(SplittableRandom random) {
+        return ((random.nextLong() >>> 12) + 0.5) * 0x1p-52;
+    }
+
+    /// A probability near 0 or 1, all orders of magnitude alike.
+    private static double inTail(SplittableRandom random) {
+        double p = StrictMath.scalb(1 + random.nextDouble(), -2 - random.nextInt(52));
+        return random.nextBoolean() ? p : 1 - p;
+    }
+}
