@@ -1,11 +1,143 @@
 package dev.leadline.model;
 
+import dev.leadline.formula.Working;
+import dev.leadline.model.Draft.ReferenceDraft;
+import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
 
 /// A project after every check: the question and how it is to be run, beside the draft they came from.
 public record Project(Draft draft, Question question, Plan plan) {
+
+    private static final double USUAL_CONFIDENCE = .95;
+
     /// @throws Refusal with every problem found, each at its JSON path in the draft
     public static Project of(Draft draft) {
-        throw new UnsupportedOperationException();
+        var findings = new Findings();
+        checkSizes(draft, findings);
+        List<Input> inputs = Inputs.of(draft.inputs(), findings);
+        List<Ask> asks = Asks.of(draft, findings);
+        Optional<Working> working = Workings.of(draft, findings);
+        working.ifPresent(formulas -> Asks.checkEvents(draft, formulas, findings));
+        Optional<Reference> reference = draft.reference().map(given -> reference(given, findings));
+        double confidence = confidence(draft, findings);
+        Optional<Tolerance> tolerance = draft.tolerance().map(given -> tolerance(given, findings));
+        Plan plan = Plans.of(draft, findings);
+        findings.refuseIfAny();
+        Question question = new Question(
+                draft.title(),
+                draft.notes(),
+                draft.safety(),
+                constants(draft),
+                inputs,
+                working.orElseThrow(),
+                asks,
+                reference,
+                confidence,
+                tolerance);
+        return new Project(draft, question, plan);
+    }
+
+    /// What is no fault but may surprise, at its JSON path: names that hide a number which every formula knows.
+    public List<Problem> notes() {
+        return Workings.notes(draft, question.working());
+    }
+
+    private static void checkSizes(Draft draft, Findings findings) {
+        Map.of(
+                        "constants",
+                        draft.constants().size(),
+                        "inputs",
+                        draft.inputs().size(),
+                        "steps",
+                        draft.steps().size())
+                .forEach((rows, size) -> {
+                    if (size > Draft.MOST_ROWS) {
+                        findings.add(
+                                "$." + rows,
+                                "there are %,d %s".formatted(size, rows),
+                                "A project has at most %,d.".formatted(Draft.MOST_ROWS));
+                    }
+                });
+        findings.refuseIfAny();
+    }
+
+    private static List<Constant> constants(Draft draft) {
+        return draft.constants().stream()
+                .map(c -> new Constant(Workings.composed(c.name()), c.value(), c.unit(), c.label(), c.source()))
+                .toList();
+    }
+
+    private static Reference reference(ReferenceDraft draft, Findings findings) {
+        double error = draft.error().orElse(0);
+        if (!Double.isFinite(draft.value())) {
+            findings.add(
+                    "$.reference.value",
+                    "value is %s but must be finite".formatted(draft.value()),
+                    "The answer is compared with it.");
+        }
+        if (!(error >= 0 && Double.isFinite(error))) {
+            findings.add(
+                    "$.reference.error",
+                    "error is %s but must be 0 or more".formatted(error),
+                    "It is the standard uncertainty of the reference value.");
+        }
+        return new Reference(draft.value(), error, draft.source());
+    }
+
+    private static double confidence(Draft draft, Findings findings) {
+        double confidence = draft.confidence().orElse(USUAL_CONFIDENCE);
+        if (!(confidence > 0 && confidence < 1)) {
+            findings.add(
+                    "$.confidence",
+                    "confidence is %s but must be between 0 and 1".formatted(confidence),
+                    "It is the chance that the interval holds the value sought.",
+                    "Write 0.95 for 95 %.");
+        }
+        return confidence;
+    }
+
+    private static Tolerance tolerance(ToleranceDraft draft, Findings findings) {
+        if (draft.absolute().isEmpty() && draft.relative().isEmpty()) {
+            findings.add(
+                    "$.tolerance",
+                    "the tolerance says nothing",
+                    "It is \"absolute\", in the unit of the answer, or \"relative\", or both.");
+        }
+        checkPositive("absolute", draft.absolute(), findings);
+        checkPositive("relative", draft.relative(), findings);
+        draft.when().ifPresent(when -> {
+            if (!when.equals("either") && !when.equals("both")) {
+                findings.add(
+                        "$.tolerance.when",
+                        "when is \"%s\" but must be \"either\" or \"both\"".formatted(when),
+                        "It says which of absolute and relative must be met.");
+            } else if (draft.absolute().isEmpty() || draft.relative().isEmpty()) {
+                findings.add(
+                        "$.tolerance.when",
+                        "when has nothing to choose from",
+                        "It says which of absolute and relative must be met.",
+                        "Give both, or leave it out.");
+            }
+        });
+        return new Tolerance(
+                draft.absolute(),
+                draft.relative(),
+                draft.when().filter("both"::equals).isPresent());
+    }
+
+    private static void checkPositive(String name, OptionalDouble given, Findings findings) {
+        given.ifPresent(value -> {
+            if (!(value > 0 && Double.isFinite(value))) {
+                findings.add(
+                        "$.tolerance." + name,
+                        "%s is %s but must be greater than 0".formatted(name, value),
+                        "The half-width of the interval is compared with it.");
+            }
+        });
     }
 }
