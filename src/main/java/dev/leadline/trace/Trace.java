@@ -33,12 +33,12 @@ public record Trace(
         return stopReason.isPresent();
     }
 
-    /// Sums of every observation.
+    /// Sums of every observation; only where there is a mark.
     public Accumulator total() {
         return merged(blocks);
     }
 
-    /// Sums of about the first half of the observations, then of the rest; two empty ones below two blocks.
+    /// Sums of about the first half of the observations, then of the rest; only where there is a mark.
     public List<Accumulator> halves() {
         int middle = 0;
         long half = blocks.stream().mapToLong(Accumulator::count).sum() / 2;
@@ -48,12 +48,9 @@ public record Trace(
         return List.of(merged(blocks.subList(0, middle)), merged(blocks.subList(middle, blocks.size())));
     }
 
-    private static Accumulator merged(List<Accumulator> parts) {
-        if (parts.isEmpty()) {
-            return new Accumulator(0);
-        }
-        var sum = parts.getFirst().copy();
-        parts.subList(1, parts.size()).forEach(sum::merge);
+    private Accumulator merged(List<Accumulator> parts) {
+        var sum = new Accumulator(blocks.getFirst().components());
+        parts.forEach(sum::merge);
         return sum;
     }
 }

@@ -1,0 +1,173 @@
+package dev.leadline.ground;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.engine.Questions;
+import dev.leadline.estimate.Accumulator;
+import dev.leadline.ground.Ground.Status;
+import dev.leadline.ground.Ground.Strength;
+import dev.leadline.model.Question;
+import dev.leadline.study.Study;
+import dev.leadline.trace.Answers;
+import dev.leadline.trace.Blocks;
+import dev.leadline.trace.Mark;
+import dev.leadline.trace.Trace;
+import java.util.List;
+import java.util.Optional;
+import java.util.random.RandomGenerator;
+import java.util.random.RandomGeneratorFactory;
+import org.junit.jupiter.api.Test;
+
+/// Each ground on a question where it must speak, and on its nearest twin where it must not.
+class GroundsTest {
+    private static List<Ground> run(Question question, long draws) throws InterruptedException {
+        try (var study = Study.start(question, Questions.plan(draws, 11), 1, _ -> {})) {
+            return study.await().lanes().getFirst().grounds();
+        }
+    }
+
+    private static Ground ground(String code, List<Ground> grounds) {
+        return grounds.stream().filter(g -> g.code().equals(code)).findFirst().orElseThrow();
+    }
+
+    private static void objects(Ground ground) {
+        assertEquals(Optional.of(Strength.OBJECTION), ground.strength(), ground.text());
+    }
+
+    private static void cautions(Ground ground) {
+        assertEquals(Optional.of(Strength.CAUTION), ground.strength(), ground.text());
+    }
+
+    private static void shows(Ground ground) {
+        assertEquals(Status.SHOWN, ground.status(), ground.text());
+    }
+
+    @Test
+    void fewHits() throws InterruptedException {
+        var none = ground(
+                "hits",
+                run(new Questions().uniform("x", 0, 1).probability("x < 1e-9").build(), 1_000));
+        cautions(none);
+        assertEquals("no hit in 1,000 draws: a part of probability below 0.00300 may be unseen", none.text());
+        cautions(ground(
+                "hits",
+                run(new Questions().uniform("x", 0, 1).probability("x < 0.01").build(), 1_000)));
+        cautions(ground(
+                "hits",
+                run(new Questions().uniform("x", 0, 1).probability("x > 0.01").build(), 1_000)));
+        shows(ground(
+                "hits",
+                run(new Questions().uniform("x", 0, 1).probability("x < 0.1").build(), 1_000)));
+    }
+
+    @Test
+    void noSpread() throws InterruptedException {
+        objects(ground(
+                "spread",
+                run(new Questions().uniform("x", 0, 1).mean("floor(x)").build(), 1_000)));
+        var twin = run(new Questions().uniform("x", 0, 1.01).mean("floor(x)").build(), 1_000);
+        assertTrue(twin.stream().noneMatch(g -> g.code().equals("spread")));
+    }
+
+    @Test
+    void failedEvaluations() throws InterruptedException {
+        var failed = run(new Questions().uniform("x", -.01, 1).mean("log(x)").build(), 1_000);
+        objects(ground("failed-evaluations", failed));
+        assertTrue(ground("failed-evaluations", failed).text().contains("over finite evaluations only"));
+        shows(ground(
+                "failed-evaluations",
+                run(new Questions().uniform("x", 0, 1).mean("log(x)").build(), 1_000)));
+    }
+
+    @Test
+    void skewness() throws InterruptedException {
+        cautions(ground(
+                "skewness", run(new Questions().normal("z").mean("exp(2*z)").build(), 1_000)));
+        shows(ground(
+                "skewness", run(new Questions().normal("z").mean("exp(z/2)").build(), 1_000)));
+    }
+
+    @Test
+    void reference() throws InterruptedException {
+        var question = new Questions().uniform("x", 0, 1).mean("x");
+        shows(ground("reference", run(question.reference(.5).build(), 10_000)));
+        // The standard error is 0.0029.
+        objects(ground("reference", run(question.reference(.53).build(), 10_000)));
+        var without = run(new Questions().uniform("x", 0, 1).mean("x").build(), 10_000);
+        assertEquals(Status.NOT_DONE, ground("reference", without).status());
+    }
+
+    @Test
+    void numericalTolerance() throws InterruptedException {
+        var question = new Questions().uniform("x", 0, 1).mean("x");
+        // The half-width is 0.00566 at 10,000 draws.
+        shows(ground("tolerance", run(question.absoluteTolerance(.0058).build(), 10_000)));
+        var missed = ground("tolerance", run(question.absoluteTolerance(.0055).build(), 10_000));
+        cautions(missed);
+        assertTrue(missed.remedy().orElseThrow().matches("Make about 10,\\d\\d\\d draws in all"));
+    }
+
+    @Test
+    void halvesThatDiffer() {
+        var question = new Questions().uniform("x", 0, 1).mean("x").build();
+        objects(ground("settled", Grounds.of(question, halves(question, .2))));
+        shows(ground("settled", Grounds.of(question, halves(question, 0))));
+    }
+
+    /// 2,000 uniform values, the second half shifted; the standard error of the difference is 0.013.
+    private static Trace halves(Question question, double shift) {
+        RandomGenerator random = RandomGeneratorFactory.of("L64X128MixRandom").create(1);
+        var blocks = new Blocks();
+        var total = new Accumulator(1);
+        for (int i = 0; i < 40; i++) {
+            double by = i < 20 ? 0 : shift;
+            double[] values = random.doubles(50).map(u -> u + by).toArray();
+            var block = new Accumulator(1);
+            block.add(new double[][] {values}, 0, values.length);
+            blocks.add(block);
+            total.merge(block);
+        }
+        var mark = new Mark(2_000, 0, Answers.of(question, total));
+        return new Trace("A", "independent", List.of(mark), blocks.snapshot(), List.of(), Optional.empty());
+    }
+
+    @Test
+    void doubtsStandFirstTheStrongestOnTop() throws InterruptedException {
+        var grounds =
+                run(new Questions().uniform("x", -.01, 1).mean("exp(-8*log(x))").build(), 1_000);
+        objects(grounds.getFirst());
+        var statuses = grounds.stream().map(Ground::status).toList();
+        assertEquals(
+                statuses.stream()
+                        .sorted(java.util.Comparator.comparingInt(
+                                s -> List.of(Status.DOUBTED, Status.SHOWN, Status.NOT_DONE)
+                                        .indexOf(s)))
+                        .toList(),
+                statuses);
+    }
+
+    @Test
+    void severalAnswersAreToldApart() throws InterruptedException {
+        var grounds = run(
+                new Questions()
+                        .uniform("x", 0, 1)
+                        .probability("x < 1e-9")
+                        .probability("x < 0.5")
+                        .build(),
+                1_000);
+        assertEquals(
+                List.of("answer 1: no hit in 1,000 draws: a part of probability below 0.00300 may be unseen"),
+                grounds.stream()
+                        .filter(g -> g.code().equals("hits") && g.status() == Status.DOUBTED)
+                        .map(Ground::text)
+                        .toList());
+    }
+
+    @Test
+    void nothingIsJudgedBeforeTheFirstMark() {
+        var question = new Questions().uniform("x", 0, 1).mean("x").build();
+        var empty = new Trace("A", "independent", List.of(), List.of(), List.of(), Optional.empty());
+        assertEquals(List.of(), Grounds.of(question, empty));
+    }
+}
