@@ -171,7 +171,7 @@ class ProjectFileTest {
     void givesADraftOrARefusalWhateverTheBytes() {
         byte[] sound = ProjectFile.format(FULL).getBytes(StandardCharsets.UTF_8);
         int drafts = 0;
-        for (long seed = 0; seed < 20_000; seed++) {
+        for (long seed = 0; seed < 5_000; seed++) {
             byte[] bytes = mutated(sound, new SplittableRandom(seed));
             try {
                 String text = ProjectFile.format(ProjectFile.parse(bytes));
@@ -185,7 +185,7 @@ class ProjectFileTest {
                 throw new AssertionError("seed " + seed + ": " + e, e);
             }
         }
-        assertTrue(drafts > 100 && drafts < 19_900, drafts + " of 20,000 were drafts: the mutations test little");
+        assertTrue(drafts > 50 && drafts < 4_950, drafts + " of 5,000 were drafts: the mutations test little");
     }
 
     private static byte[] mutated(byte[] sound, SplittableRandom random) {
