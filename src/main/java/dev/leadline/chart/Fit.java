@@ -9,19 +9,22 @@ import java.util.stream.DoubleStream;
 ///
 /// **Draws**: on a logarithmic axis the last four decades, on a linear one everything from 0.
 ///
-/// **Values**: all limits and estimates that each lane has shown since it had one twenty-fifth of its draws. There an
-/// interval is about five times its present length, so the latest one takes about a fifth of the height whatever the
-/// first ones were: wild early intervals leave the picture above and below instead of flattening it, while a jump of
-/// the estimate in the later part always stays in sight. The strip is taken in where that no more than doubles the
-/// height, and
-/// so is the reference value; one that is farther away is named at the edge instead ([Picture]).
-/// The range is then widened to half steps of the axis, so that it does not tremble with every new mark.
+/// **Values**: all limits and estimates of each lane's later part, which is the stretch of marks up to the latest
+/// in which the interval was at most five times as long as it is now. So the latest interval takes about a fifth of
+/// the height, whatever the first ones were and however fast the scheme settles: wild early intervals leave the
+/// picture above and below instead of flattening it, while a jump of the estimate in the later part stays in sight.
+/// The strip of the tolerance and the reference value are taken in where that does not more than double the height;
+/// a reference value farther away is named in the key instead. The range is then widened to half steps of the axis,
+/// so that it does not tremble with every new mark, but not far below 0 where nothing is negative.
 final class Fit {
-    private static final double LATER_PART = 1.0 / 25;
+    private static final double LONGER = 5;
     private static final double DECADES = 1e4;
 
     /// Ends of a value axis beyond which a length would overflow.
     private static final double MOST = 1e307;
+
+    /// A length below which nothing can be told apart.
+    static final double LEAST = 1e-300;
 
     private Fit() {}
 
@@ -65,6 +68,17 @@ final class Fit {
         return roomy(range);
     }
 
+    /// As far out as a person may zoom or pan: ten times the stretch that holds everything a lane ever showed.
+    static Range outermost(Settling settling) {
+        var all = hull(settling.lanes().stream()
+                        .flatMap(lane -> lane.points().stream())
+                        .flatMapToDouble(Fit::valuesOf))
+                .map(values(settling)::with)
+                .orElseGet(() -> values(settling));
+        double more = Math.min(4.5 * all.length(), MOST);
+        return new Range(all.low() - more, all.high() + more);
+    }
+
     private static List<Range> wishes(Settling settling, Optional<List<Double>> reference) {
         var wishes = new ArrayList<Range>();
         settling.strip().ifPresent(wishes::add);
@@ -73,11 +87,27 @@ final class Fit {
     }
 
     private static DoubleStream laterPart(Series lane) {
-        double since = lane.last().map(point -> point.draws() * LATER_PART).orElse(0.0);
-        return lane.points().stream()
-                .filter(point -> point.draws() >= since)
-                .flatMapToDouble(point -> DoubleStream.of(point.estimate(), point.low(), point.high()))
-                .filter(Double::isFinite);
+        var points = lane.points();
+        return points.subList(start(points), points.size()).stream().flatMapToDouble(Fit::valuesOf);
+    }
+
+    private static DoubleStream valuesOf(Point point) {
+        return DoubleStream.of(point.estimate(), point.low(), point.high());
+    }
+
+    /// Index of the first mark of the later part; 0 where no interval can be told from the others by its length.
+    private static int start(List<Point> points) {
+        double latest = Double.NaN;
+        for (int i = points.size() - 1; i >= 0; i--) {
+            double length = points.get(i).high() - points.get(i).low();
+            if (Double.isNaN(latest) && Double.isFinite(length)) {
+                latest = length;
+            }
+            if (latest > 0 && length > LONGER * latest) {
+                return i + 1;
+            }
+        }
+        return 0;
     }
 
     /// From the least to the greatest of the finite values; about a single value, a range in proportion to it.
@@ -88,11 +118,11 @@ final class Fit {
         if (all.getCount() == 0) {
             return Optional.empty();
         }
-        double least = 1e-9 * Math.max(Math.abs(all.getMin()), Math.abs(all.getMax()));
+        double least = Math.max(LEAST, 1e-9 * Math.max(Math.abs(all.getMin()), Math.abs(all.getMax())));
         if (all.getMax() - all.getMin() > least) {
             return Optional.of(new Range(all.getMin(), all.getMax()));
         }
-        double around = all.getMin() == 0 ? 1 : Math.max(Math.abs(all.getMin()) * .1, Double.MIN_NORMAL);
+        double around = all.getMin() == 0 ? 1 : Math.max(Math.abs(all.getMin()) * .1, LEAST);
         return Optional.of(new Range(all.getMin() - around, all.getMax() + around));
     }
 
@@ -100,6 +130,9 @@ final class Fit {
         double step = halfStep(range.length() * 1.06);
         double low = step * Math.floor((range.low() - .03 * range.length()) / step);
         double high = step * Math.ceil((range.high() + .03 * range.length()) / step);
+        if (range.low() >= 0 && low < 0) {
+            low = -.03 * high;
+        }
         return low < high && Double.isFinite(high - low) ? new Range(low, high) : range;
     }
 

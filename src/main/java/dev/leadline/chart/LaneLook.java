@@ -35,7 +35,10 @@ public enum LaneLook {
     FOURTH(new float[] {14, 3, 2, 3, 2, 3}, 2.0) {
         @Override
         Shape marker(double r) {
-            return new Ellipse2D.Double(-r, -r, 2 * r, 2 * r);
+            var ring = new Path2D.Double(Path2D.WIND_EVEN_ODD);
+            ring.append(new Ellipse2D.Double(-1.1 * r, -1.1 * r, 2.2 * r, 2.2 * r), false);
+            ring.append(new Ellipse2D.Double(-.5 * r, -.5 * r, r, r), false);
+            return ring;
         }
     };
 

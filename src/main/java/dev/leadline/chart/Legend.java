@@ -4,12 +4,12 @@ import java.awt.Font;
 import java.util.ArrayList;
 import java.util.List;
 
-/// Key to the picture, set in rows above the plot so that it never covers it. The first row shares its line with the
-/// name of the values where both fit.
+/// Key to the picture, set in rows above the plot so that it never covers it, each flush right. The first row shares
+/// its line with the name of the values.
 final class Legend {
-    static final int SAMPLE = 34;
+    static final int SAMPLE = 30;
     private static final int GAP = 7;
-    private static final int APART = 20;
+    private static final int APART = 18;
 
     /// What an entry explains.
     sealed interface Of {
@@ -41,23 +41,40 @@ final class Legend {
 
     private Legend() {}
 
-    /// @param taken width that the name of the values takes in row 0
-    static List<Placed> set(List<Entry> entries, Font font, double left, double right, double taken) {
-        double all = entries.stream().mapToDouble(e -> width(e, font)).sum() + APART * (entries.size() - 1.0);
-        boolean beside = taken + 2 * APART + all <= right - left;
+    /// @param left end of every row but the first
+    /// @param firstLeft where the first row may start
+    static List<Placed> set(List<Entry> entries, Font font, double left, double firstLeft, double right) {
         var placed = new ArrayList<Placed>();
-        double x = beside ? right - all : left;
-        int row = beside ? 0 : 1;
+        var row = new ArrayList<Entry>();
+        int rows = 0;
+        double room = right - firstLeft;
         for (var entry : entries) {
-            if (x > left && x + width(entry, font) > right + .5) {
-                x = left;
-                row++;
+            while (length(row, font) + (row.isEmpty() ? 0 : APART) + width(entry, font) > room
+                    && !(row.isEmpty() && rows > 0)) {
+                place(row, rows++, font, right, placed);
+                row.clear();
+                room = right - left;
             }
-            var fitted = new Entry(entry.of(), Typeface.fitted(font, entry.text(), right - x - entry.sample() + .5));
-            placed.add(new Placed(fitted, x, row));
-            x += width(fitted, font) + APART;
+            row.add(fitted(entry, font, room));
         }
+        place(row, rows, font, right, placed);
         return placed;
+    }
+
+    private static void place(List<Entry> row, int index, Font font, double right, List<Placed> placed) {
+        double x = right - length(row, font);
+        for (var entry : row) {
+            placed.add(new Placed(entry, x, index));
+            x += width(entry, font) + APART;
+        }
+    }
+
+    private static Entry fitted(Entry entry, Font font, double room) {
+        return new Entry(entry.of(), Typeface.fitted(font, entry.text(), room - entry.sample()));
+    }
+
+    private static double length(List<Entry> row, Font font) {
+        return row.stream().mapToDouble(e -> width(e, font)).sum() + APART * Math.max(0, row.size() - 1);
     }
 
     private static double width(Entry entry, Font font) {

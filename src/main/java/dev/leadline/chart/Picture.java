@@ -79,7 +79,7 @@ public final class Picture {
         this.valuesName = Typeface.fitted(
                 font, named("estimate of " + settling.quantity(), valueTicks, settling.unit()), this.width - 24);
         this.drawsName = named("draws", drawTicks, "");
-        this.legend = Legend.set(entries(), font, 12, this.width - right, Typeface.width(font, valuesName));
+        this.legend = Legend.set(entries(), font, 12, 36 + Typeface.width(font, valuesName), this.width - right);
         int rows = legend.stream().mapToInt(Legend.Placed::row).max().orElse(0) + 1;
         int top = 8 + rows * line + 6;
         this.plot = new Rectangle2D.Double(left, top, room, Math.max(40, this.height - top - bottom));
@@ -91,6 +91,14 @@ public final class Picture {
     /// Smaller sizes than the least ones are drawn at those, and cut.
     public static Picture of(Settling settling, View view, Theme theme, int width, int height) {
         return new Picture(settling, view, theme, width, height);
+    }
+
+    public int width() {
+        return width;
+    }
+
+    public int height() {
+        return height;
     }
 
     /// Range of draws that is shown.
@@ -188,19 +196,21 @@ public final class Picture {
     private Range drawsBetween(double left, double right) {
         double low = drawsAt(left);
         double high = drawsAt(right);
+        double most = Fit.draws(settling, view.logDraws()).high();
         boolean sensible = view.logDraws()
-                ? low >= .1 && high <= 1e19 && high >= 1.01 * low
-                : low >= -1e19 && high <= 1e19 && high - low >= 1 && high - low >= 1e-9 * Math.abs(high);
+                ? low >= .1 && high <= 30 * most && high >= 1.01 * low
+                : low >= -most && high <= 3 * most && high - low >= 1 && high - low >= 1e-9 * high;
         return sensible ? new Range(low, high) : draws;
     }
 
     private Range valuesBetween(double top, double bottom) {
         double low = valueAt(bottom);
         double high = valueAt(top);
-        double length = high - low;
-        boolean sensible = length < 1e307
-                && length >= Double.MIN_NORMAL
-                && length >= 1e-11 * Math.max(Math.abs(low), Math.abs(high));
+        var most = Fit.outermost(settling);
+        boolean sensible = most.contains(low)
+                && most.contains(high)
+                && high - low >= Fit.LEAST
+                && high - low >= 1e-11 * Math.max(Math.abs(low), Math.abs(high));
         return sensible ? new Range(low, high) : values;
     }
 
@@ -323,6 +333,10 @@ public final class Picture {
         private final Series lane;
         private final LaneLook look;
         private final double[] x;
+
+        /// Many bands over each other stay light.
+        private final double share = settling.lanes().size() > 2 ? .6 : 1;
+
         private final Rectangle2D sight =
                 new Rectangle2D.Double(plot.getX() - 40, plot.getY() - 40, plot.getWidth() + 80, plot.getHeight() + 80);
 
@@ -337,9 +351,9 @@ public final class Picture {
         }
 
         void fill(Graphics2D g) {
-            g.setColor(theme.band(look, .5));
+            g.setColor(theme.band(look, .5 * share));
             g.fill(Trail.between(x, pixels(p -> yOf(p.bandLow())), pixels(p -> yOf(p.bandHigh()))));
-            g.setColor(theme.band(look, 1));
+            g.setColor(theme.band(look, share));
             g.fill(Trail.between(x, pixels(p -> yOf(p.low())), pixels(p -> yOf(p.high()))));
         }
 
@@ -443,14 +457,16 @@ public final class Picture {
             entries.add(new Legend.Entry(new Legend.Of.Lane(LaneLook.values()[i]), lane.lane() + "  " + lane.scheme()));
         }
         if (!entries.isEmpty()) {
-            entries.add(new Legend.Entry(
-                    new Legend.Of.Remark(), "bands: " + Typeset.number(100 * settling.level(), 6) + " % intervals"));
+            entries.add(new Legend.Entry(new Legend.Of.Remark(), Typeset.percent(settling.level()) + " intervals"));
         }
         settling.reference()
                 .ifPresent(reference -> entries.add(new Legend.Entry(
                         new Legend.Of.ReferenceLine(),
                         "reference " + Typeset.number(reference.value(), 8) + whereabouts(reference.value()))));
-        settling.strip().ifPresent(_ -> entries.add(new Legend.Entry(new Legend.Of.Strip(), "numerical tolerance")));
+        settling.strip()
+                .flatMap(_ -> settling.tolerance())
+                .ifPresent(asked -> entries.add(new Legend.Entry(
+                        new Legend.Of.Strip(), "numerical tolerance " + Caption.of(asked, settling.unit()))));
         return entries;
     }
 
@@ -459,11 +475,11 @@ public final class Picture {
     }
 
     private static String named(String name, Ticks ticks, String unit) {
-        String shown = unit.equals("1") ? "" : Typeset.unit(unit);
+        String shown = Typeset.unit(unit);
         if (ticks.factor() == 0) {
             return shown.isEmpty() ? name : name + ", " + shown;
         }
-        return name + ", in " + Typeset.power(ticks.factor()) + (shown.isEmpty() ? "" : " " + shown);
+        return name + ", in " + Typeset.quantity(Typeset.power(ticks.factor()), unit);
     }
 
     private void drawRemarks(Graphics2D g) {
@@ -478,7 +494,7 @@ public final class Picture {
         double baseline = plot.getMinY() + font.getSize() + 8;
         for (var remark : remarks) {
             String fitted = Typeface.fitted(font, remark, plot.getWidth() - 16);
-            haloed(g, fitted, plot.getMaxX() - 8 - Typeface.width(font, fitted), baseline);
+            haloed(g, fitted, plot.getMinX() + 10, baseline);
             baseline += font.getSize() + 6;
         }
     }
@@ -491,7 +507,10 @@ public final class Picture {
         var point = last.get();
         String name = "lane " + lane.lane() + ": ";
         if (lane.withoutHit()) {
-            var limit = Double.isFinite(point.high()) ? ", so at most " + Typeset.number(point.high(), 2) : "";
+            var limit = Double.isFinite(point.high())
+                    ? ", so at most " + Typeset.quantity(Typeset.number(point.high(), 2), settling.unit()) + " ("
+                            + Typeset.percent(settling.level()) + ")"
+                    : "";
             return Optional.of(name + "no hit in " + Typeset.count(point.draws()) + " draws" + limit);
         }
         if (!Double.isFinite(point.estimate())) {

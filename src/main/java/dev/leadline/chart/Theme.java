@@ -34,7 +34,7 @@ public record Theme(
             new Color(0xE9EDEF),
             new Color(0x8C9AA2),
             new Color(0x465769),
-            new Color(0xFAF3DC),
+            new Color(0xFBF5E1),
             new Color(0x846818),
             List.of(new Color(0x0F6E75), new Color(0xB04A10), new Color(0x6A3FA0), new Color(0x546A10)),
             .15);

@@ -15,27 +15,20 @@ record Ticks(List<Tick> all, int factor) {
         all = List.copyOf(all);
     }
 
-    /// Multiples of 1, 2 or 5 times a power of ten, about `most` of them and never more than `most + 1`. All labels
-    /// have the same decimals; a power of ten is taken out below .01 and from a million.
+    /// Multiples of 1, 2 or 5 times a power of ten, at least two and about `most` of them. All labels have the same
+    /// decimals; a power of ten is taken out below .01 and from a million.
     static Ticks even(Range range, int most) {
         double raw = range.high() / most - range.low() / most;
         int exponent = (int) Math.floor(Math.log10(raw));
-        BigDecimal step = BigDecimal.TEN.scaleByPowerOfTen(exponent);
-        for (int lead : new int[] {1, 2, 5}) {
-            var candidate = BigDecimal.valueOf(lead).scaleByPowerOfTen(exponent);
-            if (candidate.doubleValue() >= raw) {
-                step = candidate;
+        BigDecimal step = null;
+        List<BigDecimal> values = List.of();
+        for (int lead : new int[] {10, 5, 2, 1}) {
+            var candidate = BigDecimal.valueOf(lead, -exponent);
+            if (values.size() >= 2 && candidate.doubleValue() < raw) {
                 break;
             }
-        }
-        var values = new ArrayList<BigDecimal>();
-        long first = (long) Math.ceil(range.low() / step.doubleValue());
-        for (long i = first; values.size() <= most; i++) {
-            var value = step.multiply(BigDecimal.valueOf(i));
-            if (value.doubleValue() > range.high()) {
-                break;
-            }
-            values.add(value);
+            step = candidate;
+            values = multiples(candidate, range);
         }
         int factor = factor(values);
         int decimals = Math.max(0, factor - leadExponent(step));
@@ -44,6 +37,18 @@ record Ticks(List<Tick> all, int factor) {
                         .map(v -> new Tick(v.doubleValue(), label(v.movePointLeft(factor), decimals)))
                         .toList(),
                 factor);
+    }
+
+    private static List<BigDecimal> multiples(BigDecimal step, Range range) {
+        var values = new ArrayList<BigDecimal>();
+        long first = (long) Math.ceil(range.low() / step.doubleValue());
+        for (long i = first; ; i++) {
+            var value = step.multiply(BigDecimal.valueOf(i));
+            if (value.doubleValue() > range.high()) {
+                return values;
+            }
+            values.add(value);
+        }
     }
 
     /// Powers of ten where at least two are in range, else 1, 2, 5 times powers of ten, else even steps.

@@ -24,9 +24,9 @@ final class Typeface {
             var font = Family.FOUND.deriveFont((float) size);
             font.getStringBounds("0", MEASURE);
             return font;
-        } catch (Error | RuntimeException e) {
+        } catch (LinkageError | RuntimeException e) {
             throw new Refusal(Problem.of("this machine has no font to draw a picture with")
-                    .because("Every label of a picture needs one; the numbers themselves do not.")
+                    .because("The labels of a picture need one; numbers and reports without pictures do not.")
                     .tryThis("Install a font and fontconfig (on Debian: apt install fontconfig fonts-dejavu-core)."));
         }
     }

@@ -9,7 +9,10 @@ import java.util.regex.Pattern;
 /// the locale.
 final class Typeset {
     private static final String RAISED = "⁰¹²³⁴⁵⁶⁷⁸⁹";
-    private static final Pattern EXPONENT = Pattern.compile("(?<=\\p{L})\\^?(-?[1-9])(?![\\p{L}\\d.])");
+    /// An exponent behind `^`, or right behind a unit that people write so: `m2`, `h-1`; not the 2 of CO2 or the 3 of
+    /// 1e3.
+    private static final Pattern EXPONENT = Pattern.compile(
+            "(?<![\\p{L}\\d])(\\p{L}+(?=\\^)|[kcdmµμn]?m|ft|in|yd|mi|s|min|h|d|a|K|k?g|k?[VAWN])\\^?(-?[1-9])(?![\\p{L}\\d.])");
 
     private Typeset() {}
 
@@ -22,9 +25,19 @@ final class Typeset {
         };
     }
 
-    /// A unit with raised exponents: `m2` and `m^2` become `m²`.
+    /// A unit with raised exponents: `m2` and `m^2` become `m²`; nothing for the unit 1.
     static String unit(String unit) {
-        return EXPONENT.matcher(unit).replaceAll(found -> raised(found.group(1)));
+        return unit.equals("1")
+                ? ""
+                : EXPONENT.matcher(unit).replaceAll(found -> found.group(1) + raised(found.group(2)));
+    }
+
+    static String quantity(String number, String unit) {
+        return (number + " " + unit(unit)).strip();
+    }
+
+    static String percent(double share) {
+        return number(100 * share, 6) + " %";
     }
 
     /// With every digit that `value` has: `18,400.5`, `−0.25`.

@@ -56,7 +56,13 @@ final class Invented {
                 List.of(new Series("A", "independent", points, OptionalLong.empty(), 0)));
     }
 
+    private static final Settling JUMPS = heavyTail();
+
     static Settling jumps() {
+        return JUMPS;
+    }
+
+    private static Settling heavyTail() {
         var random = new SplittableRandom(5);
         var points = new ArrayList<Point>();
         double sum = 0;

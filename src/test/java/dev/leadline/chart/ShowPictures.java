@@ -8,8 +8,17 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.LinkedHashMap;
 import javax.imageio.ImageIO;
+import org.apache.commons.statistics.distribution.BetaDistribution;
+import org.apache.commons.statistics.distribution.ExponentialDistribution;
+import org.apache.commons.statistics.distribution.GammaDistribution;
+import org.apache.commons.statistics.distribution.GumbelDistribution;
+import org.apache.commons.statistics.distribution.NormalDistribution;
+import org.apache.commons.statistics.distribution.TDistribution;
+import org.apache.commons.statistics.distribution.TriangularDistribution;
+import org.apache.commons.statistics.distribution.UniformContinuousDistribution;
 
-/// Draws pictures of invented runs for looking at, into the folder given, and says how long drawing took.
+/// Draws pictures of invented runs for looking at, into the folder given, and says how much processor time drawing
+/// took.
 final class ShowPictures {
     private ShowPictures() {}
 
@@ -41,23 +50,54 @@ final class ShowPictures {
                         .image(2),
                 folder,
                 "rare-large");
+        sketches(folder);
+        Export.svg(all.get("rare"), View.FOLLOWING, 720, 420, folder.resolve("rare.svg"));
+        Export.png(all.get("rare"), View.FOLLOWING, 720, 420, 300, folder.resolve("rare-300.png"));
         measure("one lane of " + all.get("mean").lanes().getFirst().points().size(), all.get("mean"));
         measure("two lanes of " + all.get("rare").lanes().getFirst().points().size(), all.get("rare"));
-        var long_ = Invented.settling(
+        var tenBillion = Invented.settling(
                 "volume",
                 "m3",
                 java.util.Optional.empty(),
                 Invented.absolute(1),
                 java.util.List.of(Invented.mean("A", "independent", 18_430, 5200, 10_000_000_000L, 11)));
-        measure("one lane of " + long_.lanes().getFirst().points().size(), long_);
+        measure("one lane of " + tenBillion.lanes().getFirst().points().size(), tenBillion);
+    }
+
+    private static void sketches(Path folder) throws IOException {
+        var densities = java.util.List.of(
+                NormalDistribution.of(0, 1),
+                GumbelDistribution.of(24.5, 2.6),
+                BetaDistribution.of(4, 10),
+                ExponentialDistribution.of(6),
+                UniformContinuousDistribution.of(0, 420),
+                TriangularDistribution.of(20, 35, 70),
+                GammaDistribution.of(.5, 2),
+                TDistribution.of(1));
+        for (var theme :
+                java.util.Map.of("light", Theme.LIGHT, "dark", Theme.DARK).entrySet()) {
+            var sheet = new BufferedImage(1000, 560, BufferedImage.TYPE_INT_RGB);
+            var g = sheet.createGraphics();
+            g.setColor(theme.getValue().ground());
+            g.fillRect(0, 0, 1000, 560);
+            for (int i = 0; i < densities.size(); i++) {
+                var density = new Borrowed(densities.get(i));
+                int x = 20 + i % 4 * 240;
+                int y = 20 + i / 4 * 270;
+                g.drawImage(DensitySketch.image(density, "v", 72, 20, 1, theme.getValue()), x, y, null);
+                g.drawImage(DensitySketch.image(density, "gust, m/s", 230, 190, 1, theme.getValue()), x, y + 40, null);
+            }
+            write(sheet, folder, "sketches-" + theme.getKey());
+        }
     }
 
     private static void measure(String what, Settling settling) {
+        var threads = java.lang.management.ManagementFactory.getThreadMXBean();
         var times = new long[60];
         for (int i = 0; i < times.length; i++) {
-            long start = System.nanoTime();
+            long start = threads.getCurrentThreadCpuTime();
             Picture.of(settling, View.FOLLOWING, Theme.LIGHT, 1200, 700).image(1);
-            times[i] = System.nanoTime() - start;
+            times[i] = threads.getCurrentThreadCpuTime() - start;
         }
         java.util.Arrays.sort(times, 20, 60);
         System.out.printf("%s: median %.1f ms, slowest of 40 %.1f ms%n", what, times[40] / 1e6, times[59] / 1e6);

@@ -1,0 +1,65 @@
+package dev.leadline.chart;
+
+import dev.leadline.model.Tolerance;
+import java.util.ArrayList;
+import java.util.List;
+
+/// What a picture says, in words: the caption under a figure, and the text for people who cannot see it.
+public final class Caption {
+    private Caption() {}
+
+    public static String of(Settling settling) {
+        var sentences = new ArrayList<String>();
+        sentences.add("Running estimate of " + settling.quantity() + " against the number of draws.");
+        settling.lanes().forEach(lane -> sentences.add(of(lane, settling)));
+        settling.reference().ifPresent(reference -> {
+            String error = reference.error() > 0 ? " ± " + Typeset.number(reference.error(), 2) : "";
+            sentences.add("Dash-dotted: reference value "
+                    + Typeset.quantity(Typeset.number(reference.value(), 8) + error, settling.unit()) + ".");
+        });
+        settling.strip()
+                .flatMap(_ -> settling.tolerance())
+                .ifPresent(asked -> sentences.add(
+                        "Strip: numerical tolerance " + of(asked, settling.unit()) + " about the latest estimate."));
+        sentences.add("Seed " + settling.seed() + ".");
+        sentences.add("The intervals cover sampling error only.");
+        return String.join(" ", sentences);
+    }
+
+    private static String of(Series lane, Settling settling) {
+        String name = "Lane " + lane.lane() + " (" + lane.scheme() + "): ";
+        if (lane.last().isEmpty()) {
+            return name + "no draws yet.";
+        }
+        var point = lane.last().get();
+        var text = new StringBuilder(name);
+        double half = (point.high() - point.low()) / 2;
+        text.append(
+                Double.isFinite(point.estimate())
+                        ? Typeset.quantity(Typeset.rounded(point.estimate(), half), settling.unit())
+                        : "no estimate");
+        text.append(
+                Double.isFinite(half)
+                        ? ", " + Typeset.percent(settling.level()) + " interval " + Typeset.rounded(point.low(), half)
+                                + " to " + Typeset.rounded(point.high(), half)
+                        : ", no interval");
+        text.append(", after ").append(Typeset.count(point.draws())).append(" draws");
+        if (lane.withoutHit()) {
+            text.append(" without a hit");
+        }
+        if (lane.nonFinite() > 0) {
+            text.append(", over finite evaluations only (")
+                    .append(Typeset.count(lane.nonFinite()))
+                    .append(" left out)");
+        }
+        return text.append('.').toString();
+    }
+
+    /// `±10 %`, `±25 m³`, or both as they were asked for.
+    static String of(Tolerance asked, String unit) {
+        var parts = new ArrayList<String>();
+        asked.absolute().ifPresent(width -> parts.add("±" + Typeset.quantity(Typeset.number(width, 6), unit)));
+        asked.relative().ifPresent(share -> parts.add("±" + Typeset.percent(share)));
+        return String.join(asked.both() ? " and " : " or ", List.copyOf(parts));
+    }
+}

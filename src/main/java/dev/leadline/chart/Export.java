@@ -1,0 +1,153 @@
+package dev.leadline.chart;
+
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
+import java.io.UncheckedIOException;
+import java.nio.ByteBuffer;
+import java.nio.channels.FileChannel;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.AccessDeniedException;
+import java.nio.file.Files;
+import java.nio.file.NoSuchFileException;
+import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
+import java.nio.file.StandardOpenOption;
+import javax.imageio.IIOImage;
+import javax.imageio.ImageIO;
+import javax.imageio.ImageTypeSpecifier;
+import javax.imageio.metadata.IIOInvalidTreeException;
+import javax.imageio.metadata.IIOMetadataNode;
+import org.jfree.svg.SVGGraphics2D;
+import org.jfree.svg.ViewBox;
+
+/// Pictures as files: always light, with the [Caption] inside as text, the same bytes for the same picture, and whole
+/// or not at all under their name.
+public final class Export {
+    /// A pixel of a picture is a 96th of an inch on paper.
+    private static final double PIXELS_PER_INCH = 96;
+
+    private Export() {}
+
+    /// A picture of `width` by `height` pixels at 96 to the inch.
+    ///
+    /// @throws Refusal where it cannot be written
+    public static void svg(Settling settling, View view, int width, int height, Path path) {
+        write(path, svg(settling, view, width, height).getBytes(StandardCharsets.UTF_8));
+    }
+
+    /// The same size on paper as [#svg], with `dpi` dots to the inch, which the file declares.
+    ///
+    /// @throws Refusal where it cannot be written
+    public static void png(Settling settling, View view, int width, int height, int dpi, Path path) {
+        write(path, png(settling, view, width, height, dpi));
+    }
+
+    static String svg(Settling settling, View view, int width, int height) {
+        var picture = Picture.of(settling, view, Theme.LIGHT, width, height);
+        var g = new SVGGraphics2D(picture.width(), picture.height());
+        g.setDefsKeyPrefix("settling-");
+        g.setFontFunction(family -> family.equals("DejaVu Sans") ? "DejaVu Sans, Verdana, sans-serif" : family);
+        g.setGeomDoubleConverter(Export::hundredths);
+        picture.draw(g);
+        String drawing = g.getSVGElement(null, true, new ViewBox(0, 0, picture.width(), picture.height()), null, null);
+        int end = drawing.indexOf('>', drawing.indexOf("<svg")) + 1;
+        return drawing.substring(0, end - 1) + " role=\"img\"><title>" + escaped(settling.title()) + "</title><desc>"
+                + escaped(Caption.of(settling)) + "</desc>" + drawing.substring(end) + "\n";
+    }
+
+    static byte[] png(Settling settling, View view, int width, int height, int dpi) {
+        var image = Picture.of(settling, view, Theme.LIGHT, width, height).image(dpi / PIXELS_PER_INCH);
+        var writer = ImageIO.getImageWritersByFormatName("png").next();
+        try (var bytes = new ByteArrayOutputStream();
+                var out = ImageIO.createImageOutputStream(bytes)) {
+            var metadata = writer.getDefaultImageMetadata(ImageTypeSpecifier.createFromRenderedImage(image), null);
+            var root = new IIOMetadataNode("javax_imageio_png_1.0");
+            root.appendChild(resolution(dpi));
+            root.appendChild(texts(settling));
+            metadata.mergeTree("javax_imageio_png_1.0", root);
+            writer.setOutput(out);
+            writer.write(new IIOImage(image, null, metadata));
+            out.flush();
+            return bytes.toByteArray();
+        } catch (IIOInvalidTreeException e) {
+            throw new IllegalStateException(e);
+        } catch (IOException e) {
+            throw new UncheckedIOException(e);
+        } finally {
+            writer.dispose();
+        }
+    }
+
+    private static IIOMetadataNode resolution(int dpi) {
+        var perMetre = Long.toString(Math.round(dpi / .0254));
+        var node = new IIOMetadataNode("pHYs");
+        node.setAttribute("pixelsPerUnitXAxis", perMetre);
+        node.setAttribute("pixelsPerUnitYAxis", perMetre);
+        node.setAttribute("unitSpecifier", "meter");
+        return node;
+    }
+
+    private static IIOMetadataNode texts(Settling settling) {
+        var node = new IIOMetadataNode("iTXt");
+        node.appendChild(text("Title", settling.title()));
+        node.appendChild(text("Description", Caption.of(settling)));
+        return node;
+    }
+
+    private static IIOMetadataNode text(String keyword, String text) {
+        var node = new IIOMetadataNode("iTXtEntry");
+        node.setAttribute("keyword", keyword);
+        node.setAttribute("compressionFlag", "FALSE");
+        node.setAttribute("compressionMethod", "0");
+        node.setAttribute("languageTag", "en");
+        node.setAttribute("translatedKeyword", keyword);
+        node.setAttribute("text", text);
+        return node;
+    }
+
+    /// Finer than any eye or printer, and a file of half the size.
+    private static String hundredths(double pixel) {
+        double rounded = Math.rint(pixel * 100) / 100;
+        return rounded == Math.rint(rounded) ? Long.toString((long) rounded) : Double.toString(rounded);
+    }
+
+    private static String escaped(String text) {
+        return text.replace("&", "&amp;").replace("<", "&lt;").replace(">", "&gt;");
+    }
+
+    /// Beside its place first, then moved there in one step, so that a reader never sees half a file and a failure
+    /// leaves the old one.
+    private static void write(Path path, byte[] bytes) {
+        var part = path.toAbsolutePath().resolveSibling("." + path.getFileName() + ".part");
+        try {
+            try (var channel = FileChannel.open(
+                    part, StandardOpenOption.CREATE, StandardOpenOption.WRITE, StandardOpenOption.TRUNCATE_EXISTING)) {
+                var buffer = ByteBuffer.wrap(bytes);
+                while (buffer.hasRemaining()) {
+                    channel.write(buffer);
+                }
+                channel.force(true);
+            }
+            Files.move(part, path, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
+        } catch (IOException e) {
+            try {
+                Files.deleteIfExists(part);
+            } catch (IOException left) {
+                e.addSuppressed(left);
+            }
+            throw new Refusal(Problem.of("figure \"" + path + "\" could not be written: " + reason(e))
+                    .because("Nothing was left half written.")
+                    .tryThis("Choose a folder that exists and that you may write to."));
+        }
+    }
+
+    private static String reason(IOException e) {
+        return switch (e) {
+            case NoSuchFileException _ -> "its folder does not exist";
+            case AccessDeniedException _ -> "writing there is not allowed";
+            default -> e.getMessage();
+        };
+    }
+}
