@@ -20,7 +20,7 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
     private static final int MANTISSA = 52;
 
     /// Biased exponent of the smallest probability drawn, `2^-53`.
-    private static final long LOWEST = 970;
+    private static final int LOWEST = 970;
 
     private static final long ONE = 0x3ff0_0000_0000_0000L;
 
@@ -42,23 +42,21 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
     }
 
     private void polynomials(double[] u, double[] x, int n, double location, double scale) {
+        tails(u, x, n);
         double[] c = cells;
         int shift = MANTISSA - bits;
         long rest = (1L << shift) - 1;
-        long first = LOWEST << bits;
+        int first = LOWEST << bits;
         int tail = c.length / STRIDE / 2;
         for (int i = 0; i < n; i++) {
-            double v = u[i];
-            long upper = Double.doubleToRawLongBits(0.5 - v) >> 63;
-            double p = Math.abs(v - Double.longBitsToDouble(upper & ONE));
-            long address = Double.doubleToRawLongBits(p);
-            long cell = (address >>> shift) - first;
+            long address = Double.doubleToRawLongBits(x[i]);
+            int cell = (int) ((address & Long.MAX_VALUE) >>> shift) - first;
             if (cell < 0 || cell >= tail) {
-                x[i] = Math.fma(scale, outside(v), location);
+                x[i] = Math.fma(scale, outside(x[i]), location);
                 continue;
             }
             double t = Double.longBitsToDouble((address & rest) | ONE) - 1;
-            int k = ((int) cell + ((int) upper & tail)) * STRIDE;
+            int k = (cell + ((int) (address >> 63) & tail)) * STRIDE;
             double y = Math.fma(c[k + 5], t, c[k + 4]);
             y = Math.fma(y, t, c[k + 3]);
             y = Math.fma(y, t, c[k + 2]);
@@ -68,13 +66,27 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
         }
     }
 
+    /// The probability of the nearer tail, with a minus sign for the upper one: one number that names the cell.
+    ///
+    /// In a loop of its own, without a branch, this is vectorised; the draws then take two thirds of the time that
+    /// they take in one loop (measured in turn: 3.1 against 4.6 ns for each normal draw on a busy machine).
+    private static void tails(double[] u, double[] x, int n) {
+        for (int i = 0; i < n; i++) {
+            double side = Math.signum(0.5 - u[i]);
+            x[i] = Math.min(u[i], 1 - u[i]) * (side + (1 - side * side));
+        }
+    }
+
     /// What no cell holds, from the quantile function itself.
-    private double outside(double u) {
+    ///
+    /// @param p as [#tails] gives it
+    private double outside(double p) {
+        boolean lower = Double.doubleToRawLongBits(p) >= 0;
         if (link == Link.NONE) {
-            return u <= 0.5 ? shape.quantile(u) : shape.upperQuantile(1 - u);
+            return lower ? shape.quantile(p) : shape.upperQuantile(-p);
         }
         var linked = (Linked) shape;
-        return u <= 0.5 ? linked.linked(u) : linked.upperLinked(1 - u);
+        return lower ? linked.linked(p) : linked.upperLinked(-p);
     }
 
     @Override
