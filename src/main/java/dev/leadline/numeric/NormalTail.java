@@ -7,8 +7,8 @@ package dev.leadline.numeric;
 /// error of 2e-17 up to `x = 28`. The exponent `h` is `x^2` for the one and half the square of another number for the
 /// other, and comes as a pair of doubles: where `h` is 700, its rounding alone would cost 500 ulp.
 ///
-/// Source: form after Shepherd and Laframboise (1981), Mathematics of Computation 36, 249-253; coefficients are our own
-/// minimax fit.
+/// Source: form after Shepherd and Laframboise (1981), Mathematics of Computation 36, 249-253; coefficients are our
+/// own minimax fit.
 final class NormalTail {
     /// The polynomial holds up to here, where the tail has long become 0.
     static final double FAR = 28;

@@ -13,10 +13,10 @@ import java.util.Arrays;
 /// Special values are those of [Math#pow]: `x^0` is 1 even for NaN, otherwise a NaN gives NaN; a negative number to a
 /// power that is not whole gives NaN; `(±1)^±∞` is NaN.
 ///
-/// Error: 0.7 ulp, 0.8 ulp of the smallest subnormal in gradual underflow (`PowerTest`).
+/// Error: 0.85 ulp; whole exponents to 16 in magnitude 0.51 ulp for bases from 2^-63 to 2^63 (`PowerTest`).
 ///
-/// Source: arrangement and coefficients are our own; the pairs follow Dekker (1971), Numerische Mathematik 18, 224-242,
-/// with fused multiplication.
+/// Source: arrangement and coefficients are our own; the pairs follow Dekker (1971), Numerische Mathematik 18,
+/// 224-242, with fused multiplication.
 public final class Power {
     private static final long ONE = 0x3ff0_0000_0000_0000L;
     private static final long SMALLEST_NORMAL = 0x0010_0000_0000_0000L;
