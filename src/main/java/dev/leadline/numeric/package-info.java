@@ -10,12 +10,12 @@
 ///
 /// The block forms are written so that the compiler turns them into vector instructions: loops without branches over
 /// separate arrays with one index, short enough to be unrolled, moves between doubles and their bits in loops that load
-/// from and store to memory directly. Rare arguments are found by a loop that only gathers sign bits, and done one by one
+/// from and store to memory directly. Rare arguments are found by a loop that only gathers sign bits, and done singly
 /// afterwards. Arrays may be the same; they belong to the caller; nothing beyond the first `n` values is read or
 /// written. All functions are safe for all threads: working columns belong to the thread.
 ///
-/// Every kernel states its error in ulp, the spacing of doubles at the exact result, and names the test that measures it
-/// against an oracle of more than 80 digits.
+/// Every kernel states its error in ulp, the spacing of doubles at the exact result, and names the test that
+/// measures it against an oracle of more than 80 digits.
 ///
 /// May use no other package.
 package dev.leadline.numeric;

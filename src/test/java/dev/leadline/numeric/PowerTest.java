@@ -161,8 +161,12 @@ class PowerTest {
     /// -XX:UseAVX=2 and -XX:UseAVX=0, and on JDK 17.
     @Test
     void bitsDoNotChange() {
-        assertEquals("869dac1fab2650c9", Kernels.fingerprint((x, z, n) -> Power.pow(x, 1.7, z, n), Kernels.between(0, 9, 17)));
-        assertEquals("7be2f7c6d43c297c", Kernels.fingerprint((x, z, n) -> Power.pow(x, -13, z, n), Kernels.between(-9, 9, 18)));
+        assertEquals(
+                "869dac1fab2650c9",
+                Kernels.fingerprint((x, z, n) -> Power.pow(x, 1.7, z, n), Kernels.between(0, 9, 17)));
+        assertEquals(
+                "7be2f7c6d43c297c",
+                Kernels.fingerprint((x, z, n) -> Power.pow(x, -13, z, n), Kernels.between(-9, 9, 18)));
     }
 
     private static void within(double bound, DoubleSupplier x, DoubleSupplier y, int n) {
