@@ -120,7 +120,9 @@ public final class Export {
     /// Beside its place first, then moved there in one step, so that a reader never sees half a file and a failure
     /// leaves the old one.
     private static void write(Path path, byte[] bytes) {
-        var part = path.toAbsolutePath().resolveSibling("." + path.getFileName() + ".part");
+        var part = path.toAbsolutePath()
+                .resolveSibling(
+                        "." + path.getFileName() + "." + ProcessHandle.current().pid() + ".part");
         try {
             try (var channel = FileChannel.open(
                     part, StandardOpenOption.CREATE, StandardOpenOption.WRITE, StandardOpenOption.TRUNCATE_EXISTING)) {

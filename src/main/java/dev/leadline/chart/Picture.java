@@ -489,6 +489,10 @@ public final class Picture {
         }
         for (var lane : settling.lanes()) {
             remark(lane).ifPresent(remarks::add);
+            if (lane.nonFinite() > 0) {
+                remarks.add("lane " + lane.lane() + ": over finite evaluations only, " + Typeset.count(lane.nonFinite())
+                        + " left out");
+            }
         }
         g.setFont(font);
         double baseline = plot.getMinY() + font.getSize() + 8;

@@ -5,7 +5,6 @@ import dev.leadline.model.Question;
 import dev.leadline.model.Reference;
 import dev.leadline.model.Tolerance;
 import dev.leadline.trace.Trace;
-import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
@@ -56,12 +55,13 @@ public record Settling(
                 traces.stream().map(trace -> Series.of(trace, answer)).toList());
     }
 
-    /// The strip of the numerical tolerance: latest estimate ± tolerance, of the lane whose latest interval is
-    /// the shortest, since its answer is the one to sign. That lane has met the tolerance once its band is no
-    /// longer than the strip is high. Empty without a tolerance or an estimate, or where the tolerance is
-    /// relative and the estimate 0.
+    /// The strip of the numerical tolerance: latest estimate ± the half-width that the tolerance allows there, of
+    /// the lane whose latest interval is the shortest, since its answer is the one to sign. That lane has met the
+    /// tolerance once its band is no longer than the strip is high. Empty without a tolerance or an estimate, or
+    /// where the tolerance is relative and the estimate 0.
     public Optional<Range> strip() {
-        return tolerance.flatMap(asked -> sharpest().flatMap(point -> around(point.estimate(), asked)));
+        return tolerance.flatMap(asked ->
+                sharpest().flatMap(point -> around(point.estimate(), asked.allowed(point.estimate()))));
     }
 
     private Optional<Point> sharpest() {
@@ -71,16 +71,12 @@ public record Settling(
                 .min(Comparator.comparingDouble(point -> point.high() - point.low()));
     }
 
-    private static Optional<Range> around(double estimate, Tolerance asked) {
-        var widths = new ArrayList<Double>();
-        asked.absolute().ifPresent(widths::add);
-        asked.relative().ifPresent(relative -> widths.add(relative * Math.abs(estimate)));
-        var width = asked.both()
-                ? widths.stream().min(Comparator.naturalOrder())
-                : widths.stream().max(Comparator.naturalOrder());
-        return width.filter(w ->
-                        estimate - w < estimate + w && Double.isFinite(estimate + w) && Double.isFinite(estimate - w))
-                .map(w -> new Range(estimate - w, estimate + w));
+    private static Optional<Range> around(double estimate, double width) {
+        double low = estimate - width;
+        double high = estimate + width;
+        return low < high && Double.isFinite(low) && Double.isFinite(high)
+                ? Optional.of(new Range(low, high))
+                : Optional.empty();
     }
 
     /// The values behind the picture, a row for each mark of each lane.

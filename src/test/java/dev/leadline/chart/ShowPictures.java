@@ -1,12 +1,21 @@
 package dev.leadline.chart;
 
+import dev.leadline.model.Project;
+import dev.leadline.project.ProjectFile;
+import dev.leadline.study.LaneState;
+import dev.leadline.study.Study;
 import java.awt.color.ColorSpace;
 import java.awt.image.BufferedImage;
 import java.awt.image.ColorConvertOp;
 import java.io.IOException;
+import java.lang.management.ManagementFactory;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
 import javax.imageio.ImageIO;
 import org.apache.commons.statistics.distribution.BetaDistribution;
 import org.apache.commons.statistics.distribution.ExponentialDistribution;
@@ -17,12 +26,13 @@ import org.apache.commons.statistics.distribution.TDistribution;
 import org.apache.commons.statistics.distribution.TriangularDistribution;
 import org.apache.commons.statistics.distribution.UniformContinuousDistribution;
 
-/// Draws pictures of invented runs for looking at, into the folder given, and says how much processor time drawing
+/// Draws pictures of invented runs and of the sample projects for looking at, into the folder given, and says how much
+/// processor time drawing
 /// took.
 final class ShowPictures {
     private ShowPictures() {}
 
-    public static void main(String[] arguments) throws IOException {
+    public static void main(String[] arguments) throws IOException, InterruptedException {
         var folder = Files.createDirectories(Path.of(arguments[0]));
         var all = new LinkedHashMap<String, Settling>();
         all.put("rare", Invented.rareEvent(3_000_000));
@@ -33,6 +43,9 @@ final class ShowPictures {
         all.put("gaps", Invented.gaps());
         all.put("four", Invented.fourLanes());
         all.put("empty", Invented.empty());
+        for (var sample : List.of("mooring-line", "dredging-volume", "tide-gauge", "quay-lighting")) {
+            all.put(sample, run(Path.of("sample-projects", sample + ".leadline")));
+        }
         for (var it : all.entrySet()) {
             var s = it.getValue();
             write(Picture.of(s, View.FOLLOWING, Theme.LIGHT, 900, 520).image(1), folder, it.getKey() + "-light");
@@ -58,14 +71,22 @@ final class ShowPictures {
         var tenBillion = Invented.settling(
                 "volume",
                 "m3",
-                java.util.Optional.empty(),
+                Optional.empty(),
                 Invented.absolute(1),
-                java.util.List.of(Invented.mean("A", "independent", 18_430, 5200, 10_000_000_000L, 11)));
+                List.of(Invented.mean("A", "independent", 18_430, 5200, 10_000_000_000L, 11)));
         measure("one lane of " + tenBillion.lanes().getFirst().points().size(), tenBillion);
     }
 
+    private static Settling run(Path file) throws InterruptedException {
+        var project = Project.of(ProjectFile.read(file));
+        try (var study = Study.start(project.question(), project.plan(), 2, _ -> {})) {
+            var traces = study.await().lanes().stream().map(LaneState::trace).toList();
+            return Settling.of(project.question(), project.plan(), traces);
+        }
+    }
+
     private static void sketches(Path folder) throws IOException {
-        var densities = java.util.List.of(
+        var densities = List.of(
                 NormalDistribution.of(0, 1),
                 GumbelDistribution.of(24.5, 2.6),
                 BetaDistribution.of(4, 10),
@@ -74,8 +95,7 @@ final class ShowPictures {
                 TriangularDistribution.of(20, 35, 70),
                 GammaDistribution.of(.5, 2),
                 TDistribution.of(1));
-        for (var theme :
-                java.util.Map.of("light", Theme.LIGHT, "dark", Theme.DARK).entrySet()) {
+        for (var theme : Map.of("light", Theme.LIGHT, "dark", Theme.DARK).entrySet()) {
             var sheet = new BufferedImage(1000, 560, BufferedImage.TYPE_INT_RGB);
             var g = sheet.createGraphics();
             g.setColor(theme.getValue().ground());
@@ -92,14 +112,14 @@ final class ShowPictures {
     }
 
     private static void measure(String what, Settling settling) {
-        var threads = java.lang.management.ManagementFactory.getThreadMXBean();
+        var threads = ManagementFactory.getThreadMXBean();
         var times = new long[60];
         for (int i = 0; i < times.length; i++) {
             long start = threads.getCurrentThreadCpuTime();
             Picture.of(settling, View.FOLLOWING, Theme.LIGHT, 1200, 700).image(1);
             times[i] = threads.getCurrentThreadCpuTime() - start;
         }
-        java.util.Arrays.sort(times, 20, 60);
+        Arrays.sort(times, 20, 60);
         System.out.printf("%s: median %.1f ms, slowest of 40 %.1f ms%n", what, times[40] / 1e6, times[59] / 1e6);
     }
 
