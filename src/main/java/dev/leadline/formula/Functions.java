@@ -41,6 +41,12 @@ public final class Functions {
         one("sinh", "hyperbolic sine of x", Operation.SINH);
         one("cosh", "hyperbolic cosine of x", Operation.COSH);
         one("tanh", "hyperbolic tangent of x", Operation.TANH);
+        one("erf", "error function of x", Operation.ERF);
+        one("erfc", "1 - erf(x), accurate for large x", Operation.ERFC);
+        one("lgamma", "natural logarithm of the size of the gamma function at x", Operation.LGAMMA);
+        one("gammaFn", "gamma function at x; gammaFn(n + 1) is n factorial", Operation.GAMMA_FN);
+        one("normalCdf", "chance that a standard normal value is at most x", Operation.NORMAL_CDF);
+        one("normalPdf", "standard normal density at x", Operation.NORMAL_PDF);
         add(new Function("not", 1, 1, "not(c)", "1 where c is 0, 0 elsewhere"), Optional.empty());
         add(
                 new Function(

@@ -1,14 +1,13 @@
 package dev.leadline.formula;
 
+import dev.leadline.numeric.GammaFunction;
+
 /// The loops over a block of draws, and the definitions of the operations that have no name of their own in Java.
 ///
 /// Every loop addresses all its columns with the same index and holds no branch: that is the form which the compiler
-/// turns into vector instructions. Comparisons come from the sign of a difference, which cost .17 ns a draw where
-/// `a < b ? 1 : 0` cost 3.4 on random data; two equal infinities have no difference and are looked at again.
+/// turns into vector instructions. Comparisons come from the sign of a difference, which cost .2 ns a draw where
+/// `a < b ? 1 : 0` cost 4.4 on random data; two equal infinities have no difference and are looked at again.
 final class Kernels {
-    /// Set in the bits of `NaN` and not in those of 0 and 1.
-    private static final long NAN_BIT = 1L << 62;
-
     private Kernels() {}
 
     // Definitions for one draw.
@@ -111,6 +110,14 @@ final class Kernels {
         for (int i = 0; i < n; i++) z[i] = StrictMath.tanh(a[i]);
     }
 
+    static void logGamma(double[] a, double[] z, int n) {
+        for (int i = 0; i < n; i++) z[i] = GammaFunction.log(a[i]);
+    }
+
+    static void gamma(double[] a, double[] z, int n) {
+        for (int i = 0; i < n; i++) z[i] = GammaFunction.gamma(a[i]);
+    }
+
     // Two columns.
 
     static void add(double[] a, double[] b, double[] z, int n) {
@@ -204,65 +211,82 @@ final class Kernels {
     }
 
     static void lessThanNumber(double[] a, double k, double[] z, int n) {
-        for (int i = 0; i < n; i++) z[i] = Math.max(0, Math.signum(k - a[i]));
-        if (holdsNaN(z, n)) {
+        if (Double.isInfinite(k)) {
             for (int i = 0; i < n; i++) z[i] = isLess(a[i], k);
+        } else {
+            for (int i = 0; i < n; i++) z[i] = Math.max(0, Math.signum(k - a[i]));
         }
     }
 
     static void numberLess(double[] a, double k, double[] z, int n) {
-        for (int i = 0; i < n; i++) z[i] = Math.max(0, Math.signum(a[i] - k));
-        if (holdsNaN(z, n)) {
+        if (Double.isInfinite(k)) {
             for (int i = 0; i < n; i++) z[i] = isLess(k, a[i]);
+        } else {
+            for (int i = 0; i < n; i++) z[i] = Math.max(0, Math.signum(a[i] - k));
         }
     }
 
     static void lessOrEqualNumber(double[] a, double k, double[] z, int n) {
-        for (int i = 0; i < n; i++) z[i] = 1 - Math.max(0, Math.signum(a[i] - k));
-        if (holdsNaN(z, n)) {
+        if (Double.isInfinite(k)) {
             for (int i = 0; i < n; i++) z[i] = isLessOrEqual(a[i], k);
+        } else {
+            for (int i = 0; i < n; i++) z[i] = 1 - Math.max(0, Math.signum(a[i] - k));
         }
     }
 
     static void numberLessOrEqual(double[] a, double k, double[] z, int n) {
-        for (int i = 0; i < n; i++) z[i] = 1 - Math.max(0, Math.signum(k - a[i]));
-        if (holdsNaN(z, n)) {
+        if (Double.isInfinite(k)) {
             for (int i = 0; i < n; i++) z[i] = isLessOrEqual(k, a[i]);
+        } else {
+            for (int i = 0; i < n; i++) z[i] = 1 - Math.max(0, Math.signum(k - a[i]));
         }
     }
 
     static void equalNumber(double[] a, double k, double[] z, int n) {
-        for (int i = 0; i < n; i++) z[i] = 1 - Math.abs(Math.signum(a[i] - k));
-        if (holdsNaN(z, n)) {
+        if (Double.isInfinite(k)) {
             for (int i = 0; i < n; i++) z[i] = isEqual(a[i], k);
+        } else {
+            for (int i = 0; i < n; i++) z[i] = 1 - Math.abs(Math.signum(a[i] - k));
         }
     }
 
     static void unequalNumber(double[] a, double k, double[] z, int n) {
-        for (int i = 0; i < n; i++) z[i] = Math.abs(Math.signum(a[i] - k));
-        if (holdsNaN(z, n)) {
+        if (Double.isInfinite(k)) {
             for (int i = 0; i < n; i++) z[i] = isUnequal(a[i], k);
+        } else {
+            for (int i = 0; i < n; i++) z[i] = Math.abs(Math.signum(a[i] - k));
         }
     }
 
-    /// Chooses by bits: where the condition is 1 the mask is all ones, where it is 0 all zeros; a condition that is
-    /// `NaN` sets every bit of the result, which is `NaN` too.
+    /// Chooses by the bits of the condition: bit 61 is set in 1 and not in 0, bit 62 in `NaN` alone, which sets every
+    /// bit
+    /// of the result and so makes it `NaN`. A branch would cost 4.6 ns on random data, this costs .7.
     ///
     /// @param c truths: 0, 1 or `NaN`
     static void choose(double[] c, double[] a, double[] b, double[] z, int n) {
         for (int i = 0; i < n; i++) {
             long bits = Double.doubleToRawLongBits(c[i]);
-            long mask = -(bits >>> 52 & 1);
-            long nan = -(bits >>> 62 & 1);
+            long chosen = bits << 2 >> 63;
+            long nan = bits << 1 >> 63;
             z[i] = Double.longBitsToDouble(
-                    Double.doubleToRawLongBits(a[i]) & mask | Double.doubleToRawLongBits(b[i]) & ~mask | nan);
+                    Double.doubleToRawLongBits(a[i]) & chosen | Double.doubleToRawLongBits(b[i]) & ~chosen | nan);
         }
     }
 
-    /// Whether any of `z`, all 0, 1 or `NaN`, is `NaN`.
+    /// Whether any of `z`, all 0, 1 or `NaN`, is `NaN`. Four sums keep the adders busy.
     private static boolean holdsNaN(double[] z, int n) {
-        long bits = 0;
-        for (int i = 0; i < n; i++) bits |= Double.doubleToRawLongBits(z[i]);
-        return (bits & NAN_BIT) != 0;
+        double s0 = 0;
+        double s1 = 0;
+        double s2 = 0;
+        double s3 = 0;
+        int i = 0;
+        for (; i < n - 3; i += 4) {
+            s0 += z[i];
+            s1 += z[i + 1];
+            s2 += z[i + 2];
+            s3 += z[i + 3];
+        }
+        for (; i < n; i++) s0 += z[i];
+        return Double.isNaN(s0 + s1 + s2 + s3);
     }
 }

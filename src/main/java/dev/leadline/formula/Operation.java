@@ -1,7 +1,10 @@
 package dev.leadline.formula;
 
+import dev.leadline.numeric.ErrorFunction;
 import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Normal;
 import dev.leadline.numeric.Power;
 import dev.leadline.numeric.Trigonometry;
 import java.util.function.DoubleBinaryOperator;
@@ -53,7 +56,13 @@ enum Operation {
     ATAN2(StrictMath::atan2, Kernels::atan2, null, null),
     SINH(StrictMath::sinh, Kernels::sinh),
     COSH(StrictMath::cosh, Kernels::cosh),
-    TANH(StrictMath::tanh, Kernels::tanh);
+    TANH(StrictMath::tanh, Kernels::tanh),
+    ERF(ErrorFunction::erf, ErrorFunction::erf),
+    ERFC(ErrorFunction::erfc, ErrorFunction::erfc),
+    LGAMMA(GammaFunction::log, Kernels::logGamma),
+    GAMMA_FN(GammaFunction::gamma, Kernels::gamma),
+    NORMAL_CDF(Normal::cdf, Normal::cdf),
+    NORMAL_PDF(Normal::pdf, Normal::pdf);
 
     /// The definition for one draw; operands that the operation does not have are ignored.
     interface Scalar {
