@@ -131,9 +131,7 @@ public final class GammaFunction {
 
     private static double reflected(double x) {
         if (!(x > Double.NEGATIVE_INFINITY) || x == Math.rint(x)) return Double.NaN;
-        return x > -0.5
-                ? Math.PI / (sineOfPi(x) * gamma(1 - x))
-                : -Math.PI / (x * sineOfPi(x) * gamma(-x));
+        return x > -0.5 ? Math.PI / (sineOfPi(x) * gamma(1 - x)) : -Math.PI / (x * sineOfPi(x) * gamma(-x));
     }
 
     private static double logOfNegative(double x) {
