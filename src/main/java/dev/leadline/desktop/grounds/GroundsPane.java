@@ -1,0 +1,119 @@
+package dev.leadline.desktop.grounds;
+
+import dev.leadline.desktop.style.Styles;
+import dev.leadline.ground.Ground;
+import java.util.List;
+import java.util.Locale;
+import javafx.scene.Node;
+import javafx.scene.control.Label;
+import javafx.scene.control.ScrollPane;
+import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.HBox;
+import javafx.scene.layout.Priority;
+import javafx.scene.layout.VBox;
+
+/// The right of the window: the reasons for and against signing.
+public final class GroundsPane extends BorderPane {
+    private final VBox list = new VBox();
+    private final ScrollPane scroll = new ScrollPane(list);
+    private List<Ground> shown = List.of();
+
+    public GroundsPane() {
+        getStyleClass().addAll(Styles.PANE, "grounds");
+        var title = new Label("Grounds");
+        title.getStyleClass().add(Styles.PANE_TITLE);
+        list.getStyleClass().add("content");
+        list.setId("grounds");
+        scroll.setFitToWidth(true);
+        scroll.setHbarPolicy(ScrollPane.ScrollBarPolicy.NEVER);
+        setTop(title);
+        setCenter(scroll);
+        fill();
+    }
+
+    /// @param grounds strongest doubts first
+    public void show(List<Ground> grounds) {
+        if (!grounds.equals(shown)) {
+            shown = grounds;
+            fill();
+        }
+    }
+
+    public void reveal() {
+        scroll.setVvalue(0);
+        scroll.requestFocus();
+    }
+
+    private void fill() {
+        list.getChildren().clear();
+        if (shown.isEmpty()) {
+            list.getChildren()
+                    .add(wrapped(
+                            "Reasons for and against signing appear here once a run shows something.", Styles.QUIET));
+        }
+        for (var status : List.of(Ground.Status.DOUBTED, Ground.Status.SHOWN, Ground.Status.NOT_DONE)) {
+            var some = shown.stream().filter(g -> g.status() == status).toList();
+            if (!some.isEmpty()) {
+                var head = new Label(words(status));
+                head.getStyleClass().addAll(Styles.STATUS, style(status));
+                list.getChildren().add(head);
+                some.forEach(g -> list.getChildren().add(row(g)));
+            }
+        }
+    }
+
+    private static Node row(Ground g) {
+        var mark = new Label(mark(g));
+        mark.getStyleClass().addAll(Styles.GROUND_MARK, style(g.status()));
+        mark.setMinWidth(14);
+        var texts = new VBox(2);
+        g.strength().ifPresent(s -> texts.getChildren().add(strength(s)));
+        texts.getChildren().add(wrapped(g.text(), "ground-text"));
+        g.remedy().ifPresent(r -> texts.getChildren().add(wrapped(r, "remedy")));
+        HBox.setHgrow(texts, Priority.ALWAYS);
+        var row = new HBox(6, mark, texts);
+        row.getStyleClass().add(Styles.GROUND);
+        row.setAccessibleText(words(g.status()) + ": " + g.text());
+        return row;
+    }
+
+    private static Label strength(Ground.Strength strength) {
+        String word = strength.name().toLowerCase(Locale.ROOT);
+        var label = new Label(word);
+        label.getStyleClass().addAll("strength", word);
+        return label;
+    }
+
+    private static Label wrapped(String text, String style) {
+        var label = new Label(text);
+        label.setWrapText(true);
+        label.setMinHeight(USE_PREF_SIZE);
+        label.getStyleClass().add(style);
+        return label;
+    }
+
+    private static String words(Ground.Status status) {
+        return switch (status) {
+            case SHOWN -> "shown";
+            case DOUBTED -> "doubted";
+            case NOT_DONE -> "not done";
+        };
+    }
+
+    private static String style(Ground.Status status) {
+        return switch (status) {
+            case SHOWN -> "shown";
+            case DOUBTED -> "doubted";
+            case NOT_DONE -> "not-done";
+        };
+    }
+
+    /// Told apart without colour.
+    private static String mark(Ground g) {
+        return switch (g.status()) {
+            case SHOWN -> "\u2022";
+            case DOUBTED -> "!";
+            case NOT_DONE -> "\u25cb";
+        };
+    }
+}

@@ -1,0 +1,67 @@
+package dev.leadline.desktop.shell;
+
+import dev.leadline.desktop.style.Figures;
+import dev.leadline.desktop.style.RoundedText;
+import dev.leadline.desktop.working.DemandsViewModel;
+import dev.leadline.desktop.working.UnitWords;
+import dev.leadline.estimate.Estimand;
+import dev.leadline.trace.Answer;
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.util.Locale;
+import java.util.OptionalDouble;
+
+/// An answer exactly as it is pasted: `1.26e-5 ± .03e-5 per year (95 %, lane B; 1 in 79,600)`.
+final class AnswerText {
+    private AnswerText() {}
+
+    static String of(Answer answer, String lane) {
+        String unit = UnitWords.plain(answer.unit());
+        String in = unit.isEmpty() ? "" : " " + unit;
+        String level = level(answer);
+        String finite = answer.nonFinite() > 0 ? "; over finite evaluations only" : "";
+        double half = answer.interval().halfWidth();
+        boolean probability = answer.estimand() instanceof Estimand.Probability;
+        if (!Double.isFinite(answer.estimate())) {
+            return "cannot say yet (lane " + lane + ", " + Figures.count(answer.observations()) + " draws)";
+        }
+        if (probability && answer.hits().isPresent() && answer.hits().getAsLong() == 0) {
+            double limit = answer.interval().high();
+            return Double.isFinite(limit)
+                    ? "at most " + up(limit) + in + " (" + level + ", lane " + lane + "; no hit in "
+                            + Figures.count(answer.observations()) + " draws" + finite + ")"
+                    : "cannot say yet (lane " + lane + "; no hit in " + Figures.count(answer.observations())
+                            + " draws)";
+        }
+        if (!(half > 0 && Double.isFinite(half))) {
+            return RoundedText.alone(answer.estimate()) + in + " (no interval can be said yet, lane " + lane + finite
+                    + ")";
+        }
+        var text = RoundedText.of(answer.estimate(), half);
+        String oneIn = probability ? oneIn(answer.estimate()) : "";
+        return text.value() + " \u00b1 " + text.error() + in + " (" + level + ", lane " + lane + oneIn + finite + ")";
+    }
+
+    private static String level(Answer answer) {
+        return DemandsViewModel.percent(answer.interval().level());
+    }
+
+    /// Small chances as people say them; three digits, since the interval stands beside it.
+    private static String oneIn(double p) {
+        if (!(p > 0 && p < .5)) {
+            return "";
+        }
+        var n = new BigDecimal(1 / p).round(new MathContext(3));
+        return "; 1 in " + String.format(Locale.ROOT, "%,d", n.toBigInteger());
+    }
+
+    /// Two digits, away from zero, so that the limit still holds.
+    private static String up(double limit) {
+        return RoundedText.limit(limit);
+    }
+
+    /// Seconds left, as a person reads them; empty where nothing can be said.
+    static String left(OptionalDouble seconds) {
+        return seconds.isPresent() ? Figures.duration(seconds.getAsDouble()) : "";
+    }
+}

@@ -1,0 +1,32 @@
+package dev.leadline.desktop.shell;
+
+import dev.leadline.problem.Problem;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Optional;
+
+/// Questions to the person at the window. Each call waits for its answer.
+public interface Dialogs {
+    /// What to do about edits that no file holds yet.
+    enum Unsaved {
+        SAVE,
+        DISCARD,
+        CANCEL
+    }
+
+    Optional<Path> chooseProject();
+
+    Optional<Path> chooseWhereToSave(String suggestedName);
+
+    /// @param extension without the dot, as `png`
+    Optional<Path> chooseFigure(String suggestedName, String extension);
+
+    Unsaved askAboutUnsaved(String title);
+
+    /// @param explanation what belongs here and why one would change it
+    Optional<String> askText(String heading, String explanation, String value);
+
+    void tell(String heading, List<Problem> problems);
+
+    void about();
+}

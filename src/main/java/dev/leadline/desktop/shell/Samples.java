@@ -1,0 +1,45 @@
+package dev.leadline.desktop.shell;
+
+import dev.leadline.model.Draft;
+import dev.leadline.project.ProjectFile;
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.UncheckedIOException;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.SequencedMap;
+
+/// The sample projects that come with the program. They are opened as copies without a file.
+final class Samples {
+    /// What menus call them, by the name of the file; in the order in which they are best read.
+    static final SequencedMap<String, String> TITLES = new LinkedHashMap<>();
+
+    static {
+        TITLES.put("mooring-line", "Mooring line: a rare event");
+        TITLES.put("dredging-volume", "Dredging volume: an integral over an area");
+        TITLES.put("tide-gauge", "Tide gauge: a correction and its uncertainty");
+        TITLES.put("quay-lighting", "Quay lighting: a smooth integral");
+    }
+
+    /// @param name of its file, without extension
+    record Sample(String name, Draft draft) {}
+
+    private Samples() {}
+
+    static List<Sample> all() {
+        return TITLES.keySet().stream()
+                .map(name -> new Sample(name, read(name)))
+                .toList();
+    }
+
+    static Draft read(String name) {
+        try (InputStream in = Samples.class.getResourceAsStream("/sample-projects/" + name + ProjectFile.EXTENSION)) {
+            if (in == null) {
+                throw new IllegalStateException("the program was built without the sample project " + name);
+            }
+            return ProjectFile.parse(in.readAllBytes());
+        } catch (IOException e) {
+            throw new UncheckedIOException(e);
+        }
+    }
+}

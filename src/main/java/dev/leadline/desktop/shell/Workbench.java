@@ -1,0 +1,112 @@
+package dev.leadline.desktop.shell;
+
+import dev.leadline.desktop.background.Background;
+import dev.leadline.desktop.grounds.GroundsPane;
+import dev.leadline.desktop.stage.StagePane;
+import dev.leadline.desktop.style.Styles;
+import dev.leadline.desktop.working.SketchView;
+import dev.leadline.desktop.working.WorkingPane;
+import java.util.Map;
+import javafx.scene.control.Label;
+import javafx.scene.control.SplitPane;
+import javafx.scene.control.TextInputControl;
+import javafx.scene.input.Clipboard;
+import javafx.scene.input.DataFormat;
+import javafx.scene.input.KeyCode;
+import javafx.scene.input.KeyEvent;
+import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.VBox;
+
+/// The window's content: menus, sentence, working, stage, grounds and answer line; or the start page.
+public final class Workbench extends BorderPane {
+    private static final String SAFETY = "Results support, and do not replace, the judgement of a licensed engineer or"
+            + " qualified professional; applicable local codes and standards govern. A sampled probability rests on the"
+            + " stated densities.";
+
+    private final WorkbenchViewModel model;
+    private final WorkingPane working;
+    private final GroundsPane grounds = new GroundsPane();
+    private final VBox top;
+    private final VBox bottom;
+    private final SplitPane panes;
+    private final StartPage start;
+
+    public Workbench(WorkbenchViewModel model, Background background, Runnable quit) {
+        this.model = model;
+        getStyleClass().add("workbench");
+        working = new WorkingPane(model.project(), model.look(), () -> new SketchView(model.dark(), background));
+        var menus = Menus.of(model, this::copyAnswer, working::openLook, working::openAbout, quit);
+        var sentence = new SentenceView(this::openDoor);
+        sentence.show(model.sentence().get());
+        model.sentence().addListener((_, _, s) -> sentence.show(s));
+        top = new VBox(new TitleRow(model), sentence);
+        var safety = new Label(SAFETY);
+        safety.setId("safety-line");
+        safety.getStyleClass().add(Styles.SAFETY);
+        safety.setWrapText(true);
+        safety.setMinHeight(USE_PREF_SIZE);
+        safety.setMaxWidth(Double.MAX_VALUE);
+        safety.managedProperty().bind(safety.visibleProperty());
+        safety.visibleProperty().bind(model.project().draft().map(d -> d.safety()));
+        bottom = new VBox(safety, new AnswerLine(model, grounds::reveal, this::copyAnswer));
+        panes = new SplitPane(working, new StagePane(model.stage(), model.run()), grounds);
+        panes.setDividerPositions(.315, .79);
+        SplitPane.setResizableWithParent(working, false);
+        SplitPane.setResizableWithParent(grounds, false);
+        start = new StartPage(model, background);
+        setTop(new VBox(menus, top));
+        model.run().state().addListener((_, _, s) -> grounds.show(WorkbenchViewModel.groundsOf(s)));
+        model.started().addListener((_, _, started) -> arrange(started));
+        arrange(model.started().get());
+        model.dark().addListener((_, _, dark) -> recolour(dark));
+        recolour(model.dark().get());
+        addEventFilter(KeyEvent.KEY_PRESSED, this::undoEverywhere);
+    }
+
+    private void arrange(boolean started) {
+        top.setVisible(started);
+        top.setManaged(started);
+        setCenter(started ? panes : start);
+        setBottom(started ? bottom : null);
+    }
+
+    private void recolour(boolean dark) {
+        if (dark) {
+            getStyleClass().add(Styles.DARK);
+        } else {
+            getStyleClass().remove(Styles.DARK);
+        }
+    }
+
+    private void openDoor(Sentence.Door door) {
+        switch (door) {
+            case FORMULA -> working.focusFormula();
+            case UNIT -> working.focusUnit();
+            case INPUTS -> working.focusInputs();
+            case DEMANDS -> working.focusTolerance();
+            case STOP -> working.focusStop();
+        }
+    }
+
+    private void copyAnswer() {
+        String text = model.answer().get();
+        if (!text.isEmpty()) {
+            Clipboard.getSystemClipboard().setContent(Map.of(DataFormat.PLAIN_TEXT, text));
+            model.copied();
+        }
+    }
+
+    /// Text fields have an undo of their own, which would part from the project's.
+    private void undoEverywhere(KeyEvent e) {
+        if (!e.isShortcutDown() || !(e.getTarget() instanceof TextInputControl)) {
+            return;
+        }
+        if (e.getCode() == KeyCode.Z && !e.isShiftDown()) {
+            model.project().undo();
+            e.consume();
+        } else if (e.getCode() == KeyCode.Y || e.getCode() == KeyCode.Z) {
+            model.project().redo();
+            e.consume();
+        }
+    }
+}

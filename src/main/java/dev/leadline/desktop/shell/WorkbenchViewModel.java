@@ -1,0 +1,419 @@
+package dev.leadline.desktop.shell;
+
+import dev.leadline.chart.Export;
+import dev.leadline.desktop.background.Background;
+import dev.leadline.desktop.run.Progress;
+import dev.leadline.desktop.run.RunViewModel;
+import dev.leadline.desktop.run.Studies;
+import dev.leadline.desktop.stage.StageViewModel;
+import dev.leadline.desktop.working.Edits;
+import dev.leadline.desktop.working.LookViewModel;
+import dev.leadline.desktop.working.ProjectViewModel;
+import dev.leadline.ground.Ground;
+import dev.leadline.model.Draft;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import dev.leadline.project.ProjectFile;
+import dev.leadline.study.LaneState;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.OptionalLong;
+import javafx.beans.binding.Bindings;
+import javafx.beans.binding.BooleanBinding;
+import javafx.beans.binding.ObjectBinding;
+import javafx.beans.binding.StringBinding;
+import javafx.beans.property.BooleanProperty;
+import javafx.beans.property.ReadOnlyBooleanProperty;
+import javafx.beans.property.ReadOnlyBooleanWrapper;
+import javafx.beans.property.ReadOnlyStringProperty;
+import javafx.beans.property.ReadOnlyStringWrapper;
+import javafx.beans.property.SimpleBooleanProperty;
+
+/// The whole window: the project, its run, and what can be done with them now.
+public final class WorkbenchViewModel {
+    /// At 96 to the inch: 200 mm by 120 mm.
+    private static final int FIGURE_WIDTH = 756;
+
+    private static final int FIGURE_HEIGHT = 454;
+    private static final int FIGURE_DPI = 300;
+
+    private final Background background;
+    private final Dialogs dialogs;
+    private final BooleanProperty dark = new SimpleBooleanProperty();
+    private final ProjectViewModel project;
+    private final RunViewModel run;
+    private final StageViewModel stage;
+    private final LookViewModel look;
+    private final ReadOnlyBooleanWrapper started = new ReadOnlyBooleanWrapper();
+    private final ReadOnlyStringWrapper notice = new ReadOnlyStringWrapper("");
+
+    private final StringBinding title;
+    private final ObjectBinding<Sentence> sentence;
+    private final BooleanBinding canRun;
+    private final StringBinding whyNotRun;
+    private final StringBinding answer;
+    private final StringBinding progress;
+    private final BooleanBinding editedSinceRun;
+
+    public WorkbenchViewModel(Studies studies, Dialogs dialogs, Background background) {
+        this.background = background;
+        this.dialogs = dialogs;
+        project = new ProjectViewModel(Edits.empty(), background);
+        run = new RunViewModel(studies, background);
+        stage = new StageViewModel(project, run, dark, background);
+        look = new LookViewModel(project, background);
+        title = Bindings.createStringBinding(
+                () -> titleOf(project.draft().get(), project.file().get()), project.draft(), project.file());
+        sentence =
+                Bindings.createObjectBinding(() -> Sentence.of(project.draft().get()), project.draft());
+        canRun = Bindings.createBooleanBinding(
+                () -> RunViewModel.canStart(run.state().get())
+                        && project.problems().get().isEmpty()
+                        && project.sound().isPresent(),
+                run.state(),
+                project.problems(),
+                project.check());
+        whyNotRun = Bindings.createStringBinding(this::reasonNotToRun, run.state(), project.problems());
+        answer = Bindings.createStringBinding(() -> answerOf(run.state().get()), run.state());
+        progress = Bindings.createStringBinding(() -> progressOf(run.state().get()), run.state());
+        editedSinceRun = Bindings.createBooleanBinding(
+                () -> RunViewModel.isEditedSince(
+                        run.state().get(), project.draft().get()),
+                run.state(),
+                project.draft());
+    }
+
+    public ProjectViewModel project() {
+        return project;
+    }
+
+    public RunViewModel run() {
+        return run;
+    }
+
+    public StageViewModel stage() {
+        return stage;
+    }
+
+    public LookViewModel look() {
+        return look;
+    }
+
+    public BooleanProperty dark() {
+        return dark;
+    }
+
+    /// Whether a project is open; the start page shows otherwise.
+    public ReadOnlyBooleanProperty started() {
+        return started.getReadOnlyProperty();
+    }
+
+    /// What was just done, as `Saved in berth-4.leadline`.
+    public ReadOnlyStringProperty notice() {
+        return notice.getReadOnlyProperty();
+    }
+
+    StringBinding title() {
+        return title;
+    }
+
+    ObjectBinding<Sentence> sentence() {
+        return sentence;
+    }
+
+    public BooleanBinding canRun() {
+        return canRun;
+    }
+
+    /// Why Run is disabled; else what it does.
+    StringBinding whyNotRun() {
+        return whyNotRun;
+    }
+
+    /// Exactly as it is pasted; empty before the first mark.
+    public StringBinding answer() {
+        return answer;
+    }
+
+    StringBinding progress() {
+        return progress;
+    }
+
+    BooleanBinding editedSinceRun() {
+        return editedSinceRun;
+    }
+
+    // ---- runs
+
+    public void startRun() {
+        if (canRun.get()) {
+            notice.set("");
+            run.start(project.draft().get());
+        }
+    }
+
+    private String reasonNotToRun() {
+        if (!RunViewModel.canStart(run.state().get())) {
+            return "A run is under way; stop it to start another";
+        }
+        var problems = project.problems().get();
+        return problems.isEmpty()
+                ? "Draws as the stop rule says"
+                : "Cannot run yet: " + problems.getFirst().primary();
+    }
+
+    static Optional<LaneState> firstLane(RunViewModel.State state) {
+        return RunViewModel.shown(state).flatMap(s -> s.study().lanes().stream().findFirst());
+    }
+
+    static String answerOf(RunViewModel.State state) {
+        return firstLane(state)
+                .flatMap(lane -> lane.trace()
+                        .last()
+                        .map(mark -> AnswerText.of(
+                                mark.answers().getFirst(), lane.trace().lane())))
+                .orElse("");
+    }
+
+    static String progressOf(RunViewModel.State state) {
+        return switch (state) {
+            case RunViewModel.State.Ready _ -> "";
+            case RunViewModel.State.Starting _ -> "building the tables of the densities";
+            case RunViewModel.State.Failed(Problem problem) -> problem.primary();
+            case RunViewModel.State.Shown shown -> {
+                var lane = firstLane(state);
+                if (lane.isEmpty()) {
+                    yield "building the tables of the densities";
+                }
+                var done = Progress.of(
+                        lane.get().trace().marks(), shown.project().plan().stop());
+                yield switch (shown.study().activity()) {
+                    case PREPARING -> "building the tables of the densities";
+                    case RUNNING -> done.text();
+                    case PAUSED -> "paused after " + done.text();
+                    case FINISHED, FAILED -> "";
+                };
+            }
+        };
+    }
+
+    /// How far the run has come, from 0 to 1; negative where that cannot be said yet, `NaN` where nothing runs.
+    static double partOf(RunViewModel.State state) {
+        return switch (state) {
+            case RunViewModel.State.Ready _, RunViewModel.State.Failed _ -> Double.NaN;
+            case RunViewModel.State.Starting _ -> -1;
+            case RunViewModel.State.Shown shown -> {
+                if (shown.study().ended()) {
+                    yield Double.NaN;
+                }
+                yield firstLane(state)
+                        .map(lane -> Progress.of(
+                                        lane.trace().marks(),
+                                        shown.project().plan().stop())
+                                .part())
+                        .orElse(-1.0);
+            }
+        };
+    }
+
+    static List<Ground> groundsOf(RunViewModel.State state) {
+        return firstLane(state).map(LaneState::grounds).orElse(List.of());
+    }
+
+    /// As `2 objections`; empty before anything was shown.
+    static String objectionsOf(RunViewModel.State state) {
+        if (firstLane(state).flatMap(lane -> lane.trace().last()).isEmpty()) {
+            return "";
+        }
+        long n = groundsOf(state).stream()
+                .filter(g ->
+                        g.strength().filter(Ground.Strength.OBJECTION::equals).isPresent())
+                .count();
+        return n == 0 ? "no objection" : n + (n == 1 ? " objection" : " objections");
+    }
+
+    void copied() {
+        notice.set("Copied");
+    }
+
+    // ---- files
+
+    public void newProject() {
+        leaving(() -> show(Edits.empty(), Optional.empty()));
+    }
+
+    public void openSample(String name) {
+        leaving(() -> background.run(
+                () -> Samples.read(name),
+                draft -> show(draft, Optional.empty()),
+                failure -> tell("The sample project cannot be opened", failure)));
+    }
+
+    public void open() {
+        leaving(() -> dialogs.chooseProject().ifPresent(this::read));
+    }
+
+    public void open(Path file) {
+        leaving(() -> read(file));
+    }
+
+    private void read(Path file) {
+        background.run(
+                () -> ProjectFile.read(file),
+                draft -> show(draft, Optional.of(file)),
+                failure -> tell(file.getFileName() + " cannot be opened", failure));
+    }
+
+    private void show(Draft draft, Optional<Path> file) {
+        run.leave();
+        stage.reset();
+        project.replace(draft, file);
+        started.set(true);
+        notice.set("");
+    }
+
+    /// Back to the start page.
+    public void closeProject() {
+        leaving(() -> {
+            run.leave();
+            project.replace(Edits.empty(), Optional.empty());
+            started.set(false);
+        });
+    }
+
+    public void save() {
+        save(() -> {});
+    }
+
+    private void save(Runnable then) {
+        project.file().get().ifPresentOrElse(file -> write(file, then), () -> saveAs(then));
+    }
+
+    public void saveAs() {
+        saveAs(() -> {});
+    }
+
+    private void saveAs(Runnable then) {
+        dialogs.chooseWhereToSave(fileName(project.draft().get(), project.file().get()))
+                .ifPresent(file -> write(withExtension(file), then));
+    }
+
+    private void write(Path file, Runnable then) {
+        Draft what = project.draft().get();
+        background.run(
+                () -> {
+                    ProjectFile.write(file, what);
+                    return file;
+                },
+                _ -> {
+                    project.savedAs(file, what);
+                    notice.set("Saved in " + file.getFileName());
+                    then.run();
+                },
+                failure -> tell(file.getFileName() + " could not be saved; the project is still here", failure));
+    }
+
+    /// Does it once nothing would be lost: asks where edits are not saved yet.
+    public void leaving(Runnable action) {
+        if (!project.edited().get()) {
+            action.run();
+            return;
+        }
+        switch (dialogs.askAboutUnsaved(title.get())) {
+            case SAVE -> save(action);
+            case DISCARD -> action.run();
+            case CANCEL -> {}
+        }
+    }
+
+    private void tell(String heading, Throwable failure) {
+        List<Problem> problems = failure instanceof Refusal refusal
+                ? refusal.problems()
+                : List.of(Problem.of(String.valueOf(failure.getMessage())));
+        dialogs.tell(heading, problems);
+    }
+
+    static String titleOf(Draft draft, Optional<Path> file) {
+        if (!draft.title().isBlank()) {
+            return draft.title();
+        }
+        return file.map(f -> f.getFileName().toString()).orElse("Untitled");
+    }
+
+    private static String fileName(Draft draft, Optional<Path> file) {
+        return file.map(f -> f.getFileName().toString())
+                .orElseGet(() -> stem(titleOf(draft, file)) + ProjectFile.EXTENSION);
+    }
+
+    /// A title as a file's name: `Breast line at berth 4` becomes `breast-line-at-berth-4`.
+    static String stem(String title) {
+        String stem = title.toLowerCase(Locale.ROOT)
+                .replaceAll("[^\\p{L}\\p{N}]+", "-")
+                .replaceAll("^-|-$", "");
+        String shorter = stem.length() <= 40 ? stem : stem.substring(0, 40).replaceAll("-[^-]*$", "");
+        return shorter.isEmpty() ? "project" : shorter;
+    }
+
+    private static Path withExtension(Path file) {
+        String name = file.getFileName().toString();
+        return name.contains(".") ? file : file.resolveSibling(name + ProjectFile.EXTENSION);
+    }
+
+    /// The picture as it is looked at now, in print colours.
+    ///
+    /// @param kind `png` or `svg`
+    public void exportFigure(String kind) {
+        var settling = stage.settling();
+        if (settling.isEmpty()) {
+            dialogs.tell(
+                    "There is no picture yet",
+                    List.of(Problem.of("The question is not complete").tryThis("Complete it and press Run.")));
+            return;
+        }
+        var view = stage.view().get();
+        dialogs.chooseFigure(stem(title.get()) + "-settling." + kind, kind)
+                .ifPresent(file -> background.run(
+                        () -> {
+                            if (kind.equals("svg")) {
+                                Export.svg(settling.get(), view, FIGURE_WIDTH, FIGURE_HEIGHT, file);
+                            } else {
+                                Export.png(settling.get(), view, FIGURE_WIDTH, FIGURE_HEIGHT, FIGURE_DPI, file);
+                            }
+                            return file;
+                        },
+                        _ -> notice.set("Picture written to " + file.getFileName()),
+                        failure -> tell("The picture could not be written", failure)));
+    }
+
+    // ---- the run menu
+
+    public void askSeed() {
+        var seed = project.draft().get().seed();
+        dialogs.askText(
+                        "Seed",
+                        "A whole number from 0. The same seed gives the same digits again; another one gives fresh draws."
+                                + " Empty: a new one is drawn for each run and recorded.",
+                        seed.isPresent() ? Long.toString(seed.getAsLong()) : "")
+                .ifPresent(this::setSeed);
+    }
+
+    private void setSeed(String text) {
+        String t = text.strip();
+        if (t.isEmpty()) {
+            project.edit("$.seed", d -> Edits.seed(d, OptionalLong.empty()));
+        } else if (t.matches("\\d{1,19}") && new java.math.BigInteger(t).bitLength() < 64) {
+            project.edit("$.seed", d -> Edits.seed(d, OptionalLong.of(Long.parseLong(t))));
+        } else {
+            dialogs.tell(
+                    "The seed stays as it was",
+                    List.of(Problem.of("Seed is \u201c" + t
+                            + "\u201d but must be a whole number from 0 to 2\u2076\u00b3 \u2212 1")));
+        }
+    }
+
+    public void about() {
+        dialogs.about();
+    }
+}

@@ -1,0 +1,96 @@
+package dev.leadline.desktop.stage;
+
+import dev.leadline.chart.LaneLook;
+import dev.leadline.desktop.run.Progress;
+import dev.leadline.desktop.run.RunViewModel.State;
+import dev.leadline.desktop.style.Figures;
+import dev.leadline.desktop.style.RoundedText;
+import dev.leadline.desktop.working.UnitWords;
+import dev.leadline.model.Tolerance;
+import dev.leadline.study.LaneState;
+import dev.leadline.study.StudyState.Activity;
+import dev.leadline.trace.Answer;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+
+/// The rows of the lane table.
+final class LaneRows {
+    private LaneRows() {}
+
+    /// @param look marker and dash of the lane in the picture
+    /// @param of which answer; empty where there is only one
+    /// @param left time left, or whether the numerical tolerance is met
+    /// @param why the lane goes on, or stopped
+    record Row(
+            String lane,
+            LaneLook look,
+            String of,
+            String value,
+            String plusMinus,
+            String draws,
+            String left,
+            String why) {}
+
+    static List<Row> of(State.Shown shown) {
+        var rows = new ArrayList<Row>();
+        var lanes = shown.study().lanes();
+        for (int i = 0; i < lanes.size(); i++) {
+            var look = LaneLook.values()[i];
+            var lane = lanes.get(i);
+            var mark = lane.trace().last();
+            if (mark.isEmpty()) {
+                rows.add(new Row(lane.trace().lane(), look, "", "", "", "0", "", "starting"));
+                continue;
+            }
+            var answers = mark.get().answers();
+            for (int k = 0; k < answers.size(); k++) {
+                rows.add(row(shown, lane, look, answers.get(k), k, answers.size()));
+            }
+        }
+        return rows;
+    }
+
+    private static Row row(State.Shown shown, LaneState lane, LaneLook look, Answer a, int k, int answers) {
+        boolean first = k == 0;
+        double half = a.interval().halfWidth();
+        boolean whole = Double.isFinite(a.estimate()) && half > 0 && Double.isFinite(half);
+        var text = whole ? RoundedText.of(a.estimate(), half) : new RoundedText(alone(a), "");
+        String unit = UnitWords.plain(a.unit());
+        String name = answers == 1 ? "" : a.label().isBlank() ? "answer " + (k + 1) : a.label();
+        return new Row(
+                first ? lane.trace().lane() : "",
+                look,
+                name,
+                text.value() + (unit.isEmpty() ? "" : " " + unit),
+                text.error(),
+                first ? Figures.count(lane.trace().last().orElseThrow().draws()) : "",
+                first ? left(shown, lane, a) : "",
+                first ? why(shown, lane) : "");
+    }
+
+    private static String alone(Answer a) {
+        return Double.isFinite(a.estimate()) ? RoundedText.alone(a.estimate()) : "none yet";
+    }
+
+    private static String left(State.Shown shown, LaneState lane, Answer a) {
+        Optional<Tolerance> tolerance = shown.project().question().tolerance();
+        boolean met = tolerance
+                .filter(t -> t.met(a.estimate(), a.interval().halfWidth()))
+                .isPresent();
+        if (met) {
+            return "met";
+        }
+        if (lane.trace().finished()) {
+            return tolerance.isPresent() ? "not met" : "none";
+        }
+        var progress = Progress.of(lane.trace().marks(), shown.project().plan().stop());
+        return progress.secondsLeft().isPresent()
+                ? Figures.duration(progress.secondsLeft().getAsDouble())
+                : "";
+    }
+
+    private static String why(State.Shown shown, LaneState lane) {
+        return lane.trace().stopReason().orElse(shown.study().activity() == Activity.PAUSED ? "paused" : "running");
+    }
+}

@@ -1,0 +1,33 @@
+package dev.leadline.desktop.stage;
+
+import dev.leadline.chart.Point;
+import dev.leadline.chart.Reading;
+import dev.leadline.desktop.style.Figures;
+import dev.leadline.desktop.style.RoundedText;
+import java.util.stream.Collectors;
+
+/// What the mouse reads in a picture, in one line.
+final class ReadingText {
+    private ReadingText() {}
+
+    /// As `A: 1.3e-5 ± .7e-5 after 1,120,000 draws`.
+    static String of(Reading reading, String unit) {
+        return reading.lanes().stream()
+                .map(at -> at.lane() + ": " + of(at.point(), unit))
+                .collect(Collectors.joining("    "));
+    }
+
+    private static String of(Point p, String unit) {
+        String after = " after " + Figures.count(p.draws()) + " draws";
+        String in = unit.isEmpty() ? "" : " " + unit;
+        double half = (p.high() - p.low()) / 2;
+        if (!Double.isFinite(p.estimate())) {
+            return "no estimate yet" + after;
+        }
+        if (!(half > 0)) {
+            return RoundedText.alone(p.estimate()) + in + after;
+        }
+        var text = RoundedText.of(p.estimate(), half);
+        return text.value() + " \u00b1 " + text.error() + in + after;
+    }
+}

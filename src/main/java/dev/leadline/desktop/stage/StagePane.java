@@ -1,0 +1,103 @@
+package dev.leadline.desktop.stage;
+
+import dev.leadline.chart.View;
+import dev.leadline.desktop.run.RunViewModel;
+import dev.leadline.desktop.style.Styles;
+import dev.leadline.desktop.working.UnitWords;
+import java.util.List;
+import javafx.beans.binding.Bindings;
+import javafx.geometry.Pos;
+import javafx.scene.control.Button;
+import javafx.scene.control.Label;
+import javafx.scene.control.ToggleButton;
+import javafx.scene.control.ToggleGroup;
+import javafx.scene.control.Tooltip;
+import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.HBox;
+import javafx.scene.layout.Priority;
+import javafx.scene.layout.Region;
+import javafx.scene.layout.StackPane;
+import javafx.scene.layout.VBox;
+
+/// The centre of the window: the picture, and the lanes under it.
+public final class StagePane extends BorderPane {
+    private final LaneTable lanes = new LaneTable();
+    private final Label reading = new Label();
+    private final StageViewModel model;
+
+    public StagePane(StageViewModel model, RunViewModel run) {
+        this.model = model;
+        getStyleClass().addAll(Styles.PANE, Styles.STAGE);
+        var title = new Label("Settling");
+        title.getStyleClass().add(Styles.PANE_TITLE);
+        title.setMinWidth(USE_PREF_SIZE);
+        reading.getStyleClass().add(Styles.READING);
+        reading.setId("reading");
+        reading.setMinWidth(0);
+        var gap = new Region();
+        HBox.setHgrow(gap, Priority.ALWAYS);
+        var scales = new ToggleGroup();
+        var log = scaleButton("log", "Draws on a logarithmic axis", scales);
+        log.setId("axis-log");
+        var linear = scaleButton("linear", "Draws on a linear axis", scales);
+        linear.setId("axis-linear");
+        scales.selectToggle(model.logDraws().get() ? log : linear);
+        scales.selectedToggleProperty().addListener((_, old, chosen) -> {
+            if (chosen == null) {
+                scales.selectToggle(old);
+            } else {
+                model.logDraws().set(chosen == log);
+            }
+        });
+        var pair = new HBox(log, linear);
+        pair.getStyleClass().add("pair");
+        var follow = new Button("follow");
+        follow.setId("follow");
+        follow.getStyleClass().addAll("small");
+        follow.setMinWidth(USE_PREF_SIZE);
+        follow.setTooltip(new Tooltip("Both axes follow the run again (double-click the picture)"));
+        follow.setOnAction(_ -> model.reset());
+        follow.disableProperty()
+                .bind(Bindings.createBooleanBinding(
+                        () -> isFollowing(model.view().get()), model.view()));
+        var head = new HBox(10, title, reading, gap, follow, pair);
+        head.setAlignment(Pos.CENTER_LEFT);
+        head.getStyleClass().add(Styles.STAGE_HEAD);
+        var picture = new PictureView(
+                model,
+                found -> reading.setText(
+                        found.map(r -> ReadingText.of(r, unit())).orElse("")));
+        var empty = new Label("The picture appears once the question is complete.");
+        empty.getStyleClass().add(Styles.QUIET);
+        empty.setMouseTransparent(true);
+        empty.visibleProperty()
+                .bind(Bindings.createBooleanBinding(() -> model.drawn().get().isEmpty(), model.drawn()));
+        setTop(head);
+        setCenter(new StackPane(picture, empty));
+        setBottom(new VBox(lanes));
+        setMinWidth(420);
+        run.state().addListener((_, _, state) -> show(state));
+        show(run.state().get());
+    }
+
+    private String unit() {
+        return model.settling().map(s -> UnitWords.plain(s.unit())).orElse("");
+    }
+
+    private static boolean isFollowing(View view) {
+        return view.draws().isEmpty() && view.values().isEmpty();
+    }
+
+    private void show(RunViewModel.State state) {
+        lanes.show(RunViewModel.shown(state).map(LaneRows::of).orElse(List.of()));
+    }
+
+    private static ToggleButton scaleButton(String text, String tip, ToggleGroup group) {
+        var button = new ToggleButton(text);
+        button.getStyleClass().add("small");
+        button.setToggleGroup(group);
+        button.setTooltip(new Tooltip(tip));
+        button.setMinWidth(USE_PREF_SIZE);
+        return button;
+    }
+}

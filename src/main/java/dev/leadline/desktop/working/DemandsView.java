@@ -1,0 +1,155 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.desktop.style.Styles;
+import java.util.function.Consumer;
+import java.util.function.Supplier;
+import javafx.geometry.Pos;
+import javafx.scene.Node;
+import javafx.scene.control.CheckBox;
+import javafx.scene.control.Label;
+import javafx.scene.control.Tooltip;
+import javafx.scene.layout.FlowPane;
+import javafx.scene.layout.HBox;
+import javafx.scene.layout.Region;
+import javafx.scene.layout.VBox;
+
+/// How well the question is to be answered, folded away until used.
+final class DemandsView {
+    private final DemandsViewModel model;
+    private final Field relative;
+    private final Field absolute;
+    private final CheckBox both = new CheckBox("both must be met");
+    private final Field confidence;
+    private final Field draws;
+    private final Field seconds;
+    private final Field reference;
+    private final Field error;
+    private final Field source;
+    private final Messages toleranceMessages = new Messages();
+    private final Messages stopMessages = new Messages();
+    private final Messages referenceMessages = new Messages();
+    private final Fold toleranceFold;
+    private final Fold stopFold;
+    private final Fold referenceFold;
+    private final VBox folds;
+
+    DemandsView(DemandsViewModel model) {
+        this.model = model;
+        relative = field("relative", "relative tolerance", "Half-width over estimate, in per cent", 5, model::relative);
+        absolute = field("absolute", "absolute tolerance", "Half-width, in the unit of the answer", 7, model::absolute);
+        confidence = field("confidence", "confidence", "Level of the interval, in per cent", 5, model::confidence)
+                .prompt("95");
+        draws = field("draws", "draws at most", "Evaluations at most, as 1e6", 9, model::draws)
+                .prompt("1000000");
+        seconds = field("seconds", "seconds at most", "Seconds of computing at most", 5, model::seconds)
+                .prompt("no limit");
+        reference = field("reference", "reference value", "A value known from elsewhere", 9, model::reference);
+        error = field("reference-error", "its error", "Its standard error or bound", 6, model::referenceError);
+        source = field("reference-source", "its source", "Where it comes from", 16, model::referenceSource)
+                .growing();
+        both.setOnAction(_ -> model.both(both.isSelected()));
+        both.setTooltip(new Tooltip("Otherwise either will do"));
+
+        toleranceFold = new Fold(
+                "fold-tolerance",
+                "numerical tolerance",
+                "How short the interval is to be, and its level of confidence",
+                new VBox(
+                        6,
+                        flow(pair("\u00b1", relative, "%"), pair("\u00b1", absolute, "absolute"), both),
+                        flow(pair("at", confidence, "% confidence")),
+                        toleranceMessages));
+        stopFold = new Fold(
+                "fold-stop",
+                "stop",
+                "When a run ends",
+                new VBox(6, flow(pair("after", draws, "draws"), pair("or", seconds, "s")), stopMessages));
+        referenceFold = new Fold(
+                "fold-reference",
+                "reference value",
+                "A value to compare the answer with",
+                new VBox(6, flow(pair("", reference, ""), pair("\u00b1", error, "")), source, referenceMessages));
+        folds = new VBox(toleranceFold, stopFold, referenceFold);
+        folds.getStyleClass().add("folds");
+    }
+
+    Node folds() {
+        return folds;
+    }
+
+    void openTolerance() {
+        toleranceFold.open();
+        relative.requestFocus();
+    }
+
+    void openStop() {
+        stopFold.open();
+        draws.requestFocus();
+    }
+
+    void update() {
+        show(relative, model::relativeText, "$.tolerance.relative");
+        show(absolute, model::absoluteText, "$.tolerance.absolute");
+        show(confidence, model::confidenceText, "$.confidence");
+        show(draws, model::drawsText, "$.stop.draws");
+        show(seconds, model::secondsText, "$.stop.seconds");
+        show(reference, model::referenceText, "$.reference.value");
+        show(error, model::referenceErrorText, "$.reference.error");
+        source.show(model.referenceSourceText());
+        error.setDisable(!model.hasReference());
+        source.setDisable(!model.hasReference());
+        both.setSelected(model.isBoth());
+        both.setVisible(model.hasTwoTolerances());
+        both.setManaged(model.hasTwoTolerances());
+        var project = model.project();
+        var tolerance = new java.util.ArrayList<>(project.problemsAt("$.tolerance"));
+        tolerance.addAll(project.problemsAt("$.confidence"));
+        toleranceMessages.show(tolerance);
+        stopMessages.show(project.problemsAt("$.stop"));
+        referenceMessages.show(project.problemsAt("$.reference"));
+        toleranceFold.summary(model.toleranceSummary());
+        stopFold.summary("after " + DemandsViewModel.stopWords(project.draft().get()));
+        referenceFold.summary(model.referenceSummary());
+        openWhereFaulty(toleranceFold, !tolerance.isEmpty());
+        openWhereFaulty(stopFold, !project.problemsAt("$.stop").isEmpty());
+        openWhereFaulty(referenceFold, !project.problemsAt("$.reference").isEmpty());
+    }
+
+    /// A fault is never folded away.
+    private static void openWhereFaulty(Fold fold, boolean faulty) {
+        if (faulty) {
+            fold.open();
+        }
+    }
+
+    private void show(Field field, Supplier<String> text, String path) {
+        field.show(text.get());
+        field.showFault(!model.project().problemsAt(path).isEmpty());
+    }
+
+    private Field field(String id, String name, String tip, int columns, Consumer<String> typed) {
+        var field = new Field(name, tip, columns, typed, model.project()::settle);
+        field.setId(id);
+        return field;
+    }
+
+    private static FlowPane flow(Node... nodes) {
+        var flow = new FlowPane(12, 6, nodes);
+        flow.setPrefWrapLength(280);
+        return flow;
+    }
+
+    private static HBox pair(String before, Field field, String after) {
+        var box = new HBox(5, label(before), field, label(after));
+        box.setAlignment(Pos.CENTER_LEFT);
+        return box;
+    }
+
+    private static Label label(String text) {
+        var label = new Label(text);
+        label.getStyleClass().add(Styles.FIELD_LABEL);
+        label.setMinWidth(Region.USE_PREF_SIZE);
+        label.setManaged(!text.isEmpty());
+        return label;
+    }
+}

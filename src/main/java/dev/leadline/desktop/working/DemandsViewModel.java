@@ -1,0 +1,239 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.desktop.style.Figures;
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.ReferenceDraft;
+import dev.leadline.model.Draft.StopDraft;
+import dev.leadline.model.Draft.ToleranceDraft;
+import java.math.BigDecimal;
+import java.util.ArrayList;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+
+/// How well the question is to be answered: numerical tolerance, confidence, stop rule, reference value.
+public final class DemandsViewModel {
+    private static final ToleranceDraft NO_TOLERANCE =
+            new ToleranceDraft(OptionalDouble.empty(), OptionalDouble.empty(), Optional.empty());
+    private static final StopDraft FIXED = new StopDraft("fixed", OptionalLong.empty(), OptionalDouble.empty());
+
+    private final ProjectViewModel project;
+
+    public DemandsViewModel(ProjectViewModel project) {
+        this.project = project;
+    }
+
+    ProjectViewModel project() {
+        return project;
+    }
+
+    private Draft draft() {
+        return project.draft().get();
+    }
+
+    void absolute(String text) {
+        project.typeOptionalNumber("$.tolerance.absolute", "absolute tolerance", text, (d, value) -> {
+            var t = d.tolerance().orElse(NO_TOLERANCE);
+            return Edits.tolerance(d, kept(new ToleranceDraft(value, t.relative(), t.when())));
+        });
+    }
+
+    String absoluteText() {
+        return project.fieldText(
+                "$.tolerance.absolute",
+                draft().tolerance().map(ToleranceDraft::absolute).orElse(OptionalDouble.empty()));
+    }
+
+    /// In per cent.
+    void relative(String text) {
+        project.typeOptionalNumber("$.tolerance.relative", "relative tolerance", text, (d, value) -> {
+            var t = d.tolerance().orElse(NO_TOLERANCE);
+            return Edits.tolerance(d, kept(new ToleranceDraft(t.absolute(), ofPercent(value), t.when())));
+        });
+    }
+
+    String relativeText() {
+        return project.fieldText(
+                "$.tolerance.relative",
+                inPercent(draft().tolerance().map(ToleranceDraft::relative).orElse(OptionalDouble.empty())));
+    }
+
+    /// Whether both tolerances must be met; says nothing unless both are given.
+    void both(boolean both) {
+        project.edit(
+                "$.tolerance.when",
+                d -> Edits.tolerance(
+                        d,
+                        d.tolerance()
+                                .map(t -> new ToleranceDraft(
+                                        t.absolute(), t.relative(), both ? Optional.of("both") : Optional.empty()))));
+    }
+
+    boolean isBoth() {
+        return draft().tolerance()
+                .flatMap(ToleranceDraft::when)
+                .filter("both"::equals)
+                .isPresent();
+    }
+
+    boolean hasTwoTolerances() {
+        return draft().tolerance()
+                .filter(t -> t.absolute().isPresent() && t.relative().isPresent())
+                .isPresent();
+    }
+
+    /// A tolerance without numbers is none.
+    private static Optional<ToleranceDraft> kept(ToleranceDraft t) {
+        if (t.absolute().isEmpty() && t.relative().isEmpty()) {
+            return Optional.empty();
+        }
+        boolean two = t.absolute().isPresent() && t.relative().isPresent();
+        return Optional.of(two ? t : new ToleranceDraft(t.absolute(), t.relative(), Optional.empty()));
+    }
+
+    /// In per cent.
+    void confidence(String text) {
+        project.typeOptionalNumber(
+                "$.confidence", "confidence", text, (d, value) -> Edits.confidence(d, ofPercent(value)));
+    }
+
+    String confidenceText() {
+        return project.fieldText("$.confidence", inPercent(draft().confidence()));
+    }
+
+    void draws(String text) {
+        project.typeOptionalNumber("$.stop.draws", "number of draws", text, (d, value) -> {
+            var s = d.stop().orElse(FIXED);
+            var draws = value.isPresent() ? OptionalLong.of(Math.round(value.getAsDouble())) : OptionalLong.empty();
+            return Edits.stop(d, kept(new StopDraft(s.rule(), draws, s.seconds())));
+        });
+    }
+
+    String drawsText() {
+        var draws = draft().stop().map(StopDraft::draws).orElse(OptionalLong.empty());
+        return project.fieldText(
+                "$.stop.draws", draws.isPresent() ? OptionalDouble.of(draws.getAsLong()) : OptionalDouble.empty());
+    }
+
+    void seconds(String text) {
+        project.typeOptionalNumber("$.stop.seconds", "seconds of computing", text, (d, value) -> {
+            var s = d.stop().orElse(FIXED);
+            return Edits.stop(d, kept(new StopDraft(s.rule(), s.draws(), value)));
+        });
+    }
+
+    String secondsText() {
+        return project.fieldText(
+                "$.stop.seconds", draft().stop().map(StopDraft::seconds).orElse(OptionalDouble.empty()));
+    }
+
+    private static Optional<StopDraft> kept(StopDraft s) {
+        return s.draws().isEmpty() && s.seconds().isEmpty() ? Optional.empty() : Optional.of(s);
+    }
+
+    void reference(String text) {
+        project.typeOptionalNumber(
+                "$.reference.value",
+                "reference value",
+                text,
+                (d, value) -> Edits.reference(
+                        d,
+                        value.isEmpty()
+                                ? Optional.empty()
+                                : Optional.of(d.reference()
+                                        .map(r -> new ReferenceDraft(value.getAsDouble(), r.error(), r.source()))
+                                        .orElse(new ReferenceDraft(value.getAsDouble(), OptionalDouble.empty(), "")))));
+    }
+
+    String referenceText() {
+        return project.fieldText(
+                "$.reference.value",
+                draft().reference().map(r -> OptionalDouble.of(r.value())).orElse(OptionalDouble.empty()));
+    }
+
+    boolean hasReference() {
+        return draft().reference().isPresent();
+    }
+
+    void referenceError(String text) {
+        project.typeOptionalNumber(
+                "$.reference.error",
+                "error of the reference value",
+                text,
+                (d, value) ->
+                        Edits.reference(d, d.reference().map(r -> new ReferenceDraft(r.value(), value, r.source()))));
+    }
+
+    String referenceErrorText() {
+        return project.fieldText(
+                "$.reference.error",
+                draft().reference().map(ReferenceDraft::error).orElse(OptionalDouble.empty()));
+    }
+
+    void referenceSource(String source) {
+        project.edit(
+                "$.reference.source",
+                d -> Edits.reference(d, d.reference().map(r -> new ReferenceDraft(r.value(), r.error(), source))));
+    }
+
+    String referenceSourceText() {
+        return draft().reference().map(ReferenceDraft::source).orElse("");
+    }
+
+    /// As `±10 % at 95 %`.
+    String toleranceSummary() {
+        return toleranceWords(draft()).orElse("none") + " at " + confidenceWords(draft());
+    }
+
+    /// As `±10 %` or `±25 m3`.
+    public static Optional<String> toleranceWords(Draft d) {
+        return d.tolerance().map(t -> {
+            var parts = new ArrayList<String>();
+            String unit = d.asks().isEmpty() ? "" : d.asks().getFirst().unit();
+            t.absolute()
+                    .ifPresent(a -> parts.add("\u00b1" + NumberText.show(a)
+                            + (unit.isEmpty() || unit.equals("1") ? "" : " " + UnitWords.plain(unit))));
+            inPercent(t.relative()).ifPresent(r -> parts.add("\u00b1" + NumberText.show(r) + " %"));
+            return String.join(t.when().filter("both"::equals).isPresent() ? " and " : " or ", parts);
+        });
+    }
+
+    /// As `95 %`.
+    public static String confidenceWords(Draft d) {
+        return percent(d.confidence().orElse(.95));
+    }
+
+    /// A part of one as `95 %`.
+    public static String percent(double part) {
+        return NumberText.show(inPercent(OptionalDouble.of(part)).getAsDouble()) + " %";
+    }
+
+    /// As `200 million draws or 2 min`.
+    public static String stopWords(Draft d) {
+        var parts = new ArrayList<String>();
+        d.stop().ifPresent(s -> {
+            s.draws().ifPresent(n -> parts.add(Figures.count(n) + " draws"));
+            s.seconds().ifPresent(t -> parts.add(Figures.duration(t)));
+        });
+        return parts.isEmpty() ? Figures.count(1_000_000) + " draws" : String.join(" or ", parts);
+    }
+
+    String referenceSummary() {
+        return draft().reference().map(r -> NumberText.show(r.value())).orElse("none");
+    }
+
+    static OptionalDouble inPercent(OptionalDouble part) {
+        return part.isPresent() && Double.isFinite(part.getAsDouble())
+                ? OptionalDouble.of(
+                        BigDecimal.valueOf(part.getAsDouble()).movePointRight(2).doubleValue())
+                : part;
+    }
+
+    static OptionalDouble ofPercent(OptionalDouble percent) {
+        return percent.isPresent() && Double.isFinite(percent.getAsDouble())
+                ? OptionalDouble.of(BigDecimal.valueOf(percent.getAsDouble())
+                        .movePointLeft(2)
+                        .doubleValue())
+                : percent;
+    }
+}

@@ -1,0 +1,185 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.AskDraft;
+import dev.leadline.model.Draft.ConstantDraft;
+import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.ReferenceDraft;
+import dev.leadline.model.Draft.StopDraft;
+import dev.leadline.model.Draft.ToleranceDraft;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+import java.util.function.UnaryOperator;
+
+/// Drafts with one part changed.
+public final class Edits {
+    private Edits() {}
+
+    public static Draft empty() {
+        return new Draft(
+                "",
+                "",
+                false,
+                List.of(),
+                List.of(),
+                List.of(),
+                List.of(new AskDraft("mean", "", "", "")),
+                Optional.empty(),
+                OptionalDouble.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                OptionalLong.empty(),
+                List.of());
+    }
+
+    public static Draft title(Draft d, String title) {
+        return new Draft(
+                title,
+                d.notes(),
+                d.safety(),
+                d.constants(),
+                d.inputs(),
+                d.steps(),
+                d.asks(),
+                d.reference(),
+                d.confidence(),
+                d.tolerance(),
+                d.stop(),
+                d.seed(),
+                d.lanes());
+    }
+
+    public static Draft notes(Draft d, String notes) {
+        return new Draft(
+                d.title(),
+                notes,
+                d.safety(),
+                d.constants(),
+                d.inputs(),
+                d.steps(),
+                d.asks(),
+                d.reference(),
+                d.confidence(),
+                d.tolerance(),
+                d.stop(),
+                d.seed(),
+                d.lanes());
+    }
+
+    public static Draft safety(Draft d, boolean safety) {
+        return new Draft(
+                d.title(),
+                d.notes(),
+                safety,
+                d.constants(),
+                d.inputs(),
+                d.steps(),
+                d.asks(),
+                d.reference(),
+                d.confidence(),
+                d.tolerance(),
+                d.stop(),
+                d.seed(),
+                d.lanes());
+    }
+
+    /// The parts that say what is asked.
+    static Draft question(
+            Draft d, List<ConstantDraft> constants, List<InputDraft> inputs, List<String> steps, List<AskDraft> asks) {
+        return new Draft(
+                d.title(),
+                d.notes(),
+                d.safety(),
+                constants,
+                inputs,
+                steps,
+                asks,
+                d.reference(),
+                d.confidence(),
+                d.tolerance(),
+                d.stop(),
+                d.seed(),
+                d.lanes());
+    }
+
+    /// The parts that say how well it is to be answered.
+    static Draft demands(
+            Draft d,
+            Optional<ReferenceDraft> reference,
+            OptionalDouble confidence,
+            Optional<ToleranceDraft> tolerance,
+            Optional<StopDraft> stop,
+            OptionalLong seed) {
+        return new Draft(
+                d.title(),
+                d.notes(),
+                d.safety(),
+                d.constants(),
+                d.inputs(),
+                d.steps(),
+                d.asks(),
+                reference,
+                confidence,
+                tolerance,
+                stop,
+                seed,
+                d.lanes());
+    }
+
+    static Draft constants(Draft d, List<ConstantDraft> constants) {
+        return question(d, constants, d.inputs(), d.steps(), d.asks());
+    }
+
+    static Draft inputs(Draft d, List<InputDraft> inputs) {
+        return question(d, d.constants(), inputs, d.steps(), d.asks());
+    }
+
+    static Draft steps(Draft d, List<String> steps) {
+        return question(d, d.constants(), d.inputs(), steps, d.asks());
+    }
+
+    static Draft asks(Draft d, List<AskDraft> asks) {
+        return question(d, d.constants(), d.inputs(), d.steps(), asks);
+    }
+
+    static Draft reference(Draft d, Optional<ReferenceDraft> reference) {
+        return demands(d, reference, d.confidence(), d.tolerance(), d.stop(), d.seed());
+    }
+
+    static Draft confidence(Draft d, OptionalDouble confidence) {
+        return demands(d, d.reference(), confidence, d.tolerance(), d.stop(), d.seed());
+    }
+
+    static Draft tolerance(Draft d, Optional<ToleranceDraft> tolerance) {
+        return demands(d, d.reference(), d.confidence(), tolerance, d.stop(), d.seed());
+    }
+
+    static Draft stop(Draft d, Optional<StopDraft> stop) {
+        return demands(d, d.reference(), d.confidence(), d.tolerance(), stop, d.seed());
+    }
+
+    public static Draft seed(Draft d, OptionalLong seed) {
+        return demands(d, d.reference(), d.confidence(), d.tolerance(), d.stop(), seed);
+    }
+
+    static <T> List<T> changed(List<T> list, int index, UnaryOperator<T> change) {
+        var copy = new ArrayList<>(list);
+        copy.set(index, change.apply(copy.get(index)));
+        return copy;
+    }
+
+    static <T> List<T> without(List<T> list, int index) {
+        var copy = new ArrayList<>(list);
+        copy.remove(index);
+        return copy;
+    }
+
+    static <T> List<T> with(List<T> list, T last) {
+        var copy = new ArrayList<>(list);
+        copy.add(last);
+        return copy;
+    }
+}

@@ -1,0 +1,67 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.desktop.style.Styles;
+import java.util.function.Consumer;
+import javafx.css.PseudoClass;
+import javafx.scene.control.TextField;
+import javafx.scene.control.Tooltip;
+
+/// A text field that tells what was typed in it and, between two keystrokes, shows what it is told.
+final class Field extends TextField {
+    private static final PseudoClass FAULTY = PseudoClass.getPseudoClass("faulty");
+
+    private final Consumer<String> typed;
+    private boolean showing;
+
+    /// @param name accessible name
+    /// @param tip what belongs here
+    /// @param columns width in digits
+    Field(String name, String tip, int columns, Consumer<String> typed, Runnable left) {
+        this.typed = typed;
+        setAccessibleText(name);
+        setTooltip(new Tooltip(tip));
+        setPrefColumnCount(columns);
+        setMinWidth(USE_PREF_SIZE);
+        getStyleClass().add(Styles.FLAT_FIELD);
+        textProperty().addListener((_, _, text) -> {
+            if (!showing) {
+                this.typed.accept(text);
+            }
+        });
+        focusedProperty().addListener((_, _, focused) -> {
+            if (!focused) {
+                left.run();
+            }
+        });
+    }
+
+    Field prompt(String prompt) {
+        setPromptText(prompt);
+        return this;
+    }
+
+    /// Takes what room there is.
+    Field growing() {
+        setMinWidth(60);
+        setMaxWidth(Double.MAX_VALUE);
+        return this;
+    }
+
+    void show(String text) {
+        if (!text.equals(getText()) && !(isFocused() && sameNumber(text))) {
+            showing = true;
+            setText(text);
+            showing = false;
+        }
+    }
+
+    void showFault(boolean faulty) {
+        pseudoClassStateChanged(FAULTY, faulty);
+    }
+
+    /// While it is being typed, `2.60` stays as it is although `2.6` says the same.
+    private boolean sameNumber(String text) {
+        var mine = NumberText.read(getText());
+        return mine.isPresent() && mine.equals(NumberText.read(text));
+    }
+}

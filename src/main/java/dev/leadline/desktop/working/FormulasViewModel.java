@@ -1,0 +1,167 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.AskDraft;
+import dev.leadline.problem.Place;
+import dev.leadline.problem.Problem;
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Optional;
+import java.util.SequencedSet;
+import java.util.function.UnaryOperator;
+import java.util.regex.Pattern;
+import java.util.stream.Stream;
+import javafx.beans.property.ReadOnlyStringProperty;
+import javafx.beans.property.ReadOnlyStringWrapper;
+
+/// The formulas: steps, one to a line, and what is asked.
+///
+/// The text of the steps may hold blank lines, which the draft does not.
+public final class FormulasViewModel {
+    private static final Pattern NAMED =
+            Pattern.compile("\\s*([\\p{L}_][\\p{L}\\p{M}\\p{N}_]*)\\s*=(?!=).*", Pattern.DOTALL);
+
+    private final ProjectViewModel project;
+    private final InputsViewModel inputs;
+    private final ReadOnlyStringWrapper stepsText = new ReadOnlyStringWrapper("");
+
+    /// Something wrong in a text.
+    ///
+    /// @param line of the text, from 0
+    /// @param from place in that line
+    /// @param to end of the faulty stretch; the same as `from` where something is missing
+    public record Fault(int line, int from, int to, Problem problem) {}
+
+    public FormulasViewModel(ProjectViewModel project, InputsViewModel inputs) {
+        this.project = project;
+        this.inputs = inputs;
+        project.draft().addListener((_, _, d) -> follow(d));
+        follow(project.draft().get());
+    }
+
+    ProjectViewModel project() {
+        return project;
+    }
+
+    ReadOnlyStringProperty stepsText() {
+        return stepsText.getReadOnlyProperty();
+    }
+
+    List<AskDraft> asks() {
+        return project.draft().get().asks();
+    }
+
+    void typeSteps(String text) {
+        stepsText.set(text);
+        var lines = written(text);
+        project.edit("$.steps(" + lines.size() + ")", d -> Edits.steps(d, lines));
+    }
+
+    void typeFormula(int i, String text) {
+        editAsk(i, ".formula", a -> new AskDraft(a.estimand(), text, a.unit(), a.label()));
+    }
+
+    void kind(int i, String estimand) {
+        project.settle();
+        editAsk(i, ".estimand", a -> new AskDraft(estimand, a.formula(), a.unit(), a.label()));
+    }
+
+    void unit(int i, String unit) {
+        editAsk(i, ".unit", a -> new AskDraft(a.estimand(), a.formula(), unit, a.label()));
+    }
+
+    void label(int i, String label) {
+        editAsk(i, ".label", a -> new AskDraft(a.estimand(), a.formula(), a.unit(), label));
+    }
+
+    void addAsk() {
+        project.settle();
+        project.edit("$.ask", d -> Edits.asks(d, Edits.with(d.asks(), new AskDraft("mean", "", "", ""))));
+    }
+
+    void removeAsk(int i) {
+        project.settle();
+        project.edit("$.ask", d -> Edits.asks(d, Edits.without(d.asks(), i)));
+    }
+
+    /// What is wrong in the steps, by line of the text.
+    List<Fault> stepFaults() {
+        var faults = new ArrayList<Fault>();
+        var lines = stepsText.get().split("\n", -1);
+        int step = 0;
+        for (int line = 0; line < lines.length; line++) {
+            if (!lines[line].isBlank()) {
+                for (Problem p : project.problemsAt("$.steps[" + step + "]")) {
+                    faults.add(fault(line, lines[line], p));
+                }
+                step++;
+            }
+        }
+        project.problemsAt("$.steps").stream()
+                .filter(p -> p.place().path().equals("$.steps"))
+                .forEach(p -> faults.add(new Fault(0, 0, 0, p)));
+        return faults;
+    }
+
+    /// What is wrong in the formula asked at `i`, and in what belongs to it.
+    List<Fault> askFaults(int i) {
+        String place = asks().size() == 1 ? "$.ask" : "$.ask[" + i + "]";
+        return Stream.concat(
+                        project.problemsAt(place).stream(),
+                        project.problemsAt("$.ask").stream()
+                                .filter(p -> i == 0
+                                        && asks().size() > 1
+                                        && p.place().path().equals("$.ask")))
+                .map(p -> fault(0, asks().get(i).formula(), p))
+                .toList();
+    }
+
+    private static Fault fault(int line, String text, Problem p) {
+        var span = p.place().span();
+        int from = Math.min(span.map(s -> s.from()).orElse(0), text.length());
+        int to = Math.min(span.map(s -> s.to()).orElse(text.length()), text.length());
+        return new Fault(line, from, Math.max(from, to), p);
+    }
+
+    /// Makes an input row, with its density still to be chosen, of every name that stands for nothing yet.
+    void makeInputsOfUnknownNames() {
+        inputs.addUnknown(unknownNames());
+    }
+
+    SequencedSet<String> unknownNames() {
+        Draft d = project.draft().get();
+        var known = InputsViewModel.known(d);
+        var unknown = new LinkedHashSet<String>();
+        Stream.concat(d.steps().stream(), d.asks().stream().map(AskDraft::formula))
+                .flatMap(text -> Colouring.names(text).stream())
+                .filter(name -> !known.contains(name))
+                .forEach(unknown::add);
+        return unknown;
+    }
+
+    /// The name that a line of steps gives to its formula.
+    static Optional<String> stepName(String line) {
+        var m = NAMED.matcher(line);
+        return m.matches() ? Optional.of(m.group(1)) : Optional.empty();
+    }
+
+    /// Where a problem's place can be shown in a text: the path of a step or of an asked formula.
+    static boolean isInFormulas(Place place) {
+        return place.path().startsWith("$.steps") || place.path().startsWith("$.ask");
+    }
+
+    private void editAsk(int i, String field, UnaryOperator<AskDraft> change) {
+        project.edit("$.ask[" + i + "]" + field, d -> Edits.asks(d, Edits.changed(d.asks(), i, change)));
+    }
+
+    private void follow(Draft d) {
+        if (!written(stepsText.get()).equals(d.steps())) {
+            stepsText.set(String.join("\n", d.steps()));
+        }
+    }
+
+    private static List<String> written(String text) {
+        return Stream.of(text.split("\n", -1)).filter(line -> !line.isBlank()).toList();
+    }
+}

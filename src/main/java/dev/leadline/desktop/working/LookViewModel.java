@@ -1,0 +1,134 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.desktop.background.Background;
+import dev.leadline.engine.Look;
+import dev.leadline.model.Project;
+import dev.leadline.problem.Problem;
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import javafx.beans.property.ReadOnlyObjectProperty;
+import javafx.beans.property.ReadOnlyObjectWrapper;
+
+/// One draw looked at: the nominal one, with every input at its median, or the one with a given index.
+public final class LookViewModel {
+    public sealed interface State {
+        /// Folded away, or the project cannot be run.
+        record Empty(String why) implements State {}
+
+        record Seen(List<Row> rows) implements State {}
+
+        record Refused(Problem problem) implements State {}
+    }
+
+    /// @param kind `input`, `step`, `weight` or `outcome`
+    public record Row(String kind, String name, double value, String unit) {}
+
+    private final ProjectViewModel project;
+    private final Background background;
+    private final ReadOnlyObjectWrapper<State> state = new ReadOnlyObjectWrapper<>(new State.Empty(""));
+    private boolean open;
+    private String draw = "";
+    private long newest;
+
+    public LookViewModel(ProjectViewModel project, Background background) {
+        this.project = project;
+        this.background = background;
+        project.check().addListener((_, _, _) -> look());
+    }
+
+    ReadOnlyObjectProperty<State> state() {
+        return state.getReadOnlyProperty();
+    }
+
+    /// Nothing is looked at while the fold is closed.
+    void open(boolean isOpen) {
+        open = isOpen;
+        look();
+    }
+
+    /// @param text index of the draw from 0; blank for the nominal one
+    void draw(String text) {
+        draw = text.strip();
+        look();
+    }
+
+    private void look() {
+        if (!open) {
+            return;
+        }
+        long turn = ++newest;
+        Optional<Project> sound = project.sound();
+        if (sound.isEmpty()) {
+            state.set(new State.Empty("To be seen once the question is complete."));
+            return;
+        }
+        if (!draw.isEmpty() && !draw.matches("\\d{1,12}")) {
+            state.set(new State.Refused(Problem.of("\u201c" + draw + "\u201d is no index of a draw")
+                    .tryThis("Give a whole number from 0, or leave it empty to see every input at its median.")));
+            return;
+        }
+        Project p = sound.get();
+        String which = draw;
+        background.run(
+                () -> rows(p, which.isEmpty() ? nominal(p) : at(p, Long.parseLong(which))),
+                rows -> {
+                    if (turn == newest) {
+                        state.set(new State.Seen(rows));
+                    }
+                },
+                failure -> {
+                    if (turn == newest) {
+                        state.set(new State.Refused(Problem.of("This draw cannot be looked at: " + failure)));
+                    }
+                });
+    }
+
+    private static Look nominal(Project p) {
+        return Look.nominal(p.question());
+    }
+
+    private static Look at(Project p, long draw) {
+        return Look.at(p.question(), p.plan().lanes().getFirst(), p.plan().seed(), draw);
+    }
+
+    private static List<Row> rows(Project p, Look look) {
+        var q = p.question();
+        var rows = new ArrayList<Row>();
+        for (int i = 0; i < q.inputs().size(); i++) {
+            var in = q.inputs().get(i);
+            rows.add(new Row("input", in.name(), look.inputs().get(i), UnitWords.plain(in.unit())));
+        }
+        var steps = q.working().steps();
+        for (int i = 0; i < steps.size(); i++) {
+            rows.add(new Row(
+                    "step",
+                    steps.get(i).name(),
+                    look.steps().get(i),
+                    steps.get(i).comment()));
+        }
+        if (look.weight() != 1) {
+            rows.add(new Row("weight", "weight", look.weight(), ""));
+        }
+        for (int i = 0; i < q.asks().size(); i++) {
+            var ask = q.asks().get(i);
+            String name = ask.label().isBlank() ? ask.formula() : ask.label();
+            rows.add(new Row("outcome", name, look.outcomes().get(i), ""));
+        }
+        return rows;
+    }
+
+    /// Six digits, enough to check a hand calculation.
+    static String digits(double value) {
+        if (!Double.isFinite(value)) {
+            return Double.isNaN(value) ? "not a number" : value > 0 ? "\u221e" : "\u2212\u221e";
+        }
+        var rounded = new BigDecimal(value).round(new MathContext(6));
+        int power = rounded.precision() - rounded.scale() - 1;
+        return rounded.signum() == 0 || power >= -4 && power < 9
+                ? rounded.stripTrailingZeros().toPlainString()
+                : NumberText.show(rounded.doubleValue());
+    }
+}

@@ -1,0 +1,67 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.problem.Problem;
+import java.util.OptionalDouble;
+import java.util.regex.Pattern;
+
+/// Numbers as people type them in fields, and as fields show them.
+public final class NumberText {
+    private static final Pattern NUMBER = Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d{1,4})?");
+
+    private NumberText() {}
+
+    /// The number that stands there, infinities as `inf` and `-inf`; empty where it is none.
+    public static OptionalDouble read(String text) {
+        String t = text.strip().replace('\u2212', '-');
+        if (t.equals("inf") || t.equals("+inf") || t.equals("\u221e")) {
+            return OptionalDouble.of(Double.POSITIVE_INFINITY);
+        }
+        if (t.equals("-inf") || t.equals("-\u221e")) {
+            return OptionalDouble.of(Double.NEGATIVE_INFINITY);
+        }
+        if (!NUMBER.matcher(t).matches()) {
+            return OptionalDouble.empty();
+        }
+        double value = Double.parseDouble(t);
+        return Double.isInfinite(value) ? OptionalDouble.empty() : OptionalDouble.of(value);
+    }
+
+    /// The shortest text that reads back as the same number, as `1180`, `0.07`, `1.2568e-5`.
+    public static String show(double value) {
+        if (Double.isInfinite(value)) {
+            return value > 0 ? "inf" : "-inf";
+        }
+        String text = Double.toString(value);
+        int e = text.indexOf('E');
+        String digits = e < 0 ? text : text.substring(0, e);
+        if (digits.endsWith(".0")) {
+            digits = digits.substring(0, digits.length() - 2);
+        }
+        if (e < 0) {
+            return digits;
+        }
+        int power = Integer.parseInt(text.substring(e + 1));
+        return power >= 0 && power <= 15 || power == -4
+                ? new java.math.BigDecimal(text).stripTrailingZeros().toPlainString()
+                : digits + "e" + power;
+    }
+
+    /// What to say about a text that is no number.
+    ///
+    /// @param what the field, as `scale of v`
+    static Problem problem(String what, String text) {
+        String t = text.strip();
+        if (t.isEmpty()) {
+            return Problem.of(capital(what) + " is empty but must be a number");
+        }
+        var problem = Problem.of(capital(what) + " is \u201c" + t + "\u201d but must be a number");
+        if (read(t.replace(',', '.')).isPresent()) {
+            return problem.tryThis("Write the decimal sign as a point: " + t.replace(',', '.'));
+        }
+        return problem.tryThis("Write it as 2.6, 0.07 or 1.5e-3.");
+    }
+
+    private static String capital(String text) {
+        return text.isEmpty() ? text : Character.toUpperCase(text.charAt(0)) + text.substring(1);
+    }
+}

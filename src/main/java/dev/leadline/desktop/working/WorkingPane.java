@@ -1,0 +1,251 @@
+package dev.leadline.desktop.working;
+
+import dev.leadline.desktop.style.Styles;
+import dev.leadline.model.Draft;
+import dev.leadline.problem.Problem;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.function.IntFunction;
+import java.util.function.Supplier;
+import javafx.scene.Node;
+import javafx.scene.control.Button;
+import javafx.scene.control.Label;
+import javafx.scene.control.ScrollPane;
+import javafx.scene.control.Tooltip;
+import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.HBox;
+import javafx.scene.layout.Priority;
+import javafx.scene.layout.Region;
+import javafx.scene.layout.VBox;
+
+/// The left of the window: formulas, inputs, constants, and what is asked of the answer.
+public final class WorkingPane extends BorderPane {
+    private final ProjectViewModel project;
+    private final FormulasViewModel formulas;
+    private final FormulaArea steps = new FormulaArea("Steps, one formula to a line", 2, true);
+    private final Messages stepMessages = new Messages();
+    private final Messages generalMessages = new Messages();
+    private final VBox askRows = new VBox(8);
+    private final VBox inputRows = new VBox();
+    private final VBox constantRows = new VBox();
+    private final List<AskRow> asks = new ArrayList<>();
+    private final List<InputRow> inputs = new ArrayList<>();
+    private final List<ConstantRow> constants = new ArrayList<>();
+    private final InputsViewModel inputsModel;
+    private final ConstantsViewModel constantsModel;
+    private final Supplier<SketchView> sketches;
+    private final DemandsView demands;
+    private final LookView look;
+    private final AboutView about;
+    private final ScrollPane scroll;
+
+    public WorkingPane(ProjectViewModel project, LookViewModel lookModel, Supplier<SketchView> sketches) {
+        this.project = project;
+        this.sketches = sketches;
+        inputsModel = new InputsViewModel(project);
+        constantsModel = new ConstantsViewModel(project);
+        formulas = new FormulasViewModel(project, inputsModel);
+        demands = new DemandsView(new DemandsViewModel(project));
+        look = new LookView(lookModel);
+        about = new AboutView(project);
+        getStyleClass().addAll(Styles.PANE, "working");
+
+        steps.setId("steps");
+        steps.prompt("name = formula   # unit");
+        steps.onTyped(formulas::typeSteps);
+        steps.onPasted(formulas::makeInputsOfUnknownNames);
+        steps.focusedProperty().addListener((_, _, focused) -> {
+            if (!focused) {
+                project.settle();
+            }
+        });
+
+        var moreAsks = link("+ answer", "Asks for another answer from the same draws", formulas::addAsk);
+        moreAsks.setId("add-ask");
+        var addInput = link(
+                "+ random input", "A named variable with a density", () -> openNew(inputsModel.addRandom(fresh("x"))));
+        addInput.setId("add-input");
+        var addRange = link(
+                "+ integration variable",
+                "A variable with a range; legal under an integral",
+                () -> openNew(inputsModel.addRange(fresh("x"))));
+        addRange.setId("add-range");
+        var addConstant = link("+ constant", "A named number with its unit", () -> {
+            int row = constantsModel.add(fresh("c"));
+            constants.get(row).focusName();
+        });
+        addConstant.setId("add-constant");
+
+        var content = new VBox(
+                section("steps", new Label()),
+                steps,
+                stepMessages,
+                section("asked", moreAsks),
+                askRows,
+                generalMessages,
+                section("inputs", addInput, addRange),
+                inputRows,
+                section("constants", addConstant),
+                constantRows,
+                demands.folds(),
+                look.fold(),
+                about.fold());
+        content.getStyleClass().add("content");
+        scroll = new ScrollPane(content);
+        scroll.setFitToWidth(true);
+        scroll.setHbarPolicy(ScrollPane.ScrollBarPolicy.NEVER);
+        setCenter(scroll);
+
+        project.draft().addListener((_, _, _) -> update());
+        project.problems().addListener((_, _, _) -> update());
+        formulas.stepsText().addListener((_, _, _) -> paintSteps());
+        update();
+    }
+
+    public void focusFormula() {
+        reveal(askRows);
+        asks.getFirst().focusFormula();
+    }
+
+    public void focusUnit() {
+        reveal(askRows);
+        asks.getFirst().focusUnit();
+    }
+
+    public void focusInputs() {
+        reveal(inputRows);
+        if (!inputs.isEmpty()) {
+            inputs.getFirst().focusHead();
+        }
+    }
+
+    public void focusTolerance() {
+        demands.openTolerance();
+        reveal(demands.folds());
+    }
+
+    public void focusStop() {
+        demands.openStop();
+        reveal(demands.folds());
+    }
+
+    public void openLook() {
+        look.open();
+        reveal(look.fold());
+    }
+
+    public void openAbout() {
+        about.open();
+        reveal(about.fold());
+    }
+
+    private void update() {
+        Draft d = project.draft().get();
+        refill(asks, askRows, d.asks().size(), i -> new AskRow(formulas, i));
+        refill(
+                inputs,
+                inputRows,
+                d.inputs().size(),
+                i -> new InputRow(inputsModel, i, sketches.get(), this::closeOthers));
+        refill(constants, constantRows, d.constants().size(), i -> new ConstantRow(constantsModel, i));
+        var colouring = Colouring.of(d);
+        asks.forEach(row -> row.update(colouring));
+        inputs.forEach(InputRow::update);
+        constants.forEach(ConstantRow::update);
+        demands.update();
+        about.update();
+        paintSteps();
+        generalMessages.show(unplaced());
+    }
+
+    private void paintSteps() {
+        String text = formulas.stepsText().get();
+        steps.show(text);
+        var faults = formulas.stepFaults();
+        var marks = new ArrayList<int[]>();
+        var lines = text.split("\n", -1);
+        int start = 0;
+        for (int line = 0; line < lines.length; line++) {
+            for (var f : faults) {
+                if (f.line() == line && f.problem().place().span().isPresent()) {
+                    marks.add(new int[] {start + f.from(), start + f.to()});
+                }
+            }
+            start += lines[line].length() + 1;
+        }
+        steps.paint(Colouring.of(project.draft().get()).of(text), marks);
+        stepMessages.showIn(faults, text);
+    }
+
+    /// Problems that no field and no formula shows.
+    private List<Problem> unplaced() {
+        return project.problems().get().stream()
+                .filter(p -> !FormulasViewModel.isInFormulas(p.place())
+                        && !p.place().path().matches("\\$\\.(inputs|constants)\\[.*")
+                        && !p.place().path().matches("\\$\\.(tolerance|confidence|stop|reference).*"))
+                .toList();
+    }
+
+    private static <R extends Node> void refill(List<R> rows, VBox box, int size, IntFunction<R> row) {
+        while (rows.size() > size) {
+            box.getChildren().remove(rows.removeLast());
+        }
+        while (rows.size() < size) {
+            rows.add(row.apply(rows.size()));
+            box.getChildren().add(rows.getLast());
+        }
+    }
+
+    private void openNew(int row) {
+        inputs.get(row).open();
+        inputs.get(row).focusHead();
+    }
+
+    private void closeOthers(InputRow opened) {
+        inputs.stream().filter(row -> row != opened).forEach(InputRow::close);
+    }
+
+    /// A name that nothing has yet.
+    private String fresh(String stem) {
+        var known = InputsViewModel.known(project.draft().get());
+        String name = stem;
+        for (int i = 1; known.contains(name); i++) {
+            name = stem + i;
+        }
+        return name;
+    }
+
+    private void reveal(Node node) {
+        scroll.applyCss();
+        scroll.layout();
+        var content = scroll.getContent();
+        double hidden = content.getLayoutBounds().getHeight()
+                - scroll.getViewportBounds().getHeight();
+        if (hidden > 0) {
+            double y = content.sceneToLocal(node.localToScene(0, 0)).getY();
+            scroll.setVvalue(Math.clamp((y - 24) / hidden, 0, 1));
+        }
+    }
+
+    private static Node section(String title, Node... actions) {
+        var label = new Label(title);
+        label.setMinWidth(USE_PREF_SIZE);
+        var rule = new Region();
+        rule.getStyleClass().add("rule");
+        rule.setMaxHeight(1);
+        HBox.setHgrow(rule, Priority.ALWAYS);
+        var box = new HBox(8, label, rule);
+        box.getChildren().addAll(actions);
+        box.getStyleClass().add(Styles.SECTION);
+        return box;
+    }
+
+    private static Button link(String text, String tip, Runnable action) {
+        var button = new Button(text);
+        button.getStyleClass().setAll("button", Styles.LINK);
+        button.setTooltip(new Tooltip(tip));
+        button.setMinWidth(USE_PREF_SIZE);
+        button.setOnAction(_ -> action.run());
+        return button;
+    }
+}
