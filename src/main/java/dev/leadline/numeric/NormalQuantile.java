@@ -3,12 +3,11 @@ package dev.leadline.numeric;
 /// Quantiles of the standard normal distribution, the work behind [Normal#quantile(double)].
 ///
 /// For `|p - 1/2| <= 1/4` an odd polynomial in `p - 1/2`; outside, with `r = sqrt(-log min(p, 1-p))`, a rational
-/// function of `r`
-/// below 4.4 and another one above. Relative errors of the three forms before rounding: 1e-17, 3e-17, 6e-17.
+/// function of `r` below 4.4 and another one above. Relative errors of the three forms before rounding: 1e-17, 3e-17,
+/// 6e-17.
 ///
 /// Source: division of the range after Wichura (1988), Algorithm AS 241, Applied Statistics 37, 477-484; coefficients
-/// are
-/// our own fit.
+/// are our own fit.
 final class NormalQuantile {
     private static final long SIGN = Long.MIN_VALUE;
 

@@ -3,9 +3,8 @@ package dev.leadline.numeric;
 /// `e^(-h) S(x)` for `x >= 0`, the part that the error function and the normal distribution share.
 ///
 /// `S(x) = e^(x^2) erfc(x)`, and `(1 + 2 x) S(x)` is a polynomial of degree 22 in `t = (x - 4) / (x + 4)`, with a
-/// relative
-/// error of 2e-17 up to `x = 28`. The exponent `h` is `x^2` for the one and half the square of another number for the
-/// other, and comes as a pair of doubles: where `h` is 700, its rounding alone would cost 500 ulp.
+/// relative error of 2e-17 up to `x = 28`. The exponent `h` is `x^2` for the one and half the square of another number
+/// for the other, and comes as a pair of doubles: where `h` is 700, its rounding alone would cost up to 500 ulp.
 ///
 /// Source: form after Shepherd and Laframboise (1981), Mathematics of Computation 36, 249-253; coefficients are our
 /// own minimax fit.

@@ -97,7 +97,7 @@ public final class Power {
     /// @param z results; may be `x`
     public static void pow(double[] x, double exponent, double[] z, int n) {
         if (exponent == 0.5) {
-            for (int i = 0; i < n; i++) z[i] = root(x[i]);
+            rootBlock(x, z, n);
         } else if (isProduct(exponent)) {
             productBlock(x, (int) exponent, z, n);
         } else {
@@ -129,6 +129,16 @@ public final class Power {
     /// `+0` for `-0` and `+∞` for `-∞`, unlike the square root.
     private static double root(double x) {
         return x == Double.NEGATIVE_INFINITY ? Double.POSITIVE_INFINITY : Math.sqrt(x) + 0.0;
+    }
+
+    private static void rootBlock(double[] x, double[] z, int n) {
+        long signs = 0;
+        for (int i = 0; i < n; i++) signs |= Double.doubleToRawLongBits(x[i]);
+        if (signs < 0) {
+            for (int i = 0; i < n; i++) z[i] = root(x[i]);
+        } else {
+            for (int i = 0; i < n; i++) z[i] = Math.sqrt(x[i]) + 0.0;
+        }
     }
 
     private static double product(double x, int k) {

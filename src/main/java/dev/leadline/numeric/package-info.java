@@ -1,7 +1,8 @@
 /// Numerical work that knows nothing of draws: elementary kernels, the normal distribution, rounding to the
 /// uncertainty.
 ///
-/// Start with [dev.leadline.numeric.Exp], whose two forms are those of every kernel, and [dev.leadline.numeric.Normal].
+/// Start with [dev.leadline.numeric.Exp], whose two forms are those of every kernel, [dev.leadline.numeric.Normal]
+/// and [dev.leadline.numeric.Rounding].
 ///
 /// A **kernel** is a function in two forms, one value and a block of values. Both give the same bits, on every machine,
 /// JDK and compiler tier, because they use only `+ - * /`, `Math.sqrt`, `Math.fma` and moves of bits, all of which

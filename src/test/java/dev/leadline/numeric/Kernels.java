@@ -59,8 +59,7 @@ final class Kernels {
     }
 
     /// Asserts that no error exceeds `bound` ulp and that the largest one seen is at least a third of it: a bound far
-    /// from
-    /// what is observed would guard nothing.
+    /// from what is observed would guard nothing.
     static void within(
             double bound,
             DoubleUnaryOperator kernel,
