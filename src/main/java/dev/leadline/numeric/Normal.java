@@ -6,7 +6,8 @@ package dev.leadline.numeric;
 /// as a pair of doubles, and `1 - Φ(-x)` above. The upper tail is `cdf(-x)`.
 ///
 /// Special values: `cdf(-∞)` is 0, `cdf(+∞)` is 1, `pdf(±∞)` is 0, NaN gives NaN. `cdf` is subnormal below
-/// -37.519 and 0 below -38.486, `pdf` subnormal beyond 37.616 and 0 beyond 38.581. `quantile(0)` is -∞, `quantile(1)` is +∞, outside 0 to 1 it is NaN.
+/// -37.519 and 0 below -38.486, `pdf` subnormal beyond 37.616 and 0 beyond 38.581. `quantile(0)` is -∞, `quantile(1)`
+/// is +∞, outside 0 to 1 it is NaN.
 ///
 /// Error: `cdf` 5 ulp, `pdf` 2 ulp, `quantile` 5 ulp (`NormalTest`).
 public final class Normal {

@@ -5,8 +5,8 @@ import java.math.MathContext;
 import java.math.RoundingMode;
 import java.util.Optional;
 
-/// How the numbers of one estimate are written: the uncertainty to two significant digits, the value to the same decimal
-/// place, interval limits to that place too but outwards, so that the printed interval contains the computed one.
+/// How the numbers of one estimate are written: the uncertainty to two significant digits, the value to the same
+/// decimal place, interval limits to that place too but outwards, so that the printed interval contains the computed one.
 ///
 /// All numbers of an estimate share a notation: decimal places, or one common power of ten (`1.2568e-5` and
 /// `0.0040e-5`) where the larger of value and uncertainty is below 1e-4, or at least 1e7 with figures that mean nothing
@@ -33,7 +33,8 @@ public record Rounding(String value, Optional<String> uncertainty, Optional<Inte
     ///
     /// @param uncertainty at least 0, or NaN where it is not known
     public static Rounding of(double value, double uncertainty) {
-        if (uncertainty < 0) throw new IllegalArgumentException("Uncertainty is " + uncertainty + " but must be at least 0");
+        if (uncertainty < 0)
+            throw new IllegalArgumentException("Uncertainty is " + uncertainty + " but must be at least 0");
         if (!(uncertainty > 0 && uncertainty < Double.POSITIVE_INFINITY)) {
             Optional<String> end = uncertainty > 0 ? Optional.of(unrounded(uncertainty)) : Optional.empty();
             return new Rounding(unrounded(value), end, Optional.empty(), 0);
@@ -42,10 +43,10 @@ public record Rounding(String value, Optional<String> uncertainty, Optional<Inte
         // 5 has one digit and is written 5.0
         int place = 1 - DIGITS + leadingPlace(rounded);
         BigDecimal size = rounded;
-        if (Double.isFinite(value)) size = size.max(toPlace(value, place, RoundingMode.HALF_EVEN).abs());
-        boolean isPower = size.compareTo(SMALL) < 0
-                || size.compareTo(LARGE) >= 0 && place > 0
-                || size.compareTo(HUGE) >= 0;
+        if (Double.isFinite(value))
+            size = size.max(toPlace(value, place, RoundingMode.HALF_EVEN).abs());
+        boolean isPower =
+                size.compareTo(SMALL) < 0 || size.compareTo(LARGE) >= 0 && place > 0 || size.compareTo(HUGE) >= 0;
         int exponent = isPower ? leadingPlace(size) : 0;
         return new Rounding(
                 write(value, place, exponent, RoundingMode.HALF_EVEN),
@@ -81,7 +82,8 @@ public record Rounding(String value, Optional<String> uncertainty, Optional<Inte
         if (Double.isInfinite(number)) return number > 0 ? "∞" : "-∞";
         BigDecimal decimal = decimal(number);
         BigDecimal size = decimal.abs();
-        if (size.signum() == 0 || size.compareTo(SMALL) >= 0 && size.compareTo(HUGE) < 0) return decimal.toPlainString();
+        if (size.signum() == 0 || size.compareTo(SMALL) >= 0 && size.compareTo(HUGE) < 0)
+            return decimal.toPlainString();
         int exponent = leadingPlace(size);
         BigDecimal mantissa = decimal.movePointLeft(exponent).stripTrailingZeros();
         return mantissa.setScale(Math.max(1, mantissa.scale())).toPlainString() + "e" + exponent;

@@ -60,7 +60,8 @@ class RoundingTest {
     void agreesWithCommonPractice() {
         int checked = 0;
         for (var expected : ReferenceValues.record("prop-rounding-report").get("expected")) {
-            String[] pair = expected.get("name").asString().replaceAll("[()]", "").split(", ");
+            String[] pair =
+                    expected.get("name").asString().replaceAll("[()]", "").split(", ");
             Rounding rounding = Rounding.of(Double.parseDouble(pair[0]), Double.parseDouble(pair[1]));
             String shown = rounding.value()
                     + rounding.uncertainty().map(half -> " +/- " + half).orElse(" exact");
@@ -73,7 +74,16 @@ class RoundingTest {
 
     /// Nothing is rounded, and `± 0` is never printed.
     @ParameterizedTest
-    @CsvSource({"5, 5.0", "0, 0.0", "0.1, 0.1", "-0.00025, -0.00025", "1.25e-7, 1.25e-7", "1e20, 1.0e20", "12345678.5, 12345678.5", "NaN, NaN"})
+    @CsvSource({
+        "5, 5.0",
+        "0, 0.0",
+        "0.1, 0.1",
+        "-0.00025, -0.00025",
+        "1.25e-7, 1.25e-7",
+        "1e20, 1.0e20",
+        "12345678.5, 12345678.5",
+        "NaN, NaN"
+    })
     void withoutUncertaintyTheShortestDecimal(double value, String expected) {
         for (double none : new double[] {0, Double.NaN}) {
             Rounding rounding = Rounding.of(value, none);
@@ -102,12 +112,12 @@ class RoundingTest {
         assertEquals("Uncertainty is -0.1 but must be at least 0", refusal.getMessage());
     }
 
-    /// For 20,000 random estimates of every size: what is printed is off by at most half a unit of the last place, limits
-    /// by less than one and outwards, and the uncertainty shows two digits.
+    /// For 5,000 random estimates of every size: what is printed is off by at most half a unit of the last place,
+    /// limits by less than one and outwards, and the uncertainty shows two digits.
     @Test
     void printedNumbersAreWhatWasComputed() {
         SplittableRandom random = new SplittableRandom(1);
-        for (int i = 0; i < 20_000; i++) {
+        for (int i = 0; i < 5_000; i++) {
             double value = random.nextDouble(-1, 1) * Math.pow(10, random.nextInt(-30, 30));
             double uncertainty = Math.abs(value) * Math.pow(10, random.nextDouble(-8, 4));
             String at = value + " ± " + uncertainty;
