@@ -7,18 +7,27 @@ import java.util.OptionalLong;
 ///
 /// An observation with any component that is not finite is left whole out of the sums and counted in [#excluded()].
 ///
-/// The bits depend on how the observations are divided over calls of [#add] and [#merge], and on their order, so those
-/// must be fixed; the values hardly do.
+/// The bits depend on the order of the observations and on how they are divided over calls of [#add] and [#merge], so
+/// those must be fixed.
+///
+/// Error: on a million values of standard deviation 1 and mean 0 to 1e8, one ulp in the mean and a relative 1e-14 in
+/// the
+/// variance; each merge may add 2^-53 to the variance (`AccumulatorTest`). Squares of deviations overflow from 1e154,
+/// cubes from 1e102, fourth powers from 1e77: then the variance is infinite, skewness or kurtosis `NaN`, and all else
+/// as
+/// it should be.
+///
+/// Cost: .9 ns for an observation of one component in blocks of 1,024, 2.6 ns for two, 6.4 ns for four.
+///
+/// Source: Chan, Golub and LeVeque (1983), The American Statistician 37, 242-247; Pébay (2008), SAND2008-6212.
 public final class Accumulator {
-    /// Observations reduced at a time, by two passes over numbers that stay in the first cache.
-    private static final int BLOCK = 1024;
-
     private final int components;
     private final Sums total;
-    private final Sums block;
-    private final double[][] kept;
-    private final double[][] deviations;
+    private final Block block;
     private long excluded;
+
+    /// The finite observations of a block that has others; made when first needed.
+    private double[][] kept;
 
     /// @param components of an observation, at least 1
     public Accumulator(int components) {
@@ -27,9 +36,7 @@ public final class Accumulator {
         }
         this.components = components;
         total = new Sums(components);
-        block = new Sums(components);
-        kept = new double[components][BLOCK];
-        deviations = new double[components][BLOCK];
+        block = new Block(components);
     }
 
     /// Adds the observations with indices `from` (inclusive) to `to` (exclusive).
@@ -39,37 +46,28 @@ public final class Accumulator {
         if (values.length != components) {
             throw new IllegalArgumentException(values.length + " components where " + components + " were declared");
         }
-        for (int start = from; start < to; start += BLOCK) {
-            addBlock(values, start, Math.min(start + BLOCK, to));
+        for (int start = from; start < to; start += Block.SIZE) {
+            addBlock(values, start, Math.min(start + Block.SIZE, to));
         }
     }
 
     private void addBlock(double[][] values, int from, int to) {
-        long bad = 0;
-        for (double[] column : values) {
-            bad |= notFinite(column, from, to);
+        if (block.reduce(values, from, to)) {
+            total.merge(block.sums());
+            return;
         }
-        if (bad < 0) {
-            int rows = keepFinite(values, from, to);
-            excluded += to - from - rows;
-            reduce(kept, 0, rows);
-        } else {
-            reduce(values, from, to);
+        int rows = keepFinite(values, from, to);
+        excluded += to - from - rows;
+        if (rows > 0) {
+            block.reduce(kept, 0, rows);
+            total.merge(block.sums());
         }
-        total.merge(block);
-    }
-
-    /// Negative where some value is infinite or not a number: its exponent is all ones, and one more carries into the
-    /// sign.
-    private static long notFinite(double[] x, int from, int to) {
-        long carry = 0;
-        for (int i = from; i < to; i++) {
-            carry |= (Double.doubleToRawLongBits(x[i]) & 0x7FF0000000000000L) + 0x0010000000000000L;
-        }
-        return carry;
     }
 
     private int keepFinite(double[][] values, int from, int to) {
+        if (kept == null) {
+            kept = new double[components][Block.SIZE];
+        }
         int rows = 0;
         for (int i = from; i < to; i++) {
             boolean finite = true;
@@ -84,80 +82,7 @@ public final class Accumulator {
         return rows;
     }
 
-    private void reduce(double[][] values, int from, int to) {
-        block.clear();
-        if (from == to) {
-            return;
-        }
-        block.count = to - from;
-        for (int k = 0; k < components; k++) {
-            reduceComponent(values[k], from, to, k);
-            for (int j = 0; j < k; j++) {
-                block.products[Sums.at(k, j)] = product(deviations[k], deviations[j], to - from);
-            }
-        }
-    }
-
-    private void reduceComponent(double[] x, int from, int to, int k) {
-        int n = to - from;
-        double low = x[from];
-        double high = x[from];
-        double sum = 0;
-        for (int i = from; i < to; i++) {
-            low = Math.min(low, x[i]);
-            high = Math.max(high, x[i]);
-            sum += x[i];
-        }
-        block.min[k] = low;
-        block.max[k] = high;
-        double mean = low == high ? low : sum / n;
-        if (Double.isInfinite(mean)) {
-            mean = 0;
-            for (int i = from; i < to; i++) {
-                mean += x[i] / n;
-            }
-        }
-        double[] d = deviations[k];
-        double rest = 0;
-        double squares = 0;
-        double cubes = 0;
-        double fourths = 0;
-        for (int i = 0; i < n; i++) {
-            double e = x[from + i] - mean;
-            d[i] = e;
-            double square = e * e;
-            rest += e;
-            squares += square;
-            cubes += square * e;
-            fourths += square * square;
-        }
-        block.mean[k] = mean + rest / n;
-        block.products[Sums.at(k, k)] = squares;
-        block.cubes[k] = cubes;
-        block.fourths[k] = fourths;
-        countOnes(x, from, to, k);
-    }
-
-    private void countOnes(double[] x, int from, int to, int k) {
-        long ones = 0;
-        long others = 0;
-        for (int i = from; i < to; i++) {
-            ones += x[i] == 1 ? 1 : 0;
-            others += x[i] == 0 || x[i] == 1 ? 0 : 1;
-        }
-        block.ones[k] = ones;
-        block.zeroOrOne[k] = others == 0;
-    }
-
-    private static double product(double[] a, double[] b, int n) {
-        double sum = 0;
-        for (int i = 0; i < n; i++) {
-            sum += a[i] * b[i];
-        }
-        return sum;
-    }
-
-    /// Adds what `later` has seen, as if its observations had come after those seen here.
+    /// Adds what `later` has seen, as if its observations had come after those seen here; `later` stays as it is.
     public void merge(Accumulator later) {
         if (later.components != components) {
             throw new IllegalArgumentException(
@@ -214,29 +139,28 @@ public final class Accumulator {
         return Math.sqrt(variance(k) / total.count);
     }
 
-    /// Sample skewness G1 of Joanes and Gill (1998); `NaN` for fewer than three observations or where there is no
-    /// spread.
+    /// Sample skewness G1 of Joanes and Gill (1998), The Statistician 47, 183-189. `NaN` for fewer than three
+    /// observations, where there is no spread, and where cubes of deviations leave the range of numbers.
     public double skewness(int k) {
         double n = total.count;
-        double squares = total.products[Sums.at(k, k)];
-        if (total.count < 3 || constant(k)) {
-            return Double.NaN;
-        }
-        double spread = squares / n;
-        return total.cubes[k] / n / (spread * Math.sqrt(spread)) * (Math.sqrt(n * (n - 1)) / (n - 2));
+        double spread = total.products[Sums.at(k, k)] / n;
+        return total.count < 3
+                ? Double.NaN
+                : ratio(total.cubes[k] / n, spread * Math.sqrt(spread), k) * (Math.sqrt(n * (n - 1)) / (n - 2));
     }
 
-    /// Sample excess kurtosis G2 of Joanes and Gill (1998), 0 in expectation for normal data; `NaN` for fewer than four
-    /// observations or where there is no spread.
+    /// Sample excess kurtosis G2 of Joanes and Gill (1998), 0 in expectation for normal data. `NaN` for fewer than four
+    /// observations, where there is no spread, and where fourth powers of deviations leave the range of numbers.
     public double excessKurtosis(int k) {
         double n = total.count;
-        double squares = total.products[Sums.at(k, k)];
-        if (total.count < 4 || constant(k)) {
-            return Double.NaN;
-        }
-        double spread = squares / n;
-        double g2 = total.fourths[k] / n / (spread * spread) - 3;
-        return (n - 1) / ((n - 2) * (n - 3)) * ((n + 1) * g2 + 6);
+        double spread = total.products[Sums.at(k, k)] / n;
+        double g2 = ratio(total.fourths[k] / n, spread * spread, k) - 3;
+        return total.count < 4 ? Double.NaN : (n - 1) / ((n - 2) * (n - 3)) * ((n + 1) * g2 + 6);
+    }
+
+    /// `NaN` rather than the quotient of sums that overflowed, or lost digits by underflow.
+    private double ratio(double moment, double spread, int k) {
+        return !constant(k) && spread > 1e-290 && Double.isFinite(moment) ? moment / spread : Double.NaN;
     }
 
     /// `∞` where there is no observation.

@@ -8,6 +8,11 @@ final class Sums {
     long count;
     final double[] mean;
 
+    /// What is missing from each mean: a mean is carried as the unrounded sum of both, since one rounding for each
+    /// block
+    /// would add up to more than the standard error where the mean is large beside the spread.
+    final double[] meanRest;
+
     /// Sums of products of deviations of components j ≥ k, at `j(j+1)/2 + k`.
     final double[] products;
 
@@ -29,6 +34,7 @@ final class Sums {
     Sums(int components) {
         this.components = components;
         mean = new double[components];
+        meanRest = new double[components];
         products = new double[at(components, 0)];
         cubes = new double[components];
         fourths = new double[components];
@@ -36,28 +42,19 @@ final class Sums {
         max = new double[components];
         ones = new long[components];
         zeroOrOne = new boolean[components];
-        clear();
+        Arrays.fill(min, Double.POSITIVE_INFINITY);
+        Arrays.fill(max, Double.NEGATIVE_INFINITY);
+        Arrays.fill(zeroOrOne, true);
     }
 
     static int at(int j, int k) {
         return j * (j + 1) / 2 + k;
     }
 
-    void clear() {
-        count = 0;
-        Arrays.fill(mean, 0);
-        Arrays.fill(products, 0);
-        Arrays.fill(cubes, 0);
-        Arrays.fill(fourths, 0);
-        Arrays.fill(min, Double.POSITIVE_INFINITY);
-        Arrays.fill(max, Double.NEGATIVE_INFINITY);
-        Arrays.fill(ones, 0);
-        Arrays.fill(zeroOrOne, true);
-    }
-
     void set(Sums other) {
         count = other.count;
         copy(other.mean, mean);
+        copy(other.meanRest, meanRest);
         copy(other.products, products);
         copy(other.cubes, cubes);
         copy(other.fourths, fourths);
@@ -71,10 +68,7 @@ final class Sums {
         System.arraycopy(from, 0, to, 0, to.length);
     }
 
-    /// Adds what `later` has seen; shares of the count, not counts, so that no power of them overflows.
-    ///
-    /// Source: Pébay (2008), Formulas for robust, one-pass parallel computation of covariances and arbitrary-order
-    /// statistical moments, SAND2008-6212.
+    /// Adds what `later` has seen: Pébay's pairwise formulas, in shares of the count so that no power of it overflows.
     void merge(Sums later) {
         if (later.count == 0) {
             return;
@@ -88,7 +82,7 @@ final class Sums {
         double a = here / (here + there);
         double b = there / (here + there);
         for (int j = 0; j < components; j++) {
-            double d = later.mean[j] - mean[j];
+            double d = toMean(later, j);
             double m2a = products[at(j, j)];
             double m2b = later.products[at(j, j)];
             fourths[j] += later.fourths[j]
@@ -98,7 +92,7 @@ final class Sums {
                                     + 4 * (a * later.cubes[j] - b * cubes[j]));
             cubes[j] += later.cubes[j] + d * (here * b * (a - b) * d * d + 3 * (a * m2b - b * m2a));
             for (int k = 0; k <= j; k++) {
-                products[at(j, k)] += later.products[at(j, k)] + here * b * d * (later.mean[k] - mean[k]);
+                products[at(j, k)] += later.products[at(j, k)] + here * b * d * toMean(later, k);
             }
             min[j] = Math.min(min[j], later.min[j]);
             max[j] = Math.max(max[j], later.max[j]);
@@ -106,8 +100,28 @@ final class Sums {
             zeroOrOne[j] &= later.zeroOrOne[j];
         }
         for (int j = 0; j < components; j++) {
-            mean[j] += b * (later.mean[j] - mean[j]);
+            double d = toMean(later, j);
+            if (Double.isFinite(d)) {
+                moveMean(j, b * d);
+            } else {
+                mean[j] = a * mean[j] + b * later.mean[j];
+                meanRest[j] = 0;
+            }
         }
         count += later.count;
+    }
+
+    private double toMean(Sums later, int k) {
+        return (later.mean[k] - mean[k]) + (later.meanRest[k] - meanRest[k]);
+    }
+
+    /// Adds to a mean and keeps what rounding takes away: Knuth's exact sum of two numbers.
+    void moveMean(int k, double by) {
+        double old = mean[k];
+        double step = by + meanRest[k];
+        double moved = old + step;
+        double back = moved - old;
+        mean[k] = moved;
+        meanRest[k] = (old - (moved - back)) + (step - back);
     }
 }

@@ -1,9 +1,11 @@
 package dev.leadline.interval;
 
 import java.util.Optional;
-import org.apache.commons.statistics.distribution.BetaDistribution;
 
 /// The exact interval of Clopper and Pearson for a probability, from hits among independent draws.
+///
+/// It covers with at least its level, often with more. Error of the limits: a relative 1e-14, to 1e11 draws
+/// (`ClopperPearsonTest`).
 ///
 /// Source: Clopper and Pearson (1934), Biometrika 26, 404-413.
 public final class ClopperPearson {
@@ -77,10 +79,25 @@ public final class ClopperPearson {
     }
 
     private static double low(long k, long n, double tail) {
-        return k == 0 ? 0 : BetaDistribution.of(k, n - k + 1).inverseCumulativeProbability(tail);
+        return k == 0 ? 0 : k == n ? allHits(n, tail) : probability(k, n - k + 1, -LogOdds.upper(n - k + 1, k, tail));
     }
 
     private static double high(long k, long n, double tail) {
-        return k == n ? 1 : BetaDistribution.of(k + 1, n - k).inverseSurvivalProbability(tail);
+        return k == n ? 1 : k == 0 ? noHit(n, tail) : probability(k + 1, n - k, LogOdds.upper(k + 1, n - k, tail));
+    }
+
+    /// `p^n = tail`.
+    private static double allHits(long n, double tail) {
+        return StrictMath.exp(StrictMath.log(tail) / n);
+    }
+
+    /// `(1-p)^n = tail`.
+    private static double noHit(long n, double tail) {
+        return -StrictMath.expm1(StrictMath.log(tail) / n);
+    }
+
+    private static double probability(double a, double b, double s) {
+        double odds = a / b * StrictMath.exp(s);
+        return odds / (1 + odds);
     }
 }

@@ -20,7 +20,7 @@ final class Rounded {
 
     private static String rounded(double limit, RoundingMode mode) {
         return Double.toString(
-                new BigDecimal(limit).round(new MathContext(3, mode)).doubleValue());
+                BigDecimal.valueOf(limit).round(new MathContext(3, mode)).doubleValue());
     }
 
     /// A level as `95 %`.

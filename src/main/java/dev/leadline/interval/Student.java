@@ -2,9 +2,12 @@ package dev.leadline.interval;
 
 import dev.leadline.estimate.Accumulator;
 import java.util.Optional;
-import org.apache.commons.statistics.distribution.TDistribution;
 
 /// Student's t interval for a mean of independent observations.
+///
+/// Error: a relative 1e-14 in the quantile from 1 to 1e12 degrees of freedom, at levels from .001 to 1 - 1e-9
+/// (`StudentTest`). Coverage falls short where the observations are skewed and few: 92 % of the 95 % intervals from 100
+/// lognormal (σ = 1) observations hold their mean (`CoverageTest`).
 public final class Student {
     /// Word of the project file and of the commands.
     public static final String KIND = "student";
@@ -37,7 +40,7 @@ public final class Student {
                             + "): no spread to build an interval from; at most a part" + " of probability below 3/n = "
                             + Rounded.up(3.0 / n) + " may be unseen");
         }
-        double half = quantile(n - 1, (1 - level) / 2) * standardError;
+        double half = quantile(n - 1, level) * standardError;
         if (!Double.isFinite(half) || !Double.isFinite(mean)) {
             return none(level, "the values are too large for an interval: their squares overflow");
         }
@@ -48,11 +51,10 @@ public final class Student {
         return new Interval(Double.NaN, Double.NaN, level, KIND, ASSUMPTION, Optional.of(note));
     }
 
-    /// The t with `P(T > t) = tail`.
-    ///
-    /// @param degrees of freedom, 1 or more
-    /// @param tail in (0, 1/2]
-    static double quantile(long degrees, double tail) {
-        return TDistribution.of(degrees).inverseSurvivalProbability(tail);
+    /// The t with `P(|T| < t) = level`: T² is the odds of a Beta(1/2, ν/2) variable times ν.
+    static double quantile(long degrees, double level) {
+        double half = degrees / 2.0;
+        double s = level > 0.5 ? LogOdds.upper(0.5, half, 1 - level) : -LogOdds.upper(half, 0.5, level);
+        return StrictMath.exp(s / 2);
     }
 }
