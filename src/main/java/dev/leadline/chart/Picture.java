@@ -26,6 +26,9 @@ import org.jfree.chart.ui.RectangleInsets;
 /// The *Settling* picture laid out for a size: it can be drawn, says what stands at a pixel, and answers to a mouse
 /// with the next [View]. Pixels count from the top left and do not depend on the scale of an image.
 ///
+/// Cost: layout and drawing of one lane with 1,534 marks at 1200 by 700 took a median of 11 ms of processor time
+/// and 27 ms at most (40 runs after warm-up, one of two busy cores; `ShowPictures` in the tests measures it).
+///
 /// Confined to one thread at a time, because the axes of the charting library are; nothing in it changes after it was
 /// made.
 public final class Picture {
