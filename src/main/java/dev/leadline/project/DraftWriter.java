@@ -68,14 +68,14 @@ final class DraftWriter {
         return fields.build();
     }
 
-    private static Json end(double end) {
+    static Json end(double end) {
         if (Double.isInfinite(end)) {
             return Json.of(end < 0 ? "-inf" : "inf");
         }
         return Json.orNull(end);
     }
 
-    private static Json density(DensityDraft density) {
+    static Json density(DensityDraft density) {
         var fields = Json.object().put("family", density.family());
         density.parameters().forEach((name, value) -> number(fields, name, value));
         return fields.build();

@@ -58,9 +58,9 @@ final class JsonReader {
                 parser.nextToken();
                 Json whole = reader.value(JsonPath.WHOLE);
                 if (parser.nextToken() != null) {
-                    throw new Refusal(reader.here(
-                            "more text stands after the end of the project",
-                            parser.currentTokenLocation().getCharOffset()));
+                    long offset = parser.currentTokenLocation().getCharOffset();
+                    throw new Refusal(reader.here("more text stands after the end of the project", offset)
+                            .tryThis("Remove it, or see whether a bracket closes too early."));
                 }
                 return whole;
             } catch (StreamConstraintsException e) {

@@ -1,0 +1,41 @@
+package dev.leadline.cli;
+
+import dev.leadline.model.Question;
+import dev.leadline.model.Sentence;
+import dev.leadline.project.ProblemsJson;
+import java.util.List;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.ParseResult;
+
+/// `check`: is the project sound?
+final class CheckCommand implements Command {
+
+    @Override
+    public String name() {
+        return "check";
+    }
+
+    @Override
+    public CommandSpec spec() {
+        return Arguments.command(
+                        name(),
+                        "Check a project without running it: every problem at once, each with its place.",
+                        "leadline check mooring-line.leadline",
+                        "leadline check mooring-line.leadline --json")
+                .addPositional(Arguments.project());
+    }
+
+    @Override
+    public int run(ParseResult arguments, Console console) {
+        var open = OpenProject.of(Arguments.project(arguments));
+        open.printNotes(console, Arguments.has(arguments, "--quiet"));
+        if (Arguments.has(arguments, "--json")) {
+            console.out().print(ProblemsJson.of(List.of()));
+        } else {
+            Question question = open.project().question();
+            console.out().println(Sentence.of(question));
+            console.out().println("No problem found.");
+        }
+        return Commands.DONE;
+    }
+}

@@ -1,0 +1,104 @@
+package dev.leadline.cli;
+
+import dev.leadline.chart.Caption;
+import dev.leadline.chart.Export;
+import dev.leadline.chart.Picture;
+import dev.leadline.chart.Settling;
+import dev.leadline.chart.View;
+import dev.leadline.model.Plan;
+import dev.leadline.model.Question;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import dev.leadline.project.RunJson;
+import dev.leadline.study.LaneState;
+import dev.leadline.study.StudyState;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Locale;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Model.OptionSpec;
+import picocli.CommandLine.ParseResult;
+
+/// `figure`: runs a project and draws its *Settling* picture into a file.
+final class FigureCommand implements Command {
+
+    private static final int MOST_PIXELS = 8000;
+
+    @Override
+    public String name() {
+        return "figure";
+    }
+
+    @Override
+    public CommandSpec spec() {
+        var spec = Arguments.command(
+                name(),
+                "Run a project and draw how its estimate settled, with the interval, the reference and the tolerance.",
+                "leadline figure mooring-line.leadline -o settling.png",
+                "leadline figure mooring-line.leadline -o settling.svg --width 900 --height 500 --draws 1e6");
+        spec.addPositional(Arguments.project());
+        spec.addOption(OptionSpec.builder("-o", "--output")
+                .paramLabel("FILE")
+                .arity("1")
+                .type(Path.class)
+                .required(true)
+                .description("The file to write, .png or .svg; replaced where it is there.")
+                .build());
+        spec.addOption(size("--width", Picture.LEAST_WIDTH, "Pixels across, at 96 to the inch (1000 if left out)."));
+        spec.addOption(size("--height", Picture.LEAST_HEIGHT, "Pixels down (600 if left out)."));
+        spec.addOption(Arguments.option(
+                "--dpi", "N", Long.class, Arguments.whole(24, 1200), "Dots to the inch of a PNG (192 if left out)."));
+        RunArguments.addTo(spec);
+        return spec;
+    }
+
+    @Override
+    public int run(ParseResult arguments, Console console) throws InterruptedException {
+        Path file = arguments.matchedOptionValue("--output", Path.of(""));
+        boolean png = isPng(file);
+        int width = (int) Arguments.whole(arguments, "--width").orElse(1000);
+        int height = (int) Arguments.whole(arguments, "--height").orElse(600);
+        int dpi = (int) Arguments.whole(arguments, "--dpi").orElse(192);
+        boolean quiet = Arguments.has(arguments, "--quiet");
+        var open = OpenProject.of(Arguments.project(arguments));
+        open.printNotes(console, quiet);
+        Question question = open.project().question();
+        Plan plan = RunArguments.override(open.project().plan(), arguments);
+        StudyState state = RunCommand.run(question, plan, RunArguments.threads(arguments), console, quiet);
+        var settling = Settling.of(
+                question, plan, state.lanes().stream().map(LaneState::trace).toList());
+        if (png) {
+            Export.png(settling, View.FOLLOWING, width, height, dpi, file);
+        } else {
+            Export.svg(settling, View.FOLLOWING, width, height, file);
+        }
+        if (Arguments.has(arguments, "--json")) {
+            console.out().print(RunJson.of(open.name(), open.project(), plan, state));
+        } else {
+            console.out().println(Caption.of(settling));
+            console.out().println("Written to " + file);
+        }
+        return RunCommand.exitCode(question, state);
+    }
+
+    private static OptionSpec size(String name, int least, String description) {
+        return Arguments.option(name, "PX", Long.class, Arguments.whole(least, MOST_PIXELS), description);
+    }
+
+    /// Before anything is computed: a run of minutes must not end in a file that cannot be written.
+    private static boolean isPng(Path file) {
+        String name = String.valueOf(file.getFileName()).toLowerCase(Locale.ROOT);
+        Path folder = file.toAbsolutePath().getParent();
+        if (!name.endsWith(".png") && !name.endsWith(".svg")) {
+            throw new Refusal(Problem.of("the figure %s is neither .png nor .svg".formatted(file.getFileName()))
+                    .because("The ending decides what is written.")
+                    .tryThis("Write -o figure.png or -o figure.svg."));
+        }
+        if (folder == null || !Files.isDirectory(folder) || Files.isDirectory(file)) {
+            throw new Refusal(Problem.of("the figure cannot be written to %s".formatted(file))
+                    .because("Its folder does not exist, or it is a folder itself.")
+                    .tryThis("Choose another place."));
+        }
+        return name.endsWith(".png");
+    }
+}

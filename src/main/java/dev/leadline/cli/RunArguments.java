@@ -1,0 +1,92 @@
+package dev.leadline.cli;
+
+import dev.leadline.model.Lane;
+import dev.leadline.model.Plan;
+import dev.leadline.model.Stop;
+import dev.leadline.problem.Nearest;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.util.List;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Model.OptionSpec;
+import picocli.CommandLine.ParseResult;
+
+/// The arguments that say how a question is run. They override the project's own plan.
+final class RunArguments {
+
+    private static final int MOST_THREADS = 1024;
+
+    private RunArguments() {}
+
+    static void addTo(CommandSpec spec) {
+        spec.addOption(Arguments.option(
+                "--draws",
+                "N",
+                Long.class,
+                Arguments.whole(1, Stop.MOST_DRAWS),
+                "Make exactly N draws in each lane, also written 1e6; without --seconds no time limit applies."));
+        spec.addOption(Arguments.option(
+                "--seconds",
+                "S",
+                Double.class,
+                Arguments.positive(),
+                "Stop after S seconds of computing; without --draws as many draws as that gives."));
+        spec.addOption(seed());
+        spec.addOption(Arguments.option(
+                "--threads",
+                "N",
+                Long.class,
+                Arguments.whole(1, MOST_THREADS),
+                "Compute on N threads (all processors if left out). The digits do not depend on it."));
+        spec.addOption(lane());
+    }
+
+    static OptionSpec seed() {
+        return Arguments.option(
+                "--seed",
+                "N",
+                Long.class,
+                Arguments.whole(0, Long.MAX_VALUE),
+                "Draw the random numbers of seed N instead of the project's.");
+    }
+
+    static OptionSpec lane() {
+        return Arguments.option("--lane", "NAME", String.class, text -> text, "Run this lane only.");
+    }
+
+    static int threads(ParseResult arguments) {
+        return (int) Arguments.whole(arguments, "--threads")
+                .orElse(Runtime.getRuntime().availableProcessors());
+    }
+
+    /// The plan with what the arguments say.
+    static Plan override(Plan plan, ParseResult arguments) {
+        return new Plan(
+                stop(plan.stop(), Arguments.whole(arguments, "--draws"), Arguments.number(arguments, "--seconds")),
+                Arguments.whole(arguments, "--seed").orElse(plan.seed()),
+                lanes(plan.lanes(), arguments.matchedOptionValue("--lane", "")));
+    }
+
+    private static Stop stop(Stop stop, OptionalLong draws, OptionalDouble seconds) {
+        return draws.isEmpty() && seconds.isEmpty() ? stop : new Stop(draws.orElse(Stop.MOST_DRAWS), seconds);
+    }
+
+    private static List<Lane> lanes(List<Lane> lanes, String name) {
+        if (name.isEmpty()) {
+            return lanes;
+        }
+        List<Lane> named =
+                lanes.stream().filter(lane -> lane.name().equals(name)).toList();
+        if (named.isEmpty()) {
+            List<String> names = lanes.stream().map(Lane::name).toList();
+            Problem problem = Problem.of("there is no lane \"%s\"".formatted(name))
+                    .because("Lanes of this project: %s.".formatted(String.join(", ", names)));
+            throw new Refusal(Nearest.to(name, names)
+                    .map(near -> problem.tryThis("Write --lane %s.".formatted(near)))
+                    .orElse(problem));
+        }
+        return named;
+    }
+}

@@ -1,0 +1,133 @@
+package dev.leadline.cli;
+
+import dev.leadline.estimate.Chance;
+import dev.leadline.estimate.Estimand;
+import dev.leadline.ground.Ground;
+import dev.leadline.model.Plan;
+import dev.leadline.model.Question;
+import dev.leadline.model.Sentence;
+import dev.leadline.study.LaneState;
+import dev.leadline.study.StudyState;
+import dev.leadline.trace.Answer;
+import dev.leadline.trace.Mark;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+
+/// A finished run for people.
+final class RunText {
+
+    private static final int WIDTH = 100;
+
+    private static final String SAMPLING_ERROR_ONLY = "The interval covers sampling error only; it says nothing about"
+            + " whether densities and formula are right.";
+
+    private static final List<String> SAFETY = List.of(
+            "Results support, and do not replace, the judgement of a licensed engineer or qualified professional.",
+            "Applicable local codes and standards govern.",
+            "A sampled probability rests on the stated densities.");
+
+    private final Console console;
+    private final Question question;
+    private final Plan plan;
+    private final StringBuilder text = new StringBuilder();
+
+    RunText(Console console, Question question, Plan plan) {
+        this.console = console;
+        this.question = question;
+        this.plan = plan;
+    }
+
+    String of(StudyState state) {
+        if (!question.title().isEmpty()) {
+            line(console.bold(question.title().strip()));
+        }
+        wrapped("", Sentence.of(question));
+        state.lanes().forEach(this::lane);
+        line("");
+        wrapped("", SAMPLING_ERROR_ONLY);
+        if (question.safety()) {
+            wrapped("", String.join(" ", SAFETY));
+        }
+        return text.toString();
+    }
+
+    private void lane(LaneState lane) {
+        line("");
+        List<Answer> answers = lane.trace().last().map(Mark::answers).orElse(List.of());
+        answers.forEach(this::answer);
+        line("  " + facts(lane, answers));
+        line("");
+        lane.grounds().forEach(this::ground);
+    }
+
+    private void answer(Answer answer) {
+        String label = question.asks().size() == 1 || answer.label().isEmpty() ? "" : answer.label() + ": ";
+        line("  " + label + console.bold(AnswerText.value(answer)) + chance(answer));
+        line("  " + AnswerText.interval(answer));
+        answer.interval().note().ifPresent(note -> wrapped("  ", note));
+        if (answer.nonFinite() > 0) {
+            line("  over finite evaluations only");
+        }
+    }
+
+    private static String chance(Answer answer) {
+        double oneIn = Chance.oneIn(answer.estimate());
+        if (!(answer.estimand() instanceof Estimand.Probability) || Double.isNaN(oneIn)) {
+            return "";
+        }
+        return String.format(
+                Locale.ROOT, "   1 in %s   β %.2f", AnswerText.count(oneIn), Chance.beta(answer.estimate()));
+    }
+
+    private String facts(LaneState lane, List<Answer> answers) {
+        List<String> facts = new ArrayList<>();
+        facts.add(
+                "lane %s, %s points".formatted(lane.trace().lane(), lane.trace().scheme()));
+        lane.trace().last().ifPresent(mark -> {
+            facts.add("%,d draws".formatted(mark.draws()));
+            if (answers.size() == 1 && answers.getFirst().hits().isPresent()) {
+                facts.add("%,d hits".formatted(answers.getFirst().hits().getAsLong()));
+            }
+            facts.add(String.format(Locale.ROOT, "%.1f s", mark.seconds()));
+        });
+        facts.add("seed %d".formatted(plan.seed()));
+        lane.trace().stopReason().ifPresent(facts::add);
+        return String.join(" · ", facts);
+    }
+
+    private void ground(Ground ground) {
+        String head = "  %-9s "
+                .formatted(ground.strength()
+                        .map(Ground.Strength::word)
+                        .orElse(ground.status().word().replace('-', ' ')));
+        wrapped(head, sentence(ground.text()));
+        if (ground.status() == Ground.Status.DOUBTED) {
+            ground.remedy().ifPresent(remedy -> wrapped(" ".repeat(head.length()) + "→ ", sentence(remedy)));
+        }
+    }
+
+    private static String sentence(String words) {
+        String capital = words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
+        return capital.endsWith(".") ? capital : capital + ".";
+    }
+
+    /// Words in lines of a hundred columns, the first behind `head`, the others below it.
+    private void wrapped(String head, String words) {
+        String before = head;
+        var line = new StringBuilder();
+        for (String word : words.strip().split("\\s+")) {
+            if (!line.isEmpty() && before.length() + line.length() + 1 + word.length() > WIDTH) {
+                line(before + line);
+                before = " ".repeat(head.length());
+                line.setLength(0);
+            }
+            line.append(line.isEmpty() ? "" : " ").append(word);
+        }
+        line(before + line);
+    }
+
+    private void line(String line) {
+        text.append(line.stripTrailing()).append('\n');
+    }
+}

@@ -1,0 +1,140 @@
+package dev.leadline.project;
+
+import dev.leadline.estimate.Chance;
+import dev.leadline.estimate.Estimand;
+import dev.leadline.ground.Ground;
+import dev.leadline.interval.ClopperPearson;
+import dev.leadline.model.Input;
+import dev.leadline.model.Plan;
+import dev.leadline.model.Project;
+import dev.leadline.model.Reference;
+import dev.leadline.model.Sentence;
+import dev.leadline.study.LaneState;
+import dev.leadline.study.StudyState;
+import dev.leadline.trace.Answer;
+import dev.leadline.trace.Failure;
+import dev.leadline.trace.Mark;
+import java.util.List;
+import java.util.Optional;
+
+/// A finished run as the command `run` prints it. Nothing in it but `seconds` depends on a clock.
+///
+/// `null` stands for a number that does not exist.
+public final class RunJson {
+
+    private final Project project;
+
+    private RunJson(Project project) {
+        this.project = project;
+    }
+
+    /// @param name what to call the project where it has no title
+    /// @param plan what was run
+    public static String of(String name, Project project, Plan plan, StudyState state) {
+        var question = project.question();
+        var run = new RunJson(project);
+        return JsonWriter.pretty(Json.object()
+                .put("project", question.title().isEmpty() ? name : question.title())
+                .put("question", Sentence.of(question))
+                .put("seed", Json.of(plan.seed()))
+                .put("version", Version.text())
+                .put("fingerprint", Fingerprint.of(project))
+                .put("lanes", Json.list(state.lanes().stream().map(run::lane).toList()))
+                .put("reference", question.reference().map(RunJson::reference).orElse(new Json.Null()))
+                .put("comparison", new Json.Null())
+                .build());
+    }
+
+    private Json lane(LaneState lane) {
+        var trace = lane.trace();
+        Optional<Mark> last = trace.last();
+        List<Answer> answers = last.map(Mark::answers).orElse(List.of());
+        var json = Json.object()
+                .put("lane", trace.lane())
+                .put("scheme", trace.scheme())
+                .put("draws", Json.of(last.map(Mark::draws).orElse(0L)))
+                .put(
+                        "observations",
+                        Json.of(answers.isEmpty() ? 0 : answers.getFirst().observations()))
+                .put(
+                        "nonFinite",
+                        Json.of(answers.isEmpty() ? 0 : answers.getFirst().nonFinite()))
+                .put("seconds", Json.of(microseconds(last.map(Mark::seconds).orElse(0.0))))
+                .put("stopReason", trace.stopReason().orElse(""))
+                .put("answers", Json.list(answers.stream().map(RunJson::answer).toList()))
+                .put(
+                        "grounds",
+                        Json.list(lane.grounds().stream().map(RunJson::ground).toList()));
+        if (!trace.failures().isEmpty()) {
+            json.put(
+                    "failures",
+                    Json.list(trace.failures().stream().map(this::failure).toList()));
+        }
+        return json.build();
+    }
+
+    private static double microseconds(double seconds) {
+        return Math.rint(seconds * 1e6) / 1e6;
+    }
+
+    private static Json answer(Answer answer) {
+        var interval = answer.interval();
+        var json = Json.object()
+                .put("ask", answer.estimand().word())
+                .putUnlessEmpty("unit", answer.unit())
+                .putUnlessEmpty("label", answer.label())
+                .put("estimate", Json.orNull(answer.estimate()))
+                .put("standardError", Json.orNull(answer.standardError()))
+                .put("halfWidth", Json.orNull(interval.halfWidth()))
+                .put("interval", Json.list(List.of(Json.orNull(interval.low()), Json.orNull(interval.high()))))
+                .put("confidence", Json.of(interval.level()))
+                .put("intervalKind", interval.kind())
+                .put("band", new Json.Null());
+        interval.note().ifPresent(note -> json.put("intervalNote", note));
+        if (answer.estimand() instanceof Estimand.Probability) {
+            answer.hits().ifPresent(hits -> json.put("hits", Json.of(hits)).put("oneSided", oneSided(answer, hits)));
+            json.put("beta", Json.orNull(Chance.beta(answer.estimate())))
+                    .put("oneIn", Json.orNull(Chance.oneIn(answer.estimate())));
+        }
+        return json.build();
+    }
+
+    /// The limit that the probability is not above, with the interval's confidence.
+    private static Json oneSided(Answer answer, long hits) {
+        long n = answer.observations();
+        return n + answer.nonFinite() == 0
+                ? new Json.Null()
+                : Json.of(ClopperPearson.upperLimit(
+                        hits, n, answer.nonFinite(), answer.interval().level()));
+    }
+
+    private static Json ground(Ground ground) {
+        var json = Json.object()
+                .put("code", ground.code())
+                .put("status", ground.status().word());
+        ground.strength().ifPresent(strength -> json.put("strength", strength.word()));
+        json.put("text", ground.text());
+        ground.remedy().ifPresent(remedy -> json.put("remedy", remedy));
+        return json.build();
+    }
+
+    private Json failure(Failure failure) {
+        var inputs = Json.object();
+        List<Input> all = project.question().inputs();
+        for (int i = 0; i < all.size(); i++) {
+            inputs.put(all.get(i).name(), Json.of(failure.inputs().get(i).doubleValue()));
+        }
+        return Json.object()
+                .put("draw", Json.of(failure.draw()))
+                .put("inputs", inputs.build())
+                .build();
+    }
+
+    private static Json reference(Reference reference) {
+        return Json.object()
+                .put("value", Json.of(reference.value()))
+                .put("error", Json.of(reference.error()))
+                .put("source", reference.source())
+                .build();
+    }
+}
