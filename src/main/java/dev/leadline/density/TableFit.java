@@ -35,7 +35,7 @@ final class TableFit {
         this.shape = shape;
         this.link = link;
         this.bits = bits;
-        this.cells = new double[2 * Table.cellsOfTail(bits) * Table.STRIDE];
+        this.cells = Table.emptyCells(bits);
     }
 
     /// The smallest and fastest table that is accurate; where none is, one that has no cells.
@@ -72,7 +72,7 @@ final class TableFit {
     }
 
     private int index(int octave, int cell, int tail) {
-        return ((octave << bits) + cell + tail * Table.cellsOfTail(bits)) * Table.STRIDE;
+        return Table.index(bits, tail, octave, cell);
     }
 
     private void fillMedian() {
