@@ -1,6 +1,7 @@
 package dev.leadline.numeric;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.SplittableRandom;
 import java.util.function.DoubleFunction;
@@ -45,6 +46,15 @@ class TrigonometryTest {
         Kernels.within(BOUND, Trigonometry::sin, HighPrecision::sin, x, 3_000);
         Kernels.within(BOUND, Trigonometry::cos, HighPrecision::cos, x, 3_000);
         Kernels.within(BOUND_OF_TANGENT, Trigonometry::tan, TAN, x, 3_000);
+    }
+
+    /// The doubles up to 2^28 closest to a multiple of `π/2`, by a search of all multiples; the first misses by 6e-19.
+    @ParameterizedTest
+    @ValueSource(doubles = {45.553093477052, 91.106186954104, 1.446117667027838E7, 2.892235334055676E7, 2.3137882672445408E8})
+    void keepsItsBoundWhereTheReductionCancelsMost(double x) {
+        assertTrue(HighPrecision.sin(x).ulps(Trigonometry.sin(x)) <= BOUND);
+        assertTrue(HighPrecision.cos(x).ulps(Trigonometry.cos(x)) <= BOUND);
+        assertTrue(TAN.apply(x).ulps(Trigonometry.tan(x)) <= BOUND_OF_TANGENT);
     }
 
     @Test
