@@ -6,7 +6,7 @@ import java.math.RoundingMode;
 import java.util.Optional;
 
 /// How the numbers of one estimate are written: the uncertainty to two significant digits, the value to the same
-/// decimal place, interval limits to that place too but outwards, so that the printed interval contains the computed one.
+/// decimal place, interval limits to that place too but outwards: the printed interval contains the computed one.
 ///
 /// All numbers of an estimate share a notation: decimal places, or one common power of ten (`1.2568e-5` and
 /// `0.0040e-5`) where the larger of value and uncertainty is below 1e-4, or at least 1e7 with figures that mean nothing

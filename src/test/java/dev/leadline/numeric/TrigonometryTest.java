@@ -50,7 +50,9 @@ class TrigonometryTest {
 
     /// The doubles up to 2^28 closest to a multiple of `π/2`, by a search of all multiples; the first misses by 6e-19.
     @ParameterizedTest
-    @ValueSource(doubles = {45.553093477052, 91.106186954104, 1.446117667027838E7, 2.892235334055676E7, 2.3137882672445408E8})
+    @ValueSource(
+            doubles = {45.553093477052, 91.106186954104, 1.446117667027838E7, 2.892235334055676E7, 2.3137882672445408E8
+            })
     void keepsItsBoundWhereTheReductionCancelsMost(double x) {
         assertTrue(HighPrecision.sin(x).ulps(Trigonometry.sin(x)) <= BOUND);
         assertTrue(HighPrecision.cos(x).ulps(Trigonometry.cos(x)) <= BOUND);
