@@ -1,15 +1,14 @@
 package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.style.Figures;
-import dev.leadline.desktop.style.RoundedText;
 import dev.leadline.desktop.working.DemandsViewModel;
 import dev.leadline.desktop.working.UnitWords;
 import dev.leadline.estimate.Estimand;
+import dev.leadline.numeric.Rounding;
 import dev.leadline.trace.Answer;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.util.Locale;
-import java.util.OptionalDouble;
 
 /// An answer exactly as it is pasted: `1.26e-5 ± .03e-5 per year (95 %, lane B; 1 in 79,600)`.
 final class AnswerText {
@@ -34,12 +33,13 @@ final class AnswerText {
                             + " draws)";
         }
         if (!(half > 0 && Double.isFinite(half))) {
-            return RoundedText.alone(answer.estimate()) + in + " (no interval can be said yet, lane " + lane + finite
+            return Figures.number(answer.estimate()) + in + " (no interval can be said yet, lane " + lane + finite
                     + ")";
         }
-        var text = RoundedText.of(answer.estimate(), half);
+        var text = Rounding.of(answer.estimate(), half);
         String oneIn = probability ? oneIn(answer.estimate()) : "";
-        return text.value() + " \u00b1 " + text.error() + in + " (" + level + ", lane " + lane + oneIn + finite + ")";
+        return text.value() + " \u00b1 " + text.uncertainty().orElse("") + in + " (" + level + ", lane " + lane + oneIn
+                + finite + ")";
     }
 
     private static String level(Answer answer) {
@@ -57,11 +57,6 @@ final class AnswerText {
 
     /// Two digits, away from zero, so that the limit still holds.
     private static String up(double limit) {
-        return RoundedText.limit(limit);
-    }
-
-    /// Seconds left, as a person reads them; empty where nothing can be said.
-    static String left(OptionalDouble seconds) {
-        return seconds.isPresent() ? Figures.duration(seconds.getAsDouble()) : "";
+        return Rounding.of(limit, limit).up(limit);
     }
 }

@@ -34,7 +34,7 @@ final class Menus {
         export.disableProperty().bind(closed);
         return menu(
                 "_File",
-                item("_New question", "Shortcut+N", model::newProject),
+                item("_New question", "Shortcut+N", () -> model.newProject("mean")),
                 item("_Open\u2026", "Shortcut+O", model::open),
                 samples,
                 new SeparatorMenuItem(),

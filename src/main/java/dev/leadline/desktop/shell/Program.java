@@ -66,7 +66,7 @@ public final class Program extends Application {
 
     private static List<Image> icons() {
         return List.of(16, 32, 48, 128).stream()
-                .map(size -> Program.class.getResourceAsStream("/icons/leadline-" + size + ".png"))
+                .map(size -> Program.class.getResourceAsStream("/dev/leadline/icons/leadline-" + size + ".png"))
                 .filter(Objects::nonNull)
                 .map(Image::new)
                 .toList();

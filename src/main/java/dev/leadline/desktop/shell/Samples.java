@@ -33,7 +33,8 @@ final class Samples {
     }
 
     static Draft read(String name) {
-        try (InputStream in = Samples.class.getResourceAsStream("/sample-projects/" + name + ProjectFile.EXTENSION)) {
+        try (InputStream in =
+                Samples.class.getResourceAsStream("/dev/leadline/sample-projects/" + name + ProjectFile.EXTENSION)) {
             if (in == null) {
                 throw new IllegalStateException("the program was built without the sample project " + name);
             }

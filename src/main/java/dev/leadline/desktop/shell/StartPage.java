@@ -23,17 +23,25 @@ final class StartPage extends StackPane {
         var text =
                 new Label("Expected values, integrals and chances by random sampling, with an interval you can sign.");
         text.getStyleClass().add(Styles.QUIET);
-        var empty = new Button("New question");
-        empty.setId("start-new");
-        empty.getStyleClass().add(Styles.RUN);
-        empty.setOnAction(_ -> model.newProject());
+        var formula = door(
+                "start-formula", "I have a formula", "Its mean over uncertain inputs", () -> model.newProject("mean"));
+        var limit = door(
+                "start-limit",
+                "I have a limit",
+                "The chance that it is exceeded",
+                () -> model.newProject("probability"));
+        var area = door(
+                "start-integral",
+                "I have an integral",
+                "Its value, with an interval",
+                () -> model.newProject("integral"));
         var open = new Button("Open a project\u2026");
         open.setId("start-open");
         open.setOnAction(_ -> model.open());
-        var doors = new FlowPane(10, 10, empty, open);
+        var doors = new FlowPane(12, 12, formula, limit, area);
         var title = new Label("Sample projects, from an invented harbour");
         title.getStyleClass().add(Styles.PANE_TITLE);
-        var box = new VBox(14, heading, text, doors, title, samples);
+        var box = new VBox(14, heading, text, doors, open, title, samples);
         box.setMaxWidth(760);
         box.setMaxHeight(USE_PREF_SIZE);
         box.setAlignment(Pos.CENTER_LEFT);
@@ -58,14 +66,31 @@ final class StartPage extends StackPane {
         var sentence = new Label(Sentence.of(sample.draft()).text());
         sentence.getStyleClass().add(Styles.QUIET);
         sentence.setWrapText(true);
-        var box = new VBox(4, title, sentence);
-        box.setPrefWidth(350);
+        var card = card("sample-" + sample.name(), title, sentence, 374, 96, () -> model.openSample(sample.name()));
+        card.setAccessibleText("Open the sample project " + sample.draft().title());
+        return card;
+    }
+
+    private static Button door(String id, String name, String use, Runnable action) {
+        var title = new Label(name);
+        title.getStyleClass().add("card-title");
+        var text = new Label(use);
+        text.getStyleClass().add(Styles.QUIET);
+        return card(id, title, text, 245, 66, action);
+    }
+
+    private static Button card(String id, Label title, Label text, double width, double height, Runnable action) {
+        var box = new VBox(4, title, text);
+        box.setMaxWidth(width - 30);
+        box.setPrefWidth(width - 30);
         var card = new Button();
-        card.setId("sample-" + sample.name());
+        card.setId(id);
         card.setGraphic(box);
         card.getStyleClass().setAll(Styles.CARD);
-        card.setAccessibleText("Open the sample project " + sample.draft().title());
-        card.setOnAction(_ -> model.openSample(sample.name()));
+        card.setMinSize(width, height);
+        card.setPrefSize(width, height);
+        card.setMaxSize(width, height);
+        card.setOnAction(_ -> action.run());
         return card;
     }
 }

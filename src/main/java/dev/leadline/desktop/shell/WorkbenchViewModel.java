@@ -60,7 +60,7 @@ public final class WorkbenchViewModel {
     public WorkbenchViewModel(Studies studies, Dialogs dialogs, Background background) {
         this.background = background;
         this.dialogs = dialogs;
-        project = new ProjectViewModel(Edits.empty(), background);
+        project = new ProjectViewModel(Edits.asking("mean"), background);
         run = new RunViewModel(studies, background);
         stage = new StageViewModel(project, run, dark, background);
         look = new LookViewModel(project, background);
@@ -240,8 +240,9 @@ public final class WorkbenchViewModel {
 
     // ---- files
 
-    public void newProject() {
-        leaving(() -> show(Edits.empty(), Optional.empty()));
+    /// @param kind of what is asked, as `mean`
+    public void newProject(String kind) {
+        leaving(() -> show(Edits.asking(kind), Optional.empty()));
     }
 
     public void openSample(String name) {
@@ -278,7 +279,7 @@ public final class WorkbenchViewModel {
     public void closeProject() {
         leaving(() -> {
             run.leave();
-            project.replace(Edits.empty(), Optional.empty());
+            project.replace(Edits.asking("mean"), Optional.empty());
             started.set(false);
         });
     }

@@ -4,9 +4,9 @@ import dev.leadline.chart.LaneLook;
 import dev.leadline.desktop.run.Progress;
 import dev.leadline.desktop.run.RunViewModel.State;
 import dev.leadline.desktop.style.Figures;
-import dev.leadline.desktop.style.RoundedText;
 import dev.leadline.desktop.working.UnitWords;
 import dev.leadline.model.Tolerance;
+import dev.leadline.numeric.Rounding;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState.Activity;
 import dev.leadline.trace.Answer;
@@ -55,22 +55,31 @@ final class LaneRows {
         boolean first = k == 0;
         double half = a.interval().halfWidth();
         boolean whole = Double.isFinite(a.estimate()) && half > 0 && Double.isFinite(half);
-        var text = whole ? RoundedText.of(a.estimate(), half) : new RoundedText(alone(a), "");
-        String unit = UnitWords.plain(a.unit());
+        var text = Rounding.of(a.estimate(), whole ? half : Double.NaN);
         String name = answers == 1 ? "" : a.label().isBlank() ? "answer " + (k + 1) : a.label();
+        String unit = answers == 1 ? "" : UnitWords.plain(a.unit());
         return new Row(
                 first ? lane.trace().lane() : "",
                 look,
                 name,
-                text.value() + (unit.isEmpty() ? "" : " " + unit),
-                text.error(),
+                (whole ? text.value() : alone(a)) + (unit.isEmpty() ? "" : " " + unit),
+                whole ? text.uncertainty().orElse("") : "",
                 first ? Figures.count(lane.trace().last().orElseThrow().draws()) : "",
                 first ? left(shown, lane, a) : "",
                 first ? why(shown, lane) : "");
     }
 
+    /// What the head of the column of values says.
+    static String valueHead(State.Shown shown) {
+        var asks = shown.project().question().asks();
+        String unit = UnitWords.plain(asks.getFirst().unit());
+        return asks.size() > 1 || unit.isEmpty()
+                ? "value"
+                : unit.startsWith("per ") ? "value " + unit : "value, " + unit;
+    }
+
     private static String alone(Answer a) {
-        return Double.isFinite(a.estimate()) ? RoundedText.alone(a.estimate()) : "none yet";
+        return Double.isFinite(a.estimate()) ? Figures.number(a.estimate()) : "none yet";
     }
 
     private static String left(State.Shown shown, LaneState lane, Answer a) {

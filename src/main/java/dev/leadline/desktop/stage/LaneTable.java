@@ -6,6 +6,7 @@ import java.util.List;
 import javafx.geometry.HPos;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
+import javafx.scene.control.Tooltip;
 import javafx.scene.layout.ColumnConstraints;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.Priority;
@@ -18,12 +19,13 @@ import javafx.scene.shape.Shape;
 /// Lanes as rows under the picture, so that their columns compare.
 final class LaneTable extends GridPane {
     private static final List<String> HEADS = List.of("lane", "", "value", "\u00b1", "draws", "left", "why");
-    private List<LaneRows.Row> shown = List.of();
+    private List<LaneRows.Row> shown;
+    private String valueHead;
 
     LaneTable() {
         getStyleClass().add(Styles.LANES);
         setId("lanes");
-        setHgap(18);
+        setHgap(14);
         for (int c = 0; c < HEADS.size(); c++) {
             var column = new ColumnConstraints();
             column.setHalignment(c >= 2 && c <= 5 ? HPos.RIGHT : HPos.LEFT);
@@ -32,14 +34,15 @@ final class LaneTable extends GridPane {
             }
             getColumnConstraints().add(column);
         }
-        heads();
+        show(List.of(), "value");
     }
 
-    void show(List<LaneRows.Row> rows) {
-        if (rows.equals(shown)) {
+    void show(List<LaneRows.Row> rows, String newValueHead) {
+        if (rows.equals(shown) && newValueHead.equals(valueHead)) {
             return;
         }
         shown = rows;
+        valueHead = newValueHead;
         getChildren().clear();
         heads();
         for (int r = 0; r < rows.size(); r++) {
@@ -55,6 +58,7 @@ final class LaneTable extends GridPane {
             add(cell(row.left(), "figure"), 5, r + 1);
             var why = cell(row.why(), Styles.QUIET);
             why.setMinWidth(0);
+            why.setTooltip(new Tooltip(row.why()));
             add(why, 6, r + 1);
         }
         if (rows.isEmpty()) {
@@ -65,7 +69,7 @@ final class LaneTable extends GridPane {
 
     private void heads() {
         for (int c = 0; c < HEADS.size(); c++) {
-            add(cell(HEADS.get(c), "head"), c, 0);
+            add(cell(c == 2 ? valueHead : HEADS.get(c), "head"), c, 0);
         }
     }
 

@@ -3,7 +3,7 @@ package dev.leadline.desktop.stage;
 import dev.leadline.chart.Point;
 import dev.leadline.chart.Reading;
 import dev.leadline.desktop.style.Figures;
-import dev.leadline.desktop.style.RoundedText;
+import dev.leadline.numeric.Rounding;
 import java.util.stream.Collectors;
 
 /// What the mouse reads in a picture, in one line.
@@ -25,9 +25,9 @@ final class ReadingText {
             return "no estimate yet" + after;
         }
         if (!(half > 0)) {
-            return RoundedText.alone(p.estimate()) + in + after;
+            return Figures.number(p.estimate()) + in + after;
         }
-        var text = RoundedText.of(p.estimate(), half);
-        return text.value() + " \u00b1 " + text.error() + in + after;
+        var text = Rounding.of(p.estimate(), half);
+        return text.value() + " \u00b1 " + text.uncertainty().orElse("") + in + after;
     }
 }

@@ -89,7 +89,10 @@ public final class StagePane extends BorderPane {
     }
 
     private void show(RunViewModel.State state) {
-        lanes.show(RunViewModel.shown(state).map(LaneRows::of).orElse(List.of()));
+        var run = RunViewModel.shown(state);
+        lanes.show(
+                run.map(LaneRows::of).orElse(List.of()),
+                run.map(LaneRows::valueHead).orElse("value"));
     }
 
     private static ToggleButton scaleButton(String text, String tip, ToggleGroup group) {

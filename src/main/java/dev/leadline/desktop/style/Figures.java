@@ -1,5 +1,7 @@
 package dev.leadline.desktop.style;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.Locale;
 
 /// Counts and durations in few characters.
@@ -28,6 +30,18 @@ public final class Figures {
         }
         long minutes = Math.round(seconds / 60);
         return minutes / 60 + " h" + (minutes % 60 == 0 ? "" : " " + minutes % 60 + " min");
+    }
+
+    /// Six significant digits, as `0.0425`, `1180`, `3.2e-7`.
+    public static String number(double value) {
+        if (!Double.isFinite(value)) {
+            return Double.isNaN(value) ? "not a number" : value > 0 ? "\u221e" : "\u2212\u221e";
+        }
+        var rounded = new BigDecimal(value).round(new MathContext(6)).stripTrailingZeros();
+        int power = rounded.precision() - rounded.scale() - 1;
+        return rounded.signum() == 0 || power >= -4 && power < 9
+                ? rounded.toPlainString()
+                : rounded.movePointLeft(power).toPlainString() + "e" + power;
     }
 
     private static String three(double value) {

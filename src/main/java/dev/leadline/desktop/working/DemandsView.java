@@ -70,7 +70,6 @@ final class DemandsView {
                 "A value to compare the answer with",
                 new VBox(6, flow(pair("", reference, ""), pair("\u00b1", error, "")), source, referenceMessages));
         folds = new VBox(toleranceFold, stopFold, referenceFold);
-        folds.getStyleClass().add("folds");
     }
 
     Node folds() {

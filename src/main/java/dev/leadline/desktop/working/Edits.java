@@ -18,7 +18,8 @@ import java.util.function.UnaryOperator;
 public final class Edits {
     private Edits() {}
 
-    public static Draft empty() {
+    /// A draft with nothing in it but the kind of what is asked.
+    public static Draft asking(String kind) {
         return new Draft(
                 "",
                 "",
@@ -26,7 +27,7 @@ public final class Edits {
                 List.of(),
                 List.of(),
                 List.of(),
-                List.of(new AskDraft("mean", "", "", "")),
+                List.of(new AskDraft(kind, "", "", "")),
                 Optional.empty(),
                 OptionalDouble.empty(),
                 Optional.empty(),

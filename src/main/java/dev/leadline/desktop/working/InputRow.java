@@ -134,7 +134,7 @@ final class InputRow extends VBox {
         var named = field("name", "How formulas call it", 9, ".name", InputDraft::name, t -> model.name(index, t));
         var united =
                 field("unit", "Its unit, as m/s; 1 for none", 7, ".unit", InputDraft::unit, t -> model.unit(index, t));
-        grid.addRow(0, label("name"), new HBox(8, named, label("unit"), united));
+        grid.addRow(0, label("name"), line(named, label("unit"), united));
         var labelled = field(
                         "label",
                         "What it is, in a few words",
@@ -146,7 +146,7 @@ final class InputRow extends VBox {
         grid.addRow(1, label("is"), labelled);
         GridPane.setHgrow(labelled, Priority.ALWAYS);
         if (shape.range) {
-            grid.addRow(2, label("range"), new HBox(8, rangeEnd(true), label("to"), rangeEnd(false)));
+            grid.addRow(2, label("range"), line(rangeEnd(true), label("to"), rangeEnd(false)));
         }
         if (!shape.range || shape.drawn) {
             grid.addRow(3, label(shape.range ? "drawn from" : "density"), families());
@@ -262,6 +262,12 @@ final class InputRow extends VBox {
 
     private boolean faulty(String path) {
         return !model.project().problemsAt(InputsViewModel.path(index) + path).isEmpty();
+    }
+
+    private static HBox line(Node... nodes) {
+        var line = new HBox(8, nodes);
+        line.setAlignment(Pos.CENTER_LEFT);
+        return line;
     }
 
     private static Label label(String text) {

@@ -1,5 +1,6 @@
 package dev.leadline.desktop.working;
 
+import dev.leadline.desktop.style.Figures;
 import dev.leadline.desktop.style.Styles;
 import java.util.List;
 import javafx.geometry.HPos;
@@ -88,7 +89,7 @@ final class LookView {
     }
 
     private static Label value(double value) {
-        var label = cell(LookViewModel.digits(value), "look-value");
+        var label = cell(Figures.number(value), "look-value");
         label.setMinWidth(javafx.scene.layout.Region.USE_PREF_SIZE);
         return label;
     }

@@ -4,8 +4,6 @@ import dev.leadline.desktop.background.Background;
 import dev.leadline.engine.Look;
 import dev.leadline.model.Project;
 import dev.leadline.problem.Problem;
-import java.math.BigDecimal;
-import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -118,17 +116,5 @@ public final class LookViewModel {
             rows.add(new Row("outcome", name, look.outcomes().get(i), ""));
         }
         return rows;
-    }
-
-    /// Six digits, enough to check a hand calculation.
-    static String digits(double value) {
-        if (!Double.isFinite(value)) {
-            return Double.isNaN(value) ? "not a number" : value > 0 ? "\u221e" : "\u2212\u221e";
-        }
-        var rounded = new BigDecimal(value).round(new MathContext(6));
-        int power = rounded.precision() - rounded.scale() - 1;
-        return rounded.signum() == 0 || power >= -4 && power < 9
-                ? rounded.stripTrailingZeros().toPlainString()
-                : NumberText.show(rounded.doubleValue());
     }
 }

@@ -38,6 +38,7 @@ public final class WorkingPane extends BorderPane {
     private final LookView look;
     private final AboutView about;
     private final ScrollPane scroll;
+    private final Button unknown;
 
     public WorkingPane(ProjectViewModel project, LookViewModel lookModel, Supplier<SketchView> sketches) {
         this.project = project;
@@ -62,6 +63,10 @@ public final class WorkingPane extends BorderPane {
 
         var moreAsks = link("+ answer", "Asks for another answer from the same draws", formulas::addAsk);
         moreAsks.setId("add-ask");
+        unknown = link("", "Adds a row for each, its density still to be chosen", formulas::makeInputsOfUnknownNames);
+        unknown.setId("make-inputs");
+        unknown.setMinWidth(0);
+        unknown.setWrapText(true);
         var addInput = link(
                 "+ random input", "A named variable with a density", () -> openNew(inputsModel.addRandom(fresh("x"))));
         addInput.setId("add-input");
@@ -76,20 +81,21 @@ public final class WorkingPane extends BorderPane {
         });
         addConstant.setId("add-constant");
 
+        var folds = new VBox(demands.folds(), look.fold(), about.fold());
+        folds.getStyleClass().add("folds");
         var content = new VBox(
                 section("steps", new Label()),
                 steps,
                 stepMessages,
                 section("asked", moreAsks),
                 askRows,
+                unknown,
                 generalMessages,
                 section("inputs", addInput, addRange),
                 inputRows,
                 section("constants", addConstant),
                 constantRows,
-                demands.folds(),
-                look.fold(),
-                about.fold());
+                folds);
         content.getStyleClass().add("content");
         scroll = new ScrollPane(content);
         scroll.setFitToWidth(true);
@@ -156,6 +162,10 @@ public final class WorkingPane extends BorderPane {
         about.update();
         paintSteps();
         generalMessages.show(unplaced());
+        var names = formulas.unknownNames();
+        unknown.setText("make inputs of " + String.join(", ", names));
+        unknown.setVisible(!names.isEmpty());
+        unknown.setManaged(!names.isEmpty());
     }
 
     private void paintSteps() {

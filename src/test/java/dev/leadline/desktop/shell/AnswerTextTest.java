@@ -1,0 +1,50 @@
+package dev.leadline.desktop.shell;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+
+import dev.leadline.estimate.Estimand;
+import dev.leadline.interval.Interval;
+import dev.leadline.trace.Answer;
+import java.util.Optional;
+import java.util.OptionalLong;
+import org.junit.jupiter.api.Test;
+
+class AnswerTextTest {
+    private static Answer answer(
+            Estimand estimand, String unit, double value, double low, double high, OptionalLong hits, long nonFinite) {
+        var interval = new Interval(low, high, .95, "student", "", Optional.empty());
+        return new Answer(estimand, unit, "", value, (high - low) / 4, interval, hits, 1_000_000, nonFinite);
+    }
+
+    @Test
+    void aSmallChanceSaysOneInHowMany() {
+        var a = answer(new Estimand.Probability(), "1/a", 1.2568e-5, .956e-5, 1.556e-5, OptionalLong.of(13), 0);
+        assertEquals("1.26e-5 \u00b1 0.30e-5 per year (95 %, lane B; 1 in 79,600)", AnswerText.of(a, "B"));
+    }
+
+    @Test
+    void aMeanHasItsUnit() {
+        var a = answer(new Estimand.Mean(), "mm", 3.20602, 3.20102, 3.21102, OptionalLong.empty(), 0);
+        assertEquals("3.2060 \u00b1 0.0050 mm (95 %, lane A)", AnswerText.of(a, "A"));
+    }
+
+    @Test
+    void noHitIsALimitNeverZero() {
+        var a = answer(new Estimand.Probability(), "1/a", 0, 0, 2.9957e-6, OptionalLong.of(0), 0);
+        assertEquals("at most 3.0e-6 per year (95 %, lane A; no hit in 1.00 million draws)", AnswerText.of(a, "A"));
+    }
+
+    @Test
+    void withoutSpreadNoIntervalIsMadeUp() {
+        var a = answer(new Estimand.Mean(), "m", 4, Double.NaN, Double.NaN, OptionalLong.empty(), 0);
+        assertEquals("4 m (no interval can be said yet, lane A)", AnswerText.of(a, "A"));
+        var none = answer(new Estimand.Mean(), "m", Double.NaN, Double.NaN, Double.NaN, OptionalLong.empty(), 0);
+        assertEquals("cannot say yet (lane A, 1.00 million draws)", AnswerText.of(none, "A"));
+    }
+
+    @Test
+    void failedEvaluationsAreSaid() {
+        var a = answer(new Estimand.Mean(), "1", 4, 3.9, 4.1, OptionalLong.empty(), 3);
+        assertEquals("4.00 \u00b1 0.10 (95 %, lane A; over finite evaluations only)", AnswerText.of(a, "A"));
+    }
+}

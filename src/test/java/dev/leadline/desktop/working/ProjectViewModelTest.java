@@ -1,0 +1,247 @@
+package dev.leadline.desktop.working;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertInstanceOf;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.desktop.Drafts;
+import dev.leadline.desktop.background.HeldBackground;
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.From;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.OptionalDouble;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+
+class ProjectViewModelTest {
+    private final HeldBackground background = new HeldBackground();
+    private final ProjectViewModel project = new ProjectViewModel(Drafts.mean(), background);
+    private final InputsViewModel inputs = new InputsViewModel(project);
+    private final ConstantsViewModel constants = new ConstantsViewModel(project);
+    private final FormulasViewModel formulas = new FormulasViewModel(project, inputs);
+    private final DemandsViewModel demands = new DemandsViewModel(project);
+
+    @BeforeEach
+    void check() {
+        background.finishAll();
+    }
+
+    @Test
+    void aSoundProjectHasNoProblems() {
+        assertInstanceOf(ProjectViewModel.Check.Sound.class, project.check().get());
+        assertEquals(List.of(), project.problems().get());
+        assertFalse(project.edited().get());
+    }
+
+    @Test
+    void undoingAnEditLeavesNothingToSave() {
+        inputs.name(0, "z");
+        assertTrue(project.edited().get());
+        project.undo();
+        assertFalse(project.edited().get());
+        assertEquals("x", project.draft().get().inputs().getFirst().name());
+        project.redo();
+        assertEquals("z", project.draft().get().inputs().getFirst().name());
+    }
+
+    @Test
+    void savingMakesItUnedited() {
+        inputs.name(0, "z");
+        project.savedAs(Path.of("a.leadline"), project.draft().get());
+        assertFalse(project.edited().get());
+        project.undo();
+        assertTrue(project.edited().get());
+    }
+
+    @Test
+    void anOlderCheckDoesNotOverwriteANewerOne() {
+        formulas.typeFormula(0, "twice +");
+        formulas.typeFormula(0, "twice");
+        assertEquals(2, background.waiting());
+        background.finishNext();
+        assertEquals(List.of(), project.problems().get());
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+    }
+
+    @Test
+    void aTextThatIsNoNumberKeepsTheLastOneAndStandsAgainstARun() {
+        inputs.parameter(0, "to", "2");
+        inputs.parameter(0, "to", "2,5");
+        background.finishAll();
+        assertEquals("2,5", inputs.parameterText(0, "to"));
+        assertEquals(2.0, parameters().get("to"));
+        assertEquals(
+                "To of x is \u201c2,5\u201d but must be a number",
+                project.problems().get().getFirst().primary());
+        inputs.parameter(0, "to", "2.5");
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+        assertEquals(2.5, parameters().get("to"));
+    }
+
+    @Test
+    void anEmptyParameterIsMissingNotZero() {
+        inputs.parameter(0, "to", "");
+        background.finishAll();
+        assertEquals(List.of("from"), List.copyOf(parameters().keySet()));
+        assertFalse(project.problems().get().isEmpty());
+        assertFalse(project.problemsAt("$.inputs[0]").isEmpty());
+    }
+
+    @Test
+    void aRefusedParameterIsToldAtItsField() {
+        inputs.parameter(0, "from", "3");
+        background.finishAll();
+        assertFalse(project.problemsAt("$.inputs[0].density").isEmpty());
+        assertEquals(List.of(), project.problemsAt("$.inputs[1]"));
+    }
+
+    @Test
+    void anotherFamilyKeepsParametersOfTheSameName() {
+        inputs.family(0, "triangular");
+        assertEquals(List.of("from", "to"), List.copyOf(parameters().keySet()));
+        inputs.parameter(0, "mode", "0.5");
+        assertEquals(List.of("from", "mode", "to"), List.copyOf(parameters().keySet()));
+        assertEquals(" ~ triangular(0, 0.5, 1)", InputsViewModel.summary(from()));
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+        project.undo();
+        project.undo();
+        assertEquals(" ~ uniform(0, 1)", InputsViewModel.summary(from()));
+    }
+
+    @Test
+    void anotherWayOfEntryIsRememberedBeforeItHasNumbers() {
+        inputs.family(0, "lognormal");
+        assertEquals(0, inputs.entryOf(0));
+        inputs.entry(0, 1);
+        assertEquals(1, inputs.entryOf(0));
+        inputs.parameter(0, "mean", "3");
+        inputs.parameter(0, "sd", "1");
+        background.finishAll();
+        assertEquals(1, inputs.entryOf(0));
+        assertEquals(List.of(), project.problems().get());
+    }
+
+    @Test
+    void aPastedFormulaMakesARowOfEachUnknownName() {
+        formulas.typeSteps("q = 0.5*rho*v^2\nload = q*area*pi");
+        formulas.typeFormula(0, "max(load, x)");
+        formulas.makeInputsOfUnknownNames();
+        assertEquals(
+                List.of("x", "rho", "v", "area"),
+                project.draft().get().inputs().stream()
+                        .map(Draft.InputDraft::name)
+                        .toList());
+        assertEquals(
+                ": choose",
+                InputsViewModel.summary(project.draft().get().inputs().get(2).from()));
+        project.undo();
+        assertEquals(1, project.draft().get().inputs().size());
+    }
+
+    @Test
+    void blankLinesStayInTheTextAndOutOfTheDraft() {
+        formulas.typeSteps("twice = 2*x\n\nthrice = 3*x +");
+        background.finishAll();
+        assertEquals(
+                List.of("twice = 2*x", "thrice = 3*x +"), project.draft().get().steps());
+        assertEquals("twice = 2*x\n\nthrice = 3*x +", formulas.stepsText().get());
+        var fault = formulas.stepFaults().getFirst();
+        assertEquals(2, fault.line());
+        assertTrue(fault.problem().place().span().isPresent());
+    }
+
+    @Test
+    void undoBringsBackTheTextOfTheSteps() {
+        formulas.typeSteps("twice = 3*x");
+        project.undo();
+        assertEquals("twice = 2*x   # m", formulas.stepsText().get());
+    }
+
+    @Test
+    void aWrongFormulaIsToldWithItsPlace() {
+        formulas.typeFormula(0, "twice + foo");
+        background.finishAll();
+        var fault = formulas.askFaults(0).getFirst();
+        assertEquals(8, fault.from());
+        assertEquals(11, fault.to());
+    }
+
+    @Test
+    void removingAnInputRenumbersTheRest() {
+        inputs.addRandom("y");
+        inputs.parameter(1, "mean", "nothing");
+        inputs.remove(0);
+        assertEquals("y", project.draft().get().inputs().getFirst().name());
+        background.finishAll();
+        assertTrue(project.problems().get().stream().noneMatch(p -> p.primary().contains("nothing")));
+    }
+
+    @Test
+    void percentagesHaveNoFalseDigits() {
+        demands.relative("7");
+        assertEquals(
+                OptionalDouble.of(.07),
+                project.draft().get().tolerance().orElseThrow().relative());
+        assertEquals("7", demands.relativeText());
+        demands.confidence("99.9");
+        assertEquals(OptionalDouble.of(.999), project.draft().get().confidence());
+        assertEquals("99.9", demands.confidenceText());
+    }
+
+    @Test
+    void anEmptiedToleranceIsNone() {
+        demands.absolute("");
+        assertTrue(project.draft().get().tolerance().isEmpty());
+        assertEquals("none at 95 %", demands.toleranceSummary());
+    }
+
+    @Test
+    void aReferenceLeftEmptyIsNone() {
+        demands.reference("1");
+        demands.referenceError("0.001");
+        demands.referenceSource("by hand");
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+        demands.reference("");
+        assertTrue(project.draft().get().reference().isEmpty());
+    }
+
+    @Test
+    void constantsAreEditedInTheirRow() {
+        int row = constants.add("rho");
+        constants.value(row, "1.25");
+        constants.unit(row, "kg/m3");
+        background.finishAll();
+        assertEquals("1.25", constants.valueText(row));
+        assertEquals(List.of(), project.problems().get());
+        constants.value(row, "");
+        assertEquals(
+                "Value of rho is empty but must be a number",
+                project.problems().get().getFirst().primary());
+        constants.remove(row);
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+    }
+
+    @Test
+    void anotherProjectStartsItsOwnHistory() {
+        inputs.name(0, "z");
+        project.replace(Drafts.integral(), java.util.Optional.empty());
+        assertFalse(project.canUndo().get());
+        assertFalse(project.edited().get());
+        assertEquals(" from 0 to 2", InputsViewModel.summary(from()));
+    }
+
+    private From from() {
+        return project.draft().get().inputs().getFirst().from();
+    }
+
+    private java.util.Map<String, Double> parameters() {
+        return InputsViewModel.densityOf(from()).orElseThrow().parameters();
+    }
+}
