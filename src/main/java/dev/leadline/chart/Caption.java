@@ -1,6 +1,7 @@
 package dev.leadline.chart;
 
 import dev.leadline.model.Tolerance;
+import dev.leadline.numeric.Rounding;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -34,15 +35,21 @@ public final class Caption {
         var point = lane.last().get();
         var text = new StringBuilder(name);
         double half = (point.high() - point.low()) / 2;
-        text.append(
-                Double.isFinite(point.estimate())
-                        ? Typeset.quantity(Typeset.rounded(point.estimate(), half), settling.unit())
-                        : "no estimate");
-        text.append(
-                Double.isFinite(half)
-                        ? ", " + Typeset.percent(settling.level()) + " interval " + Typeset.rounded(point.low(), half)
-                                + " to " + Typeset.rounded(point.high(), half)
-                        : ", no interval");
+        if (Double.isFinite(point.estimate()) && Double.isFinite(half)) {
+            var rounding = Rounding.of(point.estimate(), half);
+            text.append(Typeset.quantity(Typeset.set(rounding.value()), settling.unit()))
+                    .append(", ")
+                    .append(Typeset.percent(settling.level()))
+                    .append(" interval ")
+                    .append(Typeset.set(rounding.down(point.low())))
+                    .append(" to ")
+                    .append(Typeset.set(rounding.up(point.high())));
+        } else if (Double.isFinite(point.estimate())) {
+            text.append(Typeset.quantity(Typeset.number(point.estimate(), 6), settling.unit()))
+                    .append(", no interval");
+        } else {
+            text.append("no estimate");
+        }
         text.append(", after ").append(Typeset.count(point.draws())).append(" draws");
         if (lane.withoutHit()) {
             text.append(" without a hit");

@@ -515,7 +515,7 @@ public final class Picture {
         String name = "lane " + lane.lane() + ": ";
         if (lane.withoutHit()) {
             var limit = Double.isFinite(point.high())
-                    ? ", so at most " + Typeset.quantity(Typeset.number(point.high(), 2), settling.unit()) + " ("
+                    ? ", so at most " + Typeset.quantity(Typeset.atMost(point.high()), settling.unit()) + " ("
                             + Typeset.percent(settling.level()) + ")"
                     : "";
             return Optional.of(name + "no hit in " + Typeset.count(point.draws()) + " draws" + limit);

@@ -64,14 +64,18 @@ final class Typeset {
                 BigDecimal.valueOf(value).round(new MathContext(digits)).stripTrailingZeros());
     }
 
-    /// The value rounded to the second significant digit of its error; to six digits where there is no error.
-    static String rounded(double value, double error) {
-        if (!(error > 0 && Double.isFinite(error)) || !Double.isFinite(value)) {
-            return number(value, 6);
-        }
-        var e = BigDecimal.valueOf(error).round(new MathContext(2));
-        return scientific(BigDecimal.valueOf(value)
-                .setScale(e.precision() == 1 ? e.scale() + 1 : e.scale(), RoundingMode.HALF_EVEN));
+    /// A limit that must not be rounded down, to three significant digits.
+    static String atMost(double limit) {
+        return scientific(BigDecimal.valueOf(limit)
+                .round(new MathContext(3, RoundingMode.CEILING))
+                .stripTrailingZeros());
+    }
+
+    /// A finite number written by [Rounding][dev.leadline.numeric.Rounding]: `-1.2568e-5` becomes `−1.2568×10⁻⁵`.
+    static String set(String written) {
+        int e = written.indexOf('e');
+        String mantissa = plain(new BigDecimal(e < 0 ? written : written.substring(0, e)));
+        return e < 0 ? mantissa : mantissa + "×" + power(Integer.parseInt(written.substring(e + 1)));
     }
 
     private static String scientific(BigDecimal value) {

@@ -133,7 +133,7 @@ class SettlingTest {
         for (var part : List.of(
                 "estimate of chance per year",
                 "Lane A (independent): 1.26×10⁻⁵ 1/a",
-                "95 % interval 7.7×10⁻⁶ to 1.95×10⁻⁵",
+                "95 % interval 0.77×10⁻⁵ to 1.95×10⁻⁵",
                 "after 2,000,000 draws",
                 "over finite evaluations only (3 left out)",
                 "reference value 1.2568×10⁻⁵ ± 4×10⁻⁹ 1/a",
@@ -148,6 +148,6 @@ class SettlingTest {
     void captionOfNoHitIsALimitAndNeverZeroPlusMinusZero() {
         String caption = Caption.of(Invented.noHit());
         assertTrue(caption.contains("draws without a hit"), caption);
-        assertTrue(caption.contains("interval 0 to 5.7×10⁻⁵"), caption);
+        assertTrue(caption.contains("interval 0.0×10⁻⁵ to 5.8×10⁻⁵"), caption);
     }
 }

@@ -49,17 +49,15 @@ class TypesetTest {
     @ParameterizedTest
     @CsvSource(
             delimiter = '|',
-            value = {
-                "18432.7183 | 2.61 | 18,432.7",
-                "1.25683e-5 | 1.0e-7 | 1.257×10⁻⁵",
-                "1.25683e-5 | 3.14e-6 | 1.26×10⁻⁵",
-                "0.5 | 0.02 | 0.500",
-                "12345 | 678 | 12,340",
-                "3 | 0 | 3",
-                "3 | NaN | 3"
-            })
-    void roundsToTheSecondDigitOfTheError(double value, double error, String shown) {
-        assertEquals(shown, Typeset.rounded(value, error));
+            value = {"18432.7 | 18,432.7", "-1.257e-5 | −1.257×10⁻⁵", "0.500 | 0.500", "1.20e12 | 1.20×10¹²", "0 | 0"})
+    void setsWhatWasRoundedElsewhere(String written, String shown) {
+        assertEquals(shown, Typeset.set(written));
+    }
+
+    @Test
+    void neverRoundsALimitDown() {
+        assertEquals("5.72×10⁻⁵", Typeset.atMost(5.7111e-5));
+        assertEquals("5.71×10⁻⁵", Typeset.atMost(5.71e-5));
     }
 
     @Test
