@@ -74,7 +74,11 @@ final class Typeset {
     /// A finite number written by [Rounding][dev.leadline.numeric.Rounding]: `-1.2568e-5` becomes `−1.2568×10⁻⁵`.
     static String set(String written) {
         int e = written.indexOf('e');
-        String mantissa = plain(new BigDecimal(e < 0 ? written : written.substring(0, e)));
+        var digits = new BigDecimal(e < 0 ? written : written.substring(0, e));
+        if (digits.signum() == 0) {
+            return "0";
+        }
+        String mantissa = plain(digits);
         return e < 0 ? mantissa : mantissa + "×" + power(Integer.parseInt(written.substring(e + 1)));
     }
 

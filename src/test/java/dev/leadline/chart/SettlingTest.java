@@ -148,6 +148,6 @@ class SettlingTest {
     void captionOfNoHitIsALimitAndNeverZeroPlusMinusZero() {
         String caption = Caption.of(Invented.noHit());
         assertTrue(caption.contains("draws without a hit"), caption);
-        assertTrue(caption.contains("interval 0.0×10⁻⁵ to 5.8×10⁻⁵"), caption);
+        assertTrue(caption.contains("interval 0 to 5.8×10⁻⁵"), caption);
     }
 }

@@ -49,7 +49,14 @@ class TypesetTest {
     @ParameterizedTest
     @CsvSource(
             delimiter = '|',
-            value = {"18432.7 | 18,432.7", "-1.257e-5 | −1.257×10⁻⁵", "0.500 | 0.500", "1.20e12 | 1.20×10¹²", "0 | 0"})
+            value = {
+                "18432.7 | 18,432.7",
+                "-1.257e-5 | −1.257×10⁻⁵",
+                "0.500 | 0.500",
+                "1.20e12 | 1.20×10¹²",
+                "0.00 | 0",
+                "0.0e-5 | 0"
+            })
     void setsWhatWasRoundedElsewhere(String written, String shown) {
         assertEquals(shown, Typeset.set(written));
     }
