@@ -23,8 +23,10 @@ import java.util.OptionalLong;
 public final class Accumulator {
     private final int components;
     private final Sums total;
-    private final Block block;
     private long excluded;
+
+    /// Working memory; made when first needed, since many accumulators only merge.
+    private Block block;
 
     /// The finite observations of a block that has others; made when first needed.
     private double[][] kept;
@@ -36,7 +38,6 @@ public final class Accumulator {
         }
         this.components = components;
         total = new Sums(components);
-        block = new Block(components);
     }
 
     /// Adds the observations with indices `from` (inclusive) to `to` (exclusive).
@@ -52,6 +53,9 @@ public final class Accumulator {
     }
 
     private void addBlock(double[][] values, int from, int to) {
+        if (block == null) {
+            block = new Block(components);
+        }
         if (block.reduce(values, from, to)) {
             total.merge(block.sums());
             return;
