@@ -17,6 +17,8 @@ import java.util.Set;
 final class Grammar {
     static final int DEEPEST = 500;
 
+    private static final String VALUE = "a number, a name, a function or an opening bracket was expected";
+
     private static final Set<String> COMPARISONS = Set.of("<", "<=", ">", ">=", "==", "!=");
 
     /// A bracket that is still open, and what was read inside since.
@@ -78,8 +80,9 @@ final class Grammar {
         }
         if (!afterValue) return Optional.of(valueMissing(tokens.size()));
         Token bracket = open.peek().bracket;
-        if (bracket != null) return fault(bracket, "closing bracket of " + Reading.quoted(bracket) + " missing");
-        return Optional.empty();
+        if (bracket == null) return Optional.empty();
+        return fault(bracket, "closing bracket of " + Reading.quoted(bracket) + " missing")
+                .map(p -> p.tryThis("close it with " + closing(bracket)));
     }
 
     private Optional<Problem> valueAt(int i) {
@@ -114,7 +117,8 @@ final class Grammar {
             open.peek().computes = true;
             return i > 0 && tokens.get(i - 1).isOneOf("+", "-")
                     ? fault(token, "two signs in a row")
-                            .map(p -> p.tryThis("put the second one in brackets, as in a - (-b)"))
+                            .map(p -> p.because("one sign at most stands before a value")
+                                    .tryThis("put the second one in brackets, as in a - (-b)"))
                     : Optional.empty();
         }
         if (token.isOneOf(")", "]") && i > 0 && tokens.get(i - 1).isOneOf("(", "[")) {
@@ -123,7 +127,7 @@ final class Grammar {
                     ? wrongArity(opened.function, 0)
                     : fault(token, "nothing stands between the brackets");
         }
-        return Optional.of(valueMissing(i));
+        return token.isOneOf(")", "]") && open.peek().bracket == null ? notOpen(token) : Optional.of(valueMissing(i));
     }
 
     private Optional<Problem> operatorAt(int i) {
@@ -149,10 +153,13 @@ final class Grammar {
     private Optional<Problem> close(int i) {
         Token token = tokens.get(i);
         Opened opened = open.peek();
-        if (opened.bracket == null) return fault(token, Reading.quoted(token) + " closes a bracket that is not open");
+        if (opened.bracket == null) {
+            return notOpen(token);
+        }
         if (opened.bracket.is("[") != token.is("]")) {
             return fault(token, Reading.quoted(opened.bracket) + " is closed by " + Reading.quoted(token))
-                    .map(p -> p.because("( ) group, [ ] hold a condition"));
+                    .map(p -> p.because("( ) group, [ ] hold a condition")
+                            .tryThis("close it with " + closing(opened.bracket)));
         }
         open.pop();
         value(opened.givesCondition());
@@ -191,24 +198,39 @@ final class Grammar {
         return values >= called.least() && values <= called.most();
     }
 
+    private static Optional<Problem> notOpen(Token token) {
+        return fault(token, Reading.quoted(token) + " closes a bracket that is not open")
+                .map(p -> p.tryThis("take it out, or open a bracket before it"));
+    }
+
     private Problem valueMissing(int i) {
         if (i == 0) {
             Token token = tokens.getFirst();
             int at = token.span().from();
-            Problem problem =
-                    Problem.of("value missing before " + Reading.quoted(token)).at(Place.of(new Span(at, at)));
+            Problem problem = Problem.of("value missing before " + Reading.quoted(token))
+                    .because(VALUE)
+                    .at(Place.of(new Span(at, at)));
             return token.is("|") ? problem.tryThis("write abs(x) for the size of x") : problem;
         }
         Token before = tokens.get(i - 1);
         int at = before.span().to();
-        return Problem.of("value missing after " + Reading.quoted(before)).at(Place.of(new Span(at, at)));
+        return Problem.of("value missing after " + Reading.quoted(before))
+                .because(VALUE)
+                .at(Place.of(new Span(at, at)));
     }
 
     private Optional<Problem> operatorMissing(int i) {
         Token left = tokens.get(i - 1);
         Token right = tokens.get(i);
+        String product = "for a product write " + factor(left) + "*" + factor(right);
+        boolean exponent = left.kind() == Kind.NUMBER
+                && right.text().equalsIgnoreCase("e")
+                && right.span().from() == left.span().to();
         return fault(right, "operator missing between " + Reading.quoted(left) + " and " + Reading.quoted(right))
-                .map(p -> p.tryThis("for a product write " + factor(left) + "*" + factor(right)));
+                .map(p -> p.because(exponent
+                                ? "an exponent has digits, as in 1.5e-3"
+                                : "two values stand side by side, and no product is understood")
+                        .tryThis(product));
     }
 
     private static String factor(Token token) {
@@ -257,6 +279,10 @@ final class Grammar {
                 .because("[c] is 1 where the condition c holds, 0 elsewhere")
                 .tryThis("write ( ) to group, or compare, as in [x > 0]")
                 .at(Place.of(new Span(opening.span().from(), closing.span().to()))));
+    }
+
+    private static String closing(Token bracket) {
+        return bracket.is("[") ? "]" : ")";
     }
 
     private static Optional<Problem> fault(Token token, String primary) {

@@ -44,20 +44,28 @@ public final class Reader {
     /// @param end where the formula ends
     static List<Problem> check(List<Token> tokens, Names names, int end) {
         if (tokens.isEmpty()) {
-            return List.of(Problem.of("formula is empty").at(Place.of(new Span(end, end))));
+            return List.of(Problem.of("formula is empty").tryThis("write one, as in a*b + c").at(Place.of(new Span(end, end))));
         }
         List<Problem> problems = new ArrayList<>(Reading.unreadable(tokens));
         boolean readable = problems.isEmpty();
-        problems.addAll(Reading.unknown(tokens, names));
+        Reading.unknown(tokens, names).stream()
+                .filter(problem -> problems.stream().noneMatch(other -> holds(other, problem)))
+                .forEach(problems::add);
         if (readable) {
             Grammar.firstFault(tokens, names)
-                    .filter(fault -> problems.stream()
-                            .noneMatch(problem -> problem.place().equals(fault.place())))
+                    .filter(fault -> problems.stream().noneMatch(other -> holds(other, fault)))
                     .ifPresent(problems::add);
         }
         problems.sort(Comparator.comparingInt(
                 problem -> problem.place().span().orElseThrow().from()));
         return List.copyOf(problems);
+    }
+
+    /// Whether a problem is named already, by one that stands around it.
+    private static boolean holds(Problem around, Problem inside) {
+        Span outer = around.place().span().orElseThrow();
+        Span inner = inside.place().span().orElseThrow();
+        return outer.from() <= inner.from() && inner.to() <= outer.to();
     }
 
     static List<Token> meaningful(List<Token> tokens) {

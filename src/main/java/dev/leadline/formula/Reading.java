@@ -111,7 +111,8 @@ final class Reading {
         return Problem.of("unknown name " + quoted(token))
                 .because("a name is that of an input, a constant or a step")
                 .tryThis(Hints.forWord(token.text())
-                        .or(() -> Nearest.to(token.text(), known).map(Reading::meant))
+                        .or(() -> product(token.text(), known))
+                        .or(() -> nearest(token.text(), known).map(Reading::meant))
                         .orElse("declare it, or correct its spelling"))
                 .at(Place.of(token.span()));
     }
@@ -121,11 +122,28 @@ final class Reading {
         return Problem.of("unknown function " + quoted(token))
                 .because("before ( stands the name of a function, or an operator")
                 .tryThis(Hints.forWord(token.text())
-                        .or(() -> Nearest.to(token.text(), known).map(Reading::meant))
-                        .or(() -> Nearest.to(token.text(), names.meanings().keySet())
+                        .or(() -> nearest(token.text(), known).map(Reading::meant))
+                        .or(() -> nearest(token.text(), List.copyOf(names.meanings().keySet()))
                                 .map(name -> "did you mean " + name + "*(...)?"))
                         .orElse("choose one of the functions that are known"))
                 .at(Place.of(token.span()));
+    }
+
+    /// A word made of two known names, or of one and digits.
+    private static Optional<String> product(String word, List<String> known) {
+        for (int i = 1; i < Math.min(word.length(), 40); i++) {
+            String left = word.substring(0, i);
+            String right = word.substring(i);
+            if (known.contains(left) && (known.contains(right) || right.matches("[0-9]+"))) {
+                return Optional.of("for a product write " + left + "*" + right);
+            }
+        }
+        return Optional.empty();
+    }
+
+    /// Of one or two letters only the case is a guess worth making.
+    private static Optional<String> nearest(String word, List<String> known) {
+        return Nearest.to(word, known).filter(name -> word.length() > 2 || name.equalsIgnoreCase(word));
     }
 
     private static String meant(String name) {

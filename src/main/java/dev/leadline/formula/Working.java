@@ -126,15 +126,19 @@ public final class Working {
             formulas.add(new Formula(text, Tokens.canonical(tokens)));
         }
         Expression expression = writer.expression();
+        Program program = Program.of(expression, inputs.size(), askedNodes);
         return new Working(
                 lines.stream().map(StepLine::step).toList(),
                 formulas,
                 declarations.notes(),
-                Program.of(expression, inputs.size(), askedNodes),
-                Program.of(
-                        expression,
-                        inputs.size(),
-                        Stream.concat(stepNodes.stream(), askedNodes.stream()).toList()),
+                program,
+                lines.isEmpty()
+                        ? program
+                        : Program.of(
+                                expression,
+                                inputs.size(),
+                                Stream.concat(stepNodes.stream(), askedNodes.stream())
+                                        .toList()),
                 askedNodes.stream().map(expression::isEvent).toList());
     }
 }
