@@ -47,6 +47,11 @@ public final class Functions {
         one("gammaFn", "gamma function at x; gammaFn(n + 1) is n factorial", Operation.GAMMA_FN);
         one("normalCdf", "chance that a standard normal value is at most x", Operation.NORMAL_CDF);
         one("normalPdf", "standard normal density at x", Operation.NORMAL_PDF);
+        one(
+                "normalQuantile",
+                "p",
+                "the x below which a standard normal value lies with chance p",
+                Operation.NORMAL_QUANTILE);
         add(new Function("not", 1, 1, "not(c)", "1 where c is 0, 0 elsewhere"), Optional.empty());
         add(
                 new Function(

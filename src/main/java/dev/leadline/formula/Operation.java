@@ -62,7 +62,8 @@ enum Operation {
     LGAMMA(GammaFunction::log, Kernels::logGamma),
     GAMMA_FN(GammaFunction::gamma, Kernels::gamma),
     NORMAL_CDF(Normal::cdf, Normal::cdf),
-    NORMAL_PDF(Normal::pdf, Normal::pdf);
+    NORMAL_PDF(Normal::pdf, Normal::pdf),
+    NORMAL_QUANTILE(Normal::quantile, Normal::quantile);
 
     /// The definition for one draw; operands that the operation does not have are ignored.
     interface Scalar {

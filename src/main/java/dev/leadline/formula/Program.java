@@ -45,6 +45,10 @@ public final class Program {
             this.places = new double[program.scratch + program.inputs + program.outputs + 1][];
             for (int i = 0; i < program.scratch; i++) places[i] = new double[BLOCK];
         }
+
+        int scratchColumns() {
+            return program.scratch;
+        }
     }
 
     private Program(Instruction[] instructions, int scratch, int inputs, int outputs, BitSet used) {
