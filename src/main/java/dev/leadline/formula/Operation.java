@@ -7,8 +7,11 @@ import dev.leadline.numeric.Log;
 import dev.leadline.numeric.Normal;
 import dev.leadline.numeric.Power;
 import dev.leadline.numeric.Trigonometry;
+import java.util.List;
+import java.util.Objects;
 import java.util.function.DoubleBinaryOperator;
 import java.util.function.DoubleUnaryOperator;
+import java.util.stream.Stream;
 
 /// What a node of an expression does with its operands: once for one draw, which is the definition, and as kernels
 /// over a block of draws, which give the same bits.
@@ -138,6 +141,10 @@ enum Operation {
     /// The first operand is a number, the second a column; `null` where there is no such kernel.
     Kernel numberLeft() {
         return numberLeft;
+    }
+
+    List<Kernel> kernels() {
+        return Stream.of(columns, numberRight, numberLeft).filter(Objects::nonNull).toList();
     }
 
     /// Whether the results may replace an operand: comparisons look at their operands twice.

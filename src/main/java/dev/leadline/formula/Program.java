@@ -20,6 +20,11 @@ public final class Program {
     /// Draws in a block at most.
     public static final int BLOCK = 1024;
 
+    /// HotSpot compiles a method for good after 600 calls, if its loops have turned 15,000 times.
+    private static final int WARM_RUNS = 1_000;
+
+    private static final int WARM_ROWS = 64;
+
     private static final Kernel FILL = (a, b, c, k, z, n) -> Arrays.fill(z, 0, n, k);
     private static final Kernel COPY = (a, b, c, k, z, n) -> System.arraycopy(a, 0, z, 0, n);
 
@@ -63,6 +68,21 @@ public final class Program {
     /// @param results nodes of the expression, one for each output
     static Program of(Expression expression, int inputs, List<Integer> results) {
         return new Compilation(expression.nodes(), inputs, results).program();
+    }
+
+    /// Runs every kernel often enough to be compiled, so that the first formula is fast; takes some tenths of a second, and
+    /// belongs on a thread of its own at the start of a program that stays open.
+    public static void warmUp() {
+        double[][] columns = new double[3][WARM_ROWS];
+        for (double[] column : columns) Arrays.fill(column, 0.5);
+        double[] z = new double[WARM_ROWS];
+        for (Operation operation : Operation.values()) {
+            for (Kernel kernel : operation.kernels()) {
+                for (int i = 0; i < WARM_RUNS; i++) {
+                    kernel.fill(columns[0], columns[1], columns[2], 0.5, z, WARM_ROWS);
+                }
+            }
+        }
     }
 
     public int outputs() {

@@ -141,6 +141,15 @@ class ProgramTest {
     }
 
     @Test
+    void compiledKernelsGiveTheSameBits() {
+        var program = program("exp(-x^2/3)*[y < c] + if(x > 1, log(y), tanh(x^2.5))");
+        double[][] columns = columns(3, Program.BLOCK, 8);
+        double[] cold = evaluate(program, columns, Program.BLOCK);
+        Program.warmUp();
+        assertArrayEquals(cold, evaluate(program, columns, Program.BLOCK));
+    }
+
+    @Test
     void knowsWhichInputsItUses() {
         var program = program("x + 1", "0*c");
         assertEquals(2, program.outputs());

@@ -11,9 +11,9 @@ import org.junit.jupiter.params.provider.CsvSource;
 
 /// Against values of 60 digits (`numeric/gamma.py`).
 class GammaFunctionTest {
-    private static final int GAMMA_ULPS = 20;
-    private static final int LOG_ULPS = 8;
-    private static final double LOG_OF_NEGATIVE = 1e-15;
+    private static final int GAMMA_ULPS = 6;
+    private static final int LOG_ULPS = 4;
+    private static final double LOG_OF_NEGATIVE = 5e-16;
 
     @ParameterizedTest(name = "x = {0}")
     @CsvFileSource(resources = "/numeric/gamma.csv", numLinesToSkip = 2)
