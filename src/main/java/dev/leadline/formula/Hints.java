@@ -43,12 +43,23 @@ final class Hints {
             Map.entry("°", "write *deg"),
             Map.entry("∞", "every number of a formula is finite"));
 
-    /// In small letters.
+    /// Where a value stands or a function; in small letters.
     private static final Map<String, String> WORDS = Map.ofEntries(
             Map.entry("and", "write & for and"),
             Map.entry("or", "write | for or"),
             Map.entry("xor", "write != for one of two but not both"),
             Map.entry("mod", "write x - n*floor(x/n)"),
+            Map.entry("true", "write 1"),
+            Map.entry("false", "write 0"),
+            Map.entry("π", "write pi"),
+            Map.entry("inf", "every number of a formula is finite"),
+            Map.entry("infinity", "every number of a formula is finite"),
+            Map.entry("nan", "every number of a formula is finite"),
+            Map.entry("rand", "declare an input with a density"),
+            Map.entry("random", "declare an input with a density"));
+
+    /// Where a function stands; as names of inputs some of these are common. In small letters.
+    private static final Map<String, String> FUNCTIONS = Map.ofEntries(
             Map.entry("ln", "log is the natural logarithm"),
             Map.entry("lg", "log10 is the logarithm to base 10"),
             Map.entry("log2", "write log(x)/log(2)"),
@@ -65,15 +76,7 @@ final class Hints {
             Map.entry("cot", "write 1/tan(x)"),
             Map.entry("gamma", "write gammaFn(x), or lgamma(x) for its logarithm"),
             Map.entry("factorial", "write gammaFn(n + 1)"),
-            Map.entry("phi", "write normalCdf(x), or normalPdf(x) for the density"),
-            Map.entry("true", "write 1"),
-            Map.entry("false", "write 0"),
-            Map.entry("π", "write pi"),
-            Map.entry("inf", "every number of a formula is finite"),
-            Map.entry("infinity", "every number of a formula is finite"),
-            Map.entry("nan", "every number of a formula is finite"),
-            Map.entry("rand", "declare an input with a density"),
-            Map.entry("random", "declare an input with a density"));
+            Map.entry("phi", "write normalCdf(x), or normalPdf(x) for the density"));
 
     private Hints() {}
 
@@ -83,5 +86,9 @@ final class Hints {
 
     static Optional<String> forWord(String word) {
         return Optional.ofNullable(WORDS.get(word.toLowerCase(Locale.ROOT)));
+    }
+
+    static Optional<String> forFunction(String word) {
+        return forWord(word).or(() -> Optional.ofNullable(FUNCTIONS.get(word.toLowerCase(Locale.ROOT))));
     }
 }

@@ -21,12 +21,17 @@ public final class Reader {
         return List.copyOf(Tokens.of(text));
     }
 
-    /// The names that a formula uses, in the order in which they first stand; functions and the constants that every
-    /// formula knows are not among them. Never fails.
+    /// The names that a formula uses, in the order in which they first stand. Functions are not among them, even unknown
+    /// ones, nor are the constants that every formula knows. Never fails.
     public static SequencedSet<String> names(String text) {
         var names = new LinkedHashSet<String>();
-        for (Token token : Tokens.of(text)) {
-            if (token.kind() == Kind.NAME && !Functions.constants().containsKey(token.text())) names.add(token.text());
+        List<Token> tokens = Tokens.of(text);
+        for (int i = 0; i < tokens.size(); i++) {
+            Token token = tokens.get(i);
+            boolean called = i + 1 < tokens.size() && tokens.get(i + 1).is("(");
+            if (token.kind() == Kind.NAME && !called && !Functions.constants().containsKey(token.text())) {
+                names.add(token.text());
+            }
         }
         return names;
     }
@@ -53,12 +58,23 @@ public final class Reader {
                 .forEach(problems::add);
         if (readable) {
             Grammar.firstFault(tokens, names)
-                    .filter(fault -> problems.stream().noneMatch(other -> holds(other, fault)))
+                    .filter(fault -> problems.stream().noneMatch(other -> explains(other, fault, tokens)))
                     .ifPresent(problems::add);
         }
         problems.sort(Comparator.comparingInt(
                 problem -> problem.place().span().orElseThrow().from()));
         return List.copyOf(problems);
+    }
+
+    /// Whether a fault may go away with `other`: an unknown word at its place or right before it.
+    private static boolean explains(Problem other, Problem fault, List<Token> tokens) {
+        int at = fault.place().span().orElseThrow().from();
+        return holds(other, fault)
+                || tokens.stream()
+                        .takeWhile(token -> token.span().from() < at)
+                        .reduce((_, last) -> last)
+                        .filter(before -> before.span().equals(other.place().span().orElseThrow()))
+                        .isPresent();
     }
 
     /// Whether a problem is named already, by one that stands around it.

@@ -49,10 +49,19 @@ final class Reading {
             if (token.kind() != Kind.NAME || names.meaning(token.text()).isPresent() || !seen.add(token.text())) {
                 continue;
             }
-            boolean called = i + 1 < tokens.size() && tokens.get(i + 1).is("(");
-            problems.add(called ? unknownFunction(token, names) : unknownName(token, names));
+            problems.add(takesValue(tokens, i) ? unknownFunction(token, names) : unknownName(token, names));
         }
         return problems;
+    }
+
+    /// Whether the name at `i` is used as a function: before a bracket, or, if it is one that is known elsewhere, before a
+    /// value.
+    private static boolean takesValue(List<Token> tokens, int i) {
+        if (i + 1 == tokens.size()) return false;
+        Token next = tokens.get(i + 1);
+        boolean meant = Hints.forWord(tokens.get(i).text()).isEmpty()
+                && Hints.forFunction(tokens.get(i).text()).isPresent();
+        return next.is("(") || meant && (next.isOperand() || next.kind() == Kind.FUNCTION);
     }
 
     private static Problem mark(Token token) {
@@ -120,8 +129,8 @@ final class Reading {
     private static Problem unknownFunction(Token token, Names names) {
         var known = Functions.all().stream().map(Function::name).toList();
         return Problem.of("unknown function " + quoted(token))
-                .because("before ( stands the name of a function, or an operator")
-                .tryThis(Hints.forWord(token.text())
+                .because("functions are those of the list; a product is written with *")
+                .tryThis(Hints.forFunction(token.text())
                         .or(() -> nearest(token.text(), known).map(Reading::meant))
                         .or(() -> nearest(token.text(), List.copyOf(names.meanings().keySet()))
                                 .map(name -> "did you mean " + name + "*(...)?"))

@@ -38,8 +38,10 @@ record StepLine(String line, String path, Token name, List<Token> tokens, String
     }
 
     private static Refusal refusal(String primary, Span span) {
-        return new Refusal(
-                Problem.of(primary).because("a step is written name = formula").at(Place.of(span)));
+        return new Refusal(Problem.of(primary)
+                .because("a step is written name = formula")
+                .tryThis("write a name and = before it, as in q = 0.5*v^2")
+                .at(Place.of(span)));
     }
 
     List<Problem> check(Names names) {

@@ -61,8 +61,9 @@ class TokensTest {
     @Test
     void namesOfAFormula() {
         assertEquals(
-                List.of("b", "a", "unknown"), List.copyOf(Reader.names("b + sin(a)*pi - b/unknown(2) # not this")));
+                List.of("b", "a"), List.copyOf(Reader.names("b + sin(a)*pi - b/unknown(2) # not this")));
         assertEquals(List.of(), List.copyOf(Reader.names("2*(")));
+        assertEquals(List.of("x"), List.copyOf(Reader.names("ln(x)")));
     }
 
     @Test

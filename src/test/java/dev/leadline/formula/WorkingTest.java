@@ -127,10 +127,10 @@ class WorkingTest {
     void linesThatAreNoSteps() {
         assertEquals(
                 List.of(
-                        "steps[0] 2-3: step has no name",
-                        "steps[1] 0-0: step is empty",
+                        "steps[0] 2-3: step has no name / write a name and = before it, as in q = 0.5*v^2",
+                        "steps[1] 0-0: step is empty / write a name and = before it, as in q = 0.5*v^2",
                         "steps[2] 0-1: \"3\" is not a name",
-                        "steps[6] 2-4: step has no name",
+                        "steps[6] 2-4: step has no name / write a name and = before it, as in q = 0.5*v^2",
                         "steps[4] 3-3: formula is empty / write one, as in a*b + c",
                         "steps[5] 6-7: \"=\" does not compare / write == to compare, and name a value in a step"),
                 shown(List.of("x"), List.of("x + 1", "", "3 = x", "ok = x", "b =", "c = x = 1", "d == 2"), "ok"));
