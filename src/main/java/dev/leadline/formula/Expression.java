@@ -12,8 +12,7 @@ import java.util.Map;
 ///
 /// Numbers are computed with as far as they go, and a few forms are exchanged for others, but only where every draw
 /// keeps its bits (the sign of a `NaN` aside): `a - 3` becomes `a + -3`, `x / 4` becomes `x * 0.25`. `0 * x` stays,
-/// since
-/// `x` may be infinite. Grows while formulas are added; confined to the thread that adds them.
+/// since `x` may be infinite. Grows while formulas are added; confined to the thread that adds them.
 final class Expression {
     private final List<Node> nodes = new ArrayList<>();
     private final Map<Node, Integer> known = new HashMap<>();

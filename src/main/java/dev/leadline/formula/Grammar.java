@@ -31,8 +31,7 @@ final class Grammar {
         Token comparison;
 
         /// Whether the content compares or joins conditions, whether it computes with numbers, and whether its last
-        /// value
-        /// can be a condition.
+        /// value can be a condition.
         boolean compares;
 
         boolean computes;
@@ -227,9 +226,10 @@ final class Grammar {
                 && right.text().equalsIgnoreCase("e")
                 && right.span().from() == left.span().to();
         return fault(right, "operator missing between " + Reading.quoted(left) + " and " + Reading.quoted(right))
-                .map(p -> p.because(exponent
-                                ? "an exponent has digits, as in 1.5e-3"
-                                : "two values stand side by side, and no product is understood")
+                .map(p -> p.because(
+                                exponent
+                                        ? "an exponent has digits, as in 1.5e-3"
+                                        : "two values stand side by side, and no product is understood")
                         .tryThis(product));
     }
 

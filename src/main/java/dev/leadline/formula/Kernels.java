@@ -259,8 +259,7 @@ final class Kernels {
     }
 
     /// Chooses by the bits of the condition: bit 61 is set in 1 and not in 0, bit 62 in `NaN` alone, which sets every
-    /// bit
-    /// of the result and so makes it `NaN`. A branch would cost 4.6 ns on random data, this costs .7.
+    /// bit of the result and so makes it `NaN`. A branch would cost 4.6 ns on random data, this costs .7.
     ///
     /// @param c truths: 0, 1 or `NaN`
     static void choose(double[] c, double[] a, double[] b, double[] z, int n) {

@@ -144,7 +144,9 @@ enum Operation {
     }
 
     List<Kernel> kernels() {
-        return Stream.of(columns, numberRight, numberLeft).filter(Objects::nonNull).toList();
+        return Stream.of(columns, numberRight, numberLeft)
+                .filter(Objects::nonNull)
+                .toList();
     }
 
     /// Whether the results may replace an operand: comparisons look at their operands twice.

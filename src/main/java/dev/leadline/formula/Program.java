@@ -14,8 +14,7 @@ import java.util.List;
 ///
 /// A list of instructions in the order of a postfix notation. Each names the places of its operands and of its result:
 /// first the scratch columns, then the inputs, then the results. A scratch column is given on as soon as its last
-/// reader
-/// is done, so that few are needed and they stay in the cache.
+/// reader is done, so that few are needed and they stay in the cache.
 public final class Program {
     /// Draws in a block at most.
     public static final int BLOCK = 1024;
@@ -70,8 +69,8 @@ public final class Program {
         return new Compilation(expression.nodes(), inputs, results).program();
     }
 
-    /// Runs every kernel often enough to be compiled, so that the first formula is fast; takes some tenths of a second, and
-    /// belongs on a thread of its own at the start of a program that stays open.
+    /// Runs every kernel often enough to be compiled, so that the first formula is fast. Takes some tenths of a second,
+    /// and belongs on a thread of its own at the start of a program that stays open.
     public static void warmUp() {
         double[][] columns = new double[3][WARM_ROWS];
         for (double[] column : columns) Arrays.fill(column, 0.5);

@@ -21,8 +21,8 @@ public final class Reader {
         return List.copyOf(Tokens.of(text));
     }
 
-    /// The names that a formula uses, in the order in which they first stand. Functions are not among them, even unknown
-    /// ones, nor are the constants that every formula knows. Never fails.
+    /// The names that a formula uses, in the order in which they first stand. Functions are not among them, even
+    /// unknown ones, nor are the constants that every formula knows. Never fails.
     public static SequencedSet<String> names(String text) {
         var names = new LinkedHashSet<String>();
         List<Token> tokens = Tokens.of(text);
@@ -49,7 +49,9 @@ public final class Reader {
     /// @param end where the formula ends
     static List<Problem> check(List<Token> tokens, Names names, int end) {
         if (tokens.isEmpty()) {
-            return List.of(Problem.of("formula is empty").tryThis("write one, as in a*b + c").at(Place.of(new Span(end, end))));
+            return List.of(Problem.of("formula is empty")
+                    .tryThis("write one, as in a*b + c")
+                    .at(Place.of(new Span(end, end))));
         }
         List<Problem> problems = new ArrayList<>(Reading.unreadable(tokens));
         boolean readable = problems.isEmpty();
@@ -73,7 +75,8 @@ public final class Reader {
                 || tokens.stream()
                         .takeWhile(token -> token.span().from() < at)
                         .reduce((_, last) -> last)
-                        .filter(before -> before.span().equals(other.place().span().orElseThrow()))
+                        .filter(before ->
+                                before.span().equals(other.place().span().orElseThrow()))
                         .isPresent();
     }
 

@@ -54,8 +54,8 @@ final class Reading {
         return problems;
     }
 
-    /// Whether the name at `i` is used as a function: before a bracket, or, if it is one that is known elsewhere, before a
-    /// value.
+    /// Whether the name at `i` is used as a function: before a bracket, or, if it is one that is known elsewhere,
+    /// before a value.
     private static boolean takesValue(List<Token> tokens, int i) {
         if (i + 1 == tokens.size()) return false;
         Token next = tokens.get(i + 1);
@@ -132,7 +132,9 @@ final class Reading {
                 .because("functions are those of the list; a product is written with *")
                 .tryThis(Hints.forFunction(token.text())
                         .or(() -> nearest(token.text(), known).map(Reading::meant))
-                        .or(() -> nearest(token.text(), List.copyOf(names.meanings().keySet()))
+                        .or(() -> nearest(
+                                        token.text(),
+                                        List.copyOf(names.meanings().keySet()))
                                 .map(name -> "did you mean " + name + "*(...)?"))
                         .orElse("choose one of the functions that are known"))
                 .at(Place.of(token.span()));

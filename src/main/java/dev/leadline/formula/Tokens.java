@@ -10,8 +10,7 @@ import java.util.List;
 /// One pass, linear in the length of the text.
 final class Tokens {
     /// Longest first, so that `<=` is not read as `<` and `=`. The last rows are no marks of ours; they are read whole
-    /// so
-    /// that one answer covers them.
+    /// so that one answer covers them.
     private static final List<String> PAIRS = List.of("<=", ">=", "==", "!=", "&&", "||", "**", "<>", "=<", "=>");
 
     private static final String SINGLES = "+-*/^<>&|()[],=";

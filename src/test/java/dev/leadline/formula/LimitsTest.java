@@ -57,8 +57,13 @@ class LimitsTest {
 
     @Test
     void longCall() {
-        assertEquals(9_999, soon(() -> value(
-                IntStream.range(0, 10_000).mapToObj(i -> "x*" + i).collect(Collectors.joining(",", "max(", ")")), 1)));
+        assertEquals(
+                9_999,
+                soon(() -> value(
+                        IntStream.range(0, 10_000)
+                                .mapToObj(i -> "x*" + i)
+                                .collect(Collectors.joining(",", "max(", ")")),
+                        1)));
     }
 
     @Test
@@ -86,8 +91,10 @@ class LimitsTest {
 
     @Test
     void manyUnknownNames() {
-        assertEquals("unknown name \"n0\"", soon(() -> refusal(
-                IntStream.range(0, 15_000).mapToObj(i -> "n" + i).collect(Collectors.joining("+")))));
+        assertEquals(
+                "unknown name \"n0\"",
+                soon(() -> refusal(
+                        IntStream.range(0, 15_000).mapToObj(i -> "n" + i).collect(Collectors.joining("+")))));
     }
 
     @Test
@@ -111,7 +118,8 @@ class LimitsTest {
                 .toList();
         var working = soon(() -> Working.of(List.of("x"), new LinkedHashMap<>(), steps, List.of("s0")));
         double[][] results = new double[1][1];
-        working.program().evaluate(new double[][] {{1}}, 1, results, working.program().workspace());
+        working.program()
+                .evaluate(new double[][] {{1}}, 1, results, working.program().workspace());
         assertEquals(2_000, results[0][0]);
     }
 
@@ -122,7 +130,8 @@ class LimitsTest {
                 .toList();
         var working = soon(() -> Working.of(List.of("x"), new LinkedHashMap<>(), steps, List.of("s99")));
         double[][] results = new double[1][1];
-        working.program().evaluate(new double[][] {{1}}, 1, results, working.program().workspace());
+        working.program()
+                .evaluate(new double[][] {{1}}, 1, results, working.program().workspace());
         assertEquals(0x1p99, results[0][0]);
     }
 }

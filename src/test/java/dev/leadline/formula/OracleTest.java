@@ -58,8 +58,10 @@ class OracleTest {
     }
 
     private static void assertSameBits(double expected, double actual, String where) {
-        assertEquals(Double.doubleToLongBits(expected), Double.doubleToLongBits(actual), () ->
-                where + ": expected " + expected + ", was " + actual);
+        assertEquals(
+                Double.doubleToLongBits(expected),
+                Double.doubleToLongBits(actual),
+                () -> where + ": expected " + expected + ", was " + actual);
     }
 
     private static double[][] columns(long seed) {

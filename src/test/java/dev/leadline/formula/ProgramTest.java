@@ -20,8 +20,22 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 class ProgramTest {
     private static final double[] SPECIAL = {
-        0, -0.0, 1, -1, Double.NaN, Double.POSITIVE_INFINITY, Double.NEGATIVE_INFINITY, Double.MIN_VALUE, Double.MAX_VALUE,
-        -Double.MAX_VALUE, .5, 2.5, -2.5, 1e-300, 171.5, -170.5
+        0,
+        -0.0,
+        1,
+        -1,
+        Double.NaN,
+        Double.POSITIVE_INFINITY,
+        Double.NEGATIVE_INFINITY,
+        Double.MIN_VALUE,
+        Double.MAX_VALUE,
+        -Double.MAX_VALUE,
+        .5,
+        2.5,
+        -2.5,
+        1e-300,
+        171.5,
+        -170.5
     };
 
     private static Program program(String... asked) {
@@ -98,8 +112,14 @@ class ProgramTest {
 
     static Stream<String> formulas() {
         return Stream.of(
-                "exp(-x^2/3)", "x*sin(3*x) + log(1 + x)", "[x*y - c*x - y^2/4 < 0]", "max(0, 100*exp(0.03 + 0.2*x) - 105)",
-                "if(x > y, exp(c), hypot(3, c))", "x^y + 2^x + x^2.5", "atan2(1, x) - atan2(x, 1)", "lgamma(x) + erf(y)");
+                "exp(-x^2/3)",
+                "x*sin(3*x) + log(1 + x)",
+                "[x*y - c*x - y^2/4 < 0]",
+                "max(0, 100*exp(0.03 + 0.2*x) - 105)",
+                "if(x > y, exp(c), hypot(3, c))",
+                "x^y + 2^x + x^2.5",
+                "atan2(1, x) - atan2(x, 1)",
+                "lgamma(x) + erf(y)");
     }
 
     @ParameterizedTest
@@ -115,7 +135,9 @@ class ProgramTest {
                     .map(column -> java.util.Arrays.copyOfRange(column, start, start + rows))
                     .toArray(double[][]::new);
             assertArrayEquals(
-                    java.util.Arrays.copyOfRange(whole, from, from + rows), evaluate(program, part, rows), "from " + from);
+                    java.util.Arrays.copyOfRange(whole, from, from + rows),
+                    evaluate(program, part, rows),
+                    "from " + from);
         }
     }
 
@@ -164,8 +186,7 @@ class ProgramTest {
 
     @Test
     void stepsThatNobodyAsksForAreNotComputed() {
-        var working = Working.of(
-                List.of("x", "y"), new LinkedHashMap<>(), List.of("a = y^2", "b = x"), List.of("b"));
+        var working = Working.of(List.of("x", "y"), new LinkedHashMap<>(), List.of("a = y^2", "b = x"), List.of("b"));
         assertFalse(working.program().uses(1));
         assertTrue(working.everyStep().uses(1));
     }
@@ -188,7 +209,8 @@ class ProgramTest {
 
     @Test
     void fewColumnsOfScratch() {
-        String sum = IntStream.range(0, 500).mapToObj(i -> "sin(x + " + i + ")*y").reduce("c", (a, b) -> a + " + " + b);
+        String sum =
+                IntStream.range(0, 500).mapToObj(i -> "sin(x + " + i + ")*y").reduce("c", (a, b) -> a + " + " + b);
         assertTrue(program(sum).workspace().scratchColumns() <= 3);
     }
 

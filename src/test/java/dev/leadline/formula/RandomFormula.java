@@ -12,13 +12,25 @@ final class RandomFormula {
     static final List<String> INPUTS = List.of("x", "y2", "_z", "größe");
     private static final List<String> NUMBERS = List.of("0", "1", "2", "3", ".5", "0.25", "7.", "1.5e-3", "2E3", "10");
 
-    private static final List<String> SIMPLE = List.of("exp", "log", "sqrt", "abs", "sign", "sin", "floor", "tanh", "cbrt");
+    private static final List<String> SIMPLE =
+            List.of("exp", "log", "sqrt", "abs", "sign", "sin", "floor", "tanh", "cbrt");
 
     /// From weakest to strongest; a value stands alone.
     private static final Map<String, Integer> PRECEDENCE = Map.ofEntries(
-            Map.entry("|", 1), Map.entry("&", 2), Map.entry("<", 3), Map.entry("<=", 3), Map.entry(">", 3),
-            Map.entry(">=", 3), Map.entry("==", 3), Map.entry("!=", 3), Map.entry("+", 4), Map.entry("-", 4),
-            Map.entry("*", 5), Map.entry("/", 5), Map.entry("neg", 6), Map.entry("^", 7));
+            Map.entry("|", 1),
+            Map.entry("&", 2),
+            Map.entry("<", 3),
+            Map.entry("<=", 3),
+            Map.entry(">", 3),
+            Map.entry(">=", 3),
+            Map.entry("==", 3),
+            Map.entry("!=", 3),
+            Map.entry("+", 4),
+            Map.entry("-", 4),
+            Map.entry("*", 5),
+            Map.entry("/", 5),
+            Map.entry("neg", 6),
+            Map.entry("^", 7));
 
     private static final List<String> ARITHMETIC = List.of("+", "-", "*", "/", "+", "-", "*", "/", "^");
     private static final List<String> COMPARISONS = List.of("<", "<=", ">", ">=", "==", "!=");
@@ -84,7 +96,8 @@ final class RandomFormula {
             case 4 -> new Part("not", List.of(condition(depth - 1)));
             case 5 -> step(condition(depth - 1));
             case 6 -> new Part("&", List.of(number(depth - 1), condition(depth - 1)));
-            default -> new Part(pick(COMPARISONS), List.of(number(Math.max(0, depth - 1)), number(Math.max(0, depth - 1))));
+            default ->
+                new Part(pick(COMPARISONS), List.of(number(Math.max(0, depth - 1)), number(Math.max(0, depth - 1))));
         };
     }
 
@@ -122,7 +135,8 @@ final class RandomFormula {
                 int left = own == 3 ? 4 : own;
                 String right = inside(parts.get(1), own + 1, ours);
                 boolean twoSigns = own == 4 && right.startsWith("-");
-                yield inside(parts.get(0), left, ours) + " " + word + (twoSigns ? " (" + right + ")" : right.isEmpty() ? "" : " " + right);
+                yield inside(parts.get(0), left, ours) + " " + word
+                        + (twoSigns ? " (" + right + ")" : right.isEmpty() ? "" : " " + right);
             }
         };
     }
@@ -138,7 +152,8 @@ final class RandomFormula {
 
     private String callOf(Part part, boolean ours) {
         return part.word() + "("
-                + String.join(", ", part.parts().stream().map(p -> write(p, ours)).toList())
+                + String.join(
+                        ", ", part.parts().stream().map(p -> write(p, ours)).toList())
                 + ")";
     }
 

@@ -50,10 +50,37 @@ class RefusalsTest {
     @ParameterizedTest
     @ValueSource(
             strings = {
-                "x", "-x", "+x", "2^-1", "x*-y", "x/+y", "-x^2", "[x > 1 & y < 2]", "[load]", "[(x > 1)]", "[not(x)]", "[[x > 1]]",
-                "max(x, y, 1, 2)", "if(x > 1, -y, +y)", "1.", ".5", "1e3", "1E-3", "2.5e+10", "0", "0.000e-999", "x # m",
-                "x\n+ y", "pi*e*deg", "x < y & y < 3", "x < y | y == 2 & x != 1", "(x < 1) == (y < 1)", "[x < 1] < [y < 1]",
-                "load + cost", "((((x))))", "x\u00a0+ y"
+                "x",
+                "-x",
+                "+x",
+                "2^-1",
+                "x*-y",
+                "x/+y",
+                "-x^2",
+                "[x > 1 & y < 2]",
+                "[load]",
+                "[(x > 1)]",
+                "[not(x)]",
+                "[[x > 1]]",
+                "max(x, y, 1, 2)",
+                "if(x > 1, -y, +y)",
+                "1.",
+                ".5",
+                "1e3",
+                "1E-3",
+                "2.5e+10",
+                "0",
+                "0.000e-999",
+                "x # m",
+                "x\n+ y",
+                "pi*e*deg",
+                "x < y & y < 3",
+                "x < y | y == 2 & x != 1",
+                "(x < 1) == (y < 1)",
+                "[x < 1] < [y < 1]",
+                "load + cost",
+                "((((x))))",
+                "x\u00a0+ y"
             })
     void accepts(String formula) {
         assertEquals(java.util.List.of(), Reader.check(formula, NAMES));

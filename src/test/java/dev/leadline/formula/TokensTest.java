@@ -48,8 +48,12 @@ class TokensTest {
             String where = "seed " + seed + ": " + text;
             int end = 0;
             for (Token token : Reader.tokens(text)) {
-                assertTrue(text.substring(end, token.span().from()).isBlank()
-                        || text.substring(end, token.span().from()).chars().allMatch(Character::isSpaceChar), where);
+                assertTrue(
+                        text.substring(end, token.span().from()).isBlank()
+                                || text.substring(end, token.span().from())
+                                        .chars()
+                                        .allMatch(Character::isSpaceChar),
+                        where);
                 assertTrue(token.span().to() > token.span().from(), where);
                 end = token.span().to();
             }
@@ -60,8 +64,7 @@ class TokensTest {
 
     @Test
     void namesOfAFormula() {
-        assertEquals(
-                List.of("b", "a"), List.copyOf(Reader.names("b + sin(a)*pi - b/unknown(2) # not this")));
+        assertEquals(List.of("b", "a"), List.copyOf(Reader.names("b + sin(a)*pi - b/unknown(2) # not this")));
         assertEquals(List.of(), List.copyOf(Reader.names("2*(")));
         assertEquals(List.of("x"), List.copyOf(Reader.names("ln(x)")));
     }
@@ -70,10 +73,13 @@ class TokensTest {
     void everyFunctionIsDescribedAndCanBeCalled() {
         assertEquals(34, Functions.all().size());
         for (Function function : Functions.all()) {
-            assertTrue(!function.meaning().isBlank() && function.form().startsWith(function.name() + "("), function.name());
+            assertTrue(
+                    !function.meaning().isBlank() && function.form().startsWith(function.name() + "("),
+                    function.name());
             String values = String.join(", ", java.util.Collections.nCopies(function.least(), "0.5"));
             assertTrue(
-                    Reader.check(function.name() + "(" + values + ")", Names.of(java.util.Map.of())).isEmpty(),
+                    Reader.check(function.name() + "(" + values + ")", Names.of(java.util.Map.of()))
+                            .isEmpty(),
                     function.name());
         }
     }

@@ -55,8 +55,11 @@ class WorkingTest {
                 List.of("load > 480 + s", "q"));
         assertEquals("Pa", working.steps().get(1).comment());
         assertEquals("", working.steps().get(0).comment());
-        assertEquals(new Formula("0.5*1.25*v^2", "0.5 * 1.25 * v ^ 2"), working.steps().get(1).formula());
-        assertEquals(new Formula("load > 480 + s", "load > 480 + s"), working.asked().getFirst());
+        assertEquals(
+                new Formula("0.5*1.25*v^2", "0.5 * 1.25 * v ^ 2"),
+                working.steps().get(1).formula());
+        assertEquals(
+                new Formula("load > 480 + s", "load > 480 + s"), working.asked().getFirst());
         double q = 0.5 * 1.25 * 30 * 30;
         double load = q * 1180 / 1000;
         org.junit.jupiter.api.Assertions.assertArrayEquals(
@@ -105,8 +108,7 @@ class WorkingTest {
     @ParameterizedTest
     @ValueSource(strings = {"", "2x", "a b", "a-b", " x", "x.", "²", "a'", "#"})
     void refusesName(String name) {
-        assertEquals(
-                List.of("inputs[0]: \"" + name + "\" is not a name"), shown(List.of(name), List.of(), "1"));
+        assertEquals(List.of("inputs[0]: \"" + name + "\" is not a name"), shown(List.of(name), List.of(), "1"));
     }
 
     @ParameterizedTest
@@ -165,14 +167,30 @@ class WorkingTest {
         SequencedMap<String, Double> constants = new LinkedHashMap<>();
         constants.put("k", Double.NaN);
         var refusal = assertThrows(Refusal.class, () -> Working.of(List.of(), constants, List.of(), List.of("k")));
-        assertEquals("constants[0]: constant \"k\" is NaN but must be finite", shown(refusal.problems().getFirst()));
+        assertEquals(
+                "constants[0]: constant \"k\" is NaN but must be finite",
+                shown(refusal.problems().getFirst()));
     }
 
     @ParameterizedTest
     @ValueSource(
             strings = {
-                "x > 1", "x >= 1 & y < 2", "x == 1 | y", "x & y", "not(x)", "[x > 1]", "[x]", "1 > 2", "storm", "[storm]",
-                "if(x > 1, y > 1, 0)", "if(x, 1, storm)", "max(x > 1, y > 1)", "min(x > 1, 1)", "(x > 1)*(y > 1)", "1 - [x > 1]",
+                "x > 1",
+                "x >= 1 & y < 2",
+                "x == 1 | y",
+                "x & y",
+                "not(x)",
+                "[x > 1]",
+                "[x]",
+                "1 > 2",
+                "storm",
+                "[storm]",
+                "if(x > 1, y > 1, 0)",
+                "if(x, 1, storm)",
+                "max(x > 1, y > 1)",
+                "min(x > 1, 1)",
+                "(x > 1)*(y > 1)",
+                "1 - [x > 1]",
                 "if(x > 1, if(y > 1, 1, 0), y == 1)"
             })
     void events(String formula) {
@@ -181,16 +199,26 @@ class WorkingTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"x", "x*y", "[x > 1] + [y > 1]", "2*(x > 1)", "if(x > 1, y, 0)", "max(x, y > 1)", "-[x > 1]", "2"})
+    @ValueSource(
+            strings = {"x", "x*y", "[x > 1] + [y > 1]", "2*(x > 1)", "if(x > 1, y, 0)", "max(x, y > 1)", "-[x > 1]", "2"
+            })
     void notEvents(String formula) {
-        assertFalse(Working.of(List.of("x", "y"), NO_CONSTANTS, List.of(), List.of(formula)).isEvent(0));
+        assertFalse(Working.of(List.of("x", "y"), NO_CONSTANTS, List.of(), List.of(formula))
+                .isEvent(0));
     }
 
     @ParameterizedTest
     @ValueSource(
             strings = {
-                "x+1", " x  +\n1 # unit", "-x^2*3/(x-1)", "if(x>1,max(x,2,3),[x<=0])", "1e-3*x", "x*-2", "not(x>1)&x<2|x==.5",
-                "sin( pi *x)", "1.50*x"
+                "x+1",
+                " x  +\n1 # unit",
+                "-x^2*3/(x-1)",
+                "if(x>1,max(x,2,3),[x<=0])",
+                "1e-3*x",
+                "x*-2",
+                "not(x>1)&x<2|x==.5",
+                "sin( pi *x)",
+                "1.50*x"
             })
     void canonicalTextSaysTheSameAndStays(String formula) {
         var first = Working.of(List.of("x"), NO_CONSTANTS, List.of(), List.of(formula));
@@ -204,8 +232,8 @@ class WorkingTest {
 
     @Test
     void canonicalTextForgetsSpacesAndComments() {
-        var working = Working.of(
-                List.of("x"), NO_CONSTANTS, List.of("a=x+ 1#m"), List.of("2 *a # twice", "max( x,a )<= -x"));
+        var working =
+                Working.of(List.of("x"), NO_CONSTANTS, List.of("a=x+ 1#m"), List.of("2 *a # twice", "max( x,a )<= -x"));
         assertEquals("x + 1", working.steps().getFirst().formula().canonical());
         assertEquals("2 * a", working.asked().get(0).canonical());
         assertEquals("max ( x , a ) <= - x", working.asked().get(1).canonical());
