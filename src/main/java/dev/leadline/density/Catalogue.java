@@ -11,8 +11,11 @@ public final class Catalogue {
             Lognormal.FAMILY,
             Triangular.FAMILY,
             Exponential.FAMILY,
+            Gamma.FAMILY,
+            Beta.FAMILY,
             Weibull.FAMILY,
-            Gumbel.FAMILY);
+            Gumbel.FAMILY,
+            Student.FAMILY);
 
     private Catalogue() {}
 

@@ -126,7 +126,7 @@ final class GammaFunction {
     /// @param difference `x - a`, which a caller may know better than the subtraction would
     static double deviance(double a, double x, double difference) {
         double u = difference / a;
-        return Math.abs(u) < 0.5 ? -a * logOnePlusLess(u) : a * Log.log(a / x) + difference;
+        return Math.abs(u) < 0.5 ? -a * logOnePlusLess(u) : difference - a * Log.log(x / a);
     }
 
     /// `log(1 + u) - u` for `|u| <= 1/2`.

@@ -18,22 +18,23 @@ enum Link {
         }
     },
 
-    /// `log(x / (1 - x))`, for shapes from 0 to 1.
+    /// `log(x / (1 - x))`, for shapes from 0 to 1; the smaller of `x` and `1 - x` is computed first.
     LOGIT {
         @Override
         void invert(double[] x, int n) {
+            var e = new double[n];
             for (int i = 0; i < n; i++) {
-                x[i] = Math.min(x[i], ONE);
+                e[i] = -Math.abs(x[i]);
             }
-            Exp.exp(x, x, n);
+            Exp.exp(e, e, n);
             for (int i = 0; i < n; i++) {
-                x[i] /= 1 + x[i];
+                long upper = ~(Double.doubleToRawLongBits(x[i]) >> 63);
+                x[i] = Math.abs(e[i] / (1 + e[i]) - Double.longBitsToDouble(upper & ONE));
             }
         }
     };
 
-    /// From here on `e^y / (1 + e^y)` is 1.
-    private static final double ONE = 40;
+    private static final long ONE = 0x3ff0_0000_0000_0000L;
 
     /// From the links in `x` to the quantiles, in place.
     abstract void invert(double[] x, int n);

@@ -83,25 +83,17 @@ public record Triangular(double from, double mode, double to) implements Scaled 
 
     @Override
     public double quantile(double p) {
-        return at(
-                p,
-                standard().mode(),
-                standard().quantile(p),
-                standard().mirrored().upperQuantile(p));
+        return at(standard().quantile(p), standard().mirrored().upperQuantile(p));
     }
 
     @Override
     public double upperQuantile(double q) {
-        return at(
-                1 - q,
-                standard().mode(),
-                standard().upperQuantile(q),
-                standard().mirrored().quantile(q));
+        return at(standard().upperQuantile(q), standard().mirrored().quantile(q));
     }
 
     /// The point at these distances from the ends, measured from the nearer one.
-    private double at(double p, double middle, double fromLow, double fromHigh) {
-        return p > middle ? Math.fma(-scale(), fromHigh, to) : Math.fma(scale(), fromLow, from);
+    private double at(double fromLow, double fromHigh) {
+        return fromHigh < fromLow ? Math.fma(-scale(), fromHigh, to) : Math.fma(scale(), fromLow, from);
     }
 
     @Override
@@ -142,7 +134,7 @@ public record Triangular(double from, double mode, double to) implements Scaled 
             if (z <= 0) {
                 return 0;
             }
-            if (y <= 0) {
+            if (y <= 0 || z >= mode && rest == 0) {
                 return 1;
             }
             return z < mode ? z * (z / mode) : Math.min(mode + (z - mode) * (1 + y / rest), 1);

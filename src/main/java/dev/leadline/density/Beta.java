@@ -1,0 +1,187 @@
+package dev.leadline.density;
+
+import static dev.leadline.density.Rule.between;
+import static dev.leadline.density.Rule.finite;
+
+import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.Log;
+
+/// The beta density, between `from` and `to`.
+///
+/// Error: relative 1e-12 in both tails (`CatalogueTest`).
+public record Beta(double alpha, double beta, double from, double to) implements Scaled {
+    private static final String LIMITS =
+            "Beyond these limits its values are too far apart or too close for numbers of 16 digits.";
+
+    private static final Entry ENTRY = Entry.of(
+                    v -> new Beta(v[0], v[1], v[2], v[3]),
+                    between(0.01, 1e6, "alpha", "the larger, the less near from", LIMITS),
+                    between(0.01, 1e6, "beta", "the larger, the less near to", LIMITS),
+                    finite("from", "least value").or(0),
+                    finite("to", "largest value").or(1))
+            .and(v -> Uniform.rising("from", v[2], "to", v[3]));
+
+    static final Family FAMILY = new Described(
+            "beta", "fractions and proportions; a probability seen in counts; a value between limits", ENTRY);
+
+    public Beta {
+        ENTRY.check(alpha, beta, from, to);
+    }
+
+    /// The beta density between 0 and 1.
+    public static Beta of(double alpha, double beta) {
+        return new Beta(alpha, beta, 0, 1);
+    }
+
+    @Override
+    public double location() {
+        return from;
+    }
+
+    @Override
+    public double scale() {
+        return to - from;
+    }
+
+    @Override
+    public Standard standard() {
+        return new Standard(IncompleteBeta.of(alpha, beta));
+    }
+
+    @Override
+    public double pdf(double x) {
+        return Exp.exp(logPdf(x));
+    }
+
+    @Override
+    public double logPdf(double x) {
+        return standard().logPdf(fromLow(x), fromHigh(x)) - Log.log(scale());
+    }
+
+    @Override
+    public void logPdf(double[] x, double[] out, int n) {
+        var standard = standard();
+        double log = Log.log(scale());
+        for (int i = 0; i < n; i++) {
+            out[i] = standard.logPdf(fromLow(x[i]), fromHigh(x[i])) - log;
+        }
+    }
+
+    @Override
+    public double cdf(double x) {
+        return standard().tails.lower(fromLow(x), fromHigh(x));
+    }
+
+    @Override
+    public double survival(double x) {
+        return standard().tails.mirrored().lower(fromHigh(x), fromLow(x));
+    }
+
+    @Override
+    public double quantile(double p) {
+        return p > 0 && p < 1 ? at(standard().linked(p)) : Scaled.super.quantile(p);
+    }
+
+    @Override
+    public double upperQuantile(double q) {
+        return q > 0 && q < 1 ? at(standard().upperLinked(q)) : Scaled.super.upperQuantile(q);
+    }
+
+    /// The point with this `log((x - from) / (to - x))`, measured from the nearer end.
+    private double at(double logit) {
+        return logit < 0
+                ? Math.fma(scale(), IncompleteBeta.logistic(logit), from)
+                : Math.fma(-scale(), IncompleteBeta.logistic(-logit), to);
+    }
+
+    @Override
+    public Support support() {
+        return new Support(from, to);
+    }
+
+    private double fromLow(double x) {
+        return (x - from) / scale();
+    }
+
+    private double fromHigh(double x) {
+        return (to - x) / scale();
+    }
+
+    /// The beta density between 0 and 1.
+    record Standard(IncompleteBeta tails) implements Shape, Linked {
+        @Override
+        public double pdf(double z) {
+            return Exp.exp(logPdf(z));
+        }
+
+        @Override
+        public double logPdf(double z) {
+            return logPdf(z, 1 - z);
+        }
+
+        private double logPdf(double x, double y) {
+            if (x > 0 && y > 0) {
+                return tails.logPrefix(x, y) - Log.log(x) - Log.log(y);
+            }
+            if (x == 0 || y == 0) {
+                double exponent = x == 0 ? tails.a() : tails.b();
+                double other = x == 0 ? tails.b() : tails.a();
+                return exponent == 1
+                        ? Log.log(other)
+                        : exponent < 1 ? Double.POSITIVE_INFINITY : Double.NEGATIVE_INFINITY;
+            }
+            return Double.isNaN(x) ? x : Double.NEGATIVE_INFINITY;
+        }
+
+        @Override
+        public double cdf(double z) {
+            return tails.lower(z, 1 - z);
+        }
+
+        @Override
+        public double survival(double z) {
+            return tails.mirrored().lower(1 - z, z);
+        }
+
+        @Override
+        public double inner(double p) {
+            return IncompleteBeta.logistic(linked(p));
+        }
+
+        @Override
+        public double upperInner(double q) {
+            return IncompleteBeta.logistic(upperLinked(q));
+        }
+
+        @Override
+        public Link link() {
+            return Link.LOGIT;
+        }
+
+        @Override
+        public double linked(double p) {
+            return p <= 0.5 ? tails.logitInverse(p) : -tails.mirrored().logitInverse(1 - p);
+        }
+
+        @Override
+        public double upperLinked(double q) {
+            return q <= 0.5 ? -tails.mirrored().logitInverse(q) : tails.logitInverse(1 - q);
+        }
+
+        @Override
+        public double mean() {
+            return tails.a() / (tails.a() + tails.b());
+        }
+
+        @Override
+        public double variance() {
+            double n = tails.a() + tails.b();
+            return tails.a() / n * (tails.b() / n) / (n + 1);
+        }
+
+        @Override
+        public Support support() {
+            return new Support(0, 1);
+        }
+    }
+}

@@ -1,0 +1,103 @@
+package dev.leadline.density;
+
+import static dev.leadline.density.Rule.between;
+import static dev.leadline.density.Rule.positive;
+
+import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.Log;
+
+/// The gamma density; its mean is `shape * scale`.
+///
+/// Error: relative 1e-12 in both tails (`CatalogueTest`).
+public record Gamma(double shape, double scale) implements Scaled {
+    private static final Entry ENTRY = Entry.of(
+            v -> new Gamma(v[0], v[1]),
+            between(
+                    1e-3,
+                    1e6,
+                    "shape",
+                    "number of events waited for, or how far from exponential",
+                    "Beyond these limits its values are too far apart or too close for numbers of 16 digits."),
+            positive("scale", "mean divided by shape", "The gamma density divides by its scale."));
+
+    static final Family FAMILY =
+            new Described("gamma", "times until several events, rain, amounts of loss; a rate seen in counts", ENTRY);
+
+    public Gamma {
+        ENTRY.check(shape, scale);
+    }
+
+    @Override
+    public Density standard() {
+        return new Standard(IncompleteGamma.of(shape));
+    }
+
+    /// The gamma density of scale 1.
+    record Standard(IncompleteGamma tails) implements Shape, Linked {
+        @Override
+        public double pdf(double z) {
+            return Exp.exp(logPdf(z));
+        }
+
+        @Override
+        public double logPdf(double z) {
+            double a = tails.a();
+            if (z > 0 && z < Double.POSITIVE_INFINITY) {
+                return tails.logPrefix(z) + Log.log(a / z);
+            }
+            return Double.isNaN(z)
+                    ? z
+                    : z == 0 && a == 1 ? 0 : z == 0 && a < 1 ? Double.POSITIVE_INFINITY : Double.NEGATIVE_INFINITY;
+        }
+
+        @Override
+        public double cdf(double z) {
+            return tails.lower(z);
+        }
+
+        @Override
+        public double survival(double z) {
+            return tails.upper(z);
+        }
+
+        @Override
+        public double inner(double p) {
+            return Exp.exp(linked(p));
+        }
+
+        @Override
+        public double upperInner(double q) {
+            return Exp.exp(upperLinked(q));
+        }
+
+        @Override
+        public Link link() {
+            return Link.LOG;
+        }
+
+        @Override
+        public double linked(double p) {
+            return p <= 0.5 ? tails.logInverse(p) : tails.logUpperInverse(1 - p);
+        }
+
+        @Override
+        public double upperLinked(double q) {
+            return q <= 0.5 ? tails.logUpperInverse(q) : tails.logInverse(1 - q);
+        }
+
+        @Override
+        public double mean() {
+            return tails.a();
+        }
+
+        @Override
+        public double variance() {
+            return tails.a();
+        }
+
+        @Override
+        public Support support() {
+            return new Support(0, Double.POSITIVE_INFINITY);
+        }
+    }
+}
