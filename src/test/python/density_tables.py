@@ -5,7 +5,7 @@ Run from the top of the repository: python3 src/test/python/density_tables.py
 Rows "at":      parameters, x        -> pdf, log pdf, cdf, survival at the double x
 Rows "inverse": parameters, p and q  -> the x with cdf(x) = p, the x with survival(x) = q
 
-Gamma and beta masses are power series with positive terms, of the smaller tail, written for this file.
+Gamma and beta masses are a power series or a continued fraction of the smaller tail, written for this file.
 """
 import os
 from mpmath import mp, mpf, erfc, exp, expm1, gamma, inf, log, log1p, loggamma, pi, sqrt
@@ -19,7 +19,7 @@ TAILS = ["1e-300", "1e-100", "1e-30", "1e-16", "1e-8", "0.001", "0.1", "0.3", "0
 def gamma_tails(a, x):
     """P and Q of shape a; the smaller one from its own series or, far above the mode, continued fraction."""
     prefix = exp(a * log(x) - x - loggamma(a + 1))
-    if x > 1.5 * a + 20:
+    if x > 1.1 * a + 20:
         b = x + 1 - a
         f, c, d, n = b, b, mpf(0), 0
         while True:
@@ -40,14 +40,25 @@ def gamma_tails(a, x):
 
 
 def beta_lower(a, b, x):
-    y = 1 - x
-    prefix = exp(a * log(x) + b * log(y) + loggamma(a + b) - loggamma(a + 1) - loggamma(b))
-    term, total, n = mpf(1), mpf(1), 0
-    while term > mpf(10) ** -(mp.dps + 5) * total:
-        term *= (a + b + n) / (a + 1 + n) * x
-        total += term
-        n += 1
-    return prefix * total
+    """The continued fraction of DLMF 8.17.22, with 20 digits more than asked for."""
+    digits = mp.dps
+    mp.dps += 20
+    prefix = exp(a * log(x) + b * log(1 - x) + loggamma(a + b) - loggamma(a + 1) - loggamma(b))
+    f, c, d, m = mpf(1), mpf(1), mpf(0), 0
+    while True:
+        change = mpf(1)
+        for term in (m * (b - m) * x / ((a + 2 * m - 1) * (a + 2 * m)) if m else None,
+                     -(a + m) * (a + b + m) * x / ((a + 2 * m) * (a + 2 * m + 1))):
+            if term is not None:
+                d = 1 / (1 + term * d)
+                c = 1 + term / c
+                change *= c * d
+        f *= change
+        m += 1
+        if abs(change - 1) < mpf(10) ** -(digits + 3):
+            break
+    mp.dps = digits
+    return prefix / f
 
 
 def beta_tails(a, b, x):
@@ -125,10 +136,8 @@ class Triangular:
     def tails(self, x):
         a, m, b = self.a, self.m, self.b
         if x < m:
-            p = (x - a) ** 2 / (b - a) / (m - a)
-            return p, 1 - p
-        q = (b - x) ** 2 / (b - a) / (b - m)
-        return 1 - q, q
+            return (x - a) ** 2 / (b - a) / (m - a), (b - m + (m - x) * (m + x - 2 * a) / (m - a)) / (b - a)
+        return (m - a + (x - m) * (2 * b - m - x) / (b - m)) / (b - a), (b - x) ** 2 / (b - a) / (b - m)
 
     def support(self):
         return self.a, self.b
@@ -270,7 +279,7 @@ def solve(d, mass, side):
     lo = order(-top if low == -inf else float(low))
     hi = order(top if high == inf else float(high))
     sign = 1 if side == 0 else -1
-    mp.dps = 60
+    mp.dps = 25
     while hi - lo > 1:
         middle = (lo + hi) // 2
         x = mpf(double(middle))
@@ -280,6 +289,7 @@ def solve(d, mass, side):
             lo = middle
         else:
             hi = middle
+    mp.dps = 60
     a, b = mpf(double(lo)), mpf(double(hi))
     if a <= low or b >= high or abs(a) < mpf("1e-290") and a != 0 or abs(b) > mpf("1e300"):
         return None
@@ -310,8 +320,6 @@ def write(family):
             for tail in TAILS:
                 mp.dps = 60
                 mass = mpf(float(tail))
-                # digits for the larger tail's complement
-                mp.dps = 60 + int(-mpmath.log10(mass))
                 below, above = solve(d, mass, 0), solve(d, mass, 1)
                 out.write(",".join(["inverse"] + list(member) + [text(below), text(above), "", "", tail, tail]) + "\n")
                 xs |= {float(v) for v in (below, above) if v is not None}
@@ -319,7 +327,6 @@ def write(family):
                 low, high = d.support()
                 if not low < x < high:
                     continue
-                mp.dps = 400
                 v = mpf(x)
                 lower, upper = d.tails(v)
                 log_pdf = d.log_pdf(v)

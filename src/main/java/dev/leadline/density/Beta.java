@@ -79,12 +79,12 @@ public record Beta(double alpha, double beta, double from, double to) implements
 
     @Override
     public double quantile(double p) {
-        return p > 0 && p < 1 ? at(standard().linked(p)) : Scaled.super.quantile(p);
+        return p > 0 && p < 1 ? at(standard().linked(p)) : p == 1 ? to : Scaled.super.quantile(p);
     }
 
     @Override
     public double upperQuantile(double q) {
-        return q > 0 && q < 1 ? at(standard().upperLinked(q)) : Scaled.super.upperQuantile(q);
+        return q > 0 && q < 1 ? at(standard().upperLinked(q)) : q == 0 ? to : Scaled.super.upperQuantile(q);
     }
 
     /// The point with this `log((x - from) / (to - x))`, measured from the nearer end.

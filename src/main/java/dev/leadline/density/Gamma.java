@@ -62,12 +62,12 @@ public record Gamma(double shape, double scale) implements Scaled {
 
         @Override
         public double inner(double p) {
-            return Exp.exp(linked(p));
+            return p <= 0.5 ? tails.inverse(p) : tails.upperInverse(1 - p);
         }
 
         @Override
         public double upperInner(double q) {
-            return Exp.exp(upperLinked(q));
+            return q <= 0.5 ? tails.upperInverse(q) : tails.inverse(1 - q);
         }
 
         @Override

@@ -1,5 +1,6 @@
 package dev.leadline.density;
 
+import dev.leadline.numeric.ErrorFunction;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
 
@@ -190,13 +191,28 @@ record IncompleteGamma(double a, double stirlingError, double logGammaOnePlus) {
         }
         double gammaStar = 1 + later / a;
         double rest = Exp.exp(-half) / (SQRT_2PI * Math.sqrt(a)) * sum / gammaStar;
-        return 0.5 * org.apache.commons.numbers.gamma.Erfc.value(side * Math.copySign(Math.sqrt(half), eta))
-                + side * rest;
+        return 0.5 * ErrorFunction.erfc(side * Math.copySign(Math.sqrt(half), eta)) + side * rest;
     }
 
     /// The logarithm of the x with `P(a, x) = p`, by Newton's method: `log P` is concave in `log x`, so that the second
     /// step and all later ones approach from the left.
     double logInverse(double p) {
+        double w = nearlyLogInverse(p);
+        return w - lowerCorrection(w, p);
+    }
+
+    /// The x itself, not through its logarithm, whose rounding counts more the larger x is.
+    double inverse(double p) {
+        double w = nearlyLogInverse(p);
+        return Exp.exp(w) * (1 - lowerCorrection(w, p));
+    }
+
+    private double lowerCorrection(double w, double p) {
+        double x = Exp.exp(w);
+        return w < SERIES_IS_ONE ? 0 : (lower(x) - p) / (a * Exp.exp(logPrefix(x)));
+    }
+
+    private double nearlyLogInverse(double p) {
         double logP = Log.log(p);
         double least = (logP + logGammaOnePlus) / a;
         if (least < SERIES_IS_ONE) {
@@ -212,12 +228,27 @@ record IncompleteGamma(double a, double stirlingError, double logGammaOnePlus) {
                 break;
             }
         }
-        double x = Exp.exp(w);
-        return w - (lower(x) - p) / (a * Exp.exp(logPrefix(x)));
+        return w;
     }
 
     /// The logarithm of the x with `Q(a, x) = q`; the same from the right.
     double logUpperInverse(double q) {
+        double w = nearlyLogUpperInverse(q);
+        return w - upperCorrection(w, q);
+    }
+
+    /// The x itself.
+    double upperInverse(double q) {
+        double w = nearlyLogUpperInverse(q);
+        return Exp.exp(w) * (1 - upperCorrection(w, q));
+    }
+
+    private double upperCorrection(double w, double q) {
+        double x = Exp.exp(w);
+        return w < SERIES_IS_ONE ? 0 : (q - upper(x)) / (a * Exp.exp(logPrefix(x)));
+    }
+
+    private double nearlyLogUpperInverse(double q) {
         double least = (StrictMath.log1p(-q) + logGammaOnePlus) / a;
         if (least < SERIES_IS_ONE) {
             return least;
@@ -234,8 +265,7 @@ record IncompleteGamma(double a, double stirlingError, double logGammaOnePlus) {
                 break;
             }
         }
-        double x = Exp.exp(w);
-        return w - (q - upper(x)) / (a * Exp.exp(logPrefix(x)));
+        return w;
     }
 
     /// Where one more step of Newton's method is exact.

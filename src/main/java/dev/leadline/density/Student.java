@@ -132,7 +132,7 @@ public record Student(double dof, double location, double scale) implements Scal
                 }
             }
             double t = Exp.exp(w);
-            return t < Double.POSITIVE_INFINITY ? t + (tail(t) - p) / pdf(t) : t;
+            return t < Double.POSITIVE_INFINITY ? Math.fma(t, (tail(t) - p) / Exp.exp(logPdf(t) + w), t) : t;
         }
 
         @Override

@@ -62,7 +62,9 @@ public record Uniform(double from, double to) implements Scaled {
 
     @Override
     public double upperQuantile(double q) {
-        return Math.fma(-scale(), standard().quantile(q), to);
+        return q > 0.5 && q <= 1
+                ? quantile(1 - q)
+                : Math.fma(-scale(), standard().quantile(q), to);
     }
 
     @Override

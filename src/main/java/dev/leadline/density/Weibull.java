@@ -57,7 +57,10 @@ public record Weibull(double shape, double scale, double from) implements Scaled
 
         @Override
         public double logPdf(double z) {
-            return z <= 0 ? Log.log(pdf(z)) : Log.log(shape) + (shape - 1) * Log.log(z) - power(z);
+            double power = power(z);
+            return z <= 0 || power == Double.POSITIVE_INFINITY
+                    ? Log.log(pdf(z))
+                    : Log.log(shape) + (shape - 1) * Log.log(z) - power;
         }
 
         @Override

@@ -30,7 +30,7 @@ class InversionTest {
         var random = new SplittableRandom(SEED);
         var u = new double[BLOCK];
         var x = new double[BLOCK];
-        for (int block = 0; block < 20; block++) {
+        for (int block = 0; block < 6; block++) {
             for (int i = 0; i < BLOCK; i++) {
                 u[i] = block % 2 == 0 ? anywhere(random) : inTail(random);
             }
@@ -73,7 +73,7 @@ class InversionTest {
         increasing(inversion, density, u);
 
         var random = new SplittableRandom(SEED);
-        for (int block = 0; block < 50; block++) {
+        for (int block = 0; block < 20; block++) {
             var near = new double[BLOCK];
             near[0] = block % 2 == 0 ? anywhere(random) : inTail(random);
             for (int i = 1; i < BLOCK; i++) {
@@ -96,12 +96,12 @@ class InversionTest {
     }
 
     /// Kolmogorov-Smirnov: false alarms in one of 10^6 runs of a density; it notices a shift of the distribution
-    /// function by .012. The mass between two doubles is not counted: some densities have half of theirs below the
+    /// function by .038. The mass between two doubles is not counted: some densities have half of theirs below the
     /// smallest.
     @ParameterizedTest
     @MethodSource("densities")
     void drawsFollowTheDensity(Density density) {
-        int n = 200_000;
+        int n = 20_000;
         var random = new SplittableRandom(SEED);
         var x = new double[n];
         for (int i = 0; i < n; i++) {
@@ -123,9 +123,9 @@ class InversionTest {
     @ParameterizedTest
     @MethodSource("densities")
     void sameTableTwice(Density density) {
-        var shape = density.standardised().shape();
-        assertEquals(Curves.build(shape).hash(), Curves.build(shape).hash());
-        assertEquals(Curves.build(shape).hash(), Inversion.of(density).hash());
+        assertEquals(
+                Curves.build(density.standardised().shape()).hash(),
+                Inversion.of(density).hash());
     }
 
     @Test

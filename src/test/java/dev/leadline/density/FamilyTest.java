@@ -1,0 +1,132 @@
+package dev.leadline.density;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
+
+/// What a person is told whose parameters are refused.
+class FamilyTest {
+
+    /// Family, parameters, then the first lines of all problems.
+    @ParameterizedTest(name = "{0} {1}")
+    @CsvSource(
+            delimiter = '|',
+            value = {
+                "gumbel | location 2 scale 0 | scale is 0 but must be greater than 0",
+                "gumbel | location 2 scale NaN | scale is NaN but must be greater than 0",
+                "gumbel | location Infinity scale -1 | location is ∞ but must be a finite number; scale is -1 but must be greater than 0",
+                "gumbel | location 2 scale Infinity | scale is ∞ but must be a finite number",
+                "uniform | from 3 to 3 | to is 3 but must be greater than from, 3",
+                "uniform | from 3 to -1.5 | to is -1.5 but must be greater than from, 3",
+                "uniform | from NaN to 1 | from is NaN but must be a finite number",
+                "uniform | from -1e308 to 1e308 | the distance between from and to is too large",
+                "normal | mean 0 sd -1 | sd is -1 but must be greater than 0",
+                "normal | mean 0 sd 1e308 | some draws of this density would exceed the largest number there is, 1.8e308",
+                "normal | mean 0 sdd 1 | normal has no parameter sdd",
+                "normal | mean 0 | sd is missing",
+                "lognormal | mu 0 sigma 0 | sigma is 0 but must be at least 1.0e-9 and at most 80",
+                "lognormal | mu 800 sigma 1 | mu is 800 but must be at least -700 and at most 700",
+                "lognormal | mean 0 sd 1 | mean is 0 but must be greater than 0",
+                "lognormal | mean 1e300 sd 1e-100 | mean 1.0e300 with sd 1.0e-100 is too extreme",
+                "lognormal | mu 0 mean 1 | mean and mu do not go together in one density",
+                "lognormal | mu 700 sigma 80 | some draws of this density would exceed the largest number there is, 1.8e308",
+                "triangular | from 0 mode 8 to 7 | mode is 8 but must be between from, 0, and to, 7",
+                "triangular | from 0 mode NaN to 7 | mode is NaN but must be a finite number",
+                "triangular | from 7 mode 7 to 7 | to is 7 but must be greater than from, 7",
+                "exponential | mean 0 | mean is 0 but must be greater than 0",
+                "gamma | shape 0 scale 1 | shape is 0 but must be at least 0.001 and at most 1000000",
+                "beta | alpha 1 beta 0.001 | beta is 0.001 but must be at least 0.01 and at most 1000000",
+                "beta | alpha 1 beta 1 from 1 | to is 1 but must be greater than from, 1",
+                "weibull | shape 0 scale -0.0 | shape is 0 but must be at least 0.01 and at most 1000000; scale is 0 but must be greater than 0",
+                "student | dof 0 | dof is 0 but must be at least 0.1 and at most 10000000000",
+                "student | dof 0.1 scale 1e200 | some draws of this density would exceed the largest number there is, 1.8e308",
+            })
+    void saysWhatIsWrong(String family, String parameters, String expected) {
+        var problems = problems(family, parameters);
+        assertEquals(
+                expected,
+                String.join("; ", problems.stream().map(Problem::primary).toList()));
+    }
+
+    /// The record refuses with the same words.
+    @Test
+    void recordsCheckThemselves() {
+        var refusal = assertThrows(Refusal.class, () -> new Gumbel(0, 0));
+        assertEquals("scale is 0 but must be greater than 0", refusal.getMessage());
+        assertThrows(Refusal.class, () -> new Student(0, 0, 1));
+        assertThrows(Refusal.class, () -> Lognormal.ofMeanAndSd(-1, 1));
+    }
+
+    @Test
+    void saysWhyAndWhatToTry() {
+        var problem = problems("gumbel", "location 2 scale 0").getFirst();
+        assertEquals(
+                "The Gumbel density divides by its scale.", problem.detail().orElseThrow());
+        assertEquals("For a fixed value use a constant.", problem.hint().orElseThrow());
+        assertEquals("scale", problem.place().path());
+    }
+
+    @Test
+    void namesTheNearestParameter() {
+        var problem = problems("normal", "mean 0 sdd 1").getFirst();
+        assertEquals("It is entered by mean and sd.", problem.detail().orElseThrow());
+        assertEquals("Did you mean sd?", problem.hint().orElseThrow());
+        assertEquals("sdd", problem.place().path());
+    }
+
+    @Test
+    void namesTheWaysToEnter() {
+        var mixed = problems("lognormal", "mu 0 mean 1").getFirst();
+        assertEquals(
+                "lognormal is entered by mu and sigma, or by mean and sd.",
+                mixed.detail().orElseThrow());
+        assertEquals("", mixed.place().path());
+        var missing = problems("lognormal", "mean 3").getFirst();
+        assertEquals("sd is missing", missing.primary());
+        assertEquals("sd", missing.place().path());
+    }
+
+    @Test
+    void namesEveryMissingParameter() {
+        assertEquals(
+                List.of("from is missing", "to is missing"),
+                problems("uniform", "").stream().map(Problem::primary).toList());
+    }
+
+    @Test
+    void extremeMeanAndSdSaysWhatTheyGive() {
+        var problem = problems("lognormal", "mean 1e300 sd 1e-100").getFirst();
+        assertTrue(problem.detail().orElseThrow().startsWith("They give mu 690.77"), () -> problem.toString());
+    }
+
+    /// Squares of these ratios would overflow or vanish.
+    @ParameterizedTest
+    @ValueSource(doubles = {1e-9, 1e-4, 1, 1e4, 1e200})
+    void lognormalKeepsItsMean(double cv) {
+        var density = Lognormal.ofMeanAndSd(2, 2 * cv);
+        assertEquals(2, density.mean(), 2e-12 * (1 + Math.log(1 + cv)));
+        assertFalse(density.sigma() < 0.999 * Math.min(cv, 1e-3));
+    }
+
+    private static List<Problem> problems(String family, String parameters) {
+        var values = new LinkedHashMap<String, Double>();
+        var words = parameters == null || parameters.isBlank() ? new String[0] : parameters.split(" ");
+        for (int i = 0; i < words.length; i += 2) {
+            values.put(words[i], Double.valueOf(words[i + 1]));
+        }
+        var known = Catalogue.family(family).orElseThrow();
+        Map<String, Double> given = values;
+        return assertThrows(Refusal.class, () -> known.of(given)).problems();
+    }
+}
