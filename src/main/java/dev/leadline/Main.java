@@ -2,6 +2,7 @@ package dev.leadline;
 
 import dev.leadline.cli.Commands;
 import dev.leadline.cli.Console;
+import dev.leadline.desktop.Window;
 import java.util.Locale;
 
 /// The program's only entry: no arguments or `open FILE` starts the window, anything else runs a command.
@@ -13,7 +14,8 @@ public final class Main {
         Locale.setDefault(Locale.ROOT);
         var console = Console.ofProcess(System.getenv());
         System.exit(Commands.run(arguments, console, file -> {
-            throw new UnsupportedOperationException("the window");
+            Window.open(file);
+            return Commands.DONE;
         }));
     }
 }

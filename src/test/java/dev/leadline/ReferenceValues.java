@@ -2,6 +2,7 @@ package dev.leadline;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.Set;
 import java.util.stream.StreamSupport;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.json.JsonMapper;
@@ -23,6 +24,14 @@ public final class ReferenceValues {
     /// The record of this id.
     public static JsonNode record(String id) {
         return only(RECORDS, "id", id);
+    }
+
+    /// The ids of all records of these areas.
+    public static List<String> ids(Set<String> areas) {
+        return StreamSupport.stream(RECORDS.spliterator(), false)
+                .filter(node -> areas.contains(node.required("area").asString()))
+                .map(node -> node.required("id").asString())
+                .toList();
     }
 
     /// The case of a record whose label is, or starts with, `label`.

@@ -35,10 +35,12 @@ public final class Commands {
     private static final Set<String> OPTIONS_LATER = Set.of("--record", "--report", "--repetitions");
 
     private final Console console;
+    private final ToIntFunction<Optional<Path>> window;
     private final List<Command> commands;
 
-    private Commands(Console console, ToIntFunction<Path> window) {
+    private Commands(Console console, ToIntFunction<Optional<Path>> window) {
         this.console = console;
+        this.window = window;
         this.commands = List.of(
                 new RunCommand(),
                 new CheckCommand(),
@@ -48,9 +50,9 @@ public final class Commands {
                 new OpenCommand(window));
     }
 
-    /// @param window opens a project's window and returns the exit code when it is closed
+    /// @param window opens the window, with a project where one is given, and returns the exit code when it is closed
     /// @return the exit code
-    public static int run(String[] arguments, Console console, ToIntFunction<Path> window) {
+    public static int run(String[] arguments, Console console, ToIntFunction<Optional<Path>> window) {
         try {
             return new Commands(console, window).run(arguments);
         } finally {
@@ -76,6 +78,9 @@ public final class Commands {
     }
 
     private int parsed(String[] arguments) throws InterruptedException {
+        if (arguments.length == 0) {
+            return window.applyAsInt(Optional.empty());
+        }
         CommandLine line = commandLine();
         refuseLaterCommands(arguments);
         ParseResult whole;
@@ -181,6 +186,10 @@ public final class Commands {
 
     private int fault(Throwable fault, boolean json) {
         Throwable cause = fault instanceof IllegalStateException && fault.getCause() != null ? fault.getCause() : fault;
+        Optional<Problem> lack = Lack.behind(cause);
+        if (lack.isPresent()) {
+            return refuse(List.of(lack.get()), ProblemText.of("", List.of(lack.get()), Optional.empty()), json);
+        }
         Problem said = cause instanceof OutOfMemoryError
                 ? Problem.of("there was not enough memory to go on")
                         .because("No result was lost: nothing had been written.")

@@ -42,7 +42,7 @@ public final class CommandLines {
         }
         var console = new Console(new PrintWriter(out), new PrintWriter(err), live, false);
         int exitCode = Commands.run(words.toArray(String[]::new), console, file -> {
-            err.write("opened " + file);
+            err.write("opened " + file.map(Object::toString).orElse("nothing"));
             return 0;
         });
         return new Outcome(exitCode, out.toString(), err.toString());

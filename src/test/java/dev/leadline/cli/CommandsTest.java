@@ -174,6 +174,7 @@ class CommandsTest {
         var outcome = leadline("open", project);
         assertEquals(0, outcome.exitCode());
         assertEquals("opened " + project, outcome.err());
+        assertEquals("opened nothing", leadline().err());
     }
 
     /// The contract of `run --json`: these fields, of these kinds.
