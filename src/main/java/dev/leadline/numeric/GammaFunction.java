@@ -5,9 +5,8 @@ import java.math.BigInteger;
 /// The gamma function and its logarithm on the whole real line, with the same bits on every machine.
 ///
 /// Between 1.5 and 2.5 from the series of `log Γ(2 + t)`, whose terms shrink like `t^k / 4^k`; elsewhere below 10 by
-/// the
-/// recurrence, above by Stirling's series, and for negative arguments by reflection. The logarithm keeps its relative
-/// accuracy at its zeros 1 and 2, but not at those between the negative integers.
+/// the recurrence, above by Stirling's series, and for negative arguments by reflection. The logarithm keeps its
+/// relative accuracy at its zeros 1 and 2, but not at those between the negative integers.
 ///
 /// Special values: at 0 `gamma` is infinite with the sign of the zero, at the negative integers `NaN`; there the
 /// logarithm is ∞. `gamma(n + 1)` is `n!` to the last bit.

@@ -240,6 +240,39 @@ class WorkingTest {
         assertEquals("2 *a # twice", working.asked().get(0).text());
     }
 
+    /// Words in any order: a refusal, or a value that the canonical text has too; never any other failure.
+    @Test
+    void anyOrderOfWordsIsRefusedOrComputed() {
+        String[] words = {
+            "x", "y", "2", "1e3", ".5", "+", "-", "*", "/", "^", "<", "==", "&", "|", "(", ")", "[", "]", ",", "sin", "max",
+            "if", "not", "(", ")", "pi", "=", "#", "unknown", "x", "2", "-"
+        };
+        int computed = 0;
+        for (long seed = 0; seed < 20_000; seed++) {
+            var random = new java.util.SplittableRandom(seed);
+            var made = new StringBuilder();
+            for (int i = random.nextInt(1, 7); i > 0; i--) {
+                made.append(words[random.nextInt(words.length)]).append(random.nextBoolean() ? " " : "");
+            }
+            String text = made.toString();
+            try {
+                var working = Working.of(List.of("x", "y"), NO_CONSTANTS, List.of("s = " + text), List.of(text));
+                String canonical = working.asked().getFirst().canonical();
+                var again = Working.of(List.of("x", "y"), NO_CONSTANTS, List.of(), List.of(canonical));
+                double[] both = values(working, working.everyStep(), 3, -2);
+                assertEquals(both[0], both[1], "seed " + seed + ": " + text);
+                assertEquals(both[0], values(again, again.program(), 3, -2)[0], "seed " + seed + ": " + text);
+                computed++;
+            } catch (Refusal refusal) {
+                for (Problem problem : refusal.problems()) {
+                    int end = problem.place().span().orElseThrow().to();
+                    assertTrue(end <= text.length() + 4, () -> text + ": " + problem);
+                }
+            }
+        }
+        assertTrue(computed > 1_000, computed + " computed");
+    }
+
     @Test
     void withoutStepsOneProgramServesBoth() {
         var working = Working.of(List.of("x"), NO_CONSTANTS, List.of(), List.of("x"));
