@@ -244,8 +244,8 @@ class WorkingTest {
     @Test
     void anyOrderOfWordsIsRefusedOrComputed() {
         String[] words = {
-            "x", "y", "2", "1e3", ".5", "+", "-", "*", "/", "^", "<", "==", "&", "|", "(", ")", "[", "]", ",", "sin", "max",
-            "if", "not", "(", ")", "pi", "=", "#", "unknown", "x", "2", "-"
+            "x", "y", "2", "1e3", ".5", "+", "-", "*", "/", "^", "<", "==", "&", "|", "(", ")", "[", "]", ",", "sin",
+            "max", "if", "not", "(", ")", "pi", "=", "#", "unknown", "x", "2", "-"
         };
         int computed = 0;
         for (long seed = 0; seed < 20_000; seed++) {
