@@ -2,8 +2,8 @@ package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.style.Figures;
 import dev.leadline.desktop.working.DemandsViewModel;
-import dev.leadline.desktop.working.UnitWords;
 import dev.leadline.estimate.Estimand;
+import dev.leadline.model.UnitWords;
 import dev.leadline.numeric.Rounding;
 import dev.leadline.trace.Answer;
 import java.math.BigDecimal;
@@ -15,7 +15,7 @@ final class AnswerText {
     private AnswerText() {}
 
     static String of(Answer answer, String lane) {
-        String unit = UnitWords.plain(answer.unit());
+        String unit = UnitWords.after(answer.unit()).strip();
         String in = unit.isEmpty() ? "" : " " + unit;
         String level = level(answer);
         String finite = answer.nonFinite() > 0 ? "; over finite evaluations only" : "";

@@ -1,11 +1,11 @@
 package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.working.DemandsViewModel;
-import dev.leadline.desktop.working.UnitWords;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.UnitWords;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -48,7 +48,7 @@ record Sentence(List<Part> parts) {
                 sentence.add(door(over, Door.INPUTS));
             });
         }
-        String unit = UnitWords.plain(ask.unit());
+        String unit = UnitWords.after(ask.unit()).strip();
         if (!unit.isEmpty()) {
             sentence.add(words(unit.startsWith("per ") ? " " : " in "));
             sentence.add(door(unit, Door.UNIT));

@@ -9,7 +9,6 @@ import dev.leadline.desktop.working.WorkingPane;
 import java.util.Map;
 import javafx.scene.control.Label;
 import javafx.scene.control.SplitPane;
-import javafx.scene.control.TextInputControl;
 import javafx.scene.input.Clipboard;
 import javafx.scene.input.DataFormat;
 import javafx.scene.input.KeyCode;
@@ -96,9 +95,9 @@ public final class Workbench extends BorderPane {
         }
     }
 
-    /// Text fields have an undo of their own, which would part from the project's.
+    /// Fields and editors have an undo of their own, which would part from the project's.
     private void undoEverywhere(KeyEvent e) {
-        if (!e.isShortcutDown() || !(e.getTarget() instanceof TextInputControl)) {
+        if (!e.isShortcutDown()) {
             return;
         }
         if (e.getCode() == KeyCode.Z && !e.isShiftDown()) {

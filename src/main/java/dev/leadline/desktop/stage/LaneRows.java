@@ -4,8 +4,8 @@ import dev.leadline.chart.LaneLook;
 import dev.leadline.desktop.run.Progress;
 import dev.leadline.desktop.run.RunViewModel.State;
 import dev.leadline.desktop.style.Figures;
-import dev.leadline.desktop.working.UnitWords;
 import dev.leadline.model.Tolerance;
+import dev.leadline.model.UnitWords;
 import dev.leadline.numeric.Rounding;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState.Activity;
@@ -57,7 +57,7 @@ final class LaneRows {
         boolean whole = Double.isFinite(a.estimate()) && half > 0 && Double.isFinite(half);
         var text = Rounding.of(a.estimate(), whole ? half : Double.NaN);
         String name = answers == 1 ? "" : a.label().isBlank() ? "answer " + (k + 1) : a.label();
-        String unit = answers == 1 ? "" : UnitWords.plain(a.unit());
+        String unit = answers == 1 ? "" : UnitWords.after(a.unit()).strip();
         return new Row(
                 first ? lane.trace().lane() : "",
                 look,
@@ -72,7 +72,7 @@ final class LaneRows {
     /// What the head of the column of values says.
     static String valueHead(State.Shown shown) {
         var asks = shown.project().question().asks();
-        String unit = UnitWords.plain(asks.getFirst().unit());
+        String unit = UnitWords.after(asks.getFirst().unit()).strip();
         return asks.size() > 1 || unit.isEmpty()
                 ? "value"
                 : unit.startsWith("per ") ? "value " + unit : "value, " + unit;

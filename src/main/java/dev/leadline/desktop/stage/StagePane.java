@@ -3,7 +3,7 @@ package dev.leadline.desktop.stage;
 import dev.leadline.chart.View;
 import dev.leadline.desktop.run.RunViewModel;
 import dev.leadline.desktop.style.Styles;
-import dev.leadline.desktop.working.UnitWords;
+import dev.leadline.model.UnitWords;
 import java.util.List;
 import javafx.beans.binding.Bindings;
 import javafx.geometry.Pos;
@@ -81,7 +81,7 @@ public final class StagePane extends BorderPane {
     }
 
     private String unit() {
-        return model.settling().map(s -> UnitWords.plain(s.unit())).orElse("");
+        return model.settling().map(s -> UnitWords.after(s.unit()).strip()).orElse("");
     }
 
     private static boolean isFollowing(View view) {

@@ -5,6 +5,7 @@ import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.model.UnitWords;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.Optional;
@@ -192,7 +193,9 @@ public final class DemandsViewModel {
             String unit = d.asks().isEmpty() ? "" : d.asks().getFirst().unit();
             t.absolute()
                     .ifPresent(a -> parts.add("\u00b1" + NumberText.show(a)
-                            + (unit.isEmpty() || unit.equals("1") ? "" : " " + UnitWords.plain(unit))));
+                            + (unit.isEmpty() || unit.equals("1")
+                                    ? ""
+                                    : " " + UnitWords.after(unit).strip())));
             inPercent(t.relative()).ifPresent(r -> parts.add("\u00b1" + NumberText.show(r) + " %"));
             return String.join(t.when().filter("both"::equals).isPresent() ? " and " : " or ", parts);
         });

@@ -6,6 +6,7 @@ import dev.leadline.density.Parameter;
 import dev.leadline.desktop.style.Styles;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.UnitWords;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
@@ -97,7 +98,7 @@ final class InputRow extends VBox {
         InputDraft in = model.inputs().get(index);
         name.setText(in.name().isEmpty() ? "?" : in.name());
         summary.setText(InputsViewModel.summary(in.from()));
-        unit.setText(UnitWords.plain(in.unit()));
+        unit.setText(UnitWords.after(in.unit()).strip());
         sketch.show(in.from());
         head.setAccessibleText("Input " + in.name() + InputsViewModel.summary(in.from()) + " " + in.unit());
         String label = in.label().isEmpty() ? "no label yet" : in.label();

@@ -3,6 +3,7 @@ package dev.leadline.desktop.working;
 import dev.leadline.desktop.background.Background;
 import dev.leadline.engine.Look;
 import dev.leadline.model.Project;
+import dev.leadline.model.UnitWords;
 import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.List;
@@ -97,7 +98,11 @@ public final class LookViewModel {
         var rows = new ArrayList<Row>();
         for (int i = 0; i < q.inputs().size(); i++) {
             var in = q.inputs().get(i);
-            rows.add(new Row("input", in.name(), look.inputs().get(i), UnitWords.plain(in.unit())));
+            rows.add(new Row(
+                    "input",
+                    in.name(),
+                    look.inputs().get(i),
+                    UnitWords.after(in.unit()).strip()));
         }
         var steps = q.working().steps();
         for (int i = 0; i < steps.size(); i++) {

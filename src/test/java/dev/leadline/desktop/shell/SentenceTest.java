@@ -44,4 +44,14 @@ class SentenceTest {
                 "{\"leadline\": 1, \"inputs\": [], \"ask\": {\"mean\": \"" + "x + ".repeat(50) + "x\"}}");
         assertTrue(Sentence.of(draft).text().contains("\u2026"));
     }
+
+    @Test
+    void readsAsTheCommandsPrintIt() {
+        for (var draft : List.of(Drafts.mean(), Drafts.probability())) {
+            assertEquals(
+                    dev.leadline.model.Sentence.of(
+                            dev.leadline.model.Project.of(draft).question()),
+                    Sentence.of(draft).text());
+        }
+    }
 }
