@@ -193,6 +193,7 @@ class WorkbenchViewModelTest {
             model.openSample(name);
             background.finishAll();
             assertEquals(List.of(), dialogs.heard, name);
+            assertEquals(List.of(), model.project().problems().get(), name);
             assertTrue(model.project().file().get().isEmpty(), name);
         }
     }
