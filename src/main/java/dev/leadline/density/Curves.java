@@ -40,6 +40,6 @@ final class Curves {
     }
 
     static Curve build(Density shape) {
-        return shape instanceof ClosedForm form ? new Exact(shape, form) : TableFit.of(shape);
+        return shape instanceof ClosedForm form ? Exact.of(shape, form) : TableFit.of(shape);
     }
 }

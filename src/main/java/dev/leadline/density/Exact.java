@@ -6,18 +6,17 @@ import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
 
 /// The curve of a shape with a closed form.
-record Exact(Density shape, ClosedForm form) implements Curve {
+record Exact(Density shape, ClosedForm form, double uError) implements Curve {
+    static Exact of(Density shape, ClosedForm form) {
+        return new Exact(shape, form, TableFit.worst(shape, new Exact(shape, form, 0)));
+    }
+
     @Override
     public void fill(double[] u, double[] x, int n, double location, double scale) {
         form.fill(u, x, n);
         for (int i = 0; i < n; i++) {
             x[i] = Math.fma(scale, x[i], location);
         }
-    }
-
-    @Override
-    public double uError() {
-        return 0;
     }
 
     @Override

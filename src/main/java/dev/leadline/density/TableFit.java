@@ -17,6 +17,9 @@ final class TableFit {
     /// Largest error relative to the probability of the tail.
     private static final double RELATIVE = 1e-10;
 
+    /// A few times the distance between neighbouring u.
+    private static final double FEW_ULP = 1e-15;
+
     /// `(1 - cos(k pi / 5)) / 2`.
     private static final double[] LOBATTO = {
         0, 0.09549150281252627, 0.3454915028125263, 0.6545084971874737, 0.9045084971874737, 1
@@ -46,7 +49,7 @@ final class TableFit {
                 return plain.get();
             }
             if (bits > 5 && shape instanceof Linked linked) {
-                for (int linkedBits = 5; linkedBits <= 6; linkedBits++) {
+                for (int linkedBits = 5; linkedBits <= 8; linkedBits++) {
                     var table = new TableFit(shape, linked.link(), linkedBits).table();
                     if (table.isPresent()) {
                         return table.get();
@@ -54,7 +57,8 @@ final class TableFit {
                 }
             }
         }
-        return new Table(shape, Link.NONE, 0, new double[0], 0);
+        var slow = new Table(shape, Link.NONE, 0, new double[0], 0);
+        return new Table(shape, Link.NONE, 0, slow.cells(), worst(shape, slow));
     }
 
     /// Empty as soon as an octave is not accurate enough.
@@ -150,6 +154,24 @@ final class TableFit {
     }
 
     private boolean measure(Table table, int octave, int tail) {
+        double octaveWorst = worst(shape, table, octave, bits, tail);
+        worst = Math.max(worst, octaveWorst);
+        return octaveWorst <= U_ERROR;
+    }
+
+    /// Largest error of a curve that has no cells, measured where those of a table would be.
+    static double worst(Density shape, Curve curve) {
+        double worst = 0;
+        for (int octave = 0; octave < Table.OCTAVES; octave++) {
+            for (int tail = 0; tail < 2; tail++) {
+                worst = Math.max(worst, worst(shape, curve, octave, 2, tail));
+            }
+        }
+        return worst;
+    }
+
+    /// Infinite where an error is too large for its tail.
+    private static double worst(Density shape, Curve curve, int octave, int bits, int tail) {
         double base = StrictMath.scalb(1.0, octave - 53);
         int n = MEASURED.length << bits;
         var u = new double[n];
@@ -159,31 +181,39 @@ final class TableFit {
             u[i] = tail == 0 ? p : 1 - p;
         }
         var x = new double[n];
-        table.fill(u, x, n, 0, 1);
+        curve.fill(u, x, n, 0, 1);
+        double worst = 0;
         for (int i = 0; i < n; i++) {
             double p = tail == 0 ? u[i] : 1 - u[i];
-            double error = error(x[i], p, tail);
-            if (!(error <= Math.min(U_ERROR, RELATIVE * p))) {
-                return false;
+            double error = error(shape, x[i], p, tail);
+            if (!(error <= RELATIVE * p)) {
+                return Double.POSITIVE_INFINITY;
             }
             worst = Math.max(worst, error);
         }
-        return true;
+        return worst;
     }
 
-    /// How far p lies from the probabilities between the neighbours of x.
-    private double error(double x, double p, int tail) {
-        double plain = Math.abs(mass(x, tail) - p);
+    /// How far p lies from the probabilities between the neighbours of x, one step away; where the error is as small as
+    /// that of u itself, eight.
+    private static double error(Density shape, double x, double p, int tail) {
+        double plain = Math.abs(mass(shape, x, tail) - p);
         if (plain <= 1e-14 * p) {
             return plain;
         }
-        double a = mass(Math.nextDown(x), tail);
-        double b = mass(Math.nextUp(x), tail);
+        double below = x;
+        double above = x;
+        for (int i = 0; i < (plain <= FEW_ULP ? 8 : 1); i++) {
+            below = Math.nextDown(below);
+            above = Math.nextUp(above);
+        }
+        double a = mass(shape, below, tail);
+        double b = mass(shape, above, tail);
         double beyond = Math.max(Math.min(a, b) - p, p - Math.max(a, b));
         return Double.isNaN(beyond) ? beyond : Math.min(plain, Math.max(beyond, 0));
     }
 
-    private double mass(double x, int tail) {
+    private static double mass(Density shape, double x, int tail) {
         return tail == 0 ? shape.cdf(x) : shape.survival(x);
     }
 }

@@ -29,6 +29,8 @@ final class Examples {
                 Beta.of(2.3, 4.1),
                 Beta.of(0.5, 0.5),
                 Beta.of(0.02, 0.05),
+                Beta.of(0.01, 0.01),
+                Beta.of(1, 1.5),
                 new Beta(0.3, 20, 2, 5),
                 new Beta(200, 0.7, -1, 1),
                 Beta.of(5, 1e5),
