@@ -12,7 +12,7 @@ final class Numbers {
     static String count(double count) {
         return Math.abs(count) < LARGEST_WRITTEN_OUT
                 ? String.format(Locale.ROOT, "%,.0f", count)
-                : String.format(Locale.ROOT, "%.1e", count).replace("e+0", "e").replace("e+", "e");
+                : shortExponent(String.format(Locale.ROOT, "%.1e", count));
     }
 
     /// A ratio or a number of standard errors: one decimal.
@@ -20,8 +20,12 @@ final class Numbers {
         return String.format(Locale.ROOT, "%.1f", ratio);
     }
 
-    /// A value to three significant digits.
+    /// A value to three significant digits: `0.00300`, `9.99e-6`.
     static String value(double value) {
-        return String.format(Locale.ROOT, "%.3g", value);
+        return shortExponent(String.format(Locale.ROOT, "%.3g", value));
+    }
+
+    private static String shortExponent(String number) {
+        return number.replaceFirst("e([+-])0*", "e$1").replace("e+", "e");
     }
 }
