@@ -4,15 +4,21 @@ import java.util.Locale;
 
 /// Numbers as sentences of evidence say them.
 final class Numbers {
-    private static final double LARGEST_WRITTEN_OUT = 1e6;
+    private static final double LARGEST_WRITTEN_OUT = 1e15;
 
     private Numbers() {}
 
-    /// A count: `12,600`, or `4.1e7` for millions, where the digits beyond the second say nothing.
-    static String count(double count) {
+    /// A count: `12,600`.
+    static String count(long count) {
+        return String.format(Locale.ROOT, "%,d", count);
+    }
+
+    /// About how many, to two digits: `41,000,000`.
+    static String about(double count) {
+        String digits = String.format(Locale.ROOT, "%.1e", count);
         return Math.abs(count) < LARGEST_WRITTEN_OUT
-                ? String.format(Locale.ROOT, "%,.0f", count)
-                : shortExponent(String.format(Locale.ROOT, "%.1e", count));
+                ? String.format(Locale.ROOT, "%,.0f", Double.parseDouble(digits))
+                : shortExponent(digits);
     }
 
     /// A ratio or a number of standard errors: one decimal.

@@ -30,7 +30,7 @@ final class NumericalTolerance {
                     "tolerance",
                     Strength.CAUTION,
                     text + ": not met",
-                    "Make about %s draws in all".formatted(Numbers.count(draws)));
+                    "Make about %s draws in all".formatted(Numbers.about(draws)));
         });
     }
 }

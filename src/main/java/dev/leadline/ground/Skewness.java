@@ -20,9 +20,9 @@ final class Skewness {
         }
         double wanted = PER_SQUARE * skewness * skewness;
         String text = evidence.of(k)
-                + "skewness %s asks for %s observations; there are %s"
+                + "skewness %s asks for about %s observations; there are %s"
                         .formatted(
-                                Numbers.ratio(skewness), Numbers.count(Math.ceil(wanted)), Numbers.count(sums.count()));
+                                Numbers.ratio(skewness), Numbers.about(Math.ceil(wanted)), Numbers.count(sums.count()));
         return Optional.of(
                 sums.count() >= wanted
                         ? Ground.shown("skewness", text)

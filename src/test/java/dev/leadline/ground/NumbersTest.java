@@ -8,8 +8,9 @@ class NumbersTest {
     @Test
     void readAsAPersonWritesThem() {
         assertEquals("12,600", Numbers.count(12_600));
-        assertEquals("4.1e7", Numbers.count(4.123e7));
-        assertEquals("1.0e13", Numbers.count(1e13));
+        assertEquals("41,000,000", Numbers.about(4.123e7));
+        assertEquals("48", Numbers.about(47.6));
+        assertEquals("1.0e16", Numbers.about(1e16));
         assertEquals("0.00300", Numbers.value(.003));
         assertEquals("9.99e-6", Numbers.value(9.987e-6));
         assertEquals("-1.00e100", Numbers.value(-1e100));
