@@ -10,7 +10,6 @@ import dev.leadline.trace.Trace;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.Queue;
 import java.util.concurrent.ExecutionException;
@@ -63,7 +62,7 @@ public final class LaneRun {
         }
         merge(sums.get());
         if (draws >= budget) {
-            return end(String.format(Locale.ROOT, "all %,d draws made", draws), seconds);
+            return end("all draws made", seconds);
         }
         if (stop.seconds().isPresent() && seconds >= stop.seconds().getAsDouble()) {
             return end("time used up", seconds);

@@ -1,12 +1,13 @@
 package dev.leadline.ground;
 
+import java.util.Locale;
 import java.util.Optional;
 
 /// A reason for or against signing.
 ///
 /// @param code stable word for programs, as `few-hits`
 /// @param strength of a doubt; empty otherwise
-/// @param text one sentence of evidence with its number
+/// @param text one sentence of evidence with its number, no full stop
 /// @param remedy what could be done about it
 public record Ground(String code, Status status, Optional<Strength> strength, String text, Optional<String> remedy) {
     public enum Status {
@@ -43,15 +44,19 @@ public record Ground(String code, Status status, Optional<Strength> strength, St
     }
 
     static Ground shown(String code, String text) {
-        return new Ground(code, Status.SHOWN, Optional.empty(), text, Optional.empty());
+        return new Ground(code, Status.SHOWN, Optional.empty(), sentence(text), Optional.empty());
     }
 
     static Ground doubted(String code, Strength strength, String text, String remedy) {
-        return new Ground(code, Status.DOUBTED, Optional.of(strength), text, Optional.of(remedy));
+        return new Ground(code, Status.DOUBTED, Optional.of(strength), sentence(text), Optional.of(remedy));
     }
 
     static Ground notDone(String code, String text, String remedy) {
-        return new Ground(code, Status.NOT_DONE, Optional.empty(), text, Optional.of(remedy));
+        return new Ground(code, Status.NOT_DONE, Optional.empty(), sentence(text), Optional.of(remedy));
+    }
+
+    private static String sentence(String text) {
+        return text.substring(0, 1).toUpperCase(Locale.ROOT) + text.substring(1);
     }
 
     public boolean objects() {

@@ -1,5 +1,6 @@
 package dev.leadline.ground;
 
+import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.model.Question;
 import dev.leadline.trace.Trace;
@@ -27,10 +28,12 @@ public final class Grounds {
         grounds.add(FailedEvaluations.judge(evidence));
         NumericalTolerance.judge(evidence).ifPresent(grounds::add);
         grounds.add(AgainstReference.judge(evidence));
-        grounds.add(Ground.notDone(
-                "tail",
-                "Whether rare, large outcomes make the variance infinite was not examined",
-                "Look at the largest outcomes by hand before signing a mean"));
+        if (question.asks().stream().anyMatch(ask -> !(ask.estimand() instanceof Estimand.Probability))) {
+            grounds.add(Ground.notDone(
+                    "tail",
+                    "Whether rare, large outcomes make the variance infinite was not examined",
+                    "Look at the largest outcomes by hand before signing a mean"));
+        }
         grounds.add(Ground.notDone(
                 "rehearsal",
                 "Whether this interval holds for this question was not rehearsed",

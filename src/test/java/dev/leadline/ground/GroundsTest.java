@@ -49,7 +49,7 @@ class GroundsTest {
                 "hits",
                 run(new Questions().uniform("x", 0, 1).probability("x < 1e-9").build(), 1_000));
         cautions(none);
-        assertEquals("no hit in 1,000 draws: a part of probability below 0.00300 may be unseen", none.text());
+        assertEquals("No hit in 1,000 draws: a part of probability below 0.00300 may be unseen", none.text());
         cautions(ground(
                 "hits",
                 run(new Questions().uniform("x", 0, 1).probability("x < 0.01").build(), 1_000)));
@@ -157,7 +157,7 @@ class GroundsTest {
                         .build(),
                 1_000);
         assertEquals(
-                List.of("answer 1: no hit in 1,000 draws: a part of probability below 0.00300 may be unseen"),
+                List.of("Answer 1: no hit in 1,000 draws: a part of probability below 0.00300 may be unseen"),
                 grounds.stream()
                         .filter(g -> g.code().equals("hits") && g.status() == Status.DOUBTED)
                         .map(Ground::text)
