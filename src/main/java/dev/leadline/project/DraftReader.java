@@ -213,7 +213,9 @@ final class DraftReader {
             String family = later ? fields.text("family", NAME) : fields.requiredText("family", NAME);
             SequencedMap<String, Double> parameters = new LinkedHashMap<>();
             for (String parameter : fields.names()) {
-                if (!parameter.equals("family") && !DENSITY_LATER.containsKey(parameter)) {
+                boolean elsewhere = parameter.equals("family") || DENSITY_LATER.containsKey(parameter);
+                // the ends of a typed density may be texts; it is refused as a whole
+                if (!elsewhere && !(later && fields.take(parameter).orElseThrow() instanceof Json.Text)) {
                     parameters.put(parameter, fields.requiredNumber(parameter));
                 }
             }

@@ -15,12 +15,6 @@ final class JsonPath {
         return path + "[" + index + "]";
     }
 
-    /// The path of what holds the place at `path`.
-    static String parent(String path) {
-        int end = Math.max(path.lastIndexOf('.'), path.lastIndexOf('['));
-        return end < 0 ? WHOLE : path.substring(0, end);
-    }
-
     /// Whether `path` is the place at `above`, or stands within it.
     static boolean within(String path, String above) {
         return path.startsWith(above)

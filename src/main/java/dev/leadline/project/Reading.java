@@ -7,6 +7,8 @@ import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /// What came of reading a project file.
 ///
@@ -14,6 +16,9 @@ import java.util.List;
 /// @param problems what is wrong with the file, at JSON paths; not with what it says
 /// @param asksInList whether a single ask stands in a list, which its path then says
 public record Reading(Draft draft, List<Problem> problems, boolean asksInList) {
+
+    private static final Pattern IN_DENSITY = Pattern.compile("(.*\\.(?:density|drawFrom))\\.[^.]+");
+    private static final Pattern IN_RANGE = Pattern.compile("(.*\\.range)\\[\\d+]");
 
     public Reading {
         problems = List.copyOf(problems);
@@ -39,12 +44,22 @@ public record Reading(Draft draft, List<Problem> problems, boolean asksInList) {
 
     /// A field that could not be read is noted already: what follows from its absence is not news.
     private boolean isNews(Problem problem) {
-        return problems.stream().noneMatch(known -> {
-            String above = JsonPath.parent(known.place().path());
-            return JsonPath.within(
-                    problem.place().path(),
-                    above.equals(JsonPath.WHOLE) ? known.place().path() : above);
-        });
+        return problems.stream()
+                .flatMap(known -> lacking(known.place().path()).stream())
+                .noneMatch(path -> JsonPath.within(problem.place().path(), path));
+    }
+
+    /// The places that look empty, or wrong, because of a problem at `path`.
+    private static List<String> lacking(String path) {
+        Matcher density = IN_DENSITY.matcher(path);
+        Matcher end = IN_RANGE.matcher(path);
+        if (density.matches()) {
+            return List.of(path, density.group(1) + ".family");
+        }
+        if (end.matches()) {
+            return List.of(end.group(1));
+        }
+        return path.startsWith("$.reference.") ? List.of(path, "$.reference.value") : List.of(path);
     }
 
     private Problem placed(Problem problem) {
