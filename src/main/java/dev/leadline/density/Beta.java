@@ -8,7 +8,7 @@ import dev.leadline.numeric.Log;
 
 /// The beta density, between `from` and `to`.
 ///
-/// Error: relative 1e-12 in both tails (`CatalogueTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 public record Beta(double alpha, double beta, double from, double to) implements Scaled {
     private static final String LIMITS =
             "Beyond these limits its values are too far apart or too close for numbers of 16 digits.";

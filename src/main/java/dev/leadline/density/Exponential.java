@@ -7,7 +7,7 @@ import dev.leadline.numeric.Log;
 
 /// The exponential density, `exp(-x/mean) / mean` from 0 on.
 ///
-/// Error: 4 ulp (`CatalogueTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 public record Exponential(double mean) implements Scaled {
     private static final Entry ENTRY = Entry.of(
             v -> new Exponential(v[0]),

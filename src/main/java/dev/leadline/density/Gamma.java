@@ -8,7 +8,7 @@ import dev.leadline.numeric.Log;
 
 /// The gamma density; its mean is `shape * scale`.
 ///
-/// Error: relative 1e-12 in both tails (`CatalogueTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 public record Gamma(double shape, double scale) implements Scaled {
     private static final Entry ENTRY = Entry.of(
             v -> new Gamma(v[0], v[1]),

@@ -8,7 +8,7 @@ import dev.leadline.numeric.Log;
 
 /// The Gumbel density for largest values: `cdf(x) = exp(-exp(-(x - location) / scale))`.
 ///
-/// Error: relative 1e-12 in both tails (`CatalogueTest`). In the lower tail the rounding of `x` counts
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`). In the lower tail the rounding of `x` counts
 /// `exp(-(x - location) / scale)` times, up to 700.
 public record Gumbel(double location, double scale) implements Scaled {
     private static final Entry ENTRY = Entry.of(

@@ -10,7 +10,7 @@ import java.util.List;
 
 /// The lognormal density: the logarithm is normal, with mean `mu` and standard deviation `sigma`.
 ///
-/// Error: relative 1e-12 in both tails (`CatalogueTest`); `log x - mu` is taken as `log(x / exp(mu))`.
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`); `log x - mu` is taken as `log(x / exp(mu))`.
 public record Lognormal(double mu, double sigma) implements Scaled {
     private static final Entry ENTRY = Entry.of(
             v -> new Lognormal(v[0], v[1]),

@@ -5,7 +5,7 @@ import static dev.leadline.density.Rule.positive;
 
 /// The normal density.
 ///
-/// Error: relative 1e-13 in both tails (`CatalogueTest`).
+/// Error: relative 1e-13 in both tails (`DensityTablesTest`).
 public record Normal(double mean, double sd) implements Scaled {
     private static final Entry ENTRY = Entry.of(
             v -> new Normal(v[0], v[1]),

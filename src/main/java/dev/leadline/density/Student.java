@@ -9,7 +9,7 @@ import dev.leadline.numeric.Log;
 
 /// Student's t density.
 ///
-/// Error: relative 1e-12 in both tails (`CatalogueTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 public record Student(double dof, double location, double scale) implements Scaled {
     private static final Entry ENTRY = Entry.of(
             v -> new Student(v[0], v[1], v[2]),

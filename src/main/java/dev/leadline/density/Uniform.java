@@ -9,7 +9,7 @@ import java.util.List;
 
 /// The uniform density: the same everywhere between `from` and `to`.
 ///
-/// Error: 4 ulp (`CatalogueTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 public record Uniform(double from, double to) implements Scaled {
     private static final Entry ENTRY = Entry.of(
                     v -> new Uniform(v[0], v[1]), finite("from", "least value"), finite("to", "largest value"))

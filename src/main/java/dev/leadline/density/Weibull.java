@@ -9,7 +9,7 @@ import dev.leadline.numeric.Log;
 
 /// The Weibull density for lifetimes: `survival(x) = exp(-((x - from) / scale)^shape)` from `from` on.
 ///
-/// Error: relative 1e-12 in both tails (`CatalogueTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 public record Weibull(double shape, double scale, double from) implements Scaled {
     private static final Entry ENTRY = Entry.of(
             v -> new Weibull(v[0], v[1], v[2]),

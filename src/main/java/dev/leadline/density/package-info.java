@@ -19,9 +19,13 @@
 ///    quantiles span hundreds of decades, `Standard` is also `Linked`; where the quantile is a square root or less, it
 ///    has a `ClosedForm`.
 /// 2. One line in `Catalogue`.
-/// 3. One table, `src/test/resources/density/name.csv`, from a source that is not this code (see `tables.py` there).
+/// 3. One table, `src/test/resources/density/name.csv`, from a source that is not this code: a class in
+///    `src/test/python/density_tables.py`, which writes it.
+/// 4. In the tests, a member near each limit of its rules in `Examples`, and in `CatalogueTest` the name of the library
+///    distribution to compare with.
 ///
-/// The tests of the catalogue then find it: round trips, both tails, moments, the table of draws, refused parameters.
+/// The tests of the catalogue then hold it to everything: round trips, both tails, moments, the table of draws, refused
+/// parameters.
 ///
 /// May use: `numeric`, `formula`, `problem`.
 package dev.leadline.density;
