@@ -66,6 +66,8 @@ class ProjectFileTest {
             OptionalLong.of(Long.MAX_VALUE),
             List.of(new LaneDraft("A", "independent"), new LaneDraft("B", "scrambled-sobol")));
 
+    private static final long MUTATED_PROJECTS = 1_000;
+
     private static ConstantDraft constant(String name, double value) {
         return new ConstantDraft(name, value, "", "", "");
     }
@@ -186,6 +188,25 @@ class ProjectFileTest {
             }
         }
         assertTrue(drafts > 50 && drafts < 4_950, drafts + " of 5,000 were drafts: the mutations test little");
+    }
+
+    /// The same of a sample, checked as a whole: every mutation is a project or a refusal.
+    @Test
+    void givesAProjectOrARefusalWhateverTheBytes() throws IOException {
+        byte[] sound = Files.readAllBytes(Path.of("sample-projects/mooring-line.leadline"));
+        int projects = 0;
+        for (long seed = 0; seed < MUTATED_PROJECTS; seed++) {
+            byte[] bytes = mutated(sound, new SplittableRandom(seed));
+            try {
+                ProjectFile.examine(bytes).project();
+                projects++;
+            } catch (Refusal refusal) {
+                assertFalse(refusal.problems().isEmpty());
+            } catch (RuntimeException | StackOverflowError | AssertionError e) {
+                throw new AssertionError("seed " + seed + ": " + e, e);
+            }
+        }
+        assertTrue(projects > MUTATED_PROJECTS / 100, projects + " were projects: the mutations test little");
     }
 
     private static byte[] mutated(byte[] sound, SplittableRandom random) {
