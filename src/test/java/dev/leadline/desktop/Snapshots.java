@@ -52,7 +52,6 @@ public final class Snapshots {
                 model.startRun();
             }
         });
-        model.project().problems().addListener((_, _, problems) -> problems.forEach(System.err::println));
         model.run().state().addListener((_, _, state) -> {
             if (state instanceof State.Failed(var problem)) {
                 throw new IllegalStateException(problem.primary());

@@ -49,7 +49,7 @@ public final class Workbench extends BorderPane {
         safety.visibleProperty().bind(model.project().draft().map(d -> d.safety()));
         bottom = new VBox(safety, new AnswerLine(model, grounds::reveal, this::copyAnswer));
         panes = new SplitPane(working, new StagePane(model.stage(), model.run()), grounds);
-        panes.setDividerPositions(.315, .79);
+        panes.setDividerPositions(.325, .79);
         SplitPane.setResizableWithParent(working, false);
         SplitPane.setResizableWithParent(grounds, false);
         start = new StartPage(model, background);
@@ -67,6 +67,9 @@ public final class Workbench extends BorderPane {
         top.setManaged(started);
         setCenter(started ? panes : start);
         setBottom(started ? bottom : null);
+        if (started && model.project().draft().get().asks().getFirst().formula().isBlank()) {
+            working.focusFormula();
+        }
     }
 
     private void recolour(boolean dark) {

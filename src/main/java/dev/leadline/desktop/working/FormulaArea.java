@@ -6,6 +6,7 @@ import java.util.Collection;
 import java.util.List;
 import java.util.Locale;
 import java.util.function.Consumer;
+import javafx.geometry.Pos;
 import javafx.scene.AccessibleRole;
 import javafx.scene.TraversalDirection;
 import javafx.scene.control.Label;
@@ -59,7 +60,7 @@ final class FormulaArea extends StyleClassedTextArea {
     void prompt(String text) {
         var prompt = new Label(text);
         prompt.getStyleClass().addAll(Styles.QUIET, "formula-prompt");
-        setPlaceholder(prompt);
+        setPlaceholder(prompt, Pos.TOP_LEFT);
     }
 
     void onTyped(Consumer<String> consumer) {

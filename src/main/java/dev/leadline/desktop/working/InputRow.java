@@ -54,8 +54,8 @@ final class InputRow extends VBox {
         summary.setTextOverrun(OverrunStyle.ELLIPSIS);
         summary.setMinWidth(0);
         unit.getStyleClass().add(Styles.QUIET);
-        unit.setMinWidth(48);
-        unit.setPrefWidth(48);
+        unit.setMinWidth(44);
+        unit.setPrefWidth(44);
         var gap = new Region();
         HBox.setHgrow(gap, Priority.ALWAYS);
         var line = new HBox(name, summary, gap, sketch, unit);

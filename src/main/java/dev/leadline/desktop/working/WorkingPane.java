@@ -187,8 +187,12 @@ public final class WorkingPane extends BorderPane {
         stepMessages.showIn(faults, text);
     }
 
-    /// Problems that no field and no formula shows.
+    /// Problems that no field and no formula shows; none while nothing was written yet.
     private List<Problem> unplaced() {
+        var d = project.draft().get();
+        if (d.steps().isEmpty() && d.asks().stream().allMatch(a -> a.formula().isBlank())) {
+            return List.of();
+        }
         return project.problems().get().stream()
                 .filter(p -> !FormulasViewModel.isInFormulas(p.place())
                         && !p.place().path().matches("\\$\\.(inputs|constants)\\[.*")
