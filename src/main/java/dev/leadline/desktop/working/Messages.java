@@ -59,8 +59,15 @@ final class Messages extends VBox {
 
     private void add(Problem p) {
         getChildren().add(line(p.primary(), "primary"));
-        p.detail().ifPresent(d -> getChildren().add(line(d, "detail")));
-        p.hint().ifPresent(h -> getChildren().add(line(h, "hint")));
+        p.detail().ifPresent(d -> addOnce(d, "detail"));
+        p.hint().ifPresent(h -> addOnce(h, "hint"));
+    }
+
+    /// Three unknown names need the same advice only once.
+    private void addOnce(String text, String style) {
+        if (getChildren().stream().noneMatch(n -> n instanceof Label l && l.getText().equals(text))) {
+            getChildren().add(line(text, style));
+        }
     }
 
     private static Label line(String text, String style) {
