@@ -11,6 +11,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
 import java.util.function.Consumer;
+import javafx.css.PseudoClass;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
@@ -105,8 +106,8 @@ final class InputRow extends VBox {
         head.setTooltip(new Tooltip(in.name() + InputsViewModel.summary(in.from()) + "\n" + label));
         var problems = model.project().problemsAt(InputsViewModel.path(index));
         boolean open = in.from() instanceof From.Density(var d) && d.family().isEmpty();
+        summary.pseudoClassStateChanged(PseudoClass.getPseudoClass("unchosen"), open);
         messages.show(open && !isOpen() ? List.of() : problems);
-        pseudoClassStateChanged(javafx.css.PseudoClass.getPseudoClass("faulty"), !problems.isEmpty());
         if (isOpen()) {
             if (!shapeOf(in).equals(shape)) {
                 build();

@@ -65,7 +65,8 @@ final class Messages extends VBox {
 
     /// Three unknown names need the same advice only once.
     private void addOnce(String text, String style) {
-        if (getChildren().stream().noneMatch(n -> n instanceof Label l && l.getText().equals(text))) {
+        if (getChildren().stream()
+                .noneMatch(n -> n instanceof Label l && l.getText().equals(text))) {
             getChildren().add(line(text, style));
         }
     }

@@ -194,7 +194,8 @@ public final class WorkingPane extends BorderPane {
             return List.of();
         }
         return project.problems().get().stream()
-                .filter(p -> !(p.place().path().equals("$.inputs") && !formulas.unknownNames().isEmpty()))
+                .filter(p -> !(p.place().path().equals("$.inputs")
+                        && !formulas.unknownNames().isEmpty()))
                 .filter(p -> !FormulasViewModel.isInFormulas(p.place())
                         && !p.place().path().matches("\\$\\.(inputs|constants)\\[.*")
                         && !p.place().path().matches("\\$\\.(tolerance|confidence|stop|reference).*"))
