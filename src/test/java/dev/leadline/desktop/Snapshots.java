@@ -12,6 +12,7 @@ import java.io.UncheckedIOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.concurrent.CountDownLatch;
+import java.util.concurrent.TimeUnit;
 import javafx.animation.PauseTransition;
 import javafx.application.Platform;
 import javafx.scene.Scene;
@@ -35,7 +36,10 @@ public final class Snapshots {
         String sample = args.length > 1 ? args[1] : "mooring-line";
         var done = new CountDownLatch(1);
         Platform.startup(() -> open(folder, sample, done));
-        done.await();
+        if (!done.await(10, TimeUnit.MINUTES)) {
+            System.err.println("no picture after ten minutes");
+            System.exit(1);
+        }
         Platform.exit();
     }
 
@@ -54,7 +58,8 @@ public final class Snapshots {
         });
         model.run().state().addListener((_, _, state) -> {
             if (state instanceof State.Failed(var problem)) {
-                throw new IllegalStateException(problem.primary());
+                System.err.println(problem.primary());
+                System.exit(1);
             }
             if (RunViewModel.shown(state).filter(s -> s.study().ended()).isPresent()) {
                 model.dark().set(false);

@@ -46,7 +46,7 @@ final class AskRow extends VBox {
         unit = new Field(
                         "unit of the answer",
                         "Unit of the answer, as 1/a for per year",
-                        5,
+                        4,
                         t -> model.unit(index, t),
                         left)
                 .prompt("unit");

@@ -10,6 +10,9 @@ import javafx.scene.control.Tooltip;
 final class Field extends TextField {
     private static final PseudoClass FAULTY = PseudoClass.getPseudoClass("faulty");
 
+    /// Longer texts may be cut, so the tooltip shows them in full.
+    private static final int COLUMNS_SEEN = 12;
+
     private final Consumer<String> typed;
     private boolean showing;
 
@@ -19,7 +22,9 @@ final class Field extends TextField {
     Field(String name, String tip, int columns, Consumer<String> typed, Runnable left) {
         this.typed = typed;
         setAccessibleText(name);
-        setTooltip(new Tooltip(tip));
+        var tooltip = new Tooltip();
+        tooltip.textProperty().bind(textProperty().map(text -> text.length() > COLUMNS_SEEN ? text + "\n" + tip : tip));
+        setTooltip(tooltip);
         setPrefColumnCount(columns);
         setMinWidth(USE_PREF_SIZE);
         getStyleClass().add(Styles.FLAT_FIELD);

@@ -11,6 +11,7 @@ import javafx.scene.layout.ColumnConstraints;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
+import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
 
 /// Every input, step and outcome of one draw.
@@ -32,7 +33,8 @@ final class LookView {
         draw.setId("look-draw");
         var label = new Label("draw");
         label.getStyleClass().add(Styles.FIELD_LABEL);
-        var hint = new Label("empty: every input at its median");
+        label.setMinWidth(Region.USE_PREF_SIZE);
+        var hint = new Label("empty: inputs at their medians");
         hint.getStyleClass().add(Styles.QUIET);
         var line = new HBox(6, label, draw, hint);
         line.setAlignment(Pos.CENTER_LEFT);
@@ -90,7 +92,7 @@ final class LookView {
 
     private static Label value(double value) {
         var label = cell(Figures.number(value), "look-value");
-        label.setMinWidth(javafx.scene.layout.Region.USE_PREF_SIZE);
+        label.setMinWidth(Region.USE_PREF_SIZE);
         return label;
     }
 

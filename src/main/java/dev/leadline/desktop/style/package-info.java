@@ -1,0 +1,2 @@
+/// Names of the style sheet, and how figures and pixels are shown.
+package dev.leadline.desktop.style;
