@@ -15,7 +15,7 @@ import java.util.List;
 /// @param inputs values in the order of the question's inputs
 /// @param steps values in the order of the steps
 /// @param weight what the outcomes of integrals are multiplied by: the volume of bounded ranges, over the density
-///     drawn from on unbounded ones; 1 where nothing weighs
+///     drawn from on unbounded ones; 0 beyond a range; 1 where nothing weighs
 /// @param outcomes one for each thing asked, before the weight
 public record Look(List<Double> inputs, List<Double> steps, double weight, List<Double> outcomes) {
     public Look {
@@ -62,7 +62,8 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
             weight *= switch (input.role()) {
                 case Role.Random _ -> 1;
                 case Role.Range(double low, double high) -> high - low;
-                case Role.UnboundedRange _ -> 1 / input.drawn().pdf(inputs[j]);
+                case Role.UnboundedRange(double low, double high) ->
+                    inputs[j] >= low && inputs[j] <= high ? 1 / input.drawn().pdf(inputs[j]) : 0;
             };
         }
         return weight;

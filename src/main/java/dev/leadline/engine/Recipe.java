@@ -83,9 +83,14 @@ public final class Recipe {
         return question.inputs().get(input).drawn();
     }
 
-    /// Inputs whose draws count `1 / pdf`.
+    /// Inputs whose draws count `1 / pdf` within their range and nothing beyond it.
     List<Integer> weighing() {
         return weighing;
+    }
+
+    /// @param input one of those that weigh
+    Role.UnboundedRange range(int input) {
+        return (Role.UnboundedRange) question.inputs().get(input).role();
     }
 
     /// What every outcome is multiplied by: the volume of the bounded ranges of integration.

@@ -105,15 +105,19 @@ public final class Sampler {
         }
     }
 
+    /// `1 / pdf`, and 0 for a draw beyond its range, which the density drawn from may reach.
     private void weigh(int rows) {
         if (weights.length == 0) {
             return;
         }
         Arrays.fill(weights, 0, rows, 0);
         for (int j : recipe.weighing()) {
-            recipe.drawn(j).logPdf(columns[j], logPdf, rows);
+            double[] x = columns[j];
+            double low = recipe.range(j).low();
+            double high = recipe.range(j).high();
+            recipe.drawn(j).logPdf(x, logPdf, rows);
             for (int i = 0; i < rows; i++) {
-                weights[i] -= logPdf[i];
+                weights[i] -= x[i] >= low && x[i] <= high ? logPdf[i] : Double.POSITIVE_INFINITY;
             }
         }
         Exp.exp(weights, weights, rows);
@@ -127,7 +131,8 @@ public final class Sampler {
             }
         } else {
             for (int i = 0; i < rows; i++) {
-                outcome[i] *= volume * weights[i];
+                // Beyond the range the formula need not have a value.
+                outcome[i] = weights[i] == 0 ? 0 : outcome[i] * (volume * weights[i]);
             }
         }
     }

@@ -16,7 +16,8 @@ public record Input(
         /// An integration variable over a bounded range, drawn uniformly; a draw counts `high - low`.
         record Range(double low, double high) implements Role {}
 
-        /// An integration variable over an unbounded range; a draw counts `1 / drawn.pdf(x)`.
+        /// An integration variable over an unbounded range; a draw counts `1 / drawn.pdf(x)` within it and
+        /// nothing beyond.
         record UnboundedRange(double low, double high) implements Role {}
     }
 }

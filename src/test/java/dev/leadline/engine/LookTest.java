@@ -48,4 +48,13 @@ class LookTest {
         // 3 / φ(0), with φ(0) = 1/√(2π)
         assertEquals(3 * Math.sqrt(2 * Math.PI), Look.nominal(question).weight(), 1e-14 * 8);
     }
+
+    @Test
+    void aDrawBeyondTheRangeWeighsNothing() {
+        var question = new Questions()
+                .unbounded("x", 1, Double.POSITIVE_INFINITY, 1)
+                .integral("x")
+                .build();
+        assertEquals(0, Look.nominal(question).weight());
+    }
 }

@@ -44,10 +44,12 @@ public final class Questions {
 
     /// Over the whole line, drawn from a normal density.
     public Questions line(String name, double sd) {
-        return input(
-                name,
-                density("normal", Map.of("mean", 0.0, "sd", sd)),
-                new Role.UnboundedRange(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY));
+        return unbounded(name, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, sd);
+    }
+
+    /// Drawn from a normal density with mean 0, which reaches beyond a half-line.
+    public Questions unbounded(String name, double low, double high, double sd) {
+        return input(name, density("normal", Map.of("mean", 0.0, "sd", sd)), new Role.UnboundedRange(low, high));
     }
 
     public Questions step(String line) {

@@ -67,6 +67,35 @@ class SamplerTest {
         assertTrue(sums.standardError(0) < .01 * exact);
     }
 
+    /// From 1 on, `x exp(-x²/2)` comes to exp(-1/2); up to 0, to -1; the density drawn from covers the whole line.
+    /// Where
+    /// the formula cannot be evaluated beyond the range, nothing has failed.
+    @Test
+    void drawsBeyondTheRangeCountNothing() {
+        double exact = Math.exp(-.5);
+        for (String formula : new String[] {"x*exp(-x^2/2)", "x*exp(-x^2/2) + 0*log(x - 1)"}) {
+            var sums = compute(
+                            new Questions()
+                                    .unbounded("x", 1, Double.POSITIVE_INFINITY, 3)
+                                    .integral(formula)
+                                    .build(),
+                            BIG)
+                    .sums();
+            assertEquals(0, sums.excluded());
+            assertEquals(exact, sums.mean(0), 4 * sums.standardError(0));
+            assertTrue(sums.standardError(0) < .01 * exact);
+        }
+        var upTo = compute(
+                        new Questions()
+                                .unbounded("x", Double.NEGATIVE_INFINITY, 0, 3)
+                                .integral("x*exp(-x^2/2)")
+                                .build(),
+                        BIG)
+                .sums();
+        assertEquals(-1, upTo.mean(0), 4 * upTo.standardError(0));
+        assertTrue(upTo.standardError(0) < .01);
+    }
+
     @Test
     void keepsFailuresWithTheirInputs() {
         var question = new Questions().uniform("x", -1, 1).mean("log(x)").build();
