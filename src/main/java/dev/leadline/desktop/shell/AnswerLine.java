@@ -1,6 +1,8 @@
 package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.style.Styles;
+import java.util.stream.Stream;
+import javafx.beans.binding.Bindings;
 import javafx.geometry.Pos;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
@@ -39,7 +41,11 @@ final class AnswerLine extends HBox {
         progress.setId("progress");
         progress.getStyleClass().add(Styles.QUIET);
         progress.textProperty()
-                .bind(model.progress().map(t -> t).flatMap(t -> t.isEmpty() ? model.notice() : model.progress()));
+                .bind(Bindings.createStringBinding(
+                        () -> beside(model),
+                        model.progress(),
+                        model.notice(),
+                        model.run().state()));
         progress.setMinWidth(0);
         bar.setPrefWidth(120);
         bar.setAccessibleText("How far the run has come");
@@ -54,6 +60,17 @@ final class AnswerLine extends HBox {
         getChildren().addAll(answer, edited, gap, progress, bar, objections, copyButton);
         model.run().state().addListener((_, _, _) -> update());
         update();
+    }
+
+    /// How far a run has come, else what was just done, else what repeats the run.
+    private static String beside(WorkbenchViewModel model) {
+        return Stream.of(
+                        model.progress().get(),
+                        model.notice().get(),
+                        WorkbenchViewModel.seedOf(model.run().state().get()))
+                .filter(text -> !text.isEmpty())
+                .findFirst()
+                .orElse("");
     }
 
     private void update() {

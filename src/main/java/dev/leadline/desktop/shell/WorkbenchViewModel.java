@@ -11,6 +11,7 @@ import dev.leadline.desktop.working.LookViewModel;
 import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.ground.Ground;
 import dev.leadline.model.Draft;
+import dev.leadline.model.Project;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import dev.leadline.project.ProjectFile;
@@ -63,7 +64,7 @@ public final class WorkbenchViewModel {
         project = new ProjectViewModel(Edits.asking("mean"), background);
         run = new RunViewModel(studies, background);
         stage = new StageViewModel(project, run, dark, background);
-        look = new LookViewModel(project, background);
+        look = new LookViewModel(project, this::ranAsItStands, background);
         title = Bindings.createStringBinding(
                 () -> titleOf(project.draft().get(), project.file().get()), project.draft(), project.file());
         sentence =
@@ -232,6 +233,22 @@ public final class WorkbenchViewModel {
                         g.strength().filter(Ground.Strength.OBJECTION::equals).isPresent())
                 .count();
         return n == 0 ? "no objection" : n + (n == 1 ? " objection" : " objections");
+    }
+
+    private Optional<Project> ranAsItStands() {
+        var state = run.state().get();
+        var now = project.draft().get();
+        return RunViewModel.shown(state)
+                .map(RunViewModel.State.Shown::project)
+                .filter(p -> !RunViewModel.isEditedSince(state, now)
+                        && p.draft().seed().equals(now.seed()));
+    }
+
+    /// The seed of the run that is shown, which repeats it; empty before a run.
+    static String seedOf(RunViewModel.State state) {
+        return RunViewModel.shown(state)
+                .map(s -> "seed " + s.project().plan().seed())
+                .orElse("");
     }
 
     void copied() {

@@ -8,6 +8,7 @@ import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Supplier;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 
@@ -26,14 +27,18 @@ public final class LookViewModel {
     public record Row(String kind, String name, double value, String unit) {}
 
     private final ProjectViewModel project;
+    private final Supplier<Optional<Project>> ran;
     private final Background background;
     private final ReadOnlyObjectWrapper<State> state = new ReadOnlyObjectWrapper<>(new State.Empty(""));
     private boolean open;
     private String draw = "";
     private long newest;
 
-    public LookViewModel(ProjectViewModel project, Background background) {
+    /// @param ran the project of the run that is shown, where the question is still the same: its draws are looked at,
+    ///     also where its seed was drawn
+    public LookViewModel(ProjectViewModel project, Supplier<Optional<Project>> ran, Background background) {
         this.project = project;
+        this.ran = ran;
         this.background = background;
         project.check().addListener((_, _, _) -> look());
     }
@@ -59,7 +64,7 @@ public final class LookViewModel {
             return;
         }
         long turn = ++newest;
-        Optional<Project> sound = project.sound();
+        Optional<Project> sound = ran.get().or(project::sound);
         if (sound.isEmpty()) {
             state.set(new State.Empty("To be seen once the question is complete."));
             return;

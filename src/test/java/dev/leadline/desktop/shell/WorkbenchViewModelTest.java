@@ -153,6 +153,7 @@ class WorkbenchViewModelTest {
         background.finishAll();
         assertEquals("", WorkbenchViewModel.objectionsOf(model.run().state().get()));
         assertEquals("0 draws", model.progress().get());
+        assertEquals("seed 7", WorkbenchViewModel.seedOf(model.run().state().get()));
         assertEquals(
                 List.<Ground>of(),
                 WorkbenchViewModel.groundsOf(model.run().state().get()));
