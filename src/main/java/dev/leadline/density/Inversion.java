@@ -21,7 +21,8 @@ public final class Inversion {
 
     /// Monotone in u.
     ///
-    /// @param u probabilities in the open interval (0, 1), `n` of them from index 0
+    /// @param u probabilities from `2^-53` to `1 - 2^-53`, `n` of them from index 0; one nearer to 0 or 1 counts as
+    ///     that
     /// @param x filled with the quantiles; may be the same array
     public void fill(double[] u, double[] x, int n) {
         curve.fill(u, x, n, location, scale);

@@ -55,40 +55,28 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
 
     private void polynomials(double[] u, double[] x, int n, double location, double scale) {
         tails(u, x, n);
-        if (allInCells(x, n)) {
-            double[] c = cells;
-            int shift = MANTISSA - bits;
+        double[] c = cells;
+        if (c.length == 0) {
             for (int i = 0; i < n; i++) {
-                x[i] = Math.fma(scale, polynomial(c, shift, x[i]), location);
+                x[i] = Math.fma(scale, exact(x[i]), location);
             }
-        } else {
-            for (int i = 0; i < n; i++) {
-                double y = cells.length > 0 && inCells(x[i]) ? polynomial(cells, MANTISSA - bits, x[i]) : outside(x[i]);
-                x[i] = Math.fma(scale, y, location);
-            }
+            return;
+        }
+        int shift = MANTISSA - bits;
+        for (int i = 0; i < n; i++) {
+            x[i] = Math.fma(scale, polynomial(c, shift, x[i]), location);
         }
     }
 
-    /// The probability of the nearer tail, with a minus sign for the upper one: one number that names the cell.
+    /// The probability of the nearer tail, with a minus sign for the upper one: one number that names the cell. It is
+    /// never below the smallest that has one, which moves no probability by more than that, `1.1e-16`.
     ///
     /// In a loop of its own, without a branch, this is vectorised.
     private static void tails(double[] u, double[] x, int n) {
         for (int i = 0; i < n; i++) {
             double side = Math.signum(0.5 - u[i]);
-            x[i] = Math.min(u[i], 1 - u[i]) * (side + (1 - side * side));
+            x[i] = Math.max(Math.min(u[i], 1 - u[i]), SMALLEST) * (side + (1 - side * side));
         }
-    }
-
-    private boolean allInCells(double[] tails, int n) {
-        int inside = 0;
-        for (int i = 0; i < n; i++) {
-            inside += inCells(tails[i]) ? 1 : 0;
-        }
-        return inside == n && cells.length > 0;
-    }
-
-    private static boolean inCells(double tail) {
-        return Math.abs(tail) >= SMALLEST;
     }
 
     private static double polynomial(double[] c, int shift, double tail) {
@@ -103,8 +91,8 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
         return Math.fma(y, t, c[k]);
     }
 
-    /// What no cell holds, from the quantile function itself.
-    private double outside(double tail) {
+    /// From the quantile function itself, where there are no cells.
+    private double exact(double tail) {
         boolean lower = Double.doubleToRawLongBits(tail) >= 0;
         if (link == Link.NONE) {
             return lower ? shape.quantile(tail) : shape.upperQuantile(-tail);

@@ -9,10 +9,14 @@ final class Block {
     /// Observations at most.
     static final int SIZE = 1024;
 
+    private static final int QUARTER = SIZE / 4;
+
     private final Sums sums;
 
     /// Deviations of each component from its mean; only where there are products of components to sum.
     private final double[][] deviations;
+
+    private final double[] folded = new double[QUARTER];
 
     Block(int components) {
         sums = new Sums(components);
@@ -29,19 +33,18 @@ final class Block {
     boolean reduce(double[][] values, int from, int to) {
         sums.count = to - from;
         for (int k = 0; k < values.length; k++) {
+            sums.meanRest[k] = 0;
+            sums.zeroOrOne[k] = isZeroOrOne(values[k], from, to);
+            if (sums.zeroOrOne[k]) {
+                event(values[k], from, to, k);
+                continue;
+            }
             double sum = sumAndRange(values[k], from, to, k);
             if (!Double.isFinite(sum) && !allFinite(values[k], from, to)) {
                 return false;
             }
             sums.mean[k] = mean(values[k], from, to, sum, k);
-            sums.meanRest[k] = 0;
-            sums.zeroOrOne[k] = isZeroOrOne(values[k], from, to, k);
-            if (sums.zeroOrOne[k]) {
-                sums.ones[k] = (long) sum;
-                powersOfEvent(k);
-            } else {
-                powers(values[k], from, to, k);
-            }
+            powers(values[k], from, to, k);
         }
         if (values.length > 1) {
             products(values, from, to);
@@ -109,30 +112,70 @@ final class Block {
         return scaled / sums.count * SIZE;
     }
 
-    /// Whether every value is 0 or 1: among numbers from 0 to 1 only these equal their square, and the differences
-    /// cannot cancel.
-    private boolean isZeroOrOne(double[] x, int from, int to, int k) {
-        double low = sums.min[k];
-        double high = sums.max[k];
-        if (!(low == 0 || low == 1) || !(high == 0 || high == 1)) {
+    /// Whether every value is 0 or 1: only these equal their square. The first value spares the rest where the answer
+    /// is no.
+    private boolean isZeroOrOne(double[] x, int from, int to) {
+        if (x[from] != 0 && x[from] != 1) {
             return false;
         }
-        double s0 = 0;
-        double s1 = 0;
-        int i = from;
-        for (; i + 1 < to; i += 2) {
-            s0 += x[i] - x[i] * x[i];
-            s1 += x[i + 1] - x[i + 1] * x[i + 1];
+        double off = 0;
+        if (isWhole(from, to)) {
+            for (int i = 0; i < QUARTER; i++) {
+                folded[i] = offSquare(x[i])
+                        + offSquare(x[i + QUARTER])
+                        + offSquare(x[i + 2 * QUARTER])
+                        + offSquare(x[i + 3 * QUARTER]);
+            }
+            off = foldedSum();
+        } else {
+            for (int i = from; i < to; i++) {
+                off += offSquare(x[i]);
+            }
         }
-        for (; i < to; i++) {
-            s0 += x[i] - x[i] * x[i];
-        }
-        return s0 + s1 == 0;
+        return off == 0;
     }
 
-    /// The powers of the deviations of zeros and ones, without a pass over them.
-    private void powersOfEvent(int k) {
-        double hits = sums.ones[k];
+    private static double offSquare(double x) {
+        return Math.abs(x * x - x);
+    }
+
+    private static double ones(double[] x, int from, int to) {
+        double ones = 0;
+        for (int i = from; i < to; i++) {
+            ones += x[i];
+        }
+        return ones;
+    }
+
+    private double onesOfWhole(double[] x) {
+        for (int i = 0; i < QUARTER; i++) {
+            folded[i] = x[i] + x[i + QUARTER] + x[i + 2 * QUARTER] + x[i + 3 * QUARTER];
+        }
+        return foldedSum();
+    }
+
+    /// Sums in which the order does not matter are folded element by element from four quarters of a whole block to
+    /// one, which the compiler vectorises, and only then added one by one, which it does not.
+    private static boolean isWhole(int from, int to) {
+        return from == 0 && to == SIZE;
+    }
+
+    private double foldedSum() {
+        double sum = 0;
+        for (int i = 0; i < QUARTER; i++) {
+            sum += folded[i];
+        }
+        return sum;
+    }
+
+    /// The sums of zeros and ones, all of which follow from how many ones there are.
+    private void event(double[] x, int from, int to, int k) {
+        double hits = isWhole(from, to) ? onesOfWhole(x) : ones(x, from, to);
+        long ones = (long) hits;
+        sums.ones[k] = ones;
+        sums.min[k] = ones == sums.count ? 1 : 0;
+        sums.max[k] = ones == 0 ? 0 : 1;
+        sums.mean[k] = (double) ones / sums.count;
         double p = hits / sums.count;
         double q = (sums.count - hits) / sums.count;
         double squares = hits * q;
