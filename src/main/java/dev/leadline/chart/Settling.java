@@ -4,6 +4,7 @@ import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Reference;
 import dev.leadline.model.Tolerance;
+import dev.leadline.trace.Answers;
 import dev.leadline.trace.Trace;
 import java.util.Comparator;
 import java.util.List;
@@ -48,7 +49,7 @@ public record Settling(
                 question.title(),
                 ask.label().isBlank() ? ask.estimand().word() + " of " + ask.formula() : ask.label(),
                 ask.unit(),
-                question.confidence(),
+                Answers.level(question),
                 plan.seed(),
                 first ? question.reference() : Optional.empty(),
                 first ? question.tolerance() : Optional.empty(),

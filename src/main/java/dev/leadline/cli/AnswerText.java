@@ -1,7 +1,6 @@
 package dev.leadline.cli;
 
 import dev.leadline.estimate.Estimand;
-import dev.leadline.model.Sentence;
 import dev.leadline.model.UnitWords;
 import dev.leadline.numeric.Rounding;
 import dev.leadline.trace.Answer;
@@ -34,7 +33,7 @@ final class AnswerText {
     /// As `95 % interval 1.22e-5 to 1.30e-5 (clopper-pearson)`, the limits rounded outwards.
     static String interval(Answer answer) {
         var interval = answer.interval();
-        String level = Sentence.percent(interval.level());
+        String level = interval.percent();
         Rounding rounding = rounding(answer);
         return rounding.uncertainty().isEmpty()
                 ? "no %s interval yet (%s)".formatted(level, interval.kind())

@@ -1,5 +1,6 @@
 package dev.leadline.interval;
 
+import java.util.Locale;
 import java.util.Optional;
 
 /// The exact interval of Clopper and Pearson for a probability, from hits among independent draws.
@@ -46,15 +47,20 @@ public final class ClopperPearson {
                 : "; " + failed + " failed evaluations count as misses in the lower limit and as hits in the upper one";
         String percent = Rounded.percent(level);
         if (hits == 0 && n > 0) {
-            return Optional.of("no hit in " + n + " draws: below " + Rounded.up(upperLimit(0, n, failed, level))
+            return Optional.of("no hit in " + draws(n) + ": below " + Rounded.up(upperLimit(0, n, failed, level))
                     + " with " + percent + " one-sided confidence" + bracket);
         }
         if (hits == n && n > 0) {
-            return Optional.of("every one of " + n + " draws is a hit: above "
-                    + Rounded.down(lowerLimit(hits, n, failed, level)) + " with " + percent + " one-sided confidence"
+            return Optional.of("every one of " + draws(n) + " is a hit: above "
+                    + Rounded.downFromOne(lowerLimit(hits, n, failed, level)) + " with " + percent
+                    + " one-sided confidence"
                     + bracket);
         }
         return failed == 0 ? Optional.empty() : Optional.of(bracket.substring(2));
+    }
+
+    private static String draws(long n) {
+        return n == 1 ? "1 draw" : String.format(Locale.ROOT, "%,d draws", n);
     }
 
     /// The one-sided upper limit: not above it with confidence `level`.

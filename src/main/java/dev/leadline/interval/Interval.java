@@ -12,6 +12,11 @@ import java.util.Optional;
 /// @param note why a limit is missing, or one-sided, and what would help
 public record Interval(double low, double high, double level, String kind, String assumption, Optional<String> note) {
 
+    /// The level as `95 %`.
+    public String percent() {
+        return Rounded.percent(level);
+    }
+
     /// Half the length; `NaN` where a limit is missing.
     public double halfWidth() {
         return (high - low) / 2;

@@ -15,9 +15,13 @@ import java.util.OptionalLong;
 public final class Answers {
     private Answers() {}
 
-    /// Several answers hold together: each stands at level `1 - (1 - confidence) / K` (Bonferroni).
+    /// Of each interval, so that K answers hold together: `1 - (1 - confidence) / K` (Bonferroni).
+    public static double level(Question question) {
+        return 1 - (1 - question.confidence()) / question.asks().size();
+    }
+
     public static List<Answer> of(Question question, Accumulator sums) {
-        double level = 1 - (1 - question.confidence()) / question.asks().size();
+        double level = level(question);
         var answers = new ArrayList<Answer>();
         for (int k = 0; k < question.asks().size(); k++) {
             answers.add(answer(question.asks().get(k), sums, k, level));

@@ -88,6 +88,8 @@ class SettlingTest {
         }
         var first = Settling.of(project.question(), project.plan(), traces);
         assertEquals("mean depth", first.quantity());
+        // Bonferroni: 1 - .05/3
+        assertEquals(.98333333, first.level(), 1e-8);
         assertEquals("m", first.unit());
         assertEquals(11, first.seed());
         assertTrue(first.reference().isPresent() && first.strip().isPresent());

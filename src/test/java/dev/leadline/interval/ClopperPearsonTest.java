@@ -64,14 +64,29 @@ class ClopperPearsonTest {
         // 1 - 0.025^(1/1000)
         within(1e-5, .00368208, none.high());
         assertEquals(
-                "no hit in 1000 draws: below 0.003 with 95 % one-sided confidence",
+                "no hit in 1,000 draws: below 0.003 with 95 % one-sided confidence",
                 none.note().orElseThrow());
         var all = ClopperPearson.of(1000, 1000, 0, .95);
         within(1e-5, 1 - .00368208, all.low());
         assertEquals(1, all.high());
         assertEquals(
-                "every one of 1000 draws is a hit: above 0.997 with 95 % one-sided confidence",
+                "every one of 1,000 draws is a hit: above 0.997 with 95 % one-sided confidence",
                 all.note().orElseThrow());
+    }
+
+    /// Of 10,000 hits: .05^(1/10,000) = .99970047, exactly, is never below what is said.
+    @Test
+    void saysTheLimitsInDigitsThatMean() {
+        var all = ClopperPearson.of(10_000, 10_000, 0, .95);
+        assertEquals(
+                "every one of 10,000 draws is a hit: above 0.9997 with 95 % one-sided confidence",
+                all.note().orElseThrow());
+        // 1 - .05/3 is .98333…
+        var third = ClopperPearson.of(3, 10_000, 0, 1 - .05 / 3);
+        assertEquals("98.33 %", third.percent());
+        assertEquals(
+                "99.99366 %", ClopperPearson.of(3, 10_000, 0, .9999366575163338).percent());
+        assertEquals("97.5 %", ClopperPearson.of(3, 10_000, 0, .975).percent());
     }
 
     /// With k hits of n and f failed, any number of hits from k to k + f of n + f is possible.

@@ -1,7 +1,6 @@
 package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.style.Figures;
-import dev.leadline.desktop.working.DemandsViewModel;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.model.UnitWords;
 import dev.leadline.numeric.Rounding;
@@ -43,7 +42,7 @@ final class AnswerText {
     }
 
     private static String level(Answer answer) {
-        return DemandsViewModel.percent(answer.interval().level());
+        return answer.interval().percent();
     }
 
     /// Small chances as people say them; three digits, since the interval stands beside it.
