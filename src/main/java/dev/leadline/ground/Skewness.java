@@ -1,5 +1,6 @@
 package dev.leadline.ground;
 
+import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import java.util.Optional;
@@ -18,18 +19,27 @@ final class Skewness {
         if (evidence.answers().get(k).estimand() instanceof Estimand.Probability || Double.isNaN(skewness)) {
             return Optional.empty();
         }
-        double wanted = PER_SQUARE * skewness * skewness;
+        double wanted = wanted(skewness);
         String text = evidence.of(k)
                 + "skewness %s asks for about %s observations; there are %s"
                         .formatted(
                                 Numbers.ratio(skewness), Numbers.about(Math.ceil(wanted)), Numbers.count(sums.count()));
         return Optional.of(
-                sums.count() >= wanted
+                isMet(sums, k)
                         ? Ground.shown("skewness", text)
                         : Ground.doubted(
                                 "skewness",
                                 Strength.CAUTION,
                                 text,
                                 "Make more draws: until then the interval misses more often than it says"));
+    }
+
+    /// False where the skewness is not known.
+    static boolean isMet(Accumulator sums, int k) {
+        return sums.count() >= wanted(sums.skewness(k));
+    }
+
+    private static double wanted(double skewness) {
+        return PER_SQUARE * skewness * skewness;
     }
 }

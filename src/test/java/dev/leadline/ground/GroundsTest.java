@@ -98,6 +98,56 @@ class GroundsTest {
         assertEquals(Status.NOT_DONE, ground("reference", without).status());
     }
 
+    /// Without a hit no standard error is known, and yet a chance of 1/2 is out of the question; 3 hits where 10 are
+    /// expected are not: P(K ≤ 3) = .0103 by the Poisson distribution.
+    @Test
+    void referenceOfAChance() throws InterruptedException {
+        var none = new Questions().uniform("x", 0, 1).probability("x < 1e-9");
+        // 1 - (3.167e-5)^(1/1000) = .01031
+        var far = ground("reference", run(none.reference(.5).build(), 1_000));
+        objects(far);
+        assertEquals(
+                "0 hits in 1,000 draws leave 0 to 0.0103 possible, and the reference value 0.500 is above that",
+                far.text());
+        shows(ground("reference", run(none.reference(1e-9).build(), 1_000)));
+        shows(ground("reference", run(none.reference(0).build(), 1_000)));
+        shows(ground("reference", chance(3, 1_000, .01)));
+        objects(ground("reference", chance(30, 1_000, .006)));
+        objects(ground("reference", chance(1_000, 1_000, .98)));
+        shows(ground("reference", chance(1_000, 1_000, .999)));
+    }
+
+    private static List<Ground> chance(int hits, int draws, double reference) {
+        var question = new Questions()
+                .uniform("x", 0, 1)
+                .probability("x < 0.5")
+                .reference(reference)
+                .build();
+        var values = new double[draws];
+        java.util.Arrays.fill(values, 0, hits, 1);
+        return judged(question, values);
+    }
+
+    private static List<Ground> judged(Question question, double... values) {
+        var total = new Accumulator(1);
+        total.add(new double[][] {values}, 0, values.length);
+        var mark = new Mark(values.length, 0, Answers.of(question, total));
+        return Grounds.of(
+                question, new Trace("A", "independent", List.of(mark), List.of(total), List.of(), Optional.empty()));
+    }
+
+    /// Few draws of lopsided outcomes lie 4 standard errors off far more often than one time in 10,000: 30 of a
+    /// lognormal density in 2 % of the runs.
+    @Test
+    void referenceAgainstFewDraws() {
+        var question = new Questions().uniform("x", 0, 1).mean("x");
+        // mean 2.5, standard error 0.645
+        double[] values = {1, 2, 3, 4};
+        shows(ground("reference", judged(question.reference(4.5).build(), values)));
+        cautions(ground("reference", judged(question.reference(6).build(), values)));
+        objects(ground("reference", judged(question.reference(10).build(), values)));
+    }
+
     @Test
     void numericalTolerance() throws InterruptedException {
         var question = new Questions().uniform("x", 0, 1).mean("x");
