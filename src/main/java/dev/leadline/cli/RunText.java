@@ -76,8 +76,9 @@ final class RunText {
         if (!(answer.estimand() instanceof Estimand.Probability) || Double.isNaN(oneIn)) {
             return "";
         }
-        return String.format(
-                Locale.ROOT, "   1 in %s   β %.2f", AnswerText.count(oneIn), Chance.beta(answer.estimate()));
+        double beta = Chance.beta(answer.estimate());
+        return "   1 in " + AnswerText.count(oneIn)
+                + (Double.isNaN(beta) ? "" : String.format(Locale.ROOT, "   β %.2f", beta));
     }
 
     private String facts(LaneState lane, List<Answer> answers) {

@@ -27,7 +27,7 @@ final class Hits {
         }
         String text = rarer == 0
                 ? "no %s in %s draws: a part of probability below %s may be unseen"
-                        .formatted(what, draws, Numbers.value(3.0 / answer.observations()))
+                        .formatted(what, draws, Numbers.value(Math.min(1, 3.0 / answer.observations())))
                 : "only %d %s in %s draws".formatted(rarer, rarer == 1 ? what : plural(what), draws);
         return Optional.of(Ground.doubted(
                 "hits",

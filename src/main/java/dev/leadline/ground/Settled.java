@@ -24,9 +24,9 @@ final class Settled {
         if (!(Math.min(first.count(), second.count()) >= FEWEST)) {
             return Optional.empty();
         }
-        double z = (second.mean(k) - first.mean(k))
-                / Math.sqrt(first.variance(k) / first.count() + second.variance(k) / second.count());
-        if (Double.isNaN(z)) {
+        double error = Math.sqrt(first.variance(k) / first.count() + second.variance(k) / second.count());
+        double z = (second.mean(k) - first.mean(k)) / error;
+        if (Double.isNaN(z) || Double.isInfinite(error)) {
             return Optional.empty();
         }
         String text = evidence.of(k) + "the second half of the draws differs from the first by "

@@ -4,17 +4,21 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import java.util.Optional;
 
-/// Whether a mean has seen two different outcomes at all. Without spread no interval can be said: the outcomes may be
-/// constant, or what varies may not have been drawn yet.
+/// Whether a mean has a spread to build an interval from. There is none where it has not seen two different outcomes:
+/// they may be constant, or what varies may not have been drawn yet. Nor where squares of the outcomes are no numbers.
 final class Spread {
     private Spread() {}
 
     static Optional<Ground> judge(Evidence evidence, int k) {
         var sums = evidence.total();
-        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability
-                || sums.count() == 0
-                || !sums.constant(k)) {
+        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability || sums.count() == 0) {
             return Optional.empty();
+        }
+        if (!sums.constant(k)) {
+            var interval = evidence.answers().get(k).interval();
+            return interval.note()
+                    .filter(_ -> Double.isNaN(interval.halfWidth()))
+                    .map(note -> unit(evidence.of(k) + note));
         }
         return Optional.of(Ground.doubted(
                 "spread",
@@ -22,5 +26,10 @@ final class Spread {
                 evidence.of(k) + "every outcome so far is " + Numbers.value(sums.min(k))
                         + ": how far the mean may be off cannot be said yet",
                 "Look at a few draws; if the outcomes can differ, more draws are needed"));
+    }
+
+    private static Ground unit(String text) {
+        return Ground.doubted(
+                "spread", Strength.OBJECTION, text, "Measure the outcome in a unit in which it is of moderate size");
     }
 }

@@ -38,7 +38,10 @@ public final class Student {
                     level,
                     "every value seen so far is equal (" + mean
                             + "): no spread to build an interval from; at most a part" + " of probability below 3/n = "
-                            + Rounded.up(3.0 / n) + " may be unseen");
+                            + Rounded.up(Math.min(1, 3.0 / n)) + " may be unseen");
+        }
+        if (Double.isNaN(standardError)) {
+            return none(level, "the values lie too close together for an interval: their squares underflow");
         }
         double half = quantile(n - 1, level) * standardError;
         if (!Double.isFinite(half) || !Double.isFinite(mean)) {

@@ -342,6 +342,12 @@ class AccumulatorTest {
         within(1e-14, 38e-200 / 3, tiny.variance(0));
         assertTrue(Double.isNaN(tiny.skewness(0)));
         assertTrue(Double.isNaN(tiny.excessKurtosis(0)));
+        // The squares of 5e-163 are one smallest number, or none.
+        for (double unit : new double[] {1e-151, 1e-162, 1e-300}) {
+            var tinier = of(unit, 2 * unit, 4 * unit, 9 * unit);
+            assertTrue(Double.isNaN(tinier.variance(0)) && Double.isNaN(tinier.standardError(0)), "unit " + unit);
+            within(1e-15, 4 * unit, tinier.mean(0));
+        }
     }
 
     @Test

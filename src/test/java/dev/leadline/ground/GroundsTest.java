@@ -70,6 +70,23 @@ class GroundsTest {
         assertTrue(twin.stream().noneMatch(g -> g.code().equals("spread")));
     }
 
+    /// Squares from 1e308 on, and below 1e-300, are no numbers to build an interval of.
+    @Test
+    void outcomesWhoseSquaresAreNoNumbers() throws InterruptedException {
+        for (String unit : List.of("1e300", "1e-300")) {
+            var grounds = run(
+                    new Questions()
+                            .uniform("x", 0, 1)
+                            .mean("x*" + unit)
+                            .reference(1)
+                            .build(),
+                    10_000);
+            objects(ground("spread", grounds));
+            assertTrue(grounds.stream().noneMatch(g -> g.code().equals("settled")), unit);
+            assertEquals(Status.NOT_DONE, ground("reference", grounds).status());
+        }
+    }
+
     @Test
     void failedEvaluations() throws InterruptedException {
         var failed = run(new Questions().uniform("x", -.01, 1).mean("log(x)").build(), 1_000);

@@ -86,6 +86,15 @@ class StudentTest {
         assertTrue(interval.note().orElseThrow().contains("overflow"));
     }
 
+    @Test
+    void saysWhenTheSquaresUnderflow() {
+        var sums = new Accumulator(1);
+        sums.add(new double[][] {{1e-200, 2e-200, 4e-200}}, 0, 3);
+        var interval = Student.of(sums, 0, .95);
+        assertTrue(Double.isNaN(interval.low()));
+        assertTrue(interval.note().orElseThrow().contains("underflow"));
+    }
+
     @ParameterizedTest
     @ValueSource(doubles = {0, 1, -1, 95, Double.NaN})
     void refusesWhatIsNoLevel(double level) {
