@@ -14,7 +14,8 @@ final class AnswerText {
 
     private AnswerText() {}
 
-    /// As `1.257e-5 ± 0.030e-5 per year`; what can be said where there is no such interval.
+    /// As `1.257e-5 ± 0.030e-5 per year`; what can be said where there is no such interval. The value alone where the
+    /// interval below it is lopsided.
     static String value(Answer answer) {
         String unit = UnitWords.after(answer.unit());
         if (Double.isNaN(answer.estimate())) {
@@ -25,6 +26,11 @@ final class AnswerText {
             return "at most " + Rounding.of(limit, limit).up(limit) + unit;
         }
         Rounding rounding = rounding(answer);
+        if (answer.interval().lopsided(answer.estimate())) {
+            return answer.estimate() == answer.interval().high()
+                    ? "at least " + rounding.down(answer.interval().low()) + unit
+                    : rounding.value() + unit;
+        }
         return rounding.uncertainty()
                 .map(error -> rounding.value() + " ± " + error + unit)
                 .orElse(rounding.value() + unit + ", no interval yet");

@@ -11,10 +11,23 @@ import java.util.Optional;
 /// @param assumption one sentence: what the interval takes for granted
 /// @param note why a limit is missing, or one-sided, and what would help
 public record Interval(double low, double high, double level, String kind, String assumption, Optional<String> note) {
+    private static final double LOPSIDED = 1.15;
 
     /// The level as `95 %`.
     public String percent() {
         return Rounded.percent(level);
+    }
+
+    /// Whether `estimate ± halfWidth` is another interval than this one: one end is much farther from the estimate
+    /// than the other, as with few hits. Of 550 draws with a chance of 1 in 100, the plain form holds it in 91 % of
+    /// the runs, the limits of Clopper and Pearson in 98 %; from about 25 hits on the two agree.
+    public boolean lopsided(double estimate) {
+        return lopsided(estimate, low, high);
+    }
+
+    /// The same, of its limits.
+    public static boolean lopsided(double estimate, double low, double high) {
+        return Math.max(high - estimate, estimate - low) > LOPSIDED * (high - low) / 2;
     }
 
     /// Half the length; `NaN` where a limit is missing.

@@ -270,6 +270,16 @@ class CommandsTest {
     }
 
     @Test
+    void aCertainEventIsALimitToo() throws IOException {
+        Path always = Files.writeString(
+                folder.resolve("always.leadline"),
+                UNIFORM.replace("\"mean\": \"y\", \"unit\": \"m2\"", "\"probability\": \"y < 2\""));
+        String people = leadline("run", always, "--draws", "1000").out();
+        assertTrue(people.contains("at least 0.9963"), people);
+        assertFalse(people.contains("±") || people.contains("NaN"), people);
+    }
+
+    @Test
     void givesTheSameDigitsOnAnyNumberOfThreads() {
         String one = leadline("run", project, "--json", "--draws", "3e5", "--threads", 1)
                 .out();

@@ -1,6 +1,7 @@
 package dev.leadline.interval;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -72,6 +73,16 @@ class ClopperPearsonTest {
         assertEquals(
                 "every one of 1,000 draws is a hit: above 0.997 with 95 % one-sided confidence",
                 all.note().orElseThrow());
+    }
+
+    @Test
+    void isLopsidedWithFewHits() {
+        for (long hits : new long[] {1, 5, 15}) {
+            assertTrue(ClopperPearson.of(hits, 10_000, 0, .95).lopsided(hits * 1e-4), hits + " hits");
+            assertTrue(ClopperPearson.of(10_000 - hits, 10_000, 0, .95).lopsided(1 - hits * 1e-4), hits + " misses");
+        }
+        assertFalse(ClopperPearson.of(25, 10_000, 0, .95).lopsided(25e-4));
+        assertTrue(ClopperPearson.of(89, 9_000, 1_000, .95).lopsided(89 / 9e3), "failed evaluations");
     }
 
     /// Of 10,000 hits: .05^(1/10,000) = .99970047, exactly, is never below what is said.

@@ -37,6 +37,14 @@ final class AnswerText {
         }
         var text = Rounding.of(answer.estimate(), half);
         String oneIn = probability ? oneIn(answer.estimate()) : "";
+        if (answer.interval().lopsided(answer.estimate())) {
+            String low = text.down(answer.interval().low());
+            String limits = answer.estimate() == answer.interval().high()
+                    ? "at least " + low
+                    : text.value() + ", between " + low + " and "
+                            + text.up(answer.interval().high());
+            return limits + in + " (" + level + ", lane " + lane + oneIn + finite + ")";
+        }
         return text.value() + " \u00b1 " + text.uncertainty().orElse("") + in + " (" + level + ", lane " + lane + oneIn
                 + finite + ")";
     }

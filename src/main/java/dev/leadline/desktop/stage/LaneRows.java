@@ -63,10 +63,17 @@ final class LaneRows {
                 look,
                 name,
                 (whole ? text.value() : alone(a)) + (unit.isEmpty() ? "" : " " + unit),
-                whole ? text.uncertainty().orElse("") : "",
+                whole ? uncertainty(a, text) : "",
                 first ? Figures.count(lane.trace().last().orElseThrow().draws()) : "",
                 first ? left(shown, lane, a) : "",
                 first ? why(shown, lane) : "");
+    }
+
+    /// The half-width; both limits where one lies much farther off than the other.
+    private static String uncertainty(Answer a, Rounding text) {
+        return a.interval().lopsided(a.estimate())
+                ? text.down(a.interval().low()) + " to " + text.up(a.interval().high())
+                : text.uncertainty().orElse("");
     }
 
     /// What the head of the column of values says.

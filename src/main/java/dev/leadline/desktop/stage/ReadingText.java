@@ -3,6 +3,7 @@ package dev.leadline.desktop.stage;
 import dev.leadline.chart.Point;
 import dev.leadline.chart.Reading;
 import dev.leadline.desktop.style.Figures;
+import dev.leadline.interval.Interval;
 import dev.leadline.numeric.Rounding;
 import java.util.stream.Collectors;
 
@@ -28,6 +29,9 @@ final class ReadingText {
             return Figures.number(p.estimate()) + in + after;
         }
         var text = Rounding.of(p.estimate(), half);
+        if (Interval.lopsided(p.estimate(), p.low(), p.high())) {
+            return text.value() + in + ", between " + text.down(p.low()) + " and " + text.up(p.high()) + after;
+        }
         return text.value() + " \u00b1 " + text.uncertainty().orElse("") + in + after;
     }
 }

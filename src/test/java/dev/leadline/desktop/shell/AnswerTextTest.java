@@ -28,6 +28,16 @@ class AnswerTextTest {
         assertEquals("3.2060 \u00b1 0.0050 mm (95 %, lane A)", AnswerText.of(a, "A"));
     }
 
+    /// Clopper and Pearson's limits for 2 hits of 10,000 are 2.4e-5 and 7.2e-4 (tables for a Poisson count of 2: .242
+    /// and 7.22), far from 2e-4 ± 3.5e-4.
+    @Test
+    void fewHitsSayBothLimits() {
+        var a = answer(new Estimand.Probability(), "1/a", 2e-4, 2.422e-5, 7.223e-4, OptionalLong.of(2), 0);
+        assertEquals("0.00020, between 0.00002 and 0.00073 per year (95 %, lane A; 1 in 5,000)", AnswerText.of(a, "A"));
+        var all = answer(new Estimand.Probability(), "1/a", 1, .99963, 1, OptionalLong.of(1_000_000), 0);
+        assertEquals("at least 0.99963 per year (95 %, lane A)", AnswerText.of(all, "A"));
+    }
+
     @Test
     void noHitIsALimitNeverZero() {
         var a = answer(new Estimand.Probability(), "1/a", 0, 0, 2.9957e-6, OptionalLong.of(0), 0);
