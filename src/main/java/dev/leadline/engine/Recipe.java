@@ -8,18 +8,18 @@ import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
+import dev.leadline.scheme.Layout;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
 import java.util.ArrayList;
 import java.util.List;
 
-/// Everything that the draws of a lane follow from, made ready: compiled formulas, inversion tables, the layout of
-/// points.
-/// Immutable, safe for all threads; each worker takes a [Sampler] of its own.
+/// Everything that the draws of a lane follow from, made ready: compiled formulas, inversion tables,
+/// the layout of points. Immutable, safe for all threads; each worker takes a [Sampler] of its own.
 public final class Recipe {
     private final Question question;
     private final Lane lane;
-    private final long seed;
+    private final Layout layout;
     private final List<String> names;
     private final List<Inversion> inversions;
     private final List<Integer> weighing;
@@ -28,8 +28,8 @@ public final class Recipe {
     private Recipe(Question question, Lane lane, long seed) {
         this.question = question;
         this.lane = lane;
-        this.seed = seed;
         this.names = question.inputs().stream().map(Input::name).toList();
+        this.layout = lane.scheme().points().layout(new Address(seed, Purpose.RUN, lane.name(), 0, "", 0), names);
         this.inversions = question.inputs().stream()
                 .map(input -> Inversion.of(input.drawn()))
                 .toList();
@@ -63,8 +63,8 @@ public final class Recipe {
         return question;
     }
 
-    Address address(long item) {
-        return new Address(seed, Purpose.RUN, lane.name(), 0, "", item);
+    Layout layout() {
+        return layout;
     }
 
     Lane lane() {

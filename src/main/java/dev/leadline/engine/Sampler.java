@@ -22,6 +22,7 @@ public final class Sampler {
     private final double[][] outcomes;
     private final double[] weights;
     private final double[] logPdf;
+    private final Accumulator sums;
 
     Sampler(Recipe recipe) {
         this.recipe = recipe;
@@ -37,13 +38,14 @@ public final class Sampler {
         boolean weighs = !recipe.weighing().isEmpty();
         this.weights = weighs ? new double[Program.BLOCK] : new double[0];
         this.logPdf = weighs ? new double[Program.BLOCK] : new double[0];
+        this.sums = new Accumulator(outcomes.length);
     }
 
     /// @param cancelled looked at between blocks of draws
     /// @return empty where cancelled
     public Optional<ItemSums> compute(Item item, BooleanSupplier cancelled) {
         var cursor = open(item);
-        var sums = new Accumulator(outcomes.length);
+        sums.clear();
         var failures = new ArrayList<Failure>();
         for (int from = 0; from < item.draws(); from += Program.BLOCK) {
             if (cancelled.getAsBoolean()) {
@@ -59,7 +61,7 @@ public final class Sampler {
                 keepFailures(item.firstDraw() + from, rows, failures);
             }
         }
-        return Optional.of(new ItemSums(item, sums, List.copyOf(failures)));
+        return Optional.of(new ItemSums(item, sums.copy(), List.copyOf(failures)));
     }
 
     /// Inputs of the draw with index `draw` in the lane; an input that nothing depends on is drawn all the same.
@@ -82,7 +84,7 @@ public final class Sampler {
     }
 
     private Cursor open(Item item) {
-        return recipe.lane().scheme().points().open(recipe.address(item.index()), recipe.names());
+        return recipe.layout().open(item.index());
     }
 
     private void draw(Cursor cursor, int rows) {

@@ -104,6 +104,12 @@ public final class Accumulator {
         return copy;
     }
 
+    /// Forgets everything, and keeps its working memory.
+    public void clear() {
+        total.set(new Sums(components));
+        excluded = 0;
+    }
+
     public int components() {
         return components;
     }
