@@ -1,5 +1,6 @@
 package dev.leadline.chart;
 
+import dev.leadline.model.Reference;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -50,13 +51,10 @@ final class Fit {
 
     static Range values(Settling settling) {
         var seen = hull(settling.lanes().stream().flatMapToDouble(Fit::laterPart));
-        var reference = settling.reference().map(r -> List.of(r.value() - r.error(), r.value() + r.error()));
         if (seen.isEmpty()) {
-            return reference
-                    .flatMap(r -> hull(r.stream().mapToDouble(v -> v)))
-                    .map(Fit::roomy)
-                    .orElse(new Range(0, 1));
+            return settling.reference().flatMap(Fit::about).map(Fit::roomy).orElse(new Range(0, 1));
         }
+        var reference = settling.reference().map(r -> List.of(r.value() - r.error(), r.value() + r.error()));
         var range = seen.get();
         for (var more : wishes(settling, reference)) {
             double low = Math.min(range.low(), more.low());
@@ -66,6 +64,13 @@ final class Fit {
             }
         }
         return roomy(range);
+    }
+
+    /// Before the first draw: a tenth of the reference value to each side, or more, so that its error is a strip in the
+    /// picture and does not fill it.
+    private static Optional<Range> about(Reference reference) {
+        double around = Math.max(.1 * Math.abs(reference.value()), 5 * reference.error());
+        return hull(DoubleStream.of(reference.value() - around, reference.value() + around));
     }
 
     /// As far out as a person may zoom or pan: ten times the stretch that holds everything a lane ever showed.

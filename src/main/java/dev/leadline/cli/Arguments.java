@@ -44,6 +44,7 @@ final class Arguments {
                 .type(Path.class)
                 .index("0")
                 .arity("1")
+                .required(true)
                 .description("A project file (.leadline).")
                 .build();
     }

@@ -12,6 +12,9 @@ final class Columns {
     private static final int LONGEST_NAME = 40;
     private static final MathContext DIGITS = new MathContext(8);
 
+    /// Whole numbers of so many digits are written out.
+    private static final int WRITTEN_OUT = 12;
+
     private record Row(String name, String value, String remark) {}
 
     private final List<Row> rows = new ArrayList<>();
@@ -35,7 +38,9 @@ final class Columns {
         if (!Double.isFinite(value)) {
             return String.valueOf(value);
         }
-        String text = new BigDecimal(value).round(DIGITS).stripTrailingZeros().toString();
-        return text.replace("E+", "e").replace("E", "e");
+        BigDecimal rounded = new BigDecimal(value).round(DIGITS).stripTrailingZeros();
+        return rounded.scale() < 0 && rounded.precision() - rounded.scale() <= WRITTEN_OUT
+                ? rounded.toPlainString()
+                : rounded.toString().replace("E+", "e").replace("E", "e");
     }
 }

@@ -4,6 +4,7 @@ import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import dev.leadline.project.ProblemsJson;
+import dev.leadline.project.ProjectFile;
 import dev.leadline.project.Version;
 import java.nio.file.Path;
 import java.util.Arrays;
@@ -145,9 +146,12 @@ public final class Commands {
                                 ? "the command %s is not available".formatted(command.get())
                                 : "there is no command \"%s\"".formatted(shown(command.get())))
                 .because("Commands are %s.".formatted(String.join(", ", names)));
-        throw new Refusal(Nearest.to(command.get(), names)
-                .map(near -> problem.tryThis("Was \"leadline %s\" meant?".formatted(near)))
-                .orElse(problem));
+        throw new Refusal(problem.tryThis(
+                command.get().endsWith(ProjectFile.EXTENSION)
+                        ? "Write leadline run, or leadline open, before the name of a project."
+                        : Nearest.to(command.get(), names)
+                                .map("Was \"leadline %s\" meant?"::formatted)
+                                .orElse("See leadline --help.")));
     }
 
     private static List<Problem> problems(ParameterException e) {

@@ -77,6 +77,9 @@ final class FigureCommand implements Command {
         } else {
             console.out().println(Caption.of(settling));
             console.out().println("Written to " + file);
+            if (!quiet) {
+                console.err().print(new RunText(console, question, plan).doubts(state));
+            }
         }
         return RunCommand.exitCode(question, state);
     }

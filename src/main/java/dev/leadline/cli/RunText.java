@@ -52,10 +52,20 @@ final class RunText {
         return text.toString();
     }
 
+    /// What stands against signing, and why the exit code is not 0.
+    String doubts(StudyState state) {
+        state.lanes().stream()
+                .flatMap(lane -> lane.grounds().stream())
+                .filter(ground -> ground.status() == Ground.Status.DOUBTED)
+                .forEach(this::ground);
+        return text.toString();
+    }
+
     private void lane(LaneState lane) {
         line("");
         List<Answer> answers = lane.trace().last().map(Mark::answers).orElse(List.of());
         answers.forEach(this::answer);
+        together(answers);
         line("  " + facts(lane, answers));
         line("");
         lane.grounds().forEach(this::ground);
@@ -68,6 +78,19 @@ final class RunText {
         answer.interval().note().ifPresent(note -> wrapped("  ", note));
         if (answer.nonFinite() > 0) {
             line("  over finite evaluations only");
+        }
+    }
+
+    /// Why the level beside an answer is not the one that was asked for.
+    private void together(List<Answer> answers) {
+        if (answers.size() > 1) {
+            wrapped(
+                    "  ",
+                    "the %d intervals hold all at once with %s, each for itself with %s"
+                            .formatted(
+                                    answers.size(),
+                                    Sentence.percent(question.confidence()),
+                                    answers.getFirst().interval().percent()));
         }
     }
 
@@ -86,7 +109,7 @@ final class RunText {
         facts.add(
                 "lane %s, %s points".formatted(lane.trace().lane(), lane.trace().scheme()));
         lane.trace().last().ifPresent(mark -> {
-            facts.add("%,d draws".formatted(mark.draws()));
+            facts.add("%,d draw%s".formatted(mark.draws(), mark.draws() == 1 ? "" : "s"));
             if (answers.size() == 1 && answers.getFirst().hits().isPresent()) {
                 facts.add("%,d hits".formatted(answers.getFirst().hits().getAsLong()));
             }

@@ -7,13 +7,39 @@ import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
 
 /// A family, described by its name, its use and its entries. Immutable.
 record Described(String name, String use, List<Entry> ways) implements Family {
+
+    /// Parameters by other names that are in use; the first of those that the family has.
+    private static final Map<String, List<String>> ALSO_CALLED = Map.ofEntries(
+            Map.entry("min", List.of("from")),
+            Map.entry("low", List.of("from")),
+            Map.entry("lower", List.of("from")),
+            Map.entry("max", List.of("to")),
+            Map.entry("high", List.of("to")),
+            Map.entry("upper", List.of("to")),
+            Map.entry("stdev", List.of("sd")),
+            Map.entry("stddev", List.of("sd")),
+            Map.entry("std", List.of("sd")),
+            Map.entry("sigma", List.of("sd")),
+            Map.entry("mu", List.of("mean")),
+            Map.entry("theta", List.of("scale")),
+            Map.entry("k", List.of("shape")),
+            Map.entry("df", List.of("dof")),
+            Map.entry("nu", List.of("dof")));
+
+    /// What makes a parameter of one that is another quantity.
+    private static final Map<String, String> CONVERTED = Map.of(
+            "variance", "The standard deviation is the square root of the variance.",
+            "var", "The standard deviation is the square root of the variance.",
+            "rate", "The mean time, or the scale, is 1 over the rate.");
 
     Described(String name, String use, Entry... ways) {
         this(name, use, List.of(ways));
@@ -46,14 +72,22 @@ record Described(String name, String use, List<Entry> ways) implements Family {
                 var problem = Problem.of("%s has no parameter %s".formatted(this.name, name))
                         .because("It is entered by " + choices() + ".")
                         .at(Place.of(name));
-                problems.add(Nearest.to(name, known)
-                        .map(near -> problem.tryThis("Did you mean " + near + "?"))
-                        .orElse(problem));
+                problems.add(hint(name, known).map(problem::tryThis).orElse(problem));
             }
         }
         if (!problems.isEmpty()) {
             throw new Refusal(problems);
         }
+    }
+
+    private static Optional<String> hint(String name, Set<String> known) {
+        String lower = name.toLowerCase(Locale.ROOT);
+        return Nearest.to(name, known)
+                .or(() -> ALSO_CALLED.getOrDefault(lower, List.of()).stream()
+                        .filter(known::contains)
+                        .findFirst())
+                .map(near -> "Did you mean " + near + "?")
+                .or(() -> Optional.ofNullable(CONVERTED.get(lower)));
     }
 
     /// The first entry that has all the given names.

@@ -60,8 +60,8 @@ final class Hints {
 
     /// Where a function stands; as names of inputs some of these are common. In small letters.
     private static final Map<String, String> FUNCTIONS = Map.ofEntries(
-            Map.entry("ln", "log is the natural logarithm"),
-            Map.entry("lg", "log10 is the logarithm to base 10"),
+            Map.entry("ln", "write log(x): it is the natural logarithm"),
+            Map.entry("lg", "write log10(x)"),
             Map.entry("log2", "write log(x)/log(2)"),
             Map.entry("exp10", "write 10^x"),
             Map.entry("pow", "write x^y"),

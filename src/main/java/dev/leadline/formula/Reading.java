@@ -129,14 +129,14 @@ final class Reading {
     private static Problem unknownFunction(Token token, Names names) {
         var known = Functions.all().stream().map(Function::name).toList();
         return Problem.of("unknown function " + quoted(token))
-                .because("functions are those of the list; a product is written with *")
+                .because("a name before a bracket is a function; a product is written with *")
                 .tryThis(Hints.forFunction(token.text())
                         .or(() -> nearest(token.text(), known).map(Reading::meant))
                         .or(() -> nearest(
                                         token.text(),
                                         List.copyOf(names.meanings().keySet()))
                                 .map(name -> "did you mean " + name + "*(...)?"))
-                        .orElse("choose one of the functions that are known"))
+                        .orElse("choose one of " + String.join(", ", known)))
                 .at(Place.of(token.span()));
     }
 

@@ -20,15 +20,15 @@ final class Hits {
         long rarer = Math.min(hits, misses);
         String of = evidence.of(k);
         String what = hits <= misses ? "hit" : "miss";
-        String draws = Numbers.count(answer.observations());
+        String draws = Numbers.count(answer.observations()) + (answer.observations() == 1 ? " draw" : " draws");
         if (rarer >= ENOUGH) {
-            return Optional.of(Ground.shown(
-                    "hits", of + "%s %s in %s draws".formatted(Numbers.count(rarer), plural(what), draws)));
+            return Optional.of(
+                    Ground.shown("hits", of + "%s %s in %s".formatted(Numbers.count(rarer), plural(what), draws)));
         }
         String text = rarer == 0
-                ? "no %s in %s draws: a part of probability below %s may be unseen"
+                ? "no %s in %s: a part of probability below %s may be unseen"
                         .formatted(what, draws, Numbers.value(Math.min(1, 3.0 / answer.observations())))
-                : "only %d %s in %s draws".formatted(rarer, rarer == 1 ? what : plural(what), draws);
+                : "only %d %s in %s".formatted(rarer, rarer == 1 ? what : plural(what), draws);
         return Optional.of(Ground.doubted(
                 "hits",
                 Strength.CAUTION,

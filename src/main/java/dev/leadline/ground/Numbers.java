@@ -1,5 +1,7 @@
 package dev.leadline.ground;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.Locale;
 
 /// Numbers as sentences of evidence say them.
@@ -26,8 +28,11 @@ final class Numbers {
         return String.format(Locale.ROOT, "%.1f", ratio);
     }
 
-    /// A value to three significant digits: `0.00300`, `9.99e-6`.
+    /// A value to three significant digits: `0.00300`, `9.99e-6`, `1,420`.
     static String value(double value) {
+        if (Math.abs(value) >= 1000 && Math.abs(value) < LARGEST_WRITTEN_OUT) {
+            return String.format(Locale.ROOT, "%,.0f", new BigDecimal(value).round(new MathContext(3)));
+        }
         return shortExponent(String.format(Locale.ROOT, "%.3g", value));
     }
 

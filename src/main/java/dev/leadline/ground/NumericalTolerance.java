@@ -19,8 +19,9 @@ final class NumericalTolerance {
                         "the numerical tolerance cannot be judged yet",
                         "Make more draws");
             }
-            String text =
-                    "half-width %s, numerical tolerance %s".formatted(Numbers.value(halfWidth), Numbers.value(allowed));
+            String text = evidence.of(0)
+                    + "half-width %s, numerical tolerance %s"
+                            .formatted(Numbers.value(halfWidth), Numbers.value(allowed));
             if (halfWidth <= allowed) {
                 return Ground.shown("tolerance", text);
             }

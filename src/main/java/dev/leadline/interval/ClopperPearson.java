@@ -44,7 +44,8 @@ public final class ClopperPearson {
     private static Optional<String> note(long hits, long n, long failed, double level) {
         String bracket = failed == 0
                 ? ""
-                : "; " + failed + " failed evaluations count as misses in the lower limit and as hits in the upper one";
+                : String.format(Locale.ROOT, "; %,d failed evaluations", failed)
+                        + " count as misses in the lower limit and as hits in the upper one";
         String percent = Rounded.percent(level);
         if (hits == 0 && n > 0) {
             return Optional.of("no hit in " + draws(n) + ": below " + Rounded.up(upperLimit(0, n, failed, level))

@@ -3,6 +3,7 @@ package dev.leadline.model;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -38,6 +39,13 @@ final class Findings {
                             problems.add(problem.in(place.apply(problem.place().path()))));
             return Optional.empty();
         }
+    }
+
+    /// A number as it stands in a project: no `.0` behind a whole one.
+    static String number(double value) {
+        return Double.isFinite(value)
+                ? BigDecimal.valueOf(value).stripTrailingZeros().toPlainString()
+                : String.valueOf(value);
     }
 
     void refuseIfAny() {

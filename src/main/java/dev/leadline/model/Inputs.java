@@ -12,6 +12,7 @@ import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 
@@ -19,6 +20,19 @@ import java.util.Optional;
 final class Inputs {
 
     private static final String UNIFORM = "uniform";
+
+    /// Families by other names that are in use.
+    private static final Map<String, String> ALSO_CALLED = Map.ofEntries(
+            Map.entry("gaussian", "normal"),
+            Map.entry("gauss", "normal"),
+            Map.entry("rectangular", UNIFORM),
+            Map.entry("triangle", "triangular"),
+            Map.entry("log-normal", "lognormal"),
+            Map.entry("galton", "lognormal"),
+            Map.entry("t", "student"),
+            Map.entry("student-t", "student"),
+            Map.entry("extreme-value", "gumbel"),
+            Map.entry("gev1", "gumbel"));
 
     private final Findings findings;
 
@@ -130,9 +144,10 @@ final class Inputs {
         Problem problem = Problem.of(
                         name.isEmpty() ? "no family is chosen" : "the family \"%s\" is not available".formatted(name))
                 .because("Families are %s.".formatted(String.join(", ", names)));
-        return Nearest.to(name, names)
+        return Optional.ofNullable(ALSO_CALLED.get(name.toLowerCase(Locale.ROOT)))
+                .or(() -> Nearest.to(name, names))
                 .map(near -> problem.tryThis("Was \"%s\" meant?".formatted(near)))
-                .orElse(problem);
+                .orElse(problem.tryThis("Choose one of these; the command families says what each is for."));
     }
 
     private static Input input(InputDraft draft, String family, Density drawn, Role role) {
@@ -141,6 +156,6 @@ final class Inputs {
     }
 
     private static String number(double end) {
-        return Double.isInfinite(end) ? (end < 0 ? "-inf" : "inf") : String.valueOf(end);
+        return Double.isInfinite(end) ? (end < 0 ? "-inf" : "inf") : Findings.number(end);
     }
 }

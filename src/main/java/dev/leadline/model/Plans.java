@@ -54,7 +54,7 @@ final class Plans {
             if (!(seconds > 0 && Double.isFinite(seconds))) {
                 findings.add(
                         "$.stop.seconds",
-                        "seconds is %s but must be greater than 0".formatted(seconds),
+                        "seconds is %s but must be greater than 0".formatted(Findings.number(seconds)),
                         "It is the time a lane may compute.");
             }
         });
@@ -95,7 +95,8 @@ final class Plans {
                 findings.add(
                         path + ".name",
                         "two lanes are called %s".formatted(name),
-                        "A lane is known by its name, and draws its own random numbers by it.");
+                        "A lane is known by its name, and draws its own random numbers by it.",
+                        "Give one of them another name, as B.");
             }
             Points points = POINTS.get(drafts.get(i).points());
             if (points == null) {

@@ -83,7 +83,7 @@ public record Project(Draft draft, Question question, Plan plan) {
         if (!(error >= 0 && Double.isFinite(error))) {
             findings.add(
                     "$.reference.error",
-                    "error is %s but must be 0 or more".formatted(error),
+                    "error is %s but must be 0 or more".formatted(Findings.number(error)),
                     "It is the standard uncertainty of the reference value.");
         }
         return new Reference(draft.value(), error, draft.source());
@@ -94,7 +94,7 @@ public record Project(Draft draft, Question question, Plan plan) {
         if (!(confidence > 0 && confidence < 1)) {
             findings.add(
                     "$.confidence",
-                    "confidence is %s but must be between 0 and 1".formatted(confidence),
+                    "confidence is %s but must be between 0 and 1".formatted(Findings.number(confidence)),
                     "It is the chance that the interval holds the value sought.",
                     "Write 0.95 for 95 %.");
         }
@@ -106,7 +106,8 @@ public record Project(Draft draft, Question question, Plan plan) {
             findings.add(
                     "$.tolerance",
                     "the tolerance says nothing",
-                    "It is \"absolute\", in the unit of the answer, or \"relative\", or both.");
+                    "It is \"absolute\", in the unit of the answer, or \"relative\", or both.",
+                    "Write {\"relative\": 0.05} for 5 % of the value.");
         }
         checkPositive("absolute", draft.absolute(), findings);
         checkPositive("relative", draft.relative(), findings);
@@ -135,7 +136,7 @@ public record Project(Draft draft, Question question, Plan plan) {
             if (!(value > 0 && Double.isFinite(value))) {
                 findings.add(
                         "$.tolerance." + name,
-                        "%s is %s but must be greater than 0".formatted(name, value),
+                        "%s is %s but must be greater than 0".formatted(name, Findings.number(value)),
                         "The half-width of the interval is compared with it.");
             }
         });

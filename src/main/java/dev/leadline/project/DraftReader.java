@@ -10,6 +10,7 @@ import dev.leadline.model.Draft.LaneDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.model.Stop;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -102,10 +103,11 @@ final class DraftReader {
                 asks(whole),
                 whole.object("reference", "a reference {\"value\": …}").map(this::reference),
                 whole.number("confidence"),
-                whole.object("tolerance", "a tolerance {\"absolute\": …}").map(this::tolerance),
+                whole.object("tolerance", "a tolerance {\"relative\": 0.05} or {\"absolute\": 2}")
+                        .map(this::tolerance),
                 whole.object("stop", "a stop rule {\"rule\": \"fixed\", \"draws\": …}")
                         .map(this::stop),
-                whole.count("seed"),
+                whole.count("seed", 0, Long.MAX_VALUE),
                 lanes(whole));
         onlyOff(whole, "commonRandomNumbers");
         onlyAuto(whole);
@@ -124,7 +126,7 @@ final class DraftReader {
                     .at(Place.of(whole.pathOf("leadline"))));
             return;
         }
-        long format = whole.count("leadline").orElse(FORMAT);
+        long format = whole.count("leadline", 0, Long.MAX_VALUE).orElse(FORMAT);
         if (format != FORMAT) {
             Problem problem = Problem.of("the project format is %d but must be %d".formatted(format, FORMAT))
                     .at(Place.of(whole.pathOf("leadline")));
@@ -295,7 +297,8 @@ final class DraftReader {
     }
 
     private StopDraft stop(Fields fields) {
-        var stop = new StopDraft(fields.requiredText("rule", NAME), fields.count("draws"), fields.number("seconds"));
+        var stop = new StopDraft(
+                fields.requiredText("rule", NAME), fields.count("draws", 1, Stop.MOST_DRAWS), fields.number("seconds"));
         fields.close(STOP_LATER);
         return stop;
     }

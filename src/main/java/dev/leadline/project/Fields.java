@@ -105,15 +105,18 @@ final class Fields {
         return number(name).orElse(Double.NaN);
     }
 
-    /// A whole number, 0 or more.
-    OptionalLong count(String name) {
+    /// A whole number.
+    OptionalLong count(String name, long least, long most) {
         return take(name)
                 .map(json -> {
-                    if (json instanceof Json.Number number && number.whole().orElse(-1) >= 0) {
+                    if (json instanceof Json.Number number
+                            && number.whole().isPresent()
+                            && number.whole().getAsLong() >= least
+                            && number.whole().getAsLong() <= most) {
                         return number.whole();
                     }
                     if (!(json instanceof Json.Number(String literal) && literal.equals("NaN"))) {
-                        wrong(name, json, "a whole number from 0 to %d".formatted(Long.MAX_VALUE));
+                        wrong(name, json, "a whole number from %d to %d".formatted(least, most));
                     }
                     return OptionalLong.empty();
                 })

@@ -152,7 +152,12 @@ final class JsonReader {
         }
         int c = text.codePointAt(offset);
         String before = text.substring(0, offset).stripTrailing();
-        Problem problem = here("%s is not expected here".formatted(Shown.quoted(Character.toString(c))), offset)
+        if (before.isEmpty()) {
+            return here("a project begins with {, not with %s".formatted(mark(c)), offset)
+                    .because("A project is a JSON object that begins with \"leadline\": 1.")
+                    .tryThis("See whether the right file was given.");
+        }
+        Problem problem = here("%s is not expected here".formatted(mark(c)), offset)
                 .because("The text is JSON (RFC 8259) up to this place.");
         if ((c == '}' || c == ']') && before.endsWith(",")) {
             return problem.tryThis("Remove the comma before the bracket.");
@@ -163,8 +168,18 @@ final class JsonReader {
             case '"' -> problem.tryThis("See whether a comma is missing before it.");
             case '\n', '\r', '\t' ->
                 problem.tryThis("Close the quote on the line where it opens; write \\n for a new line.");
-            default -> problem;
+            case '“', '”', '„', '‘', '’', '«', '»' -> problem.tryThis("Write straight double quotes: \".");
+            case '.' -> problem.tryThis("Write a 0 before the point: 0.5.");
+            case '+' -> problem.tryThis("Leave the sign out.");
+            default ->
+                Character.isLetter(c) && ":,{[".indexOf(before.charAt(before.length() - 1)) >= 0
+                        ? problem.tryThis("Names and texts stand in double quotes.")
+                        : problem;
         };
+    }
+
+    private static String mark(int c) {
+        return c == '"' ? "a double quote" : Shown.quoted(Character.toString(c));
     }
 
     private Problem cutShort() {

@@ -86,6 +86,10 @@ public final class ProjectFile {
                     .map(near -> problem.tryThis("Was %s meant?".formatted(near)))
                     .orElse(problem));
         }
+        if (Files.isDirectory(file)) {
+            throw new Refusal(Problem.of("there is a folder at %s, not a file".formatted(Shown.plain(file.toString())))
+                    .tryThis("Give a project file, by habit name%s.".formatted(EXTENSION)));
+        }
         if (!Files.isRegularFile(file)) {
             throw new Refusal(Problem.of("%s is not a file".formatted(Shown.plain(file.toString())))
                     .tryThis("Give a project file, by habit name%s.".formatted(EXTENSION)));
@@ -110,6 +114,10 @@ public final class ProjectFile {
 
     /// A project beside the missing one whose name is close to it.
     private static Optional<Path> neighbour(Path file) {
+        Path whole = file.resolveSibling(file.getFileName() + EXTENSION);
+        if (Files.isRegularFile(whole)) {
+            return Optional.of(whole);
+        }
         Path folder = file.toAbsolutePath().getParent();
         if (folder == null || !Files.isDirectory(folder)) {
             return Optional.empty();

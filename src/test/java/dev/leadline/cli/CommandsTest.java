@@ -48,6 +48,62 @@ class CommandsTest {
         return Files.writeString(folder.resolve("changed.leadline"), changed);
     }
 
+    @Test
+    void namesWhatWasLeftOut() throws IOException {
+        assertTrue(leadline("run").err().contains("'PROJECT'"));
+        assertEquals(2, leadline("run").exitCode());
+        String bare = project.toString().replace(".leadline", "");
+        assertTrue(leadline("run", bare).err().contains("Was " + project + " meant?"));
+        assertTrue(leadline("run", folder).err().startsWith(folder.getFileName() + ": 1 problem"));
+        assertTrue(leadline("run", folder)
+                .err()
+                .contains("There is a folder at " + folder.toString().substring(0, 3)));
+        assertTrue(leadline(project).err().contains("leadline run"));
+        assertTrue(leadline("help").err().contains("leadline --help"));
+    }
+
+    /// Names of other trades lead to the family and the parameter that are meant.
+    @Test
+    void understandsTheWordsOfOtherTrades() throws IOException {
+        for (var words : List.of(
+                List.of("gaussian\", \"mean\": 1, \"sd\": 1", "\"normal\""),
+                List.of("normal\", \"mean\": 1, \"stdev\": 1", "Did you mean sd?"),
+                List.of("triangular\", \"min\": 1, \"mode\": 1, \"to\": 2", "Did you mean from?"),
+                List.of("exponential\", \"rate\": 1", "1 over the rate"))) {
+            String density = "\"density\": {\"family\": \"" + words.getFirst() + "}";
+            Path wrong = Files.writeString(
+                    folder.resolve("words.leadline"),
+                    UNIFORM.replaceFirst("\"density\": \\{[^}]*}", density.replace("\\", "")));
+            var outcome = leadline("check", wrong);
+            assertEquals(2, outcome.exitCode());
+            assertTrue(outcome.err().contains(words.getLast()), outcome.err());
+        }
+    }
+
+    /// Three answers share the 5 % that may be missed; each is written with the level that is left to it.
+    @Test
+    void saysThatSeveralAnswersHoldTogether() throws IOException {
+        String three = UNIFORM.replace(
+                "{\"mean\": \"y\", \"unit\": \"m2\"}",
+                "[{\"mean\": \"y\"}, {\"mean\": \"x\"}, {\"probability\": \"x > 0.5\"}]");
+        String said = leadline("run", Files.writeString(folder.resolve("three.leadline"), three))
+                .out();
+        assertTrue(said.contains("98.33 % interval"), said);
+        assertTrue(said.contains("the 3 intervals hold all at once with 95 %"), said);
+    }
+
+    @Test
+    void saysWhyAFigureEndsWithOne() throws IOException {
+        Path strict = with("tolerance", "{\"relative\": 1e-6}");
+        var outcome = leadline("figure", strict, "-o", folder.resolve("strict.png"));
+        assertEquals(1, outcome.exitCode());
+        assertTrue(outcome.err().contains("not met"), outcome.err());
+        assertEquals(
+                "",
+                leadline("figure", strict, "-o", folder.resolve("strict.png"), "--quiet")
+                        .err());
+    }
+
     /// Every kind of wrong project, with every command that takes one: exit code 2, the problems for programs and for
     /// people, and not a file more or less than before.
     @ParameterizedTest(name = "{0}")
