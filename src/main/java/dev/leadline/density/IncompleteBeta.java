@@ -1,6 +1,7 @@
 package dev.leadline.density;
 
 import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
 
 /// The regularised incomplete beta function: the mass of the beta density of parameters `a` and `b` below `x`. Points
@@ -53,8 +54,7 @@ record IncompleteBeta(double a, double b, double logConstant) {
         }
         double n = a + b;
         double difference = b * x - a * y;
-        return logConstant
-                - (GammaFunction.deviance(a, n * x, difference) + GammaFunction.deviance(b, n * y, -difference));
+        return logConstant - (Deviance.of(a, n * x, difference) + Deviance.of(b, n * y, -difference));
     }
 
     /// `log(a B(a, b))`.

@@ -2,6 +2,7 @@ package dev.leadline.density;
 
 import dev.leadline.numeric.ErrorFunction;
 import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
 
 /// The regularised incomplete gamma functions of shape `a > 0` at `x >= 0`: the mass of the standard gamma density
@@ -73,16 +74,14 @@ record IncompleteGamma(double a, double stirlingError, double logGammaOnePlus) {
 
     static IncompleteGamma of(double a) {
         return new IncompleteGamma(
-                a,
-                GammaFunction.stirlingError(a),
-                a <= 0.5 ? GammaFunction.logGammaOnePlus(a) : GammaFunction.logGamma(a + 1));
+                a, GammaFunction.stirlingError(a), a <= 0.5 ? GammaFunction.logOnePlus(a) : GammaFunction.log(a + 1));
     }
 
     /// `log(x^a e^-x / Γ(a + 1))`.
     double logPrefix(double x) {
         return a < 1
                 ? a * Log.log(x) - x - logGammaOnePlus
-                : -GammaFunction.deviance(a, x, x - a) - stirlingError - 0.5 * Log.log(a) - HALF_LOG_2PI;
+                : -Deviance.of(a, x, x - a) - stirlingError - 0.5 * Log.log(a) - HALF_LOG_2PI;
     }
 
     /// `P(a, x)`.
@@ -178,7 +177,7 @@ record IncompleteGamma(double a, double stirlingError, double logGammaOnePlus) {
     /// `P` (side -1) or `Q` (side 1) as `erfc(± eta sqrt(a / 2)) / 2 ± e^(-a eta^2 / 2) / sqrt(2 pi a) T / Γ*`, with
     /// `T = Σ β_n eta^n`, `β_(n-1) = d_n + (n + 1) / a β_(n+1)` and `Γ* = 1 + β_1 / a`.
     private double uniform(double x, int side) {
-        double half = GammaFunction.deviance(a, x, x - a);
+        double half = Deviance.of(a, x, x - a);
         double eta = Math.copySign(Math.sqrt(2 * half / a), x - a);
         double later = 0;
         double beta = 0;

@@ -5,6 +5,7 @@ import static dev.leadline.density.Rule.finite;
 import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
 
 /// The Weibull density for lifetimes: `survival(x) = exp(-((x - from) / scale)^shape)` from `from` on.
@@ -111,9 +112,7 @@ public record Weibull(double shape, double scale, double from) implements Scaled
 
         /// `log Γ(1 + 2e) - 2 log Γ(1 + e)`.
         private static double excess(double e) {
-            return e <= 0.25
-                    ? GammaFunction.logGammaExcess(e)
-                    : GammaFunction.logGamma(1 + 2 * e) - 2 * GammaFunction.logGamma(1 + e);
+            return e <= 0.25 ? GammaFunction.logExcess(e) : GammaFunction.log(1 + 2 * e) - 2 * GammaFunction.log(1 + e);
         }
 
         @Override
