@@ -5,15 +5,9 @@ import dev.leadline.problem.Refusal;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
-import java.nio.ByteBuffer;
-import java.nio.channels.FileChannel;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.AccessDeniedException;
-import java.nio.file.Files;
-import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
-import java.nio.file.StandardCopyOption;
-import java.nio.file.StandardOpenOption;
+import java.util.Locale;
 import javax.imageio.IIOImage;
 import javax.imageio.ImageIO;
 import javax.imageio.ImageTypeSpecifier;
@@ -22,29 +16,42 @@ import javax.imageio.metadata.IIOMetadataNode;
 import org.jfree.svg.SVGGraphics2D;
 import org.jfree.svg.ViewBox;
 
-/// Pictures as files: always light, with the [Caption] inside as text, the same bytes for the same picture, and whole
-/// or not at all under their name.
-public final class Export {
+/// Pictures as the bytes of a file: always light, with the [Caption] inside as text, the same bytes for the same
+/// picture.
+public enum Export {
+    PNG,
+    SVG;
+
     /// A pixel of a picture is a 96th of an inch on paper.
     private static final double PIXELS_PER_INCH = 96;
 
-    private Export() {}
+    /// What is written into a file of this name; the ending decides.
+    ///
+    /// @throws Refusal for any other ending
+    public static Export of(Path file) {
+        String name = String.valueOf(file.getFileName()).toLowerCase(Locale.ROOT);
+        if (name.endsWith(".png")) {
+            return PNG;
+        }
+        if (name.endsWith(".svg")) {
+            return SVG;
+        }
+        throw new Refusal(Problem.of("the figure %s is neither .png nor .svg".formatted(file.getFileName()))
+                .because("The ending decides what is written.")
+                .tryThis("End its name in .png or .svg."));
+    }
 
     /// A picture of `width` by `height` pixels at 96 to the inch.
     ///
-    /// @throws Refusal where it cannot be written
-    public static void svg(Settling settling, View view, int width, int height, Path path) {
-        write(path, svg(settling, view, width, height).getBytes(StandardCharsets.UTF_8));
+    /// @param dpi dots to the inch of an image, which the file declares; the size on paper does not depend on it
+    public byte[] bytes(Settling settling, View view, int width, int height, int dpi) {
+        return switch (this) {
+            case PNG -> png(settling, view, width, height, dpi);
+            case SVG -> svg(settling, view, width, height).getBytes(StandardCharsets.UTF_8);
+        };
     }
 
-    /// The same size on paper as [#svg], with `dpi` dots to the inch, which the file declares.
-    ///
-    /// @throws Refusal where it cannot be written
-    public static void png(Settling settling, View view, int width, int height, int dpi, Path path) {
-        write(path, png(settling, view, width, height, dpi));
-    }
-
-    static String svg(Settling settling, View view, int width, int height) {
+    private static String svg(Settling settling, View view, int width, int height) {
         var picture = Picture.of(settling, view, Theme.LIGHT, width, height);
         var g = new SVGGraphics2D(picture.width(), picture.height());
         g.setDefsKeyPrefix("settling-");
@@ -57,7 +64,7 @@ public final class Export {
                 + escaped(Caption.of(settling)) + "</desc>" + drawing.substring(end) + "\n";
     }
 
-    static byte[] png(Settling settling, View view, int width, int height, int dpi) {
+    private static byte[] png(Settling settling, View view, int width, int height, int dpi) {
         var image = Picture.of(settling, view, Theme.LIGHT, width, height).image(dpi / PIXELS_PER_INCH);
         var writer = ImageIO.getImageWritersByFormatName("png").next();
         try (var bytes = new ByteArrayOutputStream();
@@ -115,41 +122,5 @@ public final class Export {
 
     private static String escaped(String text) {
         return text.replace("&", "&amp;").replace("<", "&lt;").replace(">", "&gt;");
-    }
-
-    /// Beside its place first, then moved there in one step, so that a reader never sees half a file and a failure
-    /// leaves the old one.
-    private static void write(Path path, byte[] bytes) {
-        var part = path.toAbsolutePath()
-                .resolveSibling(
-                        "." + path.getFileName() + "." + ProcessHandle.current().pid() + ".part");
-        try {
-            try (var channel = FileChannel.open(
-                    part, StandardOpenOption.CREATE, StandardOpenOption.WRITE, StandardOpenOption.TRUNCATE_EXISTING)) {
-                var buffer = ByteBuffer.wrap(bytes);
-                while (buffer.hasRemaining()) {
-                    channel.write(buffer);
-                }
-                channel.force(true);
-            }
-            Files.move(part, path, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
-        } catch (IOException e) {
-            try {
-                Files.deleteIfExists(part);
-            } catch (IOException left) {
-                e.addSuppressed(left);
-            }
-            throw new Refusal(Problem.of("figure \"" + path + "\" could not be written: " + reason(e))
-                    .because("Nothing was left half written.")
-                    .tryThis("Choose a folder that exists and that you may write to."));
-        }
-    }
-
-    private static String reason(IOException e) {
-        return switch (e) {
-            case NoSuchFileException _ -> "its folder does not exist";
-            case AccessDeniedException _ -> "writing there is not allowed";
-            default -> e.getMessage();
-        };
     }
 }

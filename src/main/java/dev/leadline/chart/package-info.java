@@ -9,7 +9,7 @@
 ///   [image][dev.leadline.chart.Picture#image(double)]. It passes mouse positions to the picture and gets a
 ///   [Reading][dev.leadline.chart.Reading] for a hover, or the next view for wheel and drag; a double click is
 ///   [reset][dev.leadline.chart.View#reset()]. A table shows [rows][dev.leadline.chart.Settling#rows()].
-/// - **A figure** is written by [Export][dev.leadline.chart.Export], always light, with its
+/// - **A figure** is the bytes of an [Export][dev.leadline.chart.Export], always light, with its
 ///   [Caption][dev.leadline.chart.Caption] inside for people who cannot see it.
 /// - **An input's row** shows a [DensitySketch][dev.leadline.chart.DensitySketch].
 ///
@@ -18,6 +18,6 @@
 /// and grid; bands, lines, markers and key are drawn here. Layout does not depend on where a picture is drawn, so
 /// screen, image and vector file agree.
 ///
-/// Nothing here knows a window's nodes or touches a file but `Export`. A machine without any font is told so in a
+/// Nothing here knows a window's nodes or touches a file. A machine without any font is told so in a
 /// [Refusal][dev.leadline.problem.Refusal].
 package dev.leadline.chart;

@@ -7,14 +7,11 @@ import dev.leadline.chart.Settling;
 import dev.leadline.chart.View;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
-import dev.leadline.problem.Problem;
-import dev.leadline.problem.Refusal;
 import dev.leadline.project.RunJson;
+import dev.leadline.project.WholeFile;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
-import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.Locale;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Model.OptionSpec;
 import picocli.CommandLine.ParseResult;
@@ -55,7 +52,9 @@ final class FigureCommand implements Command {
     @Override
     public int run(ParseResult arguments, Console console) throws InterruptedException {
         Path file = arguments.matchedOptionValue("--output", Path.of(""));
-        boolean png = isPng(file);
+        // Before anything is computed: a run of minutes must not end in a file that cannot be written.
+        var export = Export.of(file);
+        WholeFile.check(file);
         int width = (int) Arguments.whole(arguments, "--width").orElse(1000);
         int height = (int) Arguments.whole(arguments, "--height").orElse(600);
         int dpi = (int) Arguments.whole(arguments, "--dpi").orElse(192);
@@ -67,11 +66,7 @@ final class FigureCommand implements Command {
         StudyState state = RunCommand.run(question, plan, RunArguments.threads(arguments), console, quiet);
         var settling = Settling.of(
                 question, plan, state.lanes().stream().map(LaneState::trace).toList());
-        if (png) {
-            Export.png(settling, View.FOLLOWING, width, height, dpi, file);
-        } else {
-            Export.svg(settling, View.FOLLOWING, width, height, file);
-        }
+        WholeFile.write(file, export.bytes(settling, View.FOLLOWING, width, height, dpi));
         if (Arguments.has(arguments, "--json")) {
             console.out().print(RunJson.of(open.name(), open.project(), plan, state));
         } else {
@@ -86,22 +81,5 @@ final class FigureCommand implements Command {
 
     private static OptionSpec size(String name, int least, String description) {
         return Arguments.option(name, "PX", Long.class, Arguments.whole(least, MOST_PIXELS), description);
-    }
-
-    /// Before anything is computed: a run of minutes must not end in a file that cannot be written.
-    private static boolean isPng(Path file) {
-        String name = String.valueOf(file.getFileName()).toLowerCase(Locale.ROOT);
-        Path folder = file.toAbsolutePath().getParent();
-        if (!name.endsWith(".png") && !name.endsWith(".svg")) {
-            throw new Refusal(Problem.of("the figure %s is neither .png nor .svg".formatted(file.getFileName()))
-                    .because("The ending decides what is written.")
-                    .tryThis("Write -o figure.png or -o figure.svg."));
-        }
-        if (folder == null || !Files.isDirectory(folder) || Files.isDirectory(file)) {
-            throw new Refusal(Problem.of("the figure cannot be written to %s".formatted(file))
-                    .because("Its folder does not exist, or it is a folder itself.")
-                    .tryThis("Choose another place."));
-        }
-        return name.endsWith(".png");
     }
 }

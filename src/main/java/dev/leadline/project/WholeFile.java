@@ -12,17 +12,34 @@ import java.nio.file.StandardCopyOption;
 import java.nio.file.StandardOpenOption;
 import java.nio.file.attribute.PosixFileAttributeView;
 import java.util.HexFormat;
+import java.util.Objects;
 import java.util.concurrent.ThreadLocalRandom;
 
 /// Writes a file as a whole or not at all: beside the old one, through to the disk, then in its place.
-final class WholeFile {
+public final class WholeFile {
 
     private WholeFile() {}
 
     /// Follows links, and keeps the permissions of a file that is there.
     ///
     /// @throws Refusal where the file or its folder cannot be written; the old file is then untouched
-    static void write(Path file, byte[] bytes) {
+    public static void write(Path file, byte[] bytes) {
+        Path target = target(file);
+        try {
+            replace(target, bytes);
+        } catch (IOException e) {
+            throw refusal(file, e);
+        }
+    }
+
+    /// Before something is computed that is to be written there.
+    ///
+    /// @throws Refusal where that is a folder, or write-protected, or in no folder
+    public static void check(Path file) {
+        target(file);
+    }
+
+    private static Path target(Path file) {
         try {
             Path target = Files.exists(file) ? file.toRealPath() : file.toAbsolutePath();
             if (Files.isDirectory(target)) {
@@ -35,12 +52,9 @@ final class WholeFile {
             if (!Files.isDirectory(folder)) {
                 throw refusal(file, "There is no folder %s.".formatted(Shown.plain(folder.toString())));
             }
-            replace(target, bytes);
-        } catch (FileSystemException e) {
-            String why = e.getReason() == null ? "The folder cannot be written." : e.getReason();
-            throw refusal(file, Shown.plain(why));
+            return target;
         } catch (IOException e) {
-            throw refusal(file, Shown.plain(String.valueOf(e.getMessage())));
+            throw refusal(file, e);
         }
     }
 
@@ -76,6 +90,13 @@ final class WholeFile {
         } catch (IOException e) {
             System.getLogger(WholeFile.class.getName()).log(System.Logger.Level.DEBUG, "folder not forced", e);
         }
+    }
+
+    private static Refusal refusal(Path file, IOException e) {
+        String why = e instanceof FileSystemException denied
+                ? Objects.requireNonNullElse(denied.getReason(), "The folder cannot be written.")
+                : String.valueOf(e.getMessage());
+        return refusal(file, Shown.plain(why));
     }
 
     private static Refusal refusal(Path file, String why) {

@@ -10,28 +10,22 @@ import java.io.ByteArrayInputStream;
 import java.io.IOException;
 import java.nio.ByteBuffer;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.Optional;
 import javax.imageio.ImageIO;
 import javax.xml.parsers.DocumentBuilderFactory;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.io.TempDir;
 
 class ExportTest {
-    @TempDir
-    private Path folder;
-
     @Test
-    void sameBytesEveryTime() throws IOException {
-        var one = folder.resolve("one.svg");
-        var other = folder.resolve("other.svg");
-        Export.svg(Invented.rareEvent(200_000), View.FOLLOWING, 720, 420, one);
-        Export.svg(Invented.rareEvent(200_000), View.FOLLOWING, 720, 420, other);
-        assertArrayEquals(Files.readAllBytes(one), Files.readAllBytes(other));
+    void sameBytesEveryTime() {
         assertArrayEquals(
-                Export.png(Invented.gaps(), View.FOLLOWING, 300, 200, 300),
-                Export.png(Invented.gaps(), View.FOLLOWING, 300, 200, 300));
+                Export.SVG.bytes(Invented.rareEvent(200_000), View.FOLLOWING, 720, 420, 300),
+                Export.SVG.bytes(Invented.rareEvent(200_000), View.FOLLOWING, 720, 420, 300));
+        assertArrayEquals(
+                Export.PNG.bytes(Invented.gaps(), View.FOLLOWING, 300, 200, 300),
+                Export.PNG.bytes(Invented.gaps(), View.FOLLOWING, 300, 200, 300));
     }
 
     @Test
@@ -45,7 +39,7 @@ class ExportTest {
                 Optional.empty(),
                 Optional.empty(),
                 Invented.noHit().lanes());
-        String svg = Export.svg(settling, View.FOLLOWING, 720, 420);
+        var svg = new String(Export.SVG.bytes(settling, View.FOLLOWING, 720, 420, 300), StandardCharsets.UTF_8);
         var document = DocumentBuilderFactory.newInstance()
                 .newDocumentBuilder()
                 .parse(new ByteArrayInputStream(svg.getBytes(StandardCharsets.UTF_8)));
@@ -69,12 +63,10 @@ class ExportTest {
 
     @Test
     void imageFileDeclaresItsDotsAndSpeaks() throws IOException {
-        var file = folder.resolve("figure.png");
-        Export.png(Invented.smoothMean(), View.FOLLOWING, 480, 320, 300, file);
-        var image = ImageIO.read(file.toFile());
+        byte[] bytes = Export.PNG.bytes(Invented.smoothMean(), View.FOLLOWING, 480, 320, 300);
+        var image = ImageIO.read(new ByteArrayInputStream(bytes));
         assertEquals(1500, image.getWidth());
         assertEquals(1000, image.getHeight());
-        byte[] bytes = Files.readAllBytes(file);
         // PNG specification, third edition, 11.3.4.3: pixels per unit of both axes, then 1 for the metre.
         int at = indexOf(bytes, "pHYs");
         var chunk = ByteBuffer.wrap(bytes, at + 4, 9);
@@ -85,27 +77,12 @@ class ExportTest {
     }
 
     @Test
-    void replacesAFileAndLeavesNothingBeside() throws IOException {
-        var file = Files.writeString(folder.resolve("figure.svg"), "old");
-        Export.svg(Invented.empty(), View.FOLLOWING, 400, 300, file);
-        assertTrue(Files.readString(file).startsWith("<svg"));
-        try (var files = Files.list(folder)) {
-            assertEquals(1, files.count());
-        }
-    }
-
-    @Test
-    void saysWhyAFileCannotBeWritten() throws IOException {
-        var nowhere = folder.resolve("no/such/figure.svg");
-        var refused =
-                assertThrows(Refusal.class, () -> Export.svg(Invented.empty(), View.FOLLOWING, 400, 300, nowhere));
-        assertEquals(
-                "figure \"" + nowhere + "\" could not be written: its folder does not exist",
-                refused.problems().getFirst().primary());
-        var taken = Files.createDirectories(folder.resolve("taken.png/inside")).getParent();
-        assertThrows(Refusal.class, () -> Export.png(Invented.empty(), View.FOLLOWING, 400, 300, 96, taken));
-        try (var files = Files.list(folder)) {
-            assertEquals(1, files.count());
+    void theEndingDecides() {
+        assertEquals(Export.PNG, Export.of(Path.of("a.svg/b.PNG")));
+        assertEquals(Export.SVG, Export.of(Path.of("picture.svg")));
+        for (String name : List.of("picture.pdf", "picture", "png", "/")) {
+            var refused = assertThrows(Refusal.class, () -> Export.of(Path.of(name)));
+            assertTrue(refused.problems().getFirst().primary().endsWith("is neither .png nor .svg"), name);
         }
     }
 

@@ -64,8 +64,10 @@ final class ShowPictures {
                 folder,
                 "rare-large");
         sketches(folder);
-        Export.svg(all.get("rare"), View.FOLLOWING, 720, 420, folder.resolve("rare.svg"));
-        Export.png(all.get("rare"), View.FOLLOWING, 720, 420, 300, folder.resolve("rare-300.png"));
+        for (String name : List.of("rare.svg", "rare-300.png")) {
+            var file = folder.resolve(name);
+            Files.write(file, Export.of(file).bytes(all.get("rare"), View.FOLLOWING, 720, 420, 300));
+        }
         measure("one lane of " + all.get("mean").lanes().getFirst().points().size(), all.get("mean"));
         measure("two lanes of " + all.get("rare").lanes().getFirst().points().size(), all.get("rare"));
         var tenBillion = Invented.settling(

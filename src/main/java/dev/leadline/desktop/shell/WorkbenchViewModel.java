@@ -15,6 +15,7 @@ import dev.leadline.model.Project;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import dev.leadline.project.ProjectFile;
+import dev.leadline.project.WholeFile;
 import dev.leadline.study.LaneState;
 import java.nio.file.Path;
 import java.util.List;
@@ -315,7 +316,7 @@ public final class WorkbenchViewModel {
 
     private void saveAs(Runnable then) {
         dialogs.chooseWhereToSave(fileName(project.draft().get(), project.file().get()))
-                .ifPresent(file -> write(withExtension(file), then));
+                .ifPresent(file -> write(withExtension(file, ProjectFile.EXTENSION), then));
     }
 
     private void write(Path file, Runnable then) {
@@ -374,9 +375,9 @@ public final class WorkbenchViewModel {
         return shorter.isEmpty() ? "project" : shorter;
     }
 
-    private static Path withExtension(Path file) {
+    private static Path withExtension(Path file, String extension) {
         String name = file.getFileName().toString();
-        return name.contains(".") ? file : file.resolveSibling(name + ProjectFile.EXTENSION);
+        return name.contains(".") ? file : file.resolveSibling(name + extension);
     }
 
     /// The picture as it is looked at now, in print colours.
@@ -392,13 +393,13 @@ public final class WorkbenchViewModel {
         }
         var view = stage.view().get();
         dialogs.chooseFigure(stem(title.get()) + "-settling." + kind, kind)
+                .map(file -> withExtension(file, "." + kind))
                 .ifPresent(file -> background.run(
                         () -> {
-                            if (kind.equals("svg")) {
-                                Export.svg(settling.get(), view, FIGURE_WIDTH, FIGURE_HEIGHT, file);
-                            } else {
-                                Export.png(settling.get(), view, FIGURE_WIDTH, FIGURE_HEIGHT, FIGURE_DPI, file);
-                            }
+                            WholeFile.write(
+                                    file,
+                                    Export.of(file)
+                                            .bytes(settling.get(), view, FIGURE_WIDTH, FIGURE_HEIGHT, FIGURE_DPI));
                             return file;
                         },
                         _ -> notice.set("Picture written to " + file.getFileName()),
