@@ -2,7 +2,6 @@ package dev.leadline.formula;
 
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
-import dev.leadline.problem.Refusal;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Deque;
@@ -10,6 +9,7 @@ import java.util.HashMap;
 import java.util.Iterator;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 
@@ -32,6 +32,7 @@ final class StepOrder {
     private final State[] states;
     private final Deque<Visit> path = new ArrayDeque<>();
     private final List<StepLine> order = new ArrayList<>();
+    private Optional<Problem> circle = Optional.empty();
 
     private StepOrder(List<StepLine> lines) {
         this.lines = lines;
@@ -42,15 +43,22 @@ final class StepOrder {
         }
     }
 
-    /// The same lines, each after those that it uses.
-    ///
-    /// @throws Refusal where steps use one another in a circle, which is spelled out
-    static List<StepLine> of(List<StepLine> lines) {
+    static StepOrder of(List<StepLine> lines) {
         var order = new StepOrder(lines);
-        for (int i = 0; i < lines.size(); i++) {
+        for (int i = 0; i < lines.size() && order.circle.isEmpty(); i++) {
             if (order.states[i] == State.NEW) order.visit(i);
         }
-        return order.order;
+        return order;
+    }
+
+    /// The first circle in which steps use one another, spelled out.
+    Optional<Problem> circle() {
+        return circle;
+    }
+
+    /// The same lines, each after those that it uses; some are missing where there is a circle.
+    List<StepLine> lines() {
+        return order;
     }
 
     private void visit(int first) {
@@ -60,7 +68,10 @@ final class StepOrder {
             if (visit.uses.hasNext()) {
                 Token use = visit.uses.next();
                 int used = lineOf.get(use.text());
-                if (states[used] == State.OPEN) throw circle(used, use);
+                if (states[used] == State.OPEN) {
+                    circle = Optional.of(circle(used, use));
+                    return;
+                }
                 if (states[used] == State.NEW) enter(used);
             } else {
                 path.pop();
@@ -80,7 +91,7 @@ final class StepOrder {
     }
 
     /// @param use where the step that is looked at uses `line`, which waits for it
-    private Refusal circle(int line, Token use) {
+    private Problem circle(int line, Token use) {
         List<String> names = new ArrayList<>();
         for (Iterator<Visit> all = path.descendingIterator(); all.hasNext(); ) {
             Visit visit = all.next();
@@ -96,9 +107,9 @@ final class StepOrder {
                                                 : Stream.concat(names.stream().limit(SHOWN), Stream.of("…")),
                                         Stream.of(names.getFirst()))
                                 .collect(Collectors.joining(" → "));
-        return new Refusal(Problem.of(primary)
+        return Problem.of(primary)
                 .because("a step is computed after the steps that it uses")
                 .tryThis("take one of the names out of one of these formulas")
-                .at(Place.of(use.span()).in(lines.get(path.peek().line).path())));
+                .at(Place.of(use.span()).in(lines.get(path.peek().line).path()));
     }
 }

@@ -52,8 +52,9 @@ public final class Working {
                     Place.of("constants[" + index++ + "]"));
         }
         List<StepLine> lines = split(steps, declarations);
-        check(lines, asked, declarations);
-        return compile(inputs, lines, asked, declarations);
+        StepOrder order = StepOrder.of(lines);
+        check(lines, order, asked, declarations);
+        return compile(inputs, lines, order, asked, declarations);
     }
 
     public List<Step> steps() {
@@ -103,9 +104,14 @@ public final class Working {
         return lines;
     }
 
-    private static void check(List<StepLine> lines, List<String> asked, Declarations declarations) {
+    private static void check(List<StepLine> lines, StepOrder order, List<String> asked, Declarations declarations) {
         Names names = declarations.names();
-        lines.forEach(line -> declarations.report(line.check(names), line.path()));
+        for (StepLine line : lines) {
+            declarations.report(line.check(names), line.path());
+            order.circle()
+                    .filter(circle -> circle.place().path().equals(line.path()))
+                    .ifPresent(circle -> declarations.report(List.of(circle), line.path()));
+        }
         for (int i = 0; i < asked.size(); i++) {
             declarations.report(Reader.check(asked.get(i), names), "asked[" + i + "]");
         }
@@ -113,9 +119,9 @@ public final class Working {
     }
 
     private static Working compile(
-            List<String> inputs, List<StepLine> lines, List<String> asked, Declarations declarations) {
+            List<String> inputs, List<StepLine> lines, StepOrder order, List<String> asked, Declarations declarations) {
         var writer = new ExpressionWriter(inputs, declarations.names());
-        StepOrder.of(lines).forEach(line -> writer.step(line.name().text(), line.tokens()));
+        order.lines().forEach(line -> writer.step(line.name().text(), line.tokens()));
         List<Integer> stepNodes =
                 lines.stream().map(line -> writer.stepNode(line.name().text())).toList();
         List<Integer> askedNodes = new ArrayList<>();

@@ -90,6 +90,15 @@ class WorkingTest {
     }
 
     @Test
+    void circleIsNamedTogetherWithOtherFaults() {
+        assertEquals(
+                List.of("steps[0] 4-7", "steps[1] 4-5", "steps[2] 4-5", "asked[0] 0-3"),
+                shown(List.of("x"), List.of("a = top", "b = b", "c = (2"), "end").stream()
+                        .map(problem -> problem.substring(0, problem.indexOf(':')))
+                        .toList());
+    }
+
+    @Test
     void namesStandForOneThing() {
         assertEquals(
                 List.of(
