@@ -7,6 +7,7 @@ import dev.leadline.desktop.run.Studies;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Objects;
+import java.util.Optional;
 import javafx.application.Application;
 import javafx.application.ColorScheme;
 import javafx.application.Platform;
@@ -28,6 +29,19 @@ public final class Program extends Application {
         model.dark().set(Platform.getPreferences().getColorScheme() == ColorScheme.DARK);
         show(stage, model, background);
         getParameters().getUnnamed().stream().findFirst().map(Path::of).ifPresent(model::open);
+        warmUp(background);
+    }
+
+    /// Once the window stands: of the first run of a million draws this takes some tenths of a second away.
+    private static void warmUp(FxBackground background) {
+        background.run(
+                () -> {
+                    dev.leadline.formula.Program.warmUp();
+                    return Optional.empty();
+                },
+                _ -> {},
+                failure -> System.getLogger(Program.class.getName())
+                        .log(System.Logger.Level.WARNING, "kernels are not compiled ahead", failure));
     }
 
     /// Fills a stage with the window and shows it.
