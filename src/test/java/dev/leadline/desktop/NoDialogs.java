@@ -34,6 +34,11 @@ final class NoDialogs implements Dialogs {
     }
 
     @Override
+    public boolean agree(String heading, String action, List<Problem> problems) {
+        return false;
+    }
+
+    @Override
     public void tell(String heading, List<Problem> problems) {
         throw new IllegalStateException(heading + ": " + problems);
     }

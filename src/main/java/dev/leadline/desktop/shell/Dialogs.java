@@ -23,6 +23,11 @@ public interface Dialogs {
 
     Unsaved askAboutUnsaved(String title);
 
+    /// Whether to go on in spite of these.
+    ///
+    /// @param action the button that goes on
+    boolean agree(String heading, String action, List<Problem> problems);
+
     /// @param explanation what belongs here and why one would change it
     Optional<String> askText(String heading, String explanation, String value);
 

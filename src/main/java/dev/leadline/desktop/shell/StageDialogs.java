@@ -94,8 +94,21 @@ final class StageDialogs implements Dialogs {
     }
 
     @Override
+    public boolean agree(String heading, String action, List<Problem> problems) {
+        var goOn = new ButtonType(action, ButtonData.YES);
+        var dialog = this.<ButtonType>dialog(heading, goOn, ButtonType.CANCEL);
+        dialog.getDialogPane().setContent(listed(problems));
+        return dialog.showAndWait().filter(goOn::equals).isPresent();
+    }
+
+    @Override
     public void tell(String heading, List<Problem> problems) {
         var dialog = this.<ButtonType>dialog(heading, ButtonType.CLOSE);
+        dialog.getDialogPane().setContent(listed(problems));
+        dialog.showAndWait();
+    }
+
+    private static Node listed(List<Problem> problems) {
         var box = new VBox(4);
         problems.stream().limit(6).forEach(p -> {
             box.getChildren().add(text(p.primary(), "primary"));
@@ -105,8 +118,7 @@ final class StageDialogs implements Dialogs {
         if (problems.size() > 6) {
             box.getChildren().add(text("and " + (problems.size() - 6) + " more", Styles.QUIET));
         }
-        dialog.getDialogPane().setContent(box);
-        dialog.showAndWait();
+        return box;
     }
 
     @Override

@@ -307,11 +307,23 @@ public final class WorkbenchViewModel {
     }
 
     private void save(Runnable then) {
+        if (!isReadyToSave()) {
+            return;
+        }
         project.file().get().ifPresentOrElse(file -> write(file, then), () -> saveAs(then));
     }
 
     public void saveAs() {
-        saveAs(() -> {});
+        if (isReadyToSave()) {
+            saveAs(() -> {});
+        }
+    }
+
+    /// Asks where the file would have another number than its field shows.
+    private boolean isReadyToSave() {
+        var unread = project.unreadFields();
+        return unread.isEmpty()
+                || dialogs.agree("Save the last numbers of these fields?", "Save the last numbers", unread);
     }
 
     private void saveAs(Runnable then) {

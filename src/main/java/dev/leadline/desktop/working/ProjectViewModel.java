@@ -87,6 +87,11 @@ public final class ProjectViewModel {
         return problems.getReadOnlyProperty();
     }
 
+    /// Fields that hold no number; the draft has the last one that they held.
+    public List<Problem> unreadFields() {
+        return unread.values().stream().map(Unread::problem).toList();
+    }
+
     /// The newest draft that passed its check, for what may lag behind by a moment.
     public Optional<Project> sound() {
         return check.get() instanceof Check.Sound(Project project) ? Optional.of(project) : Optional.empty();
@@ -217,8 +222,7 @@ public final class ProjectViewModel {
     }
 
     private void collectProblems() {
-        var all = new ArrayList<Problem>();
-        unread.values().forEach(u -> all.add(u.problem));
+        var all = new ArrayList<>(unreadFields());
         if (check.get() instanceof Check.Refused(List<Problem> refused)) {
             all.addAll(refused);
         }

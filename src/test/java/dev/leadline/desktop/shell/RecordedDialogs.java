@@ -12,6 +12,7 @@ public final class RecordedDialogs implements Dialogs {
     public Optional<Path> file = Optional.empty();
     public Unsaved unsaved = Unsaved.CANCEL;
     public Optional<String> text = Optional.empty();
+    public boolean agrees;
 
     @Override
     public Optional<Path> chooseProject() {
@@ -41,6 +42,12 @@ public final class RecordedDialogs implements Dialogs {
     public Optional<String> askText(String heading, String explanation, String value) {
         heard.add(heading + " " + value);
         return text;
+    }
+
+    @Override
+    public boolean agree(String heading, String action, List<Problem> problems) {
+        heard.add(heading);
+        return agrees;
     }
 
     @Override

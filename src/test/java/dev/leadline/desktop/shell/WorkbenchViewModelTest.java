@@ -96,6 +96,22 @@ class WorkbenchViewModelTest {
     }
 
     @Test
+    void asksBeforeAFileGetsAnotherNumberThanItsFieldShows() throws IOException {
+        opened();
+        model.project().typeNumber("$.inputs[0].low", "low of x", "1..5", (d, _) -> d);
+        var file = folder.resolve("other.leadline");
+        dialogs.file = Optional.of(file);
+        model.saveAs();
+        background.finishAll();
+        assertEquals(List.of("Save the last numbers of these fields?"), dialogs.heard);
+        assertFalse(Files.exists(file));
+        dialogs.agrees = true;
+        model.saveAs();
+        background.finishAll();
+        assertTrue(Files.exists(file));
+    }
+
+    @Test
     void aFailedSaveIsToldAndLeavesNothing() {
         opened();
         edit();
