@@ -9,6 +9,7 @@ import dev.leadline.trace.Mark;
 import dev.leadline.trace.Trace;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.Queue;
@@ -116,9 +117,20 @@ public final class LaneRun {
         draws += item.item().draws();
         for (var failure : item.failures()) {
             if (failures.size() < ItemSums.KEPT) {
-                failures.add(failure);
+                failures.add(whole(failure));
             }
         }
+    }
+
+    /// With the inputs, too, that no formula reads and that were not drawn.
+    private Failure whole(Failure failure) {
+        return failure.inputs().contains(Double.NaN)
+                ? new Failure(
+                        failure.draw(),
+                        Arrays.stream(recipe.sampler().inputs(failure.draw()))
+                                .boxed()
+                                .toList())
+                : failure;
     }
 
     private boolean end(String reason, double seconds) {

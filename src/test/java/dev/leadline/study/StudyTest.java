@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.engine.Look;
 import dev.leadline.engine.Questions;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
@@ -151,6 +152,23 @@ class StudyTest {
             var fault = assertThrows(IllegalStateException.class, study::await);
             assertEquals("planted", fault.getCause().getMessage());
             assertEquals(Activity.FAILED, study.state().activity());
+        }
+    }
+
+    @Test
+    void failuresHaveTheInputsThatNoFormulaReads() throws InterruptedException {
+        var question = new Questions()
+                .uniform("unread", 5, 6)
+                .uniform("x", -1, 1)
+                .mean("log(x)")
+                .build();
+        try (var study = Study.start(question, Questions.plan(1_000, 7), 1, _ -> {})) {
+            var failures = study.await().lanes().getFirst().trace().failures();
+            assertEquals(20, failures.size());
+            for (var failure : failures) {
+                var look = Look.at(question, Questions.lane("A"), 7, failure.draw());
+                assertEquals(look.inputs(), failure.inputs());
+            }
         }
     }
 }
