@@ -69,7 +69,7 @@ final class RunCommand implements Command {
                                 .last()
                                 .map(mark -> mark.answers().getFirst())
                                 .filter(answer -> tolerance.met(
-                                        answer.estimate(), answer.interval().halfWidth()))
+                                        answer.estimate(), answer.interval().reach(answer.estimate())))
                                 .isPresent())
                         .orElse(true);
     }

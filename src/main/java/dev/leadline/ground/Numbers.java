@@ -25,7 +25,8 @@ final class Numbers {
 
     /// A ratio or a number of standard errors: one decimal.
     static String ratio(double ratio) {
-        return String.format(Locale.ROOT, "%.1f", ratio);
+        String text = String.format(Locale.ROOT, "%.1f", ratio);
+        return text.equals("-0.0") ? "0.0" : text;
     }
 
     /// A value to three significant digits: `0.00300`, `9.99e-6`, `1,420`.

@@ -16,8 +16,18 @@ final class Skewness {
     static Optional<Ground> judge(Evidence evidence, int k) {
         var sums = evidence.total();
         double skewness = sums.count() < 3 ? Double.NaN : sums.skewness(k);
-        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability || Double.isNaN(skewness)) {
+        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability) {
             return Optional.empty();
+        }
+        if (Double.isNaN(skewness)) {
+            return Double.isNaN(evidence.answers().get(k).interval().halfWidth()) || sums.count() < 3
+                    ? Optional.empty()
+                    : Optional.of(Ground.notDone(
+                            "skewness",
+                            evidence.of(k)
+                                    + "whether the outcomes are too lopsided for the interval was not judged: their"
+                                    + " cubes leave the range of numbers",
+                            "Measure the outcome in a unit in which it is of moderate size"));
         }
         double wanted = wanted(skewness);
         String text = evidence.of(k)

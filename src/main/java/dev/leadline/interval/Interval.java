@@ -30,6 +30,12 @@ public record Interval(double low, double high, double level, String kind, Strin
         return Math.max(high - estimate, estimate - low) > LOPSIDED * (high - low) / 2;
     }
 
+    /// How far the value sought may lie from the estimate, as a numerical tolerance asks: half the length, and where
+    /// the interval is lopsided the distance of the farther limit. `NaN` where a limit is missing.
+    public double reach(double estimate) {
+        return lopsided(estimate) ? Math.max(high - estimate, estimate - low) : halfWidth();
+    }
+
     /// Half the length; `NaN` where a limit is missing.
     public double halfWidth() {
         return (high - low) / 2;

@@ -9,6 +9,9 @@ final class Rounded {
     /// Decimal places of a level that are written out.
     private static final int LEVEL_PLACES = 6;
 
+    /// Digits from here on are rounding errors.
+    private static final int LEVEL_NOISE = 14;
+
     private Rounded() {}
 
     /// Three significant digits, rounded up.
@@ -34,7 +37,9 @@ final class Rounded {
 
     /// A level as `95 %`; one with many digits, as that of each of three intervals that hold together, a little lower.
     static String percent(double level) {
-        BigDecimal shown = BigDecimal.valueOf(level);
+        BigDecimal shown = new BigDecimal(level)
+                .setScale(LEVEL_NOISE, RoundingMode.HALF_EVEN)
+                .stripTrailingZeros();
         if (shown.scale() > LEVEL_PLACES) {
             shown = BigDecimal.ONE.subtract(BigDecimal.ONE.subtract(shown).round(new MathContext(3, RoundingMode.UP)));
         }

@@ -29,7 +29,8 @@ public record Tolerance(OptionalDouble absolute, OptionalDouble relative, boolea
         return Double.isNaN(allowed) ? 0 : allowed;
     }
 
-    public boolean met(double estimate, double halfWidth) {
-        return halfWidth <= allowed(estimate);
+    /// @param reach half-width of the interval, or where it is lopsided the distance of the farther limit
+    public boolean met(double estimate, double reach) {
+        return reach <= allowed(estimate);
     }
 }

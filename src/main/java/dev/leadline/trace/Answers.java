@@ -17,7 +17,8 @@ public final class Answers {
 
     /// Of each interval, so that K answers hold together: `1 - (1 - confidence) / K` (Bonferroni).
     public static double level(Question question) {
-        return 1 - (1 - question.confidence()) / question.asks().size();
+        int answers = question.asks().size();
+        return answers == 1 ? question.confidence() : 1 - (1 - question.confidence()) / answers;
     }
 
     public static List<Answer> of(Question question, Accumulator sums) {

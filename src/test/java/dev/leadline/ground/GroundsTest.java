@@ -103,6 +103,8 @@ class GroundsTest {
                 "skewness", run(new Questions().normal("z").mean("exp(2*z)").build(), 1_000)));
         shows(ground(
                 "skewness", run(new Questions().normal("z").mean("exp(z/2)").build(), 1_000)));
+        var large = run(new Questions().uniform("x", 0, 1).mean("x*1e110").build(), 1_000);
+        assertEquals(Status.NOT_DONE, ground("skewness", large).status());
     }
 
     @Test
@@ -173,6 +175,17 @@ class GroundsTest {
         var missed = ground("tolerance", run(question.absoluteTolerance(.0055).build(), 10_000));
         cautions(missed);
         assertTrue(missed.remedy().orElseThrow().matches("Make about 1[01],000 draws in all"));
+    }
+
+    /// Without a hit in 2,000 draws, which a chance of .00101 has in 13 % of the runs, the limit is 1 - .025^(1/2000):
+    /// the half-width of .00092 does not say that 0 is within .001 of the chance.
+    @Test
+    void numericalToleranceOfFewHits() throws InterruptedException {
+        var question = new Questions().uniform("x", 0, 1).probability("x < 1e-9");
+        var missed = ground("tolerance", run(question.absoluteTolerance(.001).build(), 2_000));
+        cautions(missed);
+        assertTrue(missed.text().startsWith("Distance of the farther limit 0.00184"), missed.text());
+        shows(ground("tolerance", run(question.absoluteTolerance(.0019).build(), 2_000)));
     }
 
     @Test

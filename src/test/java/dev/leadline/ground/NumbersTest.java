@@ -6,6 +6,12 @@ import org.junit.jupiter.api.Test;
 
 class NumbersTest {
     @Test
+    void noMinusBeforeNothing() {
+        assertEquals("0.0", Numbers.ratio(-.04));
+        assertEquals("-0.1", Numbers.ratio(-.06));
+    }
+
+    @Test
     void readAsAPersonWritesThem() {
         assertEquals("12,600", Numbers.count(12_600));
         assertEquals("41,000,000", Numbers.about(4.123e7));

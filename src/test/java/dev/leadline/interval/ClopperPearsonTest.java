@@ -97,6 +97,7 @@ class ClopperPearsonTest {
         assertEquals("98.33 %", third.percent());
         assertEquals(
                 "99.99366 %", ClopperPearson.of(3, 10_000, 0, .9999366575163338).percent());
+        assertEquals("99 %", ClopperPearson.of(3, 10_000, 0, Math.nextDown(.99)).percent());
         assertEquals("97.5 %", ClopperPearson.of(3, 10_000, 0, .975).percent());
     }
 

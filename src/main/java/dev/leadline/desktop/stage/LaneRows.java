@@ -92,7 +92,7 @@ final class LaneRows {
     private static String left(State.Shown shown, LaneState lane, Answer a) {
         Optional<Tolerance> tolerance = shown.project().question().tolerance();
         boolean met = tolerance
-                .filter(t -> t.met(a.estimate(), a.interval().halfWidth()))
+                .filter(t -> t.met(a.estimate(), a.interval().reach(a.estimate())))
                 .isPresent();
         if (met) {
             return "met";
