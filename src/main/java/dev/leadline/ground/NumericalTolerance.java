@@ -20,13 +20,14 @@ final class NumericalTolerance {
                         "the numerical tolerance cannot be judged yet",
                         "Make more draws");
             }
-            String text = evidence.of(0) + "%s %s, numerical tolerance %s"
-                    .formatted(
-                            answer.interval().lopsided(answer.estimate())
-                                    ? "distance of the farther limit"
-                                    : "half-width",
-                            Numbers.value(reach),
-                            Numbers.value(allowed));
+            String text = evidence.of(0)
+                    + "%s %s, numerical tolerance %s"
+                            .formatted(
+                                    answer.interval().lopsided(answer.estimate())
+                                            ? "distance of the farther limit"
+                                            : "half-width",
+                                    Numbers.value(reach),
+                                    Numbers.value(allowed));
             if (reach <= allowed) {
                 return Ground.shown("tolerance", text);
             }
