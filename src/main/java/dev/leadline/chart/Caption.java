@@ -1,5 +1,6 @@
 package dev.leadline.chart;
 
+import dev.leadline.interval.Interval;
 import dev.leadline.model.Tolerance;
 import dev.leadline.numeric.Rounding;
 import java.util.ArrayList;
@@ -39,7 +40,7 @@ public final class Caption {
             var rounding = Rounding.of(point.estimate(), half);
             text.append(Typeset.quantity(Typeset.set(rounding.value()), settling.unit()))
                     .append(", ")
-                    .append(Typeset.percent(settling.level()))
+                    .append(Interval.percent(settling.level()))
                     .append(" interval ")
                     .append(Typeset.set(rounding.down(point.low())))
                     .append(" to ")

@@ -1,5 +1,6 @@
 package dev.leadline.chart;
 
+import dev.leadline.interval.Interval;
 import java.awt.AlphaComposite;
 import java.awt.BasicStroke;
 import java.awt.Font;
@@ -460,7 +461,7 @@ public final class Picture {
             entries.add(new Legend.Entry(new Legend.Of.Lane(LaneLook.values()[i]), lane.lane() + "  " + lane.scheme()));
         }
         if (!entries.isEmpty()) {
-            entries.add(new Legend.Entry(new Legend.Of.Remark(), Typeset.percent(settling.level()) + " intervals"));
+            entries.add(new Legend.Entry(new Legend.Of.Remark(), Interval.percent(settling.level()) + " intervals"));
         }
         settling.reference()
                 .ifPresent(reference -> entries.add(new Legend.Entry(
@@ -516,7 +517,7 @@ public final class Picture {
         if (lane.withoutHit()) {
             var limit = Double.isFinite(point.high())
                     ? ", so at most " + Typeset.quantity(Typeset.atMost(point.high()), settling.unit()) + " ("
-                            + Typeset.percent(settling.level()) + ")"
+                            + Interval.percent(settling.level()) + ")"
                     : "";
             return Optional.of(name + "no hit in " + Typeset.count(point.draws()) + " draws" + limit);
         }

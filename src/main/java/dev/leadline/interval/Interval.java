@@ -15,6 +15,11 @@ public record Interval(double low, double high, double level, String kind, Strin
 
     /// The level as `95 %`.
     public String percent() {
+        return percent(level);
+    }
+
+    /// A level as it stands in words: a third of 5 % off is `98.33 %`.
+    public static String percent(double level) {
         return Rounded.percent(level);
     }
 
