@@ -147,7 +147,10 @@ final class Inputs {
         return Optional.ofNullable(ALSO_CALLED.get(name.toLowerCase(Locale.ROOT)))
                 .or(() -> Nearest.to(name, names))
                 .map(near -> problem.tryThis("Was \"%s\" meant?".formatted(near)))
-                .orElse(problem.tryThis("Choose one of these; the command families says what each is for."));
+                .orElse(
+                        name.isEmpty()
+                                ? problem
+                                : problem.tryThis("Choose one of these; leadline families says what for."));
     }
 
     private static Input input(InputDraft draft, String family, Density drawn, Role role) {

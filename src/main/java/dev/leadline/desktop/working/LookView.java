@@ -34,7 +34,7 @@ final class LookView {
         var label = new Label("draw");
         label.getStyleClass().add(Styles.FIELD_LABEL);
         label.setMinWidth(Region.USE_PREF_SIZE);
-        var hint = new Label("empty: inputs at their medians");
+        var hint = new Label("empty: all at their medians");
         hint.getStyleClass().add(Styles.QUIET);
         var line = new HBox(6, label, draw, hint);
         line.setAlignment(Pos.CENTER_LEFT);

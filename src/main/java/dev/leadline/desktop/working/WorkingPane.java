@@ -163,7 +163,7 @@ public final class WorkingPane extends BorderPane {
         paintSteps();
         generalMessages.show(unplaced());
         var names = formulas.unknownNames();
-        unknown.setText("make inputs of " + String.join(", ", names));
+        unknown.setText((names.size() == 1 ? "make an input of " : "make inputs of ") + String.join(", ", names));
         unknown.setVisible(!names.isEmpty());
         unknown.setManaged(!names.isEmpty());
     }
@@ -215,6 +215,7 @@ public final class WorkingPane extends BorderPane {
     private void openNew(int row) {
         inputs.get(row).open();
         inputs.get(row).focusHead();
+        revealWhole(inputs.get(row));
     }
 
     private void closeOthers(InputRow opened) {
@@ -240,6 +241,16 @@ public final class WorkingPane extends BorderPane {
         if (hidden > 0) {
             double y = content.sceneToLocal(node.localToScene(0, 0)).getY();
             scroll.setVvalue(Math.clamp((y - 24) / hidden, 0, 1));
+        }
+    }
+
+    /// Scrolls only where a part of the node is out of sight.
+    private void revealWhole(Node node) {
+        scroll.applyCss();
+        scroll.layout();
+        var shown = scroll.sceneToLocal(node.localToScene(node.getLayoutBounds()));
+        if (shown.getMinY() < 0 || shown.getMaxY() > scroll.getHeight()) {
+            reveal(node);
         }
     }
 

@@ -106,7 +106,7 @@ class WindowTest {
                 robot.lookup(".message .excerpt").queryAs(Label.class).getText());
         assertTrue(robot.lookup("#run").queryButton().isDisabled());
         assertEquals(
-                "make inputs of foo",
+                "make an input of foo",
                 robot.lookup("#make-inputs").queryAs(Labeled.class).getText());
         robot.push(KeyCode.SHORTCUT, KeyCode.Z);
         await(() -> model.canRun().get());
