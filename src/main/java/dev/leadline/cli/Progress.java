@@ -1,6 +1,7 @@
 package dev.leadline.cli;
 
 import dev.leadline.model.Stop;
+import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Mark;

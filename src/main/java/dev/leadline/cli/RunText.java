@@ -6,6 +6,7 @@ import dev.leadline.ground.Ground;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Sentence;
+import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Answer;
@@ -95,12 +96,8 @@ final class RunText {
     }
 
     private static String chance(Answer answer) {
-        double oneIn = Chance.oneIn(answer.estimate());
-        if (!(answer.estimand() instanceof Estimand.Probability) || Double.isNaN(oneIn)) {
-            return "";
-        }
-        double beta = Chance.beta(answer.estimate());
-        return "   1 in " + AnswerText.count(oneIn)
+        double beta = answer.estimand() instanceof Estimand.Probability ? Chance.beta(answer.estimate()) : Double.NaN;
+        return AnswerText.oneIn(answer).map("   "::concat).orElse("")
                 + (Double.isNaN(beta) ? "" : String.format(Locale.ROOT, "   β %.2f", beta));
     }
 

@@ -16,6 +16,7 @@ import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.project.WholeFile;
+import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
 import java.nio.file.Path;
 import java.util.List;

@@ -1,4 +1,4 @@
-package dev.leadline.desktop.shell;
+package dev.leadline.study;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
@@ -41,15 +41,31 @@ class AnswerTextTest {
     @Test
     void noHitIsALimitNeverZero() {
         var a = answer(new Estimand.Probability(), "1/a", 0, 0, 2.9957e-6, OptionalLong.of(0), 0);
-        assertEquals("at most 3.0e-6 per year (95 %, lane A; no hit in 1.00 million draws)", AnswerText.of(a, "A"));
+        assertEquals("at most 3.0e-6 per year (95 %, lane A; no hit in 1,000,000 draws)", AnswerText.of(a, "A"));
     }
 
     @Test
     void withoutSpreadNoIntervalIsMadeUp() {
         var a = answer(new Estimand.Mean(), "m", 4, Double.NaN, Double.NaN, OptionalLong.empty(), 0);
-        assertEquals("4 m (no interval can be said yet, lane A)", AnswerText.of(a, "A"));
+        assertEquals("4.0 m, no interval yet (lane A)", AnswerText.of(a, "A"));
         var none = answer(new Estimand.Mean(), "m", Double.NaN, Double.NaN, Double.NaN, OptionalLong.empty(), 0);
-        assertEquals("cannot say yet (lane A, 1.00 million draws)", AnswerText.of(none, "A"));
+        assertEquals("cannot say yet (lane A; 1,000,000 draws)", AnswerText.of(none, "A"));
+    }
+
+    @Test
+    void oneInHowManyIsForSmallChances() {
+        var half = answer(new Estimand.Probability(), "1", .5, .49, .51, OptionalLong.of(500_000), 0);
+        assertEquals(Optional.empty(), AnswerText.oneIn(half));
+        var rare = answer(new Estimand.Probability(), "1", 8e-10, 7e-10, 9e-10, OptionalLong.of(9), 0);
+        assertEquals(Optional.of("1 in 1.25e9"), AnswerText.oneIn(rare));
+        var mean = answer(new Estimand.Mean(), "1", .1, .09, .11, OptionalLong.empty(), 0);
+        assertEquals(Optional.empty(), AnswerText.oneIn(mean));
+    }
+
+    @Test
+    void limitsAreRoundedOutwards() {
+        var a = answer(new Estimand.Mean(), "mm", 3.20602, 3.20102, 3.21102, OptionalLong.empty(), 0);
+        assertEquals("95 % interval 3.2010 to 3.2111 (student)", AnswerText.interval(a));
     }
 
     @Test
