@@ -1,6 +1,5 @@
 package dev.leadline.cli;
 
-import dev.leadline.model.Question;
 import dev.leadline.model.Sentence;
 import dev.leadline.project.ProblemsJson;
 import java.util.List;
@@ -32,8 +31,7 @@ final class CheckCommand implements Command {
         if (Arguments.has(arguments, "--json")) {
             console.out().print(ProblemsJson.of(List.of()));
         } else {
-            Question question = open.project().question();
-            console.out().println(Sentence.of(question));
+            console.out().println(Sentence.of(open.project().draft()).text());
             console.out().println("No problem found.");
         }
         return Commands.DONE;

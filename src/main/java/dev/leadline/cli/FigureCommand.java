@@ -73,7 +73,7 @@ final class FigureCommand implements Command {
             console.out().println(Caption.of(settling));
             console.out().println("Written to " + file);
             if (!quiet) {
-                console.err().print(new RunText(console, question, plan).doubts(state));
+                console.err().print(new RunText(console, open.project(), plan).doubts(state));
             }
         }
         return RunCommand.exitCode(question, state);

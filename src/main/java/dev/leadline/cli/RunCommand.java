@@ -42,7 +42,7 @@ final class RunCommand implements Command {
         if (Arguments.has(arguments, "--json")) {
             console.out().print(RunJson.of(open.name(), open.project(), plan, state));
         } else {
-            console.out().print(new RunText(console, question, plan).of(state));
+            console.out().print(new RunText(console, open.project(), plan).of(state));
         }
         return exitCode(question, state);
     }

@@ -4,7 +4,7 @@ import dev.leadline.estimate.Chance;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground;
 import dev.leadline.model.Plan;
-import dev.leadline.model.Question;
+import dev.leadline.model.Project;
 import dev.leadline.model.Sentence;
 import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
@@ -29,25 +29,25 @@ final class RunText {
             "A sampled probability rests on the stated densities.");
 
     private final Console console;
-    private final Question question;
+    private final Project project;
     private final Plan plan;
     private final StringBuilder text = new StringBuilder();
 
-    RunText(Console console, Question question, Plan plan) {
+    RunText(Console console, Project project, Plan plan) {
         this.console = console;
-        this.question = question;
+        this.project = project;
         this.plan = plan;
     }
 
     String of(StudyState state) {
-        if (!question.title().isEmpty()) {
-            line(console.bold(question.title().strip()));
+        if (!project.question().title().isEmpty()) {
+            line(console.bold(project.question().title().strip()));
         }
-        wrapped("", Sentence.of(question));
+        wrapped("", Sentence.of(project.draft()).text());
         state.lanes().forEach(this::lane);
         line("");
         wrapped("", SAMPLING_ERROR_ONLY);
-        if (question.safety()) {
+        if (project.question().safety()) {
             wrapped("", String.join(" ", SAFETY));
         }
         return text.toString();
@@ -73,7 +73,7 @@ final class RunText {
     }
 
     private void answer(Answer answer) {
-        String label = question.asks().size() == 1 || answer.label().isEmpty() ? "" : answer.label() + ": ";
+        String label = project.question().asks().size() == 1 || answer.label().isEmpty() ? "" : answer.label() + ": ";
         line("  " + label + console.bold(AnswerText.value(answer)) + chance(answer));
         line("  " + AnswerText.interval(answer));
         answer.interval().note().ifPresent(note -> wrapped("  ", note));
@@ -90,7 +90,7 @@ final class RunText {
                     "the %d intervals hold all at once with %s, each for itself with %s"
                             .formatted(
                                     answers.size(),
-                                    Sentence.percent(question.confidence()),
+                                    Sentence.percent(project.question().confidence()),
                                     answers.getFirst().interval().percent()));
         }
     }

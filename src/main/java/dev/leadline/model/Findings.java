@@ -13,6 +13,9 @@ import java.util.function.UnaryOperator;
 /// The problems found in a draft so far.
 final class Findings {
 
+    /// Digits of a whole number that are written out.
+    private static final int LONGEST_WHOLE = 15;
+
     private final List<Problem> problems = new ArrayList<>();
 
     void add(String path, Problem problem) {
@@ -43,9 +46,14 @@ final class Findings {
 
     /// A number as it stands in a project: no `.0` behind a whole one.
     static String number(double value) {
-        return Double.isFinite(value)
-                ? BigDecimal.valueOf(value).stripTrailingZeros().toPlainString()
-                : String.valueOf(value);
+        if (!Double.isFinite(value)) {
+            return String.valueOf(value);
+        }
+        BigDecimal decimal = BigDecimal.valueOf(value).stripTrailingZeros();
+        boolean whole = decimal.scale() <= 0 && decimal.precision() - decimal.scale() <= LONGEST_WHOLE;
+        return whole
+                ? decimal.toPlainString()
+                : decimal.toString().replace("E+", "e").replace('E', 'e');
     }
 
     void refuseIfAny() {

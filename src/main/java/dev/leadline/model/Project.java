@@ -13,7 +13,8 @@ import java.util.OptionalDouble;
 /// A project after every check: the question and how it is to be run, beside the draft they came from.
 public record Project(Draft draft, Question question, Plan plan) {
 
-    private static final double USUAL_CONFIDENCE = .95;
+    /// Where a project says nothing.
+    static final double USUAL_CONFIDENCE = .95;
 
     /// @throws Refusal with every problem found, each at its JSON path in the draft
     public static Project of(Draft draft) {

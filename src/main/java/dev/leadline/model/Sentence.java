@@ -1,66 +1,127 @@
 package dev.leadline.model;
 
-import dev.leadline.estimate.Estimand;
-import dev.leadline.model.Input.Role;
+import dev.leadline.model.Draft.AskDraft;
+import dev.leadline.model.Draft.From;
+import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.ToleranceDraft;
 import java.math.BigDecimal;
-import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 
-/// The question in words.
-public final class Sentence {
+/// The question in words; some of its parts are doors to where they are edited. Said of a draft, since it is also read
+/// while the question is written.
+///
+/// @param parts in the order in which they are read
+public record Sentence(List<Part> parts) {
 
-    private static final int LONGEST_FORMULA = 120;
+    private static final int LONGEST_FORMULA = 80;
 
-    private Sentence() {}
+    /// @param door where the part is edited; empty for words in between
+    public record Part(String text, Optional<Door> door) {}
+
+    /// What a part says.
+    public enum Door {
+        FORMULA,
+        UNIT,
+        INPUTS,
+        DEMANDS
+    }
+
+    public Sentence {
+        parts = List.copyOf(parts);
+    }
 
     /// As `The chance that tension > strength per year, with 7 inputs, to ±10 % at 95 %.`
-    public static String of(Question question) {
-        var sentence = new StringBuilder("The ");
-        sentence.append(String.join(
-                ", and the ",
-                question.asks().stream().map(ask -> of(ask, question)).toList()));
-        long random = question.inputs().stream()
-                .filter(input -> input.role() instanceof Role.Random)
-                .count();
-        if (random > 0) {
-            sentence.append(", with %d input%s".formatted(random, random == 1 ? "" : "s"));
+    public static Sentence of(Draft draft) {
+        var parts = new ArrayList<Part>();
+        for (int k = 0; k < draft.asks().size(); k++) {
+            parts.add(words(k == 0 ? "The " : ", and the "));
+            ask(draft, draft.asks().get(k), parts);
         }
-        question.tolerance().ifPresent(tolerance -> sentence.append(", to ").append(of(tolerance, question)));
-        return sentence.append(" at ")
-                .append(percent(question.confidence()))
-                .append('.')
-                .toString();
+        boolean integral = draft.asks().stream().anyMatch(Sentence::isIntegral);
+        long random = draft.inputs().size() - (integral ? ranges(draft).size() : 0);
+        if (random > 0 || !integral) {
+            parts.add(words(", with "));
+            String inputs = random == 0 ? "no inputs yet" : random == 1 ? "1 input" : random + " inputs";
+            parts.add(new Part(inputs, Optional.of(Door.INPUTS)));
+        }
+        tolerance(draft).ifPresent(tolerance -> {
+            parts.add(words(", to "));
+            parts.add(new Part(tolerance, Optional.of(Door.DEMANDS)));
+        });
+        parts.add(words(draft.tolerance().isPresent() ? " at " : ", at "));
+        parts.add(new Part(confidence(draft), Optional.of(Door.DEMANDS)));
+        parts.add(words("."));
+        return new Sentence(parts);
+    }
+
+    /// The whole, as it is read aloud.
+    public String text() {
+        return String.join("", parts.stream().map(Part::text).toList());
+    }
+
+    /// As `±10 %` or `±25 m³`.
+    public static Optional<String> tolerance(Draft draft) {
+        return draft.tolerance().map(tolerance -> {
+            List<String> ends = new ArrayList<>();
+            String unit = draft.asks().isEmpty()
+                    ? ""
+                    : UnitWords.after(draft.asks().getFirst().unit());
+            tolerance.absolute().ifPresent(width -> ends.add("±" + Findings.number(width) + unit));
+            tolerance.relative().ifPresent(part -> ends.add("±" + percent(part)));
+            return String.join(isBoth(tolerance) ? " and " : " or ", ends);
+        });
+    }
+
+    /// As `95 %`.
+    public static String confidence(Draft draft) {
+        return percent(draft.confidence().orElse(Project.USUAL_CONFIDENCE));
     }
 
     /// A part of one, as `95 %`.
     public static String percent(double part) {
-        return BigDecimal.valueOf(part).movePointRight(2).stripTrailingZeros().toPlainString() + " %";
+        return (Double.isFinite(part)
+                        ? BigDecimal.valueOf(part)
+                                .movePointRight(2)
+                                .stripTrailingZeros()
+                                .toPlainString()
+                        : String.valueOf(part))
+                + " %";
     }
 
-    private static String of(Ask ask, Question question) {
-        String formula = shortened(ask.formula());
-        String unit = UnitWords.after(ask.unit());
-        String in = unit.startsWith(" per ") || unit.isEmpty() ? unit : " in" + unit;
-        return switch (ask.estimand()) {
-            case Estimand.Mean _ -> "mean of " + formula + in;
-            case Estimand.Probability _ -> "chance that " + formula + in;
-            case Estimand.Integral _ -> "integral of " + formula + " over " + and(ranges(question)) + in;
-        };
+    private static void ask(Draft draft, AskDraft ask, List<Part> parts) {
+        parts.add(words(
+                switch (ask.estimand()) {
+                    case "probability" -> "chance that ";
+                    case "integral" -> "integral of ";
+                    case "mean" -> "mean of ";
+                    default -> ask.estimand() + " of ";
+                }));
+        parts.add(new Part(shortened(ask.formula()), Optional.of(Door.FORMULA)));
+        if (isIntegral(ask) && !ranges(draft).isEmpty()) {
+            parts.add(words(" over "));
+            parts.add(new Part(and(ranges(draft)), Optional.of(Door.INPUTS)));
+        }
+        String unit = UnitWords.after(ask.unit()).strip();
+        if (!unit.isEmpty()) {
+            parts.add(words(unit.startsWith("per ") ? " " : " in "));
+            parts.add(new Part(unit, Optional.of(Door.UNIT)));
+        }
     }
 
-    private static String of(Tolerance tolerance, Question question) {
-        List<String> parts = new ArrayList<>();
-        String unit = UnitWords.after(question.asks().getFirst().unit());
-        tolerance.absolute().ifPresent(width -> parts.add("±" + number(width) + unit));
-        tolerance.relative().ifPresent(part -> parts.add("±" + percent(part)));
-        return String.join(tolerance.both() ? " and " : " or ", parts);
+    private static boolean isIntegral(AskDraft ask) {
+        return ask.estimand().equals("integral");
     }
 
-    private static List<String> ranges(Question question) {
-        return question.inputs().stream()
-                .filter(input -> !(input.role() instanceof Role.Random))
-                .map(Input::name)
+    private static boolean isBoth(ToleranceDraft tolerance) {
+        return tolerance.when().filter("both"::equals).isPresent();
+    }
+
+    private static List<String> ranges(Draft draft) {
+        return draft.inputs().stream()
+                .filter(input -> input.from() instanceof From.Range)
+                .map(InputDraft::name)
                 .toList();
     }
 
@@ -69,17 +130,15 @@ public final class Sentence {
         return last == 0 ? names.getFirst() : String.join(", ", names.subList(0, last)) + " and " + names.get(last);
     }
 
-    private static String number(double value) {
-        return new BigDecimal(value)
-                .round(new MathContext(6))
-                .stripTrailingZeros()
-                .toString()
-                .replace("E+", "e")
-                .replace('E', 'e');
-    }
-
     private static String shortened(String formula) {
         String line = formula.strip().replaceAll("\\s+", " ");
+        if (line.isEmpty()) {
+            return "a formula still to be written";
+        }
         return line.length() <= LONGEST_FORMULA ? line : line.substring(0, LONGEST_FORMULA - 1) + "…";
+    }
+
+    private static Part words(String text) {
+        return new Part(text, Optional.empty());
     }
 }

@@ -35,7 +35,7 @@ public final class RunJson {
         var run = new RunJson(project);
         return JsonWriter.pretty(Json.object()
                 .put("project", question.title().isEmpty() ? name : question.title())
-                .put("question", Sentence.of(question))
+                .put("question", Sentence.of(project.draft()).text())
                 .put("seed", Json.of(plan.seed()))
                 .put("version", Version.text())
                 .put("fingerprint", Fingerprint.of(project))

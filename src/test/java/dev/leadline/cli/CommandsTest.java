@@ -242,7 +242,7 @@ class CommandsTest {
         var json = outcome.json();
         assertEquals("A point of the unit interval", json.required("project").asString());
         assertEquals(
-                "The mean of y in m², with 1 input at 95 %.",
+                "The mean of y in m², with 1 input, at 95 %.",
                 json.required("question").asString());
         assertEquals(1, json.required("seed").asInt());
         assertEquals(64, json.required("fingerprint").asString().length());

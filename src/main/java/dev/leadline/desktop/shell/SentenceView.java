@@ -1,6 +1,7 @@
 package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.style.Styles;
+import dev.leadline.model.Sentence;
 import java.util.function.Consumer;
 import javafx.scene.control.Hyperlink;
 import javafx.scene.control.Tooltip;
@@ -26,9 +27,6 @@ final class SentenceView extends TextFlow {
                 getChildren().add(words);
             });
         }
-        var stop = new Text(".");
-        stop.getStyleClass().add("words");
-        getChildren().add(stop);
         setAccessibleText(sentence.text());
     }
 

@@ -2,6 +2,7 @@ package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.style.Styles;
+import dev.leadline.model.Sentence;
 import java.util.List;
 import javafx.geometry.Pos;
 import javafx.scene.control.Button;

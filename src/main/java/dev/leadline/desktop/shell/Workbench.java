@@ -6,6 +6,7 @@ import dev.leadline.desktop.stage.StagePane;
 import dev.leadline.desktop.style.Styles;
 import dev.leadline.desktop.working.SketchView;
 import dev.leadline.desktop.working.WorkingPane;
+import dev.leadline.model.Sentence;
 import java.util.Map;
 import javafx.scene.control.Label;
 import javafx.scene.control.SplitPane;
@@ -86,7 +87,6 @@ public final class Workbench extends BorderPane {
             case UNIT -> working.focusUnit();
             case INPUTS -> working.focusInputs();
             case DEMANDS -> working.focusTolerance();
-            case STOP -> working.focusStop();
         }
     }
 

@@ -12,6 +12,7 @@ import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.ground.Ground;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Project;
+import dev.leadline.model.Sentence;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import dev.leadline.project.ProjectFile;

@@ -81,11 +81,6 @@ final class DemandsView {
         relative.requestFocus();
     }
 
-    void openStop() {
-        stopFold.open();
-        draws.requestFocus();
-    }
-
     void update() {
         show(relative, model::relativeText, "$.tolerance.relative");
         show(absolute, model::absoluteText, "$.tolerance.absolute");

@@ -5,7 +5,7 @@ import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
-import dev.leadline.model.UnitWords;
+import dev.leadline.model.Sentence;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.Optional;
@@ -183,36 +183,11 @@ public final class DemandsViewModel {
 
     /// As `±10 % at 95 %`.
     String toleranceSummary() {
-        return toleranceWords(draft()).orElse("none") + " at " + confidenceWords(draft());
-    }
-
-    /// As `±10 %` or `±25 m3`.
-    public static Optional<String> toleranceWords(Draft d) {
-        return d.tolerance().map(t -> {
-            var parts = new ArrayList<String>();
-            String unit = d.asks().isEmpty() ? "" : d.asks().getFirst().unit();
-            t.absolute()
-                    .ifPresent(a -> parts.add("\u00b1" + NumberText.show(a)
-                            + (unit.isEmpty() || unit.equals("1")
-                                    ? ""
-                                    : " " + UnitWords.after(unit).strip())));
-            inPercent(t.relative()).ifPresent(r -> parts.add("\u00b1" + NumberText.show(r) + " %"));
-            return String.join(t.when().filter("both"::equals).isPresent() ? " and " : " or ", parts);
-        });
-    }
-
-    /// As `95 %`.
-    public static String confidenceWords(Draft d) {
-        return percent(d.confidence().orElse(.95));
-    }
-
-    /// A part of one as `95 %`.
-    public static String percent(double part) {
-        return NumberText.show(inPercent(OptionalDouble.of(part)).getAsDouble()) + " %";
+        return Sentence.tolerance(draft()).orElse("none") + " at " + Sentence.confidence(draft());
     }
 
     /// As `200 million draws or 2 min`.
-    public static String stopWords(Draft d) {
+    static String stopWords(Draft d) {
         var parts = new ArrayList<String>();
         d.stop().ifPresent(s -> {
             s.draws().ifPresent(n -> parts.add(Figures.count(n) + " draws"));

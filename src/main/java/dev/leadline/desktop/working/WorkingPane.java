@@ -130,11 +130,6 @@ public final class WorkingPane extends BorderPane {
         reveal(demands.folds());
     }
 
-    public void focusStop() {
-        demands.openStop();
-        reveal(demands.folds());
-    }
-
     public void openLook() {
         look.open();
         reveal(look.fold());

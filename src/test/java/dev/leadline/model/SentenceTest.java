@@ -1,4 +1,4 @@
-package dev.leadline.desktop.shell;
+package dev.leadline.model;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
@@ -18,14 +18,14 @@ class SentenceTest {
                 "The mean of twice in m, with 1 input, to \u00b10.01 m at 95 %.",
                 Sentence.of(Drafts.mean()).text());
         assertEquals(
-                "The integral of x*y over x and y in m\u00b3, in 1,000 draws at 95 %.",
+                "The integral of x*y over x and y in m\u00b3, at 95 %.",
                 Sentence.of(Drafts.integral()).text());
     }
 
     @Test
     void anEmptyQuestionSaysWhatIsMissing() {
         assertEquals(
-                "The mean of a formula still to be written, with no inputs yet, in 1.00 million draws at 95 %.",
+                "The mean of a formula still to be written, with no inputs yet, at 95 %.",
                 Sentence.of(Edits.asking("mean")).text());
     }
 
@@ -46,12 +46,15 @@ class SentenceTest {
     }
 
     @Test
-    void readsAsTheCommandsPrintIt() {
-        for (var draft : List.of(Drafts.mean(), Drafts.probability())) {
-            assertEquals(
-                    dev.leadline.model.Sentence.of(
-                            dev.leadline.model.Project.of(draft).question()),
-                    Sentence.of(draft).text());
-        }
+    void saysEverythingThatIsAsked() {
+        var draft = dev.leadline.project.ProjectFile.parse("""
+                {"leadline": 1, "inputs": [{"name": "x", "density": {"family": "uniform", "from": 0, "to": 1}}],
+                 "ask": [{"mean": "x", "unit": "m"}, {"probability": "x > 0.07", "unit": "1/a"}],
+                 "confidence": 0.999, "tolerance": {"absolute": 0.00002, "relative": 0.07, "when": "both"}}
+                """);
+        assertEquals(
+                "The mean of x in m, and the chance that x > 0.07 per year, with 1 input,"
+                        + " to \u00b10.00002 m and \u00b17 % at 99.9 %.",
+                Sentence.of(draft).text());
     }
 }
