@@ -31,10 +31,6 @@ public record Console(PrintWriter out, PrintWriter err, boolean live, boolean st
         return styled ? "\u001b[1m" + text + "\u001b[0m" : text;
     }
 
-    String faint(String text) {
-        return styled ? "\u001b[2m" + text + "\u001b[0m" : text;
-    }
-
     /// Java only tells of standard input and output together. On Linux the descriptor itself is asked; elsewhere a
     /// stream is taken for none, which costs a progress line and nothing else.
     private static boolean isTerminal(int descriptor) {

@@ -73,7 +73,7 @@ final class Progress implements Consumer<StudyState>, AutoCloseable {
                 .map(mark -> AnswerText.value(mark.answers().getFirst()))
                 .orElse("");
         String left = done > 0 ? String.format(Locale.ROOT, "%.0f s left", elapsed * (1 - done) / done) : "";
-        return "  %3.0f %%   %,d draws   %s   %s".formatted(100 * done, draws, value, left);
+        return String.format(Locale.ROOT, "  %3.0f %%   %,d draws   %s   %s", 100 * done, draws, value, left);
     }
 
     private static double done(LaneState lane, Stop stop) {

@@ -106,9 +106,10 @@ final class RunText {
         facts.add(
                 "lane %s, %s points".formatted(lane.trace().lane(), lane.trace().scheme()));
         lane.trace().last().ifPresent(mark -> {
-            facts.add("%,d draw%s".formatted(mark.draws(), mark.draws() == 1 ? "" : "s"));
+            facts.add(String.format(Locale.ROOT, "%,d draw%s", mark.draws(), mark.draws() == 1 ? "" : "s"));
             if (answers.size() == 1 && answers.getFirst().hits().isPresent()) {
-                facts.add("%,d hits".formatted(answers.getFirst().hits().getAsLong()));
+                facts.add(String.format(
+                        Locale.ROOT, "%,d hits", answers.getFirst().hits().getAsLong()));
             }
             facts.add(String.format(Locale.ROOT, "%.1f s", mark.seconds()));
         });

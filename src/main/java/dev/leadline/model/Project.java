@@ -6,6 +6,7 @@ import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -60,8 +61,8 @@ public record Project(Draft draft, Question question, Plan plan) {
                     if (size > Draft.MOST_ROWS) {
                         findings.add(
                                 "$." + rows,
-                                "there are %,d %s".formatted(size, rows),
-                                "A project has at most %,d.".formatted(Draft.MOST_ROWS));
+                                String.format(Locale.ROOT, "there are %,d %s", size, rows),
+                                String.format(Locale.ROOT, "A project has at most %,d.", Draft.MOST_ROWS));
                     }
                 });
         findings.refuseIfAny();

@@ -17,6 +17,7 @@ import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.SequencedMap;
@@ -232,8 +233,11 @@ final class DraftReader {
             if (json instanceof Json.Text(String line) && line.length() <= FORMULA) {
                 steps.add(line);
             } else {
-                problems.add(Problem.of("a step is %s but must be a text of at most %,d characters"
-                                .formatted(Shown.what(json), FORMULA))
+                problems.add(Problem.of(String.format(
+                                Locale.ROOT,
+                                "a step is %s but must be a text of at most %,d characters",
+                                Shown.what(json),
+                                FORMULA))
                         .tryThis("Write it as \"name = formula   # unit\".")
                         .at(Place.of(JsonPath.element(whole.pathOf("steps"), steps.size()))));
                 steps.add("");

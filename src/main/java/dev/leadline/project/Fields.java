@@ -6,6 +6,7 @@ import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -73,8 +74,8 @@ final class Fields {
                     if (value.length() > most) {
                         add(
                                 name,
-                                "%s has %,d characters".formatted(name, value.length()),
-                                "At most %,d are read.".formatted(most));
+                                String.format(Locale.ROOT, "%s has %,d characters", name, value.length()),
+                                String.format(Locale.ROOT, "At most %,d are read.", most));
                         return "";
                     }
                     return value;
@@ -150,8 +151,8 @@ final class Fields {
                     if (list.size() > most) {
                         add(
                                 name,
-                                "%s has %,d elements".formatted(name, list.size()),
-                                "At most %,d are read.".formatted(most));
+                                String.format(Locale.ROOT, "%s has %,d elements", name, list.size()),
+                                String.format(Locale.ROOT, "At most %,d are read.", most));
                         throw new Refusal(problems.found());
                     }
                     return list;

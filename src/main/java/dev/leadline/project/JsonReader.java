@@ -8,6 +8,7 @@ import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.SequencedMap;
 import tools.jackson.core.JacksonException;
 import tools.jackson.core.JsonParser;
@@ -140,9 +141,12 @@ final class JsonReader {
     private Problem tooMuch() {
         long offset = Math.max(0, parser.currentLocation().getCharOffset());
         return here("the JSON is larger than a project can be", offset)
-                .because(
-                        "Lists and objects stand at most %d deep, a text has at most %,d characters, a number %,d digits."
-                                .formatted(MOST_DEPTH, MOST_TEXT, MOST_DIGITS));
+                .because(String.format(
+                        Locale.ROOT,
+                        "Lists and objects stand at most %d deep, a text has at most %,d characters, a number %,d digits.",
+                        MOST_DEPTH,
+                        MOST_TEXT,
+                        MOST_DIGITS));
     }
 
     private Problem noJson(long reported) {

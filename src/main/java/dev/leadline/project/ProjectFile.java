@@ -13,6 +13,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.stream.Stream;
 
@@ -108,8 +109,8 @@ public final class ProjectFile {
     }
 
     private static Refusal tooLarge(long size) {
-        return new Refusal(Problem.of("the project has %,d bytes".formatted(size))
-                .because("A project has at most %,d bytes.".formatted(MOST_BYTES)));
+        return new Refusal(Problem.of(String.format(Locale.ROOT, "the project has %,d bytes", size))
+                .because(String.format(Locale.ROOT, "A project has at most %,d bytes.", MOST_BYTES)));
     }
 
     /// A project beside the missing one whose name is close to it.
@@ -142,10 +143,10 @@ public final class ProjectFile {
             // the decoder stops before the first byte that is no UTF-8
             String before = new String(bytes, 0, rest.position(), StandardCharsets.UTF_8);
             long line = 1 + before.chars().filter(c -> c == '\n').count();
-            throw new Refusal(
-                    Problem.of("the file is not UTF-8 text (byte %,d, line %d)".formatted(rest.position(), line))
-                            .tryThis("Save it as UTF-8, or see whether it is a project at all.")
-                            .at(Place.of(new Span(before.length(), before.length()))));
+            throw new Refusal(Problem.of(String.format(
+                            Locale.ROOT, "the file is not UTF-8 text (byte %,d, line %d)", rest.position(), line))
+                    .tryThis("Save it as UTF-8, or see whether it is a project at all.")
+                    .at(Place.of(new Span(before.length(), before.length()))));
         }
     }
 }
