@@ -51,12 +51,13 @@ final class AgainstReference {
         double reach = LIMIT * reference.error();
         boolean above = reference.value() - reach > left.high();
         boolean below = reference.value() + reach < left.low();
-        String text = "%s in %s draws leave %s to %s possible, and the reference value %s is %s"
+        String text = "%s in %s draws leave %s to %s possible at %s, and the reference value %s is %s"
                 .formatted(
                         Numbers.count(hits) + (hits == 1 ? " hit" : " hits"),
                         Numbers.count(n),
                         end(left.low()),
                         end(left.high()),
+                        left.percent(),
                         Numbers.value(reference.value()),
                         above ? "above that" : below ? "below that" : "within that");
         return above || below

@@ -126,7 +126,7 @@ class GroundsTest {
         var far = ground("reference", run(none.reference(.5).build(), 1_000));
         objects(far);
         assertEquals(
-                "0 hits in 1,000 draws leave 0 to 0.0103 possible, and the reference value 0.500 is above that",
+                "0 hits in 1,000 draws leave 0 to 0.0103 possible at 99.99366 %, and the reference value 0.500 is above that",
                 far.text());
         shows(ground("reference", run(none.reference(1e-9).build(), 1_000)));
         shows(ground("reference", run(none.reference(0).build(), 1_000)));
