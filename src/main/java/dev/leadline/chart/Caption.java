@@ -1,6 +1,7 @@
 package dev.leadline.chart;
 
 import dev.leadline.interval.Interval;
+import dev.leadline.model.Sentence;
 import dev.leadline.model.Tolerance;
 import dev.leadline.numeric.Rounding;
 import java.util.ArrayList;
@@ -67,7 +68,7 @@ public final class Caption {
     static String of(Tolerance asked, String unit) {
         var parts = new ArrayList<String>();
         asked.absolute().ifPresent(width -> parts.add("±" + Typeset.quantity(Typeset.number(width, 6), unit)));
-        asked.relative().ifPresent(share -> parts.add("±" + Typeset.percent(share)));
+        asked.relative().ifPresent(share -> parts.add("±" + Sentence.percent(share)));
         return String.join(asked.both() ? " and " : " or ", List.copyOf(parts));
     }
 }

@@ -1,6 +1,7 @@
 package dev.leadline.chart;
 
 import dev.leadline.interval.Interval;
+import dev.leadline.numeric.Rounding;
 import java.awt.AlphaComposite;
 import java.awt.BasicStroke;
 import java.awt.Font;
@@ -516,8 +517,8 @@ public final class Picture {
         String name = "lane " + lane.lane() + ": ";
         if (lane.withoutHit()) {
             var limit = Double.isFinite(point.high())
-                    ? ", so at most " + Typeset.quantity(Typeset.atMost(point.high()), settling.unit()) + " ("
-                            + Interval.percent(settling.level()) + ")"
+                    ? ", so at most " + Typeset.quantity(Typeset.set(Rounding.atMost(point.high())), settling.unit())
+                            + " (" + Interval.percent(settling.level()) + ")"
                     : "";
             return Optional.of(name + "no hit in " + Typeset.count(point.draws()) + " draws" + limit);
         }

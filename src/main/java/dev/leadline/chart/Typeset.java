@@ -2,7 +2,6 @@ package dev.leadline.chart;
 
 import java.math.BigDecimal;
 import java.math.MathContext;
-import java.math.RoundingMode;
 import java.util.regex.Pattern;
 
 /// Numbers and units as a printed figure sets them: raised exponents, a true minus, thousands apart. Independent of
@@ -36,10 +35,6 @@ final class Typeset {
         return (number + " " + unit(unit)).strip();
     }
 
-    static String percent(double share) {
-        return number(100 * share, 6) + " %";
-    }
-
     /// With every digit that `value` has: `18,400.5`, `−0.25`.
     static String plain(BigDecimal value) {
         String digits = value.abs().toPlainString();
@@ -62,13 +57,6 @@ final class Typeset {
         }
         return scientific(
                 BigDecimal.valueOf(value).round(new MathContext(digits)).stripTrailingZeros());
-    }
-
-    /// A limit that must not be rounded down, to three significant digits.
-    static String atMost(double limit) {
-        return scientific(BigDecimal.valueOf(limit)
-                .round(new MathContext(3, RoundingMode.CEILING))
-                .stripTrailingZeros());
     }
 
     /// A finite number written by [Rounding][dev.leadline.numeric.Rounding]: `-1.2568e-5` becomes `−1.2568×10⁻⁵`.

@@ -4,7 +4,8 @@ import java.math.BigDecimal;
 import java.math.MathContext;
 import java.util.Locale;
 
-/// Numbers as sentences of evidence say them.
+/// Numbers as sentences of evidence say them: counts, guesses and single figures. They have no error of their own to
+/// take their digits from, which is what [Rounding][dev.leadline.numeric.Rounding] does for estimates.
 final class Numbers {
     private static final double LARGEST_WRITTEN_OUT = 1e15;
 

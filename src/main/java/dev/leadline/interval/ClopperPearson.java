@@ -1,5 +1,9 @@
 package dev.leadline.interval;
 
+import dev.leadline.numeric.Rounding;
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
 import java.util.Locale;
 import java.util.Optional;
 
@@ -46,18 +50,27 @@ public final class ClopperPearson {
                 ? ""
                 : String.format(Locale.ROOT, "; %,d failed evaluations", failed)
                         + " count as misses in the lower limit and as hits in the upper one";
-        String percent = Rounded.percent(level);
+        String percent = Interval.percent(level);
         if (hits == 0 && n > 0) {
-            return Optional.of("no hit in " + draws(n) + ": below " + Rounded.up(upperLimit(0, n, failed, level))
+            return Optional.of("no hit in " + draws(n) + ": below " + Rounding.atMost(upperLimit(0, n, failed, level))
                     + " with " + percent + " one-sided confidence" + bracket);
         }
         if (hits == n && n > 0) {
             return Optional.of("every one of " + draws(n) + " is a hit: above "
-                    + Rounded.downFromOne(lowerLimit(hits, n, failed, level)) + " with " + percent
+                    + downFromOne(lowerLimit(hits, n, failed, level)) + " with " + percent
                     + " one-sided confidence"
                     + bracket);
         }
         return failed == 0 ? Optional.empty() : Optional.of(bracket.substring(2));
+    }
+
+    /// Rounded down, to three significant digits of what is missing to 1: 0.99963 says more than 0.999.
+    private static String downFromOne(double limit) {
+        BigDecimal missing = BigDecimal.ONE.subtract(BigDecimal.valueOf(limit));
+        return BigDecimal.ONE
+                .subtract(missing.round(new MathContext(3, RoundingMode.CEILING)))
+                .stripTrailingZeros()
+                .toPlainString();
     }
 
     private static String draws(long n) {

@@ -1,5 +1,8 @@
 package dev.leadline.interval;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
 import java.util.Optional;
 
 /// An interval for a fixed number of draws, with what it is and what it assumes.
@@ -13,14 +16,27 @@ import java.util.Optional;
 public record Interval(double low, double high, double level, String kind, String assumption, Optional<String> note) {
     private static final double LOPSIDED = 1.15;
 
+    /// Decimal places of a level that are written out.
+    private static final int LEVEL_PLACES = 6;
+
+    /// Digits of a level from here on are rounding errors.
+    private static final int LEVEL_NOISE = 14;
+
     /// The level as `95 %`.
     public String percent() {
         return percent(level);
     }
 
-    /// A level as it stands in words: a third of 5 % off is `98.33 %`.
+    /// A level as `95 %`; one with many digits, as that of each of three intervals that hold together, a little lower:
+    /// a third of 5 % off is `98.33 %`.
     public static String percent(double level) {
-        return Rounded.percent(level);
+        BigDecimal shown = new BigDecimal(level)
+                .setScale(LEVEL_NOISE, RoundingMode.HALF_EVEN)
+                .stripTrailingZeros();
+        if (shown.scale() > LEVEL_PLACES) {
+            shown = BigDecimal.ONE.subtract(BigDecimal.ONE.subtract(shown).round(new MathContext(3, RoundingMode.UP)));
+        }
+        return shown.movePointRight(2).stripTrailingZeros().toPlainString() + " %";
     }
 
     /// Whether `estimate ± halfWidth` is another interval than this one: one end is much farther from the estimate

@@ -1,6 +1,7 @@
 package dev.leadline.interval;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.numeric.Rounding;
 import java.util.Optional;
 
 /// Student's t interval for a mean of independent observations.
@@ -38,7 +39,7 @@ public final class Student {
                     level,
                     "every value seen so far is equal (" + mean
                             + "): no spread to build an interval from; at most a part" + " of probability below 3/n = "
-                            + Rounded.up(Math.min(1, 3.0 / n)) + " may be unseen");
+                            + Rounding.atMost(Math.min(1, 3.0 / n)) + " may be unseen");
         }
         if (Double.isNaN(standardError)) {
             return none(level, "the values lie too close together for an interval: their squares underflow");

@@ -55,6 +55,13 @@ public record Rounding(String value, Optional<String> uncertainty, Optional<Inte
                 exponent);
     }
 
+    /// An upper limit that stands alone: its own two significant digits, rounded upwards.
+    ///
+    /// @param limit at least 0
+    public static String atMost(double limit) {
+        return of(limit, limit).up(limit);
+    }
+
     /// A lower limit in the notation of this estimate, rounded downwards.
     public String down(double limit) {
         return limit(limit, RoundingMode.FLOOR);

@@ -44,7 +44,7 @@ public final class AnswerText {
             return "cannot say yet";
         }
         if (isNoHit(answer)) {
-            return "at most " + Rounding.of(interval.high(), interval.high()).up(interval.high()) + unit;
+            return "at most " + Rounding.atMost(interval.high()) + unit;
         }
         Rounding rounding = rounding(answer);
         if (!interval.lopsided(estimate)) {

@@ -62,12 +62,6 @@ class TypesetTest {
     }
 
     @Test
-    void neverRoundsALimitDown() {
-        assertEquals("5.72×10⁻⁵", Typeset.atMost(5.7111e-5));
-        assertEquals("5.71×10⁻⁵", Typeset.atMost(5.71e-5));
-    }
-
-    @Test
     void doesNotDependOnTheLocale() {
         var before = Locale.getDefault();
         try {

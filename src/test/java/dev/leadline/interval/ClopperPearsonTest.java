@@ -65,7 +65,7 @@ class ClopperPearsonTest {
         // 1 - 0.025^(1/1000)
         within(1e-5, .00368208, none.high());
         assertEquals(
-                "no hit in 1,000 draws: below 0.003 with 95 % one-sided confidence",
+                "no hit in 1,000 draws: below 0.0030 with 95 % one-sided confidence",
                 none.note().orElseThrow());
         var all = ClopperPearson.of(1000, 1000, 0, .95);
         within(1e-5, 1 - .00368208, all.low());

@@ -73,7 +73,7 @@ class StudentTest {
         assertTrue(Double.isNaN(interval.low()) && Double.isNaN(interval.high()));
         assertEquals(
                 "every value seen so far is equal (0.1): no spread to build an interval from; at most a part of"
-                        + " probability below 3/n = 0.003 may be unseen",
+                        + " probability below 3/n = 0.0030 may be unseen",
                 interval.note().orElseThrow());
     }
 

@@ -147,4 +147,12 @@ class RoundingTest {
             Locale.setDefault(before);
         }
     }
+
+    @Test
+    void neverRoundsALimitDown() {
+        assertEquals("5.8e-5", Rounding.atMost(5.7111e-5));
+        assertEquals("5.7e-5", Rounding.atMost(5.7e-5));
+        assertEquals("0.0031", Rounding.atMost(0.00300001));
+        assertEquals("1.0", Rounding.atMost(1));
+    }
 }
