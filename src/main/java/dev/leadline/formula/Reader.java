@@ -8,6 +8,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.SequencedSet;
 
 /// Reads formulas: their words for an editor, and what is wrong with them before anything is computed.
@@ -61,22 +62,25 @@ public final class Reader {
         if (readable) {
             Grammar.firstFault(tokens, names)
                     .filter(fault -> problems.stream().noneMatch(other -> explains(other, fault, tokens)))
-                    .ifPresent(problems::add);
+                    .ifPresent(fault -> problems.addFirst(fault));
         }
         problems.sort(Comparator.comparingInt(
                 problem -> problem.place().span().orElseThrow().from()));
         return List.copyOf(problems);
     }
 
-    /// Whether a fault may go away with `other`: an unknown word at its place or right before it.
+    /// Whether a fault may go away with `other`: an unknown word at its place or right before it. Not so right behind a
+    /// number: in `2x` the product is missing whatever x is.
     private static boolean explains(Problem other, Problem fault, List<Token> tokens) {
         int at = fault.place().span().orElseThrow().from();
+        Optional<Token> before =
+                tokens.stream().takeWhile(token -> token.span().from() < at).reduce((_, last) -> last);
+        if (before.filter(token -> token.kind() == Kind.NUMBER).isPresent()) {
+            return false;
+        }
         return holds(other, fault)
-                || tokens.stream()
-                        .takeWhile(token -> token.span().from() < at)
-                        .reduce((_, last) -> last)
-                        .filter(before ->
-                                before.span().equals(other.place().span().orElseThrow()))
+                || before.filter(token ->
+                                token.span().equals(other.place().span().orElseThrow()))
                         .isPresent();
     }
 

@@ -73,6 +73,7 @@ public record Rounding(String value, Optional<String> uncertainty, Optional<Inte
     }
 
     private String limit(double limit, RoundingMode direction) {
+        if (limit == 0 && exponent != 0) return "0";
         return place.map(last -> write(limit, last, exponent, direction)).orElseGet(() -> unrounded(limit));
     }
 

@@ -57,6 +57,12 @@ class RoundingTest {
 
     /// JCGM 100:2008, 7.2.2 and 7.2.6, from memory; by hand.
     @Test
+    void aLimitOfZeroHasNoPowerOfTen() {
+        assertEquals("0", Rounding.of(1.2e-5, 3e-6).down(0));
+        assertEquals("0.000", Rounding.of(.12, .013).down(0));
+    }
+
+    @Test
     void agreesWithCommonPractice() {
         int checked = 0;
         for (var expected : ReferenceValues.record("prop-rounding-report").get("expected")) {
