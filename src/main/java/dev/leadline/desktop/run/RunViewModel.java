@@ -1,6 +1,7 @@
 package dev.leadline.desktop.run;
 
 import dev.leadline.desktop.background.Background;
+import dev.leadline.desktop.working.Edits;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Project;
 import dev.leadline.problem.Problem;
@@ -184,20 +185,8 @@ public final class RunViewModel {
                 _ -> {});
     }
 
+    /// What a run depends on.
     private static Draft asked(Draft d) {
-        return new Draft(
-                "",
-                "",
-                false,
-                d.constants(),
-                d.inputs(),
-                d.steps(),
-                d.asks(),
-                d.reference(),
-                d.confidence(),
-                d.tolerance(),
-                d.stop(),
-                OptionalLong.empty(),
-                d.lanes());
+        return Edits.seed(Edits.safety(Edits.notes(Edits.title(d, ""), ""), false), OptionalLong.empty());
     }
 }
