@@ -1,27 +1,21 @@
 package dev.leadline.cli;
 
 import java.io.PrintWriter;
-import java.math.BigDecimal;
-import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
 
-/// Rows of a name, a number and a remark, set in columns.
+/// Rows of a name, a value and a remark, set in columns.
 final class Columns {
 
     private static final int LONGEST_NAME = 40;
-    private static final MathContext DIGITS = new MathContext(8);
-
-    /// Whole numbers of so many digits are written out.
-    private static final int WRITTEN_OUT = 12;
 
     private record Row(String name, String value, String remark) {}
 
     private final List<Row> rows = new ArrayList<>();
 
-    void add(String name, double value, String remark) {
+    void add(String name, String value, String remark) {
         String shown = name.length() > LONGEST_NAME ? name.substring(0, LONGEST_NAME - 1) + "…" : name;
-        rows.add(new Row(shown, text(value), remark));
+        rows.add(new Row(shown, value, remark));
     }
 
     void print(PrintWriter out) {
@@ -32,15 +26,5 @@ final class Columns {
                     + " ".repeat(values - row.value.length()) + row.value + "  " + row.remark;
             out.println(line.stripTrailing());
         }
-    }
-
-    private static String text(double value) {
-        if (!Double.isFinite(value)) {
-            return String.valueOf(value);
-        }
-        BigDecimal rounded = new BigDecimal(value).round(DIGITS).stripTrailingZeros();
-        return rounded.scale() < 0 && rounded.precision() - rounded.scale() <= WRITTEN_OUT
-                ? rounded.toPlainString()
-                : rounded.toString().replace("E+", "e").replace("E", "e");
     }
 }

@@ -1,15 +1,14 @@
 package dev.leadline.cli;
 
 import dev.leadline.engine.Look;
-import dev.leadline.model.Ask;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Stop;
-import dev.leadline.model.UnitWords;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import dev.leadline.project.LookJson;
+import dev.leadline.study.LookRow;
 import java.util.OptionalLong;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.ParseResult;
@@ -70,27 +69,9 @@ final class LookCommand implements Command {
                         ? "Draw %d of lane %s, seed %d".formatted(draw.getAsLong(), lane.name(), plan.seed())
                         : "Nominal draw: every input at its median");
         var rows = new Columns();
-        for (int i = 0; i < question.inputs().size(); i++) {
-            var input = question.inputs().get(i);
-            rows.add(
-                    input.name(),
-                    look.inputs().get(i),
-                    UnitWords.after(input.unit()).strip());
-        }
-        for (int i = 0; i < question.working().steps().size(); i++) {
-            var step = question.working().steps().get(i);
-            rows.add(step.name(), look.steps().get(i), step.comment());
-        }
-        if (look.weight() != 1) {
-            rows.add("weight", look.weight(), "");
-        }
-        for (int k = 0; k < question.asks().size(); k++) {
-            Ask ask = question.asks().get(k);
-            rows.add(
-                    ask.label().isEmpty() ? ask.formula() : ask.label(),
-                    look.outcomes().get(k),
-                    "outcome");
-        }
+        LookRow.of(question, look)
+                .forEach(row ->
+                        rows.add(row.name(), row.value(), row.kind().equals("outcome") ? "outcome" : row.remark()));
         rows.print(out);
     }
 }

@@ -1,6 +1,5 @@
 package dev.leadline.desktop.working;
 
-import dev.leadline.desktop.style.Figures;
 import dev.leadline.desktop.style.Styles;
 import java.util.List;
 import javafx.geometry.HPos;
@@ -84,14 +83,14 @@ final class LookView {
                             i,
                             cell(row.name(), "word-" + row.kind()),
                             value(row.value()),
-                            cell(row.unit(), Styles.QUIET));
+                            cell(row.remark(), Styles.QUIET));
                 }
             }
         }
     }
 
-    private static Label value(double value) {
-        var label = cell(Figures.number(value), "look-value");
+    private static Label value(String value) {
+        var label = cell(value, "look-value");
         label.setMinWidth(Region.USE_PREF_SIZE);
         return label;
     }

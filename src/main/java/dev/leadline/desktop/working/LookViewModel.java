@@ -3,9 +3,8 @@ package dev.leadline.desktop.working;
 import dev.leadline.desktop.background.Background;
 import dev.leadline.engine.Look;
 import dev.leadline.model.Project;
-import dev.leadline.model.UnitWords;
 import dev.leadline.problem.Problem;
-import java.util.ArrayList;
+import dev.leadline.study.LookRow;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Supplier;
@@ -18,13 +17,10 @@ public final class LookViewModel {
         /// Folded away, or the project cannot be run.
         record Empty(String why) implements State {}
 
-        record Seen(List<Row> rows) implements State {}
+        record Seen(List<LookRow> rows) implements State {}
 
         record Refused(Problem problem) implements State {}
     }
-
-    /// @param kind `input`, `step`, `weight` or `outcome`
-    public record Row(String kind, String name, double value, String unit) {}
 
     private final ProjectViewModel project;
     private final Supplier<Optional<Project>> ran;
@@ -77,7 +73,7 @@ public final class LookViewModel {
         Project p = sound.get();
         String which = draw;
         background.run(
-                () -> rows(p, which.isEmpty() ? nominal(p) : at(p, Long.parseLong(which))),
+                () -> LookRow.of(p.question(), which.isEmpty() ? nominal(p) : at(p, Long.parseLong(which))),
                 rows -> {
                     if (turn == newest) {
                         state.set(new State.Seen(rows));
@@ -96,35 +92,5 @@ public final class LookViewModel {
 
     private static Look at(Project p, long draw) {
         return Look.at(p.question(), p.plan().lanes().getFirst(), p.plan().seed(), draw);
-    }
-
-    private static List<Row> rows(Project p, Look look) {
-        var q = p.question();
-        var rows = new ArrayList<Row>();
-        for (int i = 0; i < q.inputs().size(); i++) {
-            var in = q.inputs().get(i);
-            rows.add(new Row(
-                    "input",
-                    in.name(),
-                    look.inputs().get(i),
-                    UnitWords.after(in.unit()).strip()));
-        }
-        var steps = q.working().steps();
-        for (int i = 0; i < steps.size(); i++) {
-            rows.add(new Row(
-                    "step",
-                    steps.get(i).name(),
-                    look.steps().get(i),
-                    steps.get(i).comment()));
-        }
-        if (look.weight() != 1) {
-            rows.add(new Row("weight", "weight", look.weight(), ""));
-        }
-        for (int i = 0; i < q.asks().size(); i++) {
-            var ask = q.asks().get(i);
-            String name = ask.label().isBlank() ? ask.formula() : ask.label();
-            rows.add(new Row("outcome", name, look.outcomes().get(i), ""));
-        }
-        return rows;
     }
 }
