@@ -6,13 +6,11 @@ import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
 
 /// The regularised incomplete gamma functions of shape `a > 0` at `x >= 0`: the mass of the standard gamma density
-/// below
-/// and above `x`, each accurate where it is small, and their logarithms where they underflow.
+/// below and above `x`, each accurate where it is small, and their logarithms where they underflow.
 ///
 /// Below the mode the power series, above it the continued fraction (DLMF 8.11.4, 8.9.2); for large shapes near the
-/// mode
-/// Temme's uniform expansion, summed backwards; for shapes below 1 at small `x` the upper tail from
-/// `expm1`, since there it is the small difference of numbers near 1.
+/// mode Temme's uniform expansion, summed backwards; for shapes below 1 at small `x` the upper tail from `expm1`,
+/// since there it is the small difference of numbers near 1.
 ///
 /// Error: relative 1e-12 for results above 1e-290 (`DensityTablesTest`, shapes from .001 to 3000; beyond, to 1e6, there
 /// are the round trips of `CatalogueTest` and a library).

@@ -17,12 +17,10 @@ import java.util.concurrent.ExecutionException;
 import java.util.concurrent.Future;
 
 /// A lane on its way: items handed to workers, their sums merged in item order, marks set, the end found. Confined to
-/// the
-/// thread that conducts the study.
+/// the thread that conducts the study.
 ///
 /// Stopping looks at the merged prefix of items only; what workers computed beyond it is thrown away. Hence the same
-/// bits
-/// for any number of workers.
+/// bits for any number of workers.
 public final class LaneRun {
     private static final double NEXT_MARK = 1.01;
 

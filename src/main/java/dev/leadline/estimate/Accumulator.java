@@ -11,10 +11,9 @@ import java.util.OptionalLong;
 /// those must be fixed.
 ///
 /// Error: on a million values of standard deviation 1 and mean 0 to 1e8, one ulp in the mean and a relative 1e-14 in
-/// the
-/// variance; each merge may add 2^-53 to the variance (`AccumulatorTest`). Squares of deviations overflow from 1e154,
-/// cubes from 1e102, fourth powers from 1e77: then the variance is infinite, skewness or kurtosis `NaN`, and all else
-/// as it should be. Squares underflow below 1e-150: then the variance is `NaN`.
+/// the variance; each merge may add 2^-53 to the variance (`AccumulatorTest`). Squares of deviations overflow from
+/// 1e154, cubes from 1e102, fourth powers from 1e77: then the variance is infinite, skewness or kurtosis `NaN`, and
+/// all else as it should be. Squares underflow below 1e-150: then the variance is `NaN`.
 ///
 /// Cost: .9 ns for an observation of one component in blocks of 1,024, 2.6 ns for two, 6.4 ns for four.
 ///

@@ -9,8 +9,7 @@ final class Sums {
     final double[] mean;
 
     /// What is missing from each mean: a mean is carried as the unrounded sum of both, since one rounding for each
-    /// block
-    /// would add up to more than the standard error where the mean is large beside the spread.
+    /// block would add up to more than the standard error where the mean is large beside the spread.
     final double[] meanRest;
 
     /// Sums of products of deviations of components j ≥ k, at `j(j+1)/2 + k`.

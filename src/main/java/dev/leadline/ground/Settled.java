@@ -7,8 +7,7 @@ import java.util.Optional;
 /// Whether the second half of the draws tells the same as the first.
 ///
 /// The difference of the two halves' means, in its standard errors, is compared with the normal quantile that sound
-/// draws
-/// exceed one time in 10,000.
+/// draws exceed one time in 10,000.
 final class Settled {
     /// `Φ⁻¹(1 - .0001 / 2)`.
     private static final double LIMIT = 3.89;

@@ -6,8 +6,7 @@ import dev.leadline.ground.Ground.Strength;
 import java.util.Optional;
 
 /// Whether there are enough observations for a Student interval in spite of lopsided outcomes: n of at least 25 times
-/// the
-/// squared skewness (Cochran's rule; common practice).
+/// the squared skewness (Cochran's rule; common practice).
 final class Skewness {
     private static final double PER_SQUARE = 25;
 

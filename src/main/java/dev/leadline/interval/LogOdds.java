@@ -7,8 +7,7 @@ package dev.leadline.interval;
 /// `h(s) = exp(a s - (a+b) ln(1 + (e^s - 1) a/(a+b)))`: analytic on the whole line, its logarithm concave, its peak
 /// `h(0) = 1`. So the whole integral is a plain trapezoidal sum, a tail is a few Gauss-Legendre panels, and their ratio
 /// needs no gamma function. Digits that cancel in the exponent for large a and b do so in proportion to the width of
-/// the
-/// density, hence not in the quantile.
+/// the density, hence not in the quantile.
 ///
 /// Error: see [Student] and [ClopperPearson]. Bit-stable: `StrictMath` only.
 ///

@@ -6,8 +6,7 @@ package dev.leadline.numeric;
 /// doubles; `erf` is an odd polynomial below 1 and `1 - erfc` above.
 ///
 /// Special values: `erf(±0)` is `±0`, `erf(±∞)` is ±1, `erfc(+∞)` is 0, `erfc(-∞)` is 2, NaN gives NaN. `erfc` is
-/// subnormal
-/// from 26.5433 on and 0 from 27.2265 on.
+/// subnormal from 26.5433 on and 0 from 27.2265 on.
 ///
 /// Error: `erf` 2 ulp, `erfc` 5 ulp (`ErrorFunctionTest`).
 public final class ErrorFunction {

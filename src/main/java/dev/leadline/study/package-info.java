@@ -1,6 +1,7 @@
 /// A whole run of every lane, as command line and window both call it.
 ///
 /// Start with [Study][dev.leadline.study.Study] and the [StudyState][dev.leadline.study.StudyState] that it hands to
-/// its
-/// listener.
+/// its listener.
+/// What both say of it stands here too: an answer in words ([AnswerText][dev.leadline.study.AnswerText]), a draw in
+/// rows ([LookRow][dev.leadline.study.LookRow]).
 package dev.leadline.study;
