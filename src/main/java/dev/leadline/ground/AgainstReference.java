@@ -70,7 +70,7 @@ final class AgainstReference {
     }
 
     private static Ground mean(Evidence evidence, Answer answer, Reference reference) {
-        double error = Math.hypot(answer.standardError(), reference.error());
+        double error = StrictMath.hypot(answer.standardError(), reference.error());
         double z = (answer.estimate() - reference.value()) / error;
         if (Double.isNaN(z) || Double.isInfinite(error)) {
             return notYet();

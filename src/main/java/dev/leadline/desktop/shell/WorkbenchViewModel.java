@@ -350,7 +350,7 @@ public final class WorkbenchViewModel {
 
     /// Does it once nothing would be lost: asks where edits are not saved yet.
     public void leaving(Runnable action) {
-        if (!project.edited().get()) {
+        if (!project.edited().get() && project.unreadFields().isEmpty()) {
             action.run();
             return;
         }

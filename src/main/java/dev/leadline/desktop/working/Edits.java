@@ -37,43 +37,22 @@ public final class Edits {
     }
 
     public static Draft title(Draft d, String title) {
-        return new Draft(
-                title,
-                d.notes(),
-                d.safety(),
-                d.constants(),
-                d.inputs(),
-                d.steps(),
-                d.asks(),
-                d.reference(),
-                d.confidence(),
-                d.tolerance(),
-                d.stop(),
-                d.seed(),
-                d.lanes());
+        return about(d, title, d.notes(), d.safety());
     }
 
     public static Draft notes(Draft d, String notes) {
-        return new Draft(
-                d.title(),
-                notes,
-                d.safety(),
-                d.constants(),
-                d.inputs(),
-                d.steps(),
-                d.asks(),
-                d.reference(),
-                d.confidence(),
-                d.tolerance(),
-                d.stop(),
-                d.seed(),
-                d.lanes());
+        return about(d, d.title(), notes, d.safety());
     }
 
     public static Draft safety(Draft d, boolean safety) {
+        return about(d, d.title(), d.notes(), safety);
+    }
+
+    /// The parts that say what it is about.
+    private static Draft about(Draft d, String title, String notes, boolean safety) {
         return new Draft(
-                d.title(),
-                d.notes(),
+                title,
+                notes,
                 safety,
                 d.constants(),
                 d.inputs(),

@@ -112,6 +112,15 @@ class WorkbenchViewModelTest {
     }
 
     @Test
+    void asksBeforeATextThatIsNoNumberIsLost() {
+        opened();
+        model.project().typeNumber("$.inputs[0].low", "low of x", "1..5", (d, _) -> d);
+        model.newProject("mean");
+        assertEquals(List.of("unsaved Twice"), dialogs.heard);
+        assertEquals("Twice", model.title().get());
+    }
+
+    @Test
     void aFailedSaveIsToldAndLeavesNothing() {
         opened();
         edit();
