@@ -46,7 +46,7 @@ final class Fit {
             return new Range(0, to * 1.03);
         }
         double from = Math.max(Math.max(1, first.getAsLong()), to / DECADES);
-        return from < to ? new Range(from, to * Math.pow(to / from, .03)) : new Range(to / 2, to * 2);
+        return from < to ? new Range(from, to * StrictMath.pow(to / from, .03)) : new Range(to / 2, to * 2);
     }
 
     static Range values(Settling settling) {
@@ -143,7 +143,7 @@ final class Fit {
 
     /// Half of the distance between labels that a picture of ordinary height would have.
     private static double halfStep(double length) {
-        double power = Math.pow(10, Math.floor(Math.log10(length)));
+        double power = StrictMath.pow(10, Math.floor(StrictMath.log10(length)));
         double lead = length / power;
         return power * (lead < 2 ? .1 : lead < 5 ? .25 : .5);
     }

@@ -19,7 +19,7 @@ record Ticks(List<Tick> all, int factor) {
     /// decimals; a power of ten is taken out below .01 and from a million.
     static Ticks even(Range range, int most) {
         double raw = range.high() / most - range.low() / most;
-        int exponent = (int) Math.floor(Math.log10(raw));
+        int exponent = (int) Math.floor(StrictMath.log10(raw));
         BigDecimal step = null;
         List<BigDecimal> values = List.of();
         for (int lead : new int[] {10, 5, 2, 1}) {
@@ -53,8 +53,8 @@ record Ticks(List<Tick> all, int factor) {
 
     /// Powers of ten where at least two are in range, else 1, 2, 5 times powers of ten, else even steps.
     static Ticks powers(Range range, int most) {
-        int from = (int) Math.ceil(Math.log10(range.low()) - 1e-9);
-        int to = (int) Math.floor(Math.log10(range.high()) + 1e-9);
+        int from = (int) Math.ceil(StrictMath.log10(range.low()) - 1e-9);
+        int to = (int) Math.floor(StrictMath.log10(range.high()) + 1e-9);
         if (to - from >= 1) {
             return decades(range, from, to, most);
         }

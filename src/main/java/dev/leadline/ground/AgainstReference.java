@@ -4,6 +4,7 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.ClopperPearson;
 import dev.leadline.model.Reference;
+import dev.leadline.numeric.Rounding;
 import dev.leadline.trace.Answer;
 
 /// Whether the first answer agrees with the reference value, where chance is no explanation.
@@ -49,24 +50,21 @@ final class AgainstReference {
             return notYet();
         }
         double reach = LIMIT * reference.error();
+        var rounding = Rounding.of(answer.estimate(), left.halfWidth());
         boolean above = reference.value() - reach > left.high();
         boolean below = reference.value() + reach < left.low();
         String text = "%s in %s draws leave %s to %s possible at %s, and the reference value %s is %s"
                 .formatted(
                         Numbers.count(hits) + (hits == 1 ? " hit" : " hits"),
                         Numbers.count(n),
-                        end(left.low()),
-                        end(left.high()),
+                        left.low() == 0 ? "0" : rounding.down(left.low()),
+                        left.high() == 1 ? "1" : rounding.up(left.high()),
                         left.percent(),
                         Numbers.value(reference.value()),
                         above ? "above that" : below ? "below that" : "within that");
         return above || below
                 ? Ground.doubted("reference", Strength.OBJECTION, text, REMEDY)
                 : Ground.shown("reference", text);
-    }
-
-    private static String end(double limit) {
-        return limit == 0 || limit == 1 ? String.valueOf((int) limit) : Numbers.value(limit);
     }
 
     private static Ground mean(Evidence evidence, Answer answer, Reference reference) {

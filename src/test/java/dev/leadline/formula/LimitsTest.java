@@ -13,8 +13,9 @@ import java.util.stream.Collectors;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 
-/// Long and deep texts get an answer, and soon. Each takes less than .3 s on an idle machine; the time allowed here is
-/// for one that is not, and would still stop an answer whose time grows with the square of the length.
+/// Long and deep texts get an answer, and soon. On a quiet machine each takes at most .7 s in a program that has just
+/// started, most under .1 s; the time allowed here is for a busy one, and would still stop an answer whose time grows
+/// with the square of the length.
 class LimitsTest {
     private static final Duration SOON = Duration.ofSeconds(20);
 

@@ -122,11 +122,11 @@ class GroundsTest {
     @Test
     void referenceOfAChance() throws InterruptedException {
         var none = new Questions().uniform("x", 0, 1).probability("x < 1e-9");
-        // 1 - (3.167e-5)^(1/1000) = .01031
+        // The limit is 1 - (3.167e-5)^(1/1000) = .010307, rounded outwards.
         var far = ground("reference", run(none.reference(.5).build(), 1_000));
         objects(far);
         assertEquals(
-                "0 hits in 1,000 draws leave 0 to 0.0103 possible at 99.99366 %, and the reference value 0.500 is above that",
+                "0 hits in 1,000 draws leave 0 to 0.0104 possible at 99.99366 %, and the reference value 0.500 is above that",
                 far.text());
         shows(ground("reference", run(none.reference(1e-9).build(), 1_000)));
         shows(ground("reference", run(none.reference(0).build(), 1_000)));

@@ -91,7 +91,7 @@ final class PictureView extends Region {
     private void scrolled(ScrollEvent e) {
         double notches = e.getDeltaY() / 40;
         if (notches != 0) {
-            model.zoom(e.getX(), e.getY(), Math.pow(STEP, Math.clamp(notches, -3, 3)));
+            model.zoom(e.getX(), e.getY(), StrictMath.pow(STEP, Math.clamp(notches, -3, 3)));
             e.consume();
         }
     }
