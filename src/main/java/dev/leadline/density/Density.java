@@ -36,6 +36,29 @@ public interface Density {
     /// `∞` where infinite, `NaN` where undefined.
     double variance();
 
+    /// Third central moment over the cube of the standard deviation; `NaN` where either is not finite.
+    default double skewness() {
+        return Moments.skewness(this);
+    }
+
+    /// Fourth central moment over the square of the variance, less 3; `NaN` where the variance is not finite, `∞`
+    /// where only the fourth moment is infinite.
+    default double excessKurtosis() {
+        return Moments.excessKurtosis(this);
+    }
+
+    /// How heavy the tails are.
+    default TailOrders tailOrders() {
+        return TailOrders.LIGHT;
+    }
+
+    /// Whether its values are separate ones, each with a probability of its own, which [#pdf(double)] then gives. The
+    /// quantile is then the smallest value whose cdf reaches p, the upper quantile the smallest whose survival does
+    /// not exceed q.
+    default boolean isDiscrete() {
+        return false;
+    }
+
     Support support();
 
     /// The density as a standardised shape, shifted and scaled: `location + scale * shape`. Tables are built, and

@@ -66,6 +66,26 @@ interface Scaled extends Density {
     }
 
     @Override
+    default double skewness() {
+        return standard().skewness();
+    }
+
+    @Override
+    default double excessKurtosis() {
+        return standard().excessKurtosis();
+    }
+
+    @Override
+    default TailOrders tailOrders() {
+        return standard().tailOrders();
+    }
+
+    @Override
+    default boolean isDiscrete() {
+        return standard().isDiscrete();
+    }
+
+    @Override
     default Support support() {
         var s = standard().support();
         return new Support(Math.fma(scale(), s.low(), location()), Math.fma(scale(), s.high(), location()));

@@ -147,6 +147,11 @@ public record Student(double dof, double location, double scale) implements Scal
         }
 
         @Override
+        public TailOrders tailOrders() {
+            return new TailOrders(dof, dof);
+        }
+
+        @Override
         public Support support() {
             return new Support(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
         }
