@@ -5,6 +5,11 @@ Run from the top of the repository: python3 src/test/python/density_tables.py
 Rows "at":      parameters, x        -> pdf, log pdf, cdf, survival at the double x
 Rows "inverse": parameters, p and q  -> the x with cdf(x) = p, the x with survival(x) = q
 
+density/moments/NAME.csv: mean, variance, skewness and excess kurtosis of the members of a family with a method for
+them; "+inf" where infinite, "nan" where undefined.
+
+Other scripts (density_tables_*.py) import this one for families of their own: a class, and `main(families, script)`.
+
 Gamma and beta masses are a power series or a continued fraction of the smaller tail, written for this file.
 """
 import os
@@ -309,10 +314,10 @@ def text(v):
     return "" if v is None else mpmath.nstr(v, 20, min_fixed=1, max_fixed=0) if v != 0 else "0"
 
 
-def write(family):
+def write(family, script):
     os.makedirs(OUT, exist_ok=True)
     with open(os.path.join(OUT, family.name + ".csv"), "w") as out:
-        out.write("# mpmath %s, 60 digits; made by src/test/python/density_tables.py\n" % mpmath.__version__)
+        out.write("# mpmath %s, 60 digits; made by src/test/python/%s\n" % (mpmath.__version__, script))
         out.write(",".join(["kind"] + family.columns + ["x", "y", "pdf", "logPdf", "cdf", "survival"]) + "\n")
         for member in family.members:
             d = family(*[mpf(float(v)) for v in member])
@@ -335,8 +340,26 @@ def write(family):
     print(family.name)
 
 
-if __name__ == "__main__":
+def write_moments(family, script):
+    folder = os.path.join(OUT, "moments")
+    os.makedirs(folder, exist_ok=True)
+    with open(os.path.join(folder, family.name + ".csv"), "w") as out:
+        out.write("# mpmath %s, 60 digits; made by src/test/python/%s\n" % (mpmath.__version__, script))
+        out.write(",".join(family.columns + ["mean", "variance", "skewness", "excessKurtosis"]) + "\n")
+        for member in family.members:
+            moments = family(*[mpf(float(v)) for v in member]).moments()
+            out.write(",".join(list(member) + [text(mpf(v)) for v in moments]) + "\n")
+
+
+def main(families, script):
     import sys
-    for family in (Uniform, Normal, Lognormal, Triangular, Exponential, Gamma, Beta, Weibull, Gumbel, Student):
+    for family in families:
         if len(sys.argv) < 2 or family.name in sys.argv[1:]:
-            write(family)
+            write(family, script)
+            if hasattr(family, "moments"):
+                write_moments(family, script)
+
+
+if __name__ == "__main__":
+    main((Uniform, Normal, Lognormal, Triangular, Exponential, Gamma, Beta, Weibull, Gumbel, Student),
+         "density_tables.py")
