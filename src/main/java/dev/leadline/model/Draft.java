@@ -4,7 +4,6 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalLong;
-import java.util.SequencedMap;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
@@ -18,6 +17,7 @@ public record Draft(
         boolean safety,
         List<ConstantDraft> constants,
         List<InputDraft> inputs,
+        Optional<DependenceDraft> dependence,
         List<String> steps,
         List<AskDraft> asks,
         Optional<ReferenceDraft> reference,
@@ -31,6 +31,9 @@ public record Draft(
     public static final int MOST_ROWS = 1000;
 
     private static final Pattern STEP = Pattern.compile("\\$\\.steps\\[(\\d{1,9})]");
+    private static final Pattern DENSITY =
+            Pattern.compile("\\$\\.inputs\\[(\\d{1,9})]\\.(?:density|drawFrom)((?:\\.mixture\\[\\d{1,9}])*)\\.formula");
+    private static final Pattern PART = Pattern.compile("\\[(\\d+)]");
     private static final Pattern ASK = Pattern.compile("\\$\\.ask(?:\\[(\\d{1,9})])?\\.\\w+");
 
     public Draft {
@@ -54,8 +57,19 @@ public record Draft(
         record Range(double low, double high, Optional<DensityDraft> drawFrom) implements From {}
     }
 
-    /// A member of a family; the names of the parameters are those of the file.
-    public record DensityDraft(String family, SequencedMap<String, Double> parameters) {}
+    /// @param copula `gaussian` or `student`
+    /// @param dof degrees of freedom of the Student copula
+    /// @param repair whether the nearest correlation matrix may take the place of one that is none
+    public record DependenceDraft(String copula, OptionalDouble dof, boolean repair, List<PairDraft> pairs) {
+        public DependenceDraft {
+            pairs = List.copyOf(pairs);
+        }
+    }
+
+    /// @param one name of an input
+    /// @param other name of another
+    /// @param measure `spearman`, `kendall` or `pearson`
+    public record PairDraft(String one, String other, String measure, double value) {}
 
     /// @param estimand word of the file, as `probability`
     public record AskDraft(String estimand, String formula, String unit, String label) {}
@@ -87,6 +101,28 @@ public record Draft(
             int index = ask.group(1) == null ? 0 : Integer.parseInt(ask.group(1));
             return index < asks.size() ? Optional.of(asks.get(index).formula()) : Optional.empty();
         }
-        return Optional.empty();
+        return densityFormulaAt(path);
+    }
+
+    /// The formula of a typed density.
+    private Optional<String> densityFormulaAt(String path) {
+        Matcher input = DENSITY.matcher(path);
+        if (!input.matches() || Integer.parseInt(input.group(1)) >= inputs.size()) {
+            return Optional.empty();
+        }
+        Optional<DensityDraft> density =
+                switch (inputs.get(Integer.parseInt(input.group(1))).from()) {
+                    case From.Density(var own) -> Optional.of(own);
+                    case From.Range(var _, var _, var drawFrom) -> drawFrom;
+                };
+        Matcher part = PART.matcher(input.group(2));
+        while (density.isPresent() && part.find()) {
+            int index = Integer.parseInt(part.group(1));
+            density = density.get().of() instanceof DensityDraft.Mixture(var parts) && index < parts.size()
+                    ? Optional.of(parts.get(index).density())
+                    : Optional.empty();
+        }
+        return density.flatMap(
+                d -> d.of() instanceof DensityDraft.Typed typed ? Optional.of(typed.formula()) : Optional.empty());
     }
 }

@@ -6,8 +6,7 @@ import dev.leadline.density.Density;
 ///
 /// @param drawn the density its values are drawn from
 /// @param role what a draw of it stands for
-public record Input(
-        String name, String unit, String label, String provenance, String family, Density drawn, Role role) {
+public record Input(String name, String unit, String label, String provenance, Density drawn, Role role) {
 
     public sealed interface Role {
         /// A random variable; `drawn` is its density.

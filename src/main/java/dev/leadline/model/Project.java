@@ -17,11 +17,18 @@ public record Project(Draft draft, Question question, Plan plan) {
     /// Where a project says nothing.
     static final double USUAL_CONFIDENCE = .95;
 
+    /// A project that names no data files, or has no folder yet.
+    ///
     /// @throws Refusal with every problem found, each at its JSON path in the draft
     public static Project of(Draft draft) {
+        return of(draft, DataFiles.NONE);
+    }
+
+    /// @throws Refusal with every problem found, each at its JSON path in the draft
+    public static Project of(Draft draft, DataFiles files) {
         var findings = new Findings();
         checkSizes(draft, findings);
-        List<Input> inputs = Inputs.of(draft.inputs(), findings);
+        List<Input> inputs = Inputs.of(draft.inputs(), files, findings);
         List<Ask> asks = Asks.of(draft, findings);
         Optional<Working> working = Workings.of(draft, findings);
         working.ifPresent(formulas -> Asks.checkEvents(draft, formulas, findings));
@@ -29,6 +36,7 @@ public record Project(Draft draft, Question question, Plan plan) {
         double confidence = confidence(draft, findings);
         Optional<Tolerance> tolerance = draft.tolerance().map(given -> tolerance(given, findings));
         Plan plan = Plans.of(draft, findings);
+        draft.dependence().ifPresent(_ -> findings.add("$.dependence", Problem.of("dependence is not available")));
         findings.refuseIfAny();
         Question question = new Question(
                 draft.title(),

@@ -1,12 +1,14 @@
 package dev.leadline.project;
 
+import dev.leadline.model.DensityDraft;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
-import dev.leadline.model.Draft.DensityDraft;
+import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.LaneDraft;
+import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
@@ -20,7 +22,6 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.SequencedMap;
 
 /// Takes a project's JSON apart. Here stands which fields there are and what kind of value each has; what the values
 /// may be is for [Project][dev.leadline.model.Project] to say.
@@ -28,28 +29,22 @@ final class DraftReader {
 
     static final long FORMAT = 1;
 
-    private static final int NAME = 200;
-    private static final int LINE = 10_000;
-    private static final int FORMULA = 100_000;
+    static final int NAME = 200;
+    static final int LINE = 10_000;
+    static final int FORMULA = 100_000;
 
     private static final int MOST_ASKS = 100;
+    private static final int MOST_PAIRS = 10_000;
 
     private static final String LEAVE_OUT = "Leave it out.";
-    private static final String ONLY_INDEPENDENT = "Leave it out: inputs are drawn independently of one another.";
     private static final String ONLY_PLAIN =
             "Leave it out: lanes here draw independent points from the inputs' densities.";
     private static final String ONLY_FIXED = "Leave it out: {\"rule\": \"fixed\"} takes draws and seconds.";
-    private static final String ONLY_FAMILIES = "Use a family; the command families lists them.";
     private static final String ONLY_VALUES =
             "Give the value itself: {\"value\": 0.12, \"error\": 1e-4, \"source\": \"…\"}.";
 
-    private static final Map<String, String> WHOLE_LATER = Map.of(
-            "dependence",
-            ONLY_INDEPENDENT,
-            "bounds",
-            LEAVE_OUT,
-            "logbook",
-            "Leave it out: no run is written to a logbook.");
+    private static final Map<String, String> WHOLE_LATER =
+            Map.of("bounds", LEAVE_OUT, "logbook", "Leave it out: no run is written to a logbook.");
     private static final Map<String, String> LANE_LATER = each(
             ONLY_PLAIN,
             "drawFrom",
@@ -62,18 +57,7 @@ final class DraftReader {
             "repetitions");
     private static final Map<String, String> STOP_LATER = each(ONLY_FIXED, "hits", "guard");
     private static final Map<String, String> REFERENCE_LATER = each(ONLY_VALUES, "formula", "quadrature");
-    private static final Map<String, String> DENSITY_LATER = each(
-            ONLY_FAMILIES,
-            "mixture",
-            "formula",
-            "data",
-            "column",
-            "kind",
-            "bandwidth",
-            "truncate",
-            "breaks",
-            "log",
-            "fitted");
+    private static final List<String> MEASURES = List.of("spearman", "kendall", "pearson");
     private static final List<String> ASKS = List.of("mean", "integral", "probability");
     private static final List<String> ASKS_LATER =
             List.of("quantile", "tailMean", "ratio", "standardDeviation", "distribution");
@@ -100,6 +84,8 @@ final class DraftReader {
                 whole.flag("safety"),
                 constants(whole),
                 inputs(whole),
+                whole.object("dependence", "a dependence {\"copula\": \"gaussian\", \"pairs\": […]}")
+                        .map(this::dependence),
                 steps(whole),
                 asks(whole),
                 whole.object("reference", "a reference {\"value\": …}").map(this::reference),
@@ -180,7 +166,7 @@ final class DraftReader {
             problems.add(Fields.unavailable("\"drawFrom\" beside a density", ONLY_PLAIN)
                     .at(Place.of(input.pathOf("drawFrom"))));
         }
-        return new From.Density(density.orElse(new DensityDraft("", new LinkedHashMap<>())));
+        return new From.Density(density.orElse(DensityDraft.unchosen()));
     }
 
     private From range(Fields input, Optional<DensityDraft> drawFrom) {
@@ -193,38 +179,68 @@ final class DraftReader {
             }
             return new From.Range(Double.NaN, Double.NaN, drawFrom);
         }
-        return new From.Range(end(input, ends, 0), end(input, ends, 1), drawFrom);
+        String path = input.pathOf("range");
+        String what = "an end of the range";
+        return new From.Range(
+                end(ends.get(0), what, JsonPath.element(path, 0), problems),
+                end(ends.get(1), what, JsonPath.element(path, 1), problems),
+                drawFrom);
     }
 
-    private double end(Fields input, List<Json> ends, int index) {
-        return switch (ends.get(index)) {
+    /// @param what stands at `path`, in words
+    static double end(Json json, String what, String path, Problems problems) {
+        return switch (json) {
             case Json.Number number -> number.value();
             case Json.Text(String text) when text.equals("-inf") -> Double.NEGATIVE_INFINITY;
             case Json.Text(String text) when text.equals("inf") -> Double.POSITIVE_INFINITY;
             case Json other -> {
-                problems.add(Problem.of("an end of the range is %s but must be a number, \"-inf\" or \"inf\""
-                                .formatted(Shown.what(other)))
-                        .at(Place.of(JsonPath.element(input.pathOf("range"), index))));
+                problems.add(Problem.of(
+                                "%s is %s but must be a number, \"-inf\" or \"inf\"".formatted(what, Shown.what(other)))
+                        .at(Place.of(path)));
                 yield Double.NaN;
             }
         };
     }
 
     private Optional<DensityDraft> density(Fields input, String name) {
-        return input.object(name, "a density {\"family\": …}").map(fields -> {
-            boolean later = fields.names().stream().anyMatch(DENSITY_LATER::containsKey);
-            String family = later ? fields.text("family", NAME) : fields.requiredText("family", NAME);
-            SequencedMap<String, Double> parameters = new LinkedHashMap<>();
-            for (String parameter : fields.names()) {
-                boolean elsewhere = parameter.equals("family") || DENSITY_LATER.containsKey(parameter);
-                // the ends of a typed density may be texts; it is refused as a whole
-                if (!elsewhere && !(later && fields.take(parameter).orElseThrow() instanceof Json.Text)) {
-                    parameters.put(parameter, fields.requiredNumber(parameter));
-                }
-            }
-            fields.close(DENSITY_LATER);
-            return new DensityDraft(family, parameters);
-        });
+        return input.object(name, "a density {\"family\": …}").map(fields -> DensityReader.read(fields, problems));
+    }
+
+    private DependenceDraft dependence(Fields fields) {
+        var dependence = new DependenceDraft(
+                fields.requiredText("copula", NAME),
+                fields.number("dof"),
+                fields.flag("repair"),
+                each(fields, "pairs", MOST_PAIRS, "a pair {\"of\": [\"a\", \"b\"], \"spearman\": …}", this::pair));
+        fields.close(Map.of());
+        return dependence;
+    }
+
+    private PairDraft pair(Fields fields) {
+        var of = fields.list("of", MOST_PAIRS).stream()
+                .map(json -> json instanceof Json.Text(String name) ? name : "")
+                .toList();
+        if (of.size() != 2 || of.contains("")) {
+            problems.add(Problem.of("\"of\" must be the names of two inputs, as [\"a\", \"b\"]")
+                    .because("A correlation is between two inputs.")
+                    .at(Place.of(fields.pathOf("of"))));
+        }
+        fields.has("of");
+        var given = MEASURES.stream().filter(fields::has).toList();
+        if (given.size() != 1) {
+            problems.add(Problem.of(
+                            given.isEmpty()
+                                    ? "the pair has no correlation"
+                                    : "the pair has %s".formatted(String.join(" and ", given)))
+                    .because("A pair has one of %s.".formatted(String.join(", ", MEASURES)))
+                    .at(Place.of(fields.path())));
+        }
+        String measure = given.isEmpty() ? MEASURES.getFirst() : given.getFirst();
+        double value = given.isEmpty() ? Double.NaN : fields.requiredNumber(measure);
+        fields.close(Map.of());
+        return of.size() == 2
+                ? new PairDraft(of.get(0), of.get(1), measure, value)
+                : new PairDraft("", "", measure, value);
     }
 
     private List<String> steps(Fields whole) {

@@ -1,12 +1,21 @@
 package dev.leadline.project;
 
+import dev.leadline.model.DensityDraft;
+import dev.leadline.model.DensityDraft.Column;
+import dev.leadline.model.DensityDraft.Data;
+import dev.leadline.model.DensityDraft.Member;
+import dev.leadline.model.DensityDraft.Mixture;
+import dev.leadline.model.DensityDraft.Part;
+import dev.leadline.model.DensityDraft.Typed;
+import dev.leadline.model.DensityDraft.Values;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
-import dev.leadline.model.Draft.DensityDraft;
+import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.LaneDraft;
+import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
@@ -28,6 +37,7 @@ final class DraftWriter {
         }
         list(whole, "constants", draft.constants(), DraftWriter::constant);
         list(whole, "inputs", draft.inputs(), DraftWriter::input);
+        draft.dependence().ifPresent(dependence -> whole.put("dependence", dependence(dependence)));
         list(whole, "steps", draft.steps(), Json::of);
         if (draft.asks().size() == 1) {
             whole.put("ask", ask(draft.asks().getFirst()));
@@ -76,8 +86,85 @@ final class DraftWriter {
     }
 
     static Json density(DensityDraft density) {
-        var fields = Json.object().put("family", density.family());
-        density.parameters().forEach((name, value) -> number(fields, name, value));
+        return density(Json.object(), density);
+    }
+
+    private static Json density(Json.Builder fields, DensityDraft density) {
+        of(fields, density.of());
+        number(fields, "shift", density.shift());
+        number(fields, "scale", density.scale());
+        density.truncate()
+                .ifPresent(ends -> fields.put("truncate", Json.list(List.of(end(ends.low()), end(ends.high())))));
+        return fields.build();
+    }
+
+    private static void of(Json.Builder fields, DensityDraft.Of of) {
+        switch (of) {
+            case Member member -> member(fields, member);
+            case Values(var values, var probabilities) ->
+                fields.put("family", "table")
+                        .put("values", numbers(values))
+                        .put("probabilities", numbers(probabilities));
+            case Mixture(var parts) ->
+                fields.put(
+                        "mixture",
+                        Json.list(parts.stream().map(DraftWriter::part).toList()));
+            case Typed(String formula, double from, double to, var breaks, boolean log) -> {
+                fields.put("formula", formula).put("from", end(from)).put("to", end(to));
+                if (!breaks.isEmpty()) {
+                    fields.put("breaks", numbers(breaks));
+                }
+                if (log) {
+                    fields.put("log", Json.of(true));
+                }
+            }
+            case Data(String file, Column column, var kind, var bandwidth, var fitted) -> {
+                fields.put("data", file);
+                switch (column) {
+                    case Column.Only _ -> {}
+                    case Column.Named(String header) -> fields.put("column", header);
+                    case Column.At(long index) -> fields.put("column", Json.of(index));
+                }
+                kind.ifPresent(word -> fields.put("kind", word));
+                number(fields, "bandwidth", bandwidth);
+                fitted.ifPresent(member -> fields.put("fitted", member(Json.object(), member)));
+            }
+        }
+    }
+
+    private static Json member(Json.Builder fields, Member member) {
+        fields.put("family", member.family());
+        member.parameters().forEach((name, value) -> number(fields, name, value));
+        return fields.build();
+    }
+
+    private static Json part(Part part) {
+        var fields = Json.object();
+        number(fields, "weight", part.weight());
+        return density(fields, part.density());
+    }
+
+    private static Json numbers(List<Double> values) {
+        return Json.list(values.stream().map(Json::orNull).toList());
+    }
+
+    static Json dependence(DependenceDraft dependence) {
+        var fields = Json.object().put("copula", dependence.copula());
+        number(fields, "dof", dependence.dof());
+        if (dependence.repair()) {
+            fields.put("repair", Json.of(true));
+        }
+        return fields.put(
+                        "pairs",
+                        Json.list(dependence.pairs().stream()
+                                .map(DraftWriter::pair)
+                                .toList()))
+                .build();
+    }
+
+    private static Json pair(PairDraft pair) {
+        var fields = Json.object().put("of", Json.list(List.of(Json.of(pair.one()), Json.of(pair.other()))));
+        number(fields, pair.measure(), pair.value());
         return fields.build();
     }
 

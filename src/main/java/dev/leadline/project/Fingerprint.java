@@ -44,6 +44,7 @@ public final class Fingerprint {
                 Json.list(project.draft().inputs().stream()
                         .map(Fingerprint::input)
                         .toList()));
+        project.draft().dependence().ifPresent(tied -> content.put("dependence", DraftWriter.dependence(tied)));
         content.put(
                 "steps",
                 Json.list(question.working().steps().stream()

@@ -97,7 +97,7 @@ public final class Questions {
     }
 
     private Questions input(String name, Density density, Role role) {
-        inputs.add(new Input(name, "", "", "", "", density, role));
+        inputs.add(new Input(name, "", "", "", density, role));
         return this;
     }
 

@@ -5,7 +5,6 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 
 import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
-import dev.leadline.model.Draft.DensityDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.StopDraft;
@@ -29,7 +28,8 @@ class ProjectTest {
                 "",
                 false,
                 List.of(new ConstantDraft("limit", 4, "", "", "")),
-                List.of(new InputDraft("load", "kN", "", "", new From.Density(new DensityDraft("normal", parameters)))),
+                List.of(new InputDraft("load", "kN", "", "", new From.Density(DensityDraft.of("normal", parameters)))),
+                Optional.empty(),
                 List.of("excess = load - limit"),
                 List.of(new AskDraft(estimand, formula, "", "")),
                 Optional.empty(),
@@ -70,6 +70,7 @@ class ProjectTest {
                 false,
                 written.constants(),
                 written.inputs(),
+                written.dependence(),
                 written.steps(),
                 written.asks(),
                 Optional.empty(),

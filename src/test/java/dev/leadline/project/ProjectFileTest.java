@@ -6,13 +6,23 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.model.DensityDraft;
+import dev.leadline.model.DensityDraft.Column;
+import dev.leadline.model.DensityDraft.Data;
+import dev.leadline.model.DensityDraft.Ends;
+import dev.leadline.model.DensityDraft.Member;
+import dev.leadline.model.DensityDraft.Mixture;
+import dev.leadline.model.DensityDraft.Part;
+import dev.leadline.model.DensityDraft.Typed;
+import dev.leadline.model.DensityDraft.Values;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
-import dev.leadline.model.Draft.DensityDraft;
+import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.LaneDraft;
+import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
@@ -38,6 +48,12 @@ import org.junit.jupiter.api.io.TempDir;
 
 class ProjectFileTest {
 
+    private static final DensityDraft CHANGED = new DensityDraft(
+            new Member("weibull", new LinkedHashMap<>(Map.of("shape", 2.0, "scale", 3.0))),
+            OptionalDouble.of(1),
+            OptionalDouble.empty(),
+            Optional.of(new Ends(2, Double.POSITIVE_INFINITY)));
+
     /// Every field that a draft can hold.
     private static final Draft FULL = new Draft(
             "Load on a mooring — \"windy\"",
@@ -56,7 +72,23 @@ class ProjectFileTest {
                             new From.Range(
                                     Double.NEGATIVE_INFINITY,
                                     Double.POSITIVE_INFINITY,
-                                    Optional.of(density("normal", "sd", 2))))),
+                                    Optional.of(density("normal", "sd", 2)))),
+                    input("t", new Typed("exp(-abs(t)^3)", Double.NEGATIVE_INFINITY, 7, List.of(0.0, .5), true)),
+                    input("k", new Values(List.of(0.0, 10.0), List.of(.93, .07))),
+                    input(
+                            "m",
+                            new Mixture(List.of(
+                                    new Part(.9, density("exponential", "mean", 3)),
+                                    new Part(.1, DensityDraft.of(new Mixture(List.of(new Part(1, CHANGED)))))))),
+                    new InputDraft("c", "", "", "", new From.Density(CHANGED)),
+                    input("d", data(new Column.Named("hours"))),
+                    input("e", data(new Column.At(2))),
+                    input("f", data(new Column.Only()))),
+            Optional.of(new DependenceDraft(
+                    "student",
+                    OptionalDouble.of(4),
+                    true,
+                    List.of(new PairDraft("v", "t", "spearman", .4), new PairDraft("t", "m", "pearson", -.1)))),
             List.of("q = 0.5*v^2   # Pa"),
             List.of(new AskDraft("integral", "q*x", "m3", "volume"), new AskDraft("mean", "q", "", "")),
             Optional.of(new ReferenceDraft(1.2568e-5, OptionalDouble.of(4e-9), "closed form")),
@@ -68,12 +100,25 @@ class ProjectFileTest {
 
     private static final long MUTATED_PROJECTS = 1_000;
 
+    private static InputDraft input(String name, DensityDraft.Of of) {
+        return new InputDraft(name, "", "", "", new From.Density(DensityDraft.of(of)));
+    }
+
+    private static Data data(Column column) {
+        return new Data(
+                "waits.csv",
+                column,
+                Optional.of("kernel"),
+                OptionalDouble.of(.3),
+                Optional.of(new Member("gamma", new LinkedHashMap<>(Map.of("scale", 2.0)))));
+    }
+
     private static ConstantDraft constant(String name, double value) {
         return new ConstantDraft(name, value, "", "", "");
     }
 
     private static DensityDraft density(String family, String parameter, double value) {
-        return new DensityDraft(family, new LinkedHashMap<>(Map.of(parameter, value)));
+        return DensityDraft.of(family, new LinkedHashMap<>(Map.of(parameter, value)));
     }
 
     @Test
@@ -97,7 +142,8 @@ class ProjectFileTest {
                 "",
                 false,
                 List.of(constant("", Double.NaN)),
-                List.of(new InputDraft("", "", "", "", new From.Density(new DensityDraft("", new LinkedHashMap<>())))),
+                List.of(new InputDraft("", "", "", "", new From.Density(DensityDraft.unchosen()))),
+                Optional.empty(),
                 List.of(""),
                 List.of(new AskDraft("mean", "", "", "")),
                 Optional.empty(),

@@ -4,6 +4,7 @@ import dev.leadline.density.Catalogue;
 import dev.leadline.density.Family;
 import dev.leadline.density.Parameter;
 import dev.leadline.desktop.style.Styles;
+import dev.leadline.model.DensityDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.UnitWords;
@@ -105,7 +106,7 @@ final class InputRow extends VBox {
         String label = in.label().isEmpty() ? "no label yet" : in.label();
         head.setTooltip(new Tooltip(in.name() + InputsViewModel.summary(in.from()) + "\n" + label));
         var problems = model.project().problemsAt(InputsViewModel.path(index));
-        boolean open = in.from() instanceof From.Density(var d) && d.family().isEmpty();
+        boolean open = in.from() instanceof From.Density(var d) && d.isUnchosen();
         summary.pseudoClassStateChanged(PseudoClass.getPseudoClass("unchosen"), open);
         messages.show(open && !isOpen() ? List.of() : problems);
         if (isOpen()) {
@@ -122,7 +123,7 @@ final class InputRow extends VBox {
         return new Shape(
                 range,
                 density.isPresent() || InputsViewModel.isUnbounded(in.from()),
-                density.map(d -> d.family()).orElse(""),
+                density.map(DensityDraft::kind).orElse(""),
                 model.entryOf(index));
     }
 

@@ -3,8 +3,9 @@ package dev.leadline.desktop.working;
 import dev.leadline.density.Catalogue;
 import dev.leadline.density.Family;
 import dev.leadline.density.Parameter;
+import dev.leadline.model.DensityDraft;
+import dev.leadline.model.DensityDraft.Member;
 import dev.leadline.model.Draft;
-import dev.leadline.model.Draft.DensityDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import java.util.ArrayList;
@@ -15,13 +16,11 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.SequencedMap;
 import java.util.function.UnaryOperator;
+import java.util.stream.Collectors;
 
 /// The inputs of the project, edited row by row.
 public final class InputsViewModel {
-    /// The family of an input whose density is still to be chosen.
-    static final String UNCHOSEN = "";
-
-    private static final DensityDraft TO_CHOOSE = new DensityDraft(UNCHOSEN, new LinkedHashMap<>());
+    private static final DensityDraft TO_CHOOSE = DensityDraft.unchosen();
 
     private final ProjectViewModel project;
 
@@ -107,11 +106,12 @@ public final class InputsViewModel {
                 .map(f -> f.entries().getFirst())
                 .orElse(List.of())
                 .forEach(p -> {
-                    if (old.parameters().containsKey(p.name())) {
-                        kept.put(p.name(), old.parameters().get(p.name()));
+                    var before = parameters(old);
+                    if (before.containsKey(p.name())) {
+                        kept.put(p.name(), before.get(p.name()));
                     }
                 });
-        return new DensityDraft(family, kept);
+        return DensityDraft.of(family, kept);
     }
 
     /// Another way to enter the same family; parameters it does not have are left out.
@@ -120,12 +120,12 @@ public final class InputsViewModel {
         project.settle();
         entryWanted = new EntryWanted(i, entry);
         density(i, old -> {
-            var names = Catalogue.family(old.family()).orElseThrow().entries().get(entry).stream()
+            var names = Catalogue.family(old.kind()).orElseThrow().entries().get(entry).stream()
                     .map(Parameter::name)
                     .toList();
-            var kept = new LinkedHashMap<>(old.parameters());
+            var kept = new LinkedHashMap<>(parameters(old));
             kept.keySet().retainAll(names);
-            return new DensityDraft(old.family(), kept);
+            return old.with(new Member(old.kind(), kept));
         });
     }
 
@@ -141,13 +141,13 @@ public final class InputsViewModel {
                                 d.inputs(),
                                 i,
                                 in -> withFrom(in, mapDensity(in.from(), old -> {
-                                    var parameters = new LinkedHashMap<>(old.parameters());
+                                    var parameters = new LinkedHashMap<>(parameters(old));
                                     if (value.isPresent()) {
                                         parameters.put(name, value.getAsDouble());
                                     } else {
                                         parameters.remove(name);
                                     }
-                                    return new DensityDraft(old.family(), inOrder(old.family(), parameters));
+                                    return old.with(new Member(old.kind(), inOrder(old.kind(), parameters)));
                                 })))));
     }
 
@@ -179,7 +179,7 @@ public final class InputsViewModel {
 
     String parameterText(int i, String name) {
         Double value = densityOf(inputs().get(i).from())
-                .map(d -> d.parameters().get(name))
+                .map(d -> parameters(d).get(name))
                 .orElse(null);
         return project.fieldText(
                 densityPath(i) + "." + name, value == null ? OptionalDouble.empty() : OptionalDouble.of(value));
@@ -202,12 +202,12 @@ public final class InputsViewModel {
     /// The way of entry that fits the parameters written so far.
     int entryOf(int i) {
         var density = densityOf(inputs().get(i).from());
-        var family = density.flatMap(d -> Catalogue.family(d.family()));
+        var family = density.flatMap(d -> Catalogue.family(d.kind()));
         if (family.isEmpty()) {
             return 0;
         }
         var entries = family.get().entries();
-        var written = density.get().parameters().keySet();
+        var written = parameters(density.get()).keySet();
         if (entryWanted.input == i
                 && entryWanted.entry < entries.size()
                 && names(entries.get(entryWanted.entry)).containsAll(written)) {
@@ -237,7 +237,7 @@ public final class InputsViewModel {
     /// What stands after the name, as `~ gumbel(24.5, 2.6)`, `from 0 to 420` or `: choose`.
     static String summary(From from) {
         return switch (from) {
-            case From.Density(DensityDraft d) -> d.family().isEmpty() ? ": choose" : " ~ " + member(d);
+            case From.Density(DensityDraft d) -> d.isUnchosen() ? ": choose" : " ~ " + member(d);
             case From.Range(double low, double high, Optional<DensityDraft> drawFrom) ->
                 " from " + NumberText.show(low) + " to " + NumberText.show(high)
                         + drawFrom.map(d -> ", drawn from " + member(d)).orElse("");
@@ -245,11 +245,16 @@ public final class InputsViewModel {
     }
 
     private static String member(DensityDraft d) {
-        return d.family() + "("
-                + String.join(
-                        ", ",
-                        d.parameters().values().stream().map(NumberText::show).toList())
-                + ")";
+        return d.kind()
+                + d.member()
+                        .map(m -> m.parameters().values().stream()
+                                .map(NumberText::show)
+                                .collect(Collectors.joining(", ", "(", ")")))
+                        .orElse("");
+    }
+
+    private static SequencedMap<String, Double> parameters(DensityDraft density) {
+        return density.member().map(Member::parameters).orElseGet(LinkedHashMap::new);
     }
 
     private void edit(int i, String field, UnaryOperator<InputDraft> change) {

@@ -5,7 +5,7 @@ import dev.leadline.chart.Theme;
 import dev.leadline.density.Catalogue;
 import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.style.Pixels;
-import dev.leadline.model.Draft.DensityDraft;
+import dev.leadline.model.DensityDraft;
 import dev.leadline.model.Draft.From;
 import java.awt.image.BufferedImage;
 import java.util.Optional;
@@ -41,7 +41,7 @@ public final class SketchView extends Region {
     void show(From from) {
         var density = switch (from) {
             case From.Range(double low, double high, Optional<DensityDraft> drawFrom) ->
-                drawFrom.or(() -> Optional.of(new DensityDraft("uniform", uniform(low, high))));
+                drawFrom.or(() -> Optional.of(DensityDraft.of("uniform", uniform(low, high))));
             case From.Density(DensityDraft d) -> Optional.of(d);
         };
         if (!density.equals(shown)) {
@@ -80,7 +80,9 @@ public final class SketchView extends Region {
     }
 
     private static BufferedImage sketch(DensityDraft d, Theme theme) {
-        var density = Catalogue.family(d.family()).orElseThrow().of(d.parameters());
+        var density = Catalogue.family(d.kind())
+                .orElseThrow()
+                .of(d.member().orElseThrow().parameters());
         return DensitySketch.image(density, "", WIDTH, HEIGHT, SCALE, theme);
     }
 }

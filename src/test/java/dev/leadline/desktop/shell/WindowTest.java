@@ -133,7 +133,7 @@ class WindowTest {
 
     private static double parameter(dev.leadline.model.Draft draft) {
         return draft.inputs().getFirst().from() instanceof dev.leadline.model.Draft.From.Density(var density)
-                ? density.parameters().get("to")
+                ? density.member().orElseThrow().parameters().get("to")
                 : Double.NaN;
     }
 

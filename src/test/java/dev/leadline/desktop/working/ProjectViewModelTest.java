@@ -242,6 +242,10 @@ class ProjectViewModelTest {
     }
 
     private java.util.Map<String, Double> parameters() {
-        return InputsViewModel.densityOf(from()).orElseThrow().parameters();
+        return InputsViewModel.densityOf(from())
+                .orElseThrow()
+                .member()
+                .orElseThrow()
+                .parameters();
     }
 }
