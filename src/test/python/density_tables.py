@@ -149,20 +149,21 @@ class Triangular:
 
 
 class Exponential:
-    name, columns = "exponential", ["mean"]
-    members = [("2",), ("1e-100",)]
+    name, columns = "exponential", ["mean", "from"]
+    members = [("2", "0"), ("1e-100", "0"), ("5", "3"), ("-7", "-7.5")]
 
-    def __init__(self, m):
-        self.m = m
+    def __init__(self, m, low):
+        self.s, self.low = m - low, low
 
     def log_pdf(self, x):
-        return -x / self.m - log(self.m)
+        return -(x - self.low) / self.s - log(self.s)
 
     def tails(self, x):
-        return -expm1(-x / self.m), exp(-x / self.m)
+        z = (x - self.low) / self.s
+        return -expm1(-z), exp(-z)
 
     def support(self):
-        return mpf(0), inf
+        return self.low, inf
 
 
 class Gamma:

@@ -180,6 +180,21 @@ public record Beta(double alpha, double beta, double from, double to) implements
         }
 
         @Override
+        public double skewness() {
+            double a = tails.a();
+            double b = tails.b();
+            return 2 * (b - a) / (a + b + 2) * Math.sqrt((a + b + 1) / a / b);
+        }
+
+        @Override
+        public double excessKurtosis() {
+            double a = tails.a();
+            double b = tails.b();
+            double n = a + b;
+            return 6 / (n + 3) * ((a - b) / a * ((a - b) / b) * ((n + 1) / (n + 2)) - 1);
+        }
+
+        @Override
         public Support support() {
             return new Support(0, 1);
         }

@@ -15,7 +15,16 @@ public final class Catalogue {
             Beta.FAMILY,
             Weibull.FAMILY,
             Gumbel.FAMILY,
-            Student.FAMILY);
+            Student.FAMILY,
+            Arcsine.FAMILY,
+            Pert.FAMILY,
+            HalfNormal.FAMILY,
+            Rayleigh.FAMILY,
+            ChiSquare.FAMILY,
+            Fisher.FAMILY,
+            Laplace.FAMILY,
+            Logistic.FAMILY,
+            Cauchy.FAMILY);
 
     private Catalogue() {}
 

@@ -96,6 +96,16 @@ public record Gamma(double shape, double scale) implements Scaled {
         }
 
         @Override
+        public double skewness() {
+            return 2 / Math.sqrt(tails.a());
+        }
+
+        @Override
+        public double excessKurtosis() {
+            return 6 / tails.a();
+        }
+
+        @Override
         public Support support() {
             return new Support(0, Double.POSITIVE_INFINITY);
         }

@@ -79,6 +79,17 @@ public record Gumbel(double location, double scale) implements Scaled {
             return VARIANCE;
         }
 
+        /// `12 sqrt(6) zeta(3) / pi^3`.
+        @Override
+        public double skewness() {
+            return 1.1395470994046486;
+        }
+
+        @Override
+        public double excessKurtosis() {
+            return 2.4;
+        }
+
         @Override
         public Support support() {
             return new Support(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);

@@ -147,6 +147,18 @@ public record Lognormal(double mu, double sigma) implements Scaled {
         }
 
         @Override
+        public double skewness() {
+            double v = StrictMath.expm1(sigma * sigma);
+            return (3 + v) * Math.sqrt(v);
+        }
+
+        @Override
+        public double excessKurtosis() {
+            double v = StrictMath.expm1(sigma * sigma);
+            return v * (16 + v * (15 + v * (6 + v)));
+        }
+
+        @Override
         public Support support() {
             return new Support(0, Double.POSITIVE_INFINITY);
         }

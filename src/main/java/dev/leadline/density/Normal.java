@@ -80,6 +80,16 @@ public record Normal(double mean, double sd) implements Scaled {
         }
 
         @Override
+        public double skewness() {
+            return 0;
+        }
+
+        @Override
+        public double excessKurtosis() {
+            return 0;
+        }
+
+        @Override
         public Support support() {
             return new Support(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
         }

@@ -146,6 +146,18 @@ public record Student(double dof, double location, double scale) implements Scal
             return dof > 2 ? dof / (dof - 2) : dof > 1 ? Double.POSITIVE_INFINITY : Double.NaN;
         }
 
+        /// Undefined for `dof <= 3`, where the third moments of both tails are infinite.
+        @Override
+        public double skewness() {
+            return dof > 3 ? 0 : Double.NaN;
+        }
+
+        /// Infinite for `dof <= 4`, undefined for `dof <= 2`, where there is no variance.
+        @Override
+        public double excessKurtosis() {
+            return dof > 4 ? 6 / (dof - 4) : dof > 2 ? Double.POSITIVE_INFINITY : Double.NaN;
+        }
+
         @Override
         public TailOrders tailOrders() {
             return new TailOrders(dof, dof);

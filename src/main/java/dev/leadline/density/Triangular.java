@@ -17,7 +17,7 @@ public record Triangular(double from, double mode, double to) implements Scaled 
                     finite("from", "least value"),
                     finite("mode", "most likely value"),
                     finite("to", "largest value"))
-            .and(v -> problems(v[0], v[1], v[2]));
+            .and(v -> ordered(v[0], v[1], v[2]));
 
     static final Family FAMILY = new Described(
             "triangular", "least, most likely and largest value are known; the sum of two uniform effects", ENTRY);
@@ -26,7 +26,8 @@ public record Triangular(double from, double mode, double to) implements Scaled 
         ENTRY.check(from, mode, to);
     }
 
-    private static List<Problem> problems(double from, double mode, double to) {
+    /// What is wrong with limits and a most likely value between them.
+    static List<Problem> ordered(double from, double mode, double to) {
         var problems = new ArrayList<>(Uniform.rising("from", from, "to", to));
         if (problems.isEmpty() && !(mode >= from && mode <= to)) {
             problems.add(Rule.problem(
@@ -119,6 +120,7 @@ public record Triangular(double from, double mode, double to) implements Scaled 
     /// @param mode distance of the mode from 0
     /// @param rest distance of the mode from 1
     record Standard(double mode, double rest) implements Shape, ClosedForm {
+        private static final double SQRT_2 = 1.4142135623730951;
 
         Standard mirrored() {
             return new Standard(rest, mode);
@@ -191,6 +193,17 @@ public record Triangular(double from, double mode, double to) implements Scaled 
         @Override
         public double variance() {
             return (1 - mode * rest) / 18;
+        }
+
+        @Override
+        public double skewness() {
+            double square = 1 - mode * rest;
+            return SQRT_2 / 5 * (rest - mode) * (1 + mode) * (1 + rest) / (square * Math.sqrt(square));
+        }
+
+        @Override
+        public double excessKurtosis() {
+            return -0.6;
         }
 
         @Override

@@ -130,6 +130,16 @@ public record Uniform(double from, double to) implements Scaled {
         }
 
         @Override
+        public double skewness() {
+            return 0;
+        }
+
+        @Override
+        public double excessKurtosis() {
+            return -1.2;
+        }
+
+        @Override
         public Support support() {
             return new Support(0, 1);
         }
