@@ -1,24 +1,24 @@
 package dev.leadline.chart;
 
-import dev.leadline.density.Density;
+import dev.leadline.density.Portrait;
+import dev.leadline.density.Portrait.Bar;
+import dev.leadline.density.Support;
 import java.awt.AlphaComposite;
 import java.awt.BasicStroke;
+import java.awt.Graphics2D;
 import java.awt.RenderingHints;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 import java.awt.image.BufferedImage;
-import java.util.Optional;
+import java.util.stream.DoubleStream;
 import org.jfree.chart.ui.RectangleEdge;
 
 /// The curve of a density, from the small drawing in an input's row to a large one with an axis.
 ///
-/// Shown is the stretch between the .1 % and the 99.9 % quantile, cut where a tail is so long that the middle would
-/// shrink to a needle (six times the distance between the quartiles from the median), and drawn to the end of the
-/// support where that is near. The height is the probability that falls on a pixel's width, not the density at a
-/// point, so a peak without bound is as high as what it holds.
+/// The height is the probability that falls on a pixel's width, not the density at a point, so a peak without bound is
+/// as high as what it holds. A discrete density has bars.
 public final class DensitySketch {
-    private static final double TAIL = .001;
     private static final int WITH_AXIS = 90;
 
     /// A peak is cut at so many times the mean height.
@@ -29,7 +29,8 @@ public final class DensitySketch {
     /// @param name of the axis, drawn from a height of 90 pixels on
     /// @param scale pixels of the image for one of the picture
     /// @return premultiplied, with nothing behind the curve
-    public static BufferedImage image(Density density, String name, int width, int height, double scale, Theme theme) {
+    public static BufferedImage image(
+            Portrait portrait, String name, int width, int height, double scale, Theme theme) {
         var image = new BufferedImage(
                 (int) Math.round(width * scale), (int) Math.round(height * scale), BufferedImage.TYPE_INT_ARGB_PRE);
         var g = image.createGraphics();
@@ -42,25 +43,16 @@ public final class DensitySketch {
         var plot = axis
                 ? new Rectangle2D.Double(16, 8, width - 32, height - 52)
                 : new Rectangle2D.Double(1, 1, width - 2, height - 2.5);
-        var shown = shown(density);
-        shown.ifPresent(range -> {
-            var curve = curve(density, range, plot);
+        var shown = portrait.shown();
+        shown.ifPresent(over -> {
             g.clip(new Rectangle2D.Double(plot.getX(), 0, plot.getWidth(), plot.getMaxY() + 1));
-            var filled = new Path2D.Double(curve);
-            filled.lineTo(plot.getMaxX(), plot.getMaxY());
-            filled.lineTo(plot.getMinX(), plot.getMaxY());
-            filled.closePath();
             g.setColor(theme.reference());
-            g.setComposite(AlphaComposite.SrcOver.derive(.18f));
-            g.fill(filled);
-            g.setComposite(AlphaComposite.SrcOver);
-            g.setStroke(new BasicStroke(axis ? 1.6f : 1.2f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND));
-            g.draw(curve);
+            draw(g, portrait, over, plot, axis ? 1.6f : 1.2f);
             g.setClip(null);
         });
         if (axis) {
             var font = Typeface.sans(12);
-            var range = shown.orElse(new Range(0, 1));
+            var range = shown.map(over -> new Range(over.low(), over.high())).orElse(new Range(0, 1));
             var ticks = Ticks.even(range, Math.max(2, (int) (plot.getWidth() / 90)));
             Axes.even(range, ticks, font, theme).draw(g, plot.getMaxY(), plot, plot, RectangleEdge.BOTTOM, null);
             String label = ticks.factor() == 0 ? name : name + ", in " + Typeset.power(ticks.factor());
@@ -75,43 +67,35 @@ public final class DensitySketch {
         return image;
     }
 
-    /// The stretch that is drawn; empty where the density has no quantiles to go by.
-    static Optional<Range> shown(Density density) {
-        double median = density.quantile(.5);
-        double spread = density.quantile(.75) - density.quantile(.25);
-        double low = end(
-                density.quantile(TAIL), median - 6 * spread, density.support().low(), -spread);
-        double high = end(
-                density.upperQuantile(TAIL),
-                median + 6 * spread,
-                density.support().high(),
-                spread);
-        if (!(low < high && Double.isFinite(high - low))) {
-            return Optional.empty();
+    private static void draw(Graphics2D g, Portrait portrait, Support over, Rectangle2D plot, float width) {
+        double scale = plot.getWidth() / (over.high() - over.low());
+        if (portrait.isDiscrete()) {
+            var bars = portrait.bars();
+            double highest = bars.stream().mapToDouble(Bar::chance).max().orElse(1);
+            for (var bar : bars) {
+                double height = bar.chance() / highest * (plot.getHeight() - 1);
+                double thick = Math.max(bar.to() - bar.from() > 0 ? (bar.to() - bar.from()) * scale - .4 : 2, .6);
+                double x = plot.getMinX() + (bar.middle() - over.low()) * scale;
+                g.fill(new Rectangle2D.Double(x - thick / 2, plot.getMaxY() - height, thick, height));
+            }
+            return;
         }
-        double margin = .04 * (high - low);
-        return Optional.of(new Range(low - margin, high + margin));
+        var curve = curve(portrait, over, plot);
+        var filled = new Path2D.Double(curve);
+        filled.closePath();
+        g.setComposite(AlphaComposite.SrcOver.derive(.18f));
+        g.fill(filled);
+        g.setComposite(AlphaComposite.SrcOver);
+        g.setStroke(new BasicStroke(width, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND));
+        g.draw(curve);
     }
 
-    /// @param spread distance of the quartiles, negative for the lower end
-    private static double end(double quantile, double cut, double support, double spread) {
-        boolean beyond = spread < 0 ? !(quantile >= cut) : !(quantile <= cut);
-        double end = beyond ? cut : quantile;
-        return Math.abs(support - end) <= Math.abs(spread) ? support : end;
-    }
-
-    private static Path2D curve(Density density, Range range, Rectangle2D plot) {
+    private static Path2D curve(Portrait portrait, Support over, Rectangle2D plot) {
         int columns = Math.max(2, (int) plot.getWidth());
-        double step = range.length() / columns;
-        var heights = new double[columns];
-        double before = density.cdf(range.low());
-        double highest = 0;
-        for (int i = 0; i < columns; i++) {
-            double upTo = density.cdf(range.low() + (i + 1) * step);
-            heights[i] = Math.min(PEAK / columns, Math.max(0, upTo - before));
-            highest = Math.max(highest, heights[i]);
-            before = upTo;
-        }
+        var heights = portrait.curve(over, columns).stream()
+                .mapToDouble(bar -> Math.min(PEAK / columns, bar.chance()))
+                .toArray();
+        double highest = DoubleStream.of(heights).max().orElse(0);
         var path = new Path2D.Double();
         path.moveTo(plot.getMinX(), plot.getMaxY());
         for (int i = 0; i < columns; i++) {

@@ -3,46 +3,24 @@ package dev.leadline.chart;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.density.Portrait;
 import java.awt.image.BufferedImage;
 import java.util.List;
 import org.apache.commons.statistics.distribution.BetaDistribution;
 import org.apache.commons.statistics.distribution.ContinuousDistribution;
-import org.apache.commons.statistics.distribution.ExponentialDistribution;
 import org.apache.commons.statistics.distribution.GammaDistribution;
 import org.apache.commons.statistics.distribution.NormalDistribution;
-import org.apache.commons.statistics.distribution.TDistribution;
 import org.apache.commons.statistics.distribution.UniformContinuousDistribution;
 import org.junit.jupiter.api.Test;
 
 class DensitySketchTest {
-    private static Range shown(ContinuousDistribution of) {
-        return DensitySketch.shown(new Borrowed(of)).orElseThrow();
-    }
-
-    /// Handbook: the 99.9 % point of the standard normal is 3.0902.
-    @Test
-    void showsFromTheThousandthToTheLastThousandth() {
-        double margin = .04 * 2 * 3.0902;
-        assertEquals(-3.0902 - margin, shown(NormalDistribution.of(0, 1)).low(), 1e-3);
-        assertEquals(3.0902 + margin, shown(NormalDistribution.of(0, 1)).high(), 1e-3);
-    }
-
-    @Test
-    void showsTheEndOfASupportThatIsNear() {
-        assertEquals(2 - .04 * 3, shown(UniformContinuousDistribution.of(2, 5)).low(), 1e-12);
-        double span = shown(ExponentialDistribution.of(1)).length() / 1.08;
-        assertEquals(-.04 * span, shown(ExponentialDistribution.of(1)).low(), 1e-12);
-    }
-
-    /// Quartiles of the Student density with one degree of freedom are -1 and 1.
-    @Test
-    void longTailsDoNotShrinkTheMiddleToANeedle() {
-        assertEquals(24 * 1.08, shown(TDistribution.of(1)).length(), 1e-6);
+    private static Portrait portrait(ContinuousDistribution of) {
+        return Portrait.of(new Borrowed(of));
     }
 
     @Test
     void curveIsHighestWhereTheProbabilityIs() {
-        var image = DensitySketch.image(new Borrowed(NormalDistribution.of(7, 2)), "v", 72, 20, 1, Theme.LIGHT);
+        var image = DensitySketch.image(portrait(NormalDistribution.of(7, 2)), "v", 72, 20, 1, Theme.LIGHT);
         assertEquals(1, top(image, 36), 1.01);
         assertTrue(top(image, 20) > top(image, 36) + 3);
         assertTrue(top(image, 4) >= 17);
@@ -58,8 +36,8 @@ class DensitySketchTest {
                 NormalDistribution.of(1e12, 1e-3),
                 NormalDistribution.of(0, 1e300))) {
             for (var theme : List.of(Theme.LIGHT, Theme.DARK)) {
-                assertTrue(inked(DensitySketch.image(new Borrowed(of), "v, m/s", 72, 20, 2, theme)) > 100, "" + of);
-                assertTrue(inked(DensitySketch.image(new Borrowed(of), "v, m/s", 480, 240, 1, theme)) > 1000, "" + of);
+                assertTrue(inked(DensitySketch.image(portrait(of), "v, m/s", 72, 20, 2, theme)) > 100, "" + of);
+                assertTrue(inked(DensitySketch.image(portrait(of), "v, m/s", 480, 240, 1, theme)) > 1000, "" + of);
             }
         }
     }

@@ -1,5 +1,6 @@
 package dev.leadline.chart;
 
+import dev.leadline.density.Portrait;
 import dev.leadline.model.Project;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.study.LaneState;
@@ -103,7 +104,7 @@ final class ShowPictures {
             g.setColor(theme.getValue().ground());
             g.fillRect(0, 0, 1000, 560);
             for (int i = 0; i < densities.size(); i++) {
-                var density = new Borrowed(densities.get(i));
+                var density = Portrait.of(new Borrowed(densities.get(i)));
                 int x = 20 + i % 4 * 240;
                 int y = 20 + i / 4 * 270;
                 g.drawImage(DensitySketch.image(density, "v", 72, 20, 1, theme.getValue()), x, y, null);

@@ -1,11 +1,12 @@
 package dev.leadline.desktop.style;
 
-import java.math.BigDecimal;
-import java.math.MathContext;
+import dev.leadline.numeric.Significant;
 import java.util.Locale;
 
 /// Counts and durations in few characters.
 public final class Figures {
+    private static final int DIGITS = 6;
+
     private Figures() {}
 
     /// As `640`, `81,920`, `3.1 million`, `2.05 billion`.
@@ -34,14 +35,7 @@ public final class Figures {
 
     /// Six significant digits, as `0.0425`, `1180`, `3.2e-7`.
     public static String number(double value) {
-        if (!Double.isFinite(value)) {
-            return Double.isNaN(value) ? "not a number" : value > 0 ? "\u221e" : "\u2212\u221e";
-        }
-        var rounded = new BigDecimal(value).round(new MathContext(6)).stripTrailingZeros();
-        int power = rounded.precision() - rounded.scale() - 1;
-        return rounded.signum() == 0 || power >= -4 && power < 9
-                ? rounded.toPlainString()
-                : rounded.movePointLeft(power).toPlainString() + "e" + power;
+        return Significant.text(value, DIGITS);
     }
 
     private static String three(double value) {

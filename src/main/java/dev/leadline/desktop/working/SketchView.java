@@ -3,6 +3,7 @@ package dev.leadline.desktop.working;
 import dev.leadline.chart.DensitySketch;
 import dev.leadline.chart.Theme;
 import dev.leadline.density.Catalogue;
+import dev.leadline.density.Portrait;
 import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.style.Pixels;
 import dev.leadline.model.DensityDraft;
@@ -83,6 +84,6 @@ public final class SketchView extends Region {
         var density = Catalogue.family(d.kind())
                 .orElseThrow()
                 .of(d.member().orElseThrow().parameters());
-        return DensitySketch.image(density, "", WIDTH, HEIGHT, SCALE, theme);
+        return DensitySketch.image(Portrait.of(density), "", WIDTH, HEIGHT, SCALE, theme);
     }
 }
