@@ -2,23 +2,34 @@ package dev.leadline.project;
 
 import dev.leadline.density.Family;
 import dev.leadline.density.Parameter;
+import dev.leadline.density.Portrait;
+import dev.leadline.density.Support;
 import java.util.List;
 
 /// The families as the command `families` prints them: `{"families": [{"family", "parameters", "use"}]}`, parameters
-/// as a list for each way to enter a member.
+/// as a list for each way to enter a member; a member has its `portrait` beside them.
 public final class FamiliesJson {
+
+    /// Of a curve.
+    private static final int POINTS = 101;
 
     private FamiliesJson() {}
 
     public static String of(List<Family> families) {
-        return JsonWriter.pretty(Json.object()
-                .put(
-                        "families",
-                        Json.list(families.stream().map(FamiliesJson::family).toList()))
-                .build());
+        return whole(families.stream().map(f -> family(f).build()).toList());
     }
 
-    private static Json family(Family family) {
+    /// @param portrait of a member of the family
+    public static String of(Family family, Portrait portrait) {
+        return whole(List.of(family(family).put("portrait", portrait(portrait)).build()));
+    }
+
+    private static String whole(List<Json.Members> families) {
+        return JsonWriter.pretty(
+                Json.object().put("families", Json.list(families)).build());
+    }
+
+    private static Json.Builder family(Family family) {
         return Json.object()
                 .put("family", family.name())
                 .put(
@@ -28,8 +39,74 @@ public final class FamiliesJson {
                                         .map(FamiliesJson::parameter)
                                         .toList()))
                                 .toList()))
-                .put("use", family.use())
+                .put("use", family.use());
+    }
+
+    private static Json portrait(Portrait portrait) {
+        var json = Json.object()
+                .put("support", interval(portrait.support()))
+                .put("discrete", Json.of(portrait.isDiscrete()))
+                .put("mean", Json.orNull(portrait.mean()))
+                .put("sd", Json.orNull(portrait.sd()))
+                .put("variance", Json.orNull(portrait.variance()))
+                .put("skewness", Json.orNull(portrait.skewness()))
+                .put("excessKurtosis", Json.orNull(portrait.excessKurtosis()))
+                .put(
+                        "quantiles",
+                        Json.list(portrait.quantiles().stream()
+                                .map(FamiliesJson::quantile)
+                                .toList()))
+                .put("tails", words(portrait.tails()))
+                .put("warnings", words(portrait.warnings()));
+        portrait.shown().ifPresent(shown -> {
+            json.put("shown", interval(shown));
+            if (portrait.isDiscrete()) {
+                json.put(
+                        "bars",
+                        Json.list(
+                                portrait.bars().stream().map(FamiliesJson::bar).toList()));
+            } else {
+                json.put(
+                        "curve",
+                        Json.list(portrait.points(shown, POINTS).stream()
+                                .map(FamiliesJson::point)
+                                .toList()));
+            }
+        });
+        return json.build();
+    }
+
+    private static Json interval(Support support) {
+        return Json.list(List.of(Json.of(support.low()), Json.of(support.high())));
+    }
+
+    private static Json quantile(Portrait.Quantile quantile) {
+        return Json.object()
+                .put("below", Json.of(quantile.below()))
+                .put("above", Json.of(quantile.above()))
+                .put("value", Json.of(quantile.value()))
                 .build();
+    }
+
+    private static Json bar(Portrait.Bar bar) {
+        return Json.object()
+                .put("from", Json.of(bar.from()))
+                .put("to", Json.of(bar.to()))
+                .put("chance", Json.of(bar.chance()))
+                .build();
+    }
+
+    private static Json point(Portrait.Point point) {
+        return Json.object()
+                .put("x", Json.of(point.x()))
+                .put("pdf", Json.of(point.pdf()))
+                .put("cdf", Json.of(point.below()))
+                .put("survival", Json.of(point.above()))
+                .build();
+    }
+
+    private static Json words(List<String> words) {
+        return Json.list(words.stream().map(Json::of).toList());
     }
 
     private static Json parameter(Parameter parameter) {

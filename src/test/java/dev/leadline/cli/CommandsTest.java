@@ -424,6 +424,47 @@ class CommandsTest {
         assertTrue(leadline("look", project).out().contains("0.25"));
     }
 
+    /// The Gumbel density has mean `location + .5772 scale`, standard deviation `1.2825 scale`, skewness 1.1395 and
+    /// excess kurtosis 2.4.
+    @Test
+    void portraysAMemberOfAFamily() {
+        var portrait = leadline("families", "gumbel", "location=24.5", "scale=2.6", "--json")
+                .json()
+                .required("families")
+                .get(0)
+                .required("portrait");
+        assertEquals(24.5 + .5772157 * 2.6, portrait.required("mean").asDouble(), 1e-6);
+        assertEquals(1.2825498 * 2.6, portrait.required("sd").asDouble(), 1e-6);
+        assertEquals(1.1395471, portrait.required("skewness").asDouble(), 1e-6);
+        assertEquals(2.4, portrait.required("excessKurtosis").asDouble(), 1e-9);
+        assertEquals(11, portrait.required("quantiles").size());
+        assertEquals(101, portrait.required("curve").size());
+        String text = leadline("families", "student", "dof=1.33").out();
+        assertTrue(text.contains("Upper tail falls like a power: moments exist below order 1.33."), text);
+        assertTrue(text.contains("It has no variance: the error of a mean shrinks slower than 1/√n."), text);
+        assertTrue(leadline("families", "gumbel").out().contains("entered by location, scale"));
+    }
+
+    @Test
+    void refusesWhatIsNoMember() {
+        for (var words : List.of(
+                List.of("gumble", "location=1", "Was \"gumbel\" meant?"),
+                List.of("gaussian", "mean=1", "Was \"normal\" meant?"),
+                List.of("gumbel", "scale=0", "Location is missing"),
+                List.of("exponential", "mean=-1", "Mean is -1 but must be greater than 0"),
+                List.of("exponential", "mean=1,5", "Mean is \"1,5\" but must be a number"),
+                List.of("exponential", "1.5", "1.5\" is no parameter"))) {
+            var outcome = leadline("families", words.get(0), words.get(1));
+            assertEquals(2, outcome.exitCode());
+            assertTrue(outcome.err().contains(words.getLast()), outcome.err());
+        }
+        var twice = leadline("families", "exponential", "mean=1", "mean=2", "--json");
+        assertEquals(2, twice.exitCode());
+        assertEquals(
+                "mean is given twice",
+                twice.json().required("problems").get(0).required("primary").asString());
+    }
+
     @Test
     void listsFamilies() {
         var families = leadline("families", "--json").json().required("families");
