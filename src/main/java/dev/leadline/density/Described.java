@@ -13,9 +13,12 @@ import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 
 /// A family, described by its name, its use and its entries. Immutable.
-record Described(String name, String use, List<Entry> ways) implements Family {
+///
+/// @param quantiles the entry by two quantiles, where there is one
+record Described(String name, String use, List<Entry> ways, Optional<ByQuantiles> quantiles) implements Family {
 
     /// Parameters by other names that are in use; the first of those that the family has.
     private static final Map<String, List<String>> ALSO_CALLED = Map.ofEntries(
@@ -42,17 +45,26 @@ record Described(String name, String use, List<Entry> ways) implements Family {
             "rate", "The mean time, or the scale, is 1 over the rate.");
 
     Described(String name, String use, Entry... ways) {
-        this(name, use, List.of(ways));
+        this(name, use, List.of(ways), Optional.empty());
+    }
+
+    Described enteredBy(ByQuantiles newQuantiles) {
+        return new Described(name, use, ways, Optional.of(newQuantiles));
     }
 
     @Override
     public List<List<Parameter>> entries() {
-        return ways.stream().map(Entry::parameters).toList();
+        return Stream.concat(
+                        ways.stream().map(Entry::parameters), quantiles.stream().map(ByQuantiles::parameters))
+                .toList();
     }
 
     @Override
     public Density of(Map<String, Double> parameters) {
         refuseUnknown(parameters.keySet());
+        if (parameters.keySet().stream().anyMatch(ByQuantiles::isName)) {
+            return refuseOverflow(quantiles.orElseThrow().of(beside(parameters)));
+        }
         var entry = entryOf(parameters.keySet());
         refuseMissing(entry, parameters);
         double[] values = entry.rules().stream()
@@ -64,11 +76,26 @@ record Described(String name, String use, List<Entry> ways) implements Family {
         return refuseOverflow(entry.maker().apply(values));
     }
 
+    /// @throws Refusal where a parameter does not go together with quantiles
+    private Map<String, Double> beside(Map<String, Double> parameters) {
+        var rules = quantiles.orElseThrow().given().stream().map(Rule::name).toList();
+        var stray = parameters.keySet().stream()
+                .filter(name -> !ByQuantiles.isName(name) && !rules.contains(name))
+                .toList();
+        if (!stray.isEmpty()) {
+            throw new Refusal(Problem.of(and(new TreeSet<>(parameters.keySet())) + " do not go together in one density")
+                    .because("%s is entered by %s.".formatted(name, choices()))
+                    .tryThis("Leave out those of the other way."));
+        }
+        return parameters;
+    }
+
     private void refuseUnknown(Set<String> given) {
         var known = ways.stream().flatMap(way -> way.names().stream()).collect(Collectors.toSet());
         var problems = new ArrayList<Problem>();
         for (String name : given) {
-            if (!known.contains(name)) {
+            boolean quantile = quantiles.isPresent() && ByQuantiles.isName(name);
+            if (!known.contains(name) && !quantile) {
                 var problem = Problem.of("%s has no parameter %s".formatted(this.name, name))
                         .because("It is entered by " + choices() + ".")
                         .at(Place.of(name));
@@ -124,7 +151,10 @@ record Described(String name, String use, List<Entry> ways) implements Family {
     }
 
     private String choices() {
-        return ways.stream().map(way -> and(new LinkedHashSet<>(way.names()))).collect(Collectors.joining(", or by "));
+        return entries().stream()
+                .map(entry ->
+                        and(entry.stream().map(Parameter::name).collect(Collectors.toCollection(LinkedHashSet::new))))
+                .collect(Collectors.joining(", or by "));
     }
 
     private static String and(Set<String> names) {

@@ -20,8 +20,9 @@ public record Gamma(double shape, double scale) implements Scaled {
                     "Beyond these limits its values are too far apart or too close for numbers of 16 digits."),
             positive("scale", "mean divided by shape", "The gamma density divides by its scale."));
 
-    static final Family FAMILY =
-            new Described("gamma", "times until several events, rain, amounts of loss; a rate seen in counts", ENTRY);
+    static final Family FAMILY = new Described(
+                    "gamma", "times until several events, rain, amounts of loss; a rate seen in counts", ENTRY)
+            .enteredBy(ByQuantiles.ofPositiveShapeAndScale(1e-3, 1e6, v -> new Gamma(v[0], v[1])));
 
     public Gamma {
         ENTRY.check(shape, scale);

@@ -20,8 +20,9 @@ public record Gumbel(double location, double scale) implements Scaled {
                             "The Gumbel density divides by its scale.")
                     .tryThis("For a fixed value use a constant."));
 
-    static final Family FAMILY =
-            new Described("gumbel", "largest value of a period: gusts, waves, floods, loads", ENTRY);
+    static final Family FAMILY = new Described(
+                    "gumbel", "largest value of a period: gusts, waves, floods, loads", ENTRY)
+            .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Gumbel(v[0], v[1])));
 
     public Gumbel {
         ENTRY.check(location, scale);

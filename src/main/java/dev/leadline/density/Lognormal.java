@@ -6,6 +6,7 @@ import static dev.leadline.density.Rule.positive;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
 import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
 import java.util.List;
 
 /// The lognormal density: the logarithm is normal, with mean `mu` and standard deviation `sigma`.
@@ -36,10 +37,11 @@ public record Lognormal(double mu, double sigma) implements Scaled {
             .and(v -> problems(v[0], v[1]));
 
     static final Family FAMILY = new Described(
-            "lognormal",
-            "positive values that vary by factors: costs, permeabilities, concentrations, incomes",
-            ENTRY,
-            BY_MEAN);
+                    "lognormal",
+                    "positive values that vary by factors: costs, permeabilities, concentrations, incomes",
+                    ENTRY,
+                    BY_MEAN)
+            .enteredBy(new ByQuantiles(List.of(), Lognormal::ofQuantiles));
 
     public Lognormal {
         ENTRY.check(mu, sigma);
@@ -50,6 +52,16 @@ public record Lognormal(double mu, double sigma) implements Scaled {
         BY_MEAN.check(mean, sd);
         double sigma = sigma(sd / mean);
         return new Lognormal(Log.log(mean) - 0.5 * sigma * sigma, sigma);
+    }
+
+    private static Lognormal ofQuantiles(double[] given, ByQuantiles.Quantile low, ByQuantiles.Quantile high) {
+        if (!(low.x() > 0)) {
+            throw new Refusal(
+                    Rule.problem(low.name(), low.x(), "greater than 0", "A lognormal value is positive.", ""));
+        }
+        var normal = new Normal.Standard();
+        double sigma = (Log.log(high.x()) - Log.log(low.x())) / (normal.quantile(high.p()) - normal.quantile(low.p()));
+        return new Lognormal(Log.log(low.x()) - sigma * normal.quantile(low.p()), sigma);
     }
 
     /// `sqrt(log(1 + cv^2))`, without overflow of the square.

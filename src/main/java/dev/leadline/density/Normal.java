@@ -14,7 +14,8 @@ public record Normal(double mean, double sd) implements Scaled {
                     .tryThis("For a fixed value use a constant."));
 
     static final Family FAMILY = new Described(
-            "normal", "sums of many small effects; measurement errors; a value with its uncertainty", ENTRY);
+                    "normal", "sums of many small effects; measurement errors; a value with its uncertainty", ENTRY)
+            .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Normal(v[0], v[1])));
 
     public Normal {
         ENTRY.check(mean, sd);

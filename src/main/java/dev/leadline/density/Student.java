@@ -24,7 +24,11 @@ public record Student(double dof, double location, double scale) implements Scal
                     .or(1));
 
     static final Family FAMILY = new Described(
-            "student", "a mean known from few readings; a certificate with degrees of freedom; heavy tails", ENTRY);
+                    "student",
+                    "a mean known from few readings; a certificate with degrees of freedom; heavy tails",
+                    ENTRY)
+            .enteredBy(ByQuantiles.ofLocationAndScale(
+                    v -> new Student(v[0], v[1], v[2]), ENTRY.rules().getFirst()));
 
     public Student {
         ENTRY.check(dof, location, scale);

@@ -15,8 +15,9 @@ public record Uniform(double from, double to) implements Scaled {
                     v -> new Uniform(v[0], v[1]), finite("from", "least value"), finite("to", "largest value"))
             .and(v -> rising("from", v[0], "to", v[1]));
 
-    static final Family FAMILY =
-            new Described("uniform", "only the limits are known; rounding; a direction or phase", ENTRY);
+    static final Family FAMILY = new Described(
+                    "uniform", "only the limits are known; rounding; a direction or phase", ENTRY)
+            .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Uniform(v[0], v[0] + v[1])));
 
     public Uniform {
         ENTRY.check(from, to);

@@ -21,7 +21,8 @@ public record Weibull(double shape, double scale, double from) implements Scaled
                     "The Weibull density divides by its scale."),
             finite("from", "least value").or(0));
 
-    static final Family FAMILY = new Described("weibull", "lifetimes, strengths, wind speeds", ENTRY);
+    static final Family FAMILY = new Described("weibull", "lifetimes, strengths, wind speeds", ENTRY)
+            .enteredBy(ByQuantiles.ofShapeAndScale(0.01, 1e6, v -> new Weibull(v[0], v[1], v[2])));
 
     public Weibull {
         ENTRY.check(shape, scale, from);

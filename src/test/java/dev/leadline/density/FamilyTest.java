@@ -80,7 +80,9 @@ class FamilyTest {
     @Test
     void namesTheNearestParameter() {
         var problem = problems("normal", "mean 0 sdd 1").getFirst();
-        assertEquals("It is entered by mean and sd.", problem.detail().orElseThrow());
+        assertEquals(
+                "It is entered by mean and sd, or by q5 and q95.",
+                problem.detail().orElseThrow());
         assertEquals("Did you mean sd?", problem.hint().orElseThrow());
         assertEquals("sdd", problem.place().path());
     }
@@ -89,7 +91,7 @@ class FamilyTest {
     void namesTheWaysToEnter() {
         var mixed = problems("lognormal", "mu 0 mean 1").getFirst();
         assertEquals(
-                "lognormal is entered by mu and sigma, or by mean and sd.",
+                "lognormal is entered by mu and sigma, or by mean and sd, or by q5 and q95.",
                 mixed.detail().orElseThrow());
         assertEquals("", mixed.place().path());
         var missing = problems("lognormal", "mean 3").getFirst();
