@@ -8,36 +8,41 @@ import java.util.HexFormat;
 
 /// The quantile function of a shape, or its link, as polynomials of degree 5. Immutable.
 ///
-/// With `p = min(u, 1 - u)`, the last six bits of the exponent of `p` and the first `bits` bits of its mantissa name a
-/// cell; the bits behind them are the argument of the cell's polynomial. Lower and upper tail have cells of their own,
-/// down to `p = 2^-53`; one more cell holds the median; the cells of exponents that are not drawn stay empty, so that
-/// the bits of `p` are the address as they are. A table without cells is legal: then every draw costs a quantile.
+/// With `p = min(u, 1 - u)`, the exponent of `p` and the first `bits` bits of its mantissa name a cell; the bits behind
+/// them are the argument of the cell's polynomial. Lower and upper tail have cells of their own, down to `p = 2^-53`;
+/// one more cell of each holds the median. A cell that one polynomial does not fit, at a kink or a jump of the
+/// quantile, has [parts][Parts]. A table without cells is legal: then every draw costs a quantile.
 ///
-/// @param cells the coefficients, lowest degree first, where [#index] says
-record Table(Density shape, Link link, int bits, double[] cells, double uError) implements Curve {
+/// @param cells the coefficients, lowest degree first, where [#index] says; the last is `NaN` in a cell that has parts,
+///     and the first two say which: from, and up to, but not with
+/// @param parts empty where every cell is one polynomial
+record Table(Density shape, Link link, int bits, double[] cells, Parts parts, double uError) implements Curve {
     /// Octaves below 1/2, down to `2^-53`, the smallest probability drawn; octave 52 has the median alone.
     static final int OCTAVES = 52;
 
+    /// Coefficients of a cell.
+    static final int STRIDE = 6;
+
     private static final double SMALLEST = 0x1p-53;
-
-    /// Last six bits of the biased exponent of the smallest probability drawn.
-    private static final int FIRST = (Double.MAX_EXPONENT - 53) & 63;
-
-    /// A power of two above the number of coefficients: it costs less to multiply by.
-    private static final int STRIDE = 8;
-
     private static final int MANTISSA = 52;
     private static final long ONE = 0x3ff0_0000_0000_0000L;
 
+    /// Exponents of a double, and one more bit above them for the sign.
+    private static final int EXPONENTS = 1 << 11;
+
     static double[] emptyCells(int bits) {
-        return new double[index(bits, 2, -FIRST, 0)];
+        return new double[2 * cellsOfTail(bits) * STRIDE];
+    }
+
+    private static int cellsOfTail(int bits) {
+        return (OCTAVES << bits) + 1;
     }
 
     /// Where the coefficients of a cell begin.
     ///
     /// @param tail 0 lower, 1 upper
     static int index(int bits, int tail, int octave, int cell) {
-        return (((64 * tail + FIRST + octave) << bits) + cell) * STRIDE;
+        return (cellsOfTail(bits) * tail + (octave << bits) + cell) * STRIDE;
     }
 
     @Override
@@ -63,8 +68,17 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
             return;
         }
         int shift = MANTISSA - bits;
+        int first = (Double.MAX_EXPONENT - 53) << bits;
+        int upper = cellsOfTail(bits) - (EXPONENTS << bits);
+        if (parts.isEmpty()) {
+            for (int i = 0; i < n; i++) {
+                x[i] = Math.fma(scale, polynomial(c, shift, first, upper, x[i]), location);
+            }
+            return;
+        }
         for (int i = 0; i < n; i++) {
-            x[i] = Math.fma(scale, polynomial(c, shift, x[i]), location);
+            double y = polynomial(c, shift, first, upper, x[i]);
+            x[i] = Math.fma(scale, Double.isNaN(y) ? part(shift, first, upper, x[i]) : y, location);
         }
     }
 
@@ -79,16 +93,31 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
         }
     }
 
-    private static double polynomial(double[] c, int shift, double tail) {
+    private static double polynomial(double[] c, int shift, int first, int upper, double tail) {
         long address = Double.doubleToRawLongBits(tail);
-        int cells = 64 << (MANTISSA - shift);
-        int k = (((int) (address >>> shift) & (cells - 1)) | ((int) (address >> 63) & cells)) * STRIDE;
-        double t = Double.longBitsToDouble((address & ((1L << shift) - 1)) | ONE) - 1;
+        int k = index(address, shift, first, upper);
+        double t = argument(address, shift);
         double y = Math.fma(c[k + 5], t, c[k + 4]);
         y = Math.fma(y, t, c[k + 3]);
         y = Math.fma(y, t, c[k + 2]);
         y = Math.fma(y, t, c[k + 1]);
         return Math.fma(y, t, c[k]);
+    }
+
+    /// @param first exponent and leading bits of the smallest probability
+    /// @param upper from the address of a lower tail to the cell of the upper one, less the sign that is part of it
+    private static int index(long address, int shift, int first, int upper) {
+        return ((int) (address >>> shift) - first + ((int) (address >> 63) & upper)) * STRIDE;
+    }
+
+    private static double argument(long address, int shift) {
+        return Double.longBitsToDouble((address & ((1L << shift) - 1)) | ONE) - 1;
+    }
+
+    private double part(int shift, int first, int upper, double tail) {
+        long address = Double.doubleToRawLongBits(tail);
+        int k = index(address, shift, first, upper);
+        return parts.at((int) cells[k], (int) cells[k + 1], argument(address, shift));
     }
 
     /// From the quantile function itself, where there are no cells.
@@ -103,9 +132,9 @@ record Table(Density shape, Link link, int bits, double[] cells, double uError) 
 
     @Override
     public String hash() {
-        var bytes = ByteBuffer.allocate(8 * cells.length + 8);
+        var bytes = ByteBuffer.allocate(8 + 8 * (cells.length + parts.size() * (1 + STRIDE)));
         bytes.putInt(link.ordinal()).putInt(bits);
-        bytes.asDoubleBuffer().put(cells);
+        bytes.asDoubleBuffer().put(cells).put(parts.from()).put(parts.coefficients());
         try {
             var digest = MessageDigest.getInstance("SHA-256");
             digest.update(shape.toString().getBytes(StandardCharsets.UTF_8));

@@ -1,5 +1,8 @@
 package dev.leadline.density;
 
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
 import java.util.Optional;
 
 /// Builds the table of a shape, and measures it.
@@ -7,6 +10,11 @@ import java.util.Optional;
 /// A cell's polynomial passes through the quantile at both ends of the cell and at the four Chebyshev-Lobatto points
 /// between. It is anchored at the quantile of its first end, and its slope is trimmed by rounding errors until its last
 /// value does not pass the quantile of the other end: so the table is monotone across cells.
+///
+/// A cell that misses is halved, and so on, until every part of it is hit. At a jump of the quantile that ends where
+/// the
+/// part is narrower than the error that is allowed: any value between those of its ends is right there, and it gets the
+/// value of its first end, so that no draw falls into the gap.
 ///
 /// What is measured is how far the probability lies from what the drawn value, or a neighbour of it among the doubles,
 /// stands for: near 1, say, a steep distribution cannot be hit more closely.
@@ -20,6 +28,19 @@ final class TableFit {
     /// A few times the distance between neighbouring u.
     private static final double FEW_ULP = 1e-15;
 
+    private static final int LEAST_BITS = 5;
+    private static final int MOST_BITS = 8;
+
+    /// The probability of a draw in a cell of parts, where a table of more bits is no better; such a draw costs as much
+    /// as ten others.
+    private static final double SELDOM = 0.02;
+
+    /// A cell that has more parts than this is not spoilt by a few kinks or jumps, but by noise.
+    private static final int PARTS_OF_CELL = 400;
+
+    /// As much memory as twice the cells of the smallest table.
+    private static final int PARTS = 6_000;
+
     /// `(1 - cos(k pi / 5)) / 2`.
     private static final double[] LOBATTO = {
         0, 0.09549150281252627, 0.3454915028125263, 0.6545084971874737, 0.9045084971874737, 1
@@ -28,10 +49,16 @@ final class TableFit {
     /// Where a cell is measured: its ends, and between the points it passes through.
     private static final double[] MEASURED = {0, 0.03, 0.22, 0.5, 0.78, 0.97, 1};
 
+    /// From the coefficients of a polynomial of degree 4 to those in Bernstein's form: `C(i, j) / C(4, j)`.
+    private static final double[][] BERNSTEIN = {
+        {1}, {1, 1 / 4.0}, {1, 2 / 4.0, 1 / 6.0}, {1, 3 / 4.0, 3 / 6.0, 1 / 4.0}, {1, 1, 1, 1, 1}
+    };
+
     private final Density shape;
     private final Link link;
     private final int bits;
     private final double[] cells;
+    private final List<double[]> parts = new ArrayList<>();
     private double worst;
 
     private TableFit(Density shape, Link link, int bits) {
@@ -42,46 +69,91 @@ final class TableFit {
     }
 
     /// The smallest and fastest table that is accurate; where none is, one that has no cells.
+    ///
+    /// A shape that has a link is smooth through it: what its plain table misses, it misses by rounding, and
+    /// parts would only hide that.
     static Table of(Density shape) {
-        for (int bits = 5; bits <= 8; bits++) {
-            var plain = new TableFit(shape, Link.NONE, bits).table();
+        double most = shape instanceof Linked ? 0 : SELDOM;
+        for (int bits = LEAST_BITS; bits <= MOST_BITS; bits++) {
+            var plain = new TableFit(shape, Link.NONE, bits).table(most);
             if (plain.isPresent()) {
                 return plain.get();
             }
-            if (bits > 5 && shape instanceof Linked linked) {
-                for (int linkedBits = 5; linkedBits <= 8; linkedBits++) {
-                    var table = new TableFit(shape, linked.link(), linkedBits).table();
+            if (bits > LEAST_BITS && shape instanceof Linked linked) {
+                for (int linkedBits = LEAST_BITS; linkedBits <= MOST_BITS; linkedBits++) {
+                    var table = new TableFit(shape, linked.link(), linkedBits).table(most);
                     if (table.isPresent()) {
                         return table.get();
                     }
                 }
             }
         }
-        var slow = new Table(shape, Link.NONE, 0, new double[0], 0);
-        return new Table(shape, Link.NONE, 0, slow.cells(), worst(shape, slow));
+        return new TableFit(shape, Link.NONE, MOST_BITS).table(1).orElseGet(() -> slow(shape));
     }
 
-    /// Empty as soon as an octave is not accurate enough.
-    private Optional<Table> table() {
-        var table = new Table(shape, link, bits, cells, 0);
+    private static Table slow(Density shape) {
+        var slow = new Table(shape, Link.NONE, 0, new double[0], Parts.NONE, 0);
+        return new Table(shape, Link.NONE, 0, slow.cells(), Parts.NONE, worst(shape, slow));
+    }
+
+    /// Empty as soon as cells of more probability than `most` are missed, or a cell cannot be mended by parts.
+    private Optional<Table> table(double most) {
         fillMedian();
+        var whole = new Table(shape, link, bits, cells, Parts.NONE, 0);
+        var missed = new ArrayList<Cell>();
+        double mass = 0;
         for (int octave = Table.OCTAVES - 1; octave >= 0; octave--) {
             for (int tail = 0; tail < 2; tail++) {
-                if (!fit(octave, tail) || !measure(table, octave, tail)) {
-                    return Optional.empty();
+                for (var cell : fit(whole, octave, tail)) {
+                    missed.add(cell);
+                    mass += cell.width(bits);
+                    if (mass > most) {
+                        return Optional.empty();
+                    }
                 }
             }
         }
-        return Optional.of(new Table(shape, link, bits, cells, worst));
+        for (var cell : missed) {
+            if (!split(cell)) {
+                return Optional.empty();
+            }
+        }
+        return Optional.of(new Table(shape, link, bits, cells, packed(), worst));
     }
 
-    private int index(int octave, int cell, int tail) {
-        return Table.index(bits, tail, octave, cell);
+    private Parts packed() {
+        if (parts.isEmpty()) {
+            return Parts.NONE;
+        }
+        var from = new double[parts.size()];
+        var coefficients = new double[parts.size() * Table.STRIDE];
+        for (int i = 0; i < from.length; i++) {
+            from[i] = parts.get(i)[Table.STRIDE];
+            System.arraycopy(parts.get(i), 0, coefficients, i * Table.STRIDE, Table.STRIDE);
+        }
+        return new Parts(from, coefficients);
+    }
+
+    /// @param octave counted from the smallest probability
+    private record Cell(int octave, int cell, int tail) {
+        /// The probability at which the octave begins.
+        double base() {
+            return StrictMath.scalb(1.0, octave - 53);
+        }
+
+        /// In probability.
+        double width(int bits) {
+            return StrictMath.scalb(1.0, octave - 53 - bits);
+        }
+
+        int index(int bits) {
+            return Table.index(bits, tail, octave, cell);
+        }
     }
 
     private void fillMedian() {
         for (int tail = 0; tail < 2; tail++) {
-            cells[index(Table.OCTAVES, 0, tail)] = value(0.5, tail);
+            cells[Table.index(bits, tail, Table.OCTAVES, 0)] = value(0.5, tail);
         }
     }
 
@@ -94,28 +166,146 @@ final class TableFit {
         return tail == 0 ? linked.linked(p) : linked.upperLinked(p);
     }
 
-    private boolean fit(int octave, int tail) {
-        double width = StrictMath.scalb(1.0, -bits);
-        double base = StrictMath.scalb(1.0, octave - 53);
-        var t = new double[LOBATTO.length];
-        var y = new double[LOBATTO.length];
-        double atEnd = value(base, tail);
-        for (int cell = 0; cell < 1 << bits; cell++) {
-            for (int j = 0; j < t.length; j++) {
-                double p = base * (1 + cell * width + LOBATTO[j] * width);
-                t[j] = p / base - 1 - cell * width;
-                y[j] = j == 0 ? atEnd : value(p, tail);
-            }
+    /// Fits the cells of an octave.
+    ///
+    /// @return those that were missed
+    private List<Cell> fit(Table table, int octave, int tail) {
+        var missed = new ArrayList<Cell>();
+        double atEnd = value(StrictMath.scalb(1.0, octave - 53), tail);
+        for (int number = 0; number < 1 << bits; number++) {
+            var cell = new Cell(octave, number, tail);
+            var t = new double[LOBATTO.length];
+            var y = new double[LOBATTO.length];
+            points(cell, 0, StrictMath.scalb(1.0, -bits), atEnd, t, y);
             atEnd = y[t.length - 1];
-            if (!put(t, y, index(octave, cell, tail), tail)) {
+            var c = through(t, y, tail);
+            if (c.isPresent()) {
+                System.arraycopy(c.get(), 0, cells, cell.index(bits), Table.STRIDE);
+            } else {
+                Arrays.fill(cells, cell.index(bits), cell.index(bits) + Table.STRIDE, Double.NaN);
+            }
+        }
+        double[] errors = errors(shape, table, octave, bits, tail);
+        for (int number = 0; number < errors.length; number++) {
+            if (errors[number] <= U_ERROR) {
+                worst = Math.max(worst, errors[number]);
+            } else {
+                missed.add(new Cell(octave, number, tail));
+            }
+        }
+        return missed;
+    }
+
+    /// The points that a part of a cell passes through.
+    ///
+    /// @param from where it begins, in units of the octave's first probability
+    /// @param y what is tabulated there; the first is `first`, known from the part before
+    private void points(Cell cell, double from, double width, double first, double[] t, double[] y) {
+        double before = StrictMath.scalb(cell.cell(), -bits) + from;
+        for (int j = 0; j < t.length; j++) {
+            double p = cell.base() * (1 + before + LOBATTO[j] * width);
+            t[j] = p / cell.base() - 1 - before;
+            y[j] = j == 0 ? first : value(p, cell.tail());
+        }
+    }
+
+    /// Halves a cell until all of its parts are hit. False where too many would be needed.
+    private boolean split(Cell cell) {
+        int first = parts.size();
+        double width = StrictMath.scalb(1.0, -bits);
+        double p = cell.base() * (1 + StrictMath.scalb(cell.cell(), -bits));
+        if (!halve(cell, 0, width, value(p, cell.tail()), first)) {
+            return false;
+        }
+        int k = cell.index(bits);
+        Arrays.fill(cells, k, k + Table.STRIDE, Double.NaN);
+        cells[k] = first;
+        cells[k + 1] = parts.size();
+        return true;
+    }
+
+    private boolean halve(Cell cell, double from, double width, double first, int firstPart) {
+        double half = 0.5 * width;
+        for (int side = 0; side < 2; side++) {
+            double begin = from + side * half;
+            double p = cell.base() * (1 + StrictMath.scalb(cell.cell(), -bits) + begin);
+            double value = side == 0 ? first : value(p, cell.tail());
+            boolean isWide = cell.base() * half > 0.5 * Math.min(U_ERROR, RELATIVE * p);
+            if (!isHit(cell, begin, half, value, isWide) && !(isWide && halve(cell, begin, half, value, firstPart))) {
+                return false;
+            }
+            if (parts.size() - firstPart > PARTS_OF_CELL || parts.size() > PARTS) {
                 return false;
             }
         }
         return true;
     }
 
-    /// Newton's divided differences, expanded; then the trim.
-    private boolean put(double[] t, double[] y, int k, int tail) {
+    /// Adds a part, if one polynomial, or at a jump one value, is right for all of it.
+    private boolean isHit(Cell cell, double from, double width, double first, boolean isWide) {
+        var t = new double[LOBATTO.length];
+        var y = new double[LOBATTO.length];
+        points(cell, from, width, first, t, y);
+        var c = through(t, y, cell.tail()).filter(c_ -> isMonotone(c_, width, cell.tail()));
+        double error = c.isPresent() ? error(cell, from, width, c.get()) : Double.POSITIVE_INFINITY;
+        if (!(error <= U_ERROR) && !isWide) {
+            c = Optional.of(new double[] {first, 0, 0, 0, 0, 0});
+            error = error(cell, from, width, c.get());
+        }
+        if (!(error <= U_ERROR)) {
+            return false;
+        }
+        worst = Math.max(worst, error);
+        var part = Arrays.copyOf(c.get(), Table.STRIDE + 1);
+        part[Table.STRIDE] = from;
+        parts.add(part);
+        return true;
+    }
+
+    /// Whether the Bernstein coefficients of the slope have one sign, which is enough.
+    private static boolean isMonotone(double[] c, double width, int tail) {
+        var slope = new double[5];
+        double power = width;
+        for (int j = 0; j < 5; j++) {
+            slope[j] = (j + 1) * c[j + 1] * power;
+            power *= width;
+        }
+        double sign = tail == 0 ? 1 : -1;
+        for (int i = 0; i < 5; i++) {
+            double sum = 0;
+            for (int j = 0; j <= i; j++) {
+                sum += BERNSTEIN[i][j] * slope[j];
+            }
+            if (!(sign * sum >= 0)) {
+                return false;
+            }
+        }
+        return true;
+    }
+
+    private double error(Cell cell, double from, double width, double[] c) {
+        int n = MEASURED.length;
+        var x = new double[n];
+        var p = new double[n];
+        double before = StrictMath.scalb(cell.cell(), -bits) + from;
+        for (int i = 0; i < n; i++) {
+            p[i] = cell.base() * (1 + before + MEASURED[i] * width);
+            x[i] = at(c, p[i] / cell.base() - 1 - before);
+        }
+        link.invert(x, n);
+        double largest = 0;
+        for (int i = 0; i < n; i++) {
+            double error = error(shape, x[i], p[i], cell.tail());
+            if (!(error <= RELATIVE * p[i])) {
+                return Double.POSITIVE_INFINITY;
+            }
+            largest = Math.max(largest, error);
+        }
+        return largest;
+    }
+
+    /// Newton's divided differences, expanded; then the trim, if that succeeds.
+    private static Optional<double[]> through(double[] t, double[] y, int tail) {
         int n = t.length;
         var difference = y.clone();
         for (int order = 1; order < n; order++) {
@@ -137,12 +327,11 @@ final class TableFit {
         for (int trial = 0; trial < 8; trial++) {
             double excess = sign * (at(c, last) - end);
             if (excess <= 0) {
-                System.arraycopy(c, 0, cells, k, n);
-                return true;
+                return Optional.of(c);
             }
             c[1] -= sign * Math.max(excess, Math.ulp(end)) / last;
         }
-        return false;
+        return Optional.empty();
     }
 
     private static double at(double[] c, double t) {
@@ -153,25 +342,23 @@ final class TableFit {
         return Math.fma(y, t, c[0]);
     }
 
-    private boolean measure(Table table, int octave, int tail) {
-        double octaveWorst = worst(shape, table, octave, bits, tail);
-        worst = Math.max(worst, octaveWorst);
-        return octaveWorst <= U_ERROR;
-    }
-
     /// Largest error of a curve that has no cells, measured where those of a table would be.
     static double worst(Density shape, Curve curve) {
         double worst = 0;
         for (int octave = 0; octave < Table.OCTAVES; octave++) {
             for (int tail = 0; tail < 2; tail++) {
-                worst = Math.max(worst, worst(shape, curve, octave, 2, tail));
+                worst = Math.max(
+                        worst,
+                        Arrays.stream(errors(shape, curve, octave, 2, tail))
+                                .max()
+                                .orElseThrow());
             }
         }
         return worst;
     }
 
-    /// Infinite where an error is too large for its tail.
-    private static double worst(Density shape, Curve curve, int octave, int bits, int tail) {
+    /// Largest error of each cell; infinite where an error is too large for its tail.
+    private static double[] errors(Density shape, Curve curve, int octave, int bits, int tail) {
         double base = StrictMath.scalb(1.0, octave - 53);
         int n = MEASURED.length << bits;
         var u = new double[n];
@@ -182,16 +369,15 @@ final class TableFit {
         }
         var x = new double[n];
         curve.fill(u, x, n, 0, 1);
-        double worst = 0;
+        var largest = new double[1 << bits];
         for (int i = 0; i < n; i++) {
+            int cell = i / MEASURED.length;
             double p = tail == 0 ? u[i] : 1 - u[i];
-            double error = error(shape, x[i], p, tail);
-            if (!(error <= RELATIVE * p)) {
-                return Double.POSITIVE_INFINITY;
-            }
-            worst = Math.max(worst, error);
+            double error =
+                    largest[cell] < Double.POSITIVE_INFINITY ? error(shape, x[i], p, tail) : Double.POSITIVE_INFINITY;
+            largest[cell] = error <= RELATIVE * p ? Math.max(largest[cell], error) : Double.POSITIVE_INFINITY;
         }
-        return worst;
+        return largest;
     }
 
     /// How far p lies from the probabilities between the neighbours of x, one step away; where the error is as small as

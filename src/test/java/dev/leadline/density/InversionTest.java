@@ -5,7 +5,9 @@ import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Arrays;
+import java.util.List;
 import java.util.SplittableRandom;
+import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -16,8 +18,21 @@ class InversionTest {
     private static final long SEED = 20261201;
     private static final int BLOCK = 1024;
 
+    /// Kinks at probabilities that are borders of cells and at others, a gap in the middle, gaps of all sizes, a spike,
+    /// a
+    /// faint part.
+    private static final List<Density> BROKEN = List.of(
+            new Steps(List.of(0.0, 1.0, 10.0, 11.0), List.of(0.5, 0.0, 0.5)),
+            new Steps(List.of(0.0, 1.0, 1e6, 1e6 + 1), List.of(0.3, 0.0, 0.7)),
+            new Steps(List.of(0.0, 1.0, 1.0 + 1e-6, 2.0), List.of(0.375, 0.0, 0.625)),
+            new Steps(List.of(-1.0, 0.0, 1e-9, 3.0), List.of(0.2, 1e-6, 0.799999)),
+            new Steps(List.of(0.0, 1.0, 2.0, 3.0), List.of(1e-9, 0.999999998, 1e-9)),
+            new Steps(
+                    IntStream.rangeClosed(0, 10).mapToObj(i -> (double) i).toList(),
+                    List.of(0.02, 0.05, 0.0, 0.13, 0.2, 0.2, 0.17, 0.0, 0.13, 0.1)));
+
     static Stream<Density> densities() {
-        return Examples.all();
+        return Stream.concat(Examples.all(), BROKEN.stream());
     }
 
     /// The error is measured in the tail's own probability, down to the smallest that is drawn; a value is as good as
@@ -126,6 +141,25 @@ class InversionTest {
         assertEquals(
                 Curves.build(density.standardised().shape()).hash(),
                 Inversion.of(density).hash());
+    }
+
+    /// A draw costs a quantile where there are no cells.
+    @ParameterizedTest
+    @MethodSource("densities")
+    void everyDensityHasATable(Density density) {
+        if (Curves.build(density.standardised().shape()) instanceof Table table) {
+            assertTrue(table.cells().length > 0);
+        }
+    }
+
+    /// At a jump a draw is one of the values beside it.
+    @Test
+    void drawsDoNotFallIntoAGap() {
+        var u = new double[] {Math.nextDown(0.3), 0.3, Math.nextUp(0.3), 0.3 + 1e-13};
+        Inversion.of(BROKEN.get(1)).fill(u, u, u.length);
+        for (double x : u) {
+            assertTrue(x <= 1 || x >= 1e6, () -> x + " lies in the gap");
+        }
     }
 
     @Test
