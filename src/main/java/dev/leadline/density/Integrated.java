@@ -1,0 +1,299 @@
+package dev.leadline.density;
+
+import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.Log;
+import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.function.DoubleUnaryOperator;
+
+/// A density known by its heights alone, integrated numerically. Immutable, safe for all threads where its heights are.
+///
+/// The line is cut into pieces, narrower towards ends, breaks and peaks, in each of which the density is a polynomial
+/// of degree 15 to rounding error; masses are added from both ends, so that both tails keep their digits down to
+/// `1e-300` of all, as far as the heights do. Next to an end or a break, and far out where the density is a power, the
+/// mass is a power of the distance.
+///
+/// Error: `1e-12` of the mass, and relative `1e-10` in tails, where the heights have 16 digits (`TypedTest`).
+public final class Integrated implements Shape {
+    private final Object name;
+    private final Relief relief;
+    private final Support support;
+    private final TailOrders orders;
+    private final double top;
+    private final double logArea;
+    private final Piece[] pieces;
+
+    /// Mass below the lower end of a piece, and above it; one more for the end of the last.
+    private final double[] below;
+
+    private final double[] above;
+    private final double mean;
+    private final double variance;
+    private final double skewness;
+    private final double excessKurtosis;
+    private final List<Support> gaps;
+
+    /// A density that is finite everywhere, and not much narrower than its distance from 0 and the ends of the range.
+    ///
+    /// @param name what tells it from all others, with `equals`, `hashCode` and `toString`
+    /// @param pdf up to a factor; bit-stable, safe for all threads
+    /// @throws Refusal where it is no density on the range
+    public static Integrated of(Object name, DoubleUnaryOperator pdf, Support range) {
+        Heights heights = (x, y, n) -> {
+            for (int i = 0; i < n; i++) {
+                y[i] = pdf.applyAsDouble(x[i]);
+            }
+        };
+        return of(name, "x", heights, false, range, new double[0], new double[0]);
+    }
+
+    /// @param name what tells it from all others, with `equals`, `hashCode` and `toString`
+    /// @param variable its name in messages
+    /// @param log whether the heights are logarithms
+    /// @param breaks points inside the range at which it may be infinite, jump or bend; rising
+    /// @param probes points near which it may have a narrow peak
+    /// @throws Refusal where it is no density on the range
+    public static Integrated of(
+            Object name,
+            String variable,
+            Heights heights,
+            boolean log,
+            Support range,
+            double[] breaks,
+            double[] probes) {
+        var relief = new Relief(heights, variable, log);
+        var landscape = Landscape.of(relief, range, breaks, probes);
+        return new Integrated(name, relief, range, landscape, Refinement.of(relief, landscape));
+    }
+
+    private Integrated(Object name, Relief relief, Support range, Landscape landscape, List<Refinement.Cell> cells) {
+        this.name = name;
+        this.relief = relief;
+        this.support = range;
+        this.orders = landscape.orders();
+        this.top = landscape.top();
+        double total = 0;
+        for (var cell : cells) {
+            total += cell.mass;
+        }
+        if (!(total > 0 && total < Double.POSITIVE_INFINITY)) {
+            throw new Refusal(relief.zero());
+        }
+        this.logArea = (relief.log() ? top : Log.log(top)) + Log.log(total);
+        double area = total;
+        this.gaps = gaps(cells);
+        this.pieces =
+                cells.stream().filter(c -> c.mass > 0).map(c -> c.piece(area)).toArray(Piece[]::new);
+        int n = pieces.length;
+        this.below = new double[n + 1];
+        this.above = new double[n + 1];
+        for (int i = 0; i < n; i++) {
+            below[i + 1] = below[i] + pieces[i].mass();
+        }
+        for (int i = n - 1; i >= 0; i--) {
+            above[i] = above[i + 1] + pieces[i].mass();
+        }
+        var moments = new PieceMoments(cells, area, orders);
+        this.mean = moments.mean();
+        this.variance = moments.variance();
+        this.skewness = moments.skewness();
+        this.excessKurtosis = moments.excessKurtosis();
+    }
+
+    private static List<Support> gaps(List<Refinement.Cell> cells) {
+        var gaps = new ArrayList<Support>();
+        double end = Double.NaN;
+        for (var cell : cells) {
+            if (cell.isEmpty()) {
+                continue;
+            }
+            if (cell.low > end) {
+                gaps.add(new Support(end, cell.low));
+            }
+            end = cell.high;
+        }
+        return List.copyOf(gaps);
+    }
+
+    /// The integral of the density as given; may be 0 or infinite where its logarithm is not.
+    public double area() {
+        return Exp.exp(logArea);
+    }
+
+    public double logArea() {
+        return logArea;
+    }
+
+    /// Stretches without mass, between others that have some.
+    public List<Support> gaps() {
+        return gaps;
+    }
+
+    @Override
+    public double pdf(double x) {
+        return Exp.exp(logPdf(x));
+    }
+
+    @Override
+    public double logPdf(double x) {
+        if (Double.isNaN(x)) {
+            return x;
+        }
+        return isOutside(x) ? Double.NEGATIVE_INFINITY : log(relief.at(x));
+    }
+
+    @Override
+    public void logPdf(double[] x, double[] out, int n) {
+        double[] heights = relief.at(java.util.Arrays.copyOf(x, n));
+        for (int i = 0; i < n; i++) {
+            out[i] = Double.isNaN(x[i]) ? x[i] : isOutside(x[i]) ? Double.NEGATIVE_INFINITY : log(heights[i]);
+        }
+    }
+
+    private boolean isOutside(double x) {
+        return !support.contains(x) || Double.isInfinite(x);
+    }
+
+    private double log(double height) {
+        return (relief.log() ? height : Log.log(Math.max(height, 0))) - logArea;
+    }
+
+    @Override
+    public double cdf(double x) {
+        if (Double.isNaN(x)) {
+            return x;
+        }
+        int i = pieceAt(x);
+        double mass = massBelow(i, x);
+        return mass <= 0.5 ? mass : 1 - massAbove(i, x);
+    }
+
+    @Override
+    public double survival(double x) {
+        if (Double.isNaN(x)) {
+            return x;
+        }
+        int i = pieceAt(x);
+        double mass = massBelow(i, x);
+        return mass <= 0.5 ? 1 - mass : massAbove(i, x);
+    }
+
+    /// The last piece that begins at or below x; -1 where none does.
+    private int pieceAt(double x) {
+        int from = -1;
+        int to = pieces.length;
+        while (to - from > 1) {
+            int middle = (from + to) >>> 1;
+            if (pieces[middle].low() <= x) {
+                from = middle;
+            } else {
+                to = middle;
+            }
+        }
+        return from;
+    }
+
+    private double massBelow(int i, double x) {
+        if (i < 0) {
+            return 0;
+        }
+        var piece = pieces[i];
+        return x >= piece.high() ? below[i + 1] : below[i] + piece.below(x);
+    }
+
+    private double massAbove(int i, double x) {
+        if (i < 0) {
+            return 1;
+        }
+        var piece = pieces[i];
+        return x >= piece.high() ? above[i + 1] : above[i + 1] + piece.above(x);
+    }
+
+    @Override
+    public double inner(double p) {
+        return p <= 0.5 ? fromBelow(p) : fromAbove(1 - p);
+    }
+
+    @Override
+    public double upperInner(double q) {
+        return q <= 0.5 ? fromAbove(q) : fromBelow(1 - q);
+    }
+
+    private double fromBelow(double p) {
+        int from = 0;
+        int to = pieces.length - 1;
+        while (from < to) {
+            int middle = (from + to) >>> 1;
+            if (below[middle + 1] >= p) {
+                to = middle;
+            } else {
+                from = middle + 1;
+            }
+        }
+        return pieces[from].atBelow(p - below[from]);
+    }
+
+    private double fromAbove(double q) {
+        int from = 0;
+        int to = pieces.length - 1;
+        while (from < to) {
+            int middle = (from + to + 1) >>> 1;
+            if (above[middle] >= q) {
+                from = middle;
+            } else {
+                to = middle - 1;
+            }
+        }
+        return pieces[from].atAbove(q - above[from + 1]);
+    }
+
+    @Override
+    public double mean() {
+        return mean;
+    }
+
+    @Override
+    public double variance() {
+        return variance;
+    }
+
+    @Override
+    public double skewness() {
+        return skewness;
+    }
+
+    @Override
+    public double excessKurtosis() {
+        return excessKurtosis;
+    }
+
+    @Override
+    public TailOrders tailOrders() {
+        return orders;
+    }
+
+    @Override
+    public Support support() {
+        return support;
+    }
+
+    int pieceCount() {
+        return pieces.length;
+    }
+
+    @Override
+    public boolean equals(Object other) {
+        return other instanceof Integrated that && name.equals(that.name);
+    }
+
+    @Override
+    public int hashCode() {
+        return name.hashCode();
+    }
+
+    @Override
+    public String toString() {
+        return name.toString();
+    }
+}
