@@ -125,7 +125,7 @@ public final class LaneRun {
         return failure.inputs().contains(Double.NaN)
                 ? new Failure(
                         failure.draw(),
-                        Arrays.stream(recipe.sampler().inputs(failure.draw()))
+                        Arrays.stream(Drawing.inputs(recipe, failure.draw()))
                                 .boxed()
                                 .toList())
                 : failure;

@@ -26,7 +26,7 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
 
     /// The draw with index `draw` (from 0) of a lane, made again from its address.
     public static Look at(Question question, Lane lane, long seed, long draw) {
-        return of(question, Recipe.of(question, lane, seed).sampler().inputs(draw));
+        return of(question, Drawing.inputs(Recipe.of(question, lane, seed), draw));
     }
 
     /// Every input at its median.

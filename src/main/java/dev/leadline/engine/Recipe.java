@@ -4,7 +4,6 @@ import dev.leadline.density.Density;
 import dev.leadline.density.Inversion;
 import dev.leadline.formula.Program;
 import dev.leadline.model.Ask;
-import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
@@ -20,7 +19,7 @@ public final class Recipe {
     private final Question question;
     private final Lane lane;
     private final Layout layout;
-    private final List<String> names;
+    private final Ties ties;
     private final List<Inversion> inversions;
     private final List<Integer> weighing;
     private final double volume;
@@ -28,8 +27,10 @@ public final class Recipe {
     private Recipe(Question question, Lane lane, long seed) {
         this.question = question;
         this.lane = lane;
-        this.names = question.inputs().stream().map(Input::name).toList();
-        this.layout = lane.scheme().points().layout(new Address(seed, Purpose.RUN, lane.name(), 0, "", 0), names);
+        this.ties = new Ties(question);
+        this.layout = lane.scheme()
+                .points()
+                .layout(new Address(seed, Purpose.RUN, lane.name(), 0, "", 0), ties.coordinates());
         this.inversions = question.inputs().stream()
                 .map(input -> Inversion.of(input.drawn()))
                 .toList();
@@ -71,8 +72,8 @@ public final class Recipe {
         return lane;
     }
 
-    List<String> names() {
-        return names;
+    Ties ties() {
+        return ties;
     }
 
     Inversion inversion(int input) {

@@ -4,7 +4,6 @@ import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.formula.Program;
 import dev.leadline.numeric.Exp;
-import dev.leadline.scheme.Cursor;
 import dev.leadline.trace.Failure;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -18,6 +17,7 @@ public final class Sampler {
     private final Recipe recipe;
     private final Program program;
     private final Program.Workspace workspace;
+    private final Drawing drawing;
     private final double[][] columns;
     private final double[][] outcomes;
     private final double[] weights;
@@ -28,12 +28,12 @@ public final class Sampler {
         this.recipe = recipe;
         this.program = recipe.program();
         this.workspace = program.workspace();
-        this.columns = new double[recipe.names().size()][];
-        for (int j = 0; j < columns.length; j++) {
-            if (program.uses(j) || recipe.weighing().contains(j)) {
-                columns[j] = new double[Program.BLOCK];
-            }
+        boolean[] wanted = new boolean[recipe.question().inputs().size()];
+        for (int j = 0; j < wanted.length; j++) {
+            wanted[j] = program.uses(j) || recipe.weighing().contains(j);
         }
+        this.drawing = new Drawing(recipe, wanted);
+        this.columns = drawing.columns();
         this.outcomes = new double[program.outputs()][Program.BLOCK];
         boolean weighs = !recipe.weighing().isEmpty();
         this.weights = weighs ? new double[Program.BLOCK] : new double[0];
@@ -44,7 +44,7 @@ public final class Sampler {
     /// @param cancelled looked at between blocks of draws
     /// @return empty where cancelled
     public Optional<ItemSums> compute(Item item, BooleanSupplier cancelled) {
-        var cursor = open(item);
+        drawing.open(item);
         sums.clear();
         var failures = new ArrayList<Failure>();
         for (int from = 0; from < item.draws(); from += Program.BLOCK) {
@@ -52,7 +52,7 @@ public final class Sampler {
                 return Optional.empty();
             }
             int rows = Math.min(Program.BLOCK, item.draws() - from);
-            draw(cursor, rows);
+            drawing.next(rows);
             program.evaluate(columns, rows, outcomes, workspace);
             observe(rows);
             long excluded = sums.excluded();
@@ -62,38 +62,6 @@ public final class Sampler {
             }
         }
         return Optional.of(new ItemSums(item, sums.copy(), List.copyOf(failures)));
-    }
-
-    /// Inputs of the draw with index `draw` in the lane; an input that nothing depends on is drawn all the same.
-    double[] inputs(long draw) {
-        for (int j = 0; j < columns.length; j++) {
-            if (columns[j] == null) {
-                columns[j] = new double[Program.BLOCK];
-            }
-        }
-        var item = recipe.items().holding(draw);
-        var cursor = open(item);
-        long from = item.firstDraw();
-        draw(cursor, Program.BLOCK);
-        while (from + Program.BLOCK <= draw) {
-            draw(cursor, Program.BLOCK);
-            from += Program.BLOCK;
-        }
-        int row = (int) (draw - from);
-        return Arrays.stream(columns).mapToDouble(column -> column[row]).toArray();
-    }
-
-    private Cursor open(Item item) {
-        return recipe.layout().open(item.index());
-    }
-
-    private void draw(Cursor cursor, int rows) {
-        cursor.next(columns, rows);
-        for (int j = 0; j < columns.length; j++) {
-            if (columns[j] != null) {
-                recipe.inversion(j).fill(columns[j], columns[j], rows);
-            }
-        }
     }
 
     /// Turns outcomes into components of observations: integrals are weighed; an event is 1 or 0 as it is.

@@ -36,7 +36,8 @@ public record Project(Draft draft, Question question, Plan plan) {
         double confidence = confidence(draft, findings);
         Optional<Tolerance> tolerance = draft.tolerance().map(given -> tolerance(given, findings));
         Plan plan = Plans.of(draft, findings);
-        draft.dependence().ifPresent(_ -> findings.add("$.dependence", Problem.of("dependence is not available")));
+        Optional<Dependence> dependence =
+                draft.dependence().flatMap(given -> Dependences.of(given, draft.inputs(), inputs, findings));
         findings.refuseIfAny();
         Question question = new Question(
                 draft.title(),
@@ -44,6 +45,7 @@ public record Project(Draft draft, Question question, Plan plan) {
                 draft.safety(),
                 constants(draft),
                 inputs,
+                dependence,
                 working.orElseThrow(),
                 asks,
                 reference,

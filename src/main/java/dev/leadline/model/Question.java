@@ -15,6 +15,7 @@ public record Question(
         boolean safety,
         List<Constant> constants,
         List<Input> inputs,
+        Optional<Dependence> dependence,
         Working working,
         List<Ask> asks,
         Optional<Reference> reference,

@@ -295,7 +295,7 @@ class ReferenceRecordsTest {
                 check(
                         id,
                         "b",
-                        mean(normals("z1", "z2"), "max(1 + 2*z1, 0.3*z1 + sqrt(1 - 0.3^2)*z2)"),
+                        tied(mean(normals("x1", "x2"), "max(1 + 2*x1, x2)"), 2, (i, j) -> .3),
                         expected(id, "b_mean"),
                         expected(id, "b_variance")),
                 check(
@@ -352,40 +352,51 @@ class ReferenceRecordsTest {
                 expected(one, "moment_" + twice) - moment * moment);
     }
 
-    /// Orthants and rectangles of the multivariate normal: Sheppard (1899) and later. Tied by a triangular factor of
-    /// the
-    /// correlation matrix, written as formulas of independent normals; equal correlation 1/2 by a shared one.
+    /// Orthants and rectangles of the multivariate normal: Sheppard (1899) and later.
     private static List<Check> orthants() {
         String id = "prob-mvn-orthant";
         List<Check> checks = new ArrayList<>();
         for (String rho : List.of("0", "0.25", "0.5", "0.9", "-0.7")) {
             String name = "P(X1>0,X2>0; rho=%s)".formatted(rho);
-            String formula = "z1 > 0 & (%s)*z1 + sqrt(1 - (%s)^2)*z2 > 0".formatted(rho, rho);
-            checks.add(event(id, name, normals("z1", "z2"), formula, expected(id, name)));
+            checks.add(tied(id, name, 2, (i, j) -> Double.parseDouble(rho), "x1 > 0 & x2 > 0"));
         }
-        String three = "P(all 3 >0; r12=.5,r13=.3,r23=-.2)";
-        checks.add(event(
+        checks.add(tied(
                 id,
-                three,
-                normals("z1", "z2", "z3"),
-                "z1 > 0 & 0.5*z1 + sqrt(0.75)*z2 > 0"
-                        + " & 0.3*z1 - 0.35/sqrt(0.75)*z2 + sqrt(1 - 0.09 - 0.35^2/0.75)*z3 > 0",
-                expected(id, three)));
+                "P(all 3 >0; r12=.5,r13=.3,r23=-.2)",
+                3,
+                (i, j) -> i == 1 ? (j == 2 ? .5 : .3) : -.2,
+                "x1 > 0 & x2 > 0 & x3 > 0"));
         for (int d : new int[] {4, 5, 10}) {
             String name = "P(all %d >0; all rho=1/2)".formatted(d);
-            checks.add(event(id, name, normals(shared(d)), terms(d, "s + z%d > 0", " & "), expected(id, name)));
+            checks.add(tied(id, name, d, (i, j) -> .5, terms(d, "x%d > 0", " & ")));
         }
-        String five = "P(all 5 <=1; all rho=0.3)";
-        checks.add(event(
-                id, five, normals(shared(5)), terms(5, "sqrt(0.3)*s + sqrt(0.7)*z%d <= 1", " & "), expected(id, five)));
-        String two = "P(X<=1,Y<=0.5; rho=0.6)";
-        checks.add(event(id, two, normals("x", "z"), "x <= 1 & 0.6*x + 0.8*z <= 0.5", expected(id, two)));
+        checks.add(tied(id, "P(all 5 <=1; all rho=0.3)", 5, (i, j) -> .3, terms(5, "x%d <= 1", " & ")));
+        checks.add(tied(id, "P(X<=1,Y<=0.5; rho=0.6)", 2, (i, j) -> .6, "x1 <= 1 & x2 <= 0.5"));
         return checks;
     }
 
-    private static String[] shared(int d) {
-        return Stream.concat(Stream.of("s"), rangeClosed(1, d).mapToObj(k -> "z" + k))
-                .toArray(String[]::new);
+    /// An event of standard normal inputs `x1` to `xd`.
+    private static Check tied(String id, String name, int d, DoubleBinary correlation, String event) {
+        String inputs = normals(rangeClosed(1, d).mapToObj(k -> "x" + k).toArray(String[]::new));
+        double p = expected(id, name);
+        String project = tied(project(inputs, "probability", event), d, correlation);
+        return check(id, name, project, p, p * (1 - p)).kurtosis(kurtosisOfEvent(p));
+    }
+
+    /// With the inputs `x1` to `xd` tied by the correlations of the normals behind them.
+    private static String tied(String project, int d, DoubleBinary correlation) {
+        String pairs = rangeClosed(1, d)
+                .boxed()
+                .flatMap(i -> rangeClosed(i + 1, d)
+                        .mapToObj(j -> "{\"of\": [\"x%d\", \"x%d\"], \"spearman\": %s}"
+                                .formatted(i, j, 6 / Math.PI * Math.asin(correlation.of(i, j) / 2))))
+                .collect(joining(", "));
+        return project.replace(
+                "\"ask\"", "\"dependence\": {\"copula\": \"gaussian\", \"pairs\": [%s]}, \"ask\"".formatted(pairs));
+    }
+
+    private interface DoubleBinary {
+        double of(int i, int j);
     }
 
     /// Owen (1956); Patefield and Tandy (2000) for T(0.0625, 0.25).

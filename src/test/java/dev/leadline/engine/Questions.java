@@ -5,6 +5,7 @@ import dev.leadline.density.Density;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.formula.Working;
 import dev.leadline.model.Ask;
+import dev.leadline.model.Dependence;
 import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
@@ -27,6 +28,7 @@ public final class Questions {
     private final List<Input> inputs = new ArrayList<>();
     private final List<String> steps = new ArrayList<>();
     private final List<Ask> asks = new ArrayList<>();
+    private Optional<Dependence> dependence = Optional.empty();
     private Optional<Reference> reference = Optional.empty();
     private Optional<Tolerance> tolerance = Optional.empty();
 
@@ -69,6 +71,11 @@ public final class Questions {
         return ask(new Estimand.Probability(), formula);
     }
 
+    public Questions tied(Dependence ties) {
+        dependence = Optional.of(ties);
+        return this;
+    }
+
     public Questions reference(double value) {
         reference = Optional.of(new Reference(value, 0, "test"));
         return this;
@@ -85,7 +92,7 @@ public final class Questions {
                 new LinkedHashMap<>(),
                 steps,
                 asks.stream().map(Ask::formula).toList());
-        return new Question("", "", false, List.of(), inputs, working, asks, reference, .95, tolerance);
+        return new Question("", "", false, List.of(), inputs, dependence, working, asks, reference, .95, tolerance);
     }
 
     public static Lane lane(String name) {

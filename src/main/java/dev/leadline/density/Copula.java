@@ -1,0 +1,109 @@
+package dev.leadline.density;
+
+import java.util.Arrays;
+
+/// Ties inputs to each other without touching the density of any: independent probabilities in, tied ones out.
+/// Immutable, safe for all threads.
+///
+/// The probabilities become independent normal values, these are combined by the triangular factor of the correlations,
+/// multiplied by what the mixing draws, and become probabilities again. So the tie of an input depends on those before
+/// it only, and any layout of points will do.
+public final class Copula {
+    private static final double SMALLEST = 0x1p-53;
+    private static final double LARGEST = 1 - 0x1p-53;
+
+    private final Mixing mixing;
+    private final Correlations correlations;
+    private final double[][] factor;
+    private final Inversion normal = Inversion.of(new Normal(0, 1));
+
+    /// @throws IllegalArgumentException where the correlations are not possible
+    public Copula(Mixing mixing, Correlations correlations) {
+        this.mixing = mixing;
+        this.correlations = correlations;
+        this.factor = correlations.factor().orElseThrow(() -> new IllegalArgumentException("no " + correlations));
+    }
+
+    public Mixing mixing() {
+        return mixing;
+    }
+
+    public Correlations correlations() {
+        return correlations;
+    }
+
+    /// The inputs whose probabilities those of the wanted ones are made of.
+    public boolean[] behind(boolean[] wanted) {
+        boolean[] behind = new boolean[factor.length];
+        for (int i = 0; i < factor.length; i++) {
+            for (int j = 0; j <= i; j++) {
+                behind[j] |= wanted[i] && factor[i][j] != 0;
+            }
+        }
+        return behind;
+    }
+
+    /// Replaces independent probabilities by tied ones, from `2^-53` to `1 - 2^-53`.
+    ///
+    /// @param u one array for each input, at least `rows` long; `null` for one that
+    ///     is [behind][#behind] no wanted one
+    /// @param wanted inputs to tie; the arrays of the others are scratch
+    public void tie(double[][] u, boolean[] wanted, int rows) {
+        for (double[] column : u) {
+            if (column != null) {
+                normal.fill(column, column, rows);
+            }
+        }
+        // From the last: those before it are still as they were.
+        for (int i = u.length - 1; i >= 0; i--) {
+            if (wanted[i]) {
+                combine(u, i, rows);
+                dev.leadline.numeric.Normal.cdf(u[i], u[i], rows);
+                clamp(u[i], rows);
+            }
+        }
+    }
+
+    private void combine(double[][] z, int i, int rows) {
+        double[] y = z[i];
+        double own = factor[i][i];
+        for (int row = 0; row < rows; row++) {
+            y[row] *= own;
+        }
+        for (int j = 0; j < i; j++) {
+            double share = factor[i][j];
+            if (share != 0) {
+                add(share, z[j], y, rows);
+            }
+        }
+    }
+
+    private static void add(double share, double[] z, double[] y, int rows) {
+        for (int row = 0; row < rows; row++) {
+            y[row] = Math.fma(share, z[row], y[row]);
+        }
+    }
+
+    private static void clamp(double[] u, int rows) {
+        for (int row = 0; row < rows; row++) {
+            u[row] = Math.min(Math.max(u[row], SMALLEST), LARGEST);
+        }
+    }
+
+    @Override
+    public boolean equals(Object other) {
+        return other instanceof Copula copula
+                && mixing.equals(copula.mixing)
+                && correlations.equals(copula.correlations);
+    }
+
+    @Override
+    public int hashCode() {
+        return Arrays.hashCode(new Object[] {mixing, correlations});
+    }
+
+    @Override
+    public String toString() {
+        return mixing.word() + correlations;
+    }
+}
