@@ -54,6 +54,13 @@ final class Dependences {
 
     private Optional<Mixing> mixing(DependenceDraft draft) {
         if (draft.copula().equals("gaussian")) {
+            if (draft.dof().isPresent()) {
+                findings.add(
+                        PATH + ".dof",
+                        "the Gaussian copula has no dof",
+                        "Degrees of freedom belong to the Student copula.",
+                        "Leave it out.");
+            }
             return Optional.of(new Mixing.None());
         }
         Problem problem = Problem.of("the copula \"%s\" is not available".formatted(draft.copula()))
@@ -134,6 +141,14 @@ final class Dependences {
     }
 
     private boolean target(PairDraft pair, String path) {
+        if (pair.measure().equals("pearson")) {
+            findings.add(
+                    path + ".pearson",
+                    "pearson is not available",
+                    "Inputs here are tied by ranks.",
+                    "Give spearman or kendall.");
+            return false;
+        }
         if (pair.value() > -1 && pair.value() < 1) {
             return true;
         }
