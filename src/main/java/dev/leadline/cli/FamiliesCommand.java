@@ -3,6 +3,7 @@ package dev.leadline.cli;
 import dev.leadline.density.Catalogue;
 import dev.leadline.density.Density;
 import dev.leadline.density.Family;
+import dev.leadline.density.Knowledge;
 import dev.leadline.density.Parameter;
 import dev.leadline.density.Portrait;
 import dev.leadline.density.PortraitText;
@@ -23,6 +24,8 @@ import picocli.CommandLine.ParseResult;
 /// `families`: which densities there are, what their parameters must be, and what a member looks like.
 final class FamiliesCommand implements Command {
 
+    private static final String KNOWN = "--known";
+
     @Override
     public String name() {
         return "families";
@@ -37,7 +40,11 @@ final class FamiliesCommand implements Command {
                         "leadline families",
                         "leadline families gumbel",
                         "leadline families gumbel location=24.5 scale=2.6",
-                        "leadline families gumbel location=24.5 scale=2.6 --json")
+                        "leadline families gumbel location=24.5 scale=2.6 --json",
+                        "leadline families --known",
+                        "leadline families --known readings n=10 mean=5.012 s=0.019")
+                .addOption(Arguments.flag(
+                        KNOWN, "Begin with what is known about a quantity: NAME is a way of knowing, not a family."))
                 .addPositional(text("0", "0..1", "NAME", "A family."))
                 .addPositional(text("1..*", "0..*", "PARAMETER=VALUE", "Each parameter of a member of it."));
     }
@@ -57,7 +64,9 @@ final class FamiliesCommand implements Command {
         boolean json = Arguments.has(arguments, "--json");
         String name = arguments.matchedPositionalValue(0, "");
         String[] values = arguments.matchedPositionalValue(1, new String[0]);
-        if (name.isEmpty()) {
+        if (Arguments.has(arguments, KNOWN)) {
+            known(console, name, values, json);
+        } else if (name.isEmpty()) {
             list(console, Catalogue.families(), json);
         } else if (values.length == 0) {
             list(console, List.of(Catalogue.named(name)), json);
@@ -71,6 +80,30 @@ final class FamiliesCommand implements Command {
             }
         }
         return Commands.DONE;
+    }
+
+    private static void known(Console console, String word, String[] told, boolean json) {
+        if (word.isEmpty()) {
+            if (json) {
+                console.out().print(FamiliesJson.ways(Knowledge.all()));
+            } else {
+                Knowledge.all().forEach(way -> {
+                    console.out().println(console.bold(way.word()) + "  " + way.title());
+                    console.out().println("    " + line(way.parameters()));
+                });
+            }
+            return;
+        }
+        var suggestion = Knowledge.named(word).suggestion(parameters(told));
+        Family family = Catalogue.named(suggestion.family());
+        var portrait = Portrait.of(family.of(suggestion.parameters()));
+        if (json) {
+            console.out().print(FamiliesJson.of(suggestion, family, portrait));
+        } else {
+            console.out().println(suggestion.provenance());
+            console.out().println(FamiliesJson.density(suggestion));
+            print(console, family, portrait);
+        }
     }
 
     private static Map<String, Double> parameters(String[] arguments) {

@@ -5,6 +5,7 @@ import static dev.leadline.density.Rule.finite;
 import static dev.leadline.density.Rule.number;
 import static dev.leadline.density.Rule.positive;
 
+import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -12,7 +13,6 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.SequencedMap;
 import java.util.function.Function;
 
@@ -242,8 +242,19 @@ public final class Knowledge {
         return ALL;
     }
 
-    public static Optional<Knowledge> of(String word) {
-        return ALL.stream().filter(knowledge -> knowledge.word.equals(word)).findFirst();
+    /// @throws Refusal where there is none of this word
+    public static Knowledge named(String word) {
+        var words = ALL.stream().map(Knowledge::word).toList();
+        return ALL.stream()
+                .filter(knowledge -> knowledge.word.equals(word))
+                .findFirst()
+                .orElseThrow(() -> {
+                    var problem = Problem.of("there is no way of knowing called \"%s\"".formatted(word))
+                            .because("There are %s.".formatted(String.join(", ", words)));
+                    return new Refusal(Nearest.to(word, words)
+                            .map(near -> problem.tryThis("Was \"%s\" meant?".formatted(near)))
+                            .orElse(problem));
+                });
     }
 
     /// One word for it, as a command takes it.

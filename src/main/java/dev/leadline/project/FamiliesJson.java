@@ -1,9 +1,12 @@
 package dev.leadline.project;
 
 import dev.leadline.density.Family;
+import dev.leadline.density.Knowledge;
 import dev.leadline.density.Parameter;
 import dev.leadline.density.Portrait;
+import dev.leadline.density.Suggestion;
 import dev.leadline.density.Support;
+import dev.leadline.model.DensityDraft;
 import java.util.List;
 
 /// The families as the command `families` prints them: `{"families": [{"family", "parameters", "use"}]}`, parameters
@@ -22,6 +25,47 @@ public final class FamiliesJson {
     /// @param portrait of a member of the family
     public static String of(Family family, Portrait portrait) {
         return whole(List.of(family(family).put("portrait", portrait(portrait)).build()));
+    }
+
+    /// @param portrait of the member that is suggested
+    public static String of(Suggestion suggestion, Family family, Portrait portrait) {
+        return JsonWriter.pretty(Json.object()
+                .put("density", member(suggestion))
+                .put("provenance", suggestion.provenance())
+                .put(
+                        "families",
+                        Json.list(List.of(family(family)
+                                .put("portrait", portrait(portrait))
+                                .build())))
+                .build());
+    }
+
+    /// As a project has it.
+    public static String density(Suggestion suggestion) {
+        return JsonWriter.pretty(member(suggestion)).strip();
+    }
+
+    /// The ways of knowing something about a quantity: `{"known": [{"word", "title", "parameters"}]}`.
+    public static String ways(List<Knowledge> ways) {
+        return JsonWriter.pretty(Json.object()
+                .put(
+                        "known",
+                        Json.list(ways.stream()
+                                .map(way -> Json.object()
+                                        .put("word", way.word())
+                                        .put("title", way.title())
+                                        .put(
+                                                "parameters",
+                                                Json.list(way.parameters().stream()
+                                                        .map(FamiliesJson::parameter)
+                                                        .toList()))
+                                        .build())
+                                .toList()))
+                .build());
+    }
+
+    private static Json member(Suggestion suggestion) {
+        return DraftWriter.density(DensityDraft.of(suggestion.family(), suggestion.parameters()));
     }
 
     private static String whole(List<Json.Members> families) {

@@ -426,6 +426,28 @@ class CommandsTest {
 
     /// The Gumbel density has mean `location + .5772 scale`, standard deviation `1.2825 scale`, skewness 1.1395 and
     /// excess kurtosis 2.4.
+    /// JCGM 101:2008, 6.4.9.2: n readings give n - 1 degrees of freedom and the scale s / sqrt(n).
+    @Test
+    void familiesBeginWithWhatIsKnown() {
+        String[] told = {"families", "--known", "readings", "n=16", "mean=5.012", "s=0.02"};
+        String text = leadline(told).out();
+        assertTrue(text.startsWith("mean of 16 readings 5.012"), text);
+        assertTrue(text.contains("\"dof\": 15"), text);
+        assertTrue(text.contains("\"scale\": 0.005"), text);
+        var density = leadline("families", "--known", "readings", "n=16", "mean=5.012", "s=0.02", "--json")
+                .json()
+                .required("density");
+        assertEquals(15, density.required("dof").asDouble());
+        assertEquals(
+                2, leadline("families", "--known", "readings", "n=1", "mean=5").exitCode());
+        assertTrue(leadline("families", "--known").out().contains("certificate"));
+        assertTrue(leadline("families", "--known", "--json")
+                        .json()
+                        .required("known")
+                        .size()
+                >= 12);
+    }
+
     @Test
     void portraysAMemberOfAFamily() {
         var portrait = leadline("families", "gumbel", "location=24.5", "scale=2.6", "--json")

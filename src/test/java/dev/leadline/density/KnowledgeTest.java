@@ -38,7 +38,7 @@ class KnowledgeTest {
                 "chance              | probability .06                       | bernoulli probability .06",
             })
     void givesTheMember(String word, String told, String expected) {
-        var suggestion = Knowledge.of(word).orElseThrow().suggestion(pairs(told));
+        var suggestion = Knowledge.named(word).suggestion(pairs(told));
         var words = expected.split(" ", 2);
         assertEquals(words[0], suggestion.family());
         var parameters = pairs(words[1]);
@@ -54,10 +54,18 @@ class KnowledgeTest {
         assertEquals(
                 "mean of 10 readings 5.012, standard deviation of one 0.019: Student's t with 9 degrees of freedom"
                         + " (JCGM 101:2008, 6.4.9.2)",
-                Knowledge.of("readings")
-                        .orElseThrow()
+                Knowledge.named("readings")
                         .suggestion(pairs("n 10 mean 5.012 s .019"))
                         .provenance());
+    }
+
+    @Test
+    void namesTheNearestWay() {
+        var problem = assertThrows(Refusal.class, () -> Knowledge.named("reading"))
+                .problems()
+                .getFirst();
+        assertEquals("there is no way of knowing called \"reading\"", problem.primary());
+        assertEquals("Was \"readings\" meant?", problem.hint().orElseThrow());
     }
 
     @Test
@@ -73,7 +81,7 @@ class KnowledgeTest {
 
     private static List<String> refused(String word, String told) {
         var all = new ArrayList<String>();
-        assertThrows(Refusal.class, () -> Knowledge.of(word).orElseThrow().suggestion(pairs(told)))
+        assertThrows(Refusal.class, () -> Knowledge.named(word).suggestion(pairs(told)))
                 .problems()
                 .forEach(problem -> all.add(problem.primary()));
         return all;
