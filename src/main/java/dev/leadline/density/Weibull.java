@@ -5,7 +5,6 @@ import static dev.leadline.density.Rule.finite;
 import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
-import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
 
 /// The Weibull density for lifetimes: `survival(x) = exp(-((x - from) / scale)^shape)` from `from` on.
@@ -100,20 +99,29 @@ public record Weibull(double shape, double scale, double from) implements Scaled
             return Log.log(-Log.log(q)) / shape;
         }
 
+        /// A power of an exponential value.
+        private ExponentialPower power() {
+            return new ExponentialPower(1 / shape);
+        }
+
         @Override
         public double mean() {
-            return GammaFunction.gamma(1 + 1 / shape);
+            return power().mean();
         }
 
         @Override
         public double variance() {
-            double mean = mean();
-            return mean * mean * StrictMath.expm1(excess(1 / shape));
+            return power().variance();
         }
 
-        /// `log Γ(1 + 2e) - 2 log Γ(1 + e)`.
-        private static double excess(double e) {
-            return e <= 0.25 ? GammaFunction.logExcess(e) : GammaFunction.log(1 + 2 * e) - 2 * GammaFunction.log(1 + e);
+        @Override
+        public double skewness() {
+            return power().skewness();
+        }
+
+        @Override
+        public double excessKurtosis() {
+            return power().excessKurtosis();
         }
 
         @Override

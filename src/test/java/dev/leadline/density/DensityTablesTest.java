@@ -165,6 +165,13 @@ class DensityTablesTest {
                 "dist-weibull-rayleigh | weibull(shape=0.6 | weibull | shape .6 scale 2",
                 "dist-weibull-rayleigh | rayleigh(sigma=1.3 | weibull | shape 2 scale 1.8384776310850235",
                 "dist-extreme-value | gumbel-max(location=2.0 | gumbel | location 2 scale 1.5",
+                "dist-extreme-value | GEV(xi=0.2 | generalized-extreme-value | location 1 scale 2 shape .2",
+                "dist-extreme-value | GEV(xi=0.6 | generalized-extreme-value | location 0 scale 1 shape .6",
+                "dist-pareto-family | generalised Pareto(xi=0.25 | generalized-pareto | location 1 scale 2 shape .25",
+                "dist-pareto-family | generalised Pareto(xi=0.7 | generalized-pareto | location 0 scale 1 shape .7",
+                "dist-pareto-family | pareto(minimum=2.0 | pareto | from 2 shape 2.5",
+                "dist-pareto-family | pareto(minimum=1.0 | pareto | from 1 shape .9",
+                "dist-inverse | inverse-gamma(shape=3.2 | inverse-gamma | shape 3.2 scale 2",
             })
     void agreesWithTheReferenceSet(String record, String label, String family, String parameters) {
         var words = parameters.split(" ");
