@@ -30,7 +30,10 @@ final class ProblemText {
     }
 
     static String note(Problem note) {
-        return "Note: %s.%n".formatted(note.primary());
+        return "Note: %s.%s%n"
+                .formatted(
+                        note.primary(),
+                        note.detail().map(detail -> " " + detail).orElse(""));
     }
 
     private static String of(Problem problem, Optional<Draft> draft) {

@@ -30,7 +30,8 @@ final class Densities {
         }
         return switch (draft.of()) {
             case Member member -> member(member, path);
-            case Values _, Mixture _, Typed _, Data _ -> unavailable(path);
+            case Data data -> new DataDensities(files, this, findings).of(data, path);
+            case Values _, Mixture _, Typed _ -> unavailable(path);
         };
     }
 

@@ -17,9 +17,19 @@ final class Findings {
     private static final int LONGEST_WHOLE = 15;
 
     private final List<Problem> problems = new ArrayList<>();
+    private final List<Problem> notes = new ArrayList<>();
 
     void add(String path, Problem problem) {
         problems.add(problem.at(Place.of(path)));
+    }
+
+    /// What is no fault but may surprise.
+    void note(String path, Problem note) {
+        notes.add(note.at(Place.of(path)));
+    }
+
+    List<Problem> notes() {
+        return List.copyOf(notes);
     }
 
     void add(String path, String primary, String detail) {

@@ -5,14 +5,26 @@ import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.SortedMap;
+import java.util.TreeMap;
 
 /// A project after every check: the question and how it is to be run, beside the draft they came from.
-public record Project(Draft draft, Question question, Plan plan) {
+///
+/// @param notes what is no fault but may surprise, at its JSON path: names that hide a number which every formula
+///     knows, rows of data that were left out
+/// @param data SHA-256 of each file of data that was read, by its name in the project
+public record Project(Draft draft, Question question, Plan plan, List<Problem> notes, SortedMap<String, String> data) {
+    public Project {
+        notes = List.copyOf(notes);
+        data = Collections.unmodifiableSortedMap(new TreeMap<>(data));
+    }
 
     /// Where a project says nothing.
     static final double USUAL_CONFIDENCE = .95;
@@ -28,7 +40,8 @@ public record Project(Draft draft, Question question, Plan plan) {
     public static Project of(Draft draft, DataFiles files) {
         var findings = new Findings();
         checkSizes(draft, findings);
-        List<Input> inputs = Inputs.of(draft.inputs(), files, findings);
+        SortedMap<String, String> read = new TreeMap<>();
+        List<Input> inputs = Inputs.of(draft.inputs(), noting(files, read), findings);
         List<Ask> asks = Asks.of(draft, findings);
         Optional<Working> working = Workings.of(draft, findings);
         working.ifPresent(formulas -> Asks.checkEvents(draft, formulas, findings));
@@ -51,12 +64,17 @@ public record Project(Draft draft, Question question, Plan plan) {
                 reference,
                 confidence,
                 tolerance);
-        return new Project(draft, question, plan);
+        List<Problem> notes = new ArrayList<>(Workings.notes(draft, question.working()));
+        notes.addAll(findings.notes());
+        return new Project(draft, question, plan, notes, read);
     }
 
-    /// What is no fault but may surprise, at its JSON path: names that hide a number which every formula knows.
-    public List<Problem> notes() {
-        return Workings.notes(draft, question.working());
+    private static DataFiles noting(DataFiles files, Map<String, String> read) {
+        return (file, column) -> {
+            DataColumn found = files.column(file, column);
+            read.put(file, found.hash());
+            return found;
+        };
     }
 
     private static void checkSizes(Draft draft, Findings findings) {

@@ -18,7 +18,7 @@ import java.util.stream.IntStream;
 ///
 /// Title, notes, labels, seed, lanes, tolerance, stop rule, reference and confidence do not enter: they may change
 /// while the question stays the same. Formulas enter as their tokens joined by one space, what is asked always as a
-/// list, what is not stated as absent.
+/// list, what is not stated as absent, files of data as their SHA-256.
 public final class Fingerprint {
 
     private Fingerprint() {}
@@ -57,6 +57,11 @@ public final class Fingerprint {
                                 question.asks().get(k),
                                 question.working().asked().get(k).canonical()))
                         .toList()));
+        if (!project.data().isEmpty()) {
+            var files = Json.object();
+            project.data().forEach(files::put);
+            content.put("data", files.build());
+        }
         return content.build();
     }
 
@@ -96,8 +101,12 @@ public final class Fingerprint {
     }
 
     private static String sha256(String text) {
+        return sha256(text.getBytes(StandardCharsets.UTF_8));
+    }
+
+    static String sha256(byte[] bytes) {
         try {
-            byte[] hash = MessageDigest.getInstance("SHA-256").digest(text.getBytes(StandardCharsets.UTF_8));
+            byte[] hash = MessageDigest.getInstance("SHA-256").digest(bytes);
             return HexFormat.of().formatHex(hash);
         } catch (NoSuchAlgorithmException e) {
             throw new IllegalStateException("every Java has SHA-256", e);

@@ -1,5 +1,6 @@
 package dev.leadline.project;
 
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Place;
@@ -27,11 +28,15 @@ public final class ProjectFile {
 
     /// @throws Refusal where there is no such file, or its text cannot be taken as a project at all
     public static Reading examine(Path file) {
-        return examine(bytes(file));
+        return examine(bytes(file), DataFolder.beside(file));
     }
 
     /// @throws Refusal where the text cannot be taken as a project at all
     public static Reading examine(byte[] bytes) {
+        return examine(bytes, DataFiles.NONE);
+    }
+
+    private static Reading examine(byte[] bytes, DataFiles files) {
         if (bytes.length > MOST_BYTES) {
             throw tooLarge(bytes.length);
         }
@@ -39,7 +44,7 @@ public final class ProjectFile {
         Json json = JsonReader.read(text(bytes), problems);
         Draft draft = DraftReader.read(json, problems);
         boolean asksInList = ((Json.Members) json).map().get("ask") instanceof Json.Elements;
-        return new Reading(draft, problems.found(), asksInList);
+        return new Reading(draft, files, problems.found(), asksInList);
     }
 
     /// @throws Refusal with every problem of the file

@@ -1,5 +1,6 @@
 package dev.leadline.project;
 
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Project;
 import dev.leadline.problem.Place;
@@ -13,9 +14,10 @@ import java.util.regex.Pattern;
 /// What came of reading a project file.
 ///
 /// @param draft what the file holds; what could not be told counts as absent
+/// @param files where the data come from that it names
 /// @param problems what is wrong with the file, at JSON paths; not with what it says
 /// @param asksInList whether a single ask stands in a list, which its path then says
-public record Reading(Draft draft, List<Problem> problems, boolean asksInList) {
+public record Reading(Draft draft, DataFiles files, List<Problem> problems, boolean asksInList) {
 
     private static final Pattern IN_DENSITY = Pattern.compile("(.*\\.(?:density|drawFrom))\\.[^.]+");
     private static final Pattern IN_RANGE = Pattern.compile("(.*\\.range)\\[\\d+]");
@@ -28,14 +30,14 @@ public record Reading(Draft draft, List<Problem> problems, boolean asksInList) {
     public Project project() {
         if (problems.isEmpty()) {
             try {
-                return Project.of(draft);
+                return Project.of(draft, files);
             } catch (Refusal refusal) {
                 throw new Refusal(refusal.problems().stream().map(this::placed).toList());
             }
         }
         List<Problem> all = new ArrayList<>(problems);
         try {
-            Project.of(draft);
+            Project.of(draft, files);
         } catch (Refusal refusal) {
             refusal.problems().stream().map(this::placed).filter(this::isNews).forEach(all::add);
         }

@@ -1,7 +1,6 @@
 package dev.leadline.chart;
 
 import dev.leadline.density.Portrait;
-import dev.leadline.model.Project;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.Study;
@@ -81,7 +80,7 @@ final class ShowPictures {
     }
 
     private static Settling run(Path file) throws InterruptedException {
-        var project = Project.of(ProjectFile.read(file));
+        var project = ProjectFile.examine(file).project();
         try (var study = Study.start(project.question(), project.plan(), 2, _ -> {})) {
             var traces = study.await().lanes().stream().map(LaneState::trace).toList();
             return Settling.of(project.question(), project.plan(), traces);

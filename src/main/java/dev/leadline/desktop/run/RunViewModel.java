@@ -2,6 +2,7 @@ package dev.leadline.desktop.run;
 
 import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.working.Edits;
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Project;
 import dev.leadline.problem.Problem;
@@ -91,7 +92,9 @@ public final class RunViewModel {
     }
 
     /// Runs the draft as it stands now.
-    public void start(Draft draft) {
+    ///
+    /// @param files where its data come from
+    public void start(Draft draft, DataFiles files) {
         if (!canStart(state.get())) {
             return;
         }
@@ -101,7 +104,7 @@ public final class RunViewModel {
         int workers = threads.get();
         background.run(
                 () -> {
-                    var project = Project.of(draft);
+                    var project = Project.of(draft, files);
                     mine.going = studies.start(project, workers, heard(mine, project));
                     return mine.going;
                 },

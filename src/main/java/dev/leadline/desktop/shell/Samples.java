@@ -1,6 +1,8 @@
 package dev.leadline.desktop.shell;
 
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
+import dev.leadline.project.ColumnReader;
 import dev.leadline.project.ProjectFile;
 import java.io.IOException;
 import java.io.InputStream;
@@ -8,6 +10,7 @@ import java.io.UncheckedIOException;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.SequencedMap;
+import java.util.Set;
 
 /// The sample projects that come with the program. They are opened as copies without a file.
 final class Samples {
@@ -21,6 +24,13 @@ final class Samples {
         TITLES.put("quay-lighting", "Quay lighting: a smooth integral");
     }
 
+    private static final Set<String> DATA_NAMES = Set.of("waits.csv");
+
+    /// Their data.
+    static final DataFiles DATA = (file, column) -> DATA_NAMES.contains(file)
+            ? ColumnReader.read(file, bytes(file), column)
+            : DataFiles.NONE.column(file, column);
+
     /// @param name of its file, without extension
     record Sample(String name, Draft draft) {}
 
@@ -33,12 +43,15 @@ final class Samples {
     }
 
     static Draft read(String name) {
-        try (InputStream in =
-                Samples.class.getResourceAsStream("/dev/leadline/sample-projects/" + name + ProjectFile.EXTENSION)) {
+        return ProjectFile.parse(bytes(name + ProjectFile.EXTENSION));
+    }
+
+    private static byte[] bytes(String file) {
+        try (InputStream in = Samples.class.getResourceAsStream("/dev/leadline/sample-projects/" + file)) {
             if (in == null) {
-                throw new IllegalStateException("the program was built without the sample project " + name);
+                throw new IllegalStateException("the program was built without the sample " + file);
             }
-            return ProjectFile.parse(in.readAllBytes());
+            return in.readAllBytes();
         } catch (IOException e) {
             throw new UncheckedIOException(e);
         }

@@ -10,11 +10,13 @@ import dev.leadline.desktop.working.Edits;
 import dev.leadline.desktop.working.LookViewModel;
 import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.ground.Ground;
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Project;
 import dev.leadline.model.Sentence;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import dev.leadline.project.DataFolder;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.project.WholeFile;
 import dev.leadline.study.AnswerText;
@@ -154,7 +156,7 @@ public final class WorkbenchViewModel {
     public void startRun() {
         if (canRun.get()) {
             notice.set("");
-            run.start(project.draft().get());
+            run.start(project.draft().get(), project.files());
         }
     }
 
@@ -262,13 +264,13 @@ public final class WorkbenchViewModel {
 
     /// @param kind of what is asked, as `mean`
     public void newProject(String kind) {
-        leaving(() -> show(Edits.asking(kind), Optional.empty()));
+        leaving(() -> show(Edits.asking(kind), Optional.empty(), DataFiles.NONE));
     }
 
     public void openSample(String name) {
         leaving(() -> background.run(
                 () -> Samples.read(name),
-                draft -> show(draft, Optional.empty()),
+                draft -> show(draft, Optional.empty(), Samples.DATA),
                 failure -> tell("The sample project cannot be opened", failure)));
     }
 
@@ -283,14 +285,14 @@ public final class WorkbenchViewModel {
     private void read(Path file) {
         background.run(
                 () -> ProjectFile.read(file),
-                draft -> show(draft, Optional.of(file)),
+                draft -> show(draft, Optional.of(file), DataFolder.beside(file)),
                 failure -> tell(file.getFileName() + " cannot be opened", failure));
     }
 
-    private void show(Draft draft, Optional<Path> file) {
+    private void show(Draft draft, Optional<Path> file, DataFiles files) {
         run.leave();
         stage.reset();
-        project.replace(draft, file);
+        project.replace(draft, file, files);
         started.set(true);
         notice.set("");
     }
@@ -299,7 +301,7 @@ public final class WorkbenchViewModel {
     public void closeProject() {
         leaving(() -> {
             run.leave();
-            project.replace(Edits.asking("mean"), Optional.empty());
+            project.replace(Edits.asking("mean"), Optional.empty(), DataFiles.NONE);
             started.set(false);
         });
     }

@@ -1,10 +1,12 @@
 package dev.leadline.desktop.working;
 
 import dev.leadline.desktop.background.Background;
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Project;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import dev.leadline.project.DataFolder;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
@@ -38,6 +40,7 @@ public final class ProjectViewModel {
     private final ReadOnlyObjectWrapper<Draft> draft = new ReadOnlyObjectWrapper<>();
     private final ReadOnlyObjectWrapper<Check> check = new ReadOnlyObjectWrapper<>(new Check.Checking());
     private final ReadOnlyObjectWrapper<Optional<Path>> file = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private DataFiles files = DataFiles.NONE;
     private final ReadOnlyBooleanWrapper edited = new ReadOnlyBooleanWrapper();
     private final ReadOnlyBooleanWrapper canUndo = new ReadOnlyBooleanWrapper();
     private final ReadOnlyBooleanWrapper canRedo = new ReadOnlyBooleanWrapper();
@@ -54,7 +57,7 @@ public final class ProjectViewModel {
         this.background = background;
         unread.addListener((MapChangeListener<String, Unread>) _ -> collectProblems());
         check.addListener((_, _, _) -> collectProblems());
-        replace(start, Optional.empty());
+        replace(start, Optional.empty(), DataFiles.NONE);
     }
 
     public ReadOnlyObjectProperty<Draft> draft() {
@@ -97,9 +100,17 @@ public final class ProjectViewModel {
         return check.get() instanceof Check.Sound(Project project) ? Optional.of(project) : Optional.empty();
     }
 
+    /// Where the data come from that the draft names.
+    public DataFiles files() {
+        return files;
+    }
+
     /// Another project in place of this one; its history starts anew.
-    public void replace(Draft start, Optional<Path> from) {
+    ///
+    /// @param data where its data come from
+    public void replace(Draft start, Optional<Path> from, DataFiles data) {
         history = new History<>(start);
+        files = data;
         saved = start;
         file.set(from);
         unread.clear();
@@ -107,11 +118,13 @@ public final class ProjectViewModel {
         show();
     }
 
-    /// The draft now stands in this file.
+    /// The draft now stands in this file, and its data beside it.
     public void savedAs(Path path, Draft what) {
         saved = what;
         file.set(Optional.of(path));
         edited.set(!saved.equals(draft.get()));
+        files = DataFolder.beside(path);
+        checkAgain();
     }
 
     /// @param key what is being edited, as a JSON path; edits with the same key that follow each other are undone as
@@ -197,9 +210,10 @@ public final class ProjectViewModel {
 
     private void checkAgain() {
         Draft checked = draft.get();
+        DataFiles from = files;
         long turn = ++newestCheck;
         background.<Check>run(
-                () -> checkOf(checked),
+                () -> checkOf(checked, from),
                 result -> {
                     if (turn == newestCheck) {
                         check.set(result);
@@ -213,9 +227,9 @@ public final class ProjectViewModel {
                 });
     }
 
-    private static Check checkOf(Draft draft) {
+    private static Check checkOf(Draft draft, DataFiles files) {
         try {
-            return new Check.Sound(Project.of(draft));
+            return new Check.Sound(Project.of(draft, files));
         } catch (Refusal refusal) {
             return new Check.Refused(refusal.problems());
         }

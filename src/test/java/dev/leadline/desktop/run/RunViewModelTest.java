@@ -9,6 +9,7 @@ import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
 import dev.leadline.desktop.run.RunViewModel.State;
 import dev.leadline.desktop.working.Edits;
+import dev.leadline.model.DataFiles;
 import dev.leadline.study.StudyState;
 import dev.leadline.study.StudyState.Activity;
 import java.util.List;
@@ -25,7 +26,7 @@ class RunViewModelTest {
     }
 
     private void start() {
-        run.start(Drafts.mean());
+        run.start(Drafts.mean(), DataFiles.NONE);
         background.finishAll();
     }
 
@@ -33,7 +34,7 @@ class RunViewModelTest {
     void goesFromReadyThroughRunningToFinished() {
         assertTrue(RunViewModel.canStart(run.state().get()));
         run.threads().set(3);
-        run.start(Drafts.mean());
+        run.start(Drafts.mean(), DataFiles.NONE);
         assertInstanceOf(State.Starting.class, run.state().get());
         assertFalse(RunViewModel.canStart(run.state().get()));
         background.finishAll();
@@ -84,7 +85,7 @@ class RunViewModelTest {
 
     @Test
     void leavingWhileItStartsClosesItOnceItHasStarted() {
-        run.start(Drafts.mean());
+        run.start(Drafts.mean(), DataFiles.NONE);
         run.leave();
         background.finishAll();
         assertInstanceOf(State.Ready.class, run.state().get());
@@ -102,7 +103,7 @@ class RunViewModelTest {
 
     @Test
     void aWrongQuestionIsRefusedNotRun() {
-        run.start(Edits.asking("mean"));
+        run.start(Edits.asking("mean"), DataFiles.NONE);
         background.finishAll();
         assertInstanceOf(State.Failed.class, run.state().get());
         assertEquals(List.of(), studies.heard);

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.From;
 import java.nio.file.Path;
@@ -231,7 +232,7 @@ class ProjectViewModelTest {
     @Test
     void anotherProjectStartsItsOwnHistory() {
         inputs.name(0, "z");
-        project.replace(Drafts.integral(), java.util.Optional.empty());
+        project.replace(Drafts.integral(), java.util.Optional.empty(), DataFiles.NONE);
         assertFalse(project.canUndo().get());
         assertFalse(project.edited().get());
         assertEquals(" from 0 to 2", InputsViewModel.summary(from()));
