@@ -21,15 +21,14 @@ class Trapezoidal:
         return log(self.h * min(rise, fall))
 
     def tails(self, x):
-        a, b, c, d, h = self.a, self.b, self.c, self.d, self.h
+        a, b, c, d = self.a, self.b, self.c, self.d
+        return self.below(x, a, b, c, d), self.below(-x, -d, -c, -b, -a)
+
+    def below(self, x, a, b, c, d):
         if a < b and x < b:
-            lower = h * (x - a) ** 2 / (b - a) / 2
-        elif c == d or x <= c:
-            lower = h * ((b - a) / 2 + x - b)
-        else:
-            upper = h * (d - x) ** 2 / (d - c) / 2
-            return 1 - upper, upper
-        return lower, 1 - lower
+            return self.h * (x - a) ** 2 / (b - a) / 2
+        flat = self.h * ((b - a) / 2 + min(x, c) - b)
+        return flat + (self.h * (x - c) * (2 * d - c - x) / (d - c) / 2 if c < x and c < d else 0)
 
     def support(self):
         return self.a, self.d
@@ -39,7 +38,7 @@ class CurvilinearTrapezoid:
     """JCGM 101:2008, 6.4.3: the tails are the integral of its density log((w + d) / |x - middle|) / (4 d)."""
     name, columns = "curvilinear-trapezoid", ["from", "to", "inexact"]
     members = [("-1", "1", "0.1"), ("-0.05", "0.05", "0.025"), ("1", "5", "1"), ("1", "5", "1.999"),
-               ("-1", "1", "0.000001"), ("9.5", "10.5", "0.5e-9")]
+               ("-1", "1", "9.5367431640625e-07"), ("9.5", "10.5", "4.656612873077393e-10")]
 
     def __init__(self, a, b, d):
         self.m, self.w, self.d = (a + b) / 2, (b - a) / 2, d
@@ -49,7 +48,8 @@ class CurvilinearTrapezoid:
 
     def tails(self, x):
         w, d = self.w, self.d
-        y = (w + d - abs(x - self.m)) / (w + d)
+        low, high = self.support()
+        y = min(x - low, high - x) / (w + d)
         e = 2 * d / (w + d)
 
         def corner(v):
@@ -223,7 +223,7 @@ class Logistic:
 
 class LogLogistic:
     name, columns = "log-logistic", ["shape", "scale"]
-    members = [("3.5", "2"), ("1", "1"), ("0.05", "1e-5"), ("0.5", "3"), ("40", "10"), ("100000", "1")]
+    members = [("3.5", "2"), ("1", "1"), ("0.06", "1e-5"), ("0.5", "3"), ("40", "10"), ("100000", "1")]
 
     def __init__(self, k, s):
         self.k, self.s = k, s

@@ -2,9 +2,12 @@ package dev.leadline.density;
 
 import static dev.leadline.density.Rule.between;
 import static dev.leadline.density.Rule.finite;
+import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.problem.Problem;
+import java.util.List;
 
 /// The beta density, between `from` and `to`.
 ///
@@ -21,8 +24,16 @@ public record Beta(double alpha, double beta, double from, double to) implements
                     finite("to", "largest value").or(1))
             .and(v -> Uniform.rising("from", v[2], "to", v[3]));
 
+    private static final Entry BY_MEAN = Entry.of(
+                    v -> ofMeanAndSd(v[0], v[1], v[2], v[3]),
+                    finite("mean", "mean value"),
+                    positive("sd", "standard deviation", "For a fixed value use a constant."),
+                    finite("from", "least value").or(0),
+                    finite("to", "largest value").or(1))
+            .and(v -> problems(v[0], v[1], v[2], v[3]));
+
     static final Family FAMILY = new Described(
-            "beta", "fractions and proportions; a probability seen in counts; a value between limits", ENTRY);
+            "beta", "fractions and proportions; a probability seen in counts; a value between limits", ENTRY, BY_MEAN);
 
     public Beta {
         ENTRY.check(alpha, beta, from, to);
@@ -31,6 +42,45 @@ public record Beta(double alpha, double beta, double from, double to) implements
     /// The beta density between 0 and 1.
     public static Beta of(double alpha, double beta) {
         return new Beta(alpha, beta, 0, 1);
+    }
+
+    /// The member of this mean and standard deviation.
+    public static Beta ofMeanAndSd(double mean, double sd, double from, double to) {
+        BY_MEAN.check(mean, sd, from, to);
+        double sum = sum(mean, sd, from, to);
+        return new Beta((mean - from) / (to - from) * sum, (to - mean) / (to - from) * sum, from, to);
+    }
+
+    /// Alpha and beta together: `(mean - from) (to - mean) / sd^2 - 1`.
+    private static double sum(double mean, double sd, double from, double to) {
+        double most = most(mean, from, to);
+        return (most - sd) / sd * ((most + sd) / sd);
+    }
+
+    /// The standard deviation if all values were at the limits.
+    private static double most(double mean, double from, double to) {
+        double width = to - from;
+        return width * Math.sqrt((mean - from) / width * ((to - mean) / width));
+    }
+
+    private static List<Problem> problems(double mean, double sd, double from, double to) {
+        var problems = Uniform.rising("from", from, "to", to);
+        if (!problems.isEmpty()) {
+            return problems;
+        }
+        if (!(mean > from && mean < to)) {
+            String words = "between from, " + Rule.number(from) + ", and to, " + Rule.number(to);
+            return List.of(Rule.problem("mean", mean, words, "The mean lies within the range.", ""));
+        }
+        double most = most(mean, from, to);
+        if (!(sd < most)) {
+            String words = "less than " + Rule.number(most);
+            return List.of(
+                    Rule.problem("sd", sd, words, "So much is only possible with all values at the limits.", ""));
+        }
+        double sum = sum(mean, sd, from, to);
+        return ENTRY.tooExtreme(
+                Rule.meanWithSd(mean, sd), (mean - from) / (to - from) * sum, (to - mean) / (to - from) * sum);
     }
 
     @Override

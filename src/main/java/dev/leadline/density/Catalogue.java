@@ -28,6 +28,8 @@ public final class Catalogue {
             GeneralizedPareto.FAMILY,
             InverseGamma.FAMILY,
             Student.FAMILY,
+            Trapezoidal.FAMILY,
+            CurvilinearTrapezoid.FAMILY,
             Arcsine.FAMILY,
             Pert.FAMILY,
             HalfNormal.FAMILY,
@@ -36,6 +38,7 @@ public final class Catalogue {
             Fisher.FAMILY,
             Laplace.FAMILY,
             Logistic.FAMILY,
+            LogLogistic.FAMILY,
             Cauchy.FAMILY);
 
     /// Families by other names that are in use.

@@ -23,6 +23,26 @@ record Entry(List<Rule> rules, Function<double[], List<Problem>> between, Functi
         return new Entry(rules, newBetween, maker);
     }
 
+    /// What is wrong with values that follow from others that were entered.
+    ///
+    /// @param given what was entered, as `mean 3 with sd 0.1`
+    List<Problem> tooExtreme(String given, double... values) {
+        var gives = new ArrayList<String>();
+        var broken = new ArrayList<String>();
+        for (int i = 0; i < values.length; i++) {
+            var rule = rules.get(i);
+            gives.add(rule.name() + " " + Rule.number(values[i]));
+            if (rule.broken(values[i]).isPresent()) {
+                broken.add(rule.name() + " must be " + rule.words());
+            }
+        }
+        return broken.isEmpty()
+                ? List.of()
+                : List.of(Problem.of(given + " is too extreme")
+                        .because("They give " + String.join(" and ", gives) + "; " + String.join(", ", broken) + ".")
+                        .tryThis("Check the units of both."));
+    }
+
     List<String> names() {
         return rules.stream().map(Rule::name).toList();
     }

@@ -18,7 +18,7 @@ public record Fisher(double dof1, double dof2) implements Scaled {
             v -> new Fisher(v[0], v[1]),
             between(0.2, 1e6, "dof1", "degrees of freedom of the numerator", LIMITS),
             between(
-                    0.1,
+                    0.2,
                     1e6,
                     "dof2",
                     "degrees of freedom of the denominator; the fewer, the heavier the tail",
@@ -128,9 +128,7 @@ public record Fisher(double dof1, double dof2) implements Scaled {
             double a = tails.a();
             double b = tails.b();
             double n = a + b - 1;
-            return b > 3
-                    ? 2 * (n + a) / (b - 3) * Math.sqrt((b - 2) / (a * n))
-                    : b > 2 ? Double.POSITIVE_INFINITY : Double.NaN;
+            return b > 3 ? 2 * (n + a) / (b - 3) * Math.sqrt((b - 2) / (a * n)) : Shape.super.skewness();
         }
 
         @Override
@@ -138,9 +136,7 @@ public record Fisher(double dof1, double dof2) implements Scaled {
             double a = tails.a();
             double b = tails.b();
             double part = (b - 1) * (b - 1) * (b - 2) / (a * (a + b - 1));
-            return b > 4
-                    ? 6 * (5 * b - 11 + part) / ((b - 3) * (b - 4))
-                    : b > 2 ? Double.POSITIVE_INFINITY : Double.NaN;
+            return b > 4 ? 6 * (5 * b - 11 + part) / ((b - 3) * (b - 4)) : Shape.super.excessKurtosis();
         }
 
         @Override

@@ -5,6 +5,8 @@ import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.problem.Problem;
+import java.util.List;
 
 /// The gamma density; its mean is `shape * scale`.
 ///
@@ -20,12 +22,41 @@ public record Gamma(double shape, double scale) implements Scaled {
                     "Beyond these limits its values are too far apart or too close for numbers of 16 digits."),
             positive("scale", "mean divided by shape", "The gamma density divides by its scale."));
 
+    private static final Entry BY_MEAN = Entry.of(
+                    v -> ofMeanAndSd(v[0], v[1]),
+                    positive("mean", "mean value", "A gamma value is positive."),
+                    positive("sd", "standard deviation", "The gamma density divides by it.")
+                            .tryThis("For a fixed value use a constant."))
+            .and(v -> problems(v[0], v[1]));
+
+    private static final Entry BY_CV = Entry.of(
+                    v -> ofMeanAndSd(v[0], v[0] * v[1]),
+                    positive("mean", "mean value", "A gamma value is positive."),
+                    Rule.cv())
+            .and(v -> problems(v[0], v[0] * v[1]));
+
     static final Family FAMILY = new Described(
-                    "gamma", "times until several events, rain, amounts of loss; a rate seen in counts", ENTRY)
+                    "gamma",
+                    "times until several events, rain, amounts of loss; a rate seen in counts",
+                    ENTRY,
+                    BY_MEAN,
+                    BY_CV)
             .enteredBy(ByQuantiles.ofPositiveShapeAndScale(1e-3, 1e6, v -> new Gamma(v[0], v[1])));
 
     public Gamma {
         ENTRY.check(shape, scale);
+    }
+
+    /// The member of this mean and standard deviation.
+    public static Gamma ofMeanAndSd(double mean, double sd) {
+        BY_MEAN.check(mean, sd);
+        double ratio = mean / sd;
+        return new Gamma(ratio * ratio, sd / ratio);
+    }
+
+    private static List<Problem> problems(double mean, double sd) {
+        double ratio = mean / sd;
+        return ENTRY.tooExtreme(Rule.meanWithSd(mean, sd), ratio * ratio, sd / ratio);
     }
 
     @Override

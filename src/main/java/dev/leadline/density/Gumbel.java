@@ -20,12 +20,25 @@ public record Gumbel(double location, double scale) implements Scaled {
                             "The Gumbel density divides by its scale.")
                     .tryThis("For a fixed value use a constant."));
 
+    private static final Entry BY_MEAN = Entry.of(
+            v -> ofMeanAndSd(v[0], v[1]),
+            finite("mean", "mean of the largest values"),
+            positive("sd", "standard deviation of the largest values", "The Gumbel density divides by it.")
+                    .tryThis("For a fixed value use a constant."));
+
     static final Family FAMILY = new Described(
-                    "gumbel", "largest value of a period: gusts, waves, floods, loads", ENTRY)
+                    "gumbel", "largest value of a period: gusts, waves, floods, loads", ENTRY, BY_MEAN)
             .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Gumbel(v[0], v[1])));
 
     public Gumbel {
         ENTRY.check(location, scale);
+    }
+
+    /// The member of this mean and standard deviation.
+    public static Gumbel ofMeanAndSd(double mean, double sd) {
+        BY_MEAN.check(mean, sd);
+        double scale = sd / Math.sqrt(Standard.VARIANCE);
+        return new Gumbel(Math.fma(-Standard.EULER, scale, mean), scale);
     }
 
     @Override

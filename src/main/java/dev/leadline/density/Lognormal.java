@@ -36,11 +36,18 @@ public record Lognormal(double mu, double sigma) implements Scaled {
                             .tryThis("For a fixed value use a constant."))
             .and(v -> problems(v[0], v[1]));
 
+    private static final Entry BY_CV = Entry.of(
+                    v -> ofMeanAndSd(v[0], v[0] * v[1]),
+                    positive("mean", "mean of the value itself", "A lognormal value is positive."),
+                    Rule.cv())
+            .and(v -> problems(v[0], v[0] * v[1]));
+
     static final Family FAMILY = new Described(
                     "lognormal",
                     "positive values that vary by factors: costs, permeabilities, concentrations, incomes",
                     ENTRY,
-                    BY_MEAN)
+                    BY_MEAN,
+                    BY_CV)
             .enteredBy(new ByQuantiles(List.of(), Lognormal::ofQuantiles));
 
     public Lognormal {
@@ -71,16 +78,7 @@ public record Lognormal(double mu, double sigma) implements Scaled {
 
     private static List<Problem> problems(double mean, double sd) {
         double sigma = sigma(sd / mean);
-        double mu = Log.log(mean) - 0.5 * sigma * sigma;
-        boolean fits = ENTRY.rules().get(0).broken(mu).isEmpty()
-                && ENTRY.rules().get(1).broken(sigma).isEmpty();
-        return fits
-                ? List.of()
-                : List.of(Problem.of("mean %s with sd %s is too extreme".formatted(Rule.number(mean), Rule.number(sd)))
-                        .because(
-                                "They give mu %s and sigma %s; mu must be between -700 and 700, sigma between 1e-9 and 80."
-                                        .formatted(Rule.number(mu), Rule.number(sigma)))
-                        .tryThis("Check the units of both."));
+        return ENTRY.tooExtreme(Rule.meanWithSd(mean, sd), Log.log(mean) - 0.5 * sigma * sigma, sigma);
     }
 
     @Override

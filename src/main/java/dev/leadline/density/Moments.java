@@ -23,8 +23,14 @@ final class Moments {
     private Moments() {}
 
     static double skewness(Density density) {
-        double variance = density.variance();
-        return density.tailOrders().least() > 3 && Double.isFinite(variance) ? standardised(density, 3) : Double.NaN;
+        if (!Double.isFinite(density.variance())) {
+            return Double.NaN;
+        }
+        var tails = density.tailOrders();
+        if (tails.lower() > 3) {
+            return tails.upper() > 3 ? standardised(density, 3) : Double.POSITIVE_INFINITY;
+        }
+        return tails.upper() > 3 ? Double.NEGATIVE_INFINITY : Double.NaN;
     }
 
     static double excessKurtosis(Density density) {

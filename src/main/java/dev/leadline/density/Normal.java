@@ -13,8 +13,16 @@ public record Normal(double mean, double sd) implements Scaled {
             positive("sd", "standard deviation", "The normal density divides by its standard deviation.")
                     .tryThis("For a fixed value use a constant."));
 
+    private static final Entry BY_CV = Entry.of(
+                    v -> new Normal(v[0], Math.abs(v[0]) * v[1]), finite("mean", "middle value"), Rule.cv())
+            .and(v -> ENTRY.tooExtreme(
+                    "mean %s with cv %s".formatted(Rule.number(v[0]), Rule.number(v[1])), v[0], Math.abs(v[0]) * v[1]));
+
     static final Family FAMILY = new Described(
-                    "normal", "sums of many small effects; measurement errors; a value with its uncertainty", ENTRY)
+                    "normal",
+                    "sums of many small effects; measurement errors; a value with its uncertainty",
+                    ENTRY,
+                    BY_CV)
             .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Normal(v[0], v[1])));
 
     public Normal {

@@ -38,6 +38,12 @@ record Rule(
         return new Rule(name, use, words, v -> v >= least && v <= most, why, "", OptionalDouble.empty());
     }
 
+    /// A standard deviation over its mean.
+    static Rule cv() {
+        return positive("cv", "standard deviation over mean, as a fraction", "Values that do not vary are a constant.")
+                .tryThis("10 % is 0.1.");
+    }
+
     Rule tryThis(String newHint) {
         return new Rule(name, use, words, holds, why, newHint, otherwise);
     }
@@ -65,6 +71,10 @@ record Rule(
                 .at(Place.of(name));
         var explained = why.isEmpty() ? said : said.because(why);
         return hint.isEmpty() ? explained : explained.tryThis(hint);
+    }
+
+    static String meanWithSd(double mean, double sd) {
+        return "mean " + number(mean) + " with sd " + number(sd);
     }
 
     /// A number as a person writes it: no `.0` behind a whole number.

@@ -31,6 +31,7 @@ import org.apache.commons.statistics.distribution.NakagamiDistribution;
 import org.apache.commons.statistics.distribution.NormalDistribution;
 import org.apache.commons.statistics.distribution.ParetoDistribution;
 import org.apache.commons.statistics.distribution.TDistribution;
+import org.apache.commons.statistics.distribution.TrapezoidalDistribution;
 import org.apache.commons.statistics.distribution.TriangularDistribution;
 import org.apache.commons.statistics.distribution.UniformContinuousDistribution;
 import org.apache.commons.statistics.distribution.WeibullDistribution;
@@ -271,6 +272,8 @@ class CatalogueTest {
         return switch (density) {
             case Triangular d -> DoubleStream.of(d.mode());
             case Laplace d -> DoubleStream.of(d.location());
+            case Trapezoidal d -> DoubleStream.of(d.flatFrom(), d.flatTo());
+            case CurvilinearTrapezoid d -> DoubleStream.of(d.from() + d.inexact(), d.to() - d.inexact());
             default -> DoubleStream.empty();
         };
     }
@@ -369,6 +372,7 @@ class CatalogueTest {
                     case Gumbel d -> GumbelDistribution.of(d.location(), d.scale());
                     case Pareto d -> ParetoDistribution.of(d.from(), d.shape());
                     case Student d -> new Shifted(TDistribution.of(d.dof()), d.location(), d.scale());
+                    case Trapezoidal d -> TrapezoidalDistribution.of(d.from(), d.flatFrom(), d.flatTo(), d.to());
                     case Arcsine d -> new Shifted(BetaDistribution.of(0.5, 0.5), d.from(), d.to() - d.from());
                     case Pert d ->
                         new Shifted(

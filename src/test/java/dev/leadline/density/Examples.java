@@ -75,6 +75,15 @@ final class Examples {
                 new Student(1, -3, 0.01),
                 new Student(18, 50_000_623, 25),
                 new Student(1e10, 0, 1),
+                new Trapezoidal(0, 1, 3, 6),
+                new Trapezoidal(-1, -1, 2, 4),
+                new Trapezoidal(-1, 2, 4, 4),
+                new Trapezoidal(0, 0, 5, 5),
+                new Trapezoidal(10, 10.001, 10.999, 11),
+                Trapezoidal.ofTop(0, 7, 0),
+                new CurvilinearTrapezoid(-1, 1, 0.1),
+                new CurvilinearTrapezoid(1, 5, 1.999),
+                new CurvilinearTrapezoid(9.5, 10.5, 0.5e-9),
                 new Arcsine(-0.5, 0.5),
                 new Arcsine(19.5, 20.5),
                 new Pert(1, 4, 10, 4),
@@ -96,6 +105,10 @@ final class Examples {
                 new Laplace(0.5, 1.2),
                 new Logistic(1, 2),
                 new Logistic(50_000_623, 25),
+                new LogLogistic(3.5, 2),
+                new LogLogistic(0.06, 1e-5),
+                new LogLogistic(1, 1),
+                new LogLogistic(1e6, 10),
                 new Cauchy(1, 2));
     }
 }

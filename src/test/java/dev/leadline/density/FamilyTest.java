@@ -45,6 +45,33 @@ class FamilyTest {
                 "triangular | from 0 mode NaN to 7 | mode is NaN but must be a finite number",
                 "triangular | from 7 mode 7 to 7 | to is 7 but must be greater than from, 7",
                 "exponential | mean 0 | mean is 0 but must be greater than 0",
+                "exponential | mean 2 from 3 | mean is 2 but must be greater than from, 3",
+                "exponential | mean NaN | mean is NaN but must be a finite number",
+                "trapezoidal | from 0 flatFrom 5 flatTo 2 to 3 | flatFrom is 5 but must be between from, 0, and to, 3; flatTo is 2 but must be between flatFrom, 3, and to, 3",
+                "trapezoidal | from 0 flatFrom 2 flatTo 1 to 3 | flatTo is 1 but must be between flatFrom, 2, and to, 3",
+                "trapezoidal | from 0 to 3 | flatFrom is missing; flatTo is missing",
+                "trapezoidal | from 0 to 3 top 2 | top is 2 but must be at least 0 and at most 1",
+                "curvilinear-trapezoid | from 0 to 2 inexact 1 | inexact is 1 but must be less than half of the distance between from and to, 1",
+                "curvilinear-trapezoid | from 0 to 2 inexact 0 | inexact is 0 but must be greater than 0",
+                "arcsine | from 1 to 1 | to is 1 but must be greater than from, 1",
+                "pert | from 0 mode 3 to 2 | mode is 3 but must be between from, 0, and to, 2",
+                "pert | from 0 mode 1 to 2 weight 0 | weight is 0 but must be at least 0.01 and at most 100000",
+                "half-normal | sigma NaN | sigma is NaN but must be greater than 0",
+                "rayleigh | mean -1 | mean is -1 but must be greater than 0",
+                "rayleigh | mean 1 sigma 1 | mean and sigma do not go together in one density",
+                "chi-square | dof 0 | dof is 0 but must be at least 0.2 and at most 1000000",
+                "f | dof1 0 dof2 NaN | dof1 is 0 but must be at least 0.2 and at most 1000000; dof2 is NaN but must be at least 0.2 and at most 1000000",
+                "laplace | mean 0 sd 0 | sd is 0 but must be greater than 0",
+                "logistic | location 0 scale -1 | scale is -1 but must be greater than 0",
+                "log-logistic | shape 0.01 scale 1 | shape is 0.01 but must be at least 0.05 and at most 1000000",
+                "log-logistic | shape 0.05 scale 1 | some draws of this density would exceed the largest number there is, 1.8e308",
+                "cauchy | location NaN scale 1 | location is NaN but must be a finite number",
+                "gamma | mean 1 sd 1e-9 | mean 1 with sd 1.0e-9 is too extreme",
+                "gamma | mean 1 cv -0.1 | cv is -0.1 but must be greater than 0",
+                "normal | mean 0 cv 0.1 | mean 0 with cv 0.1 is too extreme",
+                "beta | mean 2 sd 0.1 | mean is 2 but must be between from, 0, and to, 1",
+                "beta | mean 0.5 sd 0.5 | sd is 0.5 but must be less than 0.5",
+                "beta | mean 0.5 sd 1e-9 | mean 0.5 with sd 1.0e-9 is too extreme",
                 "gamma | shape 0 scale 1 | shape is 0 but must be at least 0.001 and at most 1000000",
                 "beta | alpha 1 beta 0.001 | beta is 0.001 but must be at least 0.01 and at most 1000000",
                 "beta | alpha 1 beta 1 from 1 | to is 1 but must be greater than from, 1",
@@ -81,7 +108,7 @@ class FamilyTest {
     void namesTheNearestParameter() {
         var problem = problems("normal", "mean 0 sdd 1").getFirst();
         assertEquals(
-                "It is entered by mean and sd, or by q5 and q95.",
+                "It is entered by mean and sd, or by mean and cv, or by q5 and q95.",
                 problem.detail().orElseThrow());
         assertEquals("Did you mean sd?", problem.hint().orElseThrow());
         assertEquals("sdd", problem.place().path());
@@ -91,7 +118,7 @@ class FamilyTest {
     void namesTheWaysToEnter() {
         var mixed = problems("lognormal", "mu 0 mean 1").getFirst();
         assertEquals(
-                "lognormal is entered by mu and sigma, or by mean and sd, or by q5 and q95.",
+                "lognormal is entered by mu and sigma, or by mean and sd, or by mean and cv, or by q5 and q95.",
                 mixed.detail().orElseThrow());
         assertEquals("", mixed.place().path());
         var missing = problems("lognormal", "mean 3").getFirst();
