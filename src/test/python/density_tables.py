@@ -13,7 +13,7 @@ Other scripts (density_tables_*.py) import this one for families of their own: a
 Gamma and beta masses are a power series or a continued fraction of the smaller tail, written for this file.
 """
 import os
-from mpmath import mp, mpf, erfc, exp, expm1, gamma, inf, log, log1p, loggamma, pi, sqrt
+from mpmath import mp, mpf, erfc, euler, exp, expm1, gamma, inf, log, log1p, loggamma, nan, pi, sqrt, zeta
 import mpmath
 
 mp.dps = 60
@@ -74,6 +74,27 @@ def beta_tails(a, b, x):
     return 1 - upper, upper
 
 
+def standardised(raw, order):
+    """Mean, variance, skewness, excess kurtosis from a function of the order; those from `order` on do not exist."""
+    with mp.workdps(150):
+        m = [mpf(1)] + [raw(k) if k < order else None for k in range(1, 5)]
+        mean = m[1] if order > 1 else inf
+        if order <= 2:
+            return mean, inf, nan, nan
+        variance = m[2] - mean ** 2
+        skewness, excess = inf, inf
+        if order > 3:
+            skewness = (m[3] - 3 * mean * m[2] + 2 * mean ** 3) / variance ** mpf(1.5)
+        if order > 4:
+            excess = (m[4] - 4 * mean * m[3] + 6 * mean ** 2 * m[2] - 3 * mean ** 4) / variance ** 2 - 3
+        return mean, variance, skewness, excess
+
+
+def moved(moments, location, scale):
+    mean, variance, skewness, excess = moments
+    return location + scale * mean, scale * scale * variance, skewness, excess
+
+
 class Uniform:
     name, columns = "uniform", ["from", "to"]
     members = [("-2", "3"), ("1000000", "1000000.5")]
@@ -86,6 +107,9 @@ class Uniform:
 
     def tails(self, x):
         return (x - self.a) / (self.b - self.a), (self.b - x) / (self.b - self.a)
+
+    def moments(self):
+        return (self.a + self.b) / 2, (self.b - self.a) ** 2 / 12, 0, mpf(-6) / 5
 
     def support(self):
         return self.a, self.b
@@ -106,6 +130,9 @@ class Normal:
         z = (x - self.m) / self.s / sqrt(mpf(2))
         return erfc(-z) / 2, erfc(z) / 2
 
+    def moments(self):
+        return self.m, self.s ** 2, 0, 0
+
     def support(self):
         return -inf, inf
 
@@ -122,6 +149,9 @@ class Lognormal:
 
     def tails(self, x):
         return self.n.tails(log(x))
+
+    def moments(self):
+        return standardised(lambda k: exp(k * self.n.m + k * k * self.n.s ** 2 / 2), inf)
 
     def support(self):
         return mpf(0), inf
@@ -144,6 +174,16 @@ class Triangular:
             return (x - a) ** 2 / (b - a) / (m - a), (b - m + (m - x) * (m + x - 2 * a) / (m - a)) / (b - a)
         return (m - a + (x - m) * (2 * b - m - x) / (b - m)) / (b - a), (b - x) ** 2 / (b - a) / (b - m)
 
+    def moments(self):
+        return moved(standardised(self.raw, inf), self.a, self.b - self.a)
+
+    def raw(self, k):
+        """Of the density between 0 and 1: the integral of the two straight lines."""
+        m = (self.m - self.a) / (self.b - self.a)
+        rising = m ** (k + 1) / (k + 2)
+        falling = ((1 - m ** (k + 1)) / (k + 1) - (1 - m ** (k + 2)) / (k + 2)) / (1 - m) if m < 1 else 0
+        return 2 * (rising + falling)
+
     def support(self):
         return self.a, self.b
 
@@ -162,6 +202,9 @@ class Exponential:
         z = (x - self.low) / self.s
         return -expm1(-z), exp(-z)
 
+    def moments(self):
+        return self.low + self.s, self.s ** 2, 2, 6
+
     def support(self):
         return self.low, inf
 
@@ -179,6 +222,9 @@ class Gamma:
 
     def tails(self, x):
         return gamma_tails(self.a, x / self.s)
+
+    def moments(self):
+        return moved(standardised(lambda k: gamma(self.a + k) / gamma(self.a), inf), 0, self.s)
 
     def support(self):
         return mpf(0), inf
@@ -201,6 +247,12 @@ class Beta:
     def tails(self, x):
         return beta_tails(self.a, self.b, (x - self.low) / (self.high - self.low))
 
+    def moments(self):
+        return moved(standardised(self.raw, inf), self.low, self.high - self.low)
+
+    def raw(self, k):
+        return exp(loggamma(self.a + k) - loggamma(self.a) + loggamma(self.a + self.b) - loggamma(self.a + self.b + k))
+
     def support(self):
         return self.low, self.high
 
@@ -220,6 +272,9 @@ class Weibull:
         z = ((x - self.low) / self.s) ** self.k
         return -expm1(-z), exp(-z)
 
+    def moments(self):
+        return moved(standardised(lambda k: gamma(1 + k / self.k), inf), self.low, self.s)
+
     def support(self):
         return self.low, inf
 
@@ -238,6 +293,9 @@ class Gumbel:
     def tails(self, x):
         z = exp(min(-(x - self.m) / self.s, mpf(1000)))
         return exp(-z), -expm1(-z)
+
+    def moments(self):
+        return self.m + euler * self.s, (pi * self.s) ** 2 / 6, 12 * sqrt(mpf(6)) * zeta(3) / pi ** 3, mpf(12) / 5
 
     def support(self):
         return -inf, inf
@@ -264,6 +322,16 @@ class Student:
         else:
             far = (1 - beta_lower(mpf(1) / 2, n / 2, square * w)) / 2
         return (1 - far, far) if z > 0 else (far, 1 - far)
+
+    def moments(self):
+        return self.from_dof()
+
+    def from_dof(self):
+        n = self.n
+        if n <= 1:
+            return nan, nan, nan, nan
+        variance = self.s ** 2 * n / (n - 2) if n > 2 else inf
+        return self.m, variance, 0 if n > 3 else nan, 6 / (n - 4) if n > 4 else inf if n > 2 else nan
 
     def support(self):
         return -inf, inf

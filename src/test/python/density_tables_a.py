@@ -2,8 +2,8 @@
 
 Run from the top of the repository: python3 src/test/python/density_tables_a.py
 """
-from density_tables import beta_lower, beta_tails, gamma_tails, main
-from mpmath import asin, atan, erf, erfc, exp, expm1, inf, log, log1p, loggamma, mpf, pi, sqrt
+from density_tables import beta_lower, beta_tails, gamma_tails, main, moved, standardised
+from mpmath import asin, atan, erf, erfc, exp, expm1, gamma, inf, log, log1p, loggamma, mpf, nan, pi, sin, sqrt
 
 
 class Trapezoidal:
@@ -29,6 +29,16 @@ class Trapezoidal:
             return self.h * (x - a) ** 2 / (b - a) / 2
         flat = self.h * ((b - a) / 2 + min(x, c) - b)
         return flat + (self.h * (x - c) * (2 * d - c - x) / (d - c) / 2 if c < x and c < d else 0)
+
+    def moments(self):
+        return standardised(self.raw, inf)
+
+    def raw(self, k):
+        """The second difference of the power two orders higher."""
+        def rise(low, high):
+            return (k + 2) * low ** (k + 1) if low == high else (high ** (k + 2) - low ** (k + 2)) / (high - low)
+
+        return self.h * (rise(self.c, self.d) - rise(self.a, self.b)) / ((k + 1) * (k + 2))
 
     def support(self):
         return self.a, self.d
@@ -60,6 +70,13 @@ class CurvilinearTrapezoid:
         far = corner(y) if y < e else corner(e) - (y - e) * log(1 - e) / (2 * e)
         return (far, 1 - far) if x < self.m else (1 - far, far)
 
+    def moments(self):
+        return self.m, self.mean_power(2) / 3, 0, self.mean_power(4) / 5 / (self.mean_power(2) / 3) ** 2 - 3
+
+    def mean_power(self, k):
+        """Of half the width, which is uniform."""
+        return ((self.w + self.d) ** (k + 1) - (self.w - self.d) ** (k + 1)) / (2 * self.d * (k + 1))
+
     def support(self):
         return self.m - self.w - self.d, self.m + self.w + self.d
 
@@ -78,6 +95,9 @@ class Arcsine:
         w = self.b - self.a
         z, y = max((x - self.a) / w, mpf(0)), max((self.b - x) / w, mpf(0))
         return 2 / pi * asin(sqrt(z)), 2 / pi * asin(sqrt(y))
+
+    def moments(self):
+        return (self.a + self.b) / 2, (self.b - self.a) ** 2 / 8, 0, mpf(-3) / 2
 
     def support(self):
         return self.a, self.b
@@ -101,6 +121,12 @@ class Pert:
     def tails(self, x):
         return beta_tails(self.a, self.b, (x - self.low) / self.w)
 
+    def moments(self):
+        return moved(standardised(self.raw, inf), self.low, self.w)
+
+    def raw(self, k):
+        return exp(loggamma(self.a + k) - loggamma(self.a) + loggamma(self.a + self.b) - loggamma(self.a + self.b + k))
+
     def support(self):
         return self.low, self.high
 
@@ -118,6 +144,9 @@ class HalfNormal:
     def tails(self, x):
         z = x / self.s / sqrt(mpf(2))
         return erf(z), erfc(z)
+
+    def moments(self):
+        return moved(standardised(lambda k: 2 ** (mpf(k) / 2) * gamma((k + mpf(1)) / 2) / sqrt(pi), inf), 0, self.s)
 
     def support(self):
         return mpf(0), inf
@@ -137,6 +166,9 @@ class Rayleigh:
         z = (x / self.s) ** 2 / 2
         return -expm1(-z), exp(-z)
 
+    def moments(self):
+        return moved(standardised(lambda k: 2 ** (mpf(k) / 2) * gamma(1 + mpf(k) / 2), inf), 0, self.s)
+
     def support(self):
         return mpf(0), inf
 
@@ -153,6 +185,9 @@ class ChiSquare:
 
     def tails(self, x):
         return gamma_tails(self.a, x / 2)
+
+    def moments(self):
+        return moved(standardised(lambda k: gamma(self.a + k) / gamma(self.a), inf), 0, 2)
 
     def support(self):
         return mpf(0), inf
@@ -179,6 +214,13 @@ class Fisher:
         upper = beta_lower(b, a, 1 / (1 + z))
         return 1 - upper, upper
 
+    def moments(self):
+        return moved(standardised(self.raw, self.n / 2), 0, self.n / self.m)
+
+    def raw(self, k):
+        a, b = self.m / 2, self.n / 2
+        return exp(loggamma(a + k) - loggamma(a) + loggamma(b - k) - loggamma(b))
+
     def support(self):
         return mpf(0), inf
 
@@ -196,6 +238,9 @@ class Laplace:
     def tails(self, x):
         far = exp(-abs(x - self.m) / self.s) / 2
         return (far, 1 - far) if x < self.m else (1 - far, far)
+
+    def moments(self):
+        return self.m, 2 * self.s ** 2, 0, 3
 
     def support(self):
         return -inf, inf
@@ -216,6 +261,9 @@ class Logistic:
         e = exp(-abs(x - self.m) / self.s)
         far, near = e / (1 + e), 1 / (1 + e)
         return (far, near) if x < self.m else (near, far)
+
+    def moments(self):
+        return self.m, (pi * self.s) ** 2 / 3, 0, mpf(6) / 5
 
     def support(self):
         return -inf, inf
@@ -238,6 +286,9 @@ class LogLogistic:
         far, near = e / (1 + e), 1 / (1 + e)
         return (far, near) if w < 0 else (near, far)
 
+    def moments(self):
+        return moved(standardised(lambda k: k * pi / self.k / sin(k * pi / self.k), self.k), 0, self.s)
+
     def support(self):
         return mpf(0), inf
 
@@ -256,6 +307,9 @@ class Cauchy:
         z = abs(x - self.m) / self.s
         far = atan(1 / z) / pi if z else mpf(1) / 2
         return (far, 1 - far) if x < self.m else (1 - far, far)
+
+    def moments(self):
+        return nan, nan, nan, nan
 
     def support(self):
         return -inf, inf

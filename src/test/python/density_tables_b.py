@@ -7,28 +7,7 @@ Moments are taken from raw moments at 150 digits, or by integrating the density.
 from mpmath import mp, mpf, exp, expm1, gamma, inf, log, log1p, loggamma, nan, pi, sqrt
 import mpmath
 
-from density_tables import gamma_tails, main
-
-
-def standardised(raw, order):
-    """Mean, variance, skewness, excess kurtosis from a function of the order; those from `order` on do not exist."""
-    with mp.workdps(150):
-        m = [mpf(1)] + [raw(k) if k < order else None for k in range(1, 5)]
-        mean = m[1] if order > 1 else inf
-        if order <= 2:
-            return mean, inf, nan, nan
-        variance = m[2] - mean ** 2
-        skewness, excess = nan, inf
-        if order > 3:
-            skewness = (m[3] - 3 * mean * m[2] + 2 * mean ** 3) / variance ** mpf(1.5)
-        if order > 4:
-            excess = (m[4] - 4 * mean * m[3] + 6 * mean ** 2 * m[2] - 3 * mean ** 4) / variance ** 2 - 3
-        return mean, variance, skewness, excess
-
-
-def moved(moments, location, scale):
-    mean, variance, skewness, excess = moments
-    return location + scale * mean, scale * scale * variance, skewness, excess
+from density_tables import gamma_tails, main, moved, standardised
 
 
 def gumbel_tails(y):

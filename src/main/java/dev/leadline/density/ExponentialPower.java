@@ -30,8 +30,11 @@ record ExponentialPower(double e) {
     /// `exp(L(3)) - 3 exp(L(2)) + 2` over `(exp(L(2)) - 1)^(3/2)`.
     double skewness() {
         double variance = relativeVariance();
-        if (!(e > -1 / 3.0) || !(variance < Double.POSITIVE_INFINITY)) {
+        if (!(variance < Double.POSITIVE_INFINITY)) {
             return Double.NaN;
+        }
+        if (!(e > -1 / 3.0)) {
+            return Double.POSITIVE_INFINITY;
         }
         double two = difference(2);
         double three = difference(3);

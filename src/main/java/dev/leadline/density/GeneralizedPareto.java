@@ -97,13 +97,15 @@ public record GeneralizedPareto(double location, double scale, double shape) imp
 
         @Override
         public double skewness() {
-            return shape < 1 / 3.0 ? 2 * (1 + shape) * Math.sqrt(1 - 2 * shape) / (1 - 3 * shape) : Double.NaN;
+            return shape < 1 / 3.0
+                    ? 2 * (1 + shape) * Math.sqrt(1 - 2 * shape) / (1 - 3 * shape)
+                    : Shape.super.skewness();
         }
 
         @Override
         public double excessKurtosis() {
             if (!(shape < 0.25)) {
-                return shape < 0.5 ? Double.POSITIVE_INFINITY : Double.NaN;
+                return Shape.super.excessKurtosis();
             }
             double polynomial = Math.fma(Math.fma(Math.fma(-2, shape, -6), shape, 1), shape, 1);
             return 6 * polynomial / ((1 - 3 * shape) * (1 - 4 * shape));

@@ -107,13 +107,13 @@ public record InverseGamma(double shape, double scale) implements Scaled {
 
         @Override
         public double skewness() {
-            return a() > 3 ? 4 * Math.sqrt(a() - 2) / (a() - 3) : Double.NaN;
+            return a() > 3 ? 4 * Math.sqrt(a() - 2) / (a() - 3) : Shape.super.skewness();
         }
 
         @Override
         public double excessKurtosis() {
             if (!(a() > 4)) {
-                return a() > 2 ? Double.POSITIVE_INFINITY : Double.NaN;
+                return Shape.super.excessKurtosis();
             }
             return 6 * (5 * a() - 11) / ((a() - 3) * (a() - 4));
         }

@@ -94,13 +94,13 @@ public record Pareto(double from, double shape) implements Scaled {
 
         @Override
         public double skewness() {
-            return shape > 3 ? 2 * (shape + 1) / (shape - 3) * Math.sqrt((shape - 2) / shape) : Double.NaN;
+            return shape > 3 ? 2 * (shape + 1) / (shape - 3) * Math.sqrt((shape - 2) / shape) : Shape.super.skewness();
         }
 
         @Override
         public double excessKurtosis() {
             if (!(shape > 4)) {
-                return shape > 2 ? Double.POSITIVE_INFINITY : Double.NaN;
+                return Shape.super.excessKurtosis();
             }
             double polynomial = Math.fma(Math.fma(shape + 1, shape, -6), shape, -2);
             return 6 * polynomial / (shape * (shape - 3) * (shape - 4));

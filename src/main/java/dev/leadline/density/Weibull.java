@@ -6,6 +6,8 @@ import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.problem.Problem;
+import java.util.List;
 
 /// The Weibull density for lifetimes: `survival(x) = exp(-((x - from) / scale)^shape)` from `from` on.
 ///
@@ -20,11 +22,54 @@ public record Weibull(double shape, double scale, double from) implements Scaled
                     "The Weibull density divides by its scale."),
             finite("from", "least value").or(0));
 
-    static final Family FAMILY = new Described("weibull", "lifetimes, strengths, wind speeds", ENTRY)
+    private static final Entry BY_MEAN = Entry.of(
+                    v -> ofMeanAndSd(v[0], v[1], v[2]),
+                    finite("mean", "mean value"),
+                    positive("sd", "standard deviation", "The Weibull density divides by it.")
+                            .tryThis("For a fixed value use a constant."),
+                    finite("from", "least value").or(0))
+            .and(v -> problems(v[0], v[1], v[2]));
+
+    static final Family FAMILY = new Described("weibull", "lifetimes, strengths, wind speeds", ENTRY, BY_MEAN)
             .enteredBy(ByQuantiles.ofShapeAndScale(0.01, 1e6, v -> new Weibull(v[0], v[1], v[2])));
 
     public Weibull {
         ENTRY.check(shape, scale, from);
+    }
+
+    /// The member of this mean and standard deviation.
+    public static Weibull ofMeanAndSd(double mean, double sd, double from) {
+        BY_MEAN.check(mean, sd, from);
+        double shape = shape(sd / (mean - from));
+        return new Weibull(shape, scale(shape, mean - from), from);
+    }
+
+    private static List<Problem> problems(double mean, double sd, double from) {
+        if (!(mean > from)) {
+            String words = "greater than from, " + Rule.number(from);
+            return List.of(Rule.problem("mean", mean, words, "The mean lies above the least value.", ""));
+        }
+        double shape = shape(sd / (mean - from));
+        return ENTRY.tooExtreme(Rule.meanWithSd(mean, sd), shape, scale(shape, mean - from), from);
+    }
+
+    private static double scale(double shape, double mean) {
+        return mean / new ExponentialPower(1 / shape).mean();
+    }
+
+    /// The shape with this standard deviation over the mean, which falls as the shape rises: by halving the interval of
+    /// the logarithm.
+    private static double shape(double cv) {
+        double low = -6;
+        double high = 16;
+        for (double middle = 0; middle != low && middle != high; middle = 0.5 * (low + high)) {
+            if (Math.sqrt(new ExponentialPower(Exp.exp(-middle)).relativeVariance()) > cv) {
+                low = middle;
+            } else {
+                high = middle;
+            }
+        }
+        return Exp.exp(0.5 * (low + high));
     }
 
     @Override

@@ -429,7 +429,8 @@ class CommandsTest {
     /// JCGM 101:2008, 6.4.9.2: n readings give n - 1 degrees of freedom and the scale s / sqrt(n).
     @Test
     void familiesBeginWithWhatIsKnown() {
-        String text = leadline("families", "--known", "readings", "n=16", "mean=5.012", "s=0.02").out();
+        String text = leadline("families", "--known", "readings", "n=16", "mean=5.012", "s=0.02")
+                .out();
         assertTrue(text.startsWith("mean of 16 readings 5.012"), text);
         assertTrue(text.contains("\"dof\": 15"), text);
         assertTrue(text.contains("\"scale\": 0.005"), text);

@@ -19,10 +19,9 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.Arguments;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.MethodSource;
-import tools.jackson.databind.JsonNode;
 
-/// Every family against tables computed elsewhere: `density/NAME.csv` (mpmath, 60 digits, `density_tables.py`) and the
-/// records of `reference-values.json`.
+/// Every family against tables computed elsewhere: `density/NAME.csv` (mpmath, 60 digits, `density_tables*.py`), the
+/// standard normal one and some facts also against `reference-values.json`.
 class DensityTablesTest {
     /// The error the families document.
     private static final double RELATIVE = 1e-12;
@@ -134,94 +133,6 @@ class DensityTablesTest {
 
     private static void within(double relative, double expected, double got, String what) {
         assertEquals(expected, got, relative * Math.abs(expected), what);
-    }
-
-    /// The reference set writes some families with other parameters; those it describes by one of ours are here.
-    @ParameterizedTest
-    @CsvSource(
-            delimiter = '|',
-            value = {
-                "dist-normal-lognormal | normal(mean=1.5 | normal | mean 1.5 sd 2.5",
-                "dist-normal-lognormal | lognormal(mu=0.3 | lognormal | mu .3 sigma .8",
-                "dist-normal-lognormal | lognormal(mu=0.0 | lognormal | mu 0 sigma 2",
-                "dist-piecewise | uniform(a=-2.0 | uniform | from -2 to 3",
-                "dist-piecewise | triangular(a=0.0, mode=2.0 | triangular | from 0 mode 2 to 7",
-                "dist-piecewise | triangular(a=0.0, mode=0.0 | triangular | from 0 mode 0 to 1",
-                "dist-beta-family | beta(alpha=2.3 | beta | alpha 2.3 beta 4.1",
-                "dist-beta-family | beta(alpha=0.5 | beta | alpha .5 beta .5",
-                "dist-beta-family | PERT(min=1.0 | beta | alpha 2.3333333333333333 beta 3.6666666666666667 from 1 to 10",
-                "dist-beta-family | arcsine/U-shaped(a=-0.5 | beta | alpha .5 beta .5 from -.5 to .5",
-                "dist-gamma-family | exponential(rate=0.5 | exponential | mean 2",
-                "dist-gamma-family | gamma(shape=2.5 | gamma | shape 2.5 scale 1.4",
-                "dist-gamma-family | gamma(shape=0.05 | gamma | shape .05 scale 1",
-                "dist-gamma-family | chi-square(df=7 | gamma | shape 3.5 scale 2",
-                "dist-gamma-family | chi-square(df=1 | gamma | shape .5 scale 2",
-                "dist-student-f | student-t(df=3.0 | student | dof 3",
-                "dist-student-f | student-t(df=5.5 | student | dof 5.5 location 10 scale 2",
-                "dist-student-f | student-t(df=1.0 | student | dof 1",
-                "dist-student-f | student-t(df=2.0 | student | dof 2",
-                "dist-student-f | student-t(df=18.0 | student | dof 18 location 50000623 scale 25",
-                "dist-weibull-rayleigh | weibull(shape=1.7 | weibull | shape 1.7 scale 3",
-                "dist-weibull-rayleigh | weibull(shape=0.6 | weibull | shape .6 scale 2",
-                "dist-weibull-rayleigh | rayleigh(sigma=1.3 | weibull | shape 2 scale 1.8384776310850235",
-                "dist-extreme-value | gumbel-max(location=2.0 | gumbel | location 2 scale 1.5",
-                "dist-extreme-value | GEV(xi=0.2 | generalized-extreme-value | location 1 scale 2 shape .2",
-                "dist-extreme-value | GEV(xi=0.6 | generalized-extreme-value | location 0 scale 1 shape .6",
-                "dist-pareto-family | generalised Pareto(xi=0.25 | generalized-pareto | location 1 scale 2 shape .25",
-                "dist-pareto-family | generalised Pareto(xi=0.7 | generalized-pareto | location 0 scale 1 shape .7",
-                "dist-pareto-family | pareto(minimum=2.0 | pareto | from 2 shape 2.5",
-                "dist-pareto-family | pareto(minimum=1.0 | pareto | from 1 shape .9",
-                "dist-inverse | inverse-gamma(shape=3.2 | inverse-gamma | shape 3.2 scale 2",
-            })
-    void agreesWithTheReferenceSet(String record, String label, String family, String parameters) {
-        var words = parameters.split(" ");
-        var values = new LinkedHashMap<String, Double>();
-        for (int i = 0; i < words.length; i += 2) {
-            values.put(words[i], Double.valueOf(words[i + 1]));
-        }
-        var density = Catalogue.family(family).orElseThrow().of(values);
-        double relative = ReferenceValues.relativeTolerance(record);
-        int checked = 0;
-        for (JsonNode expected : ReferenceValues.caseOf(record, label).required("expected")) {
-            String name = expected.required("name").asString();
-            var got = value(density, name);
-            if (got.isEmpty()) {
-                continue;
-            }
-            checked++;
-            String text = expected.required("text").asString();
-            double number = text.equals("infinite")
-                    ? Double.POSITIVE_INFINITY
-                    : text.equals("undefined")
-                            ? Double.NaN
-                            : expected.required("value").asDouble();
-            // the reference set has 1e-51 where the value is 0
-            double slack = Double.isFinite(number) ? relative * Math.abs(number) + 1e-50 : 0;
-            assertEquals(number, got.getFirst(), slack, () -> density + ", " + name);
-        }
-        assertTrue(checked >= 6, () -> density + ": only a few figures were found");
-    }
-
-    /// What a record calls `cdf(-5)` and the like; empty for what a density does not answer.
-    private static List<Double> value(Density density, String name) {
-        if (name.equals("mean")) {
-            return List.of(density.mean());
-        }
-        if (name.equals("variance")) {
-            return List.of(density.variance());
-        }
-        if (!name.endsWith(")")) {
-            return List.of();
-        }
-        double argument = Double.parseDouble(name.substring(name.indexOf('(') + 1, name.length() - 1));
-        return switch (name.substring(0, name.indexOf('('))) {
-            case "pdf" -> List.of(density.pdf(argument));
-            case "cdf" -> List.of(density.cdf(argument));
-            case "sf" -> List.of(density.survival(argument));
-            case "quantile" -> List.of(density.quantile(argument));
-            case "upper_quantile" -> List.of(density.upperQuantile(argument));
-            default -> throw new AssertionError(name);
-        };
     }
 
     /// The record asks for 1e-13; a subnormal result may be off by its own rounding.
