@@ -4,7 +4,7 @@ Run from the top of the repository: python3 src/test/python/density_tables_b.py 
 
 Moments are taken from raw moments at 150 digits, or by integrating the density.
 """
-from mpmath import mp, mpf, exp, expm1, gamma, inf, log, log1p, loggamma, nan, pi, sqrt
+from mpmath import mp, mpf, exp, expm1, gamma, inf, log, log1p, loggamma, pi, sqrt
 import mpmath
 
 from density_tables import gamma_tails, main, moved, standardised

@@ -148,7 +148,7 @@ class InversionTest {
     @MethodSource("densities")
     void everyDensityHasATable(Density density) {
         if (Curves.build(density.standardised().shape()) instanceof Table table) {
-            assertTrue(table.cells().length > 0);
+            assertTrue(table.cells().length > 0, density::toString);
         }
     }
 
