@@ -18,11 +18,13 @@
 ///    and scale 1, whose components are only what distinguishes shapes. Both tails need their own functions. Where the
 ///    quantiles span hundreds of decades, `Standard` is also `Linked`; where the quantile is a square root or less, it
 ///    has a `ClosedForm`.
+///    A family that is another one by a name of its own is `Renamed`. Skewness and kurtosis have closed forms that do
+///    not cancel; without one `Moments` computes them from the quantiles.
 /// 2. One line in `Catalogue`.
-/// 3. One table, `src/test/resources/density/name.csv`, from a source that is not this code: a class in
-///    `src/test/python/density_tables.py`, which writes it.
+/// 3. Two tables, `src/test/resources/density/name.csv` and `density/moments/name.csv`, from a source that is not this
+///    code: a class in one of `src/test/python/density_tables*.py`, which write them.
 /// 4. In the tests, a member near each limit of its rules in `Examples`, and in `CatalogueTest` the name of the library
-///    distribution to compare with.
+///    distribution to compare with, in `ReferenceDistributionsTest` what the reference set calls it.
 ///
 /// The tests of the catalogue then hold it to everything: round trips, both tails, moments, the table of draws, refused
 /// parameters.
