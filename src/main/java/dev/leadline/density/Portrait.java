@@ -93,6 +93,15 @@ public record Portrait(
         return new Point(x, density.pdf(x), density.cdf(x), density.survival(x));
     }
 
+    /// The value of a discrete density that is nearest.
+    public double nearest(double x) {
+        double below = density.cdf(x) > 0
+                ? density.quantile(density.cdf(x))
+                : density.support().low();
+        double next = after(density, below);
+        return Math.abs(next - x) < Math.abs(below - x) ? next : below;
+    }
+
     /// The stretch for a drawing of the tails: to the values exceeded once in a million, cut as [#shown()] is but
     /// farther out.
     public Optional<Support> tailsShown() {
@@ -241,19 +250,24 @@ public record Portrait(
 
     private static List<String> tails(Density density) {
         var orders = density.tailOrders();
-        return List.of(
-                tail("lower", orders.lower(), density.support().low()),
-                tail("upper", orders.upper(), density.support().high()));
+        double low = density.support().low();
+        double high = density.support().high();
+        return Double.isInfinite(low) && Double.isInfinite(high) && orders.lower() == orders.upper()
+                ? List.of("both tails fall " + fall(orders.lower()))
+                : List.of(tail("lower", orders.lower(), low), tail("upper", orders.upper(), high));
     }
 
     private static String tail(String which, double order, double end) {
         if (Double.isFinite(end)) {
             return "%s end at %s".formatted(which, Significant.text(end, DIGITS));
         }
+        return which + " tail falls " + fall(order);
+    }
+
+    private static String fall(double order) {
         return Double.isFinite(order)
-                ? "%s tail falls like a power: moments exist below order %s"
-                        .formatted(which, Significant.text(order, 3))
-                : "%s tail falls faster than any power: every moment exists".formatted(which);
+                ? "like a power: moments exist below order " + Significant.text(order, 3)
+                : "faster than any power: every moment exists";
     }
 
     private static List<String> warnings(Density density) {

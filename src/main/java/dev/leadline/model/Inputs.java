@@ -41,6 +41,11 @@ final class Inputs {
         return made;
     }
 
+    static Optional<Input> of(Draft draft, int index, DataFiles files, Findings findings) {
+        return new Inputs(new Densities(files, findings), findings)
+                .input(draft.inputs().get(index), "$.inputs[" + index + "]");
+    }
+
     private Optional<Input> input(InputDraft draft, String path) {
         return switch (draft.from()) {
             case From.Density(var density) ->

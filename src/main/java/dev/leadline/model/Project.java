@@ -69,6 +69,16 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         return new Project(draft, question, plan, notes, read);
     }
 
+    /// One input by itself, whatever else is wrong in the draft.
+    ///
+    /// @throws Refusal with every problem found in it, each at its JSON path in the draft
+    public static Input input(Draft draft, int index, DataFiles files) {
+        var findings = new Findings();
+        var input = Inputs.of(draft, index, files, findings);
+        findings.refuseIfAny();
+        return input.orElseThrow();
+    }
+
     private static DataFiles noting(DataFiles files, Map<String, String> read) {
         return (file, column) -> {
             DataColumn found = files.column(file, column);

@@ -20,7 +20,7 @@ class DensitySketchTest {
 
     @Test
     void curveIsHighestWhereTheProbabilityIs() {
-        var image = DensitySketch.image(portrait(NormalDistribution.of(7, 2)), "v", 72, 20, 1, Theme.LIGHT);
+        var image = DensitySketch.image(portrait(NormalDistribution.of(7, 2)), 72, 20, 1, Theme.LIGHT);
         assertEquals(1, top(image, 36), 1.01);
         assertTrue(top(image, 20) > top(image, 36) + 3);
         assertTrue(top(image, 4) >= 17);
@@ -36,8 +36,19 @@ class DensitySketchTest {
                 NormalDistribution.of(1e12, 1e-3),
                 NormalDistribution.of(0, 1e300))) {
             for (var theme : List.of(Theme.LIGHT, Theme.DARK)) {
-                assertTrue(inked(DensitySketch.image(portrait(of), "v, m/s", 72, 20, 2, theme)) > 100, "" + of);
-                assertTrue(inked(DensitySketch.image(portrait(of), "v, m/s", 480, 240, 1, theme)) > 1000, "" + of);
+                assertTrue(inked(DensitySketch.image(portrait(of), 72, 20, 2, theme)) > 100, "" + of);
+                assertTrue(
+                        inked(DensityPicture.of(
+                                                portrait(of),
+                                                Observed.NONE,
+                                                DensityPicture.View.PDF,
+                                                "v, m/s",
+                                                theme,
+                                                480,
+                                                240)
+                                        .image(1))
+                                > 1000,
+                        "" + of);
             }
         }
     }

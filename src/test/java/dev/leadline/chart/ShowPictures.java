@@ -106,8 +106,20 @@ final class ShowPictures {
                 var density = Portrait.of(new Borrowed(densities.get(i)));
                 int x = 20 + i % 4 * 240;
                 int y = 20 + i / 4 * 270;
-                g.drawImage(DensitySketch.image(density, "v", 72, 20, 1, theme.getValue()), x, y, null);
-                g.drawImage(DensitySketch.image(density, "gust, m/s", 230, 190, 1, theme.getValue()), x, y + 40, null);
+                g.drawImage(DensitySketch.image(density, 72, 20, 1, theme.getValue()), x, y, null);
+                g.drawImage(
+                        DensityPicture.of(
+                                        density,
+                                        Observed.NONE,
+                                        DensityPicture.View.PDF,
+                                        "gust, m/s",
+                                        theme.getValue(),
+                                        230,
+                                        190)
+                                .image(1),
+                        x,
+                        y + 40,
+                        null);
             }
             write(sheet, folder, "sketches-" + theme.getKey());
         }

@@ -462,7 +462,7 @@ class CommandsTest {
         assertEquals(11, portrait.required("quantiles").size());
         assertEquals(101, portrait.required("curve").size());
         String text = leadline("families", "student", "dof=1.33").out();
-        assertTrue(text.contains("Upper tail falls like a power: moments exist below order 1.33."), text);
+        assertTrue(text.contains("Both tails fall like a power: moments exist below order 1.33."), text);
         assertTrue(text.contains("It has no variance: the error of a mean shrinks slower than 1/√n."), text);
         assertTrue(leadline("families", "gumbel").out().contains("entered by location, scale"));
     }

@@ -24,6 +24,11 @@ final class NoDialogs implements Dialogs {
     }
 
     @Override
+    public Optional<Path> chooseData(Optional<Path> folder) {
+        return Optional.empty();
+    }
+
+    @Override
     public Unsaved askAboutUnsaved(String title) {
         return Unsaved.DISCARD;
     }

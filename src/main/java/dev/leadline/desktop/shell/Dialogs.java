@@ -21,6 +21,9 @@ public interface Dialogs {
     /// @param extension without the dot, as `png`
     Optional<Path> chooseFigure(String suggestedName, String extension);
 
+    /// @param folder of the project, below which data are read
+    Optional<Path> chooseData(Optional<Path> folder);
+
     Unsaved askAboutUnsaved(String title);
 
     /// Whether to go on in spite of these.

@@ -55,6 +55,14 @@ final class StageDialogs implements Dialogs {
         return chosen(chooser.showSaveDialog(stage));
     }
 
+    @Override
+    public Optional<Path> chooseData(Optional<Path> below) {
+        var chooser = chooser("Choose data", new ExtensionFilter("Text files", "*.csv", "*.txt", "*.tsv", "*.dat"));
+        chooser.getExtensionFilters().add(new ExtensionFilter("All files", "*"));
+        below.map(Path::toFile).filter(File::isDirectory).ifPresent(chooser::setInitialDirectory);
+        return Optional.ofNullable(chooser.showOpenDialog(stage)).map(File::toPath);
+    }
+
     private FileChooser chooser(String title, ExtensionFilter filter) {
         var chooser = new FileChooser();
         chooser.setTitle(title);

@@ -2,6 +2,7 @@ package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.grounds.GroundsPane;
+import dev.leadline.desktop.picker.PickerPane;
 import dev.leadline.desktop.stage.StagePane;
 import dev.leadline.desktop.style.Styles;
 import dev.leadline.desktop.working.SketchView;
@@ -29,12 +30,16 @@ public final class Workbench extends BorderPane {
     private final VBox top;
     private final VBox bottom;
     private final SplitPane panes;
+    private final StagePane picture;
+    private final PickerPane picker;
+    private double[] dividers = {};
     private final StartPage start;
 
     public Workbench(WorkbenchViewModel model, Background background, Runnable quit) {
         this.model = model;
         getStyleClass().add("workbench");
-        working = new WorkingPane(model.project(), model.look(), () -> new SketchView(model.dark(), background));
+        working = new WorkingPane(
+                model.project(), model.inputs(), model.look(), () -> new SketchView(model.dark(), background));
         var menus = Menus.of(model, this::copyAnswer, working::openLook, working::openAbout, quit);
         var sentence = new SentenceView(this::openDoor);
         sentence.show(model.sentence().get());
@@ -48,9 +53,12 @@ public final class Workbench extends BorderPane {
         safety.setMaxWidth(Double.MAX_VALUE);
         safety.managedProperty().bind(safety.visibleProperty());
         safety.visibleProperty().bind(model.project().draft().map(d -> d.safety()));
-        bottom = new VBox(safety, new AnswerLine(model, grounds::reveal, this::copyAnswer));
-        panes = new SplitPane(working, new StagePane(model.stage(), model.run()), grounds);
+        bottom = new VBox(safety, new AnswerLine(model, () -> showGrounds(grounds::reveal), this::copyAnswer));
+        picture = new StagePane(model.stage(), model.run());
+        picker = new PickerPane(model.picker(), model::chooseData);
+        panes = new SplitPane(working, picture, grounds);
         panes.setDividerPositions(.325, .79);
+        model.inputs().opened().addListener((_, _, input) -> stage(input.isPresent()));
         SplitPane.setResizableWithParent(working, false);
         SplitPane.setResizableWithParent(grounds, false);
         start = new StartPage(model, background);
@@ -61,6 +69,7 @@ public final class Workbench extends BorderPane {
         model.dark().addListener((_, _, dark) -> recolour(dark));
         recolour(model.dark().get());
         addEventFilter(KeyEvent.KEY_PRESSED, this::undoEverywhere);
+        addEventHandler(KeyEvent.KEY_PRESSED, this::leaveWithEscape);
     }
 
     private void arrange(boolean started) {
@@ -70,6 +79,35 @@ public final class Workbench extends BorderPane {
         setBottom(started ? bottom : null);
         if (started && model.project().draft().get().asks().getFirst().formula().isBlank()) {
             working.focusFormula();
+        }
+    }
+
+    /// The picker takes the room of picture and grounds, which speak of a run.
+    private void stage(boolean picking) {
+        boolean isPicking = panes.getItems().contains(picker);
+        if (picking == isPicking) {
+            return;
+        }
+        if (picking) {
+            dividers = panes.getDividerPositions();
+            panes.getItems().setAll(working, picker);
+            panes.setDividerPositions(dividers[0]);
+        } else {
+            dividers[0] = panes.getDividerPositions()[0];
+            panes.getItems().setAll(working, picture, grounds);
+            panes.setDividerPositions(dividers);
+        }
+    }
+
+    private void showGrounds(Runnable reveal) {
+        model.inputs().close();
+        reveal.run();
+    }
+
+    private void leaveWithEscape(KeyEvent e) {
+        if (e.getCode() == KeyCode.ESCAPE && model.inputs().opened().get().isPresent()) {
+            model.inputs().close();
+            e.consume();
         }
     }
 

@@ -2,11 +2,13 @@ package dev.leadline.desktop.shell;
 
 import dev.leadline.chart.Export;
 import dev.leadline.desktop.background.Background;
+import dev.leadline.desktop.picker.PickerViewModel;
 import dev.leadline.desktop.run.Progress;
 import dev.leadline.desktop.run.RunViewModel;
 import dev.leadline.desktop.run.Studies;
 import dev.leadline.desktop.stage.StageViewModel;
 import dev.leadline.desktop.working.Edits;
+import dev.leadline.desktop.working.InputsViewModel;
 import dev.leadline.desktop.working.LookViewModel;
 import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.ground.Ground;
@@ -52,6 +54,8 @@ public final class WorkbenchViewModel {
     private final RunViewModel run;
     private final StageViewModel stage;
     private final LookViewModel look;
+    private final InputsViewModel inputs;
+    private final PickerViewModel picker;
     private final ReadOnlyBooleanWrapper started = new ReadOnlyBooleanWrapper();
     private final ReadOnlyStringWrapper notice = new ReadOnlyStringWrapper("");
 
@@ -70,6 +74,8 @@ public final class WorkbenchViewModel {
         run = new RunViewModel(studies, background);
         stage = new StageViewModel(project, run, dark, background);
         look = new LookViewModel(project, this::ranAsItStands, background);
+        inputs = new InputsViewModel(project);
+        picker = new PickerViewModel(project, inputs, dark, background);
         title = Bindings.createStringBinding(
                 () -> titleOf(project.draft().get(), project.file().get()), project.draft(), project.file());
         sentence =
@@ -105,6 +111,20 @@ public final class WorkbenchViewModel {
 
     public LookViewModel look() {
         return look;
+    }
+
+    public InputsViewModel inputs() {
+        return inputs;
+    }
+
+    /// The density that is being chosen, while an input's row is open.
+    public PickerViewModel picker() {
+        return picker;
+    }
+
+    /// A file of data below the project's folder.
+    Optional<Path> chooseData() {
+        return dialogs.chooseData(project.file().get().map(Path::toAbsolutePath).map(Path::getParent));
     }
 
     public BooleanProperty dark() {
@@ -292,6 +312,7 @@ public final class WorkbenchViewModel {
     private void show(Draft draft, Optional<Path> file, DataFiles files) {
         run.leave();
         stage.reset();
+        inputs.close();
         project.replace(draft, file, files);
         started.set(true);
         notice.set("");
@@ -301,6 +322,7 @@ public final class WorkbenchViewModel {
     public void closeProject() {
         leaving(() -> {
             run.leave();
+            inputs.close();
             project.replace(Edits.asking("mean"), Optional.empty(), DataFiles.NONE);
             started.set(false);
         });

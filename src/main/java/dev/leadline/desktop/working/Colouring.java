@@ -12,8 +12,8 @@ import java.util.Map;
 import java.util.SequencedSet;
 
 /// What each word of a formula is, so that it can be coloured.
-final class Colouring {
-    enum Word {
+public final class Colouring {
+    public enum Word {
         NUMBER,
         INPUT,
         CONSTANT,
@@ -25,7 +25,7 @@ final class Colouring {
     }
 
     /// A stretch of the text, `from` inclusive, `to` exclusive.
-    record Stretch(int from, int to, Word word) {}
+    public record Stretch(int from, int to, Word word) {}
 
     /// Longer texts stay plain: colouring must not slow down typing.
     static final int LONGEST = 20_000;
@@ -35,7 +35,7 @@ final class Colouring {
     private Colouring() {}
 
     /// For the names of this draft.
-    static Colouring of(Draft d) {
+    public static Colouring of(Draft d) {
         var colouring = new Colouring();
         Functions.constants().keySet().forEach(n -> colouring.names.put(n, Word.CONSTANT));
         d.steps().forEach(s -> FormulasViewModel.stepName(s).ifPresent(n -> colouring.names.put(n, Word.STEP)));
@@ -45,7 +45,7 @@ final class Colouring {
     }
 
     /// In the order of the text, without overlaps; what lies between is blank.
-    List<Stretch> of(String text) {
+    public List<Stretch> of(String text) {
         if (text.length() > LONGEST) {
             return List.of();
         }
@@ -68,7 +68,7 @@ final class Colouring {
     }
 
     /// The names in a text that are neither functions nor known to every formula.
-    static SequencedSet<String> names(String text) {
+    public static SequencedSet<String> names(String text) {
         var names = new LinkedHashSet<String>();
         if (text.length() <= LONGEST) {
             for (Token token : Reader.tokens(text)) {

@@ -3,6 +3,7 @@ package dev.leadline.desktop.working;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
+import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
@@ -113,11 +114,29 @@ public final class Edits {
                 d.lanes());
     }
 
+    static Draft dependence(Draft d, Optional<DependenceDraft> dependence) {
+        return new Draft(
+                d.title(),
+                d.notes(),
+                d.safety(),
+                d.constants(),
+                d.inputs(),
+                dependence,
+                d.steps(),
+                d.asks(),
+                d.reference(),
+                d.confidence(),
+                d.tolerance(),
+                d.stop(),
+                d.seed(),
+                d.lanes());
+    }
+
     static Draft constants(Draft d, List<ConstantDraft> constants) {
         return question(d, constants, d.inputs(), d.steps(), d.asks());
     }
 
-    static Draft inputs(Draft d, List<InputDraft> inputs) {
+    public static Draft inputs(Draft d, List<InputDraft> inputs) {
         return question(d, d.constants(), inputs, d.steps(), d.asks());
     }
 
@@ -149,19 +168,19 @@ public final class Edits {
         return demands(d, d.reference(), d.confidence(), d.tolerance(), d.stop(), seed);
     }
 
-    static <T> List<T> changed(List<T> list, int index, UnaryOperator<T> change) {
+    public static <T> List<T> changed(List<T> list, int index, UnaryOperator<T> change) {
         var copy = new ArrayList<>(list);
         copy.set(index, change.apply(copy.get(index)));
         return copy;
     }
 
-    static <T> List<T> without(List<T> list, int index) {
+    public static <T> List<T> without(List<T> list, int index) {
         var copy = new ArrayList<>(list);
         copy.remove(index);
         return copy;
     }
 
-    static <T> List<T> with(List<T> list, T last) {
+    public static <T> List<T> with(List<T> list, T last) {
         var copy = new ArrayList<>(list);
         copy.add(last);
         return copy;

@@ -7,7 +7,7 @@ import javafx.scene.control.TextField;
 import javafx.scene.control.Tooltip;
 
 /// A text field that tells what was typed in it and, between two keystrokes, shows what it is told.
-final class Field extends TextField {
+public final class Field extends TextField {
     private static final PseudoClass FAULTY = PseudoClass.getPseudoClass("faulty");
 
     /// Longer texts may be cut, so the tooltip shows them in full.
@@ -19,7 +19,7 @@ final class Field extends TextField {
     /// @param name accessible name
     /// @param tip what belongs here
     /// @param columns width in digits
-    Field(String name, String tip, int columns, Consumer<String> typed, Runnable left) {
+    public Field(String name, String tip, int columns, Consumer<String> typed, Runnable left) {
         this.typed = typed;
         setAccessibleText(name);
         var tooltip = new Tooltip();
@@ -40,19 +40,19 @@ final class Field extends TextField {
         });
     }
 
-    Field prompt(String prompt) {
+    public Field prompt(String prompt) {
         setPromptText(prompt);
         return this;
     }
 
     /// Takes what room there is.
-    Field growing() {
+    public Field growing() {
         setMinWidth(60);
         setMaxWidth(Double.MAX_VALUE);
         return this;
     }
 
-    void show(String text) {
+    public void show(String text) {
         if (!text.equals(getText()) && !(isFocused() && sameNumber(text))) {
             showing = true;
             setText(text);
@@ -60,7 +60,7 @@ final class Field extends TextField {
         }
     }
 
-    void showFault(boolean faulty) {
+    public void showFault(boolean faulty) {
         pseudoClassStateChanged(FAULTY, faulty);
     }
 

@@ -12,14 +12,15 @@ import javafx.scene.layout.Priority;
 import javafx.scene.layout.VBox;
 
 /// A part of the working pane that is folded away until it is used; folded, its head says what is in it.
-final class Fold extends VBox {
+public final class Fold extends VBox {
     private final ToggleButton head;
+    private final Label name = new Label();
     private final Label summary = new Label();
     private final Label arrow = new Label("\u25b8");
 
-    Fold(String id, String title, String tip, Node content) {
+    public Fold(String id, String title, String tip, Node content) {
         getStyleClass().add(Styles.FOLD);
-        var name = new Label(title);
+        name.setText(title);
         summary.getStyleClass().add(Styles.QUIET);
         summary.setTextOverrun(OverrunStyle.ELLIPSIS);
         summary.setMinWidth(0);
@@ -43,16 +44,21 @@ final class Fold extends VBox {
         getChildren().addAll(head, content);
     }
 
-    void summary(String text) {
+    public void summary(String text) {
         summary.setText(text);
         head.setAccessibleHelp(text);
     }
 
-    ToggleButton head() {
+    public void title(String text) {
+        name.setText(text);
+        head.setAccessibleText(text);
+    }
+
+    public ToggleButton head() {
         return head;
     }
 
-    void open() {
+    public void open() {
         head.setSelected(true);
     }
 }

@@ -19,7 +19,7 @@ import org.fxmisc.richtext.util.UndoUtils;
 import org.fxmisc.undo.UndoManager;
 
 /// An editor of formulas: coloured words, faults underlined, as high as its text. Undo belongs to the project.
-final class FormulaArea extends StyleClassedTextArea {
+public final class FormulaArea extends StyleClassedTextArea {
     private static final double LINE = 20;
     private static final double PADDING = 12;
 
@@ -30,7 +30,7 @@ final class FormulaArea extends StyleClassedTextArea {
     private List<Colouring.Stretch> words = List.of();
     private List<int[]> faults = List.of();
 
-    FormulaArea(String name, int leastLines, boolean manyLines) {
+    public FormulaArea(String name, int leastLines, boolean manyLines) {
         super(false);
         this.leastLines = leastLines;
         UndoManager<?> none = UndoUtils.noOpUndoManager();
@@ -57,17 +57,17 @@ final class FormulaArea extends StyleClassedTextArea {
         fit();
     }
 
-    void prompt(String text) {
+    public void prompt(String text) {
         var prompt = new Label(text);
         prompt.getStyleClass().addAll(Styles.QUIET, "formula-prompt");
         setPlaceholder(prompt, Pos.TOP_LEFT);
     }
 
-    void onTyped(Consumer<String> consumer) {
+    public void onTyped(Consumer<String> consumer) {
         typed = consumer;
     }
 
-    void onPasted(Runnable action) {
+    public void onPasted(Runnable action) {
         pasted = action;
     }
 
@@ -77,7 +77,7 @@ final class FormulaArea extends StyleClassedTextArea {
         pasted.run();
     }
 
-    void show(String text) {
+    public void show(String text) {
         if (!text.equals(getText())) {
             showing = true;
             replaceText(text);
@@ -86,7 +86,7 @@ final class FormulaArea extends StyleClassedTextArea {
     }
 
     /// @param newFaults pairs of places, `from` inclusive, `to` exclusive
-    void paint(List<Colouring.Stretch> newWords, List<int[]> newFaults) {
+    public void paint(List<Colouring.Stretch> newWords, List<int[]> newFaults) {
         words = newWords;
         faults = newFaults;
         if (getLength() > 0) {

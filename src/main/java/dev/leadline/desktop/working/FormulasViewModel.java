@@ -117,7 +117,7 @@ public final class FormulasViewModel {
                 .toList();
     }
 
-    private static Fault fault(int line, String text, Problem p) {
+    public static Fault fault(int line, String text, Problem p) {
         var span = p.place().span();
         int from = Math.min(span.map(s -> s.from()).orElse(0), text.length());
         int to = Math.min(span.map(s -> s.to()).orElse(text.length()), text.length());

@@ -1,34 +1,29 @@
 package dev.leadline.desktop.working;
 
-import dev.leadline.density.Catalogue;
-import dev.leadline.density.Family;
-import dev.leadline.density.Parameter;
 import dev.leadline.desktop.style.Styles;
-import dev.leadline.model.DensityDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.UnitWords;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Objects;
+import java.util.OptionalInt;
 import java.util.function.Consumer;
 import javafx.css.PseudoClass;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
-import javafx.scene.control.ComboBox;
 import javafx.scene.control.Label;
 import javafx.scene.control.OverrunStyle;
 import javafx.scene.control.ToggleButton;
 import javafx.scene.control.Tooltip;
-import javafx.scene.layout.FlowPane;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
 
-/// A row `name ~ family(parameters) unit` with a drawing of its density; opened, its fields stand below.
+/// A row `name ~ family(parameters) unit` with a drawing of its density; opened, its fields stand below, and its
+/// density where the picture was.
 final class InputRow extends VBox {
     private final InputsViewModel model;
     private final int index;
@@ -40,12 +35,10 @@ final class InputRow extends VBox {
     private final Messages messages = new Messages();
     private final VBox body = new VBox(6);
     private final List<Runnable> refreshers = new ArrayList<>();
-    private Shape shape = new Shape(false, false, "", -1);
+    private boolean range;
+    private Field named;
 
-    /// What decides which fields there are.
-    private record Shape(boolean range, boolean drawn, String family, int entry) {}
-
-    InputRow(InputsViewModel model, int index, SketchView sketch, Consumer<InputRow> opened) {
+    InputRow(InputsViewModel model, int index, SketchView sketch) {
         this.model = model;
         this.index = index;
         this.sketch = sketch;
@@ -74,18 +67,17 @@ final class InputRow extends VBox {
         head.selectedProperty().addListener((_, _, open) -> {
             if (open) {
                 build();
-                opened.accept(this);
+                model.open(index);
+            } else if (model.opened().get().equals(OptionalInt.of(index))) {
+                model.close();
             }
         });
+        model.opened().addListener((_, _, now) -> head.setSelected(now.equals(OptionalInt.of(index))));
         getChildren().addAll(head, messages, body);
     }
 
     void open() {
         head.setSelected(true);
-    }
-
-    void close() {
-        head.setSelected(false);
     }
 
     boolean isOpen() {
@@ -96,40 +88,43 @@ final class InputRow extends VBox {
         head.requestFocus();
     }
 
+    /// For a new row, whose name is but a proposal.
+    void focusName() {
+        named.requestFocus();
+        named.selectAll();
+    }
+
     void update() {
         InputDraft in = model.inputs().get(index);
         name.setText(in.name().isEmpty() ? "?" : in.name());
         summary.setText(InputsViewModel.summary(in.from()));
         unit.setText(UnitWords.after(in.unit()).strip());
-        sketch.show(in.from());
+        sketch.show(model.project().draft().get(), index, model.project().files());
         head.setAccessibleText("Input " + in.name() + InputsViewModel.summary(in.from()) + " " + in.unit());
         String label = in.label().isEmpty() ? "no label yet" : in.label();
         head.setTooltip(new Tooltip(in.name() + InputsViewModel.summary(in.from()) + "\n" + label));
         var problems = model.project().problemsAt(InputsViewModel.path(index));
         boolean open = in.from() instanceof From.Density(var d) && d.isUnchosen();
         summary.pseudoClassStateChanged(PseudoClass.getPseudoClass("unchosen"), open);
-        messages.show(open && !isOpen() ? List.of() : problems);
+        // while the row is open, what is wrong with its density stands beside the density
+        String density = model.densityPath(index);
+        messages.show(
+                isOpen()
+                        ? problems.stream()
+                                .filter(p -> !p.place().path().startsWith(density))
+                                .toList()
+                        : open ? List.of() : problems);
         if (isOpen()) {
-            if (!shapeOf(in).equals(shape)) {
+            if (range != in.from() instanceof From.Range) {
                 build();
             }
             refreshers.forEach(Runnable::run);
         }
     }
 
-    private Shape shapeOf(InputDraft in) {
-        boolean range = in.from() instanceof From.Range;
-        var density = InputsViewModel.densityOf(in.from());
-        return new Shape(
-                range,
-                density.isPresent() || InputsViewModel.isUnbounded(in.from()),
-                density.map(DensityDraft::kind).orElse(""),
-                model.entryOf(index));
-    }
-
     private void build() {
         InputDraft in = model.inputs().get(index);
-        shape = shapeOf(in);
+        range = in.from() instanceof From.Range;
         refreshers.clear();
         body.getChildren().clear();
         var grid = new GridPane(8, 6);
@@ -148,12 +143,8 @@ final class InputRow extends VBox {
                 .growing();
         grid.addRow(1, label("is"), labelled);
         GridPane.setHgrow(labelled, Priority.ALWAYS);
-        if (shape.range) {
+        if (range) {
             grid.addRow(2, label("range"), line(rangeEnd(true), label("to"), rangeEnd(false)));
-        }
-        if (!shape.range || shape.drawn) {
-            grid.addRow(3, label(shape.range ? "drawn from" : "density"), families());
-            Catalogue.family(shape.family).ifPresent(f -> grid.addRow(4, label(""), parameters(f)));
         }
         var from = field(
                         "known from",
@@ -163,7 +154,7 @@ final class InputRow extends VBox {
                         InputDraft::provenance,
                         t -> model.provenance(index, t))
                 .growing();
-        grid.addRow(5, label("known from"), from);
+        grid.addRow(3, label("known from"), from);
         var remove = new Button("Remove this input");
         remove.getStyleClass().add(Styles.LINK);
         remove.setTooltip(new Tooltip("Takes the input out of the question; Undo brings it back"));
@@ -199,68 +190,6 @@ final class InputRow extends VBox {
             field.showFault(faulty(".range[" + (low ? 0 : 1) + "]"));
         });
         return field;
-    }
-
-    private Node families() {
-        var choice = new ComboBox<String>();
-        choice.setId("family-" + index);
-        choice.setAccessibleText("Family of the density");
-        choice.setPromptText("choose a family");
-        choice.getItems().setAll(Catalogue.families().stream().map(Family::name).toList());
-        choice.setValue(shape.family.isEmpty() ? null : shape.family);
-        choice.setVisibleRowCount(14);
-        choice.setCellFactory(_ -> new FamilyCell());
-        choice.setOnAction(_ -> {
-            if (choice.getValue() != null && !Objects.equals(choice.getValue(), shape.family)) {
-                model.family(index, choice.getValue());
-            }
-        });
-        var use = new Label(Catalogue.family(shape.family).map(Family::use).orElse("what is known about it?"));
-        use.getStyleClass().add(Styles.QUIET);
-        use.setWrapText(true);
-        use.setMinHeight(Region.USE_PREF_SIZE);
-        use.setMaxWidth(250);
-        return new VBox(3, choice, use);
-    }
-
-    private Node parameters(Family family) {
-        var flow = new FlowPane(10, 6);
-        flow.setPrefWrapLength(240);
-        var entries = family.entries();
-        if (entries.size() > 1) {
-            var entry = new ComboBox<Integer>();
-            entry.setAccessibleText("Entered by");
-            for (int k = 0; k < entries.size(); k++) {
-                entry.getItems().add(k);
-            }
-            entry.setConverter(new EntryWords(entries));
-            entry.setValue(shape.entry);
-            entry.setOnAction(_ -> {
-                if (entry.getValue() != shape.entry) {
-                    model.entry(index, entry.getValue());
-                }
-            });
-            flow.getChildren().add(entry);
-        }
-        for (Parameter p : entries.get(shape.entry)) {
-            var rule = p.rule().isEmpty() ? "" : "; must be " + p.rule();
-            var field = new Field(
-                    p.name(), p.use() + rule, 6, t -> model.parameter(index, p.name(), t), model.project()::settle);
-            field.setId("parameter-" + index + "-" + p.name());
-            if (p.optional()) {
-                field.prompt("optional");
-            }
-            refreshers.add(() -> {
-                field.show(model.parameterText(index, p.name()));
-                field.showFault(!model.project()
-                        .problemsAt(model.densityPath(index) + "." + p.name())
-                        .isEmpty());
-            });
-            var pair = new HBox(5, label(p.name()), field);
-            pair.setAlignment(Pos.CENTER_LEFT);
-            flow.getChildren().add(pair);
-        }
-        return flow;
     }
 
     private boolean faulty(String path) {

@@ -1,42 +1,47 @@
 package dev.leadline.desktop.working;
 
-import dev.leadline.density.Catalogue;
-import dev.leadline.density.Family;
-import dev.leadline.density.Parameter;
 import dev.leadline.model.DensityDraft;
-import dev.leadline.model.DensityDraft.Member;
+import dev.leadline.model.DensityWords;
 import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import java.util.ArrayList;
 import java.util.Collection;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.SequencedMap;
+import java.util.OptionalInt;
 import java.util.function.UnaryOperator;
-import java.util.stream.Collectors;
+import javafx.beans.property.ReadOnlyObjectProperty;
+import javafx.beans.property.ReadOnlyObjectWrapper;
 
 /// The inputs of the project, edited row by row.
 public final class InputsViewModel {
     private static final DensityDraft TO_CHOOSE = DensityDraft.unchosen();
 
     private final ProjectViewModel project;
+    private final ReadOnlyObjectWrapper<OptionalInt> opened = new ReadOnlyObjectWrapper<>(OptionalInt.empty());
 
     public InputsViewModel(ProjectViewModel project) {
         this.project = project;
+        project.draft().addListener((_, _, d) -> {
+            if (opened.get().isPresent()
+                    && opened.get().getAsInt() >= d.inputs().size()) {
+                close();
+            }
+        });
     }
 
-    ProjectViewModel project() {
+    public ProjectViewModel project() {
         return project;
     }
 
-    List<InputDraft> inputs() {
+    public List<InputDraft> inputs() {
         return project.draft().get().inputs();
     }
 
-    static String path(int i) {
+    public static String path(int i) {
         return "$.inputs[" + i + "]";
     }
 
@@ -70,12 +75,58 @@ public final class InputsViewModel {
     void remove(int i) {
         project.settle();
         project.forget("$.inputs");
-        project.edit("$.inputs", d -> Edits.inputs(d, Edits.without(d.inputs(), i)));
+        String name = inputs().get(i).name();
+        project.edit(
+                "$.inputs",
+                d -> Edits.dependence(
+                        Edits.inputs(d, Edits.without(d.inputs(), i)),
+                        d.dependence().flatMap(tied -> Ties.without(tied, name))));
+        opened.set(OptionalInt.empty());
     }
 
-    void name(int i, String name) {
-        edit(i, ".name", in -> new InputDraft(name.strip(), in.unit(), in.label(), in.provenance(), in.from()));
+    /// Which input's density is looked at.
+    public ReadOnlyObjectProperty<OptionalInt> opened() {
+        return opened.getReadOnlyProperty();
     }
+
+    public void open(int i) {
+        opened.set(OptionalInt.of(i));
+    }
+
+    public void close() {
+        opened.set(OptionalInt.empty());
+    }
+
+    /// Pairs of tied inputs follow the name, also where a name typed halfway is that of another input.
+    void name(int i, String name) {
+        var now = project.draft().get();
+        String old = now.inputs().get(i).name();
+        if (!(renaming.input == i && renaming.now.equals(old) && renaming.tied().equals(now.dependence()))) {
+            renaming = new Renaming(i, old, old, now.dependence());
+        }
+        renaming = new Renaming(i, renaming.first, name.strip(), renaming.before);
+        project.edit(
+                path(i) + ".name",
+                d -> Edits.dependence(
+                        Edits.inputs(
+                                d,
+                                Edits.changed(
+                                        d.inputs(),
+                                        i,
+                                        in -> new InputDraft(
+                                                name.strip(), in.unit(), in.label(), in.provenance(), in.from()))),
+                        renaming.tied()));
+    }
+
+    /// @param first the name before the first keystroke
+    /// @param before what was tied then
+    private record Renaming(int input, String first, String now, Optional<DependenceDraft> before) {
+        Optional<DependenceDraft> tied() {
+            return before.map(tied -> Ties.renamed(tied, first, now));
+        }
+    }
+
+    private Renaming renaming = new Renaming(-1, "", "", Optional.empty());
 
     void unit(int i, String unit) {
         edit(i, ".unit", in -> new InputDraft(in.name(), unit, in.label(), in.provenance(), in.from()));
@@ -85,70 +136,8 @@ public final class InputsViewModel {
         edit(i, ".label", in -> new InputDraft(in.name(), in.unit(), label, in.provenance(), in.from()));
     }
 
-    void provenance(int i, String provenance) {
+    public void provenance(int i, String provenance) {
         edit(i, ".provenance", in -> new InputDraft(in.name(), in.unit(), in.label(), provenance, in.from()));
-    }
-
-    /// Another family; parameters of the same name keep their values.
-    void family(int i, String family) {
-        project.forget(path(i));
-        project.settle();
-        from(i, ".density", from -> switch (from) {
-            case From.Density(DensityDraft old) -> new From.Density(refit(old, family));
-            case From.Range(double low, double high, Optional<DensityDraft> old) ->
-                new From.Range(low, high, Optional.of(refit(old.orElse(TO_CHOOSE), family)));
-        });
-    }
-
-    private static DensityDraft refit(DensityDraft old, String family) {
-        var kept = new LinkedHashMap<String, Double>();
-        Catalogue.family(family)
-                .map(f -> f.entries().getFirst())
-                .orElse(List.of())
-                .forEach(p -> {
-                    var before = parameters(old);
-                    if (before.containsKey(p.name())) {
-                        kept.put(p.name(), before.get(p.name()));
-                    }
-                });
-        return DensityDraft.of(family, kept);
-    }
-
-    /// Another way to enter the same family; parameters it does not have are left out.
-    void entry(int i, int entry) {
-        project.forget(path(i));
-        project.settle();
-        entryWanted = new EntryWanted(i, entry);
-        density(i, old -> {
-            var names = Catalogue.family(old.kind()).orElseThrow().entries().get(entry).stream()
-                    .map(Parameter::name)
-                    .toList();
-            var kept = new LinkedHashMap<>(parameters(old));
-            kept.keySet().retainAll(names);
-            return old.with(new Member(old.kind(), kept));
-        });
-    }
-
-    void parameter(int i, String name, String text) {
-        var what = name + " of " + inputs().get(i).name();
-        project.typeOptionalNumber(
-                densityPath(i) + "." + name,
-                what,
-                text,
-                (d, value) -> Edits.inputs(
-                        d,
-                        Edits.changed(
-                                d.inputs(),
-                                i,
-                                in -> withFrom(in, mapDensity(in.from(), old -> {
-                                    var parameters = new LinkedHashMap<>(parameters(old));
-                                    if (value.isPresent()) {
-                                        parameters.put(name, value.getAsDouble());
-                                    } else {
-                                        parameters.remove(name);
-                                    }
-                                    return old.with(new Member(old.kind(), inOrder(old.kind(), parameters)));
-                                })))));
     }
 
     void rangeEnd(int i, boolean low, String text) {
@@ -177,16 +166,8 @@ public final class InputsViewModel {
                 : "";
     }
 
-    String parameterText(int i, String name) {
-        Double value = densityOf(inputs().get(i).from())
-                .map(d -> parameters(d).get(name))
-                .orElse(null);
-        return project.fieldText(
-                densityPath(i) + "." + name, value == null ? OptionalDouble.empty() : OptionalDouble.of(value));
-    }
-
     /// Where the density of the input stands in the file.
-    String densityPath(int i) {
+    public String densityPath(int i) {
         return path(i) + (inputs().get(i).from() instanceof From.Range ? ".drawFrom" : ".density");
     }
 
@@ -194,34 +175,7 @@ public final class InputsViewModel {
         return path(i) + ".range[" + (low ? 0 : 1) + "]";
     }
 
-    /// A way of entry that was chosen before any of its parameters was typed.
-    private record EntryWanted(int input, int entry) {}
-
-    private EntryWanted entryWanted = new EntryWanted(-1, 0);
-
-    /// The way of entry that fits the parameters written so far.
-    int entryOf(int i) {
-        var density = densityOf(inputs().get(i).from());
-        var family = density.flatMap(d -> Catalogue.family(d.kind()));
-        if (family.isEmpty()) {
-            return 0;
-        }
-        var entries = family.get().entries();
-        var written = parameters(density.get()).keySet();
-        if (entryWanted.input == i
-                && entryWanted.entry < entries.size()
-                && names(entries.get(entryWanted.entry)).containsAll(written)) {
-            return entryWanted.entry;
-        }
-        for (int k = 0; k < entries.size(); k++) {
-            if (names(entries.get(k)).containsAll(written)) {
-                return k;
-            }
-        }
-        return 0;
-    }
-
-    static Optional<DensityDraft> densityOf(From from) {
+    public static Optional<DensityDraft> densityOf(From from) {
         return switch (from) {
             case From.Density(DensityDraft density) -> Optional.of(density);
             case From.Range(var _, var _, Optional<DensityDraft> drawFrom) -> drawFrom;
@@ -229,7 +183,7 @@ public final class InputsViewModel {
     }
 
     /// Whether an integration variable needs a density to draw from.
-    static boolean isUnbounded(From from) {
+    public static boolean isUnbounded(From from) {
         return from instanceof From.Range(double low, double high, var _)
                 && (Double.isInfinite(low) || Double.isInfinite(high));
     }
@@ -237,64 +191,20 @@ public final class InputsViewModel {
     /// What stands after the name, as `~ gumbel(24.5, 2.6)`, `from 0 to 420` or `: choose`.
     static String summary(From from) {
         return switch (from) {
-            case From.Density(DensityDraft d) -> d.isUnchosen() ? ": choose" : " ~ " + member(d);
+            case From.Density(DensityDraft d) -> d.isUnchosen() ? ": choose" : " ~ " + DensityWords.of(d);
             case From.Range(double low, double high, Optional<DensityDraft> drawFrom) ->
                 " from " + NumberText.show(low) + " to " + NumberText.show(high)
-                        + drawFrom.map(d -> ", drawn from " + member(d)).orElse("");
+                        + drawFrom.map(d -> ", drawn from " + DensityWords.of(d))
+                                .orElse("");
         };
-    }
-
-    private static String member(DensityDraft d) {
-        return d.kind()
-                + d.member()
-                        .map(m -> m.parameters().values().stream()
-                                .map(NumberText::show)
-                                .collect(Collectors.joining(", ", "(", ")")))
-                        .orElse("");
-    }
-
-    private static SequencedMap<String, Double> parameters(DensityDraft density) {
-        return density.member().map(Member::parameters).orElseGet(LinkedHashMap::new);
     }
 
     private void edit(int i, String field, UnaryOperator<InputDraft> change) {
         project.edit(path(i) + field, d -> Edits.inputs(d, Edits.changed(d.inputs(), i, change)));
     }
 
-    private void from(int i, String field, UnaryOperator<From> change) {
-        edit(i, field, in -> withFrom(in, change.apply(in.from())));
-    }
-
-    private void density(int i, UnaryOperator<DensityDraft> change) {
-        from(i, ".density", from -> mapDensity(from, change));
-    }
-
-    private static From mapDensity(From from, UnaryOperator<DensityDraft> change) {
-        return switch (from) {
-            case From.Density(DensityDraft d) -> new From.Density(change.apply(d));
-            case From.Range(double low, double high, Optional<DensityDraft> d) ->
-                new From.Range(low, high, d.map(change));
-        };
-    }
-
     private static InputDraft withFrom(InputDraft in, From from) {
         return new InputDraft(in.name(), in.unit(), in.label(), in.provenance(), from);
-    }
-
-    private static List<String> names(List<Parameter> entry) {
-        return entry.stream().map(Parameter::name).toList();
-    }
-
-    /// Parameters in the family's order, so that rows and files read alike.
-    private static SequencedMap<String, Double> inOrder(String family, SequencedMap<String, Double> parameters) {
-        var ordered = new LinkedHashMap<String, Double>();
-        Catalogue.family(family).map(Family::entries).orElse(List.of()).stream()
-                .flatMap(List::stream)
-                .map(Parameter::name)
-                .filter(parameters::containsKey)
-                .forEach(n -> ordered.putIfAbsent(n, parameters.get(n)));
-        parameters.forEach(ordered::putIfAbsent);
-        return ordered;
     }
 
     /// Names that the formulas of a draft may use already.

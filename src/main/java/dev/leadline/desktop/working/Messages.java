@@ -7,13 +7,13 @@ import javafx.scene.control.Label;
 import javafx.scene.layout.VBox;
 
 /// What is wrong, under the place where it is.
-final class Messages extends VBox {
+public final class Messages extends VBox {
     private static final int AT_MOST = 3;
     private static final int WINDOW = 44;
 
     private List<?> shown = List.of();
 
-    Messages() {
+    public Messages() {
         getStyleClass().add(Styles.MESSAGE);
         hide();
     }
@@ -23,7 +23,7 @@ final class Messages extends VBox {
         setManaged(false);
     }
 
-    void show(List<Problem> problems) {
+    public void show(List<Problem> problems) {
         if (!problems.equals(shown)) {
             shown = problems;
             getChildren().clear();
@@ -33,7 +33,7 @@ final class Messages extends VBox {
     }
 
     /// With the line and a caret under the fault.
-    void showIn(List<FormulasViewModel.Fault> faults, String text) {
+    public void showIn(List<FormulasViewModel.Fault> faults, String text) {
         var key = List.of(faults, text);
         if (!key.equals(shown)) {
             shown = key;
@@ -80,7 +80,7 @@ final class Messages extends VBox {
     }
 
     /// The stretch of a line around `at`, and a caret under that place.
-    static Label excerpt(String line, int at) {
+    public static Label excerpt(String line, int at) {
         int start = line.length() <= WINDOW ? 0 : Math.clamp(at - WINDOW / 2, 0, line.length() - WINDOW);
         int end = Math.min(line.length(), start + WINDOW);
         String before = start > 0 ? "\u2026" : "";

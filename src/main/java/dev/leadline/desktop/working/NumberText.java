@@ -49,7 +49,7 @@ public final class NumberText {
     /// What to say about a text that is no number.
     ///
     /// @param what the field, as `scale of v`
-    static Problem problem(String what, String text) {
+    public static Problem problem(String what, String text) {
         String t = text.strip();
         if (t.isEmpty()) {
             return Problem.of(capital(what) + " is empty but must be a number");

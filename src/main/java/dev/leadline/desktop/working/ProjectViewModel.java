@@ -174,6 +174,16 @@ public final class ProjectViewModel {
         }
     }
 
+    /// A text of any other field that cannot be read. The draft keeps what was read last, and nothing can be run.
+    public void unread(String path, String text, Problem problem) {
+        unread.put(path, new Unread(text, problem.in(path)));
+    }
+
+    /// What was typed where it could not be read.
+    public Optional<String> unreadText(String path) {
+        return Optional.ofNullable(unread.get(path)).map(Unread::text);
+    }
+
     /// What a number field shows: what was typed where that is no number, else the number.
     public String fieldText(String path, OptionalDouble value) {
         var typed = unread.get(path);
@@ -196,7 +206,7 @@ public final class ProjectViewModel {
     }
 
     /// Leaves out what was typed in fields that are gone.
-    void forget(String path) {
+    public void forget(String path) {
         unread.keySet().removeIf(p -> within(path, p));
     }
 

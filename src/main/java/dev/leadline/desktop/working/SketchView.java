@@ -2,14 +2,17 @@ package dev.leadline.desktop.working;
 
 import dev.leadline.chart.DensitySketch;
 import dev.leadline.chart.Theme;
-import dev.leadline.density.Catalogue;
 import dev.leadline.density.Portrait;
 import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.style.Pixels;
-import dev.leadline.model.DensityDraft;
-import dev.leadline.model.Draft.From;
-import java.awt.image.BufferedImage;
+import dev.leadline.model.DataFiles;
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.ConstantDraft;
+import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Project;
+import java.util.List;
 import java.util.Optional;
+import java.util.function.Supplier;
 import javafx.beans.value.ObservableValue;
 import javafx.scene.image.ImageView;
 import javafx.scene.layout.Region;
@@ -23,8 +26,14 @@ public final class SketchView extends Region {
     private final ObservableValue<Boolean> dark;
     private final Background background;
     private final ImageView image = new ImageView();
-    private Optional<DensityDraft> shown = Optional.empty();
+    private Optional<Shown> shown = Optional.empty();
+    private Supplier<Portrait> sketched = () -> {
+        throw new IllegalStateException("nothing to sketch");
+    };
     private long newest;
+
+    /// What decides the drawing.
+    private record Shown(InputDraft input, List<ConstantDraft> constants, DataFiles files) {}
 
     public SketchView(ObservableValue<Boolean> dark, Background background) {
         this.dark = dark;
@@ -39,23 +48,14 @@ public final class SketchView extends Region {
         dark.addListener((_, _, _) -> draw());
     }
 
-    void show(From from) {
-        var density = switch (from) {
-            case From.Range(double low, double high, Optional<DensityDraft> drawFrom) ->
-                drawFrom.or(() -> Optional.of(DensityDraft.of("uniform", uniform(low, high))));
-            case From.Density(DensityDraft d) -> Optional.of(d);
-        };
-        if (!density.equals(shown)) {
-            shown = density;
+    /// Of an input of the draft.
+    void show(Draft draft, int index, DataFiles files) {
+        var wanted = new Shown(draft.inputs().get(index), draft.constants(), files);
+        if (!Optional.of(wanted).equals(shown)) {
+            shown = Optional.of(wanted);
+            sketched = () -> Portrait.of(Project.input(draft, index, files).drawn());
             draw();
         }
-    }
-
-    private static java.util.LinkedHashMap<String, Double> uniform(double low, double high) {
-        var parameters = new java.util.LinkedHashMap<String, Double>();
-        parameters.put("from", low);
-        parameters.put("to", high);
-        return parameters;
     }
 
     private void draw() {
@@ -63,10 +63,10 @@ public final class SketchView extends Region {
             return;
         }
         long turn = ++newest;
-        var wanted = shown.get();
+        var wanted = sketched;
         var theme = dark.getValue() ? Theme.DARK : Theme.LIGHT;
         background.run(
-                () -> sketch(wanted, theme),
+                () -> DensitySketch.image(wanted.get(), WIDTH, HEIGHT, SCALE, theme),
                 drawn -> {
                     if (turn == newest) {
                         image.setImage(Pixels.shared(drawn));
@@ -78,12 +78,5 @@ public final class SketchView extends Region {
                         image.setVisible(false);
                     }
                 });
-    }
-
-    private static BufferedImage sketch(DensityDraft d, Theme theme) {
-        var density = Catalogue.family(d.kind())
-                .orElseThrow()
-                .of(d.member().orElseThrow().parameters());
-        return DensitySketch.image(Portrait.of(density), "", WIDTH, HEIGHT, SCALE, theme);
     }
 }

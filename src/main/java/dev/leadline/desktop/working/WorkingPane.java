@@ -29,23 +29,26 @@ public final class WorkingPane extends BorderPane {
     private final VBox inputRows = new VBox();
     private final VBox constantRows = new VBox();
     private final List<AskRow> asks = new ArrayList<>();
-    private final List<InputRow> inputs = new ArrayList<>();
+    private final List<InputRow> rows = new ArrayList<>();
     private final List<ConstantRow> constants = new ArrayList<>();
     private final InputsViewModel inputsModel;
     private final ConstantsViewModel constantsModel;
     private final Supplier<SketchView> sketches;
+    private final TiedView tied;
     private final DemandsView demands;
     private final LookView look;
     private final AboutView about;
     private final ScrollPane scroll;
     private final Button unknown;
 
-    public WorkingPane(ProjectViewModel project, LookViewModel lookModel, Supplier<SketchView> sketches) {
+    public WorkingPane(
+            ProjectViewModel project, InputsViewModel inputs, LookViewModel lookModel, Supplier<SketchView> sketches) {
         this.project = project;
         this.sketches = sketches;
-        inputsModel = new InputsViewModel(project);
+        inputsModel = inputs;
         constantsModel = new ConstantsViewModel(project);
         formulas = new FormulasViewModel(project, inputsModel);
+        tied = new TiedView(new TiedViewModel(project));
         demands = new DemandsView(new DemandsViewModel(project));
         look = new LookView(lookModel);
         about = new AboutView(project);
@@ -81,7 +84,7 @@ public final class WorkingPane extends BorderPane {
         });
         addConstant.setId("add-constant");
 
-        var folds = new VBox(demands.folds(), look.fold(), about.fold());
+        var folds = new VBox(tied.fold(), demands.folds(), look.fold(), about.fold());
         folds.getStyleClass().add("folds");
         var content = new VBox(
                 section("steps", new Label()),
@@ -120,8 +123,8 @@ public final class WorkingPane extends BorderPane {
 
     public void focusInputs() {
         reveal(inputRows);
-        if (!inputs.isEmpty()) {
-            inputs.getFirst().focusHead();
+        if (!rows.isEmpty()) {
+            rows.getFirst().focusHead();
         }
     }
 
@@ -143,15 +146,12 @@ public final class WorkingPane extends BorderPane {
     private void update() {
         Draft d = project.draft().get();
         refill(asks, askRows, d.asks().size(), i -> new AskRow(formulas, i));
-        refill(
-                inputs,
-                inputRows,
-                d.inputs().size(),
-                i -> new InputRow(inputsModel, i, sketches.get(), this::closeOthers));
+        refill(rows, inputRows, d.inputs().size(), i -> new InputRow(inputsModel, i, sketches.get()));
         refill(constants, constantRows, d.constants().size(), i -> new ConstantRow(constantsModel, i));
         var colouring = Colouring.of(d);
         asks.forEach(row -> row.update(colouring));
-        inputs.forEach(InputRow::update);
+        rows.forEach(InputRow::update);
+        tied.update();
         constants.forEach(ConstantRow::update);
         demands.update();
         about.update();
@@ -193,7 +193,7 @@ public final class WorkingPane extends BorderPane {
                         && !formulas.unknownNames().isEmpty()))
                 .filter(p -> !FormulasViewModel.isInFormulas(p.place())
                         && !p.place().path().matches("\\$\\.(inputs|constants)\\[.*")
-                        && !p.place().path().matches("\\$\\.(tolerance|confidence|stop|reference).*"))
+                        && !p.place().path().matches("\\$\\.(tolerance|confidence|stop|reference|dependence).*"))
                 .toList();
     }
 
@@ -208,13 +208,9 @@ public final class WorkingPane extends BorderPane {
     }
 
     private void openNew(int row) {
-        inputs.get(row).open();
-        inputs.get(row).focusHead();
-        revealWhole(inputs.get(row));
-    }
-
-    private void closeOthers(InputRow opened) {
-        inputs.stream().filter(row -> row != opened).forEach(InputRow::close);
+        rows.get(row).open();
+        rows.get(row).focusName();
+        revealWhole(rows.get(row));
     }
 
     /// A name that nothing has yet.

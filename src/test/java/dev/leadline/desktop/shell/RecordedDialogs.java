@@ -33,6 +33,11 @@ public final class RecordedDialogs implements Dialogs {
     }
 
     @Override
+    public Optional<Path> chooseData(Optional<Path> folder) {
+        return Optional.empty();
+    }
+
+    @Override
     public Unsaved askAboutUnsaved(String title) {
         heard.add("unsaved " + title);
         return unsaved;

@@ -119,7 +119,7 @@ class WindowTest {
         robot.interact(() -> robot.lookup("#input-0")
                 .queryAs(javafx.scene.control.ToggleButton.class)
                 .fire());
-        var to = robot.lookup("#parameter-0-to").queryAs(TextField.class);
+        var to = robot.lookup("#parameter-to").queryAs(TextField.class);
         robot.interact(to::selectAll);
         robot.clickOn(to).push(KeyCode.SHORTCUT, KeyCode.A).write("2.5");
         await(() -> model.canRun().get() && model.project().edited().get());
@@ -195,5 +195,35 @@ class WindowTest {
                 robot.lookup("#look-table .look-value").queryAllAs(Label.class).stream()
                         .map(Labeled::getText)
                         .toList());
+    }
+
+    @Test
+    void anOpenedRowPutsItsDensityInPlaceOfThePicture(FxRobot robot) throws TimeoutException {
+        opened(robot, Drafts.mean());
+        assertTrue(robot.lookup("#picture").tryQuery().isPresent());
+        robot.clickOn("#input-0");
+        await(() -> robot.lookup("#picker").tryQuery().isPresent());
+        assertTrue(robot.lookup("#picture").tryQuery().isEmpty());
+        robot.clickOn("#other-ways").clickOn("#way-limits");
+        robot.clickOn("#known-low").write("2").clickOn("#known-high").write("6");
+        await(() -> model.canRun().get());
+        var input = model.project().draft().get().inputs().getFirst();
+        assertEquals(6.0, parameter(model.project().draft().get()));
+        assertTrue(input.provenance().contains("between 2 and 6"), input.provenance());
+        robot.push(KeyCode.ESCAPE);
+        await(() -> robot.lookup("#picture").tryQuery().isPresent());
+        assertTrue(robot.lookup("#picker").tryQuery().isEmpty());
+        assertTrue(model.inputs().opened().get().isEmpty());
+    }
+
+    @Test
+    void arrowsReadTheDensity(FxRobot robot) throws TimeoutException {
+        opened(robot, Drafts.mean());
+        robot.interact(() -> model.inputs().open(0));
+        await(() -> robot.lookup("#density").tryQuery().isPresent());
+        await(() -> !robot.lookup("#density-numbers .figure").queryAll().isEmpty());
+        robot.clickOn("#density").push(KeyCode.RIGHT);
+        String reading = robot.lookup("#density-reading").queryAs(Label.class).getText();
+        assertTrue(reading.contains(" % below, "), reading);
     }
 }

@@ -68,66 +68,6 @@ class ProjectViewModelTest {
     }
 
     @Test
-    void aTextThatIsNoNumberKeepsTheLastOneAndStandsAgainstARun() {
-        inputs.parameter(0, "to", "2");
-        inputs.parameter(0, "to", "2,5");
-        background.finishAll();
-        assertEquals("2,5", inputs.parameterText(0, "to"));
-        assertEquals(2.0, parameters().get("to"));
-        assertEquals(
-                "To of x is \u201c2,5\u201d but must be a number",
-                project.problems().get().getFirst().primary());
-        inputs.parameter(0, "to", "2.5");
-        background.finishAll();
-        assertEquals(List.of(), project.problems().get());
-        assertEquals(2.5, parameters().get("to"));
-    }
-
-    @Test
-    void anEmptyParameterIsMissingNotZero() {
-        inputs.parameter(0, "to", "");
-        background.finishAll();
-        assertEquals(List.of("from"), List.copyOf(parameters().keySet()));
-        assertFalse(project.problems().get().isEmpty());
-        assertFalse(project.problemsAt("$.inputs[0]").isEmpty());
-    }
-
-    @Test
-    void aRefusedParameterIsToldAtItsField() {
-        inputs.parameter(0, "from", "3");
-        background.finishAll();
-        assertFalse(project.problemsAt("$.inputs[0].density").isEmpty());
-        assertEquals(List.of(), project.problemsAt("$.inputs[1]"));
-    }
-
-    @Test
-    void anotherFamilyKeepsParametersOfTheSameName() {
-        inputs.family(0, "triangular");
-        assertEquals(List.of("from", "to"), List.copyOf(parameters().keySet()));
-        inputs.parameter(0, "mode", "0.5");
-        assertEquals(List.of("from", "mode", "to"), List.copyOf(parameters().keySet()));
-        assertEquals(" ~ triangular(0, 0.5, 1)", InputsViewModel.summary(from()));
-        background.finishAll();
-        assertEquals(List.of(), project.problems().get());
-        project.undo();
-        project.undo();
-        assertEquals(" ~ uniform(0, 1)", InputsViewModel.summary(from()));
-    }
-
-    @Test
-    void anotherWayOfEntryIsRememberedBeforeItHasNumbers() {
-        inputs.family(0, "lognormal");
-        assertEquals(0, inputs.entryOf(0));
-        inputs.entry(0, 1);
-        assertEquals(1, inputs.entryOf(0));
-        inputs.parameter(0, "mean", "3");
-        inputs.parameter(0, "sd", "1");
-        background.finishAll();
-        assertEquals(1, inputs.entryOf(0));
-        assertEquals(List.of(), project.problems().get());
-    }
-
-    @Test
     void aPastedFormulaMakesARowOfEachUnknownName() {
         formulas.typeSteps("q = 0.5*rho*v^2\nload = q*area*pi");
         formulas.typeFormula(0, "max(load, x)");
@@ -174,8 +114,8 @@ class ProjectViewModelTest {
 
     @Test
     void removingAnInputRenumbersTheRest() {
-        inputs.addRandom("y");
-        inputs.parameter(1, "mean", "nothing");
+        inputs.addRange("y");
+        inputs.rangeEnd(1, true, "nothing");
         inputs.remove(0);
         assertEquals("y", project.draft().get().inputs().getFirst().name());
         background.finishAll();
@@ -240,13 +180,5 @@ class ProjectViewModelTest {
 
     private From from() {
         return project.draft().get().inputs().getFirst().from();
-    }
-
-    private java.util.Map<String, Double> parameters() {
-        return InputsViewModel.densityOf(from())
-                .orElseThrow()
-                .member()
-                .orElseThrow()
-                .parameters();
     }
 }

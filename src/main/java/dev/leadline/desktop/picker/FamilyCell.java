@@ -1,4 +1,4 @@
-package dev.leadline.desktop.working;
+package dev.leadline.desktop.picker;
 
 import dev.leadline.density.Catalogue;
 import dev.leadline.density.Family;

@@ -1,0 +1,86 @@
+package dev.leadline.chart;
+
+import dev.leadline.density.Portrait;
+import dev.leadline.density.Portrait.Bar;
+import dev.leadline.density.Support;
+import java.awt.AlphaComposite;
+import java.awt.Graphics2D;
+import java.awt.Shape;
+import java.awt.geom.Path2D;
+import java.awt.geom.Rectangle2D;
+import java.util.List;
+
+/// The outline of a density over a stretch: a curve, or bars.
+///
+/// The height of a curve is the probability that falls on a pixel's width, not the density at a point, so a peak
+/// without bound is as high as what it holds.
+///
+/// @param bars stretches of a curve or bars of a discrete density, from the lower end
+/// @param highest height that fills the plot: of a curve a density, of bars a probability
+record Silhouette(List<Bar> bars, boolean discrete, double highest) {
+    /// A peak is cut at so many times the mean height.
+    private static final double PEAK = 9;
+
+    /// A higher peak is seen to leave the plot.
+    private static final double BEYOND = 1.5;
+
+    private static final float FILL = .18f;
+
+    static Silhouette of(Portrait portrait, Support over, int columns) {
+        if (portrait.isDiscrete()) {
+            var bars = portrait.bars();
+            return new Silhouette(
+                    bars, true, bars.stream().mapToDouble(Bar::chance).max().orElse(1));
+        }
+        var curve = portrait.curve(over, Math.max(2, columns));
+        double length = over.high() - over.low();
+        double highest = curve.stream().mapToDouble(Silhouette::height).max().orElse(1);
+        return new Silhouette(curve, false, highest > 0 ? Math.min(PEAK / length, highest) : 1);
+    }
+
+    /// Of a curve the mean density of the stretch.
+    private static double height(Bar bar) {
+        return bar.chance() / (bar.to() - bar.from());
+    }
+
+    /// With the colour and the stroke that are set.
+    void draw(Graphics2D g, Rectangle2D plot, Support over) {
+        if (discrete) {
+            bars.forEach(bar -> g.fill(block(bar, plot, over)));
+            return;
+        }
+        var curve = curve(plot, over);
+        var filled = new Path2D.Double(curve);
+        filled.closePath();
+        var composite = g.getComposite();
+        g.setComposite(AlphaComposite.SrcOver.derive(FILL));
+        g.fill(filled);
+        g.setComposite(composite);
+        g.draw(curve);
+    }
+
+    private Path2D curve(Rectangle2D plot, Support over) {
+        var path = new Path2D.Double();
+        path.moveTo(plot.getMinX(), plot.getMaxY());
+        for (var bar : bars) {
+            double share = Math.min(BEYOND, height(bar) / highest);
+            path.lineTo(x(bar.middle(), plot, over), plot.getMaxY() - share * (plot.getHeight() - 1));
+        }
+        path.lineTo(plot.getMaxX(), plot.getMaxY());
+        return path;
+    }
+
+    private Shape block(Bar bar, Rectangle2D plot, Support over) {
+        double scale = plot.getWidth() / (over.high() - over.low());
+        double gap = bars.size() > 1 ? (bars.get(1).middle() - bars.get(0).middle()) * scale : plot.getWidth() / 4;
+        double thick = bar.to() > bar.from()
+                ? Math.max(.6, (bar.to() - bar.from()) * scale - (gap > 4 ? 1 : 0))
+                : Math.clamp(.55 * gap, 1, plot.getHeight() < 40 ? 4 : 14);
+        double height = bar.chance() / highest * (plot.getHeight() - 1);
+        return new Rectangle2D.Double(x(bar.middle(), plot, over) - thick / 2, plot.getMaxY() - height, thick, height);
+    }
+
+    static double x(double value, Rectangle2D plot, Support over) {
+        return plot.getMinX() + plot.getWidth() * ((value - over.low()) / (over.high() - over.low()));
+    }
+}

@@ -1,0 +1,9 @@
+package dev.leadline.desktop.picker;
+
+/// Fields for one way of saying what a density is. Built anew when the way or the density's place changes.
+interface Form {
+    javafx.scene.Node node();
+
+    /// Shows what the draft says now.
+    void update();
+}

@@ -1,0 +1,244 @@
+package dev.leadline.desktop.picker;
+
+import dev.leadline.chart.DensityPicture;
+import dev.leadline.chart.DensityPicture.View;
+import dev.leadline.chart.Observed;
+import dev.leadline.chart.Theme;
+import dev.leadline.density.Portrait;
+import dev.leadline.density.PortraitText;
+import dev.leadline.desktop.background.Background;
+import dev.leadline.desktop.working.InputsViewModel;
+import dev.leadline.desktop.working.ProjectViewModel;
+import dev.leadline.model.DataFiles;
+import dev.leadline.model.DensityDraft.Data;
+import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.ConstantDraft;
+import dev.leadline.model.Draft.From;
+import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Project;
+import dev.leadline.model.UnitWords;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.awt.image.BufferedImage;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalInt;
+import javafx.beans.property.BooleanProperty;
+import javafx.beans.property.ObjectProperty;
+import javafx.beans.property.ReadOnlyBooleanProperty;
+import javafx.beans.property.ReadOnlyBooleanWrapper;
+import javafx.beans.property.ReadOnlyObjectProperty;
+import javafx.beans.property.ReadOnlyObjectWrapper;
+import javafx.beans.property.SimpleObjectProperty;
+
+/// The density of one input, looked at and chosen.
+///
+/// The drawing follows what is typed: it is made in the background, wishes for the next collapse into the newest, and
+/// the last density that was one stays while what is typed is none.
+public final class PickerViewModel {
+    /// A density, drawn.
+    ///
+    /// @param image its pixels; `scale` of them to one of the picture
+    record Drawn(DensityPicture picture, BufferedImage image, double scale) {}
+
+    /// What decides the drawing.
+    private record Wish(
+            InputDraft input,
+            List<ConstantDraft> constants,
+            DataFiles files,
+            View view,
+            Theme theme,
+            int width,
+            int height,
+            double scale) {}
+
+    private final ProjectViewModel project;
+    private final InputsViewModel inputs;
+    private final BooleanProperty dark;
+    private final Background background;
+    private final ReadOnlyObjectWrapper<Optional<DensityAt>> at = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private final ReadOnlyObjectWrapper<Optional<Way>> way = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private final ObjectProperty<View> view = new SimpleObjectProperty<>(View.PDF);
+    private final ReadOnlyObjectWrapper<Optional<Drawn>> drawn = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private final ReadOnlyBooleanWrapper outdated = new ReadOnlyBooleanWrapper();
+    private int width;
+    private int height;
+    private double scale = 1;
+    private boolean drawing;
+    private Optional<Wish> shown = Optional.empty();
+
+    public PickerViewModel(
+            ProjectViewModel project, InputsViewModel inputs, BooleanProperty dark, Background background) {
+        this.project = project;
+        this.inputs = inputs;
+        this.dark = dark;
+        this.background = background;
+        inputs.opened().addListener((_, _, input) -> open(input));
+        project.draft().addListener((_, _, _) -> draw());
+        dark.addListener((_, _, _) -> draw());
+        view.addListener((_, _, _) -> draw());
+    }
+
+    private void open(OptionalInt input) {
+        project.settle();
+        shown = Optional.empty();
+        drawn.set(Optional.empty());
+        outdated.set(false);
+        at.set(
+                input.isPresent() && isChosen(input.getAsInt())
+                        ? Optional.of(DensityAt.input(project, input.getAsInt()))
+                        : Optional.empty());
+        way.set(at.get().flatMap(place -> Way.of(place.now())));
+        draw();
+    }
+
+    /// A bounded range is drawn uniformly: there is nothing to choose.
+    private boolean isChosen(int input) {
+        var from = inputs.inputs().get(input).from();
+        return from instanceof From.Density
+                || InputsViewModel.isUnbounded(from)
+                || InputsViewModel.densityOf(from).isPresent();
+    }
+
+    ProjectViewModel project() {
+        return project;
+    }
+
+    public OptionalInt input() {
+        return inputs.opened().get();
+    }
+
+    Optional<InputDraft> inputDraft() {
+        return input().isPresent() && input().getAsInt() < inputs.inputs().size()
+                ? Optional.of(inputs.inputs().get(input().getAsInt()))
+                : Optional.empty();
+    }
+
+    public void close() {
+        inputs.close();
+    }
+
+    /// The density that is being chosen; empty where there is nothing to choose.
+    ReadOnlyObjectProperty<Optional<DensityAt>> at() {
+        return at.getReadOnlyProperty();
+    }
+
+    /// How it is being said what the density is; empty while that is still to be chosen.
+    ReadOnlyObjectProperty<Optional<Way>> way() {
+        return way.getReadOnlyProperty();
+    }
+
+    public void choose(Way chosen) {
+        project.settle();
+        way.set(Optional.of(chosen));
+    }
+
+    /// Back to the question of what is known.
+    void ask() {
+        way.set(Optional.empty());
+    }
+
+    ObjectProperty<View> view() {
+        return view;
+    }
+
+    ReadOnlyObjectProperty<Optional<Drawn>> drawn() {
+        return drawn.getReadOnlyProperty();
+    }
+
+    /// Whether the drawing shows the last density that was one, not what is typed now.
+    ReadOnlyBooleanProperty outdated() {
+        return outdated.getReadOnlyProperty();
+    }
+
+    /// Problems of the density; none while it is still to be chosen.
+    List<Problem> problems() {
+        return at.get()
+                .filter(place -> !place.now().isUnchosen())
+                .map(place -> project.problemsAt(place.path()))
+                .orElse(List.of());
+    }
+
+    /// What stands at a pixel of the drawing, in one line.
+    Optional<String> reading(double x, double y) {
+        return drawn.get().flatMap(d -> {
+            var value = d.picture.valueAt(x, y);
+            return value.isPresent()
+                    ? Optional.of(PortraitText.reading(d.picture.portrait(), value.getAsDouble(), unit()))
+                    : Optional.empty();
+        });
+    }
+
+    String unit() {
+        return inputDraft().map(in -> UnitWords.after(in.unit())).orElse("");
+    }
+
+    /// The size to draw for, and how many pixels of the screen there are to one of the window.
+    void size(int newWidth, int newHeight, double newScale) {
+        width = newWidth;
+        height = newHeight;
+        scale = newScale;
+        draw();
+    }
+
+    private void draw() {
+        var input = inputDraft();
+        if (drawing || input.isEmpty() || width < 40 || height < 40) {
+            return;
+        }
+        Draft d = project.draft().get();
+        int index = input().getAsInt();
+        var wish = new Wish(
+                input.get(),
+                d.constants(),
+                project.files(),
+                view.get(),
+                dark.get() ? Theme.DARK : Theme.LIGHT,
+                width,
+                height,
+                scale);
+        if (Optional.of(wish).equals(shown)) {
+            return;
+        }
+        shown = Optional.of(wish);
+        drawing = true;
+        background.run(
+                () -> draw(wish, d, index),
+                result -> {
+                    drawing = false;
+                    if (input().equals(OptionalInt.of(index))) {
+                        drawn.set(Optional.of(result));
+                        outdated.set(false);
+                    }
+                    draw();
+                },
+                failure -> {
+                    drawing = false;
+                    outdated.set(drawn.get().isPresent());
+                    if (!(failure instanceof Refusal)) {
+                        System.getLogger(PickerViewModel.class.getName())
+                                .log(System.Logger.Level.WARNING, "the density could not be drawn", failure);
+                    }
+                    draw();
+                });
+    }
+
+    /// The data that a density was fitted to, or smooths; what draws the data themselves shows them anyway.
+    private static Observed observed(Wish w) {
+        return InputsViewModel.densityOf(w.input.from())
+                .filter(density -> density.of() instanceof Data data
+                        && (data.kind().isPresent() || data.fitted().isPresent()))
+                .map(density -> (Data) density.of())
+                .map(data ->
+                        new Observed(w.files.column(data.file(), data.column()).values()))
+                .orElse(Observed.NONE);
+    }
+
+    private static Drawn draw(Wish w, Draft d, int index) {
+        var portrait = Portrait.of(Project.input(d, index, w.files).drawn());
+        String unit = UnitWords.after(w.input.unit());
+        String name = w.input.name() + (unit.isEmpty() ? "" : "," + unit);
+        var picture = DensityPicture.of(portrait, observed(w), w.view, name, w.theme, w.width, w.height);
+        return new Drawn(picture, picture.image(w.scale), w.scale);
+    }
+}

@@ -1,0 +1,104 @@
+package dev.leadline.desktop.picker;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.desktop.Drafts;
+import dev.leadline.desktop.background.HeldBackground;
+import dev.leadline.desktop.working.InputsViewModel;
+import dev.leadline.desktop.working.ProjectViewModel;
+import dev.leadline.project.DataFolder;
+import java.nio.file.Path;
+import java.util.Optional;
+import javafx.beans.property.SimpleBooleanProperty;
+import org.junit.jupiter.api.Test;
+
+class PickerViewModelTest {
+    private final HeldBackground background = new HeldBackground();
+    private final ProjectViewModel project = new ProjectViewModel(Drafts.mean(), background);
+    private final InputsViewModel inputs = new InputsViewModel(project);
+    private final PickerViewModel picker =
+            new PickerViewModel(project, inputs, new SimpleBooleanProperty(), background);
+
+    private void open() {
+        picker.size(600, 300, 1);
+        inputs.open(0);
+        background.finishAll();
+    }
+
+    private double mean() {
+        return picker.drawn().get().orElseThrow().picture().portrait().mean();
+    }
+
+    @Test
+    void drawsTheDensityOfTheOpenedInput() {
+        open();
+        assertEquals(Optional.of(Way.Form.FAMILY), picker.way().get());
+        assertEquals(.5, mean());
+        inputs.close();
+        assertTrue(picker.drawn().get().isEmpty());
+    }
+
+    @Test
+    void theLastDensityStaysWhileWhatIsTypedIsNone() {
+        open();
+        var member = new MemberViewModel(picker.at().get().orElseThrow());
+        member.parameter("to", "-1");
+        background.finishAll();
+        assertTrue(picker.outdated().get());
+        assertEquals(.5, mean());
+        assertFalse(picker.problems().isEmpty());
+        member.parameter("to", "4");
+        background.finishAll();
+        assertFalse(picker.outdated().get());
+        assertEquals(2, mean());
+    }
+
+    @Test
+    void wishesCollapseIntoTheNewest() {
+        open();
+        var member = new MemberViewModel(picker.at().get().orElseThrow());
+        for (String text : new String[] {"2", "3", "4", "5", "6"}) {
+            member.parameter("to", text);
+        }
+        // five checks of the project, and one drawing under way
+        assertEquals(6, background.waiting());
+        background.finishAll();
+        assertEquals(3, mean());
+    }
+
+    /// Of values evenly spread from 0 to 1 seven tenths lie below .7.
+    @Test
+    void readsTheChancesUnderThePointer() {
+        open();
+        var picture = picker.drawn().get().orElseThrow().picture();
+        double x = picture.xOf(.7);
+        String reading = picker.reading(x, picture.plot().getCenterY()).orElseThrow();
+        assertTrue(reading.matches("0\\.70* m: 70(\\.0)? % below, 30(\\.0)? % above \\(1 in 3\\.33\\)"), reading);
+        assertTrue(picker.reading(picture.plot().getMinX() - 2, 10).isEmpty());
+    }
+
+    @Test
+    void aBoundedRangeLeavesNothingToChoose() {
+        project.replace(Drafts.integral(), Optional.<Path>empty(), DataFolder.of(Path.of(".")));
+        open();
+        assertTrue(picker.at().get().isEmpty());
+        assertEquals(1, mean());
+    }
+
+    @Test
+    void anInputThatIsUndoneIsNoLongerLookedAt() {
+        inputs.close();
+        project.edit(
+                "$.inputs",
+                d -> dev.leadline.desktop.working.Edits.inputs(
+                        d,
+                        dev.leadline.desktop.working.Edits.with(
+                                d.inputs(), d.inputs().getFirst())));
+        inputs.open(1);
+        project.undo();
+        assertTrue(inputs.opened().get().isEmpty());
+        assertTrue(picker.at().get().isEmpty());
+    }
+}
