@@ -104,14 +104,14 @@ class Arcsine:
 
 
 class Pert:
-    name, columns = "pert", ["from", "mode", "to", "weight"]
+    name, columns = "pert", ["from", "mode", "to", "emphasis"]
     members = [("1", "4", "10", "4"), ("0", "0", "1", "4"), ("0", "3", "3", "2.5"), ("0", "2", "7", "500"),
                ("0", "0.001", "1", "0.01")]
 
-    def __init__(self, low, mode, high, weight):
+    def __init__(self, low, mode, high, emphasis):
         self.low, self.w = low, high - low
         self.high = high
-        self.a, self.b = 1 + weight * (mode - low) / self.w, 1 + weight * (high - mode) / self.w
+        self.a, self.b = 1 + emphasis * (mode - low) / self.w, 1 + emphasis * (high - mode) / self.w
 
     def log_pdf(self, x):
         a, b = self.a, self.b

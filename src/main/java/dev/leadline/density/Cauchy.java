@@ -16,7 +16,8 @@ public record Cauchy(double location, double scale) implements Renamed {
                     .tryThis("For a fixed value use a constant."));
 
     static final Family FAMILY = new Described(
-            "cauchy", "resonance lines; the ratio of two normal values with mean 0; the heaviest tails", ENTRY);
+                    "cauchy", "resonance lines; the ratio of two normal values with mean 0; the heaviest tails", ENTRY)
+            .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Cauchy(v[0], v[1])));
 
     public Cauchy {
         ENTRY.check(location, scale);

@@ -30,8 +30,9 @@ public record Frechet(double shape, double scale, double from) implements Scaled
                     "The Fréchet density divides by its scale."),
             finite("from", "least value").or(0));
 
-    static final Family FAMILY =
-            new Described("frechet", "largest value of a period with a heavy tail: rain, floods, claims", ENTRY);
+    static final Family FAMILY = new Described(
+                    "frechet", "largest value of a period with a heavy tail: rain, floods, claims", ENTRY)
+            .enteredBy(ByQuantiles.ofShapeAndScale(0.1, 1e6, v -> new Frechet(v[0], v[1], v[2])));
 
     public Frechet {
         ENTRY.check(shape, scale, from);

@@ -27,7 +27,11 @@ public record GumbelMin(double location, double scale) implements Scaled {
                     .tryThis("For a fixed value use a constant."));
 
     static final Family FAMILY = new Described(
-            "gumbel-min", "smallest value of a period or a part: low water, cold, the weakest link", ENTRY, BY_MEAN);
+                    "gumbel-min",
+                    "smallest value of a period or a part: low water, cold, the weakest link",
+                    ENTRY,
+                    BY_MEAN)
+            .enteredBy(ByQuantiles.ofLocationAndScale(v -> new GumbelMin(v[0], v[1])));
 
     public GumbelMin {
         ENTRY.check(location, scale);

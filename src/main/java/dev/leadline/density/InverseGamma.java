@@ -28,7 +28,10 @@ public record InverseGamma(double shape, double scale) implements Scaled {
                     "The inverse gamma density divides by its scale."));
 
     static final Family FAMILY = new Described(
-            "inverse-gamma", "an unknown variance, as readings leave it; waiting times at an unknown rate", ENTRY);
+                    "inverse-gamma",
+                    "an unknown variance, as readings leave it; waiting times at an unknown rate",
+                    ENTRY)
+            .enteredBy(ByQuantiles.ofPositiveShapeAndScale(0.1, 1e6, v -> new InverseGamma(v[0], v[1])));
 
     public InverseGamma {
         ENTRY.check(shape, scale);

@@ -27,10 +27,11 @@ public record Laplace(double location, double scale) implements Scaled {
                     .tryThis("For a fixed value use a constant."));
 
     static final Family FAMILY = new Described(
-            "laplace",
-            "errors that are mostly small and sometimes large; the difference of two waiting times",
-            ENTRY,
-            BY_MEAN);
+                    "laplace",
+                    "errors that are mostly small and sometimes large; the difference of two waiting times",
+                    ENTRY,
+                    BY_MEAN)
+            .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Laplace(v[0], v[1])));
 
     public Laplace {
         ENTRY.check(location, scale);

@@ -26,7 +26,10 @@ public record LogLogistic(double shape, double scale) implements Scaled {
             positive("scale", "half of the values are below it", "The log-logistic density divides by its scale."));
 
     static final Family FAMILY = new Described(
-            "log-logistic", "times to failure or recovery whose rate rises, then falls; stream flow, wealth", ENTRY);
+                    "log-logistic",
+                    "times to failure or recovery whose rate rises, then falls; stream flow, wealth",
+                    ENTRY)
+            .enteredBy(ByQuantiles.ofPositiveShapeAndScale(0.05, 1e6, v -> new LogLogistic(v[0], v[1])));
 
     public LogLogistic {
         ENTRY.check(shape, scale);

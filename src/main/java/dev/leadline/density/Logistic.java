@@ -30,8 +30,9 @@ public record Logistic(double location, double scale) implements Scaled {
             positive("sd", "standard deviation", "The logistic density divides by it.")
                     .tryThis("For a fixed value use a constant."));
 
-    static final Family FAMILY =
-            new Described("logistic", "doses, growth, thresholds; like the normal, with heavier tails", ENTRY, BY_MEAN);
+    static final Family FAMILY = new Described(
+                    "logistic", "doses, growth, thresholds; like the normal, with heavier tails", ENTRY, BY_MEAN)
+            .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Logistic(v[0], v[1])));
 
     public Logistic {
         ENTRY.check(location, scale);

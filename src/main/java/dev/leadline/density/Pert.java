@@ -4,13 +4,13 @@ import static dev.leadline.density.Rule.between;
 import static dev.leadline.density.Rule.finite;
 
 /// The PERT density: a beta density between `from` and `to` whose mean is
-/// `(from + weight mode + to) / (weight + 2)`.
+/// `(from + emphasis mode + to) / (emphasis + 2)`.
 ///
 /// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 ///
 /// Source: Malcolm, Roseboom, Clark and Fazar (1959), Oper. Res. 7, 646-669, for the mean with weight 4; the parameters
 /// follow from mode and mean. Its standard deviation is not `(to - from) / 6`, which is a rule of thumb.
-public record Pert(double from, double mode, double to, double weight) implements Renamed {
+public record Pert(double from, double mode, double to, double emphasis) implements Renamed {
     private static final Entry ENTRY = Entry.of(
                     v -> new Pert(v[0], v[1], v[2], v[3]),
                     finite("from", "least value"),
@@ -19,7 +19,7 @@ public record Pert(double from, double mode, double to, double weight) implement
                     between(
                                     0.01,
                                     1e5,
-                                    "weight",
+                                    "emphasis",
                                     "how often the most likely value counts against each limit",
                                     "Below, the density is uniform; above, a single point.")
                             .or(4))
@@ -29,12 +29,12 @@ public record Pert(double from, double mode, double to, double weight) implement
             "pert", "least, most likely and largest value by judgement: durations, costs, quantities", ENTRY);
 
     public Pert {
-        ENTRY.check(from, mode, to, weight);
+        ENTRY.check(from, mode, to, emphasis);
     }
 
     @Override
     public Beta member() {
         double width = to - from;
-        return new Beta(1 + weight * ((mode - from) / width), 1 + weight * ((to - mode) / width), from, to);
+        return new Beta(1 + emphasis * ((mode - from) / width), 1 + emphasis * ((to - mode) / width), from, to);
     }
 }

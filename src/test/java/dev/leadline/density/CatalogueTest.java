@@ -377,8 +377,8 @@ class CatalogueTest {
                     case Pert d ->
                         new Shifted(
                                 BetaDistribution.of(
-                                        1 + d.weight() * (d.mode() - d.from()) / (d.to() - d.from()),
-                                        1 + d.weight() * (d.to() - d.mode()) / (d.to() - d.from())),
+                                        1 + d.emphasis() * (d.mode() - d.from()) / (d.to() - d.from()),
+                                        1 + d.emphasis() * (d.to() - d.mode()) / (d.to() - d.from())),
                                 d.from(),
                                 d.to() - d.from());
                     case HalfNormal d -> FoldedNormalDistribution.of(0, d.sigma());

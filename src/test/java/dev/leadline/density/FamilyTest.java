@@ -55,7 +55,7 @@ class FamilyTest {
                 "curvilinear-trapezoid | from 0 to 2 inexact 0 | inexact is 0 but must be greater than 0",
                 "arcsine | from 1 to 1 | to is 1 but must be greater than from, 1",
                 "pert | from 0 mode 3 to 2 | mode is 3 but must be between from, 0, and to, 2",
-                "pert | from 0 mode 1 to 2 weight 0 | weight is 0 but must be at least 0.01 and at most 100000",
+                "pert | from 0 mode 1 to 2 emphasis 0 | emphasis is 0 but must be at least 0.01 and at most 100000",
                 "half-normal | sigma NaN | sigma is NaN but must be greater than 0",
                 "rayleigh | mean -1 | mean is -1 but must be greater than 0",
                 "rayleigh | mean 1 sigma 1 | mean and sigma do not go together in one density",
