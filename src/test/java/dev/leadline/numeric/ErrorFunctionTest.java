@@ -61,4 +61,26 @@ class ErrorFunctionTest {
         assertEquals("0cc09c73e9bb4b36", Kernels.fingerprint(ErrorFunction::erf, Kernels.between(-3, 3, 11)));
         assertEquals("e3507cf0c05eae94", Kernels.fingerprint(ErrorFunction::erfc, Kernels.between(-3, 28, 12)));
     }
+
+    /// mpmath, 60 digits.
+    @ParameterizedTest(name = "x = {0}")
+    @CsvSource({
+        "0, 1.0",
+        "1e-9, 0.999999998871620834",
+        "0.3, 0.73459933456765515",
+        "1, 0.427583576155807004",
+        "2, 0.255395676310505744",
+        "7, 0.0798000543291529335",
+        "15, 0.0375296063885057657",
+        "27.9, 0.0202088846212826167",
+        "28.1, 0.0200652313771972089",
+        "100, 5.6416137829894329e-3",
+        "1e5, 5.64189583519546808e-6",
+        "1e200, 5.64189583547756304e-201",
+        "-0.5, 1.95236048918255709",
+        "-3, 16205.9888539995866"
+    })
+    void scaledComplement(double x, double expected) {
+        assertEquals(expected, ErrorFunction.erfcx(x), (x < 0 ? 25 : 5) * Math.ulp(expected));
+    }
 }
