@@ -62,15 +62,15 @@ record Flank(double anchor, int side, double edge, double exponent, double mass)
         return at(beyondIsBelow() ? mass - target : target);
     }
 
-    /// The mean of the i-th power of the distance from the anchor with its sign, times the mass; infinite where it
-    /// does not exist.
-    double moment(int i) {
+    /// The mean of the i-th power of the distance from the anchor in a unit, with its sign, times the mass; infinite
+    /// where it does not exist.
+    double moment(int i, double unit) {
         if (exponent < 0 && i >= -exponent) {
             return side < 0 && i % 2 == 1 ? Double.NEGATIVE_INFINITY : Double.POSITIVE_INFINITY;
         }
         double power = mass * exponent / (exponent + i);
         for (int k = 0; k < i; k++) {
-            power *= side * edge;
+            power *= side * edge / unit;
         }
         return power;
     }

@@ -4,6 +4,7 @@ import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
 import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.function.DoubleUnaryOperator;
 
@@ -16,6 +17,9 @@ import java.util.function.DoubleUnaryOperator;
 ///
 /// Error: `1e-12` of the mass, and relative `1e-10` in tails, where the heights have 16 digits (`TypedTest`).
 public final class Integrated implements Shape {
+    /// A gap that is narrower than the distance of the quartiles by this factor is none that a person meant.
+    private static final double NARROW = 1e-9;
+
     private final Object name;
     private final Relief relief;
     private final Support support;
@@ -82,7 +86,6 @@ public final class Integrated implements Shape {
         }
         this.logArea = (relief.log() ? top : Log.log(top)) + Log.log(total);
         double area = total;
-        this.gaps = gaps(cells);
         this.pieces =
                 cells.stream().filter(c -> c.mass > 0).map(c -> c.piece(area)).toArray(Piece[]::new);
         int n = pieces.length;
@@ -94,21 +97,23 @@ public final class Integrated implements Shape {
         for (int i = n - 1; i >= 0; i--) {
             above[i] = above[i + 1] + pieces[i].mass();
         }
-        var moments = new PieceMoments(cells, area, orders);
+        this.gaps = gaps(cells, NARROW * (quantile(0.75) - quantile(0.25)));
+        var moments = new PieceMoments(cells, area, orders, quantile(0.5), quantile(0.75) - quantile(0.25));
         this.mean = moments.mean();
         this.variance = moments.variance();
         this.skewness = moments.skewness();
         this.excessKurtosis = moments.excessKurtosis();
     }
 
-    private static List<Support> gaps(List<Refinement.Cell> cells) {
+    /// @param least width
+    private static List<Support> gaps(List<Refinement.Cell> cells, double least) {
         var gaps = new ArrayList<Support>();
         double end = Double.NaN;
         for (var cell : cells) {
             if (cell.isEmpty()) {
                 continue;
             }
-            if (cell.low > end) {
+            if (cell.low - end >= least) {
                 gaps.add(new Support(end, cell.low));
             }
             end = cell.high;
@@ -145,7 +150,7 @@ public final class Integrated implements Shape {
 
     @Override
     public void logPdf(double[] x, double[] out, int n) {
-        double[] heights = relief.at(java.util.Arrays.copyOf(x, n));
+        double[] heights = relief.at(Arrays.copyOf(x, n));
         for (int i = 0; i < n; i++) {
             out[i] = Double.isNaN(x[i]) ? x[i] : isOutside(x[i]) ? Double.NEGATIVE_INFINITY : log(heights[i]);
         }

@@ -6,7 +6,7 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.TreeMap;
 import java.util.TreeSet;
-import java.util.function.DoublePredicate;
+import java.util.function.IntPredicate;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 
@@ -29,6 +29,9 @@ final class Landscape {
 
     /// Mass that may stand behind a place where the formula fails: about `1e-20`.
     private static final int UNSEEN = 66;
+
+    /// Heights below this power of 2 have too few digits to tell a slope.
+    private static final int SUBNORMAL = -1000;
 
     /// Where a power of the distance may have become too large for a number, and the height 0.
     private static final int UNDERFLOW = -500;
@@ -79,6 +82,9 @@ final class Landscape {
             this.level = new double[x.length];
             for (int i = 0; i < x.length; i++) {
                 level[i] = isBad(i) ? Double.NaN : relief.level(height[i]);
+                if (!relief.log() && level[i] < SUBNORMAL) {
+                    level[i] = Double.NEGATIVE_INFINITY;
+                }
             }
         }
 
@@ -98,6 +104,11 @@ final class Landscape {
             return relief.isBad(height[i], top);
         }
 
+        /// Whether the formula gives no number, as `0 * inf`.
+        boolean isLost(int i) {
+            return Double.isNaN(height[i]) || height[i] == Double.POSITIVE_INFINITY;
+        }
+
         /// As a power of 2, about the mass at this distance; `-∞` or `NaN` where there is none.
         double mass(int i) {
             return level[i] + first + i;
@@ -107,7 +118,7 @@ final class Landscape {
         int most() {
             int most = 0;
             for (int i = 1; i < level.length; i++) {
-                if (!(mass(i) <= mass(most))) {
+                if (mass(i) > mass(most) || Double.isNaN(mass(most))) {
                     most = i;
                 }
             }
@@ -115,7 +126,7 @@ final class Landscape {
         }
 
         boolean isNegligible(int i) {
-            return !(mass(i) > greatest - NEGLIGIBLE);
+            return !(mass(i) >= greatest - NEGLIGIBLE);
         }
 
         /// By how much the logarithm of the height grows from one octave to the next.
@@ -223,9 +234,9 @@ final class Landscape {
     }
 
     /// The bad point that is shortest to write.
-    private void refuseBad(DoublePredicate counts) {
+    private void refuseBad(IntPredicate counts) {
         IntStream.range(0, points.length)
-                .filter(i -> relief.isBad(heights[i], Math.max(top, 0)) && counts.test(points[i]))
+                .filter(i -> relief.isBad(heights[i], Math.max(top, 0)) && counts.test(i))
                 .boxed()
                 .min(Comparator.comparing((Integer i) -> heights[i] == Double.NEGATIVE_INFINITY)
                         .thenComparingInt(i -> Rule.number(points[i]).length()))
@@ -322,8 +333,8 @@ final class Landscape {
         }
         edges.addAll(centres);
         for (Side side : sides) {
-            int from = marks.contains(side.centre) ? nearMark(side) : nearPeak(side);
             int to = side.endless ? towardsInfinity(side) : side.level.length - 1;
+            int from = marks.contains(side.centre) ? nearMark(side) : nearPeak(side);
             for (int i = from; i <= to; i++) {
                 edges.add(side.at(side.first + i));
             }
@@ -331,11 +342,14 @@ final class Landscape {
         refuseBad(this::isGraded);
     }
 
-    private boolean isGraded(double x) {
+    private boolean isGraded(int i) {
+        double x = points[i];
         var flank = flanks.floorEntry(x);
-        return x >= edges.first()
-                && x <= edges.last()
-                && (flank == null || x >= flank.getValue().high());
+        boolean lost = Double.isNaN(heights[i]) || heights[i] == Double.POSITIVE_INFINITY;
+        return !lost
+                || x >= edges.first()
+                        && x <= edges.last()
+                        && (flank == null || x >= flank.getValue().high());
     }
 
     /// Nearer than this the height hardly changes.
@@ -361,24 +375,47 @@ final class Landscape {
             from--;
         }
         if (from > 0 && side.isBad(from - 1)) {
+            if (side.height[from - 1] == Double.POSITIVE_INFINITY) {
+                refuseHeavy(side, 1 + slope(side, from));
+            }
             refuseUnlessUnseen(side, from, from - 1);
         }
         boolean hole = from > 0
                 && side.level[from - 1] == Double.NEGATIVE_INFINITY
                 && side.mass(from) > greatest - NEGLIGIBLE + 2 * UNSEEN;
         if (hole || side.isNegligible(from)) {
-            return Math.max(from - 1, 0);
+            return Math.max(leaveLost(side, from), from - 1);
         }
         while (from + 3 < n && side.isPower(from) && side.isPower(from + 1)) {
             from++;
         }
         double slope = slope(side, from);
-        double exponent = snapped(1 + slope);
-        if (!(exponent >= LEAST_EXPONENT)) {
-            throw new Refusal(relief.noMassNear(side.centre, 1 + slope));
-        }
-        put(side, from, exponent);
+        refuseHeavy(side, 1 + slope);
+        put(side, from, snapped(1 + slope));
         return from;
+    }
+
+    private void refuseHeavy(Side side, double exponent) {
+        if (!(exponent >= LEAST_EXPONENT)) {
+            throw new Refusal(relief.noMassNear(side.centre, exponent));
+        }
+    }
+
+    /// Where the formula gives 0 and, nearer to the mark, no number at all, there is no mass.
+    ///
+    /// @return the index of the first number; 0 where all are
+    private int leaveLost(Side side, int from) {
+        int first = from;
+        while (first > 0 && !side.isLost(first - 1)) {
+            first--;
+        }
+        if (first > 0) {
+            flanks.put(
+                    Math.min(side.centre, side.at(side.first + first)),
+                    new Flank(side.centre, side.side, StrictMath.scalb(1.0, side.first + first), 1, 0));
+            edges.add(side.at(side.first + first));
+        }
+        return first;
     }
 
     private void refuseUnlessUnseen(Side side, int good, int bad) {
@@ -421,19 +458,26 @@ final class Landscape {
             throw new Refusal(relief.noMassTowards(side.side, 1 + slope));
         }
         if (!steepens) {
+            double order = power ? -exponent : limit(-exponent);
             if (side.side < 0) {
-                lowerOrder = -exponent;
+                lowerOrder = order;
             } else {
-                upperOrder = -exponent;
+                upperOrder = order;
             }
         }
         put(side, edge, exponent);
         return edge;
     }
 
+    /// The order that one which changes slowly, as by a logarithm, may tend to.
+    private static double limit(double order) {
+        double whole = Math.rint(order);
+        return Math.abs(order - whole) < 0.05 ? whole : order;
+    }
+
     /// Whether the formula gives no number behind places where it gave 0.
     private static boolean failsAfterZero(Side side, int i) {
-        return side.isBad(i) && side.level[i - 1] == Double.NEGATIVE_INFINITY;
+        return side.isLost(i) && side.level[i - 1] == Double.NEGATIVE_INFINITY;
     }
 
     /// The slope at octave i, freed from its change in proportion to the distance where enough octaves are known.

@@ -1,12 +1,13 @@
 package dev.leadline.density;
 
 import dev.leadline.problem.Refusal;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
 
-/// Halves the cells of a landscape until each is a polynomial to rounding error, relative to the mass of the tail
-/// behind
-/// it, and holds no more than a few times that mass: so both tails keep their digits.
+/// Halves the cells of a landscape until each is a polynomial to rounding error, relative to the mass of the
+/// tail behind it, and holds no more than a few times that mass: so both tails keep their digits.
 final class Refinement {
     /// Cells at most.
     static final int MOST = 20_000;
@@ -22,11 +23,23 @@ final class Refinement {
     /// Tails are followed to this share of all.
     private static final double LEAST = 1e-300;
 
+    /// An error of this share of all is allowed even where the tail is less.
+    private static final double UNSEEN = 1e-19;
+
     /// What cannot be less than rounding errors: relative to the height, and to its logarithm.
     private static final double ROUNDING = 1e-15;
 
     /// Errors that do not fall when cells are halved are those of the formula, where they are as small as this.
     private static final double NOISE = 1e-6;
+
+    /// Points of a cell: its nodes, and one next to each end, since a jump or a bend between the last node and the end
+    /// is seen by no node.
+    private static final int POINTS = Chebyshev.POINTS + 2;
+
+    /// Of half the width of a cell, how near to its ends the points stand, and the nodes.
+    private static final double NEAR_END = 0x1p-33;
+
+    private static final double LAST_NODE = 0.005;
 
     /// A cell in the making: the heights at its nodes, or the flank that it is.
     static final class Cell {
@@ -38,7 +51,8 @@ final class Refinement {
         double mass;
         double highest;
 
-        /// Largest of the last coefficients, over the largest of all.
+        /// Error of the polynomial over its largest coefficient: its last coefficients, or how far it misses at the
+        /// ends.
         double rough;
 
         boolean settled;
@@ -51,6 +65,17 @@ final class Refinement {
                 mass = flank.mass();
                 settled = true;
             }
+        }
+
+        /// The nodes, then the points next to the lower and the upper end.
+        double point(int j) {
+            if (j < Chebyshev.POINTS) {
+                return node(j);
+            }
+            double near = NEAR_END * 0.5 * (high - low);
+            return j == Chebyshev.POINTS
+                    ? Math.max(low + near, Math.nextUp(low))
+                    : Math.min(high - near, Math.nextDown(high));
         }
 
         double node(int j) {
@@ -75,7 +100,12 @@ final class Refinement {
                 }
             }
             mass = Math.max(0.5 * (high - low) * sum, 0);
-            rough = largest > 0 ? last / largest : 0;
+            double atLow = all[from + Chebyshev.POINTS];
+            double atHigh = all[from + Chebyshev.POINTS + 1];
+            double miss = Math.max(
+                    Math.abs(Chebyshev.at(coefficients, -1) - atLow), Math.abs(Chebyshev.at(coefficients, 1) - atHigh));
+            highest = Math.max(highest, Math.max(atLow, atHigh));
+            rough = Math.max(last, LAST_NODE * miss) / Math.max(largest, Double.MIN_NORMAL);
             if (high - low <= 4 * Math.ulp(Math.max(Math.abs(low), Math.abs(high)))) {
                 flatten();
             }
@@ -87,7 +117,7 @@ final class Refinement {
         }
 
         boolean isEmpty() {
-            return mass == 0 && flank == null && highest == 0;
+            return mass == 0 && highest == 0;
         }
 
         double middle() {
@@ -134,13 +164,13 @@ final class Refinement {
     }
 
     private void evaluate(List<Cell> some) {
-        var x = new double[some.size() * Chebyshev.POINTS];
+        var x = new double[some.size() * POINTS];
         for (int i = 0; i < x.length; i++) {
-            x[i] = some.get(i / Chebyshev.POINTS).node(i % Chebyshev.POINTS);
+            x[i] = some.get(i / POINTS).point(i % POINTS);
         }
         double[] all = relief.relative(x, top);
         for (int i = 0; i < some.size(); i++) {
-            some.get(i).take(all, i * Chebyshev.POINTS);
+            some.get(i).take(all, i * POINTS);
         }
     }
 
@@ -158,7 +188,7 @@ final class Refinement {
         for (int i = 0; i < n; i++) {
             var cell = cells.get(i);
             double tail = Math.max(Math.min(below, above[i + 1]), LEAST * total);
-            if (isFine(cell, tail)) {
+            if (isFine(cell, tail, total)) {
                 next.add(cell);
             } else {
                 halves.add(new Cell(cell.low, cell.middle(), null));
@@ -191,13 +221,13 @@ final class Refinement {
         return true;
     }
 
-    private boolean isFine(Cell cell, double tail) {
+    private boolean isFine(Cell cell, double tail, double total) {
         if (cell.settled || cell.isEmpty()) {
             return true;
         }
         double noise = ROUNDING * (16 + Math.abs(relief.level(relief.log() ? 0 : cell.highest)));
         double error = cell.rough * cell.highest * (cell.high - cell.low);
-        return cell.mass <= STEEPEST * tail && (error <= ERROR * tail || cell.rough <= noise)
+        return cell.mass <= STEEPEST * tail && (error <= Math.max(ERROR * tail, UNSEEN * total) || cell.rough <= noise)
                 || cell.highest * (cell.high - cell.low) <= ERROR * LEAST;
     }
 
@@ -223,8 +253,8 @@ final class Refinement {
     /// The number with the fewest digits between two.
     private static double shortest(double low, double high) {
         for (int digits = 1; digits < 17; digits++) {
-            var x = new java.math.BigDecimal(0.5 * (low + high))
-                    .round(new java.math.MathContext(digits))
+            var x = new BigDecimal(0.5 * (low + high))
+                    .round(new MathContext(digits))
                     .doubleValue();
             if (x >= low && x <= high) {
                 return x;

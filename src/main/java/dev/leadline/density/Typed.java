@@ -2,27 +2,32 @@ package dev.leadline.density;
 
 import dev.leadline.formula.Program;
 import dev.leadline.formula.Reader;
-import dev.leadline.formula.Token;
 import dev.leadline.formula.Working;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.SequencedMap;
+import java.util.stream.DoubleStream;
 
 /// A density given by a formula in its own variable and constants.
 ///
-/// Peaks are looked for near the ends, the breaks, 0, and every number that stands in the formula or is the value of
-/// one of its constants, at distances of all orders of magnitude, and at evenly spaced points between them; then the
-/// highest places found are climbed. A peak elsewhere that is much narrower than its distance from all of these, and
-/// at whose foot the density is no higher than around, is missed; a break at the peak shows it.
+/// Peaks are looked for near the ends, the breaks, 0, and the first twenty numbers that stand in the formula
+/// or follow from its numbers and constants alone, at distances of all orders of magnitude, and at evenly
+/// spaced points between them; then the highest places found are climbed. A peak elsewhere that is much
+/// narrower than its distance from all of these, and at whose foot the density is no higher than around, is
+/// missed; a break at the peak shows it.
 ///
 /// @param density what is drawn from
 /// @param notes what is allowed but may surprise: gaps, names that hide a constant which every formula knows
 public record Typed(Integrated density, List<Problem> notes) {
+    /// Numbers of a formula that peaks are looked for near.
+    private static final int PROBES = 20;
 
     /// @param variable the name that the formula calls its value by
     /// @param constants values by name; the formula need not use them all
@@ -47,7 +52,7 @@ public record Typed(Integrated density, List<Problem> notes) {
                 text.log(),
                 new Support(text.from(), text.to()),
                 text.breaks().stream().mapToDouble(x -> x).toArray(),
-                probes(text, used));
+                probes(working));
         refuseOverflow(density);
         return new Typed(density, notes(density, variable, working));
     }
@@ -97,7 +102,8 @@ public record Typed(Integrated density, List<Problem> notes) {
         } else if (Double.isFinite(text.from()) && Double.isFinite(text.to())) {
             problems.addAll(Uniform.rising("from", text.from(), "to", text.to()));
         }
-        for (int i = 0; problems.isEmpty() && i < text.breaks().size(); i++) {
+        boolean rangeIsRight = problems.isEmpty();
+        for (int i = 0; rangeIsRight && i < text.breaks().size(); i++) {
             double x = text.breaks().get(i);
             String path = "breaks[" + i + "]";
             if (!(x > text.from() && x < text.to() && Double.isFinite(x))) {
@@ -135,17 +141,12 @@ public record Typed(Integrated density, List<Problem> notes) {
     }
 
     /// Numbers of the formula, with either sign.
-    private static double[] probes(TypedText text, Map<String, Double> used) {
-        var numbers = new ArrayList<>(used.values());
-        for (var token : Reader.tokens(text.formula())) {
-            if (token.kind() == Token.Kind.NUMBER) {
-                numbers.add(Double.parseDouble(token.text()));
-            }
-        }
-        return numbers.stream()
+    private static double[] probes(Working working) {
+        return working.numbers().stream()
+                .filter(Double::isFinite)
+                .limit(PROBES)
+                .flatMapToDouble(x -> DoubleStream.of(x, -x))
                 .distinct()
-                .limit(20)
-                .flatMapToDouble(x -> java.util.stream.DoubleStream.of(x, -x))
                 .toArray();
     }
 
@@ -173,7 +174,6 @@ public record Typed(Integrated density, List<Problem> notes) {
 
     /// A place found by halving, to ten digits.
     private static String shown(double x) {
-        return Rule.number(
-                new java.math.BigDecimal(x).round(new java.math.MathContext(10)).doubleValue());
+        return Rule.number(new BigDecimal(x).round(new MathContext(10)).doubleValue());
     }
 }

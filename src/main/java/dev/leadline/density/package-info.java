@@ -12,6 +12,11 @@
 /// the run record: the tables are built from functions that have the same bits everywhere (kernels of `numeric`,
 /// `StrictMath`, arithmetic), and if one ever differed the record would say so.
 ///
+/// A density that is known by its heights alone is [Integrated][dev.leadline.density.Integrated]: one that
+/// is typed as a formula ([Typed][dev.leadline.density.Typed]), or any function. `Landscape` looks for its
+/// peaks, `Refinement` cuts the line into pieces, and each is a polynomial (`Smooth`) or a power of the
+/// distance (`Flank`).
+///
 /// How to add a family:
 /// 1. One file, `Name.java`: a record whose components are the parameters as the project file calls them, with an
 ///    `Entry` for each way to enter it, a `FAMILY` that describes it, and a nested `Standard`, the shape at location 0

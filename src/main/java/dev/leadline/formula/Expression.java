@@ -7,6 +7,7 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.Stream;
 
 /// Formulas as a list of nodes, each after its operands; what is written twice stands here once.
 ///
@@ -22,6 +23,12 @@ final class Expression {
 
     List<Node> nodes() {
         return nodes;
+    }
+
+    List<Double> numbers() {
+        return nodes.stream()
+                .flatMap(node -> node instanceof Number(double value) ? Stream.of(value) : Stream.empty())
+                .toList();
     }
 
     boolean isEvent(int node) {

@@ -17,6 +17,7 @@ public final class Working {
     private final Program program;
     private final Program everyStep;
     private final List<Boolean> events;
+    private final List<Double> numbers;
 
     private Working(
             List<Step> steps,
@@ -24,13 +25,15 @@ public final class Working {
             List<Problem> notes,
             Program program,
             Program everyStep,
-            List<Boolean> events) {
+            List<Boolean> events,
+            List<Double> numbers) {
         this.steps = List.copyOf(steps);
         this.asked = List.copyOf(asked);
         this.notes = List.copyOf(notes);
         this.program = program;
         this.everyStep = everyStep;
         this.events = List.copyOf(events);
+        this.numbers = List.copyOf(numbers);
     }
 
     /// @param inputs names, in the order of the columns of draws
@@ -83,6 +86,12 @@ public final class Working {
     /// Whether the formula asked at `index` is an event (its value can only be 0, 1 or `NaN`).
     public boolean isEvent(int index) {
         return events.get(index);
+    }
+
+    /// The numbers that stand in the formulas and the values that follow from them and from constants alone,
+    /// in the order in which they first stand, each once; up to their sign.
+    public List<Double> numbers() {
+        return numbers;
     }
 
     /// Lines that are no steps are reported and left out, so that those which use them are checked all the same.
@@ -145,6 +154,7 @@ public final class Working {
                                 inputs.size(),
                                 Stream.concat(stepNodes.stream(), askedNodes.stream())
                                         .toList()),
-                askedNodes.stream().map(expression::isEvent).toList());
+                askedNodes.stream().map(expression::isEvent).toList(),
+                expression.numbers());
     }
 }

@@ -69,7 +69,8 @@ class CatalogueTest {
 
     static Stream<Case> densities() {
         return Stream.concat(
-                Examples.all().map(density -> new Case(density.toString(), density)),
+                Stream.concat(Examples.all(), TypedTest.densities())
+                        .map(density -> new Case(density.toString(), density)),
                 Catalogue.families().stream()
                         .flatMap(family -> IntStream.range(0, RANDOM_MEMBERS).mapToObj(i -> random(family, SEED + i))));
     }
@@ -274,6 +275,7 @@ class CatalogueTest {
             case Laplace d -> DoubleStream.of(d.location());
             case Trapezoidal d -> DoubleStream.of(d.flatFrom(), d.flatTo());
             case CurvilinearTrapezoid d -> DoubleStream.of(d.from() + d.inexact(), d.to() - d.inexact());
+            case Integrated _ -> DoubleStream.of(0.3, 0.30001, 1, 2, 3, 5, 6);
             default -> DoubleStream.empty();
         };
     }
@@ -283,7 +285,8 @@ class CatalogueTest {
     }
 
     /// Mean and variance from the quantiles of both tails: with `p = exp(-s) / 2`, the integral of `quantile(p) p` over
-    /// s, to `p = 1e-300`.
+    /// s, to `p = 1e-300`. Typed densities have gaps and several humps, which this rule does not see; theirs
+    /// are held against a table (`TypedTest`).
     @ParameterizedTest(name = "{0}")
     @MethodSource("densities")
     void momentsFromTheQuantiles(Case c) {
@@ -291,6 +294,7 @@ class CatalogueTest {
         double mean = d.mean();
         double variance = d.variance();
         if (!Double.isFinite(variance)
+                || d instanceof Integrated
                 || d.tailOrders().least() < 2.5
                 || variance < 1e-290
                 || d.upperQuantile(1e-299) > 1e150) {
@@ -324,7 +328,11 @@ class CatalogueTest {
     void higherMomentsFromTheQuantiles(Case c) {
         var d = c.density;
         double sd = Math.sqrt(d.variance());
-        if (d.tailOrders().least() < 5 || !Double.isFinite(sd) || d.upperQuantile(1e-299) > 1e75 || sd < 1e-75) {
+        if (d instanceof Integrated
+                || d.tailOrders().least() < 5
+                || !Double.isFinite(sd)
+                || d.upperQuantile(1e-299) > 1e75
+                || sd < 1e-75) {
             return;
         }
         double rounding = 1e-15 * (1 + Math.abs(d.mean()) / sd);

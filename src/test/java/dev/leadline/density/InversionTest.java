@@ -32,7 +32,7 @@ class InversionTest {
                     List.of(0.02, 0.05, 0.0, 0.13, 0.2, 0.2, 0.17, 0.0, 0.13, 0.1)));
 
     static Stream<Density> densities() {
-        return Stream.concat(Examples.all(), BROKEN.stream());
+        return Stream.of(Examples.all(), BROKEN.stream(), TypedTest.densities()).flatMap(densities -> densities);
     }
 
     /// The error is measured in the tail's own probability, down to the smallest that is drawn; a value is as good as

@@ -1,8 +1,11 @@
 package dev.leadline.density;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.problem.Problem;
 import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
@@ -67,6 +70,10 @@ class TypedTest {
             constants.put("m", -3.0);
             return Typed.of(text, "s", constants);
         }
+    }
+
+    static Stream<Density> densities() {
+        return cases().map(c -> c.typed().density());
     }
 
     static Stream<Case> cases() {
@@ -140,6 +147,105 @@ class TypedTest {
             within(point.number("cdf"), d.cdf(down(x)), d.cdf(up(x)), c + ", cdf at " + x);
             within(point.number("survival"), d.survival(up(x)), d.survival(down(x)), c + ", survival at " + x);
         }
+    }
+
+    @ParameterizedTest
+    @MethodSource("cases")
+    void blocksOfAnyLengthHaveTheBitsOfSingleValues(Case c) {
+        var d = c.typed().density();
+        var x = new double[3000];
+        for (int i = 0; i < x.length; i++) {
+            x[i] = d.quantile((i + 0.5) / x.length);
+        }
+        var logs = new double[x.length];
+        d.logPdf(x, logs, x.length);
+        for (int i = 0; i < x.length; i++) {
+            assertEquals(d.logPdf(x[i]), logs[i], 0.0);
+        }
+    }
+
+    /// Several threads at once, as in a run.
+    @Test
+    void sameBitsOnManyThreads() {
+        var d = cases().filter(c -> c.toString().equals("waves"))
+                .findFirst()
+                .orElseThrow()
+                .typed()
+                .density();
+        var x = new double[1000];
+        for (int i = 0; i < x.length; i++) {
+            x[i] = d.quantile((i + 0.5) / x.length);
+        }
+        var expected = Arrays.stream(x).map(d::logPdf).toArray();
+        var seen = Arrays.stream(x).parallel().map(d::logPdf).toArray();
+        assertArrayEquals(expected, seen);
+    }
+
+    @Test
+    void densitiesThatDifferInSpacesOnlyAreOne() {
+        var constants = new LinkedHashMap<String, Double>();
+        constants.put("k", 2.0);
+        var one = Typed.of(text("exp(-k*s)", 0, Double.POSITIVE_INFINITY), "s", constants)
+                .density();
+        constants.put("unused", 3.0);
+        var same = Typed.of(text("exp( -k * s )  # waits", 0, Double.POSITIVE_INFINITY), "s", constants)
+                .density();
+        constants.put("k", 2.5);
+        var other = Typed.of(text("exp(-k*s)", 0, Double.POSITIVE_INFINITY), "s", constants)
+                .density();
+        assertEquals(one, same);
+        assertEquals(one.toString(), same.toString());
+        assertNotEquals(one, other);
+        assertNotEquals(one.toString(), other.toString());
+    }
+
+    @Test
+    void saysWhereNothingIsDrawn() {
+        var typed = Typed.of(text("[s>2 & s<3]+2*[s>5 & s<6]", 0, 10), "s", new LinkedHashMap<>());
+        assertEquals(
+                List.of("no density between s = 3 and 5"),
+                typed.notes().stream().map(Problem::primary).toList());
+        assertEquals("formula", typed.notes().getFirst().place().path());
+        assertEquals(2, typed.density().quantile(1e-18), 1e-15);
+        assertEquals(6, typed.density().upperQuantile(1e-18), 1e-14);
+    }
+
+    /// The peak stands at a number that follows from others.
+    @Test
+    void findsASpikeAtAComputedPlace() {
+        var typed = Typed.of(
+                text(
+                        "exp(-s^2/2)+1e5*exp(-((s-sqrt(2))/1e-6)^2/2)",
+                        Double.NEGATIVE_INFINITY,
+                        Double.POSITIVE_INFINITY),
+                "s",
+                new LinkedHashMap<>());
+        assertEquals(1.1 * Math.sqrt(2 * Math.PI), typed.integral(), 1e-11);
+    }
+
+    /// Bends that no node of a piece sees. The integral is from mpmath 1.2.1, the quadrature of each hump at 30 digits.
+    @Test
+    void findsBendsNextToTheEndsOfPieces() {
+        var typed = Typed.of(
+                text("max(0,cos(s))*exp(-abs(s)/50)", Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY),
+                "s",
+                new LinkedHashMap<>());
+        assertEquals(31.8530120286487132293578930536, typed.integral(), 1e-12);
+    }
+
+    /// A plain function, without a formula.
+    @Test
+    void integratesAFunction() {
+        var range = new Support(0, Double.POSITIVE_INFINITY);
+        var d = Integrated.of("halved wall", x -> x > 700 ? 0 : StrictMath.exp(-x / 2), range);
+        assertEquals(2, d.area(), 1e-12);
+        assertEquals(2, d.mean(), 1e-12);
+        assertEquals(StrictMath.exp(-50), d.survival(100), 1e-12 * StrictMath.exp(-50));
+        assertEquals(2e-300, d.quantile(1e-300), 1e-312);
+    }
+
+    private static TypedText text(String formula, double from, double to) {
+        return new TypedText(formula, from, to, List.of(), false);
     }
 
     private static void within(double expected, double least, double most, String what) {
