@@ -1,8 +1,8 @@
 package dev.leadline.cli;
 
+import dev.leadline.engine.Achieved;
 import dev.leadline.model.Sentence;
 import dev.leadline.project.ProblemsJson;
-import java.util.List;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.ParseResult;
 
@@ -28,10 +28,13 @@ final class CheckCommand implements Command {
     public int run(ParseResult arguments, Console console) {
         var open = OpenProject.of(Arguments.project(arguments));
         open.printNotes(console, Arguments.has(arguments, "--quiet"));
+        var question = open.project().question();
+        var achieved = Achieved.of(question, open.project().plan().seed());
         if (Arguments.has(arguments, "--json")) {
-            console.out().print(ProblemsJson.of(List.of()));
+            console.out().print(ProblemsJson.none(question, achieved));
         } else {
             console.out().println(Sentence.of(open.project().draft()).text());
+            Ties.lines(question, achieved).forEach(console.out()::println);
             console.out().println("No problem found.");
         }
         return Commands.DONE;

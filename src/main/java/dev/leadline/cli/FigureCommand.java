@@ -5,6 +5,7 @@ import dev.leadline.chart.Export;
 import dev.leadline.chart.Picture;
 import dev.leadline.chart.Settling;
 import dev.leadline.chart.View;
+import dev.leadline.engine.Achieved;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.project.RunJson;
@@ -68,7 +69,8 @@ final class FigureCommand implements Command {
                 question, plan, state.lanes().stream().map(LaneState::trace).toList());
         WholeFile.write(file, export.bytes(settling, View.FOLLOWING, width, height, dpi));
         if (Arguments.has(arguments, "--json")) {
-            console.out().print(RunJson.of(open.name(), open.project(), plan, state));
+            console.out().print(RunJson.of(
+                    open.name(), open.project(), plan, state, Achieved.of(open.project().question(), plan.seed())));
         } else {
             console.out().println(Caption.of(settling));
             console.out().println("Written to " + file);

@@ -1,5 +1,6 @@
 package dev.leadline.cli;
 
+import dev.leadline.engine.Achieved;
 import dev.leadline.ground.Ground;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
@@ -39,10 +40,11 @@ final class RunCommand implements Command {
         Question question = open.project().question();
         Plan plan = RunArguments.override(open.project().plan(), arguments);
         StudyState state = run(question, plan, RunArguments.threads(arguments), console, quiet);
+        var achieved = Achieved.of(question, plan.seed());
         if (Arguments.has(arguments, "--json")) {
-            console.out().print(RunJson.of(open.name(), open.project(), plan, state));
+            console.out().print(RunJson.of(open.name(), open.project(), plan, state, achieved));
         } else {
-            console.out().print(new RunText(console, open.project(), plan).of(state));
+            console.out().print(new RunText(console, open.project(), plan).of(state, achieved));
         }
         return exitCode(question, state);
     }

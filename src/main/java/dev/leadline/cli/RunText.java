@@ -1,5 +1,6 @@
 package dev.leadline.cli;
 
+import dev.leadline.engine.Achieved;
 import dev.leadline.estimate.Chance;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground;
@@ -39,11 +40,13 @@ final class RunText {
         this.plan = plan;
     }
 
-    String of(StudyState state) {
+    /// @param achieved correlations of the inputs that are tied
+    String of(StudyState state, List<Achieved> achieved) {
         if (!project.question().title().isEmpty()) {
             line(console.bold(project.question().title().strip()));
         }
         wrapped("", Sentence.of(project.draft()).text());
+        Ties.lines(project.question(), achieved).forEach(this::line);
         state.lanes().forEach(this::lane);
         line("");
         wrapped("", SAMPLING_ERROR_ONLY);

@@ -1,7 +1,5 @@
 package dev.leadline.density;
 
-import java.util.Arrays;
-
 /// Ties inputs to each other without touching the density of any: independent probabilities in, tied ones out.
 /// Immutable, safe for all threads.
 ///
@@ -9,6 +7,9 @@ import java.util.Arrays;
 /// multiplied by what the mixing draws, and become probabilities again. So the tie of an input depends on those before
 /// it only, and any layout of points will do.
 public final class Copula {
+    /// Name of the coordinate that the mixing is drawn by: no input can be called so.
+    public static final String COORDINATE = "*";
+
     private static final double SMALLEST = 0x1p-53;
     private static final double LARGEST = 1 - 0x1p-53;
 
@@ -32,33 +33,45 @@ public final class Copula {
         return correlations;
     }
 
-    /// The inputs whose probabilities those of the wanted ones are made of.
+    /// How many probabilities a draw takes: one for each input and, last, one for the mixing where that is random.
+    public int coordinates() {
+        return factor.length + (mixing.isRandom() ? 1 : 0);
+    }
+
+    /// The coordinates that the wanted inputs are made of.
     public boolean[] behind(boolean[] wanted) {
-        boolean[] behind = new boolean[factor.length];
+        boolean[] behind = new boolean[coordinates()];
         for (int i = 0; i < factor.length; i++) {
             for (int j = 0; j <= i; j++) {
                 behind[j] |= wanted[i] && factor[i][j] != 0;
             }
+            behind[behind.length - 1] |= wanted[i] && mixing.isRandom();
         }
         return behind;
     }
 
-    /// Replaces independent probabilities by tied ones, from `2^-53` to `1 - 2^-53`.
+    /// Replaces independent probabilities of the wanted inputs by tied ones, from `2^-53` to `1 - 2^-53`; all else in
+    /// `u` is scratch.
     ///
-    /// @param u one array for each input, at least `rows` long; `null` for one that
-    ///     is [behind][#behind] no wanted one
-    /// @param wanted inputs to tie; the arrays of the others are scratch
+    /// @param u one array for each coordinate, at least `rows` long; `null` for one that is not [behind][#behind]
     public void tie(double[][] u, boolean[] wanted, int rows) {
-        for (double[] column : u) {
-            if (column != null) {
-                normal.fill(column, column, rows);
+        for (int i = 0; i < factor.length; i++) {
+            if (u[i] != null) {
+                normal.fill(u[i], u[i], rows);
             }
         }
+        double[] factors = mixing.isRandom() ? u[factor.length] : null;
+        if (factors != null) {
+            mixing.factors(factors, rows);
+        }
         // From the last: those before it are still as they were.
-        for (int i = u.length - 1; i >= 0; i--) {
+        for (int i = factor.length - 1; i >= 0; i--) {
             if (wanted[i]) {
                 combine(u, i, rows);
-                dev.leadline.numeric.Normal.cdf(u[i], u[i], rows);
+                if (factors != null) {
+                    multiply(u[i], factors, rows);
+                }
+                mixing.probabilities(u[i], rows);
                 clamp(u[i], rows);
             }
         }
@@ -84,6 +97,12 @@ public final class Copula {
         }
     }
 
+    private static void multiply(double[] y, double[] factors, int rows) {
+        for (int row = 0; row < rows; row++) {
+            y[row] *= factors[row];
+        }
+    }
+
     private static void clamp(double[] u, int rows) {
         for (int row = 0; row < rows; row++) {
             u[row] = Math.min(Math.max(u[row], SMALLEST), LARGEST);
@@ -99,7 +118,7 @@ public final class Copula {
 
     @Override
     public int hashCode() {
-        return Arrays.hashCode(new Object[] {mixing, correlations});
+        return 31 * mixing.hashCode() + correlations.hashCode();
     }
 
     @Override

@@ -50,6 +50,11 @@ public final class Correlations {
         return factor().isPresent();
     }
 
+    /// The nearest that are possible.
+    public Correlations nearest() {
+        return NearestCorrelations.of(this);
+    }
+
     /// The lower triangular L with `L Lᵀ` these correlations (Cholesky); empty where there is none, or where it
     /// divides by almost nothing.
     Optional<double[][]> factor() {

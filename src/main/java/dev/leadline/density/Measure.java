@@ -1,7 +1,9 @@
 package dev.leadline.density;
 
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
+import java.util.concurrent.ConcurrentHashMap;
 
 /// What the correlation of two inputs is measured by.
 ///
@@ -14,6 +16,14 @@ public enum Measure {
     KENDALL,
     /// Correlation of values: covariance over the product of standard deviations.
     PEARSON;
+
+    private static final Density RANKS = new Uniform(0, 1);
+    private static final int KEPT = 10_000;
+
+    /// What was solved last: a project is checked again at every edit.
+    private static final Map<Sought, Double> SOLVED = new ConcurrentHashMap<>();
+
+    private record Sought(Measure measure, Mixing mixing, Density one, Density other, double target) {}
 
     /// Word of the project file.
     public String word() {
@@ -29,12 +39,35 @@ public enum Measure {
         return Optional.empty();
     }
 
-    /// The correlation of the normals behind two inputs, for which this measure has the value `target`.
-    public double latent(double target) {
-        return switch (this) {
-            case SPEARMAN -> 2 * StrictMath.sin(Math.PI / 6 * target);
-            case KENDALL -> StrictMath.sin(Math.PI / 2 * target);
-            case PEARSON -> throw new UnsupportedOperationException();
-        };
+    /// The correlation of the normals behind two inputs, for which this measure has the value `target`; `NaN` where it
+    /// cannot have it.
+    public double latent(Mixing mixing, Density one, Density other, double target) {
+        if (this == KENDALL) {
+            return StrictMath.sin(Math.PI / 2 * target);
+        }
+        if (this == SPEARMAN && mixing.equals(Mixing.NONE)) {
+            return 2 * StrictMath.sin(Math.PI / 6 * target);
+        }
+        if (SOLVED.size() > KEPT) {
+            SOLVED.clear();
+        }
+        // The densities of ranks are all the same.
+        var sought = this == SPEARMAN
+                ? new Sought(this, mixing, RANKS, RANKS, target)
+                : new Sought(this, mixing, one, other, target);
+        return SOLVED.computeIfAbsent(sought, s -> new TiedPair(s.mixing, s.one, s.other).latent(s.target));
+    }
+
+    /// The value of this measure, given the correlation of the normals behind two inputs.
+    public double value(Mixing mixing, Density one, Density other, double latent) {
+        double alpha = StrictMath.asin(latent);
+        if (this == KENDALL) {
+            return 2 / Math.PI * alpha;
+        }
+        if (this == SPEARMAN && mixing.equals(Mixing.NONE)) {
+            return 6 / Math.PI * StrictMath.asin(latent / 2);
+        }
+        var pair = this == SPEARMAN ? new TiedPair(mixing, RANKS, RANKS) : new TiedPair(mixing, one, other);
+        return pair.correlation(alpha);
     }
 }

@@ -24,13 +24,13 @@ public final class Recipe {
     private final List<Integer> weighing;
     private final double volume;
 
-    private Recipe(Question question, Lane lane, long seed) {
+    private Recipe(Question question, Lane lane, long seed, Purpose purpose) {
         this.question = question;
         this.lane = lane;
         this.ties = new Ties(question);
         this.layout = lane.scheme()
                 .points()
-                .layout(new Address(seed, Purpose.RUN, lane.name(), 0, "", 0), ties.coordinates());
+                .layout(new Address(seed, purpose, lane.name(), 0, "", 0), ties.coordinates());
         this.inversions = question.inputs().stream()
                 .map(input -> Inversion.of(input.drawn()))
                 .toList();
@@ -49,7 +49,11 @@ public final class Recipe {
 
     /// Builds the inversion tables that are not in the cache yet: up to 100 ms for each new shape.
     public static Recipe of(Question question, Lane lane, long seed) {
-        return new Recipe(question, lane, seed);
+        return of(question, lane, seed, Purpose.RUN);
+    }
+
+    static Recipe of(Question question, Lane lane, long seed, Purpose purpose) {
+        return new Recipe(question, lane, seed, purpose);
     }
 
     public Sampler sampler() {

@@ -2,25 +2,41 @@ package dev.leadline.model;
 
 import dev.leadline.density.Copula;
 import dev.leadline.density.Correlations;
+import dev.leadline.density.Density;
 import dev.leadline.density.Measure;
 import dev.leadline.density.Mixing;
+import dev.leadline.model.Dependence.Repair;
 import dev.leadline.model.Dependence.Tie;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.problem.Nearest;
+import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
+import java.math.BigDecimal;
+import java.math.RoundingMode;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
+import java.util.stream.Stream;
 
 /// Makes the dependence of inputs of its draft.
 final class Dependences {
     private static final String PATH = "$.dependence";
+
+    /// Changed correlations that are named.
+    private static final int MOST_NAMED = 3;
+
+    /// Decimal places of a correlation.
+    private static final int PLACES = 4;
 
     private final List<InputDraft> drafts;
     private final List<String> names;
@@ -49,28 +65,45 @@ final class Dependences {
         Optional<Mixing> mixing = mixing(draft);
         List<Pair> pairs = pairs(draft);
         boolean complete = pairs.size() == draft.pairs().size() && inputs.size() == drafts.size();
-        return complete && !pairs.isEmpty() ? mixing.flatMap(kind -> tied(kind, pairs)) : Optional.empty();
+        return complete && !pairs.isEmpty() ? mixing.flatMap(kind -> tied(kind, draft.repair(), pairs, inputs)) : Optional.empty();
     }
 
     private Optional<Mixing> mixing(DependenceDraft draft) {
-        if (draft.copula().equals("gaussian")) {
-            if (draft.dof().isPresent()) {
-                findings.add(
-                        PATH + ".dof",
-                        "the Gaussian copula has no dof",
-                        "Degrees of freedom belong to the Student copula.",
-                        "Leave it out.");
+        return switch (draft.copula()) {
+            case Mixing.GAUSSIAN -> {
+                if (draft.dof().isPresent()) {
+                    findings.add(
+                            PATH + ".dof",
+                            "the Gaussian copula has no dof",
+                            "Degrees of freedom belong to the Student copula: the fewer, the more extremes come together.",
+                            "Leave it out, or write \"copula\": \"student\".");
+                }
+                yield Optional.of(Mixing.NONE);
             }
-            return Optional.of(new Mixing.None());
+            case Mixing.STUDENT -> student(draft.dof());
+            default -> {
+                Problem problem = Problem.of("the copula \"%s\" is not available".formatted(draft.copula()))
+                        .because("Copulas are gaussian, and student with degrees of freedom.");
+                findings.add(
+                        PATH + ".copula",
+                        Nearest.to(draft.copula(), Set.of(Mixing.GAUSSIAN, Mixing.STUDENT))
+                                .map(near -> problem.tryThis("Was \"%s\" meant?".formatted(near)))
+                                .orElse(problem.tryThis("Write \"copula\": \"gaussian\".")));
+                yield Optional.empty();
+            }
+        };
+    }
+
+    private Optional<Mixing> student(OptionalDouble dof) {
+        if (dof.isEmpty()) {
+            findings.add(
+                    PATH + ".dof",
+                    "the Student copula has no dof",
+                    "Degrees of freedom say how extremes come together: with 3 often, with 30 hardly.",
+                    "Add \"dof\": 4.");
+            return Optional.empty();
         }
-        Problem problem = Problem.of("the copula \"%s\" is not available".formatted(draft.copula()))
-                .because("The copula here is gaussian.");
-        findings.add(
-                PATH + ".copula",
-                Nearest.to(draft.copula(), Set.of("gaussian"))
-                        .map(near -> problem.tryThis("Was \"%s\" meant?".formatted(near)))
-                        .orElse(problem.tryThis("Write \"copula\": \"gaussian\".")));
-        return Optional.empty();
+        return findings.made(within -> PATH + "." + within, () -> Mixing.student(dof.getAsDouble()));
     }
 
     /// Those that have no problem.
@@ -141,14 +174,6 @@ final class Dependences {
     }
 
     private boolean target(PairDraft pair, String path) {
-        if (pair.measure().equals("pearson")) {
-            findings.add(
-                    path + ".pearson",
-                    "pearson is not available",
-                    "Inputs here are tied by ranks.",
-                    "Give spearman or kendall.");
-            return false;
-        }
         if (pair.value() > -1 && pair.value() < 1) {
             return true;
         }
@@ -163,27 +188,149 @@ final class Dependences {
         return false;
     }
 
-    private Optional<Dependence> tied(Mixing mixing, List<Pair> pairs) {
+    private Optional<Dependence> tied(Mixing mixing, boolean repair, List<Pair> pairs, List<Input> inputs) {
         List<Integer> tied = pairs.stream()
-                .flatMap(pair -> List.of(pair.first(), pair.second()).stream())
+                .flatMap(pair -> Stream.of(pair.first(), pair.second()))
                 .distinct()
                 .sorted()
                 .toList();
-        List<Tie> ties = new ArrayList<>();
-        var correlations = Correlations.none(tied.size());
+        var stated = Correlations.none(tied.size());
+        boolean attained = true;
         for (Pair pair : pairs) {
-            double latent = pair.measure().latent(pair.target());
-            ties.add(new Tie(pair.first(), pair.second(), pair.measure(), pair.target(), latent));
-            correlations = correlations.with(tied.indexOf(pair.first()), tied.indexOf(pair.second()), latent);
+            double latent = latent(mixing, pair, inputs);
+            attained &= !Double.isNaN(latent);
+            stated = stated.with(tied.indexOf(pair.first()), tied.indexOf(pair.second()), latent);
         }
-        if (!correlations.arePossible()) {
+        if (!attained) {
+            return Optional.empty();
+        }
+        boolean possible = stated.arePossible();
+        var drawn = possible ? stated : stated.nearest();
+        List<Tie> ties = pairs.stream()
+                .map(pair -> new Tie(
+                        pair.first(),
+                        pair.second(),
+                        pair.measure(),
+                        pair.target(),
+                        drawn.at(tied.indexOf(pair.first()), tied.indexOf(pair.second()))))
+                .toList();
+        List<Repair> repairs = possible ? List.of() : repairs(mixing, tied, drawn, ties, inputs);
+        if (!possible && !repair) {
             findings.add(
                     PATH + ".pairs",
                     "these correlations cannot hold together",
-                    "Inputs that go with the same input cannot go against each other.",
-                    "Change some of them.");
+                    "Inputs that go with the same input go with each other. The nearest that can hold change %s."
+                            .formatted(changes(repairs, names)),
+                    "Change them, or write \"repair\": true to draw with the nearest.");
             return Optional.empty();
         }
-        return Optional.of(new Dependence(new Copula(mixing, correlations), tied, ties));
+        return Optional.of(new Dependence(new Copula(mixing, drawn), tied, ties, repairs));
+    }
+
+    /// `NaN` where there is none, noted.
+    private double latent(Mixing mixing, Pair pair, List<Input> inputs) {
+        Density one = inputs.get(pair.first()).drawn();
+        Density other = inputs.get(pair.second()).drawn();
+        if (pair.measure() == Measure.PEARSON) {
+            for (int input : List.of(pair.first(), pair.second())) {
+                if (!Double.isFinite(inputs.get(input).drawn().variance())) {
+                    findings.add(
+                            pair.path(),
+                            "%s has no finite variance, and so no pearson correlation".formatted(names.get(input)),
+                            "It is the covariance over both standard deviations.",
+                            "Give spearman or kendall, which compare ranks.");
+                    return Double.NaN;
+                }
+            }
+        }
+        double latent = pair.measure().latent(mixing, one, other, pair.target());
+        if (Double.isNaN(latent)) {
+            double least = pair.measure().value(mixing, one, other, -1);
+            double most = pair.measure().value(mixing, one, other, 1);
+            findings.add(
+                    pair.path(),
+                    "%s is %s but must be between %s and %s"
+                            .formatted(
+                                    pair.measure().word(),
+                                    Findings.number(pair.target()),
+                                    rounded(least, RoundingMode.CEILING),
+                                    rounded(most, RoundingMode.FLOOR)),
+                    "With densities of such shapes the values cannot be correlated more strongly.",
+                    "Choose a value between, or give spearman, which has no such limits.");
+        }
+        return latent;
+    }
+
+    private List<Repair> repairs(
+            Mixing mixing, List<Integer> tied, Correlations drawn, List<Tie> ties, List<Input> inputs) {
+        Map<Set<Integer>, Tie> stated = new HashMap<>();
+        ties.forEach(tie -> stated.put(Set.of(tie.one(), tie.other()), tie));
+        List<Repair> repairs = new ArrayList<>();
+        for (int i = 0; i < tied.size(); i++) {
+            for (int j = i + 1; j < tied.size(); j++) {
+                int one = tied.get(i);
+                int other = tied.get(j);
+                Optional<Tie> tie = Optional.ofNullable(stated.get(Set.of(one, other)));
+                Measure measure = tie.map(Tie::measure).orElse(Measure.SPEARMAN);
+                double from = tie.map(Tie::target).orElse(0.0);
+                double to = measure.value(
+                        mixing, inputs.get(one).drawn(), inputs.get(other).drawn(), drawn.at(i, j));
+                repairs.add(new Repair(one, other, measure, from, to));
+            }
+        }
+        repairs.sort(Comparator.comparingDouble(repair -> -Math.abs(repair.to() - repair.from())));
+        return repairs;
+    }
+
+    /// As `spearman of a and b from 0.9 to 0.7612, …`; the largest few.
+    private static String changes(List<Repair> repairs, List<String> names) {
+        String largest = repairs.stream()
+                .limit(MOST_NAMED)
+                .map(repair -> "%s of %s and %s from %s to %s"
+                        .formatted(
+                                repair.measure().word(),
+                                names.get(repair.one()),
+                                names.get(repair.other()),
+                                Findings.number(repair.from()),
+                                rounded(repair.to(), RoundingMode.HALF_EVEN)))
+                .collect(Collectors.joining(", "));
+        return repairs.size() <= MOST_NAMED ? largest : largest + ", others less";
+    }
+
+    private static String rounded(double correlation, RoundingMode mode) {
+        return Double.isNaN(correlation)
+                ? "not a number"
+                : Findings.number(
+                        new BigDecimal(correlation).setScale(PLACES, mode).doubleValue());
+    }
+
+    /// What is no fault but may surprise.
+    static List<Problem> notes(Dependence dependence, List<Input> inputs) {
+        List<Problem> notes = new ArrayList<>();
+        if (!dependence.repairs().isEmpty()) {
+            notes.add(Problem.of("the nearest correlations that can hold together take the place of those stated")
+                    .because("They change %s."
+                            .formatted(changes(
+                                    dependence.repairs(),
+                                    inputs.stream().map(Input::name).toList())))
+                    .at(Place.of(PATH + ".repair")));
+        }
+        for (int i = 0; i < dependence.ties().size(); i++) {
+            Tie tie = dependence.ties().get(i);
+            List<String> discrete = IntStream.of(tie.one(), tie.other())
+                    .mapToObj(inputs::get)
+                    .filter(input -> input.drawn().isDiscrete())
+                    .map(Input::name)
+                    .toList();
+            if (!discrete.isEmpty() && tie.measure() != Measure.PEARSON) {
+                String path = "%s.pairs[%d].%s".formatted(PATH, i, tie.measure().word());
+                notes.add(Problem.of("%s speaks of the copula behind %s"
+                                .formatted(tie.measure().word(), String.join(" and ", discrete)))
+                        .because("Equal values share a rank, so that the values themselves are less correlated.")
+                        .tryThis("Look at what is achieved, or give pearson, which speaks of the values.")
+                        .at(Place.of(path)));
+            }
+        }
+        return notes;
     }
 }

@@ -18,7 +18,7 @@ import java.util.TreeMap;
 /// A project after every check: the question and how it is to be run, beside the draft they came from.
 ///
 /// @param notes what is no fault but may surprise, at its JSON path: names that hide a number which every formula
-///     knows, rows of data that were left out
+///     knows, rows of data that were left out, correlations that do not mean quite what they seem to
 /// @param data SHA-256 of each file of data that was read, by its name in the project
 public record Project(Draft draft, Question question, Plan plan, List<Problem> notes, SortedMap<String, String> data) {
     public Project {
@@ -66,6 +66,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
                 tolerance);
         List<Problem> notes = new ArrayList<>(Workings.notes(draft, question.working()));
         notes.addAll(findings.notes());
+        dependence.ifPresent(tied -> notes.addAll(Dependences.notes(tied, inputs)));
         return new Project(draft, question, plan, notes, read);
     }
 

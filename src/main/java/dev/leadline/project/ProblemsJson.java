@@ -1,5 +1,7 @@
 package dev.leadline.project;
 
+import dev.leadline.engine.Achieved;
+import dev.leadline.model.Question;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Span;
 import java.util.List;
@@ -12,11 +14,23 @@ public final class ProblemsJson {
     private ProblemsJson() {}
 
     public static String of(List<Problem> problems) {
-        return JsonWriter.pretty(Json.object()
+        return JsonWriter.pretty(json(problems).build());
+    }
+
+    /// Of a question that has none, with how its inputs are tied where some are.
+    public static String none(Question question, List<Achieved> achieved) {
+        var json = json(List.of());
+        if (question.dependence().isPresent()) {
+            json.put("dependence", DependenceJson.of(question, achieved));
+        }
+        return JsonWriter.pretty(json.build());
+    }
+
+    private static Json.Builder json(List<Problem> problems) {
+        return Json.object()
                 .put(
                         "problems",
-                        Json.list(problems.stream().map(ProblemsJson::problem).toList()))
-                .build());
+                        Json.list(problems.stream().map(ProblemsJson::problem).toList()));
     }
 
     private static Json problem(Problem problem) {

@@ -1,5 +1,6 @@
 package dev.leadline.project;
 
+import dev.leadline.engine.Achieved;
 import dev.leadline.estimate.Chance;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground;
@@ -30,7 +31,8 @@ public final class RunJson {
 
     /// @param name what to call the project where it has no title
     /// @param plan what was run
-    public static String of(String name, Project project, Plan plan, StudyState state) {
+    /// @param achieved correlations of the inputs that are tied
+    public static String of(String name, Project project, Plan plan, StudyState state, List<Achieved> achieved) {
         var question = project.question();
         var run = new RunJson(project);
         return JsonWriter.pretty(Json.object()
@@ -39,6 +41,7 @@ public final class RunJson {
                 .put("seed", Json.of(plan.seed()))
                 .put("version", Version.text())
                 .put("fingerprint", Fingerprint.of(project))
+                .put("dependence", DependenceJson.of(question, achieved))
                 .put("lanes", Json.list(state.lanes().stream().map(run::lane).toList()))
                 .put("reference", question.reference().map(RunJson::reference).orElse(new Json.Null()))
                 .put("comparison", new Json.Null())

@@ -3,7 +3,9 @@ package dev.leadline.stream;
 /// What random numbers are drawn for; numbers of different purposes are independent.
 public enum Purpose {
     /// Draws that enter a result.
-    RUN(1);
+    RUN(1),
+    /// Draws that show what correlation tied inputs have.
+    DEPENDENCE(2);
 
     private final int number;
 

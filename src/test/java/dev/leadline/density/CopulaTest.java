@@ -47,7 +47,7 @@ class CopulaTest {
             expected[1][row] = normal.cumulativeProbability(.7 * a + left * b);
             expected[2][row] = normal.cumulativeProbability(-.3 * a + last * b + Math.sqrt(1 - .09 - last * last) * c);
         }
-        new Copula(new Mixing.None(), THREE).tie(u, all(3), 3);
+        new Copula(Mixing.NONE, THREE).tie(u, all(3), 3);
         for (int i = 0; i < 3; i++) {
             assertArrayEquals(expected[i], u[i], 2e-12);
         }
@@ -58,7 +58,7 @@ class CopulaTest {
     void keepsTheDensityOfEachInput() {
         int cells = 500;
         double[][] u = grid(cells);
-        new Copula(new Mixing.None(), Correlations.none(2).with(0, 1, .8)).tie(u, all(2), cells * cells);
+        new Copula(Mixing.NONE, Correlations.none(2).with(0, 1, .8)).tie(u, all(2), cells * cells);
         for (double[] column : u) {
             for (int power = 1; power <= 4; power++) {
                 int k = power;
@@ -78,14 +78,14 @@ class CopulaTest {
     void theFirstInputKeepsItsStrata() {
         double[][] u = grid(64);
         double[] first = u[0].clone();
-        new Copula(new Mixing.None(), Correlations.none(2).with(0, 1, .9)).tie(u, all(2), first.length);
+        new Copula(Mixing.NONE, Correlations.none(2).with(0, 1, .9)).tie(u, all(2), first.length);
         assertArrayEquals(first, u[0], 1e-12);
     }
 
     @Test
     void drawsOnlyWhatAWantedInputIsMadeOf() {
         var copula = new Copula(
-                new Mixing.None(), Correlations.none(4).with(0, 2, .5).with(1, 3, .5));
+                Mixing.NONE, Correlations.none(4).with(0, 2, .5).with(1, 3, .5));
         boolean[] wanted = {false, false, true, false};
         assertArrayEquals(new boolean[] {true, false, true, false}, copula.behind(wanted));
         double[][] some = {{.2}, null, {.6}, null};
@@ -97,7 +97,7 @@ class CopulaTest {
 
     @Test
     void staysBetweenTheSmallestAndTheLargestProbabilityDrawn() {
-        var copula = new Copula(new Mixing.None(), Correlations.none(2).with(0, 1, .9));
+        var copula = new Copula(Mixing.NONE, Correlations.none(2).with(0, 1, .9));
         double[][] u = {{0x1p-53, 1 - 0x1p-53}, {0x1p-53, 1 - 0x1p-53}};
         copula.tie(u, all(2), 2);
         for (double[] column : u) {
@@ -108,6 +108,6 @@ class CopulaTest {
     @Test
     void refusesWhatCannotBe() {
         var impossible = Correlations.none(3).with(0, 1, .9).with(1, 2, .9).with(0, 2, -.9);
-        assertThrows(IllegalArgumentException.class, () -> new Copula(new Mixing.None(), impossible));
+        assertThrows(IllegalArgumentException.class, () -> new Copula(Mixing.NONE, impossible));
     }
 }

@@ -26,8 +26,8 @@ class TiesTest {
     /// Ties x with y and y with z.
     private static Questions tied() {
         var correlations = Correlations.none(3).with(0, 1, .7).with(1, 2, -.5);
-        var copula = new Copula(new Mixing.None(), correlations);
-        return inputs().tied(new Dependence(copula, List.of(1, 2, 3), List.of()));
+        var copula = new Copula(Mixing.NONE, correlations);
+        return inputs().tied(new Dependence(copula, List.of(1, 2, 3), List.of(), List.of()));
     }
 
     private static double mean(Question question, long index) {
