@@ -34,12 +34,15 @@ public final class ReferenceValues {
                 .toList();
     }
 
-    /// The case of a record whose label is, or starts with, `label`.
+    /// The case of a record whose label is `label`, or else the one that starts with it.
     public static JsonNode caseOf(String id, String label) {
         var cases = StreamSupport.stream(record(id).required("cases").spliterator(), false)
                 .filter(c -> c.required("label").asString().startsWith(label))
                 .toList();
-        return one(cases, id + ", case " + label);
+        return cases.stream()
+                .filter(c -> c.required("label").asString().equals(label))
+                .findFirst()
+                .orElseGet(() -> one(cases, id + ", case " + label));
     }
 
     /// The number a record expects under this name.

@@ -69,8 +69,13 @@ final class FigureCommand implements Command {
                 question, plan, state.lanes().stream().map(LaneState::trace).toList());
         WholeFile.write(file, export.bytes(settling, View.FOLLOWING, width, height, dpi));
         if (Arguments.has(arguments, "--json")) {
-            console.out().print(RunJson.of(
-                    open.name(), open.project(), plan, state, Achieved.of(open.project().question(), plan.seed())));
+            console.out()
+                    .print(RunJson.of(
+                            open.name(),
+                            open.project(),
+                            plan,
+                            state,
+                            Achieved.of(open.project().question(), plan.seed())));
         } else {
             console.out().println(Caption.of(settling));
             console.out().println("Written to " + file);

@@ -48,6 +48,10 @@ public enum Measure {
         if (this == SPEARMAN && mixing.equals(Mixing.NONE)) {
             return 2 * StrictMath.sin(Math.PI / 6 * target);
         }
+        if (this == PEARSON && (one instanceof Empirical || other instanceof Empirical)) {
+            // Columns of data are too large to keep.
+            return new TiedPair(mixing, one, other).latent(target);
+        }
         if (SOLVED.size() > KEPT) {
             SOLVED.clear();
         }

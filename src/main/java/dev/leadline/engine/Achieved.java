@@ -54,12 +54,11 @@ public record Achieved(Tie tie, double value, Interval interval) {
                     .toArray(double[][]::new);
             for (int k = 0; k < ties.size(); k++) {
                 Tie tie = ties.get(k);
-                seen[k][batch] =
-                        switch (tie.measure()) {
-                            case SPEARMAN -> Association.pearson(ranks[tie.one()], ranks[tie.other()]);
-                            case KENDALL -> Association.kendall(values[tie.one()], values[tie.other()]);
-                            case PEARSON -> Association.pearson(values[tie.one()], values[tie.other()]);
-                        };
+                seen[k][batch] = switch (tie.measure()) {
+                    case SPEARMAN -> Association.pearson(ranks[tie.one()], ranks[tie.other()]);
+                    case KENDALL -> Association.kendall(values[tie.one()], values[tie.other()]);
+                    case PEARSON -> Association.pearson(values[tie.one()], values[tie.other()]);
+                };
             }
         }
         double level = question.confidence();

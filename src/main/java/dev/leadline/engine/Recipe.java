@@ -28,9 +28,8 @@ public final class Recipe {
         this.question = question;
         this.lane = lane;
         this.ties = new Ties(question);
-        this.layout = lane.scheme()
-                .points()
-                .layout(new Address(seed, purpose, lane.name(), 0, "", 0), ties.coordinates());
+        this.layout =
+                lane.scheme().points().layout(new Address(seed, purpose, lane.name(), 0, "", 0), ties.coordinates());
         this.inversions = question.inputs().stream()
                 .map(input -> Inversion.of(input.drawn()))
                 .toList();

@@ -38,8 +38,8 @@ public final class Association {
     /// Kendall's correlation, the form for ties (tau-b): pairs of rows in the same order in both columns less those in
     /// opposite order, over the root of the pairs that differ in the one times those that differ in the other.
     ///
-    /// Source: Knight (1966), Journal of the American Statistical Association 61, 436-439: the pairs in opposite order
-    /// are the exchanges of a merge sort by y after a sort by x.
+    /// Source: Knight (1966), Journal of the American Statistical Association 61, 436-439: the pairs in opposite
+    /// order are the exchanges of a merge sort by y after a sort by x.
     ///
     /// @param x its order is all that counts, so that ranks do
     public static double kendall(double[] x, double[] y) {

@@ -65,7 +65,9 @@ final class Dependences {
         Optional<Mixing> mixing = mixing(draft);
         List<Pair> pairs = pairs(draft);
         boolean complete = pairs.size() == draft.pairs().size() && inputs.size() == drafts.size();
-        return complete && !pairs.isEmpty() ? mixing.flatMap(kind -> tied(kind, draft.repair(), pairs, inputs)) : Optional.empty();
+        return complete && !pairs.isEmpty()
+                ? mixing.flatMap(kind -> tied(kind, draft.repair(), pairs, inputs))
+                : Optional.empty();
     }
 
     private Optional<Mixing> mixing(DependenceDraft draft) {

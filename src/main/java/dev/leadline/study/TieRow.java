@@ -43,6 +43,7 @@ public record TieRow(String of, String target, String achieved) {
             return "cannot be seen: values hardly vary";
         }
         Rounding rounding = Rounding.of(achieved.value(), achieved.interval().halfWidth());
-        return rounding.value() + rounding.uncertainty().map(error -> " ± " + error).orElse("");
+        return rounding.value()
+                + rounding.uncertainty().map(error -> " ± " + error).orElse("");
     }
 }

@@ -388,8 +388,8 @@ class ReferenceRecordsTest {
         String pairs = rangeClosed(1, d)
                 .boxed()
                 .flatMap(i -> rangeClosed(i + 1, d)
-                        .mapToObj(j -> "{\"of\": [\"x%d\", \"x%d\"], \"spearman\": %s}"
-                                .formatted(i, j, 6 / Math.PI * Math.asin(correlation.of(i, j) / 2))))
+                        .mapToObj(j ->
+                                "{\"of\": [\"x%d\", \"x%d\"], \"pearson\": %s}".formatted(i, j, correlation.of(i, j))))
                 .collect(joining(", "));
         return project.replace(
                 "\"ask\"", "\"dependence\": {\"copula\": \"gaussian\", \"pairs\": [%s]}, \"ask\"".formatted(pairs));

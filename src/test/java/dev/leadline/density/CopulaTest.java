@@ -53,6 +53,47 @@ class CopulaTest {
         }
     }
 
+    /// By the definition, with the t and chi-square distributions of another library.
+    @Test
+    void multipliesNormalsByOneFactor() {
+        double[][] u = {{.1, .5, .999}, {.7, .2, 1e-9}, {.3, 1e-6, .95}};
+        double dof = 3.5;
+        var normal = org.apache.commons.statistics.distribution.NormalDistribution.of(0, 1);
+        var chiSquare = org.apache.commons.statistics.distribution.ChiSquaredDistribution.of(dof);
+        var student = org.apache.commons.statistics.distribution.TDistribution.of(dof);
+        double[][] expected = new double[2][3];
+        for (int row = 0; row < 3; row++) {
+            double a = normal.inverseCumulativeProbability(u[0][row]);
+            double b = normal.inverseCumulativeProbability(u[1][row]);
+            double factor = Math.sqrt(dof / chiSquare.inverseCumulativeProbability(u[2][row]));
+            expected[0][row] = student.cumulativeProbability(factor * a);
+            expected[1][row] = student.cumulativeProbability(factor * (-.6 * a + .8 * b));
+        }
+        new Copula(Mixing.student(dof), Correlations.none(2).with(0, 1, -.6)).tie(u, all(2), 3);
+        assertArrayEquals(expected[0], u[0], 1e-11);
+        assertArrayEquals(expected[1], u[1], 1e-11);
+    }
+
+    /// The same bits on every machine.
+    @Test
+    void bitsStayAsTheyAre() {
+        assertEquals("ffffff094dec742f", hash(Mixing.NONE));
+        assertEquals("19ef96f9760", hash(Mixing.student(4)));
+    }
+
+    private static String hash(Mixing mixing) {
+        var copula = new Copula(mixing, THREE);
+        double[][] u = new double[copula.coordinates()][1000];
+        for (int i = 0; i < u.length; i++) {
+            for (int row = 0; row < 1000; row++) {
+                u[i][row] = (row * (.6180339887498949 + i * .1) + .05 * (i + 1)) % 1;
+            }
+        }
+        copula.tie(u, all(3), 1000);
+        return Long.toHexString(
+                Arrays.hashCode(u[0]) * 31L * 31L + Arrays.hashCode(u[1]) * 31L + Arrays.hashCode(u[2]));
+    }
+
     /// A grid of strata stays as even as its own resolution in each input that is tied.
     @Test
     void keepsTheDensityOfEachInput() {
@@ -84,8 +125,7 @@ class CopulaTest {
 
     @Test
     void drawsOnlyWhatAWantedInputIsMadeOf() {
-        var copula = new Copula(
-                Mixing.NONE, Correlations.none(4).with(0, 2, .5).with(1, 3, .5));
+        var copula = new Copula(Mixing.NONE, Correlations.none(4).with(0, 2, .5).with(1, 3, .5));
         boolean[] wanted = {false, false, true, false};
         assertArrayEquals(new boolean[] {true, false, true, false}, copula.behind(wanted));
         double[][] some = {{.2}, null, {.6}, null};
