@@ -43,7 +43,10 @@ public final class Catalogue {
             Laplace.FAMILY,
             Logistic.FAMILY,
             LogLogistic.FAMILY,
-            Cauchy.FAMILY);
+            Cauchy.FAMILY,
+            Bernoulli.FAMILY,
+            Binomial.FAMILY,
+            Poisson.FAMILY);
 
     /// Families by other names that are in use.
     private static final Map<String, String> ALSO_CALLED = Map.ofEntries(

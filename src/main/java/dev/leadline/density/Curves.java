@@ -9,7 +9,7 @@ import java.util.concurrent.FutureTask;
 /// The curves of the shapes used last, so that inputs of one shape share one. Safe for all threads: a shape that two
 /// threads ask for at once is built once, by the thread that asked first.
 final class Curves {
-    /// About 160 kB each.
+    /// About 160 kB each; at most 6 MB.
     private static final int KEPT = 128;
 
     private static final Map<Density, FutureTask<Curve>> LAST_USED = new LinkedHashMap<>(16, 0.75f, true) {
@@ -40,6 +40,10 @@ final class Curves {
     }
 
     static Curve build(Density shape) {
-        return shape instanceof ClosedForm form ? Exact.of(shape, form) : TableFit.of(shape);
+        return switch (shape) {
+            case ClosedForm form -> Exact.of(shape, form);
+            case Discrete discrete -> Steps.of(discrete);
+            default -> TableFit.of(shape);
+        };
     }
 }

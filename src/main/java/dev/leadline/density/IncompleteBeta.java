@@ -68,32 +68,39 @@ record IncompleteBeta(double a, double b, double logConstant) {
             return x <= 0 ? 0 : y <= 0 ? 1 : x + y;
         }
         return isBelow(x)
-                ? Exp.exp(logPrefix(x, y)) * fraction(x, y)
+                ? Exp.exp(logPrefix(x, y)) * fraction(a, b, x, y, b * x - a * y)
                 : 1 - mirrored().lower(y, x);
     }
 
     /// The logarithm of the mass below.
     double logLower(double x, double y) {
         if (isBelow(x)) {
-            return logPrefix(x, y) + Log.log(fraction(x, y));
+            return logPrefix(x, y) + Log.log(fraction(a, b, x, y, b * x - a * y));
         }
         return StrictMath.log1p(-mirrored().lower(y, x));
     }
 
     private boolean isBelow(double x) {
+        return isBelow(a, b, x);
+    }
+
+    /// Whether the fraction serves for the mass below x, and not for that above.
+    static boolean isBelow(double a, double b, double x) {
         return x <= (a + 1) / (a + b + 2);
     }
 
     /// The mass below by its prefix, by Lentz's method.
-    private double fraction(double x, double y) {
-        double f = a * (a * y - b * x + 1) / (a + 1);
+    ///
+    /// @param difference `b x - a y`, which a caller may know better than the subtraction would
+    static double fraction(double a, double b, double x, double y, double difference) {
+        double f = a * (1 - difference) / (a + 1);
         double c = f;
         double d = 0;
         for (int m = 1; m < 10_000_000; m++) {
             double even = a + 2.0 * m;
             double ratio = m * x / (even - 1);
             double numerator = (a + m - 1) / (even - 1) * (a + b + m - 1) * (b - m) * (ratio * x);
-            double term = m + (b - m) * ratio + (a + m) / (even + 1) * (a * y - b * x + 1 + m * (1 + y));
+            double term = m + (b - m) * ratio + (a + m) / (even + 1) * (1 - difference + m * (1 + y));
             d = 1 / Math.fma(numerator, d, term);
             c = term + numerator / c;
             double change = c * d;

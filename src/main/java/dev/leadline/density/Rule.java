@@ -44,6 +44,13 @@ record Rule(
                 .tryThis("10 % is 0.1.");
     }
 
+    /// @param why why these limits
+    static Rule whole(double least, double most, String name, String use, String why) {
+        String words = "a whole number, at least " + number(least) + " and at most " + number(most);
+        return new Rule(
+                name, use, words, v -> v >= least && v <= most && v == Math.rint(v), why, "", OptionalDouble.empty());
+    }
+
     Rule tryThis(String newHint) {
         return new Rule(name, use, words, holds, why, newHint, otherwise);
     }

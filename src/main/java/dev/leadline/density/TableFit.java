@@ -12,12 +12,12 @@ import java.util.Optional;
 /// value does not pass the quantile of the other end: so the table is monotone across cells.
 ///
 /// A cell that misses is halved, and so on, until every part of it is hit. At a jump of the quantile that ends where
-/// the
-/// part is narrower than the error that is allowed: any value between those of its ends is right there, and it gets the
-/// value of its first end, so that no draw falls into the gap.
+/// the part is narrower than the error that is allowed: any value between those of its ends is right there, and it gets
+/// the value of its first end, so that no draw falls into the gap.
 ///
 /// What is measured is how far the probability lies from what the drawn value, or a neighbour of it among the doubles,
-/// stands for: near 1, say, a steep distribution cannot be hit more closely.
+/// stands for: near 1, say, a steep distribution cannot be hit more closely. Of a discrete shape that is how far it
+/// lies outside what the drawn value covers, from the cdf before it to the cdf at it.
 final class TableFit {
     /// Largest error in probability that a table may have.
     static final double U_ERROR = 1e-12;
@@ -91,7 +91,8 @@ final class TableFit {
         return new TableFit(shape, Link.NONE, MOST_BITS).table(1).orElseGet(() -> slow(shape));
     }
 
-    private static Table slow(Density shape) {
+    /// Without cells: every draw costs a quantile.
+    static Table slow(Density shape) {
         var slow = new Table(shape, Link.NONE, 0, new double[0], Parts.NONE, 0);
         return new Table(shape, Link.NONE, 0, slow.cells(), Parts.NONE, worst(shape, slow));
     }

@@ -40,14 +40,14 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /// What every density promises, held against every family: hand-picked members and random ones, whose seed is part of
-/// their name.
+/// their name. What only discrete ones promise is in `DiscreteCatalogueTest`.
 class CatalogueTest {
     private static final int SEED = 20261201;
     private static final int RANDOM_MEMBERS = 6;
     private static final double[] MASSES = {0x1p-53, 1e-10, 0.001, 0.1, 0.3, 0.5, 0.7, 0.9, 0.999};
     private static final double[] FAR_MASSES = {1e-300, 1e-200, 1e-100, 1e-30};
 
-    private record Case(String name, Density density) {
+    record Case(String name, Density density) {
         double down(double x) {
             return Math.min(Math.nextDown(Math.nextDown(x)), x - 2 * locationStep());
         }
@@ -67,6 +67,14 @@ class CatalogueTest {
         }
     }
 
+    static Stream<Case> continuous() {
+        return densities().filter(c -> !c.density.isDiscrete());
+    }
+
+    static Stream<Case> discrete() {
+        return densities().filter(c -> c.density.isDiscrete());
+    }
+
     static Stream<Case> densities() {
         return Stream.concat(
                 Stream.concat(Examples.all(), TypedTest.densities())
@@ -83,7 +91,9 @@ class CatalogueTest {
             var parameters = new LinkedHashMap<String, Double>();
             for (var parameter : entry) {
                 double size = StrictMath.exp(random.nextDouble(-3, 4));
-                parameters.put(parameter.name(), random.nextBoolean() ? size : -size);
+                double value = random.nextBoolean() ? size : -size;
+                boolean isWhole = parameter.rule().startsWith("a whole number");
+                parameters.put(parameter.name(), isWhole ? Math.rint(value) : value);
             }
             try {
                 var density = family.of(parameters);
@@ -116,7 +126,7 @@ class CatalogueTest {
     }
 
     @ParameterizedTest(name = "{0}")
-    @MethodSource("densities")
+    @MethodSource("continuous")
     void endsOfTheSupport(Case c) {
         var d = c.density;
         var support = d.support();
@@ -145,7 +155,7 @@ class CatalogueTest {
     /// To 1e-12 of the mass, or to the doubles two steps away; steps of the location where that is larger, since a
     /// value is rounded when it is added.
     @ParameterizedTest(name = "{0}")
-    @MethodSource("densities")
+    @MethodSource("continuous")
     void thereAndBack(Case c) {
         for (double p : both(MASSES, FAR_MASSES)) {
             double x = c.density.quantile(p);
@@ -212,7 +222,7 @@ class CatalogueTest {
     /// Gauss-Legendre quadrature of the density between quantiles, after a substitution that spreads the decades:
     /// logistic where both ends are near, exponential with one, hyperbolic sine with none.
     @ParameterizedTest(name = "{0}")
-    @MethodSource("densities")
+    @MethodSource("continuous")
     void densityIsTheSlopeOfTheDistribution(Case c) {
         var d = c.density;
         double low = d.support().low();
@@ -288,7 +298,7 @@ class CatalogueTest {
     /// s, to `p = 1e-300`. Typed densities have gaps and several humps, which this rule does not see; theirs
     /// are held against a table (`TypedTest`).
     @ParameterizedTest(name = "{0}")
-    @MethodSource("densities")
+    @MethodSource("continuous")
     void momentsFromTheQuantiles(Case c) {
         var d = c.density;
         double mean = d.mean();
@@ -324,7 +334,7 @@ class CatalogueTest {
     /// beyond
     /// and the rounding of the mean leave.
     @ParameterizedTest(name = "{0}")
-    @MethodSource("densities")
+    @MethodSource("continuous")
     void higherMomentsFromTheQuantiles(Case c) {
         var d = c.density;
         double sd = Math.sqrt(d.variance());
@@ -344,7 +354,7 @@ class CatalogueTest {
 
     /// A second oracle, itself good to about 1e-13 here, and not asked where it is not.
     @ParameterizedTest(name = "{0}")
-    @MethodSource("densities")
+    @MethodSource("continuous")
     void agreesWithALibrary(Case c) {
         var d = c.density;
         var named = library(d);

@@ -7,6 +7,32 @@ final class Examples {
     private Examples() {}
 
     static Stream<Density> all() {
+        return Stream.concat(continuous(), discrete());
+    }
+
+    static Stream<Density> discrete() {
+        return Stream.of(
+                new Bernoulli(0.3),
+                new Bernoulli(1e-9),
+                new Bernoulli(0),
+                new Bernoulli(1),
+                new Binomial(20, 0.3),
+                new Binomial(5, 0.5),
+                new Binomial(0, 0.4),
+                new Binomial(7, 0),
+                new Binomial(7, 1),
+                new Binomial(1_000_000, 1e-7),
+                new Binomial(1_000_000, 0.4),
+                new Binomial(1e9, 0.99999),
+                new Poisson(4.2),
+                new Poisson(1e-5),
+                new Poisson(0),
+                new Poisson(1000),
+                new Poisson(1e7),
+                new Poisson(1e12));
+    }
+
+    private static Stream<Density> continuous() {
         return Stream.of(
                 new Uniform(-2, 3),
                 new Uniform(1e6, 1e6 + 1e-3),
