@@ -313,8 +313,10 @@ def rows(out, kind, members, digits):
         ks = set()
         for tail in TAILS:
             mass = mpf(float(tail))
-            below = smallest(d, lambda k: tails_at(d, k)[0] >= mass)
-            above = smallest(d, lambda k: tails_at(d, k)[1] <= mass)
+            # a tail that is exactly this mass may be off by the rounding of its sum
+            slack = mass * mpf(10) ** (12 - digits)
+            below = smallest(d, lambda k: tails_at(d, k)[0] >= mass - slack)
+            above = smallest(d, lambda k: tails_at(d, k)[1] <= mass + slack)
             out.write(",".join(["inverse"] + list(member) + [str(below), str(above), "", "", tail, tail]) + "\n")
             ks |= {below, below - 1, above, above - 1}
         least, most = d.support()
