@@ -192,8 +192,8 @@ class Geometric(Summed):
 
 class NegativeBinomial(Summed):
     name, columns = "negative-binomial", ["size", "mean"]
-    members = [("3", "5"), ("0.5", "2"), ("0.001", "1"), ("2", "6"), ("2.5", "1e-3"), ("1000", "20"), ("1e6", "30"),
-               ("1000", "3000"), ("3", "0")]
+    members = [("3", "5"), ("0.5", "2"), ("0.05", "1"), ("2", "6"), ("2.5", "1e-3"), ("1000", "20"), ("1e6", "30"),
+               ("200", "600"), ("3", "0")]
 
     def __init__(self, r, m):
         super().__init__()
@@ -212,7 +212,7 @@ class NegativeBinomial(Summed):
 
 
 class WideNegativeBinomial(NegativeBinomial):
-    members = [("0.4", "1e6"), ("50", "1e8"), ("1e6", "1e6")]
+    members = [("0.001", "1"), ("0.4", "1e6"), ("50", "1e8"), ("1e6", "1e6")]
 
     def tails(self, k):
         # the mean of a Poisson number follows a gamma density: the cdf is a mass of the beta density

@@ -46,7 +46,11 @@ public final class Catalogue {
             Cauchy.FAMILY,
             Bernoulli.FAMILY,
             Binomial.FAMILY,
-            Poisson.FAMILY);
+            Poisson.FAMILY,
+            Geometric.FAMILY,
+            NegativeBinomial.FAMILY,
+            Hypergeometric.FAMILY,
+            DiscreteUniform.FAMILY);
 
     /// Families by other names that are in use.
     private static final Map<String, String> ALSO_CALLED = Map.ofEntries(

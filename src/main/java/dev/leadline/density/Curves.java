@@ -42,7 +42,7 @@ final class Curves {
     static Curve build(Density shape) {
         return switch (shape) {
             case ClosedForm form -> Exact.of(shape, form);
-            case Discrete discrete -> Steps.of(discrete);
+            case Discrete discrete -> Staircase.of(discrete);
             default -> TableFit.of(shape);
         };
     }

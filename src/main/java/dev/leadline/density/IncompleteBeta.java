@@ -112,6 +112,33 @@ record IncompleteBeta(double a, double b, double logConstant) {
         return 1 / f;
     }
 
+    /// The mass above, for `a < 1` and `b x` not much above 1, where it is the small difference of
+    /// numbers near 1: 1 less `x^a Γ(a + b) / (Γ(a + 1) Γ(b))` times 1 plus the sum over n of
+    /// `(1 - b) (2 - b) to (n - b)` times `x^n / n!` times `a / (a + n)`.
+    static double upperOfSmall(double a, double b, double x) {
+        double power = 1;
+        double sum = 0;
+        for (int n = 1; n < 60; n++) {
+            power *= (n - b) * x / n;
+            sum += power / (a + n);
+        }
+        double ofA = a <= 0.5 ? GammaFunction.logOnePlus(a) : GammaFunction.log(a + 1);
+        double log = a * Log.log(x) + logRise(a, b) - ofA;
+        return -StrictMath.expm1(log) - Exp.exp(log) * a * sum;
+    }
+
+    /// `log Γ(a + b) - log Γ(b)` without their rounding.
+    private static double logRise(double a, double b) {
+        double sum = 0;
+        double c = b;
+        while (c < 10) {
+            sum -= StrictMath.log1p(a / c);
+            c++;
+        }
+        double stirling = GammaFunction.stirlingError(a + c) - GammaFunction.stirlingError(c);
+        return sum + (c - 0.5) * StrictMath.log1p(a / c) + a * (Log.log(a + c) - 1) + stirling;
+    }
+
     /// The `log(x / y)` that has the mass p below, by Newton's method: the logarithm of the mass is concave in
     /// `log(x / y)`, so that the second step and all later ones approach from the left.
     double logitInverse(double p) {

@@ -6,6 +6,9 @@ import java.util.function.DoublePredicate;
 /// A density of whole numbers, all those of its support: what a family says of a whole number k becomes what a density
 /// says of any x.
 interface WholeNumbers extends Discrete {
+    /// No member has a tail beyond this that a double could hold.
+    double FAR = 1e18;
+
     Normal.Standard NORMAL = new Normal.Standard();
 
     /// The logarithm of the probability of k, which is in the support.
@@ -45,13 +48,13 @@ interface WholeNumbers extends Discrete {
     @Override
     default double cdf(double x) {
         double k = Math.floor(x);
-        return k >= support().low() && k < support().high() ? upTo(k) : ends(x, 0, 1);
+        return k >= support().low() && k < Math.min(support().high(), FAR) ? upTo(k) : ends(x, 0, 1);
     }
 
     @Override
     default double survival(double x) {
         double k = Math.floor(x);
-        return k >= support().low() && k < support().high() ? beyond(k) : ends(x, 1, 0);
+        return k >= support().low() && k < Math.min(support().high(), FAR) ? beyond(k) : ends(x, 1, 0);
     }
 
     private double ends(double x, double before, double from) {

@@ -29,7 +29,32 @@ final class Examples {
                 new Poisson(0),
                 new Poisson(1000),
                 new Poisson(1e7),
-                new Poisson(1e12));
+                new Poisson(1e12),
+                new Geometric(0.15),
+                new Geometric(0.5),
+                new Geometric(1),
+                new Geometric(1e-12),
+                Geometric.ofMean(40),
+                new NegativeBinomial(3, 5),
+                new NegativeBinomial(0.001, 1),
+                new NegativeBinomial(0.4, 1e6),
+                new NegativeBinomial(1e9, 20),
+                new NegativeBinomial(3, 0),
+                NegativeBinomial.ofSizeAndProbability(2, 0.25),
+                NegativeBinomial.ofMeanAndSd(20, 9),
+                new Hypergeometric(50, 12, 10),
+                new Hypergeometric(2, 1, 1),
+                new Hypergeometric(3, 2, 2),
+                new Hypergeometric(1000, 30, 900),
+                new Hypergeometric(1e9, 5e8, 1e6),
+                new Hypergeometric(10, 0, 4),
+                new DiscreteUniform(1, 6),
+                new DiscreteUniform(-3, 4),
+                new DiscreteUniform(-5, 1e9),
+                new DiscreteUniform(4, 4),
+                ValueTable.of(new double[] {2.5, -1, 7, 1e6}, new double[] {0.2, 0.3, 0.4999, 0.0001}),
+                ValueTable.of(new double[] {0, 1, 1e-3}, new double[] {1e-30, 0.75, 0.25}),
+                ValueTable.of(new double[] {-12.25}, new double[] {1}));
     }
 
     private static Stream<Density> continuous() {

@@ -78,6 +78,16 @@ class FamilyTest {
                 "weibull | shape 0 scale -0.0 | shape is 0 but must be at least 0.01 and at most 1000000; scale is 0 but must be greater than 0",
                 "student | dof 0 | dof is 0 but must be at least 0.1 and at most 10000000000",
                 "student | dof 0.1 scale 1e200 | some draws of this density would exceed the largest number there is, 1.8e308",
+                "binomial | trials 2.5 probability .5 | trials is 2.5 but must be a whole number, at least 0 and at most 1000000000",
+                "binomial | trials 2 probability 1.5 | probability is 1.5 but must be at least 0 and at most 1",
+                "poisson | mean -1 | mean is -1 but must be at least 0 and at most 1000000000000",
+                "geometric | probability 0 | probability is 0 but must be at least 1.0e-12 and at most 1",
+                "negative-binomial | mean 4 sd 2 | sd is 2 but must be greater than the square root of the mean, 2",
+                "negative-binomial | mean 1e-6 sd 5 | mean 1.0e-6 with sd 5 is too extreme",
+                "negative-binomial | size 1e6 probability 1e-9 | size 1000000 with probability 1.0e-9 is too extreme",
+                "hypergeometric | population 10 marked 11 drawn 12 | marked is 11 but must be at most the population, 10; drawn is 12 but must be at most the population, 10",
+                "discrete-uniform | from 3 to 2 | to is 2 but must be at least from, 3",
+                "discrete-uniform | from .5 to 2 | from is 0.5 but must be a whole number, at least -1.0e15 and at most 1.0e15",
             })
     void saysWhatIsWrong(String family, String parameters, String expected) {
         var problems = problems(family, parameters);

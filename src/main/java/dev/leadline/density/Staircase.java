@@ -18,7 +18,7 @@ import java.util.HexFormat;
 /// @param values from the first to the last that is drawn, rising
 /// @param edges one for each value, rising; the last is 1
 /// @param guide the first value of each cell
-record Steps(Density shape, double[] values, double[] edges, int[] guide, double uError) implements Curve {
+record Staircase(Density shape, double[] values, double[] edges, int[] guide, double uError) implements Curve {
     static final int MOST = 1 << 18;
 
     private static final double SMALLEST = 0x1p-53;
@@ -32,9 +32,11 @@ record Steps(Density shape, double[] values, double[] edges, int[] guide, double
             return TableFit.slow(shape);
         }
         double[] edges = edges(shape, values);
-        var steps = new Steps(shape, values, edges, guide(edges), 0);
-        double worst = TableFit.worst(shape, steps);
-        return worst <= TableFit.U_ERROR ? new Steps(shape, values, edges, steps.guide, worst) : TableFit.slow(shape);
+        var stairs = new Staircase(shape, values, edges, guide(edges), 0);
+        double worst = TableFit.worst(shape, stairs);
+        return worst <= TableFit.U_ERROR
+                ? new Staircase(shape, values, edges, stairs.guide, worst)
+                : TableFit.slow(shape);
     }
 
     /// All values that are drawn, or more than are kept.
