@@ -16,6 +16,10 @@ from density_tables import OUT, TAILS, text
 mp.dps = 60
 NOTHING = mpf(10) ** -345
 
+# The contract of quantiles: a tail that misses a probability by no more than this, relative, reaches it. It decides
+# only where a double is nearest to a tail that it is not: .1 and a tenth.
+ROUNDING = mpf(10) ** -13
+
 
 class Summed:
     """Tails by sums over all values whose probability counts."""
@@ -313,8 +317,7 @@ def rows(out, kind, members, digits):
         ks = set()
         for tail in TAILS:
             mass = mpf(float(tail))
-            # a tail that is exactly this mass may be off by the rounding of its sum
-            slack = mass * mpf(10) ** (12 - digits)
+            slack = mass * ROUNDING
             below = smallest(d, lambda k: tails_at(d, k)[0] >= mass - slack)
             above = smallest(d, lambda k: tails_at(d, k)[1] <= mass + slack)
             out.write(",".join(["inverse"] + list(member) + [str(below), str(above), "", "", tail, tail]) + "\n")
