@@ -5,11 +5,14 @@ Run from the top of the repository: python3 src/test/python/density_tables_discr
 Rows "at":      parameters, x        -> probability of x, its logarithm, cdf, survival
 Rows "inverse": parameters, p and q  -> the smallest x with cdf(x) >= p, the smallest x with survival(x) <= q
 
+density/moments/NAME.csv: mean, variance, skewness, excess kurtosis: the textbook's formulas, but sums for the
+hypergeometric density; "nan" where there is but one value.
+
 Probabilities are gamma functions and powers at 60 digits; tails are sums of them, each beginning at the far end. Where
 there are too many values for that, tails are integrals of the gamma or the beta density, by mpmath's quadrature.
 """
 import os
-from mpmath import mp, mpf, exp, floor, inf, log, log1p, loggamma, sqrt, binomial
+from mpmath import mp, mpf, exp, floor, inf, log, log1p, loggamma, sqrt
 import mpmath
 from density_tables import OUT, TAILS, text
 
@@ -77,6 +80,11 @@ class Bernoulli(Summed):
     def support(self):
         return (1 if self.p == 1 else 0), (0 if self.p == 0 else 1)
 
+    def moments(self):
+        p, q = self.p, 1 - self.p
+        v = p * q
+        return p, v, (q - p) / sqrt(v) if v else mp.nan, (1 - 6 * v) / v if v else mp.nan
+
     def log_mass(self, k):
         return log(self.p if k == 1 else 1 - self.p)
 
@@ -95,6 +103,11 @@ class Binomial(Summed):
 
     def support(self):
         return (self.n if self.p == 1 else 0), (0 if self.p == 0 else self.n)
+
+    def moments(self):
+        n, p, q = self.n, self.p, 1 - self.p
+        v = n * p * q
+        return n * p, v, (q - p) / sqrt(v) if v else mp.nan, (1 - 6 * p * q) / v if v else mp.nan
 
     def log_mass(self, k):
         n = self.n
@@ -130,6 +143,10 @@ class Poisson(Summed):
 
     def support(self):
         return 0, (0 if self.m == 0 else inf)
+
+    def moments(self):
+        m = self.m
+        return m, m, 1 / sqrt(m) if m else mp.nan, 1 / m if m else mp.nan
 
     def log_mass(self, k):
         return (k * log(self.m) if k else 0) - self.m - loggamma(mpf(k) + 1)
@@ -185,6 +202,10 @@ class Geometric(Summed):
     def support(self):
         return 0, (0 if self.p == 1 else inf)
 
+    def moments(self):
+        p, q = self.p, 1 - self.p
+        return q / p, q / p ** 2, (2 - p) / sqrt(q) if q else mp.nan, 6 + p ** 2 / q if q else mp.nan
+
     def log_mass(self, k):
         return (k * log1p(-self.p) if k else 0) + log(self.p)
 
@@ -208,6 +229,12 @@ class NegativeBinomial(Summed):
 
     def support(self):
         return 0, (0 if self.m == 0 else inf)
+
+    def moments(self):
+        r, m = self.r, self.m
+        p, q = r / (r + m), m / (r + m)
+        return (m, m + m ** 2 / r, (2 - p) / sqrt(r * q) if q else mp.nan,
+                6 / r + p ** 2 / (r * q) if q else mp.nan)
 
     def log_mass(self, k):
         r, m, k = self.r, self.m, mpf(k)
@@ -249,6 +276,18 @@ class Hypergeometric(Summed):
     def support(self):
         return max(0, self.d + self.k - self.n), min(self.d, self.k)
 
+    def moments(self):
+        # by their definition: sums over all values
+        self.window()
+        values = range(self.low, self.high + 1)
+        masses = [self.mass(k) for k in values]
+        about = lambda c, order: sum(m * (k - c) ** order for k, m in zip(values, masses))
+        mean = about(0, 1)
+        if len(masses) == 1:
+            return mean, mpf(0), mp.nan, mp.nan
+        v = about(mean, 2)
+        return mean, v, about(mean, 3) / sqrt(v) ** 3, about(mean, 4) / v ** 2 - 3
+
     def log_mass(self, k):
         def choose(a, b):
             return loggamma(mpf(a) + 1) - loggamma(mpf(b) + 1) - loggamma(mpf(a - b) + 1)
@@ -268,6 +307,12 @@ class DiscreteUniform(Summed):
 
     def support(self):
         return self.a, self.b
+
+    def moments(self):
+        n = mpf(self.b - self.a + 1)
+        many = n > 1
+        return (self.mean(), (n * n - 1) / 12, mpf(0) if many else mp.nan,
+                -mpf(6) / 5 * (n * n + 1) / (n * n - 1) if many else mp.nan)
 
     def log_mass(self, k):
         return -log(mpf(self.b - self.a + 1))
@@ -341,7 +386,21 @@ def write(kinds):
         rows(out, kinds[0], kinds[0].members, 60)
         for kind in kinds[1:]:
             rows(out, kind, kind.members, 32)
+    write_moments(kinds)
     print(family.name, flush=True)
+
+
+def write_moments(kinds):
+    folder = os.path.join(OUT, "moments")
+    os.makedirs(folder, exist_ok=True)
+    with open(os.path.join(folder, kinds[0].name + ".csv"), "w") as out:
+        out.write("# mpmath %s, 60 digits; made by src/test/python/density_tables_discrete.py\n" % mpmath.__version__)
+        out.write(",".join(kinds[0].columns + ["mean", "variance", "skewness", "excessKurtosis"]) + "\n")
+        for kind in kinds:
+            for member in kind.members:
+                mp.dps = 60
+                moments = kind(*[mpf(float(v)) for v in member]).moments()
+                out.write(",".join(list(member) + [text(mpf(v)) for v in moments]) + "\n")
 
 
 if __name__ == "__main__":
