@@ -190,7 +190,7 @@ def integral(f, mode, sd, at, low, high):
 
 class Geometric(Summed):
     name, columns = "geometric", ["probability"]
-    members = [("0.15",), ("0.5",), ("0.75",), ("0.999",), ("1e-4",), ("1e-9",), ("1",)]
+    members = [("0.15",), ("0.5",), ("0.75",), ("0.998",), ("1e-4",), ("1e-9",), ("1",)]
 
     def __init__(self, p):
         super().__init__()

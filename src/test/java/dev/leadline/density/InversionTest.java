@@ -143,12 +143,14 @@ class InversionTest {
                 Inversion.of(density).hash());
     }
 
-    /// A draw costs a quantile where there are no cells.
+    /// A draw costs a quantile where there are no cells: only for discrete densities with more values than are kept.
     @ParameterizedTest
     @MethodSource("densities")
     void everyDensityHasATable(Density density) {
         if (Curves.build(density.standardised().shape()) instanceof Table table) {
-            assertTrue(table.cells().length > 0, density::toString);
+            boolean isWide = density.isDiscrete()
+                    && density.upperQuantile(0x1p-53) - density.quantile(0x1p-53) >= Staircase.MOST;
+            assertEquals(!isWide, table.cells().length > 0, density::toString);
         }
     }
 

@@ -138,7 +138,8 @@ class ReferenceDistributionsTest {
     /// What a record calls `cdf(-5)` and the like.
     private static double figure(Density density, String name, double before) {
         int bracket = name.indexOf('(');
-        double argument = bracket < 0 ? Double.NaN : Double.parseDouble(name.substring(bracket + 1, name.length() - 1)) - before;
+        double argument =
+                bracket < 0 ? Double.NaN : Double.parseDouble(name.substring(bracket + 1, name.length() - 1)) - before;
         return switch (bracket < 0 ? name : name.substring(0, bracket)) {
             case "mean" -> density.mean() + before;
             case "variance" -> density.variance();
