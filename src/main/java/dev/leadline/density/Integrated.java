@@ -26,12 +26,7 @@ public final class Integrated implements Shape {
     private final TailOrders orders;
     private final double top;
     private final double logArea;
-    private final Piece[] pieces;
-
-    /// Mass below the lower end of a piece, and above it; one more for the end of the last.
-    private final double[] below;
-
-    private final double[] above;
+    private final Pieces pieces;
     private final double mean;
     private final double variance;
     private final double skewness;
@@ -86,17 +81,8 @@ public final class Integrated implements Shape {
         }
         this.logArea = (relief.log() ? top : Log.log(top)) + Log.log(total);
         double area = total;
-        this.pieces =
-                cells.stream().filter(c -> c.mass > 0).map(c -> c.piece(area)).toArray(Piece[]::new);
-        int n = pieces.length;
-        this.below = new double[n + 1];
-        this.above = new double[n + 1];
-        for (int i = 0; i < n; i++) {
-            below[i + 1] = below[i] + pieces[i].mass();
-        }
-        for (int i = n - 1; i >= 0; i--) {
-            above[i] = above[i + 1] + pieces[i].mass();
-        }
+        this.pieces = new Pieces(
+                cells.stream().filter(c -> c.mass > 0).map(c -> c.piece(area)).toArray(Piece[]::new));
         this.gaps = gaps(cells, NARROW * (quantile(0.75) - quantile(0.25)));
         var moments = new PieceMoments(cells, area, orders, quantile(0.5), quantile(0.75) - quantile(0.25));
         this.mean = moments.mean();
@@ -166,91 +152,22 @@ public final class Integrated implements Shape {
 
     @Override
     public double cdf(double x) {
-        if (Double.isNaN(x)) {
-            return x;
-        }
-        int i = pieceAt(x);
-        double mass = massBelow(i, x);
-        return mass <= 0.5 ? mass : 1 - massAbove(i, x);
+        return Double.isNaN(x) ? x : pieces.cdf(x);
     }
 
     @Override
     public double survival(double x) {
-        if (Double.isNaN(x)) {
-            return x;
-        }
-        int i = pieceAt(x);
-        double mass = massBelow(i, x);
-        return mass <= 0.5 ? 1 - mass : massAbove(i, x);
-    }
-
-    /// The last piece that begins at or below x; -1 where none does.
-    private int pieceAt(double x) {
-        int from = -1;
-        int to = pieces.length;
-        while (to - from > 1) {
-            int middle = (from + to) >>> 1;
-            if (pieces[middle].low() <= x) {
-                from = middle;
-            } else {
-                to = middle;
-            }
-        }
-        return from;
-    }
-
-    private double massBelow(int i, double x) {
-        if (i < 0) {
-            return 0;
-        }
-        var piece = pieces[i];
-        return x >= piece.high() ? below[i + 1] : below[i] + piece.below(x);
-    }
-
-    private double massAbove(int i, double x) {
-        if (i < 0) {
-            return 1;
-        }
-        var piece = pieces[i];
-        return x >= piece.high() ? above[i + 1] : above[i + 1] + piece.above(x);
+        return Double.isNaN(x) ? x : pieces.survival(x);
     }
 
     @Override
     public double inner(double p) {
-        return p <= 0.5 ? fromBelow(p) : fromAbove(1 - p);
+        return pieces.quantile(p);
     }
 
     @Override
     public double upperInner(double q) {
-        return q <= 0.5 ? fromAbove(q) : fromBelow(1 - q);
-    }
-
-    private double fromBelow(double p) {
-        int from = 0;
-        int to = pieces.length - 1;
-        while (from < to) {
-            int middle = (from + to) >>> 1;
-            if (below[middle + 1] >= p) {
-                to = middle;
-            } else {
-                from = middle + 1;
-            }
-        }
-        return pieces[from].atBelow(p - below[from]);
-    }
-
-    private double fromAbove(double q) {
-        int from = 0;
-        int to = pieces.length - 1;
-        while (from < to) {
-            int middle = (from + to + 1) >>> 1;
-            if (above[middle] >= q) {
-                from = middle;
-            } else {
-                to = middle - 1;
-            }
-        }
-        return pieces[from].atAbove(q - above[from + 1]);
+        return pieces.upperQuantile(q);
     }
 
     @Override
@@ -284,7 +201,7 @@ public final class Integrated implements Shape {
     }
 
     int pieceCount() {
-        return pieces.length;
+        return pieces.count();
     }
 
     @Override

@@ -22,6 +22,11 @@ record Smooth(double low, double high, double mass, double[] heights, double[] m
         return Math.clamp(((x - low) - (high - x)) / (high - low), -1, 1);
     }
 
+    /// The density; its error is absolute, a rounding error of the greatest in the piece.
+    double height(double x) {
+        return Chebyshev.at(heights, argument(x)) / (0.5 * (high - low));
+    }
+
     @Override
     public double below(double x) {
         return Math.clamp(Chebyshev.at(masses, argument(x)), 0, mass);

@@ -2,7 +2,9 @@ package dev.leadline.model;
 
 import dev.leadline.density.Density;
 import dev.leadline.density.Empirical;
+import dev.leadline.density.Smoothed;
 import dev.leadline.model.DensityDraft.Data;
+import dev.leadline.numeric.Significant;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
 import java.util.List;
@@ -11,6 +13,7 @@ import java.util.Optional;
 /// Makes densities of columns of data: the values themselves, smoothed ones, or a member fitted to them.
 final class DataDensities {
 
+    private static final int DIGITS = 4;
     private static final String EMPIRICAL = "empirical";
     private static final String KERNEL = "kernel";
 
@@ -79,7 +82,25 @@ final class DataDensities {
         if (data.kind().orElse(EMPIRICAL).equals(EMPIRICAL)) {
             return Optional.of(Empirical.of(values));
         }
-        findings.add(path + ".kind", Problem.of("kernel is not available"));
-        return Optional.empty();
+        Optional<Smoothed> smoothed = findings.made(
+                within -> within.isEmpty() ? path + ".data" : path + "." + within,
+                () -> data.bandwidth().isPresent()
+                        ? Smoothed.of(data.bandwidth().getAsDouble(), values)
+                        : Smoothed.byRule(values));
+        if (data.bandwidth().isEmpty()) {
+            smoothed.ifPresent(density -> findings.note(path + ".bandwidth", chosen(density)));
+        }
+        return smoothed.map(density -> density);
+    }
+
+    private static Problem chosen(Smoothed density) {
+        double sd = Math.sqrt(density.variance());
+        double h = density.bandwidth();
+        return Problem.of("the bandwidth is %s, by %s".formatted(Significant.text(h, DIGITS), Smoothed.RULE))
+                .because("It is the standard deviation of the kernel. Smoothing widens: the standard deviation is %s,"
+                                .formatted(Significant.text(sd, DIGITS))
+                        + " that of the data %s."
+                                .formatted(
+                                        Significant.text(Math.sqrt(Math.max(0, density.variance() - h * h)), DIGITS)));
     }
 }

@@ -96,6 +96,25 @@ class DataProjectsTest {
         assertEquals(2, leadline("check", fitted).exitCode());
     }
 
+    /// The variance is 5.5, that of the values, plus the square of the bandwidth.
+    @Test
+    void mayBeSmoothed() throws IOException {
+        var run = leadline(
+                "run",
+                with("\"data\": \"waits.csv\", \"column\": 2, \"kind\": \"kernel\", \"bandwidth\": 0.5"),
+                "--json");
+        double error = Math.sqrt(5.75 / 1e6);
+        var answer = run.json().required("lanes").get(0).required("answers").get(0);
+        assertEquals(3, answer.required("estimate").asDouble(), 4 * error);
+        assertEquals(error, answer.required("standardError").asDouble(), .01 * error);
+        var byRule = leadline("check", with("\"data\": \"waits.csv\", \"column\": 2, \"kind\": \"kernel\""));
+        // quartiles 1.75 and 3.25: .9 * 1.5 / 1.34 * 4^-.2
+        assertTrue(
+                byRule.err().contains("the bandwidth is 0.7635, by Silverman's rule of thumb, 0.9 min(sd, IQR/1.34)"),
+                byRule.err());
+        assertTrue(byRule.err().contains("the standard deviation is 2.466, that of the data 2.345."), byRule.err());
+    }
+
     @ParameterizedTest
     @CsvSource(
             delimiter = '|',
