@@ -17,6 +17,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Model.PositionalParamSpec;
 import picocli.CommandLine.ParseResult;
@@ -33,7 +34,7 @@ final class FamiliesCommand implements Command {
 
     @Override
     public CommandSpec spec() {
-        return Arguments.command(
+        return FamilyFits.options(Arguments.command(
                         name(),
                         "List the families of densities: what each is used for, and the rules of its parameters. With"
                                 + " parameters: the moments, quantiles and tails of that member.",
@@ -42,11 +43,13 @@ final class FamiliesCommand implements Command {
                         "leadline families gumbel location=24.5 scale=2.6",
                         "leadline families gumbel location=24.5 scale=2.6 --json",
                         "leadline families --known",
-                        "leadline families --known readings n=10 mean=5.012 s=0.019")
+                        "leadline families --known readings n=10 mean=5.012 s=0.019",
+                        "leadline families --fit waits.csv --column hours",
+                        "leadline families --fit waits.csv --column hours gamma generalized-pareto location=6")
                 .addOption(Arguments.flag(
                         KNOWN, "Begin with what is known about a quantity: NAME is a way of knowing, not a family."))
                 .addPositional(text("0", "0..1", "NAME", "A family."))
-                .addPositional(text("1..*", "0..*", "PARAMETER=VALUE", "Each parameter of a member of it."));
+                .addPositional(text("1..*", "0..*", "PARAMETER=VALUE", "Each parameter of a member of it.")));
     }
 
     private static PositionalParamSpec text(String index, String arity, String label, String description) {
@@ -64,7 +67,10 @@ final class FamiliesCommand implements Command {
         boolean json = Arguments.has(arguments, "--json");
         String name = arguments.matchedPositionalValue(0, "");
         String[] values = arguments.matchedPositionalValue(1, new String[0]);
-        if (Arguments.has(arguments, KNOWN)) {
+        FamilyFits.refuseColumnAlone(arguments);
+        if (FamilyFits.isAsked(arguments)) {
+            FamilyFits.print(arguments, words(name, values), console);
+        } else if (Arguments.has(arguments, KNOWN)) {
             known(console, name, values, json);
         } else if (name.isEmpty()) {
             list(console, Catalogue.families(), json);
@@ -80,6 +86,12 @@ final class FamiliesCommand implements Command {
             }
         }
         return Commands.DONE;
+    }
+
+    private static List<String> words(String name, String[] values) {
+        return Stream.concat(Stream.of(name), Stream.of(values))
+                .filter(word -> !word.isEmpty())
+                .toList();
     }
 
     private static void known(Console console, String word, String[] told, boolean json) {
