@@ -99,6 +99,10 @@ public final class DensityPicture {
         return portrait;
     }
 
+    public boolean hasData() {
+        return !observed.values().isEmpty();
+    }
+
     /// Where the curve stands, inside the axes.
     public Rectangle2D plot() {
         return (Rectangle2D) plot.clone();

@@ -25,7 +25,7 @@
 ///    has a `ClosedForm`.
 ///    A family that is another one by a name of its own is `Renamed`. Skewness and kurtosis have closed forms that do
 ///    not cancel; without one `Moments` computes them from the quantiles.
-/// 2. One line in `Catalogue`.
+/// 2. One line in `Catalogue`, and its name in a `FamilyGroup`.
 /// 3. Two tables, `src/test/resources/density/name.csv` and `density/moments/name.csv`, from a source that is not this
 ///    code: a class in one of `src/test/python/density_tables*.py`, which write them.
 /// 4. In the tests, a member near each limit of its rules in `Examples`, and in `CatalogueTest` the name of the library

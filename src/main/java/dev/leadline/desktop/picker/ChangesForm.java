@@ -41,13 +41,9 @@ final class ChangesForm implements Form {
     }
 
     private Field field(String id, String name, String tip, Consumer<String> typed) {
-        var field = new Field(name, tip, 6, typed, model().project()::settle);
+        var field = new Field(name, tip, 6, typed, model.project()::settle);
         field.setId(id);
         return field;
-    }
-
-    private ChangesViewModel model() {
-        return model;
     }
 
     @Override

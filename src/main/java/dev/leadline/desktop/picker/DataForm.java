@@ -77,6 +77,11 @@ final class DataForm implements Form {
     }
 
     @Override
+    public void focus() {
+        file.requestFocus();
+    }
+
+    @Override
     public void update() {
         file.show(model.fileText());
         file.showFault(model.isFaulty("data"));

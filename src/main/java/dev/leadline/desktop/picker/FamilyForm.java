@@ -75,6 +75,11 @@ final class FamilyForm implements Form {
     }
 
     @Override
+    public void focus() {
+        search.requestFocus();
+    }
+
+    @Override
     public void update() {
         var family = model.family();
         name.setText(family.map(Family::name).orElse("no family yet"));

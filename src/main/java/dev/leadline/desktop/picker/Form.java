@@ -6,4 +6,7 @@ interface Form {
 
     /// Shows what the draft says now.
     void update();
+
+    /// To where a person begins to type.
+    default void focus() {}
 }

@@ -19,6 +19,7 @@ final class KnownForm implements Form {
     private final Label sentence = Labels.wrapped("");
     private final List<Runnable> refreshers = new ArrayList<>();
     private final VBox all;
+    private Node first;
 
     KnownForm(KnownViewModel model, Runnable settle) {
         this.model = model;
@@ -28,6 +29,7 @@ final class KnownForm implements Form {
         var values = new ColumnConstraints();
         values.setHalignment(HPos.RIGHT);
         grid.getColumnConstraints().addAll(names, values);
+        first = grid;
         int row = 0;
         for (var p : model.knowledge().parameters()) {
             var field = new Field(p.use(), p.name() + ": " + p.rule(), 8, t -> type(p.name(), t), settle);
@@ -36,6 +38,9 @@ final class KnownForm implements Form {
                 field.show(model.text(p.name()));
                 field.showFault(model.isFaulty(p.name()));
             });
+            if (first == grid) {
+                first = field;
+            }
             var label = Labels.wrapped(p.use());
             label.setLabelFor(field);
             grid.addRow(row++, label, field);
@@ -52,6 +57,11 @@ final class KnownForm implements Form {
     @Override
     public Node node() {
         return all;
+    }
+
+    @Override
+    public void focus() {
+        first.requestFocus();
     }
 
     @Override

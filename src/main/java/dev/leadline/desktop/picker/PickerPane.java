@@ -21,6 +21,7 @@ import javafx.scene.layout.BorderPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
+import javafx.scene.layout.StackPane;
 import javafx.scene.layout.VBox;
 
 /// The density of an input, in place of the picture: what is known about it, and what it looks like.
@@ -35,6 +36,9 @@ public final class PickerPane extends BorderPane {
     private final ScrollPane forms = new ScrollPane(form);
     private final Messages messages = new Messages();
     private final NumbersView numbers = new NumbersView();
+    private final VBox remarks = new VBox(4);
+    private ToggleButton density;
+    private ToggleButton against;
     private final List<Form> shown = new ArrayList<>();
 
     /// @param chooseData asks for a file of data
@@ -65,15 +69,32 @@ public final class PickerPane extends BorderPane {
         scroll.setPrefHeight(252);
         var picture = new VBox(2, views(), drawing, reading, scroll);
         picture.getStyleClass().add("density-side");
-        setCenter(picture);
+        setCenter(new StackPane(picture, empty()));
         model.at().addListener((_, _, _) -> build());
         model.way().addListener((_, _, _) -> build());
         model.project().draft().addListener((_, _, _) -> update());
         model.project().problems().addListener((_, _, _) -> update());
-        model.drawn()
-                .addListener((_, _, drawn) -> numbers.show(
-                        drawn.map(d -> d.picture().portrait()), model.unit().strip()));
+        model.drawn().addListener((_, _, drawn) -> show(drawn));
         build();
+    }
+
+    private void show(Optional<PickerViewModel.Drawn> drawn) {
+        numbers.show(drawn.map(d -> d.picture().portrait()), model.unit().strip());
+        remarks.getChildren()
+                .setAll(model.remarks().stream().map(Labels::wrapped).toList());
+        boolean data = drawn.filter(d -> d.picture().hasData()).isPresent();
+        Labels.see(against, data);
+        if (drawn.isPresent() && !data && against.isSelected()) {
+            density.setSelected(true);
+        }
+    }
+
+    private Node empty() {
+        var empty = new Label("The drawing appears once the density is told.");
+        empty.getStyleClass().add(Styles.QUIET);
+        empty.setMouseTransparent(true);
+        empty.visibleProperty().bind(model.drawn().map(Optional::isEmpty));
+        return empty;
     }
 
     private Node head() {
@@ -95,10 +116,18 @@ public final class PickerPane extends BorderPane {
 
     private Node views() {
         var group = new ToggleGroup();
+        density = view("density", "How likely values are, side by side", View.PDF, group);
+        against = view(
+                "data against it",
+                "Each of the data against the value that the density has in its place; on the line where they agree",
+                View.DATA_AGAINST_DENSITY,
+                group);
+        Labels.see(against, false);
         var pair = new HBox(
-                view("density", "How likely values are, side by side", View.PDF, group),
+                density,
                 view("chance up to", "The chance of a value up to each", View.CDF, group),
-                view("tails", "The chances of the extremes, on a logarithmic axis", View.TAILS, group));
+                view("tails", "The chances of the extremes, on a logarithmic axis", View.TAILS, group),
+                against);
         pair.getStyleClass().add("pair");
         group.selectedToggleProperty().addListener((_, old, chosen) -> {
             if (chosen == null) {
@@ -135,7 +164,7 @@ public final class PickerPane extends BorderPane {
                     .add(Labels.wrapped("An integration variable over a bounded range is drawn uniformly: there is"
                             + " nothing to choose."));
         } else if (model.way().get().isEmpty()) {
-            form.getChildren().add(new WaysView(model::choose));
+            form.getChildren().add(new WaysView(this::choose));
         } else {
             var way = model.way().get().get();
             var name = new Label(way.title());
@@ -152,20 +181,26 @@ public final class PickerPane extends BorderPane {
                             name,
                             shown.get(0).node(),
                             messages,
+                            remarks,
                             shown.get(1).node());
         }
         update();
+    }
+
+    private void choose(Way way) {
+        model.choose(way);
+        shown.getFirst().focus();
     }
 
     private Form formOf(Way way, DensityAt at) {
         return switch (way) {
             case Way.Known(var knowledge) ->
                 new KnownForm(new KnownViewModel(knowledge, at, model.input().orElseThrow()), model.project()::settle);
-            case Way.Form.DATA -> new DataForm(new DataViewModel(at), chooseData);
-            case Way.Form.VALUES -> new ValuesForm(new ValuesViewModel(at));
-            case Way.Form.FAMILY -> new FamilyForm(new MemberViewModel(at));
-            case Way.Form.MIXTURE -> new MixtureForm(new MixtureViewModel(at));
-            case Way.Form.FORMULA -> new TypedForm(new TypedViewModel(at));
+            case Way.Given.DATA -> new DataForm(new DataViewModel(at), chooseData);
+            case Way.Given.VALUES -> new ValuesForm(new ValuesViewModel(at));
+            case Way.Given.FAMILY -> new FamilyForm(new MemberViewModel(at));
+            case Way.Given.MIXTURE -> new MixtureForm(new MixtureViewModel(at));
+            case Way.Given.FORMULA -> new TypedForm(new TypedViewModel(at));
         };
     }
 

@@ -4,6 +4,8 @@ import dev.leadline.chart.DensityPicture;
 import dev.leadline.chart.DensityPicture.View;
 import dev.leadline.chart.Observed;
 import dev.leadline.chart.Theme;
+import dev.leadline.density.Density;
+import dev.leadline.density.Integrated;
 import dev.leadline.density.Portrait;
 import dev.leadline.density.PortraitText;
 import dev.leadline.desktop.background.Background;
@@ -17,6 +19,7 @@ import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Project;
 import dev.leadline.model.UnitWords;
+import dev.leadline.numeric.Significant;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.awt.image.BufferedImage;
@@ -39,7 +42,8 @@ public final class PickerViewModel {
     /// A density, drawn.
     ///
     /// @param image its pixels; `scale` of them to one of the picture
-    record Drawn(DensityPicture picture, BufferedImage image, double scale) {}
+    /// @param remarks what its making showed
+    record Drawn(DensityPicture picture, List<String> remarks, BufferedImage image, double scale) {}
 
     /// What decides the drawing.
     private record Wish(
@@ -51,6 +55,8 @@ public final class PickerViewModel {
             int width,
             int height,
             double scale) {}
+
+    private static final int DIGITS = 8;
 
     private final ProjectViewModel project;
     private final InputsViewModel inputs;
@@ -159,6 +165,11 @@ public final class PickerViewModel {
                 .orElse(List.of());
     }
 
+    /// What the density's making showed and may surprise, as sentences.
+    List<String> remarks() {
+        return drawn.get().map(Drawn::remarks).orElse(List.of());
+    }
+
     /// What stands at a pixel of the drawing, in one line.
     Optional<String> reading(double x, double y) {
         return drawn.get().flatMap(d -> {
@@ -234,11 +245,18 @@ public final class PickerViewModel {
                 .orElse(Observed.NONE);
     }
 
+    private static List<String> remarks(Density density) {
+        return density instanceof Integrated typed
+                ? List.of("The integral of what is typed is " + Significant.text(typed.area(), DIGITS) + ".")
+                : List.of();
+    }
+
     private static Drawn draw(Wish w, Draft d, int index) {
-        var portrait = Portrait.of(Project.input(d, index, w.files).drawn());
+        var drawn = Project.input(d, index, w.files).drawn();
+        var portrait = Portrait.of(drawn);
         String unit = UnitWords.after(w.input.unit());
         String name = w.input.name() + (unit.isEmpty() ? "" : "," + unit);
         var picture = DensityPicture.of(portrait, observed(w), w.view, name, w.theme, w.width, w.height);
-        return new Drawn(picture, picture.image(w.scale), w.scale);
+        return new Drawn(picture, remarks(drawn), picture.image(w.scale), w.scale);
     }
 }

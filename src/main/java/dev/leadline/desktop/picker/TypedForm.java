@@ -64,6 +64,11 @@ final class TypedForm implements Form {
     }
 
     @Override
+    public void focus() {
+        formula.requestFocus();
+    }
+
+    @Override
     public void update() {
         var typed = model.typed();
         formula.show(typed.formula());

@@ -44,6 +44,11 @@ final class ValuesForm implements Form {
     }
 
     @Override
+    public void focus() {
+        text.requestFocus();
+    }
+
+    @Override
     public void update() {
         if (!model.says(text.getText())) {
             showing = true;

@@ -20,7 +20,7 @@ sealed interface Way {
     }
 
     /// The others, each with a form of its own.
-    enum Form implements Way {
+    enum Given implements Way {
         DATA("data in a file"),
         VALUES("single values, each with its probability"),
         FAMILY("a family of the catalogue"),
@@ -29,7 +29,7 @@ sealed interface Way {
 
         private final String title;
 
-        Form(String title) {
+        Given(String title) {
             this.title = title;
         }
 
@@ -40,18 +40,18 @@ sealed interface Way {
     }
 
     static List<Way> all() {
-        return Stream.concat(Knowledge.all().stream().map(Known::new), Stream.of(Form.values()))
+        return Stream.concat(Knowledge.all().stream().map(Known::new), Stream.of(Given.values()))
                 .toList();
     }
 
     /// The one by which a density is written; none while it is to be chosen.
     static Optional<Way> of(DensityDraft density) {
         return switch (density.of()) {
-            case DensityDraft.Member _ -> density.isUnchosen() ? Optional.empty() : Optional.of(Form.FAMILY);
-            case DensityDraft.Values _ -> Optional.of(Form.VALUES);
-            case DensityDraft.Mixture _ -> Optional.of(Form.MIXTURE);
-            case DensityDraft.Typed _ -> Optional.of(Form.FORMULA);
-            case DensityDraft.Data _ -> Optional.of(Form.DATA);
+            case DensityDraft.Member _ -> density.isUnchosen() ? Optional.empty() : Optional.of(Given.FAMILY);
+            case DensityDraft.Values _ -> Optional.of(Given.VALUES);
+            case DensityDraft.Mixture _ -> Optional.of(Given.MIXTURE);
+            case DensityDraft.Typed _ -> Optional.of(Given.FORMULA);
+            case DensityDraft.Data _ -> Optional.of(Given.DATA);
         };
     }
 }

@@ -15,7 +15,7 @@ final class WaysView extends VBox {
         title.getStyleClass().add(Styles.PANE_TITLE);
         getChildren().add(title);
         for (Way way : Way.all()) {
-            if (way == Way.Form.DATA) {
+            if (way == Way.Given.DATA) {
                 var or = Labels.of("or it is given by");
                 or.getStyleClass().add("catalogue-group");
                 getChildren().add(or);
@@ -24,7 +24,7 @@ final class WaysView extends VBox {
             button.setId("way-"
                     + (way instanceof Way.Known(var k)
                             ? k.word()
-                            : ((Way.Form) way).name().toLowerCase(java.util.Locale.ROOT)));
+                            : ((Way.Given) way).name().toLowerCase(java.util.Locale.ROOT)));
             button.getStyleClass().setAll("button", "choice");
             button.setWrapText(true);
             button.setMaxWidth(Double.MAX_VALUE);

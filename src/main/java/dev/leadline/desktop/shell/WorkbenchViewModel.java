@@ -176,6 +176,7 @@ public final class WorkbenchViewModel {
     public void startRun() {
         if (canRun.get()) {
             notice.set("");
+            inputs.close();
             run.start(project.draft().get(), project.files());
         }
     }

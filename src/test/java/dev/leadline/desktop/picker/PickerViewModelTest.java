@@ -34,7 +34,7 @@ class PickerViewModelTest {
     @Test
     void drawsTheDensityOfTheOpenedInput() {
         open();
-        assertEquals(Optional.of(Way.Form.FAMILY), picker.way().get());
+        assertEquals(Optional.of(Way.Given.FAMILY), picker.way().get());
         assertEquals(.5, mean());
         inputs.close();
         assertTrue(picker.drawn().get().isEmpty());

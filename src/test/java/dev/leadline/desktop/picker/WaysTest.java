@@ -65,7 +65,7 @@ class WaysTest {
     @Test
     void everyKnowledgeIsAWay() {
         assertEquals(
-                Knowledge.all().size() + Way.Form.values().length, Way.all().size());
+                Knowledge.all().size() + Way.Given.values().length, Way.all().size());
     }
 
     @Test
