@@ -35,7 +35,6 @@ public final class DensityPicture {
 
     private static final double LEAST = 1e-6;
     private static final float[] DASHED = {6, 4};
-    private static final int FINE = 1;
 
     private final Portrait portrait;
     private final Observed observed;
@@ -173,7 +172,7 @@ public final class DensityPicture {
         }
     }
 
-    /// Lines at the values that five in a hundred fall below, half, and ninety-five in a hundred.
+    /// Lines at the values that one in twenty falls below, half do, and one in twenty exceeds.
     private void marks(Graphics2D g) {
         g.setStroke(new BasicStroke(1, BasicStroke.CAP_BUTT, BasicStroke.JOIN_MITER, 10, new float[] {2, 3}, 0));
         g.setFont(font);
@@ -181,7 +180,7 @@ public final class DensityPicture {
         for (var q : portrait.quantiles()) {
             boolean marked = q.below() == .05 || q.below() == .5 || q.above() == .05;
             double x = xOf(q.value());
-            String text = q.below() == .5 ? "half" : Math.round(100 * q.below()) + " %";
+            String text = q.below() == .5 ? "half" : "1 in 20";
             double wide = Typeface.width(font, text);
             if (marked && x - wide / 2 > before + 6 && x > plot.getMinX() && x < plot.getMaxX()) {
                 g.setColor(theme.axis());
@@ -233,7 +232,7 @@ public final class DensityPicture {
     /// The chances below, or above, column by column.
     private Path2D steps(boolean below) {
         var path = new Path2D.Double();
-        int columns = (int) plot.getWidth() / FINE;
+        int columns = (int) plot.getWidth();
         double before = Double.NaN;
         for (int i = 0; i <= columns; i++) {
             double x = over.low() + (over.high() - over.low()) * i / columns;
@@ -263,9 +262,13 @@ public final class DensityPicture {
         for (int i = 0; i < n; i++) {
             double x = xOf(data.get(i));
             path.lineTo(x, yOf((below ? i : n - i) / (double) n));
-            path.lineTo(x, yOf((below ? i + 1 : n - i - 1) / (double) n));
+            if (below || i < n - 1) { // a logarithmic axis has no 0
+                path.lineTo(x, yOf((below ? i + 1 : n - i - 1) / (double) n));
+            }
         }
-        path.lineTo(plot.getMaxX(), yOf(below ? 1 : 0));
+        if (below) {
+            path.lineTo(plot.getMaxX(), yOf(1));
+        }
         return path;
     }
 

@@ -15,6 +15,7 @@ public enum FamilyGroup {
             "trapezoidal",
             "curvilinear-trapezoid",
             "arcsine",
+            "von-mises",
             "beta",
             "kumaraswamy"),
     MIDDLE(

@@ -46,6 +46,8 @@ public record Portrait(
     /// A discrete density with more values within the drawing is drawn in stretches of several.
     public static final int MOST_BARS = 120;
 
+    private static final int MOST_VALUES = 8 * MOST_BARS;
+
     /// Of irregular values, such as data.
     private static final int STRETCHES = 40;
 
@@ -55,6 +57,9 @@ public record Portrait(
     private static final double FAR_CUT = 40;
     private static final double MARGIN = .04;
     private static final double[] MASSES = {FAR_TAIL, .001, .01, .05, .25};
+    /// Beyond a chance by more than its rounding, by less than the probability of any value.
+    private static final double STEP = 1e-12;
+
     private static final int DIGITS = 6;
 
     public Portrait {
@@ -123,16 +128,21 @@ public record Portrait(
         if (shown.isEmpty()) {
             return List.of();
         }
-        var values = values(shown.get().low(), shown.get().high(), 8 * MOST_BARS);
+        var values = values(shown.get().low(), shown.get().high(), MOST_VALUES);
+        double last = density.upperQuantile(density.survival(shown.get().high()));
+        boolean whole = values.size() > 0 && (values.getLast() >= last || values.size() == MOST_VALUES);
+        if (!whole) {
+            return curve(shown.get(), STRETCHES);
+        }
         if (values.size() <= MOST_BARS) {
             return values.stream().map(x -> new Bar(x, x, density.pdf(x))).toList();
         }
         double step = step(values);
         double first = values.getFirst();
-        double last = shown.get().high();
+        double end = shown.get().high();
         if (step > 0) {
-            int together = (int) Math.ceil((last - first) / step / MOST_BARS);
-            int count = Math.max(1, (int) Math.ceil((last - first) / (step * together)));
+            int together = (int) Math.ceil((end - first) / step / MOST_BARS);
+            int count = Math.max(1, (int) Math.ceil((end - first) / (step * together)));
             var edges = new double[count + 1];
             for (int i = 0; i <= count; i++) {
                 edges[i] = first + (i * (double) together - .5) * step;
@@ -166,7 +176,7 @@ public record Portrait(
         if (!(above > 0)) {
             return x;
         }
-        return below < .5 ? density.quantile(Math.nextUp(below)) : density.upperQuantile(Math.nextDown(above));
+        return below < .5 ? density.quantile(below * (1 + STEP)) : density.upperQuantile(above * (1 - STEP));
     }
 
     /// The distance between any two neighbours; 0 where it is not always the same.

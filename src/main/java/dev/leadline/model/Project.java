@@ -1,5 +1,6 @@
 package dev.leadline.model;
 
+import dev.leadline.density.Density;
 import dev.leadline.formula.Working;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
@@ -73,11 +74,22 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
     /// One input by itself, whatever else is wrong in the draft.
     ///
     /// @throws Refusal with every problem found in it, each at its JSON path in the draft
-    public static Input input(Draft draft, int index, DataFiles files) {
+    public static Single input(Draft draft, int index, DataFiles files) {
         var findings = new Findings();
         var input = Inputs.of(draft, index, files, findings);
         findings.refuseIfAny();
-        return input.orElseThrow();
+        return new Single(input.orElseThrow(), findings.notes());
+    }
+
+    /// @param notes what is no fault but may surprise
+    public record Single(Input input, List<Problem> notes) {
+        public Single {
+            notes = List.copyOf(notes);
+        }
+
+        public Density density() {
+            return input.drawn();
+        }
     }
 
     private static DataFiles noting(DataFiles files, Map<String, String> read) {

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.lang.management.ManagementFactory;
 import java.util.List;
+import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.apache.commons.statistics.distribution.BinomialDistribution;
 import org.apache.commons.statistics.distribution.DiscreteDistribution;
@@ -151,6 +152,22 @@ class PortraitTest {
         assertEquals(
                 2,
                 Portrait.of(new Counts(BinomialDistribution.of(1, .5))).bars().size());
+    }
+
+    /// Few data are drawn one by one, each as high as its share of them.
+    @Test
+    void dataAreBarsOrStretches() {
+        var few = Portrait.of(Empirical.of(3, 3, 3, 7.5, 7.6, 11, 3.1, 3.2)).bars();
+        assertEquals(
+                List.of(3.0, 3.1, 3.2, 7.5, 7.6, 11.0),
+                few.stream().map(Portrait.Bar::from).toList());
+        assertEquals(3 / 8., few.getFirst().chance(), 1e-15);
+        assertEquals(1 / 8., few.getLast().chance(), 1e-15);
+        double[] many =
+                IntStream.rangeClosed(1, 500).mapToDouble(i -> Math.sqrt(i)).toArray();
+        var bars = Portrait.of(Empirical.of(many)).bars();
+        assertEquals(40, bars.size());
+        assertEquals(1, bars.stream().mapToDouble(Portrait.Bar::chance).sum(), 1e-12);
     }
 
     static Stream<Density> examples() {

@@ -68,10 +68,23 @@ public final class Snapshots {
                     model.dark().set(true);
                     settled(() -> {
                         write(stage.getScene(), folder.resolve("window-dark.png"));
-                        done.countDown();
+                        picker(stage, model, folder, done);
                     });
                 });
             }
+        });
+    }
+
+    /// The density of the first input, dark, then light.
+    private static void picker(Stage stage, WorkbenchViewModel model, Path folder, CountDownLatch done) {
+        model.inputs().open(0);
+        settled(() -> {
+            write(stage.getScene(), folder.resolve("picker-dark.png"));
+            model.dark().set(false);
+            settled(() -> {
+                write(stage.getScene(), folder.resolve("picker-light.png"));
+                done.countDown();
+            });
         });
     }
 

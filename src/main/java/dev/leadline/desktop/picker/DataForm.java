@@ -20,6 +20,7 @@ final class DataForm implements Form {
     private final ComboBox<String> kind = new ComboBox<>();
     private final Field bandwidth;
     private final HBox bandwidthLine;
+    private final FitsTable fits;
     private final VBox all;
     private boolean showing;
 
@@ -63,12 +64,14 @@ final class DataForm implements Form {
                 .prompt("by rule");
         bandwidth.setId("data-bandwidth");
         bandwidthLine = Labels.line(Labels.of("bandwidth"), bandwidth);
+        fits = new FitsTable(model);
         all = new VBox(
                 6,
                 Labels.line(Labels.of("file"), file, chooser),
                 Labels.line(Labels.of("column"), column),
                 kind,
-                bandwidthLine);
+                bandwidthLine,
+                fits);
     }
 
     @Override
@@ -90,10 +93,12 @@ final class DataForm implements Form {
         showing = true;
         kind.setValue(model.kind());
         showing = false;
-        kind.setDisable(!model.isData());
+        boolean fitted = model.data().fitted().isPresent();
+        Labels.see(kind, model.isData() && !fitted);
+        fits.update();
         bandwidth.show(model.bandwidthText());
         bandwidth.showFault(model.isFaulty("bandwidth"));
-        Labels.see(bandwidthLine, model.kind().equals("kernel"));
+        Labels.see(bandwidthLine, model.kind().equals("kernel") && !fitted);
     }
 
     private static final class KindWords extends StringConverter<String> {

@@ -1,14 +1,21 @@
 package dev.leadline.desktop.picker;
 
+import dev.leadline.density.Fit;
+import dev.leadline.density.Fits;
+import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.model.DensityDraft.Column;
 import dev.leadline.model.DensityDraft.Data;
+import dev.leadline.model.DensityDraft.Member;
 import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.UnaryOperator;
+import javafx.beans.property.ReadOnlyObjectProperty;
+import javafx.beans.property.ReadOnlyObjectWrapper;
 
 /// A density that comes from a column of data: the data themselves, smoothed, or a family fitted to them.
 final class DataViewModel {
@@ -18,9 +25,13 @@ final class DataViewModel {
             new Data("", new Column.Only(), Optional.empty(), OptionalDouble.empty(), Optional.empty());
 
     private final DensityAt at;
+    private final Background background;
+    private final ReadOnlyObjectWrapper<State> fits = new ReadOnlyObjectWrapper<>(new State.Unasked());
+    private long newest;
 
-    DataViewModel(DensityAt at) {
+    DataViewModel(DensityAt at, Background background) {
         this.at = at;
+        this.background = background;
     }
 
     ProjectViewModel project() {
@@ -63,7 +74,7 @@ final class DataViewModel {
 
     void file(String text) {
         project().forget(at.path() + ".data");
-        edit(".data", d -> new Data(text.strip(), d.column(), d.kind(), d.bandwidth(), d.fitted()));
+        edit(".data", d -> moved(d, text.strip(), d.column()));
     }
 
     String fileText() {
@@ -76,7 +87,7 @@ final class DataViewModel {
         Column column = t.isEmpty()
                 ? new Column.Only()
                 : t.matches("[1-9]\\d{0,8}") ? new Column.At(Long.parseLong(t)) : new Column.Named(t);
-        edit(".column", d -> new Data(d.file(), column, d.kind(), d.bandwidth(), d.fitted()));
+        edit(".column", d -> moved(d, d.file(), column));
     }
 
     String columnText() {
@@ -123,6 +134,79 @@ final class DataViewModel {
 
     boolean isFaulty(String field) {
         return !project().problemsAt(at.path() + "." + field).isEmpty();
+    }
+
+    // ---- fits
+
+    /// How the fits to the data stand.
+    sealed interface State {
+        record Unasked() implements State {}
+
+        record Fitting() implements State {}
+
+        record Fitted(Fits fits) implements State {}
+
+        record Refused(List<Problem> problems) implements State {}
+    }
+
+    ReadOnlyObjectProperty<State> fits() {
+        return fits.getReadOnlyProperty();
+    }
+
+    /// Fits every family that can be; takes up to seconds.
+    void fit() {
+        long turn = ++newest;
+        var data = data();
+        var files = project().files();
+        fits.set(new State.Fitting());
+        background.<State>run(
+                () -> new State.Fitted(Fits.of(
+                        files.column(data.file(), data.column()).values().stream()
+                                .mapToDouble(Double::doubleValue)
+                                .toArray(),
+                        List.of())),
+                state -> set(turn, state),
+                failure -> set(
+                        turn,
+                        new State.Refused(
+                                failure instanceof Refusal refusal
+                                        ? refusal.problems()
+                                        : List.of(Problem.of("The fit itself failed: " + failure)
+                                                .because("This is a fault of the program, not of the data.")))));
+    }
+
+    private void set(long turn, State state) {
+        if (turn == newest) {
+            fits.set(state);
+        }
+    }
+
+    /// Draws from a fitted member in place of the data.
+    void use(Fit fit) {
+        project().settle();
+        edit(
+                ".fitted",
+                d -> new Data(
+                        d.file(),
+                        d.column(),
+                        Optional.empty(),
+                        OptionalDouble.empty(),
+                        Optional.of(new Member(fit.family(), fit.parameters()))));
+        project().settle();
+    }
+
+    /// Draws from the data again.
+    void unfit() {
+        project().settle();
+        edit(".fitted", d -> new Data(d.file(), d.column(), d.kind(), d.bandwidth(), Optional.empty()));
+        project().settle();
+    }
+
+    /// What was fitted to another column says nothing of this one.
+    private Data moved(Data d, String file, Column column) {
+        newest++;
+        fits.set(new State.Unasked());
+        return new Data(file, column, d.kind(), d.bandwidth(), Optional.empty());
     }
 
     private void edit(String field, UnaryOperator<Data> change) {

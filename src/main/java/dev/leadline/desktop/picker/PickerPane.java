@@ -196,7 +196,7 @@ public final class PickerPane extends BorderPane {
         return switch (way) {
             case Way.Known(var knowledge) ->
                 new KnownForm(new KnownViewModel(knowledge, at, model.input().orElseThrow()), model.project()::settle);
-            case Way.Given.DATA -> new DataForm(new DataViewModel(at), chooseData);
+            case Way.Given.DATA -> new DataForm(new DataViewModel(at, model.background()), chooseData);
             case Way.Given.VALUES -> new ValuesForm(new ValuesViewModel(at));
             case Way.Given.FAMILY -> new FamilyForm(new MemberViewModel(at));
             case Way.Given.MIXTURE -> new MixtureForm(new MixtureViewModel(at));

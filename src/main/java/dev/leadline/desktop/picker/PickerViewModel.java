@@ -4,7 +4,6 @@ import dev.leadline.chart.DensityPicture;
 import dev.leadline.chart.DensityPicture.View;
 import dev.leadline.chart.Observed;
 import dev.leadline.chart.Theme;
-import dev.leadline.density.Density;
 import dev.leadline.density.Integrated;
 import dev.leadline.density.Portrait;
 import dev.leadline.density.PortraitText;
@@ -23,6 +22,7 @@ import dev.leadline.numeric.Significant;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.awt.image.BufferedImage;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
@@ -104,6 +104,10 @@ public final class PickerViewModel {
         return from instanceof From.Density
                 || InputsViewModel.isUnbounded(from)
                 || InputsViewModel.densityOf(from).isPresent();
+    }
+
+    Background background() {
+        return background;
     }
 
     ProjectViewModel project() {
@@ -245,18 +249,23 @@ public final class PickerViewModel {
                 .orElse(Observed.NONE);
     }
 
-    private static List<String> remarks(Density density) {
-        return density instanceof Integrated typed
-                ? List.of("The integral of what is typed is " + Significant.text(typed.area(), DIGITS) + ".")
-                : List.of();
+    private static List<String> remarks(Project.Single single) {
+        var remarks = new ArrayList<String>();
+        if (single.density() instanceof Integrated typed) {
+            remarks.add("The integral of what is typed is " + Significant.text(typed.area(), DIGITS) + ".");
+        }
+        single.notes()
+                .forEach(note -> remarks.add(PortraitText.sentence(note.primary())
+                        + note.detail().map(detail -> " " + detail).orElse("")));
+        return remarks;
     }
 
     private static Drawn draw(Wish w, Draft d, int index) {
-        var drawn = Project.input(d, index, w.files).drawn();
-        var portrait = Portrait.of(drawn);
+        var single = Project.input(d, index, w.files);
+        var portrait = Portrait.of(single.density());
         String unit = UnitWords.after(w.input.unit());
         String name = w.input.name() + (unit.isEmpty() ? "" : "," + unit);
         var picture = DensityPicture.of(portrait, observed(w), w.view, name, w.theme, w.width, w.height);
-        return new Drawn(picture, remarks(drawn), picture.image(w.scale), w.scale);
+        return new Drawn(picture, remarks(single), picture.image(w.scale), w.scale);
     }
 }

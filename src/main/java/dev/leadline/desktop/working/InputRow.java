@@ -129,7 +129,7 @@ final class InputRow extends VBox {
         body.getChildren().clear();
         var grid = new GridPane(8, 6);
         grid.getStyleClass().add("grid");
-        var named = field("name", "How formulas call it", 9, ".name", InputDraft::name, t -> model.name(index, t));
+        named = field("name", "How formulas call it", 9, ".name", InputDraft::name, t -> model.name(index, t));
         var united =
                 field("unit", "Its unit, as m/s; 1 for none", 7, ".unit", InputDraft::unit, t -> model.unit(index, t));
         grid.addRow(0, label("name"), line(named, label("unit"), united));

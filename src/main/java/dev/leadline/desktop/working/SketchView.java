@@ -53,7 +53,7 @@ public final class SketchView extends Region {
         var wanted = new Shown(draft.inputs().get(index), draft.constants(), files);
         if (!Optional.of(wanted).equals(shown)) {
             shown = Optional.of(wanted);
-            sketched = () -> Portrait.of(Project.input(draft, index, files).drawn());
+            sketched = () -> Portrait.of(Project.input(draft, index, files).density());
             draw();
         }
     }

@@ -8,6 +8,8 @@ import dev.leadline.density.Knowledge;
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
 import dev.leadline.desktop.working.ProjectViewModel;
+import dev.leadline.model.DataColumn;
+import dev.leadline.model.DataFiles;
 import dev.leadline.model.DensityDraft.Column;
 import dev.leadline.model.DensityDraft.Ends;
 import dev.leadline.model.DensityDraft.Mixture;
@@ -148,7 +150,7 @@ class WaysTest {
 
     @Test
     void dataLieBelowTheProject() {
-        var data = new DataViewModel(at);
+        var data = new DataViewModel(at, background);
         data.choose(Path.of("/elsewhere/waits.csv"));
         assertEquals(
                 "the project has no folder yet",
@@ -178,5 +180,33 @@ class WaysTest {
         new ChangesViewModel(at).low("0");
         var draft = project.draft().get();
         assertEquals(draft, ProjectFile.parse(ProjectFile.format(draft)));
+    }
+
+    /// Normal densities fitted to -1, 0 and 1: mean 0, variance 2/3 by maximum likelihood.
+    @Test
+    void aFitIsDrawnFromInPlaceOfTheData() {
+        DataFiles files = (file, column) -> new DataColumn("", List.of(-1.0, 0.0, 1.0), List.of(), "");
+        project.replace(Drafts.mean(), Optional.of(Path.of("/work/quay/quay.leadline")), files);
+        var data = new DataViewModel(at, background);
+        data.file("waits.csv");
+        data.kind("kernel");
+        data.fit();
+        background.finishAll();
+        var fits = ((DataViewModel.State.Fitted) data.fits().get()).fits();
+        var normal = fits.fits().stream()
+                .filter(fit -> fit.family().equals("normal"))
+                .findFirst()
+                .orElseThrow();
+        data.use(normal);
+        var kept = data.data().fitted().orElseThrow();
+        assertEquals(0, kept.parameters().get("mean"), 1e-12);
+        assertEquals(Math.sqrt(2 / 3.), kept.parameters().get("sd"), 1e-12);
+        assertTrue(data.data().kind().isEmpty());
+        data.unfit();
+        assertTrue(data.data().fitted().isEmpty());
+        data.use(normal);
+        data.column("2");
+        assertTrue(data.data().fitted().isEmpty(), "fitted to another column");
+        assertEquals(new DataViewModel.State.Unasked(), data.fits().get());
     }
 }
