@@ -184,14 +184,17 @@ final class DataViewModel {
     /// Draws from a fitted member in place of the data.
     void use(Fit fit) {
         project().settle();
-        edit(
+        var data = data();
+        var fitted = new Data(
+                data.file(),
+                data.column(),
+                Optional.empty(),
+                OptionalDouble.empty(),
+                Optional.of(new Member(fit.family(), fit.parameters())));
+        at.edit(
                 ".fitted",
-                d -> new Data(
-                        d.file(),
-                        d.column(),
-                        Optional.empty(),
-                        OptionalDouble.empty(),
-                        Optional.of(new Member(fit.family(), fit.parameters()))));
+                fitted,
+                "%s fitted to %d values of %s by maximum likelihood".formatted(fit.family(), fit.used(), data.file()));
         project().settle();
     }
 

@@ -19,10 +19,12 @@ import java.util.function.UnaryOperator;
 
 /// Where a density stands in the draft: that of an input, or a part of a mixture.
 ///
+/// @param input index of the input
 /// @param path its JSON path
 /// @param of whose density it is, in words
 record DensityAt(
         ProjectViewModel project,
+        int input,
         String path,
         String of,
         Function<Draft, Optional<DensityDraft>> get,
@@ -34,6 +36,7 @@ record DensityAt(
         String field = input.from() instanceof From.Range ? ".drawFrom" : ".density";
         return new DensityAt(
                 project,
+                index,
                 "$.inputs[" + index + "]" + field,
                 input.name(),
                 d -> index < d.inputs().size() ? of(d.inputs().get(index).from()) : Optional.empty(),
@@ -59,6 +62,7 @@ record DensityAt(
     DensityAt part(int k) {
         return new DensityAt(
                 project,
+                input,
                 path + ".mixture[" + k + "]",
                 "part " + (k + 1) + " of " + of,
                 d -> get.apply(d)
@@ -88,6 +92,19 @@ record DensityAt(
 
     void edit(String key, UnaryOperator<DensityDraft> change) {
         project.edit(path + key, d -> changed(d, change));
+    }
+
+    /// The density made of something else and the sentence of where it comes from, as one edit.
+    void edit(String key, DensityDraft.Of of, String provenance) {
+        project.edit(path + key, d -> {
+            var drawn = changed(d, old -> become(old, of));
+            return Edits.inputs(
+                    drawn,
+                    Edits.changed(
+                            drawn.inputs(),
+                            input,
+                            in -> new InputDraft(in.name(), in.unit(), in.label(), provenance, in.from())));
+        });
     }
 
     /// The density made of something else. It stays cut where it was; it stays shifted and scaled unless the family has

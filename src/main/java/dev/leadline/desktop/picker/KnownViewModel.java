@@ -1,13 +1,13 @@
 package dev.leadline.desktop.picker;
 
+import dev.leadline.density.Catalogue;
 import dev.leadline.density.Knowledge;
 import dev.leadline.density.Suggestion;
-import dev.leadline.desktop.working.Edits;
 import dev.leadline.desktop.working.NumberText;
 import dev.leadline.model.DensityDraft.Member;
-import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -18,15 +18,13 @@ import java.util.Optional;
 final class KnownViewModel {
     private final Knowledge knowledge;
     private final DensityAt at;
-    private final int input;
     private final Map<String, String> texts = new LinkedHashMap<>();
     private List<Problem> problems = List.of();
     private Optional<Suggestion> suggestion = Optional.empty();
 
-    KnownViewModel(Knowledge knowledge, DensityAt at, int input) {
+    KnownViewModel(Knowledge knowledge, DensityAt at) {
         this.knowledge = knowledge;
         this.at = at;
-        this.input = input;
     }
 
     Knowledge knowledge() {
@@ -53,7 +51,7 @@ final class KnownViewModel {
     void type(String name, String text) {
         texts.put(name, text);
         var told = new LinkedHashMap<String, Double>();
-        var unread = new java.util.ArrayList<Problem>();
+        var unread = new ArrayList<Problem>();
         for (var parameter : knowledge.parameters()) {
             String typed = text(parameter.name());
             var number = NumberText.read(typed);
@@ -74,7 +72,7 @@ final class KnownViewModel {
     private void suggest(Map<String, Double> told) {
         try {
             var found = knowledge.suggestion(told);
-            dev.leadline.density.Catalogue.named(found.family()).of(found.parameters());
+            Catalogue.named(found.family()).of(found.parameters());
             suggestion = Optional.of(found);
         } catch (Refusal refusal) {
             problems = refusal.problems();
@@ -82,14 +80,9 @@ final class KnownViewModel {
         }
         var found = suggestion.get();
         at.project().forget(at.path());
-        at.project().edit(at.path() + "(" + knowledge.word() + ")", d -> {
-            var drawn = at.changed(d, old -> DensityAt.become(old, new Member(found.family(), found.parameters())));
-            return Edits.inputs(
-                    drawn,
-                    Edits.changed(
-                            drawn.inputs(),
-                            input,
-                            in -> new InputDraft(in.name(), in.unit(), in.label(), found.provenance(), in.from())));
-        });
+        at.edit(
+                "(" + knowledge.word() + ")",
+                new Member(found.family(), found.parameters()),
+                found.provenance());
     }
 }

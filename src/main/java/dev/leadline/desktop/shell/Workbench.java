@@ -39,7 +39,11 @@ public final class Workbench extends BorderPane {
         this.model = model;
         getStyleClass().add("workbench");
         working = new WorkingPane(
-                model.project(), model.inputs(), model.look(), () -> new SketchView(model.dark(), background));
+                model.project(),
+                model.inputs(),
+                model.achieved(),
+                model.look(),
+                () -> new SketchView(model.dark(), background));
         var menus = Menus.of(model, this::copyAnswer, working::openLook, working::openAbout, quit);
         var sentence = new SentenceView(this::openDoor);
         sentence.show(model.sentence().get());

@@ -7,6 +7,7 @@ import dev.leadline.desktop.run.Progress;
 import dev.leadline.desktop.run.RunViewModel;
 import dev.leadline.desktop.run.Studies;
 import dev.leadline.desktop.stage.StageViewModel;
+import dev.leadline.desktop.working.AchievedViewModel;
 import dev.leadline.desktop.working.Edits;
 import dev.leadline.desktop.working.InputsViewModel;
 import dev.leadline.desktop.working.LookViewModel;
@@ -55,6 +56,7 @@ public final class WorkbenchViewModel {
     private final StageViewModel stage;
     private final LookViewModel look;
     private final InputsViewModel inputs;
+    private final AchievedViewModel achieved;
     private final PickerViewModel picker;
     private final ReadOnlyBooleanWrapper started = new ReadOnlyBooleanWrapper();
     private final ReadOnlyStringWrapper notice = new ReadOnlyStringWrapper("");
@@ -75,6 +77,7 @@ public final class WorkbenchViewModel {
         stage = new StageViewModel(project, run, dark, background);
         look = new LookViewModel(project, this::ranAsItStands, background);
         inputs = new InputsViewModel(project);
+        achieved = new AchievedViewModel(project, background);
         picker = new PickerViewModel(project, inputs, dark, background);
         title = Bindings.createStringBinding(
                 () -> titleOf(project.draft().get(), project.file().get()), project.draft(), project.file());
@@ -115,6 +118,10 @@ public final class WorkbenchViewModel {
 
     public InputsViewModel inputs() {
         return inputs;
+    }
+
+    public AchievedViewModel achieved() {
+        return achieved;
     }
 
     /// The density that is being chosen, while an input's row is open.

@@ -1,6 +1,7 @@
 package dev.leadline.desktop.working;
 
 import dev.leadline.desktop.style.Styles;
+import dev.leadline.study.TieRow;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.function.Consumer;
@@ -11,6 +12,7 @@ import javafx.scene.control.CheckBox;
 import javafx.scene.control.ComboBox;
 import javafx.scene.control.Label;
 import javafx.scene.control.Tooltip;
+import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.VBox;
@@ -27,6 +29,7 @@ final class TiedView {
     private final CheckBox repair = new CheckBox("take the nearest that are possible");
     private final VBox choices;
     private final Messages messages = new Messages();
+    private final GridPane seen = new GridPane(10, 1);
     private final Fold fold;
     private boolean showing;
 
@@ -82,7 +85,7 @@ final class TiedView {
         }
     }
 
-    TiedView(TiedViewModel model) {
+    TiedView(TiedViewModel model, AchievedViewModel achieved) {
         this.model = model;
         add.setId("add-pair");
         add.getStyleClass().setAll("button", Styles.LINK);
@@ -116,7 +119,23 @@ final class TiedView {
                 "fold-tied",
                 "tied inputs",
                 "Inputs that rise and fall together",
-                new VBox(6, rows, add, choices, messages));
+                new VBox(6, rows, add, choices, messages, seen));
+        fold.head().selectedProperty().addListener((_, _, open) -> achieved.open(open));
+        achieved.rows().addListener((_, _, found) -> show(found));
+        show(List.of());
+    }
+
+    private void show(List<TieRow> found) {
+        seen.getChildren().clear();
+        if (!found.isEmpty()) {
+            seen.add(label("seen in draws of their own"), 0, 0, 2, 1);
+        }
+        for (int k = 0; k < found.size(); k++) {
+            var value = new Label(found.get(k).achieved());
+            value.getStyleClass().add("figure");
+            seen.addRow(k + 1, label(found.get(k).of()), value);
+        }
+        see(seen, !found.isEmpty());
     }
 
     private ComboBox<String> choice(String name, String tip, Consumer<String> chosen) {

@@ -42,13 +42,17 @@ public final class WorkingPane extends BorderPane {
     private final Button unknown;
 
     public WorkingPane(
-            ProjectViewModel project, InputsViewModel inputs, LookViewModel lookModel, Supplier<SketchView> sketches) {
+            ProjectViewModel project,
+            InputsViewModel inputs,
+            AchievedViewModel achieved,
+            LookViewModel lookModel,
+            Supplier<SketchView> sketches) {
         this.project = project;
         this.sketches = sketches;
         inputsModel = inputs;
         constantsModel = new ConstantsViewModel(project);
         formulas = new FormulasViewModel(project, inputsModel);
-        tied = new TiedView(new TiedViewModel(project));
+        tied = new TiedView(new TiedViewModel(project), achieved);
         demands = new DemandsView(new DemandsViewModel(project));
         look = new LookView(lookModel);
         about = new AboutView(project);

@@ -38,7 +38,7 @@ class WaysTest {
     /// JCGM 101:2008, table 1: of limits alone follows the rectangular density.
     @Test
     void whatIsKnownGivesDensityAndProvenanceAsOneEdit() {
-        var known = new KnownViewModel(Knowledge.named("limits"), at, 0);
+        var known = new KnownViewModel(Knowledge.named("limits"), at);
         known.type("low", "3");
         assertEquals("uniform(0, 1)", words());
         known.type("high", "8");
@@ -52,7 +52,7 @@ class WaysTest {
 
     @Test
     void whatIsKnownWronglyIsToldAndChangesNothing() {
-        var known = new KnownViewModel(Knowledge.named("limits"), at, 0);
+        var known = new KnownViewModel(Knowledge.named("limits"), at);
         known.type("low", "3");
         known.type("high", "3x");
         assertTrue(known.isFaulty("high"));
@@ -202,6 +202,7 @@ class WaysTest {
         assertEquals(0, kept.parameters().get("mean"), 1e-12);
         assertEquals(Math.sqrt(2 / 3.), kept.parameters().get("sd"), 1e-12);
         assertTrue(data.data().kind().isEmpty());
+        assertEquals("normal fitted to 3 values of waits.csv by maximum likelihood", provenance());
         data.unfit();
         assertTrue(data.data().fitted().isEmpty());
         data.use(normal);

@@ -84,4 +84,22 @@ class TiedViewModelTest {
         inputs.remove(0);
         assertTrue(project.draft().get().dependence().isEmpty());
     }
+
+    /// Spearman's correlation that was asked for is that of the draws.
+    @Test
+    void whatDrawsAchieveIsSeenWhileTheFoldIsOpen() {
+        var achieved = new AchievedViewModel(project, background);
+        tied.add();
+        tied.value(0, "0.6");
+        background.finishAll();
+        assertEquals(List.of(), achieved.rows().get());
+        achieved.open(true);
+        background.finishAll();
+        var row = achieved.rows().get().getFirst();
+        assertEquals("x, y", row.of());
+        assertTrue(row.achieved().matches("0\\.(59|60)\\d* ± 0\\.00\\d+"), row.achieved());
+        tied.remove(0);
+        background.finishAll();
+        assertEquals(List.of(), achieved.rows().get());
+    }
 }
