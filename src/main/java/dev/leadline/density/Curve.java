@@ -2,7 +2,8 @@ package dev.leadline.density;
 
 /// How the quantiles of a shape are computed for many draws. Immutable.
 interface Curve {
-    /// The quantiles of `location + scale * shape`, monotone in u.
+    /// The quantiles of `location + scale * shape`, monotone in u; a negative scale mirrors the shape, and is
+    /// asked of tables only.
     void fill(double[] u, double[] x, int n, double location, double scale);
 
     /// Largest error in probability that was measured.

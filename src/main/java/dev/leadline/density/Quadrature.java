@@ -1,5 +1,6 @@
 package dev.leadline.density;
 
+import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
 
 /// Integrals of smooth functions: Gauss-Legendre quadrature with 16 points on each of some equal panels.
@@ -7,6 +8,12 @@ import java.util.function.DoubleUnaryOperator;
 /// A panel on which the function falls by `e^14` is integrated to a relative `1e-16`; so are three panels of a function
 /// that falls by `e^42`, behind which nothing is left that a double would notice.
 final class Quadrature {
+    /// Relative change by halving that is left to rounding.
+    private static final double SETTLED = 1e-14;
+
+    private static final int PANELS = 1000;
+    private static final int HALVINGS = 40;
+
     /// An exponent that counts as the end of a tail.
     static final double END = 42;
 
@@ -46,6 +53,27 @@ final class Quadrature {
             }
         }
         return half * sum;
+    }
+
+    /// On panels that are halved until halving changes nothing; empty where a thousand are not enough, or the integral
+    /// is not finite.
+    static OptionalDouble halving(DoubleUnaryOperator f, double from, double to) {
+        var left = new int[] {PANELS};
+        double whole = of(f, from, to, 1);
+        double sum = halved(f, from, to, whole, whole, HALVINGS, left);
+        return left[0] > 0 && Double.isFinite(sum) ? OptionalDouble.of(sum) : OptionalDouble.empty();
+    }
+
+    private static double halved(
+            DoubleUnaryOperator f, double from, double to, double panel, double whole, int halvings, int[] left) {
+        double middle = from + 0.5 * (to - from);
+        double lower = of(f, from, middle, 1);
+        double upper = of(f, middle, to, 1);
+        if (Math.abs(lower + upper - panel) <= SETTLED * Math.abs(whole) || halvings == 0 || --left[0] <= 0) {
+            return lower + upper;
+        }
+        return halved(f, from, middle, lower, whole, halvings - 1, left)
+                + halved(f, middle, to, upper, whole, halvings - 1, left);
     }
 
     /// How far a normal tail at the distance `d` from its middle reaches until it has fallen by `e^END`.

@@ -48,18 +48,19 @@ record Table(Density shape, Link link, int bits, double[] cells, Parts parts, do
     @Override
     public void fill(double[] u, double[] x, int n, double location, double scale) {
         if (link == Link.NONE) {
-            polynomials(u, x, n, location, scale);
+            polynomials(u, x, n, location, scale, Math.signum(scale));
             return;
         }
-        polynomials(u, x, n, 0, 1);
+        polynomials(u, x, n, 0, 1, Math.signum(scale));
         link.invert(x, n);
         for (int i = 0; i < n; i++) {
             x[i] = Math.fma(scale, x[i], location);
         }
     }
 
-    private void polynomials(double[] u, double[] x, int n, double location, double scale) {
-        tails(u, x, n);
+    /// @param side 1, or -1 where the other tail is wanted
+    private void polynomials(double[] u, double[] x, int n, double location, double scale, double side) {
+        tails(u, x, n, side);
         double[] c = cells;
         if (c.length == 0) {
             for (int i = 0; i < n; i++) {
@@ -86,10 +87,10 @@ record Table(Density shape, Link link, int bits, double[] cells, Parts parts, do
     /// never below the smallest that has one, which moves no probability by more than that, `1.1e-16`.
     ///
     /// In a loop of its own, without a branch, this is vectorised.
-    private static void tails(double[] u, double[] x, int n) {
+    private static void tails(double[] u, double[] x, int n, double side) {
         for (int i = 0; i < n; i++) {
-            double side = Math.signum(0.5 - u[i]);
-            x[i] = Math.max(Math.min(u[i], 1 - u[i]), SMALLEST) * (side + (1 - side * side));
+            double near = Math.signum(0.5 - u[i]);
+            x[i] = Math.max(Math.min(u[i], 1 - u[i]), SMALLEST) * (near + (1 - near * near)) * side;
         }
     }
 

@@ -9,7 +9,8 @@ import java.util.Optional;
 ///
 /// A cell's polynomial passes through the quantile at both ends of the cell and at the four Chebyshev-Lobatto points
 /// between. It is anchored at the quantile of its first end, and its slope is trimmed by rounding errors until its last
-/// value does not pass the quantile of the other end: so the table is monotone across cells.
+/// value does not pass the quantile of the other end: so the table is monotone across cells. Where quantiles fall back
+/// by rounding errors, the first of them counts, from the middle outwards.
 ///
 /// A cell that misses is halved, and so on, until every part of it is hit. At a jump of the quantile that ends where
 /// the part is narrower than the error that is allowed: any value between those of its ends is right there, and it gets
@@ -103,9 +104,13 @@ final class TableFit {
         var whole = new Table(shape, link, bits, cells, Parts.NONE, 0);
         var missed = new ArrayList<Cell>();
         double mass = 0;
+        double[] limits = {value(0.5, 0), value(0.5, 1)};
         for (int octave = Table.OCTAVES - 1; octave >= 0; octave--) {
             for (int tail = 0; tail < 2; tail++) {
-                for (var cell : fit(whole, octave, tail)) {
+                double first = within(value(StrictMath.scalb(1.0, octave - 53), tail), limits[tail], tail);
+                double last = limits[tail];
+                limits[tail] = first;
+                for (var cell : fit(whole, octave, tail, first, last)) {
                     missed.add(cell);
                     mass += cell.width(bits);
                     if (mass > most) {
@@ -135,8 +140,15 @@ final class TableFit {
         return new Parts(from, coefficients);
     }
 
+    /// A value, or the limit that it must not pass on the way to the middle.
+    private static double within(double value, double limit, int tail) {
+        return tail == 0 ? Math.min(value, limit) : Math.max(value, limit);
+    }
+
     /// @param octave counted from the smallest probability
-    private record Cell(int octave, int cell, int tail) {
+    /// @param first what is tabulated at its smallest probability
+    /// @param last what is tabulated where the next begins
+    private record Cell(int octave, int cell, int tail, double first, double last) {
         /// The probability at which the octave begins.
         double base() {
             return StrictMath.scalb(1.0, octave - 53);
@@ -170,15 +182,16 @@ final class TableFit {
     /// Fits the cells of an octave.
     ///
     /// @return those that were missed
-    private List<Cell> fit(Table table, int octave, int tail) {
+    private List<Cell> fit(Table table, int octave, int tail, double first, double last) {
         var missed = new ArrayList<Cell>();
-        double atEnd = value(StrictMath.scalb(1.0, octave - 53), tail);
+        var ends = new double[(1 << bits) + 1];
+        ends[0] = first;
         for (int number = 0; number < 1 << bits; number++) {
-            var cell = new Cell(octave, number, tail);
+            var cell = new Cell(octave, number, tail, ends[number], last);
             var t = new double[LOBATTO.length];
             var y = new double[LOBATTO.length];
-            points(cell, 0, StrictMath.scalb(1.0, -bits), atEnd, t, y);
-            atEnd = y[t.length - 1];
+            points(cell, 0, StrictMath.scalb(1.0, -bits), cell.first(), last, t, y);
+            ends[number + 1] = y[t.length - 1];
             var c = through(t, y, tail);
             if (c.isPresent()) {
                 System.arraycopy(c.get(), 0, cells, cell.index(bits), Table.STRIDE);
@@ -191,7 +204,7 @@ final class TableFit {
             if (errors[number] <= U_ERROR) {
                 worst = Math.max(worst, errors[number]);
             } else {
-                missed.add(new Cell(octave, number, tail));
+                missed.add(new Cell(octave, number, tail, ends[number], ends[number + 1]));
             }
         }
         return missed;
@@ -200,22 +213,20 @@ final class TableFit {
     /// The points that a part of a cell passes through.
     ///
     /// @param from where it begins, in units of the octave's first probability
-    /// @param y what is tabulated there; the first is `first`, known from the part before
-    private void points(Cell cell, double from, double width, double first, double[] t, double[] y) {
+    /// @param y what is tabulated there; the first is `first`, none is before that or beyond `last`
+    private void points(Cell cell, double from, double width, double first, double last, double[] t, double[] y) {
         double before = StrictMath.scalb(cell.cell(), -bits) + from;
         for (int j = 0; j < t.length; j++) {
             double p = cell.base() * (1 + before + LOBATTO[j] * width);
             t[j] = p / cell.base() - 1 - before;
-            y[j] = j == 0 ? first : value(p, cell.tail());
+            y[j] = j == 0 ? first : within(within(value(p, cell.tail()), y[j - 1], 1 - cell.tail()), last, cell.tail());
         }
     }
 
     /// Halves a cell until all of its parts are hit. False where too many would be needed.
     private boolean split(Cell cell) {
         int first = parts.size();
-        double width = StrictMath.scalb(1.0, -bits);
-        double p = cell.base() * (1 + StrictMath.scalb(cell.cell(), -bits));
-        if (!halve(cell, 0, width, value(p, cell.tail()), first)) {
+        if (!halve(cell, 0, StrictMath.scalb(1.0, -bits), cell.first(), cell.last(), first)) {
             return false;
         }
         int k = cell.index(bits);
@@ -225,14 +236,16 @@ final class TableFit {
         return true;
     }
 
-    private boolean halve(Cell cell, double from, double width, double first, int firstPart) {
+    private boolean halve(Cell cell, double from, double width, double first, double last, int firstPart) {
         double half = 0.5 * width;
+        double p = cell.base() * (1 + StrictMath.scalb(cell.cell(), -bits) + from + half);
+        double middle = within(within(value(p, cell.tail()), first, 1 - cell.tail()), last, cell.tail());
+        boolean isWide = cell.base() * half > 0.5 * Math.min(U_ERROR, RELATIVE * p);
         for (int side = 0; side < 2; side++) {
             double begin = from + side * half;
-            double p = cell.base() * (1 + StrictMath.scalb(cell.cell(), -bits) + begin);
-            double value = side == 0 ? first : value(p, cell.tail());
-            boolean isWide = cell.base() * half > 0.5 * Math.min(U_ERROR, RELATIVE * p);
-            if (!isHit(cell, begin, half, value, isWide) && !(isWide && halve(cell, begin, half, value, firstPart))) {
+            double a = side == 0 ? first : middle;
+            double b = side == 0 ? middle : last;
+            if (!isHit(cell, begin, half, a, b, isWide) && !(isWide && halve(cell, begin, half, a, b, firstPart))) {
                 return false;
             }
             if (parts.size() - firstPart > PARTS_OF_CELL || parts.size() > PARTS) {
@@ -243,10 +256,10 @@ final class TableFit {
     }
 
     /// Adds a part, if one polynomial, or at a jump one value, is right for all of it.
-    private boolean isHit(Cell cell, double from, double width, double first, boolean isWide) {
+    private boolean isHit(Cell cell, double from, double width, double first, double last, boolean isWide) {
         var t = new double[LOBATTO.length];
         var y = new double[LOBATTO.length];
-        points(cell, from, width, first, t, y);
+        points(cell, from, width, first, last, t, y);
         var c = through(t, y, cell.tail()).filter(c_ -> isMonotone(c_, width, cell.tail()));
         double error = c.isPresent() ? error(cell, from, width, c.get()) : Double.POSITIVE_INFINITY;
         if (!(error <= U_ERROR) && !isWide) {

@@ -22,17 +22,18 @@ class InversionTest {
     /// a
     /// faint part.
     private static final List<Density> BROKEN = List.of(
-            new Steps(List.of(0.0, 1.0, 10.0, 11.0), List.of(0.5, 0.0, 0.5)),
-            new Steps(List.of(0.0, 1.0, 1e6, 1e6 + 1), List.of(0.3, 0.0, 0.7)),
-            new Steps(List.of(0.0, 1.0, 1.0 + 1e-6, 2.0), List.of(0.375, 0.0, 0.625)),
-            new Steps(List.of(-1.0, 0.0, 1e-9, 3.0), List.of(0.2, 1e-6, 0.799999)),
-            new Steps(List.of(0.0, 1.0, 2.0, 3.0), List.of(1e-9, 0.999999998, 1e-9)),
-            new Steps(
+            new StepDensity(List.of(0.0, 1.0, 10.0, 11.0), List.of(0.5, 0.0, 0.5)),
+            new StepDensity(List.of(0.0, 1.0, 1e6, 1e6 + 1), List.of(0.3, 0.0, 0.7)),
+            new StepDensity(List.of(0.0, 1.0, 1.0 + 1e-6, 2.0), List.of(0.375, 0.0, 0.625)),
+            new StepDensity(List.of(-1.0, 0.0, 1e-9, 3.0), List.of(0.2, 1e-6, 0.799999)),
+            new StepDensity(List.of(0.0, 1.0, 2.0, 3.0), List.of(1e-9, 0.999999998, 1e-9)),
+            new StepDensity(
                     IntStream.rangeClosed(0, 10).mapToObj(i -> (double) i).toList(),
                     List.of(0.02, 0.05, 0.0, 0.13, 0.2, 0.2, 0.17, 0.0, 0.13, 0.1)));
 
     static Stream<Density> densities() {
-        return Stream.of(Examples.all(), BROKEN.stream(), TypedTest.densities()).flatMap(densities -> densities);
+        return Stream.of(Examples.all(), Composites.all(), BROKEN.stream(), TypedTest.densities())
+                .flatMap(densities -> densities);
     }
 
     /// The error is measured in the tail's own probability, down to the smallest that is drawn; a value is as good as
@@ -54,8 +55,8 @@ class InversionTest {
                 boolean lower = u[i] <= 0.5;
                 double p = lower ? u[i] : 1 - u[i];
                 double slack = Math.min(1e-12, 1e-9 * p);
-                double below = Math.nextDown(Math.nextDown(x[i]));
-                double above = Math.nextUp(Math.nextUp(x[i]));
+                double below = neighbour(density, x[i], -1);
+                double above = neighbour(density, x[i], 1);
                 double least = lower ? density.cdf(below) : density.survival(above);
                 double most = lower ? density.cdf(above) : density.survival(below);
                 assertTrue(
@@ -64,6 +65,19 @@ class InversionTest {
                                 + " to " + most);
             }
         }
+    }
+
+    /// Two doubles away, or four where the ends of an interval or the places of parts are rounded too; at least two
+    /// roundings of the location.
+    private static double neighbour(Density density, double from, int direction) {
+        double x = from;
+        int steps = density instanceof Truncated || density instanceof Mixture ? 4 : 2;
+        double location = density.standardised().location();
+        double away = x + direction * steps * (location == 0 ? 0 : Math.ulp(location));
+        for (int i = 0; i < steps; i++) {
+            x = direction < 0 ? Math.nextDown(x) : Math.nextUp(x);
+        }
+        return direction < 0 ? Math.min(x, away) : Math.max(x, away);
     }
 
     /// Around every border of every cell, and at random neighbours.

@@ -7,7 +7,7 @@ import java.util.stream.IntStream;
 ///
 /// @param edges rising, one more than masses
 /// @param masses with sum 1; not the first nor the last is 0
-record Steps(List<Double> edges, List<Double> masses) implements Shape {
+record StepDensity(List<Double> edges, List<Double> masses) implements Shape {
 
     private double low(int i) {
         return edges.get(i);
@@ -17,8 +17,8 @@ record Steps(List<Double> edges, List<Double> masses) implements Shape {
         return edges.get(i + 1) - edges.get(i);
     }
 
-    private Steps mirrored() {
-        return new Steps(
+    private StepDensity mirrored() {
+        return new StepDensity(
                 edges.reversed().stream().map(e -> -e).toList(),
                 masses.reversed().stream().toList());
     }

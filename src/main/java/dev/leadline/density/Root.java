@@ -1,0 +1,67 @@
+package dev.leadline.density;
+
+import dev.leadline.numeric.Log;
+import java.util.function.DoubleUnaryOperator;
+
+/// The place where a rising mass reaches a probability: Newton's method on the logarithm of the mass, within a bracket
+/// that is halved, in numbers of doubles, wherever Newton does not gain.
+final class Root {
+    /// More than halving alone takes.
+    private static final int TRIALS = 200;
+
+    private Root() {}
+
+    static double rising(DoubleUnaryOperator mass, DoubleUnaryOperator slope, double p, double low, double high) {
+        return rising(mass, slope, p, low, high, Double.NaN);
+    }
+
+    /// The least double in the bracket at which the mass reaches p, or a neighbour of it.
+    ///
+    /// @param mass rising; at `low` at most p, at `high` at least p
+    /// @param slope of the mass; it may be wrong, infinite or 0
+    /// @param start tried first, where it is within the bracket
+    static double rising(
+            DoubleUnaryOperator mass, DoubleUnaryOperator slope, double p, double low, double high, double start) {
+        double lo = Math.max(low, -Double.MAX_VALUE);
+        double hi = Math.min(high, Double.MAX_VALUE);
+        double x = start > lo && start < hi ? start : middle(lo, hi);
+        long width = Long.MAX_VALUE;
+        for (int trial = 0; trial < TRIALS && Math.nextUp(lo) < hi; trial++) {
+            double there = mass.applyAsDouble(x);
+            if (there < p) {
+                lo = x;
+            } else {
+                hi = x;
+            }
+            double excess = Math.abs(there - p) < 0.1 * p ? (there - p) / p : Log.log(there / p);
+            double next = x - excess * there / slope.applyAsDouble(x);
+            if (Math.abs(next - x) <= Math.ulp(x)) {
+                return Math.clamp(next, lo, hi);
+            }
+            long left = order(hi) - order(lo);
+            boolean gains = trial % 3 != 2 || Long.compareUnsigned(left, width >>> 1) <= 0;
+            if (trial % 3 == 2) {
+                width = left;
+            }
+            x = gains && next > lo && next < hi ? next : middle(lo, hi);
+        }
+        return hi;
+    }
+
+    /// The double half-way between two, counted in doubles.
+    private static double middle(double low, double high) {
+        long a = order(low);
+        long b = order(high);
+        return fromOrder((a & b) + ((a ^ b) >> 1));
+    }
+
+    /// Whole numbers in the order of the doubles.
+    private static long order(double x) {
+        long bits = Double.doubleToRawLongBits(x);
+        return bits >= 0 ? bits : Long.MIN_VALUE - bits;
+    }
+
+    private static double fromOrder(long order) {
+        return Double.longBitsToDouble(order >= 0 ? order : Long.MIN_VALUE - order);
+    }
+}

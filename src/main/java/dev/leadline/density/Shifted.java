@@ -1,0 +1,141 @@
+package dev.leadline.density;
+
+import dev.leadline.numeric.Log;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
+
+/// The density of `shift + scale * X`; a negative scale mirrors it.
+///
+/// It is drawn by the table of the shape of `X`; mirrored, a discrete one or one with a closed form has one of its own.
+public record Shifted(Density of, double shift, double scale) implements Density {
+    public Shifted {
+        var problems = new ArrayList<Problem>();
+        Rule.finite("shift", "").broken(shift).ifPresent(problems::add);
+        if (!Double.isFinite(scale) || scale == 0) {
+            problems.add(Rule.problem(
+                    "scale",
+                    scale,
+                    "a finite number other than 0",
+                    "Every value is multiplied by it.",
+                    scale == 0 ? "For a fixed value use a constant." : ""));
+        }
+        if (!problems.isEmpty()) {
+            throw new Refusal(problems);
+        }
+    }
+
+    private double back(double x) {
+        return (x - shift) / scale;
+    }
+
+    private double there(double z) {
+        return Math.fma(scale, z, shift);
+    }
+
+    @Override
+    public double pdf(double x) {
+        return isDiscrete() ? of.pdf(back(x)) : of.pdf(back(x)) / Math.abs(scale);
+    }
+
+    @Override
+    public double logPdf(double x) {
+        return isDiscrete() ? of.logPdf(back(x)) : of.logPdf(back(x)) - Log.log(Math.abs(scale));
+    }
+
+    @Override
+    public void logPdf(double[] x, double[] out, int n) {
+        for (int i = 0; i < n; i++) {
+            out[i] = back(x[i]);
+        }
+        of.logPdf(out, out, n);
+        double log = isDiscrete() ? 0 : Log.log(Math.abs(scale));
+        for (int i = 0; i < n; i++) {
+            out[i] -= log;
+        }
+    }
+
+    @Override
+    public double cdf(double x) {
+        return scale > 0 ? of.cdf(back(x)) : fromAbove(back(x));
+    }
+
+    @Override
+    public double survival(double x) {
+        return scale > 0 ? of.survival(back(x)) : fromBelow(back(x));
+    }
+
+    /// `P(X >= z)`.
+    private double fromAbove(double z) {
+        return of.survival(isDiscrete() ? Math.nextDown(z) : z);
+    }
+
+    /// `P(X < z)`.
+    private double fromBelow(double z) {
+        return of.cdf(isDiscrete() ? Math.nextDown(z) : z);
+    }
+
+    /// Mirrored and discrete, the least value is wanted that leaves less than p above it.
+    @Override
+    public double quantile(double p) {
+        if (scale > 0) {
+            return there(of.quantile(p));
+        }
+        return there(of.upperQuantile(isDiscrete() && p > 0 && p < 1 ? Math.nextDown(p) : p));
+    }
+
+    @Override
+    public double upperQuantile(double q) {
+        if (scale > 0) {
+            return there(of.upperQuantile(q));
+        }
+        return there(of.quantile(isDiscrete() && q > 0 && q < 1 ? Math.nextUp(q) : q));
+    }
+
+    @Override
+    public double mean() {
+        return there(of.mean());
+    }
+
+    @Override
+    public double variance() {
+        return scale * scale * of.variance();
+    }
+
+    @Override
+    public double skewness() {
+        return Math.signum(scale) * of.skewness();
+    }
+
+    @Override
+    public double excessKurtosis() {
+        return of.excessKurtosis();
+    }
+
+    @Override
+    public TailOrders tailOrders() {
+        var orders = of.tailOrders();
+        return scale > 0 ? orders : new TailOrders(orders.upper(), orders.lower());
+    }
+
+    @Override
+    public boolean isDiscrete() {
+        return of.isDiscrete();
+    }
+
+    @Override
+    public Support support() {
+        var s = of.support();
+        return scale > 0 ? new Support(there(s.low()), there(s.high())) : new Support(there(s.high()), there(s.low()));
+    }
+
+    @Override
+    public Standardised standardised() {
+        var inner = of.standardised();
+        double location = there(inner.location());
+        double factor = scale * inner.scale();
+        return factor < 0 && (isDiscrete() || inner.shape() instanceof ClosedForm)
+                ? new Standardised(new Shifted(inner.shape(), 0, -1), location, -factor)
+                : new Standardised(inner.shape(), location, factor);
+    }
+}

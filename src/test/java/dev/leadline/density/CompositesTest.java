@@ -1,0 +1,236 @@
+package dev.leadline.density;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.ReferenceValues;
+import dev.leadline.density.Mixture.Part;
+import dev.leadline.problem.Refusal;
+import java.io.IOException;
+import java.io.UncheckedIOException;
+import java.nio.charset.StandardCharsets;
+import java.util.List;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.MethodSource;
+import tools.jackson.databind.JsonNode;
+
+/// Truncated, mixed, shifted and mirrored densities against tables computed elsewhere (mpmath, 60 digits,
+/// `density_tables_composites.py`) and the record of `reference-values.json`.
+class CompositesTest {
+    private static final double INFINITY = Double.POSITIVE_INFINITY;
+    private static final Normal NORMAL = new Normal(0, 1);
+
+    static Stream<String> names() {
+        return Composites.named().keySet().stream();
+    }
+
+    private static List<String[]> rows(String file) {
+        try (var in = CompositesTest.class.getResourceAsStream("/density/" + file + ".csv")) {
+            return new String(in.readAllBytes(), StandardCharsets.UTF_8)
+                    .lines()
+                    .skip(2)
+                    .map(line -> line.split(",", -1))
+                    .toList();
+        } catch (IOException e) {
+            throw new UncheckedIOException(e);
+        }
+    }
+
+    /// Relative 1e-12, and three roundings of x, which count as often as the tail is steep.
+    @ParameterizedTest
+    @MethodSource("names")
+    void agreesAtPoints(String name) {
+        var density = Composites.named().get(name);
+        int checked = 0;
+        for (var row : rows(name)) {
+            if (!row[0].equals("at") || Math.min(Double.parseDouble(row[5]), Double.parseDouble(row[6])) < 1e-299) {
+                continue;
+            }
+            checked++;
+            double x = Double.parseDouble(row[1]);
+            double pdf = Double.parseDouble(row[3]);
+            double rounding = 3 * 0x1p-53 * Math.abs(x) * pdf;
+            double cdf = Double.parseDouble(row[5]);
+            double survival = Double.parseDouble(row[6]);
+            assertEquals(cdf, density.cdf(x), 1e-12 * cdf + rounding, () -> name + ", cdf at " + x);
+            assertEquals(survival, density.survival(x), 1e-12 * survival + rounding, () -> name + ", survival at " + x);
+            double steep = 1e-12 + rounding / Math.min(cdf, survival);
+            double log = Double.parseDouble(row[4]);
+            assertEquals(log, density.logPdf(x), steep * Math.max(1, Math.abs(log)), () -> name + ", log pdf at " + x);
+            if (pdf > 1e-290) {
+                assertEquals(pdf, density.pdf(x), steep * pdf, () -> name + ", pdf at " + x);
+            }
+        }
+        assertTrue(checked > 0);
+    }
+
+    @ParameterizedTest
+    @MethodSource("names")
+    void agreesInBothDirections(String name) {
+        var density = Composites.named().get(name);
+        int checked = 0;
+        for (var row : rows(name)) {
+            if (!row[0].equals("inverse")) {
+                continue;
+            }
+            double p = Double.parseDouble(row[5]);
+            if (density instanceof Truncated t && p * t.keptMass() < 1e-300) {
+                continue;
+            }
+            checked += close(density, row[1], density.quantile(p), p, name + ", quantile of " + p);
+            checked += close(density, row[2], density.upperQuantile(p), p, name + ", upper quantile of " + p);
+        }
+        assertTrue(checked > 0);
+    }
+
+    private static int close(Density density, String text, double got, double mass, String what) {
+        if (text.isEmpty()) {
+            return 0;
+        }
+        double expected = Double.parseDouble(text);
+        double pdf = density.pdf(expected);
+        double slack = 1e-12 * Math.abs(expected) + (pdf > 0 ? 1e-12 * mass / pdf : 0);
+        assertEquals(expected, got, slack, what);
+        return 1;
+    }
+
+    /// Relative 1e-12; a skewness of nearly 0 absolutely.
+    @ParameterizedTest
+    @MethodSource("names")
+    void agreesWithMoments(String name) {
+        var density = Composites.named().get(name);
+        var row = rows("moments/" + name).getFirst();
+        double mean = Double.parseDouble(row[0]);
+        double variance = Double.parseDouble(row[1]);
+        double rounding = 4 * 0x1p-53 * Math.abs(mean) / Math.sqrt(variance);
+        assertEquals(mean, density.mean(), 1e-12 * (Math.abs(mean) + Math.sqrt(variance)), "mean");
+        assertEquals(variance, density.variance(), (1e-12 + rounding) * variance, "variance");
+        near(Double.parseDouble(row[2]), density.skewness(), rounding, "skewness");
+        near(Double.parseDouble(row[3]), density.excessKurtosis(), rounding, "excess kurtosis");
+    }
+
+    private static void near(double expected, double got, double rounding, String what) {
+        assertEquals(expected, got, (1e-11 + 10 * rounding) * Math.max(1, Math.abs(expected)), what);
+    }
+
+    @ParameterizedTest
+    @CsvSource(
+            delimiter = '|',
+            value = {
+                "normal(mean=0.0, sd=1.0) truncated to [0.5 | 0 | 1 | .5 | 2",
+                "normal(mean=0.0, sd=1.0) truncated to [8 | 0 | 1 | 8 | Infinity",
+                "normal(mean=10.0, sd=2.0) truncated to [9 | 10 | 2 | 9 | 11"
+            })
+    void agreesWithTheReferenceSet(String label, double mean, double sd, double low, double high) {
+        var density = Truncated.of(new Normal(mean, sd), low, high);
+        double relative = ReferenceValues.relativeTolerance("dist-truncated-normal");
+        for (JsonNode expected :
+                ReferenceValues.caseOf("dist-truncated-normal", label).required("expected")) {
+            String name = expected.required("name").asString();
+            double number = expected.required("value").asDouble();
+            double slack = name.equals("skewness") && number == 0 ? 1e-12 : relative * Math.abs(number);
+            assertEquals(number, value(density, name), slack, () -> density + ", " + name);
+        }
+    }
+
+    private static double value(Density density, String name) {
+        double at = name.endsWith(")")
+                ? Double.parseDouble(name.substring(name.indexOf('(') + 1, name.length() - 1))
+                : Double.NaN;
+        return switch (name.replaceAll("\\(.*", "")) {
+            case "mean" -> density.mean();
+            case "variance" -> density.variance();
+            case "skewness" -> density.skewness();
+            case "excess_kurtosis" -> density.excessKurtosis();
+            case "pdf" -> density.pdf(at);
+            case "cdf" -> density.cdf(at);
+            case "sf" -> density.survival(at);
+            case "quantile" -> density.quantile(at);
+            case "upper_quantile" -> density.upperQuantile(at);
+            default -> throw new AssertionError(name);
+        };
+    }
+
+    /// Phi(-8) and Phi(-30): mpmath, erfc(8 / sqrt 2) / 2 and erfc(30 / sqrt 2) / 2.
+    @Test
+    void saysWhatIsKept() {
+        assertEquals(6.220960574271784e-16, Truncated.of(NORMAL, 8, INFINITY).keptMass(), 1e-27);
+        assertEquals(
+                4.906713927148187e-198, Truncated.of(NORMAL, -INFINITY, -30).keptMass(), 1e-209);
+        assertEquals(1, Truncated.of(new Uniform(0, 1), -1, 2).keptMass());
+    }
+
+    @Test
+    void refusesAnIntervalThatKeepsNothing() {
+        refused("the lower end is NaN but must be a number, or -∞", NORMAL, Double.NaN, 1);
+        refused("the upper end is NaN but must be a number, or ∞", NORMAL, 0, Double.NaN);
+        refused("the upper end is 1 but must be greater than the lower one, 2", NORMAL, 2, 1);
+        refused("the upper end is 2 but must be greater than the lower one, 2", NORMAL, 2, 2);
+        refused("the interval from 2 to 3 misses all values of the density", new Uniform(0, 1), 2, 3);
+        refused("the interval from 50 to ∞ keeps nothing", NORMAL, 50, INFINITY);
+    }
+
+    private static void refused(String words, Density density, double low, double high) {
+        var refusal = assertThrows(Refusal.class, () -> Truncated.of(density, low, high));
+        assertEquals(words, refusal.problems().getFirst().primary());
+        assertTrue(refusal.problems().getFirst().detail().isPresent());
+    }
+
+    @Test
+    void refusesWeightsAndPartsThatDoNotGoTogether() {
+        refused("the weights add up to 0.75 but must add up to 1", new Part(0.5, NORMAL), new Part(0.25, NORMAL));
+        refused("the weight of part 2 is -1 but must be greater than 0", new Part(2, NORMAL), new Part(-1, NORMAL));
+        refused("a mixture has no parts");
+        assertThrows(Refusal.class, () -> new Shifted(NORMAL, 0, 0));
+        assertThrows(Refusal.class, () -> new Shifted(NORMAL, Double.NaN, 1));
+    }
+
+    private static void refused(String words, Part... parts) {
+        var refusal = assertThrows(Refusal.class, () -> new Mixture(List.of(parts)));
+        assertEquals(words, refusal.problems().getFirst().primary());
+    }
+
+    @Test
+    void shareTheTablesOfTheirShapes() {
+        assertEquals(
+                Curves.of(NORMAL.standard()),
+                Curves.of(new Shifted(NORMAL, 5, -2).standardised().shape()));
+        assertEquals(
+                Truncated.of(NORMAL, -1, 2).standardised().shape(),
+                Truncated.of(new Normal(10, 4), 6, 18).standardised().shape());
+        assertEquals(
+                Composites.mixture(0.25, NORMAL, 0.75, new Normal(1, 2))
+                        .standardised()
+                        .shape(),
+                Composites.mixture(0.25, new Normal(2, 2), 0.75, new Normal(4, 4))
+                        .standardised()
+                        .shape());
+    }
+
+    @Test
+    void noDrawFallsBeyondTheEnds() {
+        var density = Truncated.of(new Normal(0.1, 0.3), 0.7, 0.9);
+        var u = new double[] {0x1p-53, 1e-10, 0.5, 1 - 1e-10, 1 - 0x1p-53};
+        Inversion.of(density).fill(u, u, u.length);
+        for (double x : u) {
+            assertTrue(x >= 0.7 && x <= 0.9, () -> "draw " + x);
+        }
+    }
+
+    @Test
+    void tailsAndMomentsThatDoNotExist() {
+        var cauchy = new Student(1, 0, 1);
+        assertEquals(
+                new TailOrders(INFINITY, 1), Truncated.of(cauchy, 0, INFINITY).tailOrders());
+        assertEquals(INFINITY, Truncated.of(cauchy, 0, INFINITY).mean());
+        assertTrue(Double.isFinite(Truncated.of(cauchy, 0, 1000).excessKurtosis()));
+        assertEquals(
+                new TailOrders(1, 1),
+                Composites.mixture(0.5, NORMAL, 0.5, cauchy).tailOrders());
+        assertTrue(Double.isNaN(Composites.mixture(0.5, NORMAL, 0.5, cauchy).mean()));
+    }
+}
