@@ -40,7 +40,7 @@ public enum FamilyGroup {
             "half-normal",
             "chi-square",
             "f",
-            "loglogistic",
+            "log-logistic",
             "inverse-gamma",
             "inverse-gaussian",
             "birnbaum-saunders"),

@@ -56,6 +56,7 @@ public record Portrait(
     private static final double CUT = 6;
     private static final double FAR_CUT = 40;
     private static final double MARGIN = .04;
+    private static final double WIDEST = .3;
     private static final double[] MASSES = {FAR_TAIL, .001, .01, .05, .25};
     /// Beyond a chance by more than its rounding, by less than the probability of any value.
     private static final double STEP = 1e-12;
@@ -84,6 +85,11 @@ public record Portrait(
 
     public double sd() {
         return Math.sqrt(variance);
+    }
+
+    /// Distance of the quartiles.
+    public double spread() {
+        return density.quantile(.75) - density.quantile(.25);
     }
 
     public Support support() {
@@ -226,16 +232,21 @@ public record Portrait(
             boolean light = Double.isInfinite(density.tailOrders().least()) || !(spread > 0);
             double reach = light ? Double.POSITIVE_INFINITY : cut * spread;
             double to = upper > quantile ? upper : Math.min(density.support().high(), after(density, upper));
-            return around(Math.max(quantile, median - reach), Math.min(to, median + reach));
+            double from = Math.max(quantile, median - reach);
+            return around(from, Math.min(to, median + reach), .5 * (after(density, from) - from));
         }
         double low = end(quantile, median - cut * spread, density.support().low(), -spread);
         double high = end(upper, median + cut * spread, density.support().high(), spread);
-        return low < high ? around(low, high) : Optional.empty();
+        return low < high ? around(low, high, 0) : Optional.empty();
     }
 
-    /// With a margin, which is wide where there is but one value.
-    private static Optional<Support> around(double low, double high) {
-        double margin = high > low ? MARGIN * (high - low) : Math.max(.5, MARGIN * Math.abs(low));
+    /// With a margin, which is wide where there are but few values.
+    ///
+    /// @param half half the distance of two values; 0 where they lie close
+    private static Optional<Support> around(double low, double high, double half) {
+        double margin = high > low
+                ? Math.max(MARGIN * (high - low), Math.min(half, WIDEST * (high - low)))
+                : Math.max(.5, MARGIN * Math.abs(low));
         return Double.isFinite(high - low) ? Optional.of(new Support(low - margin, high + margin)) : Optional.empty();
     }
 

@@ -8,6 +8,8 @@ import java.util.Locale;
 /// What a portrait says in words and digits, the same in the window and in the commands.
 public final class PortraitText {
     private static final int DIGITS = 6;
+    private static final int DIGITS_OF_SPREAD = 4;
+    private static final int MOST_DIGITS = 15;
 
     private PortraitText() {}
 
@@ -16,7 +18,10 @@ public final class PortraitText {
 
     public static List<Row> moments(Portrait portrait) {
         return List.of(
-                new Row("mean", moment(portrait.mean()), ""),
+                new Row(
+                        "mean",
+                        Double.isFinite(portrait.mean()) ? value(portrait, portrait.mean()) : moment(portrait.mean()),
+                        ""),
                 new Row("sd", moment(portrait.sd()), "standard deviation"),
                 new Row("variance", moment(portrait.variance()), ""),
                 new Row("skewness", moment(portrait.skewness()), "0 for a symmetric density"),
@@ -28,9 +33,21 @@ public final class PortraitText {
         return portrait.quantiles().stream()
                 .map(q -> new Row(
                         below(q),
-                        Significant.text(q.value(), DIGITS),
+                        value(portrait, q.value()),
                         q.above() < .01 ? "exceeded " + oneIn(q.above()) : q.below() == .5 ? "median" : ""))
                 .toList();
+    }
+
+    private static String value(Portrait portrait, double x) {
+        return Significant.text(x, digits(portrait, x));
+    }
+
+    /// Six, and more where values far from 0 differ only in later ones.
+    private static int digits(Portrait portrait, double x) {
+        double apart = StrictMath.log10(Math.abs(x) / portrait.spread());
+        return Double.isFinite(apart)
+                ? Math.clamp((int) Math.ceil(apart) + DIGITS_OF_SPREAD, DIGITS, MOST_DIGITS)
+                : DIGITS;
     }
 
     private static String below(Portrait.Quantile q) {
@@ -57,7 +74,8 @@ public final class PortraitText {
         String own = portrait.isDiscrete() ? " has " + chance(at.pdf(), 1 - at.pdf()) + ";" : ":";
         String below = chance(at.below(), at.above()) + (portrait.isDiscrete() ? " up to it, " : " below, ");
         String oneIn = at.above() > 0 && at.above() < .5 ? " (" + oneIn(at.above()) + ")" : "";
-        return Significant.text(x, 5) + unit + own + " " + below + chance(at.above(), at.below()) + " above" + oneIn;
+        return Significant.text(x, digits(portrait, x) - 1) + unit + own + " " + below + chance(at.above(), at.below())
+                + " above" + oneIn;
     }
 
     /// As `7.3 %`, `3.2e-7`, `1 − 3.2e-7`.

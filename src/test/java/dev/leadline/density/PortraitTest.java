@@ -170,6 +170,27 @@ class PortraitTest {
         assertEquals(1, bars.stream().mapToDouble(Portrait.Bar::chance).sum(), 1e-12);
     }
 
+    /// A mass of 50.000623 g known to .000025 g: its quantiles differ from the sixth digit on. The normal value that
+    /// one
+    /// in twenty exceeds is 1.644854.
+    @Test
+    void digitsShowWhatDiffers() {
+        var portrait = Portrait.of(new Normal(50.000623, 25e-6));
+        var quantiles = PortraitText.quantiles(portrait);
+        assertEquals("50.000623", quantiles.get(5).value());
+        assertEquals(
+                50.000623 + 1.644854 * 25e-6,
+                Double.parseDouble(quantiles.get(7).value()),
+                1e-8);
+        assertEquals("50.000623", PortraitText.moments(portrait).getFirst().value());
+        assertTrue(PortraitText.reading(portrait, 50.00065, " g").startsWith("50.00065 g: 86 % below, 14 % above"));
+        assertEquals(
+                "26.0008",
+                PortraitText.moments(Portrait.of(new Gumbel(24.5, 2.6)))
+                        .getFirst()
+                        .value());
+    }
+
     static Stream<Density> examples() {
         return Examples.all();
     }

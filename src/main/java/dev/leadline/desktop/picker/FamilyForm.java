@@ -91,7 +91,7 @@ final class FamilyForm implements Form {
         list.getChildren().clear();
         String words = search.getText().strip().toLowerCase(Locale.ROOT);
         FamilyGroup.of(Catalogue.families()).forEach((group, families) -> {
-            var found = families.stream().filter(f -> isFound(f, words)).toList();
+            var found = families.stream().filter(f -> isFound(group, f, words)).toList();
             if (!found.isEmpty()) {
                 var head = Labels.of(group.title());
                 head.getStyleClass().add("catalogue-group");
@@ -106,8 +106,8 @@ final class FamilyForm implements Form {
         }
     }
 
-    private static boolean isFound(Family family, String words) {
-        String text = (family.name() + " " + family.use()).toLowerCase(Locale.ROOT);
+    private static boolean isFound(FamilyGroup group, Family family, String words) {
+        String text = (family.name() + " " + family.use() + " " + group.title()).toLowerCase(Locale.ROOT);
         return java.util.Arrays.stream(words.split("\\s+")).allMatch(text::contains);
     }
 

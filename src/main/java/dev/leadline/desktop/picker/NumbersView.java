@@ -36,7 +36,7 @@ final class NumbersView extends VBox {
         setVisible(portrait.isPresent());
         portrait.ifPresent(p -> {
             fill(moments, "moments", "", PortraitText.moments(p));
-            fill(quantiles, "chance below", unit, PortraitText.quantiles(p));
+            fill(quantiles, p.isDiscrete() ? "chance up to" : "chance below", unit, PortraitText.quantiles(p));
             sentences.getChildren().clear();
             p.warnings().forEach(words -> sentences.getChildren().add(sentence(words, "density-warning")));
             p.tails().forEach(words -> sentences.getChildren().add(sentence(words, Styles.QUIET)));
