@@ -17,6 +17,9 @@
 /// peaks, `Refinement` cuts the line into pieces, and each is a polynomial (`Smooth`) or a power of the
 /// distance (`Flank`).
 ///
+/// Dependence: a [Copula][dev.leadline.density.Copula] turns independent probabilities into tied ones, whatever the
+/// densities; a [Measure][dev.leadline.density.Measure] finds the correlation to draw with for the one that was stated.
+///
 /// How to add a family:
 /// 1. One file, `Name.java`: a record whose components are the parameters as the project file calls them, with an
 ///    `Entry` for each way to enter it, a `FAMILY` that describes it, and a nested `Standard`, the shape at location 0

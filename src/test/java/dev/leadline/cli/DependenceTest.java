@@ -166,6 +166,24 @@ class DependenceTest {
         assertEquals(latent, answer.required("estimate").asDouble(), 4e-3 * 1.4);
     }
 
+    /// Ranks of two values hardly tell anything; pearson speaks of the values.
+    @Test
+    void speaksOfTheCopulaBehindADiscreteInput() throws IOException {
+        Files.writeString(folder.resolve("coin.csv"), "side\n0\n1\n");
+        String inputs = "{\"name\": \"x\", \"density\": {\"family\": \"normal\", \"mean\": 0, \"sd\": 1}},"
+                + " {\"name\": \"coin\", \"density\": {\"data\": \"coin.csv\", \"column\": \"side\"}}";
+        String dependence = "{\"copula\": \"gaussian\", \"pairs\": [{\"of\": [\"x\", \"coin\"], \"%s\": 0.5}]}";
+        String ask = "{\"mean\": \"x*coin\"}";
+        var ranks = leadline("check", project(inputs, dependence.formatted("spearman"), ask), "--json");
+        assertTrue(ranks.err().contains("spearman speaks of the copula behind coin"), ranks.err());
+        var values = leadline("check", project(inputs, dependence.formatted("pearson"), ask), "--json");
+        assertTrue(!values.err().contains("copula behind"), values.err());
+        var pair = values.json().required("dependence").required("pairs").get(0);
+        // the correlation of a normal and its sign is sqrt(2/π) of that of the normals
+        assertEquals(.5 / Math.sqrt(2 / Math.PI), pair.required("latent").asDouble(), 2e-4);
+        assertEquals(.5, pair.required("achieved").asDouble(), 4 / Math.sqrt(131_072));
+    }
+
     @Test
     void looksAtATiedDraw() throws IOException {
         String ask = "{\"mean\": \"x*y\"}";

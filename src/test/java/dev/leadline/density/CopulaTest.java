@@ -116,6 +116,26 @@ class CopulaTest {
     }
 
     @Test
+    void keepsTheDensityOfEachInputOfTheStudentCopula() {
+        int cells = 64;
+        double[][] u = new double[3][cells * cells * cells];
+        for (int row = 0; row < u[0].length; row++) {
+            u[0][row] = (row % cells + .5) / cells;
+            u[1][row] = (row / cells % cells + .5) / cells;
+            u[2][row] = (row / cells / cells + .5) / cells;
+        }
+        new Copula(Mixing.student(3), Correlations.none(2).with(0, 1, .8)).tie(u, all(2), u[0].length);
+        for (int i = 0; i < 2; i++) {
+            for (int power = 1; power <= 4; power++) {
+                int k = power;
+                double moment =
+                        Arrays.stream(u[i]).map(p -> Math.pow(p, k)).average().orElseThrow();
+                assertEquals(1.0 / (k + 1), moment, 1e-3, "moment " + k);
+            }
+        }
+    }
+
+    @Test
     void theFirstInputKeepsItsStrata() {
         double[][] u = grid(64);
         double[] first = u[0].clone();

@@ -21,6 +21,7 @@ final class Samples {
         TITLES.put("mooring-line", "Mooring line: a rare event");
         TITLES.put("dredging-volume", "Dredging volume: an integral over an area");
         TITLES.put("tide-gauge", "Tide gauge: a correction and its uncertainty");
+        TITLES.put("ferry-fuel", "Ferry fuel: inputs that go together");
         TITLES.put("quay-lighting", "Quay lighting: a smooth integral");
     }
 
