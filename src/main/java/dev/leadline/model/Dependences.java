@@ -328,7 +328,7 @@ final class Dependences {
                 String path = "%s.pairs[%d].%s".formatted(PATH, i, tie.measure().word());
                 notes.add(Problem.of("%s speaks of the copula behind %s"
                                 .formatted(tie.measure().word(), String.join(" and ", discrete)))
-                        .because("Equal values share a rank, so that the values themselves are less correlated.")
+                        .because("Equal values share a rank, so that the values themselves are correlated otherwise.")
                         .tryThis("Look at what is achieved, or give pearson, which speaks of the values.")
                         .at(Place.of(path)));
             }
