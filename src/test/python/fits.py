@@ -136,4 +136,4 @@ with open("src/test/resources/density/fits.csv", "w") as out:
             parameters, log_likelihood = fitted(family, x)
             ks, ad = distances(family, FAMILIES[family][1](parameters), x)
             shown = " ".join(f"{k}={v!r}" for k, v in ((k, float(v)) for k, v in parameters.items()))
-            out.write(f"fit,{name},{family},{shown},{float(log_likelihood)!r},{float(ks)!r},{float(ad)!r}\n")
+            out.write(f"fit,{name},{family},{shown},{float(log_likelihood)!r},{float(ks)!r},{float(ad)!r}\n".replace("nan", "NaN"))

@@ -19,6 +19,7 @@ final class Samples {
 
     static {
         TITLES.put("mooring-line", "Mooring line: a rare event");
+        TITLES.put("berth-delay", "Berth delay: a heavy tail, and inputs from data");
         TITLES.put("dredging-volume", "Dredging volume: an integral over an area");
         TITLES.put("tide-gauge", "Tide gauge: a correction and its uncertainty");
         TITLES.put("ferry-fuel", "Ferry fuel: inputs that go together");
