@@ -1,13 +1,16 @@
 package dev.leadline.density;
 
+import java.lang.ref.WeakReference;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.FutureTask;
 
-/// The curves of the shapes used last, so that inputs of one shape share one. Safe for all threads: a shape that two
-/// threads ask for at once is built once, by the thread that asked first.
+/// The curves of the shapes that are in use, and of those used last, so that inputs of one shape share one. Safe for
+/// all
+/// threads: a shape that two threads ask for at once is built once, by the thread that asked first.
 final class Curves {
     /// About 160 kB each; at most 6 MB.
     private static final int KEPT = 128;
@@ -21,12 +24,18 @@ final class Curves {
         }
     };
 
+    /// Curves that someone draws from, however many there are.
+    private static final Map<Density, WeakReference<Curve>> IN_USE = new HashMap<>();
+
+    /// When those no longer in use are next forgotten: as often as their number doubles.
+    private static int full = KEPT;
+
     private Curves() {}
 
     static Curve of(Density shape) {
         FutureTask<Curve> task;
         synchronized (LAST_USED) {
-            task = LAST_USED.computeIfAbsent(shape, _ -> new FutureTask<>(() -> build(shape)));
+            task = LAST_USED.computeIfAbsent(shape, _ -> new FutureTask<>(() -> inUseOrBuilt(shape)));
         }
         task.run();
         try {
@@ -37,6 +46,25 @@ final class Curves {
         } catch (ExecutionException e) {
             throw new IllegalStateException("no table of " + shape, e.getCause());
         }
+    }
+
+    private static Curve inUseOrBuilt(Density shape) {
+        synchronized (IN_USE) {
+            var known = IN_USE.get(shape);
+            var curve = known == null ? null : known.get();
+            if (curve != null) {
+                return curve;
+            }
+        }
+        var built = build(shape);
+        synchronized (IN_USE) {
+            if (IN_USE.size() >= full) {
+                IN_USE.values().removeIf(reference -> reference.get() == null);
+                full = Math.max(KEPT, 2 * IN_USE.size());
+            }
+            IN_USE.put(shape, new WeakReference<>(built));
+        }
+        return built;
     }
 
     static Curve build(Density shape) {

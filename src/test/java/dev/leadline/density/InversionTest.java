@@ -193,6 +193,17 @@ class InversionTest {
         assertTrue(Curves.of(new Normal(3, 4).standard()) == Curves.of(new Normal(-1, 0.1).standard()));
     }
 
+    /// As the lanes of a run do, one after the other, with more inputs than are kept.
+    @Test
+    void aTableInUseIsNotBuiltAgain() {
+        var first = new Triangular(0, 1, 3).standard();
+        var inUse = Curves.of(first);
+        for (int i = 2; i < 300; i++) {
+            Curves.of(new Triangular(0, i, 300).standard());
+        }
+        assertTrue(inUse == Curves.of(first));
+    }
+
     /// Moving a probability by less than 1.1e-16 stays far within the error that a table may have.
     @Test
     void probabilitiesNearerTheEndsThanAnyDrawnCountAsTheNearestDrawn() {

@@ -80,9 +80,6 @@ final class KnownViewModel {
         }
         var found = suggestion.get();
         at.project().forget(at.path());
-        at.edit(
-                "(" + knowledge.word() + ")",
-                new Member(found.family(), found.parameters()),
-                found.provenance());
+        at.edit("(" + knowledge.word() + ")", new Member(found.family(), found.parameters()), found.provenance());
     }
 }
