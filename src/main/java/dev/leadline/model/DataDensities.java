@@ -36,7 +36,7 @@ final class DataDensities {
         boolean told = isTold(data, path);
         if (data.fitted().isPresent()) {
             // the data are read all the same: they are what the parameters were fitted to
-            var member = densities.of(DensityDraft.of(data.fitted().get()), path + ".fitted");
+            var member = densities.of(DensityDraft.of(data.fitted().get()), "", path + ".fitted");
             return column.isPresent() && told ? member : Optional.empty();
         }
         return column.filter(_ -> told).flatMap(read -> drawn(data, read, path));

@@ -25,7 +25,8 @@ final class Inputs {
     }
 
     /// Those that have no problem.
-    static List<Input> of(List<InputDraft> drafts, DataFiles files, Findings findings) {
+    static List<Input> of(Draft draft, DataFiles files, Findings findings) {
+        List<InputDraft> drafts = draft.inputs();
         if (drafts.isEmpty()) {
             findings.add(
                     "$.inputs",
@@ -33,7 +34,7 @@ final class Inputs {
                     "A question draws the values of its inputs at random.",
                     "Add a row with a name and a density.");
         }
-        var inputs = new Inputs(new Densities(files, findings), findings);
+        var inputs = new Inputs(new Densities(files, Workings.constants(draft), findings), findings);
         List<Input> made = new ArrayList<>();
         for (int i = 0; i < drafts.size(); i++) {
             inputs.input(drafts.get(i), "$.inputs[" + i + "]").ifPresent(made::add);
@@ -49,7 +50,7 @@ final class Inputs {
     private Optional<Input> input(InputDraft draft, String path) {
         return switch (draft.from()) {
             case From.Density(var density) ->
-                densities.of(density, path + ".density").map(drawn -> input(draft, drawn, new Role.Random()));
+                densities.of(density, Workings.composed(draft.name()), path + ".density").map(drawn -> input(draft, drawn, new Role.Random()));
             case From.Range(double low, double high, var drawFrom) -> range(draft, low, high, drawFrom, path);
         };
     }
@@ -83,7 +84,7 @@ final class Inputs {
         }
         var ends = new LinkedHashMap<>(Map.of("from", low, "to", high));
         return densities
-                .of(DensityDraft.of(UNIFORM, ends), path + ".range")
+                .of(DensityDraft.of(UNIFORM, ends), "", path + ".range")
                 .map(drawn -> input(draft, drawn, new Role.Range(low, high)));
     }
 
@@ -97,7 +98,7 @@ final class Inputs {
                     "Add \"drawFrom\", for the whole line say {\"family\": \"student\", \"dof\": 4, \"location\": 0, \"scale\": 1}.");
             return Optional.empty();
         }
-        var drawn = densities.of(drawFrom.get(), path + ".drawFrom");
+        var drawn = densities.of(drawFrom.get(), Workings.composed(draft.name()), path + ".drawFrom");
         if (drawn.isPresent()) {
             Support support = drawn.get().support();
             if (!(support.low() <= low && support.high() >= high)) {

@@ -42,7 +42,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         var findings = new Findings();
         checkSizes(draft, findings);
         SortedMap<String, String> read = new TreeMap<>();
-        List<Input> inputs = Inputs.of(draft.inputs(), noting(files, read), findings);
+        List<Input> inputs = Inputs.of(draft, noting(files, read), findings);
         List<Ask> asks = Asks.of(draft, findings);
         Optional<Working> working = Workings.of(draft, findings);
         working.ifPresent(formulas -> Asks.checkEvents(draft, formulas, findings));

@@ -44,6 +44,15 @@ final class Workings {
                 .toList();
     }
 
+    /// Values of the constants by name; what is wrong with them is said where the formulas are checked.
+    static SequencedMap<String, Double> constants(Draft draft) {
+        var constants = new LinkedHashMap<String, Double>();
+        draft.constants().stream()
+                .filter(constant -> Double.isFinite(constant.value()))
+                .forEach(constant -> constants.putIfAbsent(composed(constant.name()), constant.value()));
+        return constants;
+    }
+
     /// The form in which names are compared.
     static String composed(String name) {
         return Normalizer.normalize(name, Normalizer.Form.NFC);
