@@ -1,5 +1,6 @@
 package dev.leadline.model;
 
+import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 
@@ -9,7 +10,8 @@ public interface DataFiles {
     DataFiles NONE = (file, column) -> {
         throw new Refusal(Problem.of("the data file \"%s\" has no folder to be found in".formatted(file))
                 .because("Data are read only below the folder of the project.")
-                .tryThis("Save the project beside its data first."));
+                .tryThis("Save the project beside its data first.")
+                .at(Place.of("data")));
     };
 
     /// @throws Refusal where there is no such file or column, or it holds what is no number; at the paths `data` and

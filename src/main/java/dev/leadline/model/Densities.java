@@ -88,7 +88,8 @@ final class Densities {
     private Optional<Density> truncated(Density density, DensityDraft draft, String path) {
         return draft.truncate().isEmpty()
                 ? Optional.of(density)
-                : draft.truncate().flatMap(ends -> findings.made(
+                : draft.truncate()
+                        .flatMap(ends -> findings.made(
                                 _ -> path + ".truncate", () -> Truncated.of(density, ends.low(), ends.high())));
     }
 

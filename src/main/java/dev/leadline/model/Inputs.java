@@ -50,7 +50,9 @@ final class Inputs {
     private Optional<Input> input(InputDraft draft, String path) {
         return switch (draft.from()) {
             case From.Density(var density) ->
-                densities.of(density, Workings.composed(draft.name()), path + ".density").map(drawn -> input(draft, drawn, new Role.Random()));
+                densities
+                        .of(density, Workings.composed(draft.name()), path + ".density")
+                        .map(drawn -> input(draft, drawn, new Role.Random()));
             case From.Range(double low, double high, var drawFrom) -> range(draft, low, high, drawFrom, path);
         };
     }

@@ -20,7 +20,7 @@ import java.util.regex.Pattern;
 public record Reading(Draft draft, DataFiles files, List<Problem> problems, boolean asksInList) {
 
     private static final Pattern IN_DENSITY = Pattern.compile("(.*\\.(?:density|drawFrom))\\.[^.]+");
-    private static final Pattern IN_RANGE = Pattern.compile("(.*\\.range)\\[\\d+]");
+    private static final Pattern IN_RANGE = Pattern.compile("(.*\\.(?:range|truncate))\\[\\d+]");
 
     public Reading {
         problems = List.copyOf(problems);
