@@ -43,7 +43,7 @@ final class Inputs {
     }
 
     static Optional<Input> of(Draft draft, int index, DataFiles files, Findings findings) {
-        return new Inputs(new Densities(files, findings), findings)
+        return new Inputs(new Densities(files, Workings.constants(draft), findings), findings)
                 .input(draft.inputs().get(index), "$.inputs[" + index + "]");
     }
 

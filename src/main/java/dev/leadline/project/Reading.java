@@ -55,11 +55,11 @@ public record Reading(Draft draft, DataFiles files, List<Problem> problems, bool
     private static List<String> lacking(String path) {
         Matcher density = IN_DENSITY.matcher(path);
         Matcher end = IN_RANGE.matcher(path);
-        if (density.matches()) {
-            return List.of(path, density.group(1) + ".family");
-        }
         if (end.matches()) {
             return List.of(end.group(1));
+        }
+        if (density.matches()) {
+            return List.of(path, density.group(1) + ".family");
         }
         return path.startsWith("$.reference.") ? List.of(path, "$.reference.value") : List.of(path);
     }
