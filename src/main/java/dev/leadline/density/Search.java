@@ -18,7 +18,7 @@ import org.apache.commons.math3.optim.nonlinear.scalar.noderiv.SimplexOptimizer;
 /// Looks for the parameters of the greatest likelihood by the method of Nelder and Mead, over transforms that are free
 /// of bounds; begins again where it ended until nothing is gained.
 ///
-/// Found: parameters to about 1e-6 of their standard errors times the root of n (`FitsTest`).
+/// Found: parameters to 2e-6, relative, or of 1 where they are smaller (`FitsTest`).
 final class Search {
     private static final double PRECISION = 1e-14;
     private static final double STEP = 0.2;
