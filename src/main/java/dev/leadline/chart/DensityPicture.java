@@ -82,7 +82,7 @@ public final class DensityPicture {
                 switch (view) {
                     case PDF -> portrait.isDiscrete() ? "probability" : "density";
                     case CDF -> "chance of a value up to this one";
-                    case TAILS -> "chance of a greater value (line), of a smaller one (dashes)";
+                    case TAILS -> "chance of a greater value (line), of one up to it (dashes)";
                     case DATA_AGAINST_DENSITY -> "data, in order, against the density's own values";
                 },
                 yTicks);

@@ -80,7 +80,7 @@ public final class PickerViewModel {
         this.dark = dark;
         this.background = background;
         inputs.opened().addListener((_, _, input) -> open(input));
-        project.draft().addListener((_, _, _) -> draw());
+        project.draft().addListener((_, _, _) -> follow());
         dark.addListener((_, _, _) -> draw());
         view.addListener((_, _, _) -> draw());
     }
@@ -90,11 +90,23 @@ public final class PickerViewModel {
         shown = Optional.empty();
         drawn.set(Optional.empty());
         outdated.set(false);
+        place(input);
+        draw();
+    }
+
+    private void place(OptionalInt input) {
         at.set(
                 input.isPresent() && isChosen(input.getAsInt())
                         ? Optional.of(DensityAt.input(project, input.getAsInt()))
                         : Optional.empty());
         way.set(at.get().flatMap(place -> Way.of(place.now())));
+    }
+
+    /// A range may have got an end, or lost it.
+    private void follow() {
+        if (inputDraft().isPresent() && at.get().isPresent() != isChosen(input().getAsInt())) {
+            place(input());
+        }
         draw();
     }
 

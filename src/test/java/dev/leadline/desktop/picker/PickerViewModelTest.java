@@ -6,8 +6,10 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
+import dev.leadline.desktop.working.Edits;
 import dev.leadline.desktop.working.InputsViewModel;
 import dev.leadline.desktop.working.ProjectViewModel;
+import dev.leadline.model.Draft;
 import dev.leadline.project.DataFolder;
 import java.nio.file.Path;
 import java.util.Optional;
@@ -85,6 +87,25 @@ class PickerViewModelTest {
         open();
         assertTrue(picker.at().get().isEmpty());
         assertEquals(1, mean());
+        project.edit("$.inputs[0].range", PickerViewModelTest::withoutEnd);
+        assertEquals("$.inputs[0].drawFrom", picker.at().get().orElseThrow().path());
+        assertTrue(picker.way().get().isEmpty());
+        project.undo();
+        assertTrue(picker.at().get().isEmpty());
+    }
+
+    private static Draft withoutEnd(Draft d) {
+        return Edits.inputs(
+                d,
+                Edits.changed(
+                        d.inputs(),
+                        0,
+                        in -> new Draft.InputDraft(
+                                in.name(),
+                                in.unit(),
+                                in.label(),
+                                in.provenance(),
+                                new Draft.From.Range(0, Double.POSITIVE_INFINITY, Optional.empty()))));
     }
 
     @Test
@@ -92,10 +113,7 @@ class PickerViewModelTest {
         inputs.close();
         project.edit(
                 "$.inputs",
-                d -> dev.leadline.desktop.working.Edits.inputs(
-                        d,
-                        dev.leadline.desktop.working.Edits.with(
-                                d.inputs(), d.inputs().getFirst())));
+                d -> Edits.inputs(d, Edits.with(d.inputs(), d.inputs().getFirst())));
         inputs.open(1);
         project.undo();
         assertTrue(inputs.opened().get().isEmpty());
