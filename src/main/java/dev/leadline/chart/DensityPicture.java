@@ -33,6 +33,7 @@ public final class DensityPicture {
         DATA_AGAINST_DENSITY
     }
 
+    private static final double PEAK = 25;
     private static final double LEAST = 1e-6;
     private static final float[] DASHED = {6, 4};
 
@@ -65,7 +66,7 @@ public final class DensityPicture {
         int line = font.getSize() + 8;
         int top = line + 6;
         int bottom = 2 * line + 4;
-        silhouette = Silhouette.of(portrait, over, Math.max(2, width - 80));
+        silhouette = Silhouette.of(portrait, over, Math.max(2, width - 80), PEAK);
         values = values();
         yTicks = view == View.TAILS
                 ? Ticks.powers(values, Math.max(2, (height - top - bottom) / (2 * line)))

@@ -7,6 +7,8 @@ import java.awt.image.BufferedImage;
 
 /// The small drawing of a density in an input's row, without axes.
 public final class DensitySketch {
+    private static final double PEAK = 9;
+
     private DensitySketch() {}
 
     /// @param scale pixels of the image for one of the picture
@@ -19,8 +21,8 @@ public final class DensitySketch {
         g.setStroke(new BasicStroke(1.2f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND));
         g.setClip(plot);
         portrait.shown()
-                .ifPresent(over ->
-                        Silhouette.of(portrait, over, (int) plot.getWidth()).draw(g, plot, over));
+                .ifPresent(over -> Silhouette.of(portrait, over, (int) plot.getWidth(), PEAK)
+                        .draw(g, plot, over));
         g.setClip(null);
         g.setColor(theme.axis());
         g.fill(new Rectangle2D.Double(plot.getX(), plot.getMaxY(), plot.getWidth(), 1));

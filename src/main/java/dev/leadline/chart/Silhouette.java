@@ -18,15 +18,13 @@ import java.util.List;
 /// @param bars stretches of a curve or bars of a discrete density, from the lower end
 /// @param highest height that fills the plot: of a curve a density, of bars a probability
 record Silhouette(List<Bar> bars, boolean discrete, double highest) {
-    /// A peak is cut at so many times the mean height.
-    private static final double PEAK = 9;
-
     /// A higher peak is seen to leave the plot.
     private static final double BEYOND = 1.5;
 
     private static final float FILL = .18f;
 
-    static Silhouette of(Portrait portrait, Support over, int columns) {
+    /// @param peak a higher peak of a curve is cut, at so many times the mean height
+    static Silhouette of(Portrait portrait, Support over, int columns, double peak) {
         if (portrait.isDiscrete()) {
             var bars = portrait.bars();
             return new Silhouette(
@@ -35,7 +33,7 @@ record Silhouette(List<Bar> bars, boolean discrete, double highest) {
         var curve = portrait.curve(over, Math.max(2, columns));
         double length = over.high() - over.low();
         double highest = curve.stream().mapToDouble(Silhouette::height).max().orElse(1);
-        return new Silhouette(curve, false, highest > 0 ? Math.min(PEAK / length, highest) : 1);
+        return new Silhouette(curve, false, highest > 0 ? Math.min(peak / length, highest) : 1);
     }
 
     /// Of a curve the mean density of the stretch.

@@ -11,6 +11,9 @@ public final class PortraitText {
     private static final int DIGITS_OF_SPREAD = 4;
     private static final int MOST_DIGITS = 15;
 
+    /// Less than this part of the spread is rounding.
+    private static final double NOTHING = 1e-13;
+
     private PortraitText() {}
 
     /// @param remark what the value means; often empty
@@ -24,7 +27,7 @@ public final class PortraitText {
                         ""),
                 new Row("sd", moment(portrait.sd()), "standard deviation"),
                 new Row("variance", moment(portrait.variance()), ""),
-                new Row("skewness", moment(portrait.skewness()), "0 for a symmetric density"),
+                new Row("skewness", moment(rounded(portrait.skewness(), 1)), "0 for a symmetric density"),
                 new Row("excess kurtosis", moment(portrait.excessKurtosis()), "0 for the normal density"));
     }
 
@@ -39,7 +42,13 @@ public final class PortraitText {
     }
 
     private static String value(Portrait portrait, double x) {
-        return Significant.text(x, digits(portrait, x));
+        double shown = portrait.support().low() < 0 ? rounded(x, portrait.spread()) : x;
+        return Significant.text(shown, digits(portrait, shown));
+    }
+
+    /// 0 for what is 0 but for rounding.
+    private static double rounded(double x, double size) {
+        return Math.abs(x) < NOTHING * size ? 0 : x;
     }
 
     /// Six, and more where values far from 0 differ only in later ones.

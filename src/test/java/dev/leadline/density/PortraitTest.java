@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.lang.management.ManagementFactory;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
@@ -189,6 +190,24 @@ class PortraitTest {
                 PortraitText.moments(Portrait.of(new Gumbel(24.5, 2.6)))
                         .getFirst()
                         .value());
+    }
+
+    /// By symmetry mean, skewness and median are 0; quadrature leaves some 1e-17 of it.
+    @Test
+    void roundingIsNotShown() {
+        var formula =
+                new TypedText("exp(-abs(s)^3)", Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, List.of(), false);
+        var portrait = Portrait.of(Typed.of(formula, "s", new LinkedHashMap<>()).density());
+        assertEquals("0", PortraitText.moments(portrait).getFirst().value());
+        assertEquals("0", PortraitText.moments(portrait).get(3).value());
+        assertEquals("0", PortraitText.quantiles(portrait).get(5).value());
+        // the smallest value of a positive quantity is no rounding
+        assertEquals(
+                "1e-60",
+                PortraitText.quantiles(Portrait.of(new Weibull(.1, 1, 0)))
+                        .getFirst()
+                        .value()
+                        .replaceAll("^[\\d.]+e", "1e"));
     }
 
     static Stream<Density> examples() {

@@ -208,7 +208,7 @@ public final class PickerPane extends BorderPane {
             title.setText(titleOf(in));
             shown.forEach(Form::update);
             messages.show(model.problems().stream()
-                    .filter(p -> p.place().span().isEmpty())
+                    .filter(p -> !p.place().path().endsWith(".formula")) // stands under the formula
                     .toList());
         });
     }
