@@ -9,6 +9,9 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.regex.Matcher;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -32,9 +35,16 @@ class SampleProjectsTest {
     }
 
     @Test
-    void areSix() throws IOException {
+    void areSeven() throws IOException {
         assertEquals(
-                List.of("berth-delay", "dredging-volume", "ferry-fuel", "mooring-line", "quay-lighting", "tide-gauge"),
+                List.of(
+                        "berth-delay",
+                        "dredging-volume",
+                        "ferry-fuel",
+                        "mooring-line",
+                        "quay-lighting",
+                        "spare-parts",
+                        "tide-gauge"),
                 samples().stream()
                         .map(file -> file.getFileName().toString().replace(ProjectFile.EXTENSION, ""))
                         .toList());
@@ -72,7 +82,8 @@ class SampleProjectsTest {
         "ferry-fuel, 2.347e-3, .048389, 4e6",
         "dredging-volume, 19179.98, 28660, 1e6",
         "tide-gauge, 3.2060226, 1.970317, 1e6",
-        "quay-lighting, 20.088532, 8.598, 1e6"
+        "quay-lighting, 20.088532, 8.598, 1e6",
+        "spare-parts, .01693781101466, .1290378, 4e6"
     })
     void answersWithinFourStandardErrors(String name, double value, double deviation, double draws) {
         Path sample = SAMPLES.resolve(name + ProjectFile.EXTENSION);
@@ -90,6 +101,31 @@ class SampleProjectsTest {
                 answer.required("standardError").asDouble(),
                 known * 4 * Math.sqrt(kurtosis / (4 * draws)) + .001 * known);
         assertEquals(value, leadlineReference(sample));
+    }
+
+    /// Exact chances by convolution of the four tables of probabilities, computed apart from this program in floating
+    /// point with 16 digits: several stocks from the same draws.
+    @Test
+    void talliesTheChanceOfSeveralStocks(@TempDir Path folder) throws IOException {
+        double[] chances = {
+            0.0731079634, 0.0514489283, 0.0358325125, 0.0247326500, 0.0169378110, 0.0115200422, 0.0077877111
+        };
+        String asks = IntStream.range(0, chances.length)
+                .mapToObj(k -> "{\"probability\": \"net > " + (12 + k) + "\"}")
+                .collect(Collectors.joining(", ", "\"ask\": [", "],\n  \"reference\""));
+        String text = Files.readString(SAMPLES.resolve("spare-parts" + ProjectFile.EXTENSION))
+                .replaceFirst("(?s)\"ask\".*\"reference\"", Matcher.quoteReplacement(asks))
+                .replaceFirst("(?s)  \"reference\".*?,\n", "");
+        Path several = Files.writeString(folder.resolve("several.leadline"), text);
+        var answers = leadline("run", several, "--json", "--draws", 4e6)
+                .json()
+                .required("lanes")
+                .get(0)
+                .required("answers");
+        for (int k = 0; k < chances.length; k++) {
+            double error = Math.sqrt(chances[k] * (1 - chances[k]) / 4e6);
+            assertEquals(chances[k], answers.get(k).required("estimate").asDouble(), 4 * error);
+        }
     }
 
     /// The ties make the chance 15 times what it is of independent inputs, 1.571e-4 by 6e7 draws with numpy and scipy
