@@ -11,7 +11,7 @@ import dev.leadline.numeric.Log;
 ///
 /// No trials, and probabilities 0 and 1, are allowed: then its value is fixed.
 ///
-/// Error: relative 1e-12 in both tails (`DiscreteTablesTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 ///
 /// Source: Loader (2000), Fast and accurate computation of binomial probabilities. From memory.
 public record Binomial(double trials, double probability) implements WholeNumbers {

@@ -9,6 +9,9 @@ interface Curve {
     /// Largest error in probability that was measured.
     double uError();
 
+    /// What it keeps in memory, nearly.
+    long bytes();
+
     /// SHA-256 of what decides the bits.
     String hash();
 }

@@ -6,23 +6,18 @@ import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.ExecutionException;
+import java.util.concurrent.Future;
 import java.util.concurrent.FutureTask;
 
 /// The curves of the shapes that are in use, and of those used last, so that inputs of one shape share one. Safe for
-/// all
-/// threads: a shape that two threads ask for at once is built once, by the thread that asked first.
+/// all threads: a shape that two threads ask for at once is built once, by the thread that asked first.
 final class Curves {
-    /// About 160 kB each; at most 6 MB.
+    /// Curves, and bytes of them, above which those used longest ago are forgotten, unless in use.
     private static final int KEPT = 128;
 
-    private static final Map<Density, FutureTask<Curve>> LAST_USED = new LinkedHashMap<>(16, 0.75f, true) {
-        private static final long serialVersionUID = 1;
+    private static final long BYTES = 1L << 27;
 
-        @Override
-        protected boolean removeEldestEntry(Map.Entry<Density, FutureTask<Curve>> eldest) {
-            return size() > KEPT;
-        }
-    };
+    private static final Map<Density, FutureTask<Curve>> LAST_USED = new LinkedHashMap<>(16, 0.75f, true);
 
     /// Curves that someone draws from, however many there are.
     private static final Map<Density, WeakReference<Curve>> IN_USE = new HashMap<>();
@@ -39,7 +34,9 @@ final class Curves {
         }
         task.run();
         try {
-            return task.get();
+            var curve = task.get();
+            forget(shape);
+            return curve;
         } catch (InterruptedException e) {
             Thread.currentThread().interrupt();
             throw new CancellationException();
@@ -65,6 +62,31 @@ final class Curves {
             IN_USE.put(shape, new WeakReference<>(built));
         }
         return built;
+    }
+
+    private static void forget(Density asked) {
+        synchronized (LAST_USED) {
+            long bytes = bytes();
+            var eldest = LAST_USED.entrySet().iterator();
+            while (eldest.hasNext() && (LAST_USED.size() > KEPT || bytes > BYTES)) {
+                var entry = eldest.next();
+                if (entry.getValue().state() == Future.State.SUCCESS
+                        && !entry.getKey().equals(asked)) {
+                    bytes -= entry.getValue().resultNow().bytes();
+                    eldest.remove();
+                }
+            }
+        }
+    }
+
+    /// What is kept of all shapes together.
+    static long bytes() {
+        synchronized (LAST_USED) {
+            return LAST_USED.values().stream()
+                    .filter(task -> task.state() == Future.State.SUCCESS)
+                    .mapToLong(task -> task.resultNow().bytes())
+                    .sum();
+        }
     }
 
     static Curve build(Density shape) {

@@ -9,7 +9,7 @@ import dev.leadline.numeric.Log;
 ///
 /// Mean 0 is allowed: then there are none.
 ///
-/// Error: relative 1e-12 in both tails (`DiscreteTablesTest`).
+/// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 ///
 /// Source: Loader (2000), Fast and accurate computation of binomial probabilities. From memory.
 public record Poisson(double mean) implements WholeNumbers {

@@ -132,6 +132,11 @@ record Table(Density shape, Link link, int bits, double[] cells, Parts parts, do
     }
 
     @Override
+    public long bytes() {
+        return 8L * cells.length;
+    }
+
+    @Override
     public String hash() {
         var bytes = ByteBuffer.allocate(8 + 8 * (cells.length + parts.size() * (1 + STRIDE)));
         bytes.putInt(link.ordinal()).putInt(bits);

@@ -28,6 +28,8 @@
 ///    has a `ClosedForm`.
 ///    A family that is another one by a name of its own is `Renamed`. Skewness and kurtosis have closed forms that do
 ///    not cancel; without one `Moments` computes them from the quantiles.
+///    A discrete one is itself the shape: `WholeNumbers` asks for the logarithm of a probability and both tails at a
+///    whole number, and does the rest. `Staircase` draws of it.
 /// 2. One line in `Catalogue`, and its name in a `FamilyGroup`.
 /// 3. Two tables, `src/test/resources/density/name.csv` and `density/moments/name.csv`, from a source that is not this
 ///    code: a class in one of `src/test/python/density_tables*.py`, which write them.

@@ -232,6 +232,17 @@ class InversionTest {
         assertTrue(Arrays.equals(x, 0, 3, u, 0, 3));
     }
 
+    /// Ten of them would take twice what is kept.
+    @Test
+    void forgetsWhatTakesTooMuch() {
+        for (int i = 0; i < 10; i++) {
+            Inversion.of(new Poisson(2e9 + i));
+            assertTrue(Curves.bytes() <= 1L << 27, () -> Curves.bytes() + " bytes");
+        }
+        var last = new Poisson(2e9 + 9);
+        assertTrue(Curves.of(last) == Curves.of(last));
+    }
+
     private static double anywhere(SplittableRandom random) {
         return ((random.nextLong() >>> 12) + 0.5) * 0x1p-52;
     }
