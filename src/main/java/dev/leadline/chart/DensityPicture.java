@@ -70,7 +70,7 @@ public final class DensityPicture {
         values = values();
         yTicks = view == View.TAILS
                 ? Ticks.powers(values, Math.max(2, (height - top - bottom) / (2 * line)))
-                : Ticks.even(values, Math.max(2, (height - top - bottom) / (3 * line)));
+                : Ticks.even(values, Math.max(3, (height - top - bottom) / (2 * line)));
         int left = 12
                 + (int) Math.ceil(yTicks.all().stream()
                         .mapToDouble(tick -> Typeface.width(font, tick.label()))

@@ -75,6 +75,7 @@ public final class PickerPane extends BorderPane {
         model.project().draft().addListener((_, _, _) -> update());
         model.project().problems().addListener((_, _, _) -> update());
         model.drawn().addListener((_, _, drawn) -> show(drawn));
+        model.outdated().addListener((_, _, outdated) -> Labels.see(remarks, !outdated));
         build();
     }
 
