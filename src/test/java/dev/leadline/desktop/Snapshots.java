@@ -78,14 +78,14 @@ public final class Snapshots {
     /// The density of the first input, dark, then light.
     private static void picker(Stage stage, WorkbenchViewModel model, Path folder, CountDownLatch done) {
         model.inputs().open(0);
-        settled(() -> {
+        settled(() -> settled(() -> {
             write(stage.getScene(), folder.resolve("picker-dark.png"));
             model.dark().set(false);
             settled(() -> {
                 write(stage.getScene(), folder.resolve("picker-light.png"));
                 done.countDown();
             });
-        });
+        }));
     }
 
     /// Leaves time for the picture to be drawn and shown.

@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Supplier;
+import javafx.beans.binding.Bindings;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
@@ -91,10 +92,19 @@ public final class PickerPane extends BorderPane {
     }
 
     private Node empty() {
-        var empty = new Label("The drawing appears once the density is told.");
+        var empty = new Label();
         empty.getStyleClass().add(Styles.QUIET);
         empty.setMouseTransparent(true);
         empty.visibleProperty().bind(model.drawn().map(Optional::isEmpty));
+        empty.textProperty()
+                .bind(Bindings.createStringBinding(
+                        () -> model.isTold() && model.problems().isEmpty()
+                                ? "drawing\u2026"
+                                : "The drawing appears once the density is told.",
+                        model.drawn(),
+                        model.at(),
+                        model.project().problems(),
+                        model.project().draft()));
         return empty;
     }
 

@@ -168,6 +168,11 @@ public final class PickerViewModel {
         return drawn.getReadOnlyProperty();
     }
 
+    /// Whether there is a density to draw, sound or not.
+    boolean isTold() {
+        return at.get().map(place -> !place.now().isUnchosen()).orElse(true);
+    }
+
     /// Whether the drawing shows the last density that was one, not what is typed now.
     ReadOnlyBooleanProperty outdated() {
         return outdated.getReadOnlyProperty();
