@@ -3,6 +3,7 @@ package dev.leadline.model;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.util.Optional;
 
 /// Where the columns of data come from that a project names: files below its folder.
 public interface DataFiles {
@@ -17,4 +18,9 @@ public interface DataFiles {
     /// @throws Refusal where there is no such file or column, or it holds what is no number; at the paths `data` and
     ///     `column`
     DataColumn column(String file, DensityDraft.Column column);
+
+    /// The whole file, so that it can go where a copy of the project goes; empty where it cannot be had.
+    default Optional<byte[]> whole(String file) {
+        return Optional.empty();
+    }
 }

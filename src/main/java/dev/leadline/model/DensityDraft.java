@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.SequencedMap;
+import java.util.stream.Stream;
 
 /// A density as it was written: what its values follow, then shifted and scaled, then truncated.
 ///
@@ -99,6 +100,16 @@ public record DensityDraft(Of of, OptionalDouble shift, OptionalDouble scale, Op
 
     public DensityDraft with(Of newOf) {
         return new DensityDraft(newOf, shift, scale, truncate);
+    }
+
+    /// Names of the data files that it speaks of.
+    public Stream<String> dataFiles() {
+        return switch (of) {
+            case Data data -> Stream.of(data.file());
+            case Mixture(var parts) ->
+                parts.stream().flatMap(part -> part.density().dataFiles());
+            case Member _, Values _, Typed _ -> Stream.empty();
+        };
     }
 
     /// The words that the file has for `of`.

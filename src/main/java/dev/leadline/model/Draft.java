@@ -83,6 +83,18 @@ public record Draft(
 
     public record LaneDraft(String name, String points) {}
 
+    /// Names of the data files that inputs are drawn from, each once.
+    public List<String> dataFiles() {
+        return inputs.stream()
+                .flatMap(input -> switch (input.from()) {
+                    case From.Density(var density) -> density.dataFiles();
+                    case From.Range(var _, var _, var drawFrom) ->
+                        drawFrom.stream().flatMap(DensityDraft::dataFiles);
+                })
+                .distinct()
+                .toList();
+    }
+
     /// The JSON path of the formula asked at `index`: one ask stands by itself in a file, several in a list.
     public String askPath(int index) {
         String place = asks.size() == 1 ? "$.ask" : "$.ask[" + index + "]";

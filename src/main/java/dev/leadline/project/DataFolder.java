@@ -3,6 +3,7 @@ package dev.leadline.project;
 import dev.leadline.model.DataColumn;
 import dev.leadline.model.DataFiles;
 import dev.leadline.model.DensityDraft.Column;
+import dev.leadline.model.Draft;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
@@ -15,6 +16,7 @@ import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
 import java.nio.file.attribute.BasicFileAttributes;
 import java.nio.file.attribute.FileTime;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -68,6 +70,46 @@ public final class DataFolder implements DataFiles {
             throw refusal(Problem.of("%s cannot be read".formatted(Shown.plain(file)))
                     .because(Shown.plain(String.valueOf(e.getMessage())))
                     .tryThis("See whether you may read it."));
+        }
+    }
+
+    @Override
+    public Optional<byte[]> whole(String file) {
+        try {
+            return Optional.of(bytes(found(file), Shown.plain(file)));
+        } catch (IOException | Refusal e) {
+            return Optional.empty();
+        }
+    }
+
+    /// Puts the data files that a project speaks of beside a copy of it, where there are none of these names yet.
+    ///
+    /// @param from where they can be had
+    /// @return names of those that were copied
+    /// @throws Refusal where one cannot be written
+    public static List<String> bring(Path project, Draft draft, DataFiles from) {
+        var copied = new ArrayList<String>();
+        for (String name : draft.dataFiles()) {
+            var whole = from.whole(name);
+            if (whole.isPresent()) {
+                Path target = project.toAbsolutePath().getParent().resolve(relative(name, Shown.plain(name)));
+                if (Files.notExists(target)) {
+                    folders(target.getParent());
+                    WholeFile.write(target, whole.get());
+                    copied.add(name);
+                }
+            }
+        }
+        return copied;
+    }
+
+    private static void folders(Path folder) {
+        try {
+            Files.createDirectories(folder);
+        } catch (IOException e) {
+            throw new Refusal(Problem.of("there can be no folder %s".formatted(Shown.plain(folder.toString())))
+                    .because(Shown.plain(String.valueOf(e.getMessage())))
+                    .tryThis("See whether you may write there."));
         }
     }
 

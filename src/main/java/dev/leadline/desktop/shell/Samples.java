@@ -1,6 +1,8 @@
 package dev.leadline.desktop.shell;
 
+import dev.leadline.model.DataColumn;
 import dev.leadline.model.DataFiles;
+import dev.leadline.model.DensityDraft.Column;
 import dev.leadline.model.Draft;
 import dev.leadline.project.ColumnReader;
 import dev.leadline.project.ProjectFile;
@@ -9,6 +11,7 @@ import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Optional;
 import java.util.SequencedMap;
 import java.util.Set;
 
@@ -30,9 +33,19 @@ final class Samples {
     private static final Set<String> DATA_NAMES = Set.of("waits.csv");
 
     /// Their data.
-    static final DataFiles DATA = (file, column) -> DATA_NAMES.contains(file)
-            ? ColumnReader.read(file, bytes(file), column)
-            : DataFiles.NONE.column(file, column);
+    static final DataFiles DATA = new DataFiles() {
+        @Override
+        public DataColumn column(String file, Column column) {
+            return DATA_NAMES.contains(file)
+                    ? ColumnReader.read(file, bytes(file), column)
+                    : DataFiles.NONE.column(file, column);
+        }
+
+        @Override
+        public Optional<byte[]> whole(String file) {
+            return DATA_NAMES.contains(file) ? Optional.of(bytes(file)) : Optional.empty();
+        }
+    };
 
     /// @param name of its file, without extension
     record Sample(String name, Draft draft) {}

@@ -367,14 +367,16 @@ public final class WorkbenchViewModel {
 
     private void write(Path file, Runnable then) {
         Draft what = project.draft().get();
+        DataFiles data = project.files();
         background.run(
                 () -> {
                     ProjectFile.write(file, what);
-                    return file;
+                    return DataFolder.bring(file, what, data);
                 },
-                _ -> {
+                brought -> {
                     project.savedAs(file, what);
-                    notice.set("Saved in " + file.getFileName());
+                    notice.set("Saved in " + file.getFileName()
+                            + (brought.isEmpty() ? "" : ", with " + String.join(", ", brought)));
                     then.run();
                 },
                 failure -> tell(file.getFileName() + " could not be saved; the project is still here", failure));

@@ -132,6 +132,28 @@ class WorkbenchViewModelTest {
         assertTrue(model.project().edited().get());
     }
 
+    /// A sample's data come along, and a second copy brings them from the first.
+    @Test
+    void dataGoWhereTheProjectGoes() throws IOException {
+        model.openSample("berth-delay");
+        background.finishAll();
+        Path first = Files.createDirectory(folder.resolve("first")).resolve("mine.leadline");
+        dialogs.file = Optional.of(first);
+        model.saveAs();
+        background.finishAll();
+        assertEquals("Saved in mine.leadline, with waits.csv", model.notice().get());
+        Path second = Files.createDirectory(folder.resolve("second")).resolve("mine.leadline");
+        dialogs.file = Optional.of(second);
+        model.saveAs();
+        background.finishAll();
+        assertEquals(-1, Files.mismatch(first.resolveSibling("waits.csv"), second.resolveSibling("waits.csv")));
+        Files.writeString(second.resolveSibling("waits.csv"), "call,hours\n1,2\n2,3\n");
+        model.saveAs();
+        background.finishAll();
+        assertEquals("Saved in mine.leadline", model.notice().get());
+        assertEquals("call,hours\n1,2\n2,3\n", Files.readString(second.resolveSibling("waits.csv")));
+    }
+
     @Test
     void saveAsGivesTheExtensionAndReopensEqual() {
         opened();
