@@ -57,12 +57,23 @@ public record Shifted(Density of, double shift, double scale) implements Density
 
     @Override
     public double cdf(double x) {
+        if (isBeyond(x)) {
+            return x <= support().low() ? 0 : 1;
+        }
         return scale > 0 ? of.cdf(back(x)) : fromAbove(back(x));
     }
 
     @Override
     public double survival(double x) {
+        if (isBeyond(x)) {
+            return x <= support().low() ? 1 : 0;
+        }
         return scale > 0 ? of.survival(back(x)) : fromBelow(back(x));
+    }
+
+    /// Whether x is an end of the support or beyond it, which rounding must not hide.
+    private boolean isBeyond(double x) {
+        return !isDiscrete() && (x <= support().low() || x >= support().high());
     }
 
     /// `P(X >= z)`.
