@@ -92,7 +92,7 @@ final class Curves {
     static Curve build(Density shape) {
         return switch (shape) {
             case ClosedForm form -> Exact.of(shape, form);
-            case Discrete discrete -> Staircase.of(discrete);
+            case Density _ when shape.isDiscrete() -> Staircase.of(shape);
             default -> TableFit.of(shape);
         };
     }

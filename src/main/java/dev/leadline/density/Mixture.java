@@ -119,7 +119,11 @@ public record Mixture(List<Part> parts) implements Shape {
 
     private double fromBelow(double p) {
         var ends = ends(density -> density.quantile(p));
-        return ends.low() == ends.high() ? ends.low() : Root.rising(this::cdf, this::slope, p, ends.low(), ends.high());
+        if (ends.low() == ends.high()) {
+            return ends.low();
+        }
+        double x = Root.rising(this::cdf, this::slope, p, ends.low(), ends.high());
+        return isDiscrete() ? value(x) : x;
     }
 
     /// The least value that leaves at most q above it; where values are continuous, searched from above.
@@ -129,8 +133,13 @@ public record Mixture(List<Part> parts) implements Shape {
             return ends.low();
         }
         return isDiscrete()
-                ? Root.rising(x -> survival(x) <= q ? 1 : 0, _ -> 0, 1, ends.low(), ends.high())
+                ? value(Root.rising(x -> survival(x) <= q ? 1 : 0, _ -> 0, 1, ends.low(), ends.high()))
                 : -Root.rising(x -> survival(-x), x -> pdf(-x), q, -ends.high(), -ends.low());
+    }
+
+    /// The value of a part at `x`, or just below.
+    private double value(double x) {
+        return -least(density -> -Atoms.upTo(density, x));
     }
 
     private double slope(double x) {

@@ -69,6 +69,12 @@ final class Moments {
                     : orders.upper() > 1 ? Double.NEGATIVE_INFINITY : Double.NaN;
             return new Four(mean, Double.NaN, Double.NaN, Double.NaN);
         }
+        if (density.isDiscrete()) {
+            double[] values = Staircase.values(density);
+            if (values.length <= Staircase.MOST) {
+                return added(density, values);
+            }
+        }
         var lower =
                 Nodes.of(density::quantile, Double.isInfinite(density.support().low()));
         var upper = Nodes.of(
@@ -88,6 +94,27 @@ final class Moments {
                 variance,
                 order > 3 ? lower.mean(cube) + upper.mean(cube) : Double.NaN,
                 order > 4 ? lower.mean(fourth) + upper.mean(fourth) - 3 : Double.POSITIVE_INFINITY);
+    }
+
+    /// Over the values of a discrete density that are drawn.
+    private static Four added(Density density, double[] values) {
+        double middle = density.quantile(0.5);
+        double mean = middle + mean(density, values, x -> x - middle);
+        double variance = mean(density, values, x -> (x - mean) * (x - mean));
+        double sd = Math.sqrt(variance);
+        return new Four(
+                mean,
+                variance,
+                mean(density, values, x -> cube((x - mean) / sd)),
+                mean(density, values, x -> cube((x - mean) / sd) * ((x - mean) / sd)) - 3);
+    }
+
+    private static double mean(Density density, double[] values, DoubleUnaryOperator f) {
+        var sum = new Sum(0);
+        for (double x : values) {
+            sum.add(density.pdf(x) * f.applyAsDouble(x));
+        }
+        return sum.value();
     }
 
     /// The quantiles of one tail at the points of the quadrature, with their weights.

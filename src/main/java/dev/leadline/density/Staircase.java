@@ -22,11 +22,12 @@ record Staircase(Density shape, double[] values, double[] edges, int[] guide, do
     static final int MOST = 1 << 20;
 
     private static final double SMALLEST = 0x1p-53;
+
     private static final int FEWEST_CELLS = 1 << 10;
     private static final int MOST_CELLS = 1 << 20;
     private static final int CELLS_A_VALUE = 8;
 
-    static Curve of(Discrete shape) {
+    static Curve of(Density shape) {
         double[] values = values(shape);
         if (values.length > MOST) {
             return TableFit.slow(shape);
@@ -40,21 +41,44 @@ record Staircase(Density shape, double[] values, double[] edges, int[] guide, do
     }
 
     /// All values that are drawn, or more than are kept.
-    private static double[] values(Discrete shape) {
+    static double[] values(Density shape) {
         var values = new double[MOST + 1];
         double last = shape.upperQuantile(SMALLEST);
         double value = shape.quantile(SMALLEST);
         int n = 0;
         values[n++] = value;
         while (value < last && n < values.length) {
-            value = shape.next(value);
+            double next = shape instanceof Discrete discrete ? discrete.next(value) : Atoms.after(shape, value);
+            value = Math.min(next, last);
             values[n++] = value;
         }
         return Arrays.copyOf(values, n);
     }
 
+    private static double[] edges(Density shape, double[] values) {
+        return shape instanceof Discrete ? added(shape, values) : read(shape, values);
+    }
+
+    /// Both tails as the density has them.
+    private static double[] read(Density shape, double[] values) {
+        var edges = new double[values.length];
+        for (int i = 0; i < values.length; i++) {
+            double below = shape.cdf(values[i]);
+            edges[i] = below <= 0.5 ? below : oneLess(shape.survival(values[i]));
+        }
+        return rising(edges);
+    }
+
+    private static double[] rising(double[] edges) {
+        for (int i = 1; i < edges.length; i++) {
+            edges[i] = Math.max(edges[i], edges[i - 1]);
+        }
+        edges[edges.length - 1] = 1;
+        return edges;
+    }
+
     /// Probabilities added from both ends towards the middle.
-    private static double[] edges(Discrete shape, double[] values) {
+    private static double[] added(Density shape, double[] values) {
         int n = values.length;
         var edges = new double[n];
         var below = new Sum(shape.cdf(values[0]));
@@ -70,11 +94,7 @@ record Staircase(Density shape, double[] values, double[] edges, int[] guide, do
             edges[i] = oneLess(above.value());
             above.add(shape.pdf(values[i]));
         }
-        for (int i = 1; i < n; i++) {
-            edges[i] = Math.max(edges[i], edges[i - 1]);
-        }
-        edges[n - 1] = 1;
-        return edges;
+        return rising(edges);
     }
 
     /// The largest double not above `1 - q`.

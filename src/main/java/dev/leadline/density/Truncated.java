@@ -49,7 +49,9 @@ public final class Truncated implements Shape {
         if (!problems.isEmpty()) {
             throw new Refusal(problems);
         }
-        var truncated = new Truncated(density, low, high);
+        var truncated = density.isDiscrete()
+                ? new Truncated(density, Atoms.from(density, low), Atoms.upTo(density, high))
+                : new Truncated(density, low, high);
         if (!(truncated.mass >= LEAST_MASS)) {
             throw new Refusal(Problem.of(
                             "the interval from %s to %s keeps nothing".formatted(Rule.number(low), Rule.number(high)))
