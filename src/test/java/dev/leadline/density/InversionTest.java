@@ -5,7 +5,9 @@ import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Arrays;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.SplittableRandom;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
@@ -17,6 +19,13 @@ import org.junit.jupiter.params.provider.MethodSource;
 class InversionTest {
     private static final long SEED = 20261201;
     private static final int BLOCK = 1024;
+
+    /// So that each table is built once for all the tests.
+    private static final Map<Density, Inversion> IN_USE = new HashMap<>();
+
+    private static Inversion inversion(Density density) {
+        return IN_USE.computeIfAbsent(density, Inversion::of);
+    }
 
     /// Kinks at probabilities that are borders of cells and at others, a gap in the middle, gaps of all sizes, a spike,
     /// a
@@ -41,7 +50,7 @@ class InversionTest {
     @ParameterizedTest
     @MethodSource("densities")
     void hitsTheProbability(Density density) {
-        var inversion = Inversion.of(density);
+        var inversion = inversion(density);
         assertTrue(inversion.uError() <= 1e-12, () -> "stated " + inversion.uError());
         var random = new SplittableRandom(SEED);
         var u = new double[BLOCK];
@@ -84,7 +93,7 @@ class InversionTest {
     @ParameterizedTest
     @MethodSource("densities")
     void neverFallsBack(Density density) {
-        var inversion = Inversion.of(density);
+        var inversion = inversion(density);
         var border = new double[3 * 2 * 52 * 64 + 1];
         int n = 0;
         for (int octave = 2; octave <= 53; octave++) {
@@ -136,7 +145,7 @@ class InversionTest {
         for (int i = 0; i < n; i++) {
             x[i] = anywhere(random);
         }
-        Inversion.of(density).fill(x, x, n);
+        inversion(density).fill(x, x, n);
         Arrays.sort(x);
         double distance = 0;
         for (int i = 0; i < n; i++) {
@@ -154,14 +163,15 @@ class InversionTest {
     void sameTableTwice(Density density) {
         assertEquals(
                 Curves.build(density.standardised().shape()).hash(),
-                Inversion.of(density).hash());
+                inversion(density).hash());
     }
 
     /// A draw costs a quantile where there are no cells: only for discrete densities with more values than are kept.
     @ParameterizedTest
     @MethodSource("densities")
     void everyDensityHasATable(Density density) {
-        if (Curves.build(density.standardised().shape()) instanceof Table table) {
+        inversion(density);
+        if (Curves.of(density.standardised().shape()) instanceof Table table) {
             boolean isWide = density.isDiscrete()
                     && density.upperQuantile(0x1p-53) - density.quantile(0x1p-53) >= Staircase.MOST;
             assertEquals(!isWide, table.cells().length > 0, density::toString);
