@@ -97,7 +97,7 @@ def moved(moments, location, scale):
 
 class Uniform:
     name, columns = "uniform", ["from", "to"]
-    members = [("-2", "3"), ("1000000", "1000000.5")]
+    members = [("-2", "3"), ("1000000", "1000000.5"), ("0", "1e20"), ("-1e20", "0")]
 
     def __init__(self, a, b):
         self.a, self.b = a, b
@@ -159,7 +159,7 @@ class Lognormal:
 
 class Triangular:
     name, columns = "triangular", ["from", "mode", "to"]
-    members = [("0", "2", "7"), ("0", "0", "1"), ("-1", "4", "4"), ("10", "10.001", "11")]
+    members = [("0", "2", "7"), ("0", "0", "1"), ("-1", "4", "4"), ("10", "10.001", "11"), ("-7", "-2", "0")]
 
     def __init__(self, a, m, b):
         self.a, self.m, self.b = a, m, b
@@ -190,7 +190,7 @@ class Triangular:
 
 class Exponential:
     name, columns = "exponential", ["mean", "from"]
-    members = [("2", "0"), ("1e-100", "0"), ("5", "3"), ("-7", "-7.5")]
+    members = [("2", "0"), ("1e-100", "0"), ("5", "3"), ("-7", "-7.5"), ("1e20", "0")]
 
     def __init__(self, m, low):
         self.s, self.low = m - low, low

@@ -9,7 +9,8 @@ from mpmath import asin, atan, erf, erfc, exp, expm1, gamma, inf, log, log1p, lo
 class Trapezoidal:
     name, columns = "trapezoidal", ["from", "flatFrom", "flatTo", "to"]
     members = [("0", "1", "3", "6"), ("0", "0", "0", "1"), ("-1", "-1", "2", "4"), ("-1", "2", "4", "4"),
-               ("0", "0", "5", "5"), ("10", "10.001", "10.999", "11"), ("0", "1", "1", "6"), ("0", "0.5", "9.999", "10")]
+               ("0", "0", "5", "5"), ("10", "10.001", "10.999", "11"), ("0", "1", "1", "6"), ("0", "0.5", "9.999", "10"),
+               ("-6", "-5", "-3", "0")]
 
     def __init__(self, a, b, c, d):
         self.a, self.b, self.c, self.d = a, b, c, d
@@ -48,13 +49,15 @@ class CurvilinearTrapezoid:
     """JCGM 101:2008, 6.4.3: the tails are the integral of its density log((w + d) / |x - middle|) / (4 d)."""
     name, columns = "curvilinear-trapezoid", ["from", "to", "inexact"]
     members = [("-1", "1", "0.1"), ("-0.05", "0.05", "0.025"), ("1", "5", "1"), ("1", "5", "1.999"),
-               ("-1", "1", "9.5367431640625e-07"), ("9.5", "10.5", "4.656612873077393e-10")]
+               ("-1", "1", "9.5367431640625e-07"), ("9.5", "10.5", "4.656612873077393e-10"), ("-5", "-1", "1")]
 
     def __init__(self, a, b, d):
         self.m, self.w, self.d = (a + b) / 2, (b - a) / 2, d
 
     def log_pdf(self, x):
-        return log(log((self.w + self.d) / max(abs(x - self.m), self.w - self.d)) / (4 * self.d))
+        w, d = self.w, self.d
+        low, high = self.support()
+        return log(-log1p(-min(x - low, high - x, 2 * d) / (w + d)) / (4 * d))
 
     def tails(self, x):
         w, d = self.w, self.d
@@ -83,7 +86,7 @@ class CurvilinearTrapezoid:
 
 class Arcsine:
     name, columns = "arcsine", ["from", "to"]
-    members = [("0", "1"), ("-0.5", "0.5"), ("0", "1e-50"), ("19.5", "20.5")]
+    members = [("0", "1"), ("-0.5", "0.5"), ("0", "1e-50"), ("19.5", "20.5"), ("-1", "0")]
 
     def __init__(self, a, b):
         self.a, self.b = a, b
