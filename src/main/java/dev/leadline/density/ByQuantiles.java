@@ -68,7 +68,11 @@ record ByQuantiles(List<Rule> given, Solver solver) {
             double least, double most, Function<double[], Density> maker, double from, Quantile low, Quantile high) {
         if (!(low.x > from)) {
             throw new Refusal(Rule.problem(
-                    low.name, low.x, "greater than " + Rule.number(from), "All values lie above that.", ""));
+                    low.name,
+                    low.x,
+                    "greater than " + (from == 0 ? "0" : "from, " + Rule.number(from)),
+                    "All values lie above that.",
+                    ""));
         }
         double wanted = Log.log((high.x - from) / (low.x - from));
         DoubleUnaryOperator excess = s -> {
@@ -163,6 +167,9 @@ record ByQuantiles(List<Rule> given, Solver solver) {
                     "greater than %s, which is %s".formatted(quantiles.get(0).name, Rule.number(quantiles.get(0).x)),
                     "A larger share of the values is below the larger quantile.",
                     ""));
+        } else if (problems.isEmpty()) {
+            problems.addAll(Uniform.rising(
+                    quantiles.get(0).name, quantiles.get(0).x, quantiles.get(1).name, quantiles.get(1).x));
         }
         double[] values = new double[given.size()];
         for (int i = 0; i < values.length; i++) {

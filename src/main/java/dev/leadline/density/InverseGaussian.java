@@ -24,14 +24,14 @@ public record InverseGaussian(double mean, double shape) implements Scaled {
                             "shape",
                             "cube of the mean over the variance; the larger, the nearer to normal",
                             "The spread is divided by it."))
-            .and(v -> problems("shape", v[1], v[1] / v[0]));
+            .and(v -> problems("shape", v[1], v[1] / v[0], "at least 1e-6 and at most 1e8", v[0]));
 
     private static final Entry BY_MEAN = Entry.of(
                     v -> ofMeanAndSd(v[0], v[1]),
                     positive("mean", "mean", "An inverse Gaussian value is positive."),
                     positive("sd", "standard deviation", "The inverse Gaussian density divides by it.")
                             .tryThis("For a fixed value use a constant."))
-            .and(v -> problems("sd", v[1], (v[0] / v[1]) * (v[0] / v[1])));
+            .and(v -> problems("sd", v[1], (v[0] / v[1]) * (v[0] / v[1]), "at least 1e-4 and at most 1000", v[0]));
 
     static final Family FAMILY = new Described(
             "inverse-gaussian",
@@ -50,13 +50,14 @@ public record InverseGaussian(double mean, double shape) implements Scaled {
     }
 
     /// @param ratio of shape and mean
-    private static List<Problem> problems(String name, double value, double ratio) {
+    /// @param times the limits of the value, in units of the mean
+    private static List<Problem> problems(String name, double value, double ratio, String times, double mean) {
         return ratio >= LEAST_RATIO && ratio <= MOST_RATIO
                 ? List.of()
                 : List.of(Rule.problem(
                         name,
                         value,
-                        "such that the standard deviation is between 1e-4 and 1000 times the mean",
+                        times + " times the mean, " + Rule.number(mean),
                         "Beyond, its values are too close or too far apart for numbers of 16 digits.",
                         "Check the units of both."));
     }

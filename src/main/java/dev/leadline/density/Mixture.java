@@ -44,15 +44,14 @@ public record Mixture(List<Part> parts) implements Shape {
         var problems = new ArrayList<Problem>();
         for (int i = 0; i < parts.size(); i++) {
             double weight = parts.get(i).weight;
-            if (!(weight > 0) || Double.isInfinite(weight)) {
-                problems.add(Rule.problem(
-                                "the weight of part " + (i + 1),
-                                weight,
-                                "greater than 0",
-                                "A weight is the chance that a value comes from this part.",
-                                weight == 0 ? "Leave the part out." : "")
-                        .at(Place.of("[" + i + "].weight")));
-            }
+            var place = Place.of("[" + i + "].weight");
+            Rule.positive(
+                            "the weight of part " + (i + 1),
+                            "",
+                            "A weight is the chance that a value comes from this part.")
+                    .tryThis(weight == 0 ? "Leave the part out." : "")
+                    .broken(weight)
+                    .ifPresent(problem -> problems.add(problem.at(place)));
         }
         double sum = parts.stream().mapToDouble(Part::weight).sum();
         if (problems.isEmpty() && Math.abs(sum - 1) > ROUNDING) {

@@ -3,6 +3,8 @@ package dev.leadline.density;
 import static dev.leadline.density.Rule.finite;
 import static dev.leadline.density.Rule.positive;
 
+import java.util.OptionalDouble;
+
 /// The normal density.
 ///
 /// Error: relative 1e-13 in both tails (`DensityTablesTest`).
@@ -13,8 +15,16 @@ public record Normal(double mean, double sd) implements Scaled {
             positive("sd", "standard deviation", "The normal density divides by its standard deviation.")
                     .tryThis("For a fixed value use a constant."));
 
-    private static final Entry BY_CV = Entry.of(
-                    v -> new Normal(v[0], Math.abs(v[0]) * v[1]), finite("mean", "middle value"), Rule.cv())
+    private static final Rule MEAN_OF_CV = new Rule(
+            "mean",
+            "middle value",
+            "a finite number other than 0",
+            v -> v != 0,
+            "The cv is a share of the mean.",
+            "Give sd instead of cv.",
+            OptionalDouble.empty());
+
+    private static final Entry BY_CV = Entry.of(v -> new Normal(v[0], Math.abs(v[0]) * v[1]), MEAN_OF_CV, Rule.cv())
             .and(v -> ENTRY.tooExtreme(
                     "mean %s with cv %s".formatted(Rule.number(v[0]), Rule.number(v[1])), v[0], Math.abs(v[0]) * v[1]));
 

@@ -128,7 +128,7 @@ record Relief(Heights heights, String variable, boolean log) {
     Problem rough(double x) {
         return about("density changes too fast to be integrated, near " + at(variable, x))
                 .because("It was cut into more than " + Refinement.MOST + " pieces.")
-                .tryThis("Narrow the range, or add breaks where the density jumps.");
+                .tryThis("Narrow the range, or add breaks where the density jumps or grows without bound.");
     }
 
     private static String at(String variable, double x) {

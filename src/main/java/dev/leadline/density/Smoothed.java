@@ -51,14 +51,12 @@ public record Smoothed(Density standard, double location, double bandwidth) impl
     /// @throws Refusal where the values cannot be smoothed with this bandwidth
     public static Smoothed of(double bandwidth, double... values) {
         refuseValues(values);
-        if (!(bandwidth > 0 && bandwidth < Double.POSITIVE_INFINITY)) {
-            throw new Refusal(Rule.problem(
-                    BANDWIDTH,
-                    bandwidth,
-                    "greater than 0",
-                    "It is the standard deviation of the kernel around each value.",
-                    "Leave it out to have it chosen by rule, or draw the values themselves (empirical)."));
-        }
+        Rule.positive(BANDWIDTH, "", "It is the standard deviation of the kernel around each value.")
+                .tryThis("Leave it out to have it chosen by rule, or draw the values themselves (empirical).")
+                .broken(bandwidth)
+                .ifPresent(problem -> {
+                    throw new Refusal(problem);
+                });
         double least = Arrays.stream(values).min().orElseThrow();
         double most = Arrays.stream(values).max().orElseThrow();
         double location = 0.5 * least + 0.5 * most;
@@ -67,7 +65,14 @@ public record Smoothed(Density standard, double location, double bandwidth) impl
             z[i] = (values[i] - location) / bandwidth;
         }
         double reach = 0.5 * most - 0.5 * least + Bumps.REACH * bandwidth;
-        if (!(bandwidth > 1e-12 * Math.max(Math.abs(least), Math.abs(most)) && reach < Double.MAX_VALUE / 2)
+        if (!(reach < Double.MAX_VALUE / 2)) {
+            throw new Refusal(
+                    Problem.of("values smoothed with bandwidth %s reach too far".formatted(Rule.number(bandwidth)))
+                            .because("They would exceed half the largest number there is, 1.8e308.")
+                            .tryThis("Check the unit of the values, or take a smaller bandwidth.")
+                            .at(Place.of(BANDWIDTH)));
+        }
+        if (!(bandwidth > 1e-12 * Math.max(Math.abs(least), Math.abs(most)))
                 || !Arrays.stream(z).allMatch(Double::isFinite)) {
             throw tooNarrow(bandwidth);
         }

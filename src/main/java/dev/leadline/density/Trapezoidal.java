@@ -55,7 +55,14 @@ public record Trapezoidal(double from, double flatFrom, double flatTo, double to
         var problems = new ArrayList<>(Uniform.rising("from", from, "to", to));
         if (problems.isEmpty()) {
             inside("flatFrom", flatFrom, "from", from, to, problems);
-            inside("flatTo", flatTo, "flatFrom", Math.max(from, Math.min(flatFrom, to)), to, problems);
+            boolean flatFromIsRight = problems.isEmpty();
+            inside(
+                    "flatTo",
+                    flatTo,
+                    flatFromIsRight ? "flatFrom" : "from",
+                    flatFromIsRight ? flatFrom : from,
+                    to,
+                    problems);
         }
         return problems;
     }

@@ -1,6 +1,7 @@
 package dev.leadline.density;
 
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Significant;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
@@ -42,12 +43,12 @@ public final class Truncated implements Shape {
     /// @param high may be `∞`
     /// @throws Refusal where nothing is kept
     public static Truncated of(Density density, double low, double high) {
-        if (density instanceof Truncated t) {
-            return of(t.of, Math.max(low, t.low), Math.min(high, t.high));
-        }
         var problems = problems(density, low, high);
         if (!problems.isEmpty()) {
             throw new Refusal(problems);
+        }
+        if (density instanceof Truncated t) {
+            return of(t.of, Math.max(low, t.low), Math.min(high, t.high));
         }
         var truncated = density.isDiscrete()
                 ? new Truncated(density, Atoms.from(density, low), Atoms.upTo(density, high))
@@ -55,8 +56,11 @@ public final class Truncated implements Shape {
         if (!(truncated.mass >= LEAST_MASS)) {
             throw new Refusal(Problem.of(
                             "the interval from %s to %s keeps nothing".formatted(Rule.number(low), Rule.number(high)))
-                    .because("The chance of a value in it is %s, too small for numbers of 16 digits."
-                            .formatted(Rule.number(truncated.mass)))
+                    .because(
+                            truncated.mass > 0
+                                    ? "The chance of a value in it is %s; it must be at least %s, or draws lose digits."
+                                            .formatted(Significant.text(truncated.mass, 3), Rule.number(LEAST_MASS))
+                                    : "The chance of a value in it is 0.")
                     .tryThis("Check the unit of the ends, or take a wider interval."));
         }
         return truncated;
@@ -65,10 +69,10 @@ public final class Truncated implements Shape {
     private static List<Problem> problems(Density density, double low, double high) {
         var problems = new ArrayList<Problem>();
         if (Double.isNaN(low) || low == Double.POSITIVE_INFINITY) {
-            problems.add(Rule.problem("the lower end", low, "a number, or -∞", "Values below it are left out.", ""));
+            problems.add(Rule.problem("the lower end", low, "a number or -∞", "Values below it are left out.", ""));
         }
         if (Double.isNaN(high) || high == Double.NEGATIVE_INFINITY) {
-            problems.add(Rule.problem("the upper end", high, "a number, or ∞", "Values above it are left out.", ""));
+            problems.add(Rule.problem("the upper end", high, "a number or ∞", "Values above it are left out.", ""));
         }
         if (!problems.isEmpty()) {
             return problems;
@@ -79,7 +83,7 @@ public final class Truncated implements Shape {
                     high,
                     "greater than the lower one, " + Rule.number(low),
                     low == high ? "The interval would be a single point." : "The interval would be empty.",
-                    low == high ? "For a fixed value use a constant." : "Swap the ends?"));
+                    low == high ? "For a fixed value use a constant." : "Swap the two ends."));
         }
         var support = density.support();
         boolean isMissed = density.isDiscrete()

@@ -77,9 +77,10 @@ public final class ValueTable implements Discrete {
                     .at(Place.of("values")));
         }
         if (values.length != probabilities.length) {
-            problems.add(Problem.of(
-                            "there are %d values and %d probabilities".formatted(values.length, probabilities.length))
+            problems.add(Problem.of("the number of probabilities is %d but must be %d, that of the values"
+                            .formatted(probabilities.length, values.length))
                     .because("Every value has one probability.")
+                    .tryThis("See which is missing or left over.")
                     .at(Place.of("probabilities")));
         }
         for (int i = 0; i < values.length; i++) {

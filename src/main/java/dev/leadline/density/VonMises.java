@@ -26,7 +26,7 @@ public record VonMises(double mean, double concentration) implements Ended {
                     1e8,
                     "concentration",
                     "0 is any direction alike; where large, the standard deviation is 1 over its square root",
-                    "Above, the density is the normal one."));
+                    "Below, the mean would be the rarest direction; above, the density is the normal one."));
 
     static final Family FAMILY =
             new Described("von-mises", "directions and phases in radians: wind, misalignment, time of day", ENTRY);

@@ -193,7 +193,7 @@ final class DensityReader {
         var list = fields.list(name, MOST_PARTS);
         if (list.size() != 2) {
             if (fields.take(name).orElseThrow() instanceof Json.Elements) {
-                problems.add(Problem.of("%s has %d ends but must have 2".formatted(name, list.size()))
+                problems.add(Problem.of("%s must have 2 ends but has %d".formatted(name, list.size()))
                         .because("It is [low, high]; an end may be \"-inf\" or \"inf\".")
                         .at(Place.of(fields.pathOf(name))));
             }

@@ -173,7 +173,7 @@ final class DraftReader {
         List<Json> ends = input.list("range", JsonReader.MOST_TEXT);
         if (ends.size() != 2) {
             if (input.take("range").orElseThrow() instanceof Json.Elements) {
-                problems.add(Problem.of("range has %d ends but must have 2".formatted(ends.size()))
+                problems.add(Problem.of("range must have 2 ends but has %d".formatted(ends.size()))
                         .because("It is [low, high]; an end may be \"-inf\" or \"inf\".")
                         .at(Place.of(input.pathOf("range"))));
             }

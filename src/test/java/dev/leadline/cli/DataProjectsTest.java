@@ -129,6 +129,11 @@ class DataProjectsTest {
                 "\"data\": \"waits.csv\", \"column\": 2, \"kind\": \"kernel\","
                         + " \"fitted\": {\"family\": \"exponential\", \"mean\": 3}"
                         + " | $.inputs[0].density.kind | kind has no use beside fitted",
+                "\"data\": \"waits.csv\", \"column\": 2, \"bandwidth\": 2,"
+                        + " \"fitted\": {\"family\": \"exponential\", \"mean\": 3}"
+                        + " | $.inputs[0].density.bandwidth | bandwidth has no use beside fitted",
+                "\"data\": \"waits.csv\", \"column\": 2, \"kind\": \"kernel\", \"bandwidth\": -1"
+                        + " | $.inputs[0].density.bandwidth | bandwidth is -1 but must be greater than 0",
                 "\"data\": \"waits.csv\", \"column\": 2, \"fitted\": {\"family\": \"exponential\", \"mean\": -3}"
                         + " | $.inputs[0].density.fitted.mean | mean is -3 but must be greater than 0"
             })

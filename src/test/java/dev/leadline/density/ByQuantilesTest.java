@@ -103,6 +103,12 @@ class ByQuantilesTest {
         assertRefused("mean, q5 and q95 do not go together in one density", "normal", "mean", 1, "q5", 1, "q95", 3);
         assertRefused("triangular has no parameter q5", "triangular", "q5", 1, "q95", 3);
         assertRefused("normal has no parameter q100", "normal", "q100", 1, "q95", 3);
+        assertRefused("q5 is 1 but must be greater than from, 3", "weibull", "q5", 1, "q95", 4, "from", 3);
+        assertRefused("q5 is 0 but must be greater than 0", "weibull", "q5", 0, "q95", 4);
+        assertRefused("from is NaN but must be a finite number", "weibull", "q5", 0, "q95", 4, "from", Double.NaN);
+        assertRefused(
+                "dof is 0 but must be at least 0.1 and at most 10000000000", "student", "dof", 0, "q5", 1, "q95", 3);
+        assertRefused("the distance between q5 and q95 is too large", "normal", "q5", -1e308, "q95", 1e308);
         assertRefused("no member of the family has these two quantiles", "gamma", "q49", 1, "q51", 1.0000001);
     }
 

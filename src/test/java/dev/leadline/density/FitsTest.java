@@ -152,6 +152,12 @@ class FitsTest {
         assertEquals(
                 "the likelihood has no regular maximum",
                 refused("generalized-pareto", Map.of("location", 0.0), .1, .2, .3, .4, .5, .6, .7, .8, .9, 1));
+        assertEquals("the values are not all counts", refused("poisson", Map.of(), 1, 2.5));
+        assertEquals("the values are not all counts", refused("geometric", Map.of(), -1, 2));
+        assertEquals(
+                "the family \"poison\" is not available",
+                assertThrows(Refusal.class, () -> Fits.of(new double[] {1, 2}, List.of(new Wanted("poison", Map.of()))))
+                        .getMessage());
         assertEquals(
                 "there is only one value to fit to",
                 assertThrows(Refusal.class, () -> Fits.of(new double[] {2, 2}, List.of()))

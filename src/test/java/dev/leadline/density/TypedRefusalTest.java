@@ -34,6 +34,9 @@ class TypedRefusalTest {
                 on("1/abs(s-sqrt(2))", 0, 2, "density is infinite at s = 1.4142135623730951"),
                 on("s^400*exp(-s)", 0, INF, "density is infinite at s = 6"),
                 on("-log(abs(s^2-2.1))", 1.1, 1.7, "density is infinite at s = 1.449137674618944"),
+                on("abs(s^2-2)^(-1/2)", 1, 2, "density grows without bound at s = 1.4142135623731"),
+                on("-log(abs(s^2-3)/9)", 1, 2, "density grows without bound at s = 1.73205080756888"),
+                on("s^-1.03", 1, INF, "some draws of this density would exceed the largest number there is, 1.8e308"),
                 on("1/s", 0, 1, "density has no finite integral: near s = 0 it grows like 1/distance^1.00"),
                 on("s^-2", 0, 1, "density has no finite integral: near s = 0 it grows like 1/distance^2.00"),
                 on("1/(1-s)", -1, 1, "density has no finite integral: near s = 1 it grows like 1/distance^1.00"),
@@ -75,6 +78,10 @@ class TypedRefusalTest {
                         "It may grow without bound only towards an end of the range or a break.",
                         "Add a break there; where only its numbers get too large, give its logarithm (log)."),
                 Arguments.of(
+                        "abs(s^2-2)^(-1/3)",
+                        "It may do so only towards an end of the range or a break, where its mass is found by itself.",
+                        "Add a break there."),
+                Arguments.of(
                         "(1+s)^-1",
                         "The exponent must be less than 1, by .02 at least.",
                         "Move the end of the range away from there, or check the exponent."),
@@ -98,13 +105,24 @@ class TypedRefusalTest {
         var problem = only(new TypedText("1+sin(1e6*s)", 0, 1, List.of(), false));
         assertTrue(problem.primary().startsWith("density changes too fast to be integrated, near s = "));
         assertEquals(Optional.of("It was cut into more than 20000 pieces."), problem.detail());
-        assertEquals(Optional.of("Narrow the range, or add breaks where the density jumps."), problem.hint());
+        assertEquals(
+                Optional.of("Narrow the range, or add breaks where the density jumps or grows without bound."),
+                problem.hint());
     }
 
     @Test
     void aBreakLetsAPoleIn() {
         var text = new TypedText("abs(s-0.3)^(-1/3)", -1, 1, List.of(0.3), false);
         assertEquals(0, Typed.of(text, "s", new LinkedHashMap<>()).notes().size());
+    }
+
+    /// The break that the message of a pole between two doubles asks for; the integral by the substitution
+    /// `s = 2^(1/2) cosh(t)` above and `s = 2^(1/2) sin(t)` below: `pi/4 + log(1 + 2^(1/2))`.
+    @Test
+    void aBreakWhereThePoleWasSaidToBeLetsItIn() {
+        var text = new TypedText("abs(s^2-2)^(-1/2)", 1, 2, List.of(1.4142135623731), false);
+        var typed = Typed.of(text, "s", new LinkedHashMap<>());
+        assertEquals(Math.PI / 4 + Math.log(1 + Math.sqrt(2)), typed.integral(), 1e-7);
     }
 
     @Test

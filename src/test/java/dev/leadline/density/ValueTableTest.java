@@ -93,12 +93,30 @@ class ValueTableTest {
     void saysWhatIsWrongAndWhere() {
         refused("values[1] is NaN but must be a finite number at values[1]", new double[] {1, Double.NaN}, 0.5, 0.5);
         refused(
+                "values[0] is ∞ but must be a finite number at values[0]",
+                new double[] {Double.POSITIVE_INFINITY, 1},
+                0.5,
+                0.5);
+        refused(
+                "probabilities[1] is 1.5 but must be at least 0 and at most 1 at probabilities[1]",
+                new double[] {1, 2},
+                0,
+                1.5);
+        refused(
+                "probabilities[1] is NaN but must be at least 0 and at most 1 at probabilities[1]",
+                new double[] {1, 2},
+                0.5,
+                Double.NaN);
+        refused(
                 "probabilities[0] is -0.5 but must be at least 0 and at most 1 at probabilities[0]",
                 new double[] {1, 2},
                 -0.5,
                 1);
         refused("the probabilities add up to 0.9 but must add up to 1 at probabilities", new double[] {1, 2}, 0.5, 0.4);
-        refused("there are 2 values and 1 probabilities at probabilities", new double[] {1, 2}, 1);
+        refused(
+                "the number of probabilities is 1 but must be 2, that of the values at probabilities",
+                new double[] {1, 2},
+                1);
         refused("a table needs at least one value at values", new double[0]);
         refused("a table of 100001 values is too long at values", new double[100_001], evenly(100_001));
         refused(
