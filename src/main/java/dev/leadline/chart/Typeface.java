@@ -5,6 +5,7 @@ import dev.leadline.problem.Refusal;
 import java.awt.Font;
 import java.awt.font.FontRenderContext;
 import java.util.List;
+import java.util.Locale;
 
 /// The letters of a picture: a sans with digits of equal width.
 final class Typeface {
@@ -51,7 +52,7 @@ final class Typeface {
     private static final class Family {
         static final Font FOUND = WANTED.stream()
                 .map(name -> new Font(name, Font.PLAIN, 12))
-                .filter(font -> font.getFamily(java.util.Locale.ROOT).equals(font.getName()))
+                .filter(font -> font.getFamily(Locale.ROOT).equals(font.getName()))
                 .findFirst()
                 .orElseGet(() -> new Font(Font.SANS_SERIF, Font.PLAIN, 12));
     }

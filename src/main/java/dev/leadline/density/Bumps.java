@@ -9,10 +9,9 @@ import java.util.Optional;
 
 /// The mean of normal densities of standard deviation 1 around each of the values.
 ///
-/// The line is cut into pieces one wide, or half of that in the tails, in each of which the density is a polynomial of
-/// degree 15 to rounding
-/// error. Beyond the distance of nine from every value, and where a tail has less than `1e-17`, the sum of the
-/// normal distributions themselves is taken, as far as they contribute.
+/// The line is cut into pieces one wide, or half of that in the tails, in each of which the density is a
+/// polynomial of degree 15 to rounding error. Beyond the distance of nine from every value, and where a tail
+/// has less than `1e-17`, the sum of the normal distributions themselves is taken, as far as they contribute.
 ///
 /// Error: cdf `1e-15` of the mass; relative `1e-11` in tails; density relative `1e-11` (`SmoothedTest`).
 final class Bumps implements Shape {

@@ -154,9 +154,8 @@ public record CurvilinearTrapezoid(double from, double to, double inexact) imple
             return y > 1 ? 1 - below(2 - y) : curved(y) + Math.max(y - inexact, 0) * height(inexact);
         }
 
-        /// The distance from an end up to which the mass is `p <= 1/2`; in the curved part, where the mass is convex,
-        /// by
-        /// Newton's method from the right.
+        /// The distance from an end up to which the mass is `p <= 1/2`; in the curved part, where the mass is
+        /// convex, by Newton's method from the right.
         private double distance(double p) {
             if (!(p > 0 && p <= 0.5)) {
                 return p == 0 ? 0 : Double.NaN;

@@ -36,9 +36,8 @@ public interface Density {
     /// `∞` where infinite, `NaN` where undefined.
     double variance();
 
-    /// Third central moment over the cube of the standard deviation; `∞` or `-∞` where only the third moment of one
-    /// tail
-    /// is infinite, `NaN` where those of both are, or the variance.
+    /// Third central moment over the cube of the standard deviation; `∞` or `-∞` where only the third moment of
+    /// one tail is infinite, `NaN` where those of both are, or the variance.
     default double skewness() {
         return Moments.skewness(this);
     }

@@ -12,8 +12,7 @@ import dev.leadline.numeric.Log;
 /// has an upper end.
 ///
 /// Error: relative 1e-12 in both tails (`DensityTablesTest`), for any shape down to 0. Towards a finite end the
-/// rounding
-/// of `x` counts as often as the distribution is steep.
+/// rounding of `x` counts as often as the distribution is steep.
 ///
 /// Source: Pickands (1975), Annals of Statistics 3, 119-131, with the sign of the shape as in Coles (2001), An
 /// Introduction to Statistical Modeling of Extreme Values.

@@ -13,6 +13,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.OptionalDouble;
 import java.util.SequencedMap;
 import java.util.function.Function;
 
@@ -319,7 +320,7 @@ public final class Knowledge {
                 v -> v >= least && v == Math.rint(v),
                 "",
                 "",
-                java.util.OptionalDouble.empty());
+                OptionalDouble.empty());
     }
 
     private static String percent(double percentage) {

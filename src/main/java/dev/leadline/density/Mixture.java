@@ -13,9 +13,8 @@ import java.util.stream.DoubleStream;
 
 /// A density that is one of several, each with the chance that is its weight.
 ///
-/// Both tails are sums of those of the parts, so they are as accurate as these. Quantiles are searched, to the mass
-/// that
-/// doubles can tell.
+/// Both tails are sums of those of the parts, so they are as accurate as these. Quantiles are searched, to the
+/// mass that doubles can tell.
 public record Mixture(List<Part> parts) implements Shape {
     /// How far the weights may be from adding up to 1.
     private static final double ROUNDING = 1e-9;

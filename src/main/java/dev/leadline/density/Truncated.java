@@ -10,10 +10,10 @@ import java.util.Objects;
 
 /// A density of which only the values in an interval are kept, its ends included.
 ///
-/// What is kept is measured from the nearer tail of the density, and where the two masses that differ are nearly the
-/// same, by quadrature of the density between them: so intervals far out in a tail, and narrow ones anywhere, keep
-/// their
-/// digits. Moments are those of the quantiles. Quantiles go no further out than the density's own at the mass 1e-300.
+/// What is kept is measured from the nearer tail of the density, and where the two masses that differ are
+/// nearly the same, by quadrature of the density between them: so intervals far out in a tail, and narrow ones
+/// anywhere, keep their digits. Moments are those of the quantiles. Quantiles go no further out than the
+/// density's own at the mass 1e-300.
 ///
 /// Error: relative 1e-12 in both tails (`CompositesTest`).
 public final class Truncated implements Shape {

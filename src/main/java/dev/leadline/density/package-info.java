@@ -25,11 +25,11 @@
 ///    `Entry` for each way to enter it, a `FAMILY` that describes it, and a nested `Standard`, the shape at location 0
 ///    and scale 1, whose components are only what distinguishes shapes. Both tails need their own functions. Where the
 ///    quantiles span hundreds of decades, `Standard` is also `Linked`; where the quantile is a square root or less, it
-///    has a `ClosedForm`.
-///    A family that is another one by a name of its own is `Renamed`. Skewness and kurtosis have closed forms that do
-///    not cancel; without one `Moments` computes them from the quantiles.
-///    A discrete one is itself the shape: `WholeNumbers` asks for the logarithm of a probability and both tails at a
-///    whole number, and does the rest. `Staircase` draws of it.
+///    has a `ClosedForm`. Skewness and kurtosis have closed forms that do not cancel; without one `Moments` computes
+///    them from the quantiles.
+///    - A family that is another one by a name of its own is `Renamed`.
+///    - A discrete one is itself the shape: `WholeNumbers` asks for the logarithm of a probability and both tails at a
+///      whole number, and does the rest. `Staircase` draws of it.
 /// 2. One line in `Catalogue`, and its name in a `FamilyGroup`.
 /// 3. Two tables, `src/test/resources/density/name.csv` and `density/moments/name.csv`, from a source that is not this
 ///    code: a class in one of `src/test/python/density_tables*.py`, which write them.

@@ -1,5 +1,6 @@
 package dev.leadline.formula;
 
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -75,7 +76,7 @@ public final class Functions {
 
     /// `pi`, `e` and `deg` (one degree in radians), which a name of a question may shadow.
     public static SequencedMap<String, Double> constants() {
-        return java.util.Collections.unmodifiableSequencedMap(CONSTANTS);
+        return Collections.unmodifiableSequencedMap(CONSTANTS);
     }
 
     static Optional<Operation> operation(String name) {

@@ -9,6 +9,7 @@ import java.util.Arrays;
 import java.util.BitSet;
 import java.util.Deque;
 import java.util.List;
+import java.util.function.IntConsumer;
 
 /// Formulas compiled to kernels over blocks of draws. Immutable, safe for all threads.
 ///
@@ -212,7 +213,7 @@ public final class Program {
         }
 
         /// Calls for each operand that the kernel reads as a column, twice for one that stands twice.
-        private void forEachColumn(Apply apply, java.util.function.IntConsumer action) {
+        private void forEachColumn(Apply apply, IntConsumer action) {
             if (!numberIsLeft(apply)) action.accept(apply.a());
             if (apply.b() >= 0 && !numberIsRight(apply)) action.accept(apply.b());
             if (apply.c() >= 0) action.accept(apply.c());

@@ -26,9 +26,8 @@ import org.apache.commons.statistics.distribution.TDistribution;
 import org.apache.commons.statistics.distribution.TriangularDistribution;
 import org.apache.commons.statistics.distribution.UniformContinuousDistribution;
 
-/// Draws pictures of invented runs and of the sample projects for looking at, into the folder given, and says how much
-/// processor time drawing
-/// took.
+/// Draws pictures of invented runs and of the sample projects for looking at, into the folder given, and says
+/// how much processor time drawing took.
 final class ShowPictures {
     private ShowPictures() {}
 

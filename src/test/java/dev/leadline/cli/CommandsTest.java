@@ -301,9 +301,8 @@ class CommandsTest {
         assertEquals("clopper-pearson", answer.required("intervalKind").asString());
     }
 
-    /// METHODS of zero hits: estimate 0, no standard error, an interval from 0 to the limit. The limits for n = 1000
-    /// are
-    /// 1 - 0.025^(1/1000) and 1 - 0.05^(1/1000) (Clopper and Pearson 1934; arithmetic).
+    /// Where nothing was hit: estimate 0, no standard error, an interval from 0 to the limit. The limits for n =
+    /// 1000 are 1 - 0.025^(1/1000) and 1 - 0.05^(1/1000) (Clopper and Pearson 1934; arithmetic).
     @Test
     void saysALimitWhereNothingWasHit() throws IOException {
         Path never = Files.writeString(

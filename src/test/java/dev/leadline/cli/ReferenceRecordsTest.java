@@ -27,12 +27,12 @@ import tools.jackson.databind.JsonNode;
 /// Every record of `reference-values.json` on integrals, expectations and probabilities that independent points and
 /// finite variance can answer, as a project through the command line.
 ///
-/// Gate of each record: the estimate within `4 sqrt(variance / n)` of the value (fixed seed; chance of a false alarm
-/// 6.3e-5 for each). Beside it the reported standard error against the record's variance: an estimated standard
-/// deviation has a relative error of `sqrt((k - 1) / 4n)` with kurtosis k, of which four are allowed. Values and
-/// variances are read from the record, whose `provenance` names the source (quoted at each group here). Formulas are
-/// the
-/// record's, with `ln` written `log`, `or` `|`, `and` `&`, and the parameters of a case filled in.
+/// Gate of each record: the estimate within `4 sqrt(variance / n)` of the value (fixed seed; chance of a false
+/// alarm 6.3e-5 for each). Beside it the reported standard error against the record's variance: an estimated
+/// standard deviation has a relative error of `sqrt((k - 1) / 4n)` with kurtosis k, of which four are allowed.
+/// Values and variances are read from the record, whose `provenance` names the source (quoted at each group
+/// here). Formulas are the record's, with `ln` written `log`, `or` `|`, `and` `&`, and the parameters of a case
+/// filled in.
 ///
 /// Left out, and why:
 /// - `exp-lognormal-mean` sigma = 2 and 3: the record asks for sigma up to 1 (skewness 414 and 7e5).

@@ -23,9 +23,8 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.MethodSource;
 
-/// What every discrete density promises beyond what `CatalogueTest` asks of all: the same hand-picked members and
-/// random
-/// ones, whose seed is part of their name.
+/// What every discrete density promises beyond what `CatalogueTest` asks of all: the same hand-picked members
+/// and random ones, whose seed is part of their name.
 class DiscreteCatalogueTest {
     private static final double[] MASSES = {
         1e-300, 1e-200, 1e-100, 1e-30, 0x1p-53, 1e-10, 0.001, 0.1, 0.3, 0.5, 0.7, 0.9, 0.999

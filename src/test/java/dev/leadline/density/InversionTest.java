@@ -27,9 +27,8 @@ class InversionTest {
         return IN_USE.computeIfAbsent(density, Inversion::of);
     }
 
-    /// Kinks at probabilities that are borders of cells and at others, a gap in the middle, gaps of all sizes, a spike,
-    /// a
-    /// faint part.
+    /// Kinks at probabilities that are borders of cells and at others, a gap in the middle, gaps of all sizes,
+    /// a spike, a faint part.
     private static final List<Density> BROKEN = List.of(
             new StepDensity(List.of(0.0, 1.0, 10.0, 11.0), List.of(0.5, 0.0, 0.5)),
             new StepDensity(List.of(0.0, 1.0, 1e6, 1e6 + 1), List.of(0.3, 0.0, 0.7)),

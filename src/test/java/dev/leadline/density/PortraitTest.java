@@ -171,9 +171,8 @@ class PortraitTest {
         assertEquals(1, bars.stream().mapToDouble(Portrait.Bar::chance).sum(), 1e-12);
     }
 
-    /// A mass of 50.000623 g known to .000025 g: its quantiles differ from the sixth digit on. The normal value that
-    /// one
-    /// in twenty exceeds is 1.644854.
+    /// A mass of 50.000623 g known to .000025 g: its quantiles differ from the sixth digit on. The normal value
+    /// that one in twenty exceeds is 1.644854.
     @Test
     void digitsShowWhatDiffers() {
         var portrait = Portrait.of(new Normal(50.000623, 25e-6));

@@ -67,9 +67,8 @@ class SamplerTest {
         assertTrue(sums.standardError(0) < .01 * exact);
     }
 
-    /// From 1 on, `x exp(-x²/2)` comes to exp(-1/2); up to 0, to -1; the density drawn from covers the whole line.
-    /// Where
-    /// the formula cannot be evaluated beyond the range, nothing has failed.
+    /// From 1 on, `x exp(-x²/2)` comes to exp(-1/2); up to 0, to -1; the density drawn from covers the whole
+    /// line. Where the formula cannot be evaluated beyond the range, nothing has failed.
     @Test
     void drawsBeyondTheRangeCountNothing() {
         double exact = Math.exp(-.5);

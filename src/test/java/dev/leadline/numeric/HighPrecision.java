@@ -178,9 +178,8 @@ final class HighPrecision {
         return shift >= 0 ? product.shiftLeft(shift) : product.shiftRight(-shift);
     }
 
-    /// By how many ulps `z` misses the normal quantile of `p`, by one step of Newton's method from `z`: what that
-    /// leaves is
-    /// quadratically smaller. `p < 1/2`.
+    /// By how many ulps `z` misses the normal quantile of `p`, by one step of Newton's method from `z`: what
+    /// that leaves is quadratically smaller. `p < 1/2`.
     static double quantileUlps(double p, double z) {
         Value upper = normalUpperTail(-z);
         Value exact = of(p);

@@ -97,9 +97,8 @@ class StreamTest {
 
     // ---- addresses -----------------------------------------------------------------------------------------------
 
-    /// From a few lines of Python (hashlib, and Philox and xoshiro256++ written down again). Run records rest on them,
-    /// so
-    /// they may never change.
+    /// From a few lines of Python (hashlib, and Philox and xoshiro256++ written down again). Run records rest
+    /// on them, so they may never change.
     @Test
     void keepsItsNumbers() {
         assertArrayEquals(PINNED_A, first(Stream.at(ADDRESS), 3));

@@ -1,6 +1,7 @@
 package dev.leadline.desktop.picker;
 
 import dev.leadline.desktop.style.Pixels;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javafx.scene.AccessibleRole;
@@ -32,7 +33,7 @@ final class DrawingView extends Region {
         image.setSmooth(false);
         line.getStyleClass().add("cross");
         line.setVisible(false);
-        for (var n : java.util.List.of(image, line)) {
+        for (var n : List.of(image, line)) {
             n.setMouseTransparent(true);
             n.setManaged(false);
         }

@@ -4,6 +4,7 @@ import dev.leadline.density.Catalogue;
 import dev.leadline.density.Family;
 import dev.leadline.density.FamilyGroup;
 import dev.leadline.desktop.style.Styles;
+import java.util.Arrays;
 import java.util.Locale;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
@@ -108,7 +109,7 @@ final class FamilyForm implements Form {
 
     private static boolean isFound(FamilyGroup group, Family family, String words) {
         String text = (family.name() + " " + family.use() + " " + group.title()).toLowerCase(Locale.ROOT);
-        return java.util.Arrays.stream(words.split("\\s+")).allMatch(text::contains);
+        return Arrays.stream(words.split("\\s+")).allMatch(text::contains);
     }
 
     private Node entry(Family family) {

@@ -6,6 +6,7 @@ import dev.leadline.desktop.working.Messages;
 import dev.leadline.model.DensityDraft;
 import dev.leadline.model.DensityWords;
 import dev.leadline.numeric.Significant;
+import java.util.List;
 import javafx.geometry.HPos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
@@ -64,7 +65,7 @@ final class FitsTable extends VBox {
 
     private void show(DataViewModel.State state) {
         table.getChildren().clear();
-        messages.show(state instanceof DataViewModel.State.Refused(var problems) ? problems : java.util.List.of());
+        messages.show(state instanceof DataViewModel.State.Refused(var problems) ? problems : List.of());
         fit.setDisable(state instanceof DataViewModel.State.Fitting);
         fit.setText(state instanceof DataViewModel.State.Fitting ? "fitting\u2026" : "fit families to it");
         remark.setText("");

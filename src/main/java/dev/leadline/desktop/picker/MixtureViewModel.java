@@ -7,6 +7,7 @@ import dev.leadline.model.DensityDraft.Mixture;
 import dev.leadline.model.DensityDraft.Part;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.function.UnaryOperator;
 
 /// A density of several parts, each with its weight.
 final class MixtureViewModel {
@@ -50,7 +51,7 @@ final class MixtureViewModel {
         edit(parts -> Edits.without(parts, k));
     }
 
-    private void edit(java.util.function.UnaryOperator<List<Part>> change) {
+    private void edit(UnaryOperator<List<Part>> change) {
         project().settle();
         at.edit(
                 ".mixture",

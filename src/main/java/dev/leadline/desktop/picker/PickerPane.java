@@ -7,6 +7,7 @@ import dev.leadline.model.Draft.InputDraft;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.function.Supplier;
 import javafx.beans.binding.Bindings;
@@ -154,7 +155,7 @@ public final class PickerPane extends BorderPane {
 
     private ToggleButton view(String text, String tip, View view, ToggleGroup group) {
         var button = new ToggleButton(text);
-        button.setId("view-" + view.name().toLowerCase(java.util.Locale.ROOT));
+        button.setId("view-" + view.name().toLowerCase(Locale.ROOT));
         button.getStyleClass().add("small");
         button.setUserData(view);
         button.setToggleGroup(group);

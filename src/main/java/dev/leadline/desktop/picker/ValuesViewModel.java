@@ -5,7 +5,9 @@ import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.model.DensityDraft.Values;
 import dev.leadline.problem.Problem;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
 
@@ -36,7 +38,7 @@ final class ValuesViewModel {
             }
             String[] words = line.split("[\\s;]+");
             var value = NumberText.read(words[0]);
-            var probability = words.length == 2 ? NumberText.read(words[1]) : java.util.OptionalDouble.empty();
+            var probability = words.length == 2 ? NumberText.read(words[1]) : OptionalDouble.empty();
             if (value.isEmpty() || probability.isEmpty()) {
                 project()
                         .unread(
@@ -80,7 +82,7 @@ final class ValuesViewModel {
                 .lines()
                 .map(line -> line.strip().replaceAll("[\\s;]+", " "))
                 .filter(line -> !line.isEmpty())
-                .map(line -> java.util.Arrays.stream(line.split(" "))
+                .map(line -> Arrays.stream(line.split(" "))
                         .map(word -> NumberText.read(word).isPresent()
                                 ? NumberText.show(NumberText.read(word).getAsDouble())
                                 : word)

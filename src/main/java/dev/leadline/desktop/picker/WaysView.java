@@ -1,6 +1,7 @@
 package dev.leadline.desktop.picker;
 
 import dev.leadline.desktop.style.Styles;
+import java.util.Locale;
 import java.util.function.Consumer;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
@@ -24,7 +25,7 @@ final class WaysView extends VBox {
             button.setId("way-"
                     + (way instanceof Way.Known(var k)
                             ? k.word()
-                            : ((Way.Given) way).name().toLowerCase(java.util.Locale.ROOT)));
+                            : ((Way.Given) way).name().toLowerCase(Locale.ROOT)));
             button.getStyleClass().setAll("button", "choice");
             button.setWrapText(true);
             button.setMaxWidth(Double.MAX_VALUE);

@@ -3,6 +3,7 @@ package dev.leadline.desktop.stage;
 import dev.leadline.chart.LaneLook;
 import dev.leadline.desktop.style.Styles;
 import java.util.List;
+import java.util.Locale;
 import javafx.geometry.HPos;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
@@ -87,7 +88,7 @@ final class LaneTable extends GridPane {
             case THIRD -> new Polygon(0, 10, 6, 0, 12, 10);
             case FOURTH -> new Circle(5);
         };
-        shape.getStyleClass().add("lane-" + look.name().toLowerCase(java.util.Locale.ROOT));
+        shape.getStyleClass().add("lane-" + look.name().toLowerCase(Locale.ROOT));
         return shape;
     }
 }

@@ -3,6 +3,7 @@ package dev.leadline.desktop.stage;
 import dev.leadline.chart.Picture;
 import dev.leadline.chart.Reading;
 import dev.leadline.desktop.style.Pixels;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javafx.scene.AccessibleRole;
@@ -42,7 +43,7 @@ final class PictureView extends Region {
         at.getStyleClass().add("cross-point");
         cross.setVisible(false);
         at.setVisible(false);
-        for (var n : java.util.List.of(image, cross, at)) {
+        for (var n : List.of(image, cross, at)) {
             n.setMouseTransparent(true);
             n.setManaged(false);
         }

@@ -1,6 +1,7 @@
 package dev.leadline.desktop.working;
 
 import dev.leadline.desktop.style.Styles;
+import java.util.ArrayList;
 import java.util.function.Consumer;
 import java.util.function.Supplier;
 import javafx.geometry.Pos;
@@ -96,7 +97,7 @@ final class DemandsView {
         both.setVisible(model.hasTwoTolerances());
         both.setManaged(model.hasTwoTolerances());
         var project = model.project();
-        var tolerance = new java.util.ArrayList<>(project.problemsAt("$.tolerance"));
+        var tolerance = new ArrayList<>(project.problemsAt("$.tolerance"));
         tolerance.addAll(project.problemsAt("$.confidence"));
         toleranceMessages.show(tolerance);
         stopMessages.show(project.problemsAt("$.stop"));

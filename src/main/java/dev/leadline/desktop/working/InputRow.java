@@ -8,6 +8,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalInt;
 import java.util.function.Consumer;
+import java.util.function.Function;
 import javafx.css.PseudoClass;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
@@ -164,12 +165,7 @@ final class InputRow extends VBox {
     }
 
     private Field field(
-            String what,
-            String tip,
-            int columns,
-            String path,
-            java.util.function.Function<InputDraft, String> get,
-            Consumer<String> set) {
+            String what, String tip, int columns, String path, Function<InputDraft, String> get, Consumer<String> set) {
         var field = new Field(what + " of the input", tip, columns, set, model.project()::settle);
         refreshers.add(() -> {
             field.show(get.apply(model.inputs().get(index)));
