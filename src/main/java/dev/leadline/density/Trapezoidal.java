@@ -3,7 +3,6 @@ package dev.leadline.density;
 import static dev.leadline.density.Rule.between;
 import static dev.leadline.density.Rule.finite;
 
-import dev.leadline.numeric.Log;
 import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.List;
@@ -14,7 +13,7 @@ import java.util.List;
 /// Error: relative 1e-12 in both tails (`DensityTablesTest`).
 ///
 /// Source: JCGM 101:2008, 6.4.4, there symmetric.
-public record Trapezoidal(double from, double flatFrom, double flatTo, double to) implements Scaled {
+public record Trapezoidal(double from, double flatFrom, double flatTo, double to) implements StraightSided {
     private static final Entry ENTRY = Entry.of(
                     v -> new Trapezoidal(v[0], v[1], v[2], v[3]),
                     finite("from", "least value"),
@@ -79,73 +78,8 @@ public record Trapezoidal(double from, double flatFrom, double flatTo, double to
     }
 
     @Override
-    public double location() {
-        return from;
-    }
-
-    @Override
-    public double scale() {
-        return to - from;
-    }
-
-    @Override
     public Standard standard() {
         return new Standard((flatFrom - from) / scale(), (flatTo - flatFrom) / scale(), (to - flatTo) / scale());
-    }
-
-    @Override
-    public double pdf(double x) {
-        return standard().height(fromLow(x), fromHigh(x)) / scale();
-    }
-
-    @Override
-    public double logPdf(double x) {
-        return Log.log(pdf(x));
-    }
-
-    @Override
-    public void logPdf(double[] x, double[] out, int n) {
-        for (int i = 0; i < n; i++) {
-            out[i] = logPdf(x[i]);
-        }
-    }
-
-    @Override
-    public double cdf(double x) {
-        return standard().below(fromLow(x), fromHigh(x));
-    }
-
-    @Override
-    public double survival(double x) {
-        return standard().mirrored().below(fromHigh(x), fromLow(x));
-    }
-
-    @Override
-    public double quantile(double p) {
-        return at(standard().quantile(p), standard().mirrored().upperQuantile(p));
-    }
-
-    @Override
-    public double upperQuantile(double q) {
-        return at(standard().upperQuantile(q), standard().mirrored().quantile(q));
-    }
-
-    /// The point at these distances from the ends, measured from the nearer one.
-    private double at(double fromLow, double fromHigh) {
-        return fromHigh < fromLow ? Math.fma(-scale(), fromHigh, to) : Math.fma(scale(), fromLow, from);
-    }
-
-    @Override
-    public Support support() {
-        return new Support(from, to);
-    }
-
-    private double fromLow(double x) {
-        return (x - from) / scale();
-    }
-
-    private double fromHigh(double x) {
-        return (to - x) / scale();
     }
 
     /// The trapezoidal density between 0 and 1.
@@ -153,9 +87,10 @@ public record Trapezoidal(double from, double flatFrom, double flatTo, double to
     /// @param rise length of the rising part
     /// @param top length of the flat part
     /// @param fall length of the falling part
-    record Standard(double rise, double top, double fall) implements Shape {
+    record Standard(double rise, double top, double fall) implements StraightSided.Standard {
 
-        Standard mirrored() {
+        @Override
+        public Standard mirrored() {
             return new Standard(fall, top, rise);
         }
 
@@ -169,16 +104,16 @@ public record Trapezoidal(double from, double flatFrom, double flatTo, double to
             return 0.5 * rise * most();
         }
 
-        /// The density at the point that lies `z` from 0 and `y` from 1.
-        private double height(double z, double y) {
+        @Override
+        public double height(double z, double y) {
             if (!(z >= 0 && y >= 0)) {
                 return z < 0 || y < 0 ? 0 : z;
             }
             return most() * Math.min(z < rise ? z / rise : 1, y < fall ? y / fall : 1);
         }
 
-        /// The mass below the point that lies `z` from 0 and `y` from 1.
-        private double below(double z, double y) {
+        @Override
+        public double below(double z, double y) {
             if (z <= 0) {
                 return 0;
             }
@@ -192,26 +127,6 @@ public record Trapezoidal(double from, double flatFrom, double flatTo, double to
             double beyond = y < fall ? 0.5 * (z - flat) * (1 + y / fall) : 0;
             double within = y < fall ? top : z - rise;
             return Math.min(risingMass() + most() * (within + beyond), 1);
-        }
-
-        @Override
-        public double pdf(double z) {
-            return height(z, 1 - z);
-        }
-
-        @Override
-        public double logPdf(double z) {
-            return Log.log(pdf(z));
-        }
-
-        @Override
-        public double cdf(double z) {
-            return below(z, 1 - z);
-        }
-
-        @Override
-        public double survival(double z) {
-            return mirrored().below(1 - z, z);
         }
 
         @Override
@@ -276,11 +191,6 @@ public record Trapezoidal(double from, double flatFrom, double flatTo, double to
                 case 3 -> third + distance * (3 * variance + square);
                 default -> kurtosis * variance * variance + 4 * distance * third + square * (6 * variance + square);
             };
-        }
-
-        @Override
-        public Support support() {
-            return new Support(0, 1);
         }
     }
 }

@@ -2,7 +2,6 @@ package dev.leadline.density;
 
 import static dev.leadline.density.Rule.finite;
 
-import dev.leadline.numeric.Log;
 import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.List;
@@ -11,7 +10,7 @@ import java.util.List;
 /// may be at an end.
 ///
 /// Error: relative 1e-12 in both tails (`DensityTablesTest`).
-public record Triangular(double from, double mode, double to) implements Scaled {
+public record Triangular(double from, double mode, double to) implements StraightSided {
     private static final Entry ENTRY = Entry.of(
                     v -> new Triangular(v[0], v[1], v[2]),
                     finite("from", "least value"),
@@ -41,60 +40,8 @@ public record Triangular(double from, double mode, double to) implements Scaled 
     }
 
     @Override
-    public double location() {
-        return from;
-    }
-
-    @Override
-    public double scale() {
-        return to - from;
-    }
-
-    @Override
     public Standard standard() {
         return new Standard((mode - from) / scale(), (to - mode) / scale());
-    }
-
-    @Override
-    public double pdf(double x) {
-        return Math.min(standard().rising(fromLow(x)), standard().mirrored().rising(fromHigh(x))) / scale();
-    }
-
-    @Override
-    public double logPdf(double x) {
-        return Log.log(pdf(x));
-    }
-
-    @Override
-    public void logPdf(double[] x, double[] out, int n) {
-        for (int i = 0; i < n; i++) {
-            out[i] = logPdf(x[i]);
-        }
-    }
-
-    @Override
-    public double cdf(double x) {
-        return standard().below(fromLow(x), fromHigh(x));
-    }
-
-    @Override
-    public double survival(double x) {
-        return standard().mirrored().below(fromHigh(x), fromLow(x));
-    }
-
-    @Override
-    public double quantile(double p) {
-        return at(standard().quantile(p), standard().mirrored().upperQuantile(p));
-    }
-
-    @Override
-    public double upperQuantile(double q) {
-        return at(standard().upperQuantile(q), standard().mirrored().quantile(q));
-    }
-
-    /// The point at these distances from the ends, measured from the nearer one.
-    private double at(double fromLow, double fromHigh) {
-        return fromHigh < fromLow ? Math.fma(-scale(), fromHigh, to) : Math.fma(scale(), fromLow, from);
     }
 
     @Override
@@ -102,27 +49,15 @@ public record Triangular(double from, double mode, double to) implements Scaled 
         return from / 3 + mode / 3 + to / 3;
     }
 
-    @Override
-    public Support support() {
-        return new Support(from, to);
-    }
-
-    private double fromLow(double x) {
-        return (x - from) / scale();
-    }
-
-    private double fromHigh(double x) {
-        return (to - x) / scale();
-    }
-
     /// The triangular density between 0 and 1.
     ///
     /// @param mode distance of the mode from 0
     /// @param rest distance of the mode from 1
-    record Standard(double mode, double rest) implements Shape, ClosedForm {
+    record Standard(double mode, double rest) implements StraightSided.Standard, ClosedForm {
         private static final double SQRT_2 = 1.4142135623730951;
 
-        Standard mirrored() {
+        @Override
+        public Standard mirrored() {
             return new Standard(rest, mode);
         }
 
@@ -131,8 +66,13 @@ public record Triangular(double from, double mode, double to) implements Scaled 
             return z < 0 ? 0 : mode == 0 ? Double.isNaN(z) ? z : Double.POSITIVE_INFINITY : 2 * (z / mode);
         }
 
-        /// The mass below the point that lies `z` from 0 and `y` from 1.
-        private double below(double z, double y) {
+        @Override
+        public double height(double z, double y) {
+            return Math.min(rising(z), mirrored().rising(y));
+        }
+
+        @Override
+        public double below(double z, double y) {
             if (z <= 0) {
                 return 0;
             }
@@ -140,26 +80,6 @@ public record Triangular(double from, double mode, double to) implements Scaled 
                 return 1;
             }
             return z < mode ? z * (z / mode) : Math.min(mode + (z - mode) * (1 + y / rest), 1);
-        }
-
-        @Override
-        public double pdf(double z) {
-            return Math.min(rising(z), mirrored().rising(1 - z));
-        }
-
-        @Override
-        public double logPdf(double z) {
-            return Log.log(pdf(z));
-        }
-
-        @Override
-        public double cdf(double z) {
-            return below(z, 1 - z);
-        }
-
-        @Override
-        public double survival(double z) {
-            return mirrored().below(1 - z, z);
         }
 
         @Override
@@ -204,11 +124,6 @@ public record Triangular(double from, double mode, double to) implements Scaled 
         @Override
         public double excessKurtosis() {
             return -0.6;
-        }
-
-        @Override
-        public Support support() {
-            return new Support(0, 1);
         }
     }
 }
