@@ -27,10 +27,7 @@ public final class Integrated implements Shape {
     private final double top;
     private final double logArea;
     private final Pieces pieces;
-    private final double mean;
-    private final double variance;
-    private final double skewness;
-    private final double excessKurtosis;
+    private final Moments.Four moments;
     private final List<Support> gaps;
 
     /// A density that is finite everywhere, and not much narrower than its distance from 0 and the ends of the range.
@@ -84,11 +81,7 @@ public final class Integrated implements Shape {
         this.pieces = new Pieces(
                 cells.stream().filter(c -> c.mass > 0).map(c -> c.piece(area)).toArray(Piece[]::new));
         this.gaps = gaps(cells, NARROW * (quantile(0.75) - quantile(0.25)));
-        var moments = new PieceMoments(cells, area, orders, quantile(0.5), quantile(0.75) - quantile(0.25));
-        this.mean = moments.mean();
-        this.variance = moments.variance();
-        this.skewness = moments.skewness();
-        this.excessKurtosis = moments.excessKurtosis();
+        this.moments = PieceMoments.of(cells, area, orders, quantile(0.5), quantile(0.75) - quantile(0.25));
     }
 
     /// @param least width
@@ -172,22 +165,22 @@ public final class Integrated implements Shape {
 
     @Override
     public double mean() {
-        return mean;
+        return moments.mean();
     }
 
     @Override
     public double variance() {
-        return variance;
+        return moments.variance();
     }
 
     @Override
     public double skewness() {
-        return skewness;
+        return moments.skewness();
     }
 
     @Override
     public double excessKurtosis() {
-        return excessKurtosis;
+        return moments.excessKurtosis();
     }
 
     @Override

@@ -2,33 +2,33 @@ package dev.leadline.density;
 
 import java.util.List;
 
-/// Moments of a density by quadrature over its cells, in units of the distance of its quartiles: about the
-/// median first, then about the mean.
-record PieceMoments(double mean, double variance, double skewness, double excessKurtosis) {
+/// Moments of a density by quadrature over its cells, in units of the distance of its quartiles: about the median
+/// first, then about the mean.
+final class PieceMoments {
     private static final double[][] BINOMIAL = {{1}, {1, 1}, {1, 2, 1}, {1, 3, 3, 1}, {1, 4, 6, 4, 1}};
+
+    private PieceMoments() {}
 
     /// @param total mass of all cells
     /// @param median may be about right only
     /// @param unit a length of the order of the standard deviation
-    PieceMoments(List<Refinement.Cell> cells, double total, TailOrders orders, double median, double unit) {
+    static Moments.Four of(List<Refinement.Cell> cells, double total, TailOrders orders, double median, double unit) {
         double least = orders.least();
-        double shift = least > 1 ? about(median, unit, 1, cells) / total : Double.NaN;
-        double mean = least > 1 ? median + unit * shift : infinite(orders);
-        double second = least > 2 ? about(mean, unit, 2, cells) / total : Double.POSITIVE_INFINITY;
-        double third = least > 3 ? about(mean, unit, 3, cells) / total : Double.NaN;
-        double fourth = least > 4 ? about(mean, unit, 4, cells) / total : Double.POSITIVE_INFINITY;
-        this(
+        if (least <= 1) {
+            return new Moments.Four(Moments.infinite(orders, 1), Double.NaN, Double.NaN, Double.NaN);
+        }
+        double mean = median + unit * (about(median, unit, 1, cells) / total);
+        if (least <= 2) {
+            return new Moments.Four(mean, Double.POSITIVE_INFINITY, Double.NaN, Double.NaN);
+        }
+        double second = about(mean, unit, 2, cells) / total;
+        return new Moments.Four(
                 mean,
-                least > 1 ? second * unit * unit : Double.NaN,
-                third / (second * Math.sqrt(second)),
-                least > 2 ? fourth / second / second - 3 : Double.NaN);
-    }
-
-    /// A mean that no number is.
-    private static double infinite(TailOrders orders) {
-        boolean lower = orders.lower() <= 1;
-        boolean upper = orders.upper() <= 1;
-        return lower && upper ? Double.NaN : lower ? Double.NEGATIVE_INFINITY : Double.POSITIVE_INFINITY;
+                second * unit * unit,
+                least > 3
+                        ? about(mean, unit, 3, cells) / total / (second * Math.sqrt(second))
+                        : Moments.infinite(orders, 3),
+                least > 4 ? about(mean, unit, 4, cells) / total / second / second - 3 : Double.POSITIVE_INFINITY);
     }
 
     /// The mean of a power of the distance from the centre, in the unit, times the mass of all.

@@ -248,4 +248,14 @@ class CompositesTest {
                 Composites.mixture(0.5, NORMAL, 0.5, cauchy).tailOrders());
         assertTrue(Double.isNaN(Composites.mixture(0.5, NORMAL, 0.5, cauchy).mean()));
     }
+
+    /// A third moment that is infinite in one tail has its sign, however the density is known.
+    @Test
+    void infiniteSkewnessHasTheSignOfItsTail() {
+        var student = new Student(2.5, 0, 1);
+        assertEquals(INFINITY, Truncated.of(student, 0, INFINITY).skewness());
+        assertEquals(-INFINITY, Truncated.of(student, -INFINITY, 0).skewness());
+        var power = Integrated.of("x^-3.5", x -> 1 / (x * x * x * Math.sqrt(x)), new Support(1, INFINITY));
+        assertEquals(INFINITY, power.skewness());
+    }
 }
