@@ -13,9 +13,6 @@ import java.util.HexFormat;
 /// Probabilities are counts over n, so that both tails are correctly rounded. Draws need no table: the k-th of n
 /// ordered values is drawn for u from `(k - 1) / n` to `k / n`.
 public final class Empirical implements Shape, ClosedForm {
-    /// A probability that misses a multiple of 1/n by so little, relative, is that multiple.
-    private static final double ROUNDING = 1e-13;
-
     private final double[] sorted;
     private final double mean;
     private final double variance;
@@ -102,12 +99,12 @@ public final class Empirical implements Shape, ClosedForm {
 
     @Override
     public double inner(double p) {
-        return at(Math.ceil(p * sorted.length * (1 - ROUNDING)) - 1);
+        return at(Math.ceil(p * sorted.length * (1 - Discrete.ROUNDING)) - 1);
     }
 
     @Override
     public double upperInner(double q) {
-        return at(sorted.length - 1 - Math.floor(q * sorted.length * (1 + ROUNDING)));
+        return at(sorted.length - 1 - Math.floor(q * sorted.length * (1 + Discrete.ROUNDING)));
     }
 
     private double at(double index) {
