@@ -11,6 +11,8 @@ import dev.leadline.model.DensityDraft.Member;
 import dev.leadline.model.DensityDraft.Mixture;
 import dev.leadline.model.DensityDraft.Typed;
 import dev.leadline.model.DensityDraft.Values;
+import dev.leadline.numeric.Significant;
+import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -20,6 +22,9 @@ import java.util.function.Supplier;
 
 /// Makes densities of their drafts.
 final class Densities {
+
+    /// A truncated density that keeps less is noted.
+    private static final double RARE = 1e-3;
 
     private final DataFiles files;
     private final SequencedMap<String, Double> constants;
@@ -86,11 +91,19 @@ final class Densities {
     }
 
     private Optional<Density> truncated(Density density, DensityDraft draft, String path) {
-        return draft.truncate().isEmpty()
-                ? Optional.of(density)
-                : draft.truncate()
-                        .flatMap(ends -> findings.made(
-                                _ -> path + ".truncate", () -> Truncated.of(density, ends.low(), ends.high())));
+        if (draft.truncate().isEmpty()) {
+            return Optional.of(density);
+        }
+        var ends = draft.truncate().get();
+        var made = findings.made(_ -> path + ".truncate", () -> Truncated.of(density, ends.low(), ends.high()));
+        made.filter(truncated -> truncated.keptMass() < RARE)
+                .ifPresent(truncated -> findings.note(
+                        path + ".truncate",
+                        Problem.of("truncate keeps %s of the density"
+                                        .formatted(Significant.text(truncated.keptMass(), 2)))
+                                .because("All draws come from this small part.")
+                                .tryThis("Check the unit of the ends.")));
+        return made.map(truncated -> truncated);
     }
 
     private Optional<Density> made(String path, Supplier<Density> density) {

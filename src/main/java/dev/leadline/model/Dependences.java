@@ -30,6 +30,9 @@ import java.util.stream.Stream;
 
 /// Makes the dependence of inputs of its draft.
 final class Dependences {
+    /// Excess kurtosis above which few draws decide a product; a lognormal density of sigma 1.15 has it.
+    private static final double WILD = 1000;
+
     private static final String PATH = "$.dependence";
 
     /// Changed correlations that are named.
@@ -319,6 +322,19 @@ final class Dependences {
         }
         for (int i = 0; i < dependence.ties().size(); i++) {
             Tie tie = dependence.ties().get(i);
+            List<String> wild = IntStream.of(tie.one(), tie.other())
+                    .mapToObj(inputs::get)
+                    .filter(input -> !(input.drawn().excessKurtosis() <= WILD))
+                    .map(Input::name)
+                    .toList();
+            if (!wild.isEmpty() && tie.measure() == Measure.PEARSON) {
+                notes.add(Problem.of("pearson is hardly seen in draws of %s".formatted(String.join(" and ", wild)))
+                        .because("Rare, large values decide it; what is achieved in some draws scatters far beyond its"
+                                + " interval.")
+                        .tryThis("Give spearman, which every draw speaks of.")
+                        .at(Place.of("%s.pairs[%d].%s"
+                                .formatted(PATH, i, tie.measure().word()))));
+            }
             List<String> discrete = IntStream.of(tie.one(), tie.other())
                     .mapToObj(inputs::get)
                     .filter(input -> input.drawn().isDiscrete())

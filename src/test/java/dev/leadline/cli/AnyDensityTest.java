@@ -67,6 +67,13 @@ class AnyDensityTest {
         assertTrue(outcome.err().contains("no density between s = -1 and 1"), outcome::err);
     }
 
+    /// The kept mass by mpmath: 3.2503307e-15.
+    @Test
+    void saysHowLittleATruncationKeeps() throws IOException {
+        var outcome = run("{\"family\": \"normal\", \"mean\": 1500, \"sd\": 200, \"truncate\": [0.5, 3]}", "s");
+        assertTrue(outcome.err().contains("truncate keeps 3.3e-15 of the density"), outcome::err);
+    }
+
     @Test
     void pointsIntoTheFormulaOfADensity() throws IOException {
         var outcome = run(
