@@ -85,6 +85,12 @@ public final class DrawsByDensity {
 
                 %s
 
+                What is slow by its nature: quantiles that span more decades than doubles hold (gamma and Weibull of very small \
+                shape, beta of parameters below about 0.05) or lie within rounding errors of 1 (lognormal of tiny sigma) go \
+                through an exponential function; where parts of a mixture lie far apart, tables have most bits, which leave \
+                the first level of the cache, and cells that are searched; discrete densities of more values than are kept \
+                cost a search or a quantile each.
+
                 | density | ns | times the normal |
                 |---|---|---|
                 """.formatted(ROUNDS, BLOCK * BLOCKS, machine));

@@ -32,10 +32,61 @@ enum Link {
                 x[i] = Math.abs(e[i] / (1 + e[i]) - Double.longBitsToDouble(upper & ONE));
             }
         }
+    },
+
+    /// For shapes from 0 to 1, the quantile itself up to 1/2; beyond, what it is less than 1, with a minus sign. So
+    /// rounding loses nothing near either end.
+    ENDS {
+        @Override
+        double tabulated(double logit) {
+            return logit < 0 ? IncompleteBeta.logistic(logit) : -IncompleteBeta.logistic(-logit);
+        }
+
+        @Override
+        boolean isBelow(double a, double b) {
+            return isBeyond(a) == isBeyond(b) ? a < b : isBeyond(b);
+        }
+
+        @Override
+        double[] smooth(double[] y) {
+            if (isBeyond(y[0]) == isBeyond(y[y.length - 1])) {
+                return y;
+            }
+            var x = y.clone();
+            invert(x, x.length);
+            return x;
+        }
+
+        @Override
+        void invert(double[] x, int n) {
+            for (int i = 0; i < n; i++) {
+                long beyond = Double.doubleToRawLongBits(x[i]) >> 63;
+                x[i] += Double.longBitsToDouble(beyond & ONE);
+            }
+        }
+
+        private static boolean isBeyond(double value) {
+            return Double.doubleToRawLongBits(value) < 0;
+        }
     };
 
     private static final long ONE = 0x3ff0_0000_0000_0000L;
 
-    /// From the links in `x` to the quantiles, in place.
+    /// What is tabulated, from what a [linked][Linked] shape tells.
+    double tabulated(double linked) {
+        return linked;
+    }
+
+    /// Whether a, which is tabulated, stands for a smaller quantile than b.
+    boolean isBelow(double a, double b) {
+        return a < b;
+    }
+
+    /// What is tabulated at the points of one cell, in one form, so that a polynomial can pass through.
+    double[] smooth(double[] y) {
+        return y;
+    }
+
+    /// From what is tabulated, in `x`, to the quantiles, in place.
     abstract void invert(double[] x, int n);
 }

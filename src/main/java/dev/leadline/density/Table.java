@@ -14,7 +14,7 @@ import java.util.HexFormat;
 /// quantile, has [parts][Parts]. A table without cells is legal: then every draw costs a quantile.
 ///
 /// @param cells the coefficients, lowest degree first, where [#index] says; the last is `NaN` in a cell that has parts,
-///     and the first two say which: from, and up to, but not with
+///     and the first is its number among those
 /// @param parts empty where every cell is one polynomial
 record Table(Density shape, Link link, int bits, double[] cells, Parts parts, double uError) implements Curve {
     /// Octaves below 1/2, down to `2^-53`, the smallest probability drawn; octave 52 has the median alone.
@@ -118,7 +118,7 @@ record Table(Density shape, Link link, int bits, double[] cells, Parts parts, do
     private double part(int shift, int first, int upper, double tail) {
         long address = Double.doubleToRawLongBits(tail);
         int k = index(address, shift, first, upper);
-        return parts.at((int) cells[k], (int) cells[k + 1], argument(address, shift));
+        return parts.at((int) cells[k], argument(address, shift));
     }
 
     /// From the quantile function itself, where there are no cells.

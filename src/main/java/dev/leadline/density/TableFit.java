@@ -30,11 +30,15 @@ final class TableFit {
     private static final double FEW_ULP = 1e-15;
 
     private static final int LEAST_BITS = 5;
+
+    /// What a plain table costs no more than one that has ends.
+    private static final int FEW_BITS = 6;
+
     private static final int MOST_BITS = 8;
 
-    /// The probability of a draw in a cell of parts, where a table of more bits is no better; such a draw costs as much
-    /// as ten others.
-    private static final double SELDOM = 0.02;
+    /// The probability of a draw in a cell of parts above which a table of more bits is faster; such a draw costs as
+    /// much as ten others.
+    private static final double SELDOM = 0.004;
 
     /// A cell that has more parts than this is not spoilt by a few kinks or jumps, but by noise.
     private static final int PARTS_OF_CELL = 400;
@@ -59,7 +63,8 @@ final class TableFit {
     private final Link link;
     private final int bits;
     private final double[] cells;
-    private final List<double[]> parts = new ArrayList<>();
+    private final List<List<double[]>> parts = new ArrayList<>();
+    private int partsInAll;
     private double worst;
 
     private TableFit(Density shape, Link link, int bits) {
@@ -72,24 +77,31 @@ final class TableFit {
     /// The smallest and fastest table that is accurate; where none is, one that has no cells.
     ///
     /// A shape that has a link is smooth through it: what its plain table misses, it misses by rounding, and
-    /// parts would only hide that.
+    /// parts would only hide that. Up to 7 bits its table is faster than an exponential function.
     static Table of(Density shape) {
-        double most = shape instanceof Linked ? 0 : SELDOM;
-        for (int bits = LEAST_BITS; bits <= MOST_BITS; bits++) {
-            var plain = new TableFit(shape, Link.NONE, bits).table(most);
-            if (plain.isPresent()) {
-                return plain.get();
+        Optional<Table> table = Optional.empty();
+        if (shape instanceof Linked linked) {
+            table = least(shape, Link.NONE, LEAST_BITS, FEW_BITS, 0);
+            if (table.isEmpty() && linked.link() == Link.LOGIT) {
+                table = least(shape, Link.ENDS, LEAST_BITS, MOST_BITS, 0);
             }
-            if (bits > LEAST_BITS && shape instanceof Linked linked) {
-                for (int linkedBits = LEAST_BITS; linkedBits <= MOST_BITS; linkedBits++) {
-                    var table = new TableFit(shape, linked.link(), linkedBits).table(most);
-                    if (table.isPresent()) {
-                        return table.get();
-                    }
-                }
+            table = table.or(() -> least(shape, Link.NONE, FEW_BITS + 1, MOST_BITS - 1, 0))
+                    .or(() -> least(shape, linked.link(), LEAST_BITS, MOST_BITS, 0));
+        } else {
+            table = least(shape, Link.NONE, LEAST_BITS, MOST_BITS, SELDOM);
+        }
+        return table.or(() -> new TableFit(shape, Link.NONE, MOST_BITS).table(1))
+                .orElseGet(() -> slow(shape));
+    }
+
+    private static Optional<Table> least(Density shape, Link link, int from, int to, double most) {
+        for (int bits = from; bits <= to; bits++) {
+            var table = new TableFit(shape, link, bits).table(most);
+            if (table.isPresent()) {
+                return table;
             }
         }
-        return new TableFit(shape, Link.NONE, MOST_BITS).table(1).orElseGet(() -> slow(shape));
+        return Optional.empty();
     }
 
     /// Without cells: every draw costs a quantile.
@@ -124,25 +136,13 @@ final class TableFit {
                 return Optional.empty();
             }
         }
-        return Optional.of(new Table(shape, link, bits, cells, packed(), worst));
-    }
-
-    private Parts packed() {
-        if (parts.isEmpty()) {
-            return Parts.NONE;
-        }
-        var from = new double[parts.size()];
-        var coefficients = new double[parts.size() * Table.STRIDE];
-        for (int i = 0; i < from.length; i++) {
-            from[i] = parts.get(i)[Table.STRIDE];
-            System.arraycopy(parts.get(i), 0, coefficients, i * Table.STRIDE, Table.STRIDE);
-        }
-        return new Parts(from, coefficients);
+        return Optional.of(new Table(shape, link, bits, cells, Parts.of(parts, StrictMath.scalb(1.0, -bits)), worst));
     }
 
     /// A value, or the limit that it must not pass on the way to the middle.
-    private static double within(double value, double limit, int tail) {
-        return tail == 0 ? Math.min(value, limit) : Math.max(value, limit);
+    private double within(double value, double limit, int tail) {
+        boolean passes = tail == 0 ? link.isBelow(limit, value) : link.isBelow(value, limit);
+        return passes ? limit : value;
     }
 
     /// @param octave counted from the smallest probability
@@ -176,7 +176,7 @@ final class TableFit {
             return tail == 0 ? shape.quantile(p) : shape.upperQuantile(p);
         }
         var linked = (Linked) shape;
-        return tail == 0 ? linked.linked(p) : linked.upperLinked(p);
+        return link.tabulated(tail == 0 ? linked.linked(p) : linked.upperLinked(p));
     }
 
     /// Fits the cells of an octave.
@@ -186,13 +186,15 @@ final class TableFit {
         var missed = new ArrayList<Cell>();
         var ends = new double[(1 << bits) + 1];
         ends[0] = first;
+        double width = StrictMath.scalb(1.0, -bits);
         for (int number = 0; number < 1 << bits; number++) {
             var cell = new Cell(octave, number, tail, ends[number], last);
             var t = new double[LOBATTO.length];
             var y = new double[LOBATTO.length];
-            points(cell, 0, StrictMath.scalb(1.0, -bits), cell.first(), last, t, y);
+            points(cell, 0, width, cell.first(), last, t, y);
             ends[number + 1] = y[t.length - 1];
-            var c = through(t, y, tail);
+            var c = through(t, link.smooth(y), tail)
+                    .filter(c_ -> !(shape instanceof Linked) || isMonotone(c_, width, tail));
             if (c.isPresent()) {
                 System.arraycopy(c.get(), 0, cells, cell.index(bits), Table.STRIDE);
             } else {
@@ -225,18 +227,19 @@ final class TableFit {
 
     /// Halves a cell until all of its parts are hit. False where too many would be needed.
     private boolean split(Cell cell) {
-        int first = parts.size();
-        if (!halve(cell, 0, StrictMath.scalb(1.0, -bits), cell.first(), cell.last(), first)) {
+        var ofCell = new ArrayList<double[]>();
+        if (!halve(cell, 0, StrictMath.scalb(1.0, -bits), cell.first(), cell.last(), ofCell)) {
             return false;
         }
         int k = cell.index(bits);
         Arrays.fill(cells, k, k + Table.STRIDE, Double.NaN);
-        cells[k] = first;
-        cells[k + 1] = parts.size();
+        cells[k] = parts.size();
+        parts.add(ofCell);
+        partsInAll += ofCell.size();
         return true;
     }
 
-    private boolean halve(Cell cell, double from, double width, double first, double last, int firstPart) {
+    private boolean halve(Cell cell, double from, double width, double first, double last, List<double[]> ofCell) {
         double half = 0.5 * width;
         double p = cell.base() * (1 + StrictMath.scalb(cell.cell(), -bits) + from + half);
         double middle = within(within(value(p, cell.tail()), first, 1 - cell.tail()), last, cell.tail());
@@ -245,10 +248,11 @@ final class TableFit {
             double begin = from + side * half;
             double a = side == 0 ? first : middle;
             double b = side == 0 ? middle : last;
-            if (!isHit(cell, begin, half, a, b, isWide) && !(isWide && halve(cell, begin, half, a, b, firstPart))) {
+            if (!isHit(cell, begin, half, a, b, isWide, ofCell)
+                    && !(isWide && halve(cell, begin, half, a, b, ofCell))) {
                 return false;
             }
-            if (parts.size() - firstPart > PARTS_OF_CELL || parts.size() > PARTS) {
+            if (ofCell.size() > PARTS_OF_CELL || partsInAll + ofCell.size() > PARTS) {
                 return false;
             }
         }
@@ -256,11 +260,12 @@ final class TableFit {
     }
 
     /// Adds a part, if one polynomial, or at a jump one value, is right for all of it.
-    private boolean isHit(Cell cell, double from, double width, double first, double last, boolean isWide) {
+    private boolean isHit(
+            Cell cell, double from, double width, double first, double last, boolean isWide, List<double[]> ofCell) {
         var t = new double[LOBATTO.length];
         var y = new double[LOBATTO.length];
         points(cell, from, width, first, last, t, y);
-        var c = through(t, y, cell.tail()).filter(c_ -> isMonotone(c_, width, cell.tail()));
+        var c = through(t, link.smooth(y), cell.tail()).filter(c_ -> isMonotone(c_, width, cell.tail()));
         double error = c.isPresent() ? error(cell, from, width, c.get()) : Double.POSITIVE_INFINITY;
         if (!(error <= U_ERROR) && !isWide) {
             c = Optional.of(new double[] {first, 0, 0, 0, 0, 0});
@@ -272,7 +277,7 @@ final class TableFit {
         worst = Math.max(worst, error);
         var part = Arrays.copyOf(c.get(), Table.STRIDE + 1);
         part[Table.STRIDE] = from;
-        parts.add(part);
+        ofCell.add(part);
         return true;
     }
 
