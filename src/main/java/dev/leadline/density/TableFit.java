@@ -31,7 +31,7 @@ final class TableFit {
 
     private static final int LEAST_BITS = 5;
 
-    /// What a plain table costs no more than one that has ends.
+    /// Up to here a plain table is tried before one of distances to both ends, which costs a tenth more.
     private static final int FEW_BITS = 6;
 
     private static final int MOST_BITS = 8;
