@@ -81,7 +81,7 @@ public final class DrawsByDensity {
 
                 Nanoseconds of processor time per draw on one thread, random numbers included, slowest first; the ratio is to the \
                 normal density, drawn from right before in every round. Medians of %d rounds of %,d draws.
-                Written by `mvn -B -Pbenchmark -DskipTests test`.
+                Written by `DrawsByDensity`, which `mvn -B -Pbenchmark -DskipTests test` runs.
 
                 %s
 
