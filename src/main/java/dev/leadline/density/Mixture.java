@@ -164,7 +164,7 @@ public record Mixture(List<Part> parts) implements Shape {
                     double d = density.mean() - mean;
                     return density.variance() + d * d;
                 })
-                : mean;
+                : Math.abs(mean);
     }
 
     @Override
@@ -177,7 +177,7 @@ public record Mixture(List<Part> parts) implements Shape {
                     double d = (density.mean() - mean) / sd;
                     return s * s * (s * density.skewness() + 3 * d) + d * d * d;
                 })
-                : Double.NaN;
+                : Shape.super.skewness();
     }
 
     @Override

@@ -9,6 +9,9 @@ import java.util.ArrayList;
 ///
 /// It is drawn by the table of the shape of `X`; mirrored, a discrete one or one with a closed form has one of its own.
 public record Shifted(Density of, double shift, double scale) implements Density {
+    /// Larger than what counts as reaching a probability.
+    private static final double BEYOND = 4 * Discrete.ROUNDING;
+
     public Shifted {
         var problems = new ArrayList<Problem>();
         Rule.finite("shift", "").broken(shift).ifPresent(problems::add);
@@ -29,24 +32,39 @@ public record Shifted(Density of, double shift, double scale) implements Density
         return (x - shift) / scale;
     }
 
+    /// Of a discrete density the value that `x` is the rounded image of; beside an image, a number beside its value.
+    private double value(double x) {
+        double z = back(x);
+        if (!isDiscrete() || !Double.isFinite(z)) {
+            return z;
+        }
+        double rounding = 2 * Math.max(Math.ulp(z), (Math.ulp(x) + Math.ulp(shift)) / Math.abs(scale));
+        double p = of.cdf(z + rounding);
+        double nearest = p <= 0.5 ? of.quantile(p) : of.upperQuantile(of.survival(z + rounding));
+        if (!(Math.abs(nearest - z) <= rounding) || there(nearest) == x) {
+            return there(nearest) == x ? nearest : z;
+        }
+        return x < there(nearest) == scale > 0 ? Math.nextDown(nearest) : Math.nextUp(nearest);
+    }
+
     private double there(double z) {
         return Math.fma(scale, z, shift);
     }
 
     @Override
     public double pdf(double x) {
-        return isDiscrete() ? of.pdf(back(x)) : of.pdf(back(x)) / Math.abs(scale);
+        return isDiscrete() ? of.pdf(value(x)) : of.pdf(back(x)) / Math.abs(scale);
     }
 
     @Override
     public double logPdf(double x) {
-        return isDiscrete() ? of.logPdf(back(x)) : of.logPdf(back(x)) - Log.log(Math.abs(scale));
+        return isDiscrete() ? of.logPdf(value(x)) : of.logPdf(back(x)) - Log.log(Math.abs(scale));
     }
 
     @Override
     public void logPdf(double[] x, double[] out, int n) {
         for (int i = 0; i < n; i++) {
-            out[i] = back(x[i]);
+            out[i] = value(x[i]);
         }
         of.logPdf(out, out, n);
         double log = isDiscrete() ? 0 : Log.log(Math.abs(scale));
@@ -60,7 +78,7 @@ public record Shifted(Density of, double shift, double scale) implements Density
         if (isBeyond(x)) {
             return x <= support().low() ? 0 : 1;
         }
-        return scale > 0 ? of.cdf(back(x)) : fromAbove(back(x));
+        return scale > 0 ? of.cdf(value(x)) : fromAbove(value(x));
     }
 
     @Override
@@ -68,7 +86,7 @@ public record Shifted(Density of, double shift, double scale) implements Density
         if (isBeyond(x)) {
             return x <= support().low() ? 1 : 0;
         }
-        return scale > 0 ? of.survival(back(x)) : fromBelow(back(x));
+        return scale > 0 ? of.survival(value(x)) : fromBelow(value(x));
     }
 
     /// Whether x is an end of the support or beyond it, which rounding must not hide.
@@ -92,7 +110,7 @@ public record Shifted(Density of, double shift, double scale) implements Density
         if (scale > 0) {
             return there(of.quantile(p));
         }
-        return there(of.upperQuantile(isDiscrete() && p > 0 && p < 1 ? Math.nextDown(p) : p));
+        return there(of.upperQuantile(isDiscrete() && p > 0 && p < 1 ? p * (1 - BEYOND) : p));
     }
 
     @Override
@@ -100,7 +118,7 @@ public record Shifted(Density of, double shift, double scale) implements Density
         if (scale > 0) {
             return there(of.upperQuantile(q));
         }
-        return there(of.quantile(isDiscrete() && q > 0 && q < 1 ? Math.nextUp(q) : q));
+        return there(of.quantile(isDiscrete() && q > 0 && q < 1 ? Math.min(q * (1 + BEYOND), Math.nextDown(1.0)) : q));
     }
 
     @Override

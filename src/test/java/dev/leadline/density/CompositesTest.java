@@ -258,4 +258,65 @@ class CompositesTest {
         var power = Integrated.of("x^-3.5", x -> 1 / (x * x * x * Math.sqrt(x)), new Support(1, INFINITY));
         assertEquals(INFINITY, power.skewness());
     }
+
+    /// pmf and cdf at 3 of a mean of 5 from scipy.stats.poisson.
+    @Test
+    void aScaledDiscreteDensityHasItsValuesWhereRoundingPutsThem() {
+        for (double step : new double[] {0.1, 0.7, 1e-7, 1 / 3.0}) {
+            for (double shift : new double[] {0, 0.7, -1e6}) {
+                var up = new Shifted(new Poisson(5), shift, step);
+                var down = new Shifted(new Poisson(5), shift, -step);
+                double x = Math.fma(step, 3, shift);
+                assertEquals(0.1403738958142805, up.pdf(x), 1e-14);
+                assertEquals(0.2650259152973616, up.cdf(x), 1e-14);
+                assertEquals(1 - 0.2650259152973616, up.survival(x), 1e-14);
+                assertEquals(0.1403738958142805, down.pdf(Math.fma(-step, 3, shift)), 1e-14);
+                assertEquals(0.2650259152973616, down.survival(Math.fma(-step, 4, shift)), 1e-14);
+                assertEquals(1 - 0.2650259152973616, down.cdf(Math.fma(-step, 4, shift)), 1e-14);
+            }
+        }
+    }
+
+    /// From the values number `i` to number `j`, ends at them and between them; sums of e^-5 5^k/k!.
+    @Test
+    void truncatesAScaledDiscreteDensityAtAndBetweenItsValues() {
+        for (double step : new double[] {0.1, -0.1, 0.7, -1 / 3.0}) {
+            for (double shift : new double[] {0, 0.7, -1e6}) {
+                var whole = new Shifted(new Poisson(5), shift, step);
+                double kept = 0;
+                double next = StrictMath.exp(-5);
+                for (int k = 0; k <= 7; k++) {
+                    kept += k >= 3 ? next : 0;
+                    next *= 5.0 / (k + 1);
+                }
+                for (double beyond : new double[] {0, 0.25}) {
+                    double a = Math.fma(step, 3 - beyond, shift);
+                    double b = Math.fma(step, 7 + beyond, shift);
+                    var part = Truncated.of(whole, Math.min(a, b), Math.max(a, b));
+                    assertEquals(kept, part.keptMass(), 1e-13, () -> "%s + %s X".formatted(shift, step));
+                    assertEquals(Math.fma(step, step > 0 ? 3 : 7, shift), part.quantile(1e-9));
+                    assertEquals(Math.fma(step, step > 0 ? 7 : 3, shift), part.upperQuantile(1e-9));
+                }
+            }
+        }
+    }
+
+    @Test
+    void endsBetweenTheValuesOfADiscreteDensityAreNoValues() {
+        var kept = Truncated.of(new Poisson(5), 2.5, 6.5);
+        assertEquals(new Support(3, 6), kept.support());
+        assertEquals(3, kept.quantile(1e-30));
+        assertEquals(6, kept.upperQuantile(1e-30));
+        assertTrue(Inversion.of(kept).uError() < 1e-12);
+    }
+
+    /// A Pareto tail of order .5 has no finite mean; one of order 2.5 has a variance and no third moment.
+    @Test
+    void mixturesSayWhichMomentsAreInfinite() {
+        var heavy = new Mixture(List.of(new Part(0.9, NORMAL), new Part(0.1, new Shifted(new Pareto(1, 0.5), 0, -1))));
+        assertEquals(-INFINITY, heavy.mean());
+        assertEquals(INFINITY, heavy.variance());
+        var skew = new Mixture(List.of(new Part(0.9, NORMAL), new Part(0.1, new Pareto(1, 2.5))));
+        assertEquals(INFINITY, skew.skewness());
+    }
 }
