@@ -75,7 +75,9 @@ public record Gamma(double shape, double scale) implements Scaled {
         public double logPdf(double z) {
             double a = tails.a();
             if (z > 0 && z < Double.POSITIVE_INFINITY) {
-                return tails.logPrefix(z) + Log.log(a / z);
+                double ratio = a / z;
+                return tails.logPrefix(z)
+                        + (ratio < Double.POSITIVE_INFINITY ? Log.log(ratio) : Log.log(a) - Log.log(z));
             }
             return Double.isNaN(z)
                     ? z

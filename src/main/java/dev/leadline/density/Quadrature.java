@@ -55,8 +55,8 @@ final class Quadrature {
         return half * sum;
     }
 
-    /// On panels that are halved until halving changes nothing; empty where a thousand are not enough, or the integral
-    /// is not finite.
+    /// On panels that are halved until halving changes nothing; empty where a thousand are not enough, as at a
+    /// pole, or the integral is not finite.
     static OptionalDouble halving(DoubleUnaryOperator f, double from, double to) {
         var left = new int[] {PANELS};
         double whole = of(f, from, to, 1);
@@ -69,8 +69,12 @@ final class Quadrature {
         double middle = from + 0.5 * (to - from);
         double lower = of(f, from, middle, 1);
         double upper = of(f, middle, to, 1);
-        if (Math.abs(lower + upper - panel) <= SETTLED * Math.abs(whole) || halvings == 0 || --left[0] <= 0) {
+        if (Math.abs(lower + upper - panel) <= SETTLED * Math.abs(whole) || --left[0] <= 0) {
             return lower + upper;
+        }
+        if (halvings == 0) {
+            left[0] = 0;
+            return Double.NaN;
         }
         return halved(f, from, middle, lower, whole, halvings - 1, left)
                 + halved(f, middle, to, upper, whole, halvings - 1, left);

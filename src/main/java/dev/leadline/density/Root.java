@@ -34,8 +34,9 @@ final class Root {
                 hi = x;
             }
             double excess = Math.abs(there - p) < 0.1 * p ? (there - p) / p : Log.log(there / p);
-            double next = x - excess * there / slope.applyAsDouble(x);
-            if (Math.abs(next - x) <= Math.ulp(x)) {
+            double steep = slope.applyAsDouble(x);
+            double next = x - excess * there / steep;
+            if (Math.abs(next - x) <= Math.ulp(x) && steep < Double.POSITIVE_INFINITY) {
                 return Math.clamp(next, lo, hi);
             }
             long left = order(hi) - order(lo);

@@ -319,4 +319,15 @@ class CompositesTest {
         var skew = new Mixture(List.of(new Part(0.9, NORMAL), new Part(0.1, new Pareto(1, 2.5))));
         assertEquals(INFINITY, skew.skewness());
     }
+
+    /// A gamma density has next to nothing near 0, so the quantile is that of the uniform part: `(p / .5 - .6) * 10`.
+    @Test
+    void quantilesNearZeroAreNotTakenForZero() {
+        var mixture = new Mixture(
+                List.of(new Mixture.Part(0.5, new Uniform(-6, 4)), new Mixture.Part(0.5, new Gamma(20, 3))));
+        for (double p : new double[] {0.301, 0.31, 0.35}) {
+            assertEquals((p / 0.5 - 0.6) * 10, mixture.quantile(p), 1e-6, "p = " + p);
+        }
+        assertEquals(0, new Gamma(7.5, 2).pdf(1e-308));
+    }
 }
