@@ -114,6 +114,9 @@ public record InverseGaussian(double mean, double shape) implements Scaled {
             }
             double s = s(z);
             double fall = 0.5 * Exp.exp(-square(z));
+            if (fall == 0) {
+                return z < 1 ? 0 : 1;
+            }
             double other = fall * ErrorFunction.erfcx(s + h(z));
             return s < 0 ? fall * ErrorFunction.erfcx(-s) + other : 0.5 * ErrorFunction.erfc(-s) + other;
         }

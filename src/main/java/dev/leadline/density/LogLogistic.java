@@ -55,7 +55,7 @@ public record LogLogistic(double shape, double scale) implements Scaled {
                 return z < 0 || shape > 1 ? 0 : shape < 1 ? Double.POSITIVE_INFINITY : 1;
             }
             double power = power(z);
-            return shape / z * power / ((1 + power) * (1 + power));
+            return shape * (power / z) / ((1 + power) * (1 + power));
         }
 
         @Override

@@ -35,8 +35,8 @@ final class Root {
             }
             double excess = Math.abs(there - p) < 0.1 * p ? (there - p) / p : Log.log(there / p);
             double steep = slope.applyAsDouble(x);
-            double next = x - excess * there / steep;
-            if (Math.abs(next - x) <= Math.ulp(x) && steep < Double.POSITIVE_INFINITY) {
+            double next = Double.isInfinite(steep) ? Double.NaN : x - excess * there / steep;
+            if (Math.abs(next - x) <= Math.ulp(x)) {
                 return Math.clamp(next, lo, hi);
             }
             long left = order(hi) - order(lo);

@@ -42,7 +42,7 @@ interface WholeNumbers extends Discrete {
     }
 
     private boolean isValue(double x) {
-        return support().contains(x) && x == Math.rint(x) && Double.isFinite(x);
+        return support().contains(x) && x == Math.rint(x) && x < FAR;
     }
 
     @Override

@@ -199,6 +199,21 @@ class CatalogueTest {
         return Stream.of(a, b).flatMapToDouble(Arrays::stream).toArray();
     }
 
+    /// Next to 0 and far out, where quotients overflow: a search for quantiles passes there. No density is much larger
+    /// than one over the distance from its pole.
+    @ParameterizedTest(name = "{0}")
+    @MethodSource("continuous")
+    void numbersNextToZeroAndFarOut(Case c) {
+        var d = c.density;
+        for (double size : new double[] {3e-308, 1e-300, 1e-200, 1e200, 1e300}) {
+            for (double x : new double[] {size, -size}) {
+                assertEquals(1, d.cdf(x) + d.survival(x), 1e-13, () -> "masses at " + x);
+                assertTrue(d.pdf(x) >= 0, () -> "density at " + x);
+                assertTrue(d.logPdf(x) < 750, () -> "logarithm of the density at " + x);
+            }
+        }
+    }
+
     @ParameterizedTest(name = "{0}")
     @MethodSource("withComposites")
     void quantilesRise(Case c) {

@@ -320,14 +320,23 @@ class CompositesTest {
         assertEquals(INFINITY, skew.skewness());
     }
 
-    /// A gamma density has next to nothing near 0, so the quantile is that of the uniform part: `(p / .5 - .6) * 10`.
-    @Test
-    void quantilesNearZeroAreNotTakenForZero() {
-        var mixture = new Mixture(
-                List.of(new Mixture.Part(0.5, new Uniform(-6, 4)), new Mixture.Part(0.5, new Gamma(20, 3))));
-        for (double p : new double[] {0.301, 0.31, 0.35}) {
-            assertEquals((p / 0.5 - 0.6) * 10, mixture.quantile(p), 1e-6, "p = " + p);
+    /// The search for a quantile passes 0, where a gamma density begins: below 2.4, `P(X <= x)` of the two is
+    /// `.52 (x + 4.3) / 6.7` but for the gamma's share.
+    @ParameterizedTest
+    @CsvSource({"1", "7.5"})
+    void quantilesNextToAnEndOfAPart(double shape) {
+        var gamma = new Gamma(shape, 2.4);
+        var mixed = Composites.mixture(0.52, new Uniform(-4.3, 2.4), 0.48, gamma);
+        for (double p : new double[] {0.1, 0.3, 0.334, 0.4, 0.5, 0.9}) {
+            double x = mixed.quantile(p);
+            double mass = 0.52 * Math.clamp((x + 4.3) / 6.7, 0, 1) + 0.48 * gamma.cdf(x);
+            assertEquals(p, mass, 1e-12, () -> "at " + x);
         }
-        assertEquals(0, new Gamma(7.5, 2).pdf(1e-308));
+    }
+
+    /// The root of `x + 1`, whose slope is said to be infinite wherever it is asked.
+    @Test
+    void aSlopeMayBeInfinite() {
+        assertEquals(2, Root.rising(x -> x + 1, _ -> INFINITY, 3, -10, 1e300), 1e-15);
     }
 }
