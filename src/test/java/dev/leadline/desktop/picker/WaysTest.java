@@ -155,10 +155,10 @@ class WaysTest {
         assertEquals(
                 "the project has no folder yet",
                 project.unreadFields().getFirst().primary());
-        project.savedAs(Path.of("/work/quay/quay.leadline"), project.draft().get());
-        data.choose(Path.of("/work/quay-two/waits.csv"));
+        project.savedAs(Path.of("/harbour/quay/quay.leadline"), project.draft().get());
+        data.choose(Path.of("/harbour/quay-two/waits.csv"));
         assertTrue(project.unreadFields().getFirst().primary().contains("outside the folder"));
-        data.choose(Path.of("/work/quay/measured/waits.csv"));
+        data.choose(Path.of("/harbour/quay/measured/waits.csv"));
         assertEquals(List.of(), project.unreadFields());
         assertEquals("measured/waits.csv", data.data().file());
         data.column("3");
@@ -186,7 +186,7 @@ class WaysTest {
     @Test
     void aFitIsDrawnFromInPlaceOfTheData() {
         DataFiles files = (file, column) -> new DataColumn("", List.of(-1.0, 0.0, 1.0), List.of(), "");
-        project.replace(Drafts.mean(), Optional.of(Path.of("/work/quay/quay.leadline")), files);
+        project.replace(Drafts.mean(), Optional.of(Path.of("/harbour/quay/quay.leadline")), files);
         var data = new DataViewModel(at, background);
         data.file("waits.csv");
         data.kind("kernel");
