@@ -1,7 +1,6 @@
 package dev.leadline.desktop.picker;
 
 import dev.leadline.desktop.working.Field;
-import dev.leadline.desktop.working.Messages;
 import java.util.ArrayList;
 import java.util.List;
 import javafx.geometry.HPos;
@@ -15,7 +14,6 @@ import javafx.scene.layout.VBox;
 /// A few numbers that are known, and the density that follows from them.
 final class KnownForm implements Form {
     private final KnownViewModel model;
-    private final Messages messages = new Messages();
     private final Label sentence = Labels.wrapped("");
     private final List<Runnable> refreshers = new ArrayList<>();
     private final VBox all;
@@ -46,7 +44,7 @@ final class KnownForm implements Form {
             grid.addRow(row++, label, field);
         }
         sentence.setId("suggestion");
-        all = new VBox(8, grid, messages, sentence);
+        all = new VBox(8, grid, sentence);
     }
 
     private void type(String name, String text) {
@@ -66,10 +64,8 @@ final class KnownForm implements Form {
 
     @Override
     public void update() {
+        model.follow();
         refreshers.forEach(Runnable::run);
-        messages.show(model.problems());
-        sentence.setText(model.suggestion()
-                .map(s -> "Kept with the input: " + s.provenance())
-                .orElse("The density follows once all of it is told."));
+        sentence.setText(model.sentence());
     }
 }

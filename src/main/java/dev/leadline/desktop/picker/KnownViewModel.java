@@ -5,26 +5,37 @@ import dev.leadline.density.Knowledge;
 import dev.leadline.density.Suggestion;
 import dev.leadline.desktop.working.NumberText;
 import dev.leadline.model.DensityDraft.Member;
+import dev.leadline.model.DensityWords;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
-import java.util.ArrayList;
 import java.util.LinkedHashMap;
-import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 
 /// What is known about an input, told in numbers. As soon as it is told in full, the density that says just that and
-/// the sentence of where it comes from go into the draft, as one edit.
+/// the sentence of where it comes from go into the draft, as one edit. From then on the fields say what the draft says:
+/// a text among them that says nothing stands against a run.
 final class KnownViewModel {
     private final Knowledge knowledge;
     private final DensityAt at;
+
+    /// Of the fields. No file has one there: it keeps the density that follows.
+    private final String path;
+
     private final Map<String, String> texts = new LinkedHashMap<>();
-    private List<Problem> problems = List.of();
     private Optional<Suggestion> suggestion = Optional.empty();
+    private boolean whole;
+    private boolean typing;
 
     KnownViewModel(Knowledge knowledge, DensityAt at) {
         this.knowledge = knowledge;
         this.at = at;
+        path = at.path() + ".(" + knowledge.word() + ")";
+    }
+
+    /// Whether there is something in its fields that cannot be read, and the density stands at that place.
+    boolean isUnread(DensityAt place) {
+        return place.path().equals(at.path()) && at.project().isUnread(path);
     }
 
     Knowledge knowledge() {
@@ -35,36 +46,55 @@ final class KnownViewModel {
         return texts.getOrDefault(name, "");
     }
 
-    /// What is wrong with what was typed; nothing is wrong with what was not typed yet.
-    List<Problem> problems() {
-        return problems;
-    }
-
-    Optional<Suggestion> suggestion() {
-        return suggestion;
-    }
-
     boolean isFaulty(String name) {
-        return problems.stream().anyMatch(p -> p.place().path().equals(name));
+        return at.project().isUnread(path + "." + name);
+    }
+
+    /// As `Kept with the input: …`; else what is still missing.
+    String sentence() {
+        if (suggestion.isPresent()) {
+            return "Kept with the input: " + suggestion.get().provenance();
+        }
+        return "The density follows once all of it is told"
+                + (at.now().isUnchosen() ? "." : "; until then it stays " + DensityWords.of(at.now()) + ".");
+    }
+
+    /// Forgets what was told where the draft no longer says it: it was undone, or the density became another.
+    void follow() {
+        if (typing) {
+            return;
+        }
+        boolean told = suggestion
+                .map(s -> at.now().of().equals(new Member(s.family(), s.parameters())))
+                .orElse(!whole || at.project().isUnread(path));
+        if (!told) {
+            texts.clear();
+            suggestion = Optional.empty();
+            whole = false;
+        }
     }
 
     void type(String name, String text) {
+        typing = true;
         texts.put(name, text);
+        tell();
+        typing = false;
+    }
+
+    private void tell() {
+        at.project().forget(path);
         var told = new LinkedHashMap<String, Double>();
-        var unread = new ArrayList<Problem>();
         for (var parameter : knowledge.parameters()) {
             String typed = text(parameter.name());
             var number = NumberText.read(typed);
             if (number.isPresent()) {
                 told.put(parameter.name(), number.getAsDouble());
-            } else if (!typed.isBlank()) {
-                unread.add(NumberText.problem(parameter.name(), typed).in(parameter.name()));
+            } else if (whole || !typed.isBlank()) {
+                refuse(parameter.name(), NumberText.problem(parameter.use(), typed));
             }
         }
-        boolean whole = told.size() == knowledge.parameters().size();
         suggestion = Optional.empty();
-        problems = unread;
-        if (whole) {
+        if (told.size() == knowledge.parameters().size()) {
             suggest(told);
         }
     }
@@ -74,12 +104,16 @@ final class KnownViewModel {
             var found = knowledge.suggestion(told);
             Catalogue.named(found.family()).of(found.parameters());
             suggestion = Optional.of(found);
+            whole = true;
         } catch (Refusal refusal) {
-            problems = refusal.problems();
+            refusal.problems().forEach(problem -> refuse(problem.place().path(), problem));
             return;
         }
         var found = suggestion.get();
-        at.project().forget(at.path());
         at.edit("(" + knowledge.word() + ")", new Member(found.family(), found.parameters()), found.provenance());
+    }
+
+    private void refuse(String name, Problem problem) {
+        at.project().unread(at.path() + "(" + knowledge.word() + ")", path + "." + name, text(name), problem);
     }
 }

@@ -36,9 +36,15 @@ final class MemberViewModel {
         return at.now().member().flatMap(m -> Catalogue.family(m.family()));
     }
 
+    private void forgetFields() {
+        family().map(Family::entries).orElse(List.of()).stream()
+                .flatMap(List::stream)
+                .forEach(p -> project().forget(parameterPath(p.name())));
+    }
+
     /// Another family; parameters of the same name keep their values.
     void family(String name) {
-        project().forget(at.path());
+        forgetFields();
         project().settle();
         entryWanted = 0;
         at.edit("", old -> {
@@ -59,7 +65,7 @@ final class MemberViewModel {
 
     /// Another way to enter the same family; parameters it does not have are left out.
     void entry(int entry) {
-        project().forget(at.path());
+        forgetFields();
         project().settle();
         entryWanted = entry;
         at.edit("", old -> {

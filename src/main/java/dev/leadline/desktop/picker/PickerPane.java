@@ -206,7 +206,7 @@ public final class PickerPane extends BorderPane {
 
     private Form formOf(Way way, DensityAt at) {
         return switch (way) {
-            case Way.Known(var knowledge) -> new KnownForm(new KnownViewModel(knowledge, at), model.project()::settle);
+            case Way.Known(var knowledge) -> new KnownForm(model.known(knowledge, at), model.project()::settle);
             case Way.Given.DATA -> new DataForm(new DataViewModel(at, model.background()), chooseData);
             case Way.Given.VALUES -> new ValuesForm(new ValuesViewModel(at));
             case Way.Given.FAMILY -> new FamilyForm(new MemberViewModel(at));

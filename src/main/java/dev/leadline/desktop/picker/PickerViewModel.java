@@ -5,6 +5,7 @@ import dev.leadline.chart.DensityPicture.View;
 import dev.leadline.chart.Observed;
 import dev.leadline.chart.Theme;
 import dev.leadline.density.Integrated;
+import dev.leadline.density.Knowledge;
 import dev.leadline.density.Portrait;
 import dev.leadline.density.PortraitText;
 import dev.leadline.desktop.background.Background;
@@ -71,7 +72,9 @@ public final class PickerViewModel {
     private int height;
     private double scale = 1;
     private boolean drawing;
+    private boolean failed;
     private Optional<Wish> shown = Optional.empty();
+    private Optional<KnownViewModel> known = Optional.empty();
 
     public PickerViewModel(
             ProjectViewModel project, InputsViewModel inputs, BooleanProperty dark, Background background) {
@@ -81,6 +84,7 @@ public final class PickerViewModel {
         this.background = background;
         inputs.opened().addListener((_, _, input) -> open(input));
         project.draft().addListener((_, _, _) -> follow());
+        project.problems().addListener((_, _, _) -> age());
         dark.addListener((_, _, _) -> draw());
         view.addListener((_, _, _) -> draw());
     }
@@ -88,9 +92,10 @@ public final class PickerViewModel {
     private void open(OptionalInt input) {
         project.settle();
         shown = Optional.empty();
+        failed = false;
         drawn.set(Optional.empty());
-        outdated.set(false);
         place(input);
+        age();
         draw();
     }
 
@@ -99,7 +104,30 @@ public final class PickerViewModel {
                 input.isPresent() && isChosen(input.getAsInt())
                         ? Optional.of(DensityAt.input(project, input.getAsInt()))
                         : Optional.empty());
-        way.set(at.get().flatMap(place -> Way.of(place.now())));
+        way.set(at.get().flatMap(this::wayOf));
+    }
+
+    /// The one that was left with something in it that cannot be read, else the one by which the density is written.
+    private Optional<Way> wayOf(DensityAt place) {
+        return known.filter(k -> k.isUnread(place))
+                .<Way>map(k -> new Way.Known(k.knowledge()))
+                .or(() -> Way.of(place.now()));
+    }
+
+    /// What is told at this place; it stays while something in it cannot be read.
+    KnownViewModel known(Knowledge knowledge, DensityAt place) {
+        known = known.filter(k -> k.isUnread(place) && k.knowledge() == knowledge)
+                .or(() -> Optional.of(new KnownViewModel(knowledge, place)));
+        return known.get();
+    }
+
+    /// The drawing is outdated where the density is none, or its fields say something else than the draft.
+    private void age() {
+        outdated.set(drawn.get().isPresent()
+                && (failed
+                        || at.get()
+                                .filter(place -> project.isUnread(place.path()))
+                                .isPresent()));
     }
 
     /// A range may have got an end, or lost it.
@@ -155,8 +183,9 @@ public final class PickerViewModel {
         way.set(Optional.of(chosen));
     }
 
-    /// Back to the question of what is known.
+    /// Back to the question of what is known; fields that cannot be read go, and the density is what it was before.
     void ask() {
+        at.get().ifPresent(place -> project.forget(place.path()));
         way.set(Optional.empty());
     }
 
@@ -239,14 +268,16 @@ public final class PickerViewModel {
                 result -> {
                     drawing = false;
                     if (input().equals(OptionalInt.of(index))) {
+                        failed = false;
                         drawn.set(Optional.of(result));
-                        outdated.set(false);
+                        age();
                     }
                     draw();
                 },
                 failure -> {
                     drawing = false;
-                    outdated.set(drawn.get().isPresent());
+                    failed = true;
+                    age();
                     if (!(failure instanceof Refusal)) {
                         System.getLogger(PickerViewModel.class.getName())
                                 .log(System.Logger.Level.WARNING, "the density could not be drawn", failure);

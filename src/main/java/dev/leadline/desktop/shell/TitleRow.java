@@ -15,6 +15,9 @@ import javafx.scene.layout.StackPane;
 
 /// The project's title, and what starts, pauses and stops a run.
 final class TitleRow extends HBox {
+    /// Of the row's width, so that the title keeps its room.
+    private static final double TO_MEND = .45;
+
     TitleRow(WorkbenchViewModel model) {
         getStyleClass().add(Styles.TITLE_ROW);
         setAlignment(Pos.CENTER_LEFT);
@@ -29,6 +32,16 @@ final class TitleRow extends HBox {
         edited.visibleProperty().bind(model.project().edited());
         var gap = new Region();
         HBox.setHgrow(gap, Priority.ALWAYS);
+
+        var toMend = new Label();
+        toMend.setId("to-mend");
+        toMend.getStyleClass().add("to-mend");
+        toMend.textProperty().bind(model.toMend());
+        toMend.managedProperty().bind(toMend.textProperty().isNotEmpty());
+        toMend.maxWidthProperty().bind(widthProperty().multiply(TO_MEND));
+        toMend.setMinWidth(0);
+        toMend.setTooltip(new Tooltip());
+        toMend.getTooltip().textProperty().bind(toMend.textProperty());
 
         var state = model.run().state();
         var run = new Button("Run");
@@ -50,7 +63,7 @@ final class TitleRow extends HBox {
         stop.setOnAction(_ -> model.run().stop());
         stop.setTooltip(new Tooltip("Ends the run with what was drawn"));
         stop.disableProperty().bind(pause.disableProperty());
-        getChildren().addAll(title, edited, gap, told(run, why), pause, stop);
+        getChildren().addAll(title, edited, gap, toMend, told(run, why), pause, stop);
         pause.setMinWidth(76);
         run.setMinWidth(64);
         stop.setMinWidth(64);

@@ -39,6 +39,7 @@ import javafx.beans.property.ReadOnlyBooleanWrapper;
 import javafx.beans.property.ReadOnlyStringProperty;
 import javafx.beans.property.ReadOnlyStringWrapper;
 import javafx.beans.property.SimpleBooleanProperty;
+import javafx.beans.value.ObservableValue;
 
 /// The whole window: the project, its run, and what can be done with them now.
 public final class WorkbenchViewModel {
@@ -165,6 +166,20 @@ public final class WorkbenchViewModel {
         return whyNotRun;
     }
 
+    /// What stands against a run, in a line; empty where nothing does.
+    ObservableValue<String> toMend() {
+        return project.problems().map(WorkbenchViewModel::toMend);
+    }
+
+    private static String toMend(List<Problem> problems) {
+        return switch (problems.size()) {
+            case 0 -> "";
+            case 1 -> "Cannot run yet: " + problems.getFirst().primary();
+            default ->
+                "Cannot run yet: " + problems.getFirst().primary() + " \u00b7 and " + (problems.size() - 1) + " more";
+        };
+    }
+
     /// Exactly as it is pasted; empty before the first mark.
     public StringBinding answer() {
         return answer;
@@ -192,10 +207,8 @@ public final class WorkbenchViewModel {
         if (!RunViewModel.canStart(run.state().get())) {
             return "A run is under way; stop it to start another";
         }
-        var problems = project.problems().get();
-        return problems.isEmpty()
-                ? "Draws as the stop rule says"
-                : "Cannot run yet: " + problems.getFirst().primary();
+        String toMend = toMend(project.problems().get());
+        return toMend.isEmpty() ? "Draws as the stop rule says" : toMend;
     }
 
     static Optional<LaneState> firstLane(RunViewModel.State state) {

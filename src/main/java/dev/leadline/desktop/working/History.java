@@ -45,6 +45,14 @@ final class History<T> {
         open = false;
     }
 
+    /// As if the edit that is not settled yet, where it has this key, had never been.
+    void takeBack(String key) {
+        if (open && key.equals(now.key)) {
+            now = before.pop();
+            open = false;
+        }
+    }
+
     Optional<T> undo() {
         return move(before, after);
     }

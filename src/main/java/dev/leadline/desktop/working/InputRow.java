@@ -72,6 +72,9 @@ final class InputRow extends VBox {
             } else if (model.opened().get().equals(OptionalInt.of(index))) {
                 model.close();
             }
+            if (index < model.inputs().size()) {
+                update();
+            }
         });
         model.opened().addListener((_, _, now) -> head.setSelected(now.equals(OptionalInt.of(index))));
         getChildren().addAll(head, messages, body);

@@ -90,14 +90,17 @@ public final class ProjectViewModel {
         return problems.getReadOnlyProperty();
     }
 
-    /// Fields that hold no number; the draft has the last one that they held.
+    /// Fields that hold no number; the draft has what they held before one began to type there.
     public List<Problem> unreadFields() {
         return unread.values().stream().map(Unread::problem).toList();
     }
 
-    /// The newest draft that passed its check, for what may lag behind by a moment.
+    /// The newest draft that passed its check, for what may lag behind by a moment; none while a field says something
+    /// else than the draft.
     public Optional<Project> sound() {
-        return check.get() instanceof Check.Sound(Project project) ? Optional.of(project) : Optional.empty();
+        return unread.isEmpty() && check.get() instanceof Check.Sound(Project project)
+                ? Optional.of(project)
+                : Optional.empty();
     }
 
     /// Where the data come from that the draft names.
@@ -139,9 +142,13 @@ public final class ProjectViewModel {
         history.settle();
     }
 
+    /// Undoes what cannot be read, where something was typed that cannot, else the last edit.
     public void undo() {
+        if (unread.isEmpty()) {
+            history.undo();
+        }
         unread.clear();
-        history.undo().ifPresent(_ -> show());
+        show();
     }
 
     public void redo() {
@@ -149,7 +156,9 @@ public final class ProjectViewModel {
         history.redo().ifPresent(_ -> show());
     }
 
-    /// A text typed in a number field. Where it is no number the draft keeps the last one, and nothing can be run.
+    /// A text typed in a number field. Where it is no number the draft goes back to the one that stood there before,
+    /// and
+    /// nothing can be run: of `5,5` typed over 7 the draft keeps 7, not the 5 on the way.
     ///
     /// @param path of the field
     /// @param what the field in words, as `scale of v`
@@ -159,7 +168,7 @@ public final class ProjectViewModel {
             unread.remove(path);
             edit(path, d -> set.apply(d, number.getAsDouble()));
         } else {
-            unread.put(path, new Unread(text, NumberText.problem(what, text).in(path)));
+            unread(path, path, text, NumberText.problem(what, text));
         }
     }
 
@@ -177,6 +186,20 @@ public final class ProjectViewModel {
     /// A text of any other field that cannot be read. The draft keeps what was read last, and nothing can be run.
     public void unread(String path, String text, Problem problem) {
         unread.put(path, new Unread(text, problem.in(path)));
+        show();
+    }
+
+    /// The same; and the draft goes back to what it said before one began to type in the field.
+    ///
+    /// @param key of the edits that the field makes where it can be read
+    public void unread(String key, String path, String text, Problem problem) {
+        history.takeBack(key);
+        unread(path, text, problem);
+    }
+
+    /// Whether a field of the place, or inside it, holds what cannot be read.
+    public boolean isUnread(String path) {
+        return unread.keySet().stream().anyMatch(p -> within(path, p));
     }
 
     /// What was typed where it could not be read.
@@ -208,12 +231,13 @@ public final class ProjectViewModel {
     /// Leaves out what was typed in fields that are gone.
     public void forget(String path) {
         unread.keySet().removeIf(p -> within(path, p));
+        canUndo.set(history.canUndo() || !unread.isEmpty());
     }
 
     private void show() {
         draft.set(history.now());
         edited.set(!saved.equals(draft.get()));
-        canUndo.set(history.canUndo());
+        canUndo.set(history.canUndo() || !unread.isEmpty());
         canRedo.set(history.canRedo());
         checkAgain();
     }
@@ -248,7 +272,7 @@ public final class ProjectViewModel {
     private void collectProblems() {
         var all = new ArrayList<>(unreadFields());
         if (check.get() instanceof Check.Refused(List<Problem> refused)) {
-            all.addAll(refused);
+            refused.stream().filter(p -> !unread.containsKey(p.place().path())).forEach(all::add);
         }
         problems.set(List.copyOf(all));
     }

@@ -29,14 +29,16 @@ class MemberViewModelTest {
     }
 
     @Test
-    void aTextThatIsNoNumberKeepsTheLastOneAndStandsAgainstARun() {
-        member.parameter("to", "2");
-        member.parameter("to", "2,5");
+    void aTextThatIsNoNumberKeepsTheOneBeforeItAndStandsAgainstARun() {
+        for (String typed : List.of("5", "5,", "5,5")) {
+            member.parameter("to", typed);
+        }
         background.finishAll();
-        assertEquals("2,5", member.parameterText("to"));
-        assertEquals(2.0, parameters().get("to"));
+        assertEquals("5,5", member.parameterText("to"));
+        assertEquals(1.0, parameters().get("to"));
+        assertTrue(project.sound().isEmpty());
         assertEquals(
-                "To of x is \u201c2,5\u201d but must be a number",
+                "To of x is \u201c5,5\u201d but must be a number",
                 project.problems().get().getFirst().primary());
         member.parameter("to", "2.5");
         background.finishAll();

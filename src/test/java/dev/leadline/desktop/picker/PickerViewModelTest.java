@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.density.Knowledge;
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
 import dev.leadline.desktop.working.Edits;
@@ -12,6 +13,7 @@ import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.model.Draft;
 import dev.leadline.project.DataFolder;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.Optional;
 import javafx.beans.property.SimpleBooleanProperty;
 import org.junit.jupiter.api.Test;
@@ -55,6 +57,44 @@ class PickerViewModelTest {
         background.finishAll();
         assertFalse(picker.outdated().get());
         assertEquals(2, mean());
+    }
+
+    @Test
+    void aDrawingIsOutdatedWhileAFieldHoldsNoNumber() {
+        open();
+        var member = new MemberViewModel(picker.at().get().orElseThrow());
+        member.parameter("to", "5,5");
+        background.finishAll();
+        assertTrue(picker.outdated().get());
+        assertEquals(.5, mean());
+        picker.ask();
+        assertFalse(picker.outdated().get());
+        assertEquals(List.of(), project.problems().get());
+    }
+
+    @Test
+    void whatCouldNotBeReadStandsThereWhenThePickerIsOpenedAgain() {
+        open();
+        var limits = new Way.Known(Knowledge.named("limits"));
+        picker.choose(limits);
+        var known = picker.known(limits.knowledge(), picker.at().get().orElseThrow());
+        known.type("low", "3");
+        known.type("high", "5,5");
+        inputs.close();
+        inputs.open(0);
+        background.finishAll();
+        assertEquals(Optional.of(limits), picker.way().get());
+        var again = picker.known(limits.knowledge(), picker.at().get().orElseThrow());
+        assertEquals("3", again.text("low"));
+        assertEquals("5,5", again.text("high"));
+        assertTrue(again.isFaulty("high"));
+        assertFalse(picker.problems().isEmpty());
+        again.type("high", "5.5");
+        inputs.close();
+        inputs.open(0);
+        background.finishAll();
+        assertEquals(Optional.of(Way.Given.FAMILY), picker.way().get());
+        assertEquals(4.25, mean());
     }
 
     @Test

@@ -58,10 +58,49 @@ class WaysTest {
         assertTrue(known.isFaulty("high"));
         assertFalse(known.isFaulty("low"));
         known.type("high", "2");
-        assertFalse(known.problems().isEmpty());
+        assertFalse(project.problemsAt(at.path()).isEmpty());
         assertEquals("uniform(0, 1)", words());
         known.type("high", "");
-        assertEquals(List.of(), known.problems());
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+    }
+
+    @Test
+    void whatWasKnownAndIsNoNumberAnyMoreStandsAgainstARun() {
+        var known = new KnownViewModel(Knowledge.named("limits"), at);
+        known.type("low", "3");
+        known.type("high", "8");
+        project.settle();
+        known.type("high", "5");
+        known.type("high", "5,");
+        known.type("high", "5,5");
+        background.finishAll();
+        assertEquals("5,5", known.text("high"));
+        assertEquals("uniform(3, 8)", words());
+        assertTrue(project.sound().isEmpty());
+        assertTrue(
+                project.problems().get().getFirst().primary().endsWith("is \u201c5,5\u201d but must be a number"),
+                project.problems().get().toString());
+        known.type("high", "");
+        assertTrue(known.isFaulty("high"));
+        known.type("high", "5.5");
+        background.finishAll();
+        assertEquals("uniform(3, 5.5)", words());
+        assertTrue(project.sound().isPresent());
+    }
+
+    @Test
+    void whatIsUndoneNoLongerStandsInTheFields() {
+        var known = new KnownViewModel(Knowledge.named("limits"), at);
+        known.type("low", "3");
+        known.type("high", "8");
+        known.follow();
+        assertEquals("8", known.text("high"));
+        project.undo();
+        known.follow();
+        assertEquals("", known.text("high"));
+        assertEquals(
+                "The density follows once all of it is told; until then it stays uniform(0, 1).", known.sentence());
     }
 
     @Test

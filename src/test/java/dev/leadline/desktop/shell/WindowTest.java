@@ -131,6 +131,38 @@ class WindowTest {
         assertEquals(model.project().draft().get(), ProjectFile.read(folder.resolve("other.leadline")));
     }
 
+    @Test
+    void aHalfTypedNumberIsToldWhereverOneLooks(FxRobot robot) throws TimeoutException {
+        opened(robot, Drafts.mean());
+        robot.interact(() -> robot.lookup("#input-0")
+                .queryAs(javafx.scene.control.ToggleButton.class)
+                .fire());
+        robot.interact(
+                () -> robot.lookup("#parameter-to").queryAs(TextField.class).selectAll());
+        robot.clickOn("#parameter-to").push(KeyCode.SHORTCUT, KeyCode.A).write("5,5");
+        robot.push(KeyCode.ESCAPE);
+        await(() -> model.inputs().opened().get().isEmpty());
+        String sentence = "To of x is \u201c5,5\u201d but must be a number";
+        assertTrue(robot.lookup("#run").queryButton().isDisabled());
+        assertEquals(
+                "Cannot run yet: " + sentence,
+                robot.lookup("#to-mend").queryAs(Label.class).getText());
+        assertTrue(robot.lookup(".input-row .message .primary").queryAllAs(Label.class).stream()
+                .anyMatch(label -> label.getText().equals(sentence)));
+        robot.interact(() -> robot.lookup("#input-0")
+                .queryAs(javafx.scene.control.ToggleButton.class)
+                .fire());
+        var to = robot.lookup("#parameter-to").queryAs(TextField.class);
+        assertEquals("5,5", to.getText());
+        assertTrue(to.getPseudoClassStates().stream()
+                .anyMatch(c -> c.getPseudoClassName().equals("faulty")));
+        assertEquals(1, parameter(model.project().draft().get()));
+        robot.clickOn(to).push(KeyCode.SHORTCUT, KeyCode.A).write("5.5");
+        await(() -> model.canRun().get());
+        assertEquals("", robot.lookup("#to-mend").queryAs(Label.class).getText());
+        assertEquals(5.5, parameter(model.project().draft().get()));
+    }
+
     private static double parameter(dev.leadline.model.Draft draft) {
         return draft.inputs().getFirst().from() instanceof dev.leadline.model.Draft.From.Density(var density)
                 ? density.member().orElseThrow().parameters().get("to")

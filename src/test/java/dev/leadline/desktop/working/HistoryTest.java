@@ -32,6 +32,22 @@ class HistoryTest {
     }
 
     @Test
+    void whatIsTakenBackNeverWas() {
+        history.edit("name", "a");
+        history.settle();
+        history.edit("name", "ab");
+        history.edit("name", "abc");
+        history.takeBack("unit");
+        assertEquals("abc", history.now());
+        history.takeBack("name");
+        assertEquals("a", history.now());
+        history.takeBack("name");
+        assertEquals("a", history.now());
+        history.edit("name", "b");
+        assertEquals(Optional.of("a"), history.undo());
+    }
+
+    @Test
     void anEditAfterUndoForgetsWhatWasUndone() {
         history.edit("name", "a");
         history.undo();

@@ -48,6 +48,19 @@ class ProjectViewModelTest {
     }
 
     @Test
+    void undoTakesWhatCannotBeReadFirst() {
+        inputs.name(0, "z");
+        demands.absolute("0,1");
+        assertTrue(project.canUndo().get());
+        project.undo();
+        assertEquals(List.of(), project.unreadFields());
+        assertEquals("0.01", demands.absoluteText());
+        assertEquals("z", project.draft().get().inputs().getFirst().name());
+        project.undo();
+        assertEquals("x", project.draft().get().inputs().getFirst().name());
+    }
+
+    @Test
     void savingMakesItUnedited() {
         inputs.name(0, "z");
         project.savedAs(Path.of("a.leadline"), project.draft().get());
