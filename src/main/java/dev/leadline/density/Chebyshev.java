@@ -72,4 +72,23 @@ final class Chebyshev {
         }
         return Math.fma(t, b1, c[0] - b2);
     }
+
+    /// The derivative, from those of the polynomials: `T'(k + 1) = 2 T(k) + 2 t T'(k) - T'(k - 1)`.
+    static double slope(double[] c, double t) {
+        double before = 1;
+        double now = t;
+        double slopeBefore = 0;
+        double slopeNow = 1;
+        double sum = 0;
+        for (int k = 1; k < c.length; k++) {
+            sum = Math.fma(c[k], slopeNow, sum);
+            double next = 2 * t * now - before;
+            double slopeNext = 2 * now + 2 * t * slopeNow - slopeBefore;
+            before = now;
+            now = next;
+            slopeBefore = slopeNow;
+            slopeNow = slopeNext;
+        }
+        return sum;
+    }
 }

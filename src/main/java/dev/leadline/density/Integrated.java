@@ -15,8 +15,14 @@ import java.util.function.DoubleUnaryOperator;
 /// `1e-300` of all, as far as the heights do. Next to an end or a break, and far out where the density is a power, the
 /// mass is a power of the distance.
 ///
-/// Error: `1e-12` of the mass, and relative `1e-10` in tails, where the heights have 16 digits (`TypedTest`).
+/// Error: `1e-12` of the mass, and relative `1e-10` in tails, where the heights have 16 digits (`TypedTest`). Far from
+/// 0, where `x` itself has few digits, quantiles and draws are exact to the spacing of numbers
+/// (`TypedFarFromZeroTest`).
 public final class Integrated implements Shape {
+    /// With a median farther from 0 than this, in distances of the quartiles, numbers are sparse enough there to be
+    /// felt.
+    private static final double FAR = 1000;
+
     /// A gap that is narrower than the distance of the quartiles by this factor is none that a person meant.
     private static final double NARROW = 1e-9;
 
@@ -26,7 +32,13 @@ public final class Integrated implements Shape {
     private final TailOrders orders;
     private final double top;
     private final double logArea;
+
+    /// Where distances are taken from.
+    private final double origin;
+
+    /// In the distance from the origin.
     private final Pieces pieces;
+
     private final Moments.Four moments;
     private final List<Support> gaps;
 
@@ -78,10 +90,20 @@ public final class Integrated implements Shape {
         }
         this.logArea = (relief.log() ? top : Log.log(top)) + Log.log(total);
         double area = total;
-        this.pieces = new Pieces(
-                cells.stream().filter(c -> c.mass > 0).map(c -> c.piece(area)).toArray(Piece[]::new));
-        this.gaps = gaps(cells, NARROW * (quantile(0.75) - quantile(0.25)));
-        this.moments = PieceMoments.of(cells, area, orders, quantile(0.5), quantile(0.75) - quantile(0.25));
+        var fromZero = pieces(cells, area, 0);
+        double median = fromZero.quantile(0.5);
+        double width = fromZero.quantile(0.75) - fromZero.quantile(0.25);
+        this.origin = Math.abs(median) > FAR * width ? median : 0;
+        this.pieces = origin == 0 ? fromZero : pieces(cells, area, origin);
+        this.gaps = gaps(cells, NARROW * width);
+        this.moments = PieceMoments.of(cells, area, orders, median, width);
+    }
+
+    private static Pieces pieces(List<Refinement.Cell> cells, double area, double origin) {
+        return new Pieces(cells.stream()
+                .filter(c -> c.mass > 0)
+                .map(c -> c.piece(area, origin))
+                .toArray(Piece[]::new));
     }
 
     /// @param least width
@@ -145,22 +167,22 @@ public final class Integrated implements Shape {
 
     @Override
     public double cdf(double x) {
-        return Double.isNaN(x) ? x : pieces.cdf(x);
+        return Double.isNaN(x) ? x : pieces.cdf(x - origin);
     }
 
     @Override
     public double survival(double x) {
-        return Double.isNaN(x) ? x : pieces.survival(x);
+        return Double.isNaN(x) ? x : pieces.survival(x - origin);
     }
 
     @Override
     public double inner(double p) {
-        return pieces.quantile(p);
+        return Math.clamp(origin + pieces.quantile(p), support.low(), support.high());
     }
 
     @Override
     public double upperInner(double q) {
-        return pieces.upperQuantile(q);
+        return Math.clamp(origin + pieces.upperQuantile(q), support.low(), support.high());
     }
 
     @Override
@@ -191,6 +213,84 @@ public final class Integrated implements Shape {
     @Override
     public Support support() {
         return support;
+    }
+
+    /// Far from 0, the density of the distance from the origin: its draws are rounded once, when they are numbers.
+    @Override
+    public Standardised standardised() {
+        return origin == 0 ? Shape.super.standardised() : new Standardised(new Distance(this), origin, 1);
+    }
+
+    private record Distance(Integrated of) implements Shape {
+        @Override
+        public double pdf(double x) {
+            return of.pdf(of.origin + x);
+        }
+
+        @Override
+        public double logPdf(double x) {
+            return of.logPdf(of.origin + x);
+        }
+
+        @Override
+        public double cdf(double x) {
+            return Double.isNaN(x) ? x : of.pieces.cdf(x);
+        }
+
+        @Override
+        public double survival(double x) {
+            return Double.isNaN(x) ? x : of.pieces.survival(x);
+        }
+
+        @Override
+        public double inner(double p) {
+            return Math.clamp(of.pieces.quantile(p), support().low(), support().high());
+        }
+
+        @Override
+        public double upperInner(double q) {
+            return Math.clamp(
+                    of.pieces.upperQuantile(q), support().low(), support().high());
+        }
+
+        @Override
+        public double mean() {
+            return of.mean() - of.origin;
+        }
+
+        @Override
+        public double variance() {
+            return of.variance();
+        }
+
+        @Override
+        public double skewness() {
+            return of.skewness();
+        }
+
+        @Override
+        public double excessKurtosis() {
+            return of.excessKurtosis();
+        }
+
+        @Override
+        public TailOrders tailOrders() {
+            return of.orders;
+        }
+
+        /// Rounded inwards, so that no draw falls beyond the ends that were given.
+        @Override
+        public Support support() {
+            double low = of.support.low() - of.origin;
+            double high = of.support.high() - of.origin;
+            while (of.origin + low < of.support.low()) {
+                low = Math.nextUp(low);
+            }
+            while (of.origin + high > of.support.high()) {
+                high = Math.nextDown(high);
+            }
+            return new Support(low, high);
+        }
     }
 
     int pieceCount() {

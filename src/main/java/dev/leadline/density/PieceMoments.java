@@ -41,7 +41,7 @@ final class PieceMoments {
                 double half = 0.5 * (cell.high - cell.low);
                 for (int j = 0; j < Chebyshev.POINTS; j++) {
                     double mass = half * Chebyshev.WEIGHTS[j] * cell.heights[j];
-                    sum += times(mass, (cell.node(j) - centre) / unit, order);
+                    sum += times(mass, cell.from(centre, j) / unit, order);
                 }
             }
         }

@@ -32,6 +32,9 @@ final class Refinement {
     /// Errors that do not fall when cells are halved are those of the formula, where they are as small as this.
     private static final double NOISE = 1e-6;
 
+    /// Narrower cells, in units of the spacing of numbers, have no digits to tell where in it a node stands.
+    private static final double SPARSE = 0x1p9;
+
     /// Points of a cell: its nodes, and one next to each end, since a jump or a bend between the last node and the end
     /// is seen by no node.
     private static final int POINTS = Chebyshev.POINTS + 2;
@@ -88,6 +91,9 @@ final class Refinement {
             heights = new double[Chebyshev.POINTS];
             System.arraycopy(all, from, heights, 0, Chebyshev.POINTS);
             coefficients = Chebyshev.coefficients(heights);
+            if (0.5 * (high - low) > SPARSE * ulp()) {
+                moveToNodes();
+            }
             double sum = 0;
             double largest = 0;
             double last = 0;
@@ -103,12 +109,40 @@ final class Refinement {
             double atLow = all[from + Chebyshev.POINTS];
             double atHigh = all[from + Chebyshev.POINTS + 1];
             double miss = Math.max(
-                    Math.abs(Chebyshev.at(coefficients, -1) - atLow), Math.abs(Chebyshev.at(coefficients, 1) - atHigh));
+                    Math.abs(at(point(Chebyshev.POINTS)) - atLow), Math.abs(at(point(Chebyshev.POINTS + 1)) - atHigh));
             highest = Math.max(highest, Math.max(atLow, atHigh));
             rough = Math.max(last, LAST_NODE * miss) / Math.max(largest, Double.MIN_NORMAL);
-            if (high - low <= 4 * Math.ulp(Math.max(Math.abs(low), Math.abs(high)))) {
+            if (high - low <= 4 * ulp()) {
                 flatten();
             }
+        }
+
+        /// From the heights at the numbers next to the nodes, which lie up to half an `ulp` beside them.
+        private void moveToNodes() {
+            var seen = heights.clone();
+            double half = 0.5 * (high - low);
+            for (int round = 0; round < 2; round++) {
+                for (int j = 0; j < Chebyshev.POINTS; j++) {
+                    double beside = from(node(j), j) / half;
+                    heights[j] = Math.fma(Chebyshev.slope(coefficients, Chebyshev.NODES[j]), beside, seen[j]);
+                }
+                coefficients = Chebyshev.coefficients(heights);
+            }
+        }
+
+        private double at(double x) {
+            return Chebyshev.at(coefficients, Math.clamp(((x - low) - (high - x)) / (high - low), -1, 1));
+        }
+
+        private double ulp() {
+            return Math.ulp(Math.max(Math.abs(low), Math.abs(high)));
+        }
+
+        /// How far a node lies above x, more exactly than numbers near the node are.
+        double from(double x, int j) {
+            double t = Chebyshev.NODES[j];
+            double half = 0.5 * (high - low);
+            return t < 0 ? Math.fma(half, 1 + t, low - x) : Math.fma(-half, 1 - t, high - x);
         }
 
         private void flatten() {
@@ -124,15 +158,18 @@ final class Refinement {
             return low + 0.5 * (high - low);
         }
 
-        Piece piece(double total) {
+        /// @param total mass of all cells
+        /// @param origin where the piece takes its places from
+        Piece piece(double total, double origin) {
             if (flank != null) {
-                return new Flank(flank.anchor(), flank.side(), flank.edge(), flank.exponent(), flank.mass() / total);
+                return new Flank(
+                        flank.anchor() - origin, flank.side(), flank.edge(), flank.exponent(), flank.mass() / total);
             }
             var scaled = coefficients.clone();
             for (int k = 0; k < scaled.length; k++) {
                 scaled[k] /= total;
             }
-            return Smooth.of(low, high, scaled);
+            return Smooth.of(low - origin, high - origin, scaled);
         }
     }
 

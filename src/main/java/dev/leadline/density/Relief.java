@@ -16,7 +16,7 @@ record Relief(Heights heights, String variable, boolean log) {
     /// Heights below 0 by less than this share of the greatest are rounding errors and count as 0.
     private static final double ROUNDING = 1e-13;
 
-    private static final double PER_LN2 = 1.4426950408889634;
+    static final double PER_LN2 = 1.4426950408889634;
 
     /// Heights as given.
     double[] at(double[] x) {

@@ -13,9 +13,9 @@
 /// `StrictMath`, arithmetic), and if one ever differed the record would say so.
 ///
 /// A density that is known by its heights alone is [Integrated][dev.leadline.density.Integrated]: one that
-/// is typed as a formula ([Typed][dev.leadline.density.Typed]), or any function. `Landscape` looks for its
-/// peaks, `Refinement` cuts the line into pieces, and each is a polynomial (`Smooth`) or a power of the
-/// distance (`Flank`).
+/// is typed as a formula ([Typed][dev.leadline.density.Typed]), or any function. `Peaks` looks for where
+/// it is high, `Landscape` lays a first grid there, `Refinement` cuts the line into pieces, and each is a polynomial
+/// (`Smooth`) or a power of the distance (`Flank`).
 ///
 /// Dependence: a [Copula][dev.leadline.density.Copula] turns independent probabilities into tied ones, whatever the
 /// densities; a [Measure][dev.leadline.density.Measure] finds the correlation to draw with for the one that was stated.
