@@ -52,7 +52,7 @@ final class LookCommand implements Command {
         open.printNotes(console, Arguments.has(arguments, "--quiet"));
         Question question = open.project().question();
         Plan plan = RunArguments.override(open.project().plan(), arguments);
-        Lane lane = plan.lanes().getFirst();
+        Lane lane = plan.settled().getFirst();
         Look look = draw.isPresent() ? Look.at(question, lane, plan.seed(), draw.getAsLong()) : Look.nominal(question);
         if (Arguments.has(arguments, "--json")) {
             console.out().print(LookJson.of(question, plan, lane.name(), draw, look));

@@ -1,6 +1,7 @@
 package dev.leadline.cli;
 
 import dev.leadline.model.Draft;
+import dev.leadline.model.LaneDraft;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Span;
 import java.util.List;
@@ -60,7 +61,7 @@ final class ProblemText {
         return switch (row.group(1)) {
             case "constants" -> named("Constant", draft.constants(), index, Draft.ConstantDraft::name);
             case "inputs" -> named("Input", draft.inputs(), index, Draft.InputDraft::name);
-            default -> named("Lane", draft.lanes(), index, Draft.LaneDraft::name);
+            default -> named("Lane", draft.lanes(), index, LaneDraft::name);
         };
     }
 

@@ -7,8 +7,9 @@ import dev.leadline.interval.Student;
 import dev.leadline.model.Dependence.Tie;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
-import dev.leadline.scheme.Points;
+import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.Scheme;
+import dev.leadline.scheme.Stretch;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
 import java.util.Arrays;
@@ -38,7 +39,7 @@ public record Achieved(Tie tie, double value, Interval interval) {
     }
 
     private static List<Achieved> of(Question question, List<Tie> ties, long seed) {
-        var lane = new Lane(Address.SHARED, new Scheme(new Points.Independent()));
+        var lane = Lane.of(Address.SHARED, Scheme.of(new Independent()));
         var recipe = Recipe.of(question, lane, seed, Purpose.DEPENDENCE);
         boolean[] tied = new boolean[question.inputs().size()];
         ties.forEach(tie -> {
@@ -75,7 +76,7 @@ public record Achieved(Tie tie, double value, Interval interval) {
     }
 
     private static double[][] batch(Drawing drawing, int index) {
-        drawing.open(new Item(index, 0, BLOCKS * Program.BLOCK));
+        drawing.open(new Stretch(index, 0, 0));
         double[][] columns = drawing.columns();
         double[][] values = new double[columns.length][];
         for (int block = 0; block < BLOCKS; block++) {

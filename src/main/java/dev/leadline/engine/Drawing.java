@@ -2,6 +2,7 @@ package dev.leadline.engine;
 
 import dev.leadline.formula.Program;
 import dev.leadline.scheme.Cursor;
+import dev.leadline.scheme.Stretch;
 import java.util.Arrays;
 
 /// Draws inputs of a recipe, block by block. Scratch of one worker, confined to it.
@@ -12,6 +13,8 @@ final class Drawing {
     private final boolean[] wanted;
     private final double[][] columns;
     private final double[][] points;
+    private final Nominal nominal;
+    private final double[] few = new double[Program.BLOCK];
     private Cursor cursor;
 
     /// @param wanted for each input of the question
@@ -19,12 +22,13 @@ final class Drawing {
         this.recipe = recipe;
         this.wanted = wanted.clone();
         boolean[] behind = recipe.ties().behind(wanted);
-        this.points = new double[behind.length][];
+        this.points = new double[behind.length + (recipe.isShareDrawn() ? 1 : 0)][];
         for (int j = 0; j < points.length; j++) {
-            if (behind[j]) {
+            if (j == behind.length || behind[j]) {
                 points[j] = new double[Program.BLOCK];
             }
         }
+        this.nominal = Nominal.of(recipe);
         this.columns = new double[wanted.length][];
         for (int j = 0; j < columns.length; j++) {
             columns[j] = wanted[j] ? points[j] : null;
@@ -32,8 +36,9 @@ final class Drawing {
     }
 
     /// Goes to the first draw of an item.
-    void open(Item item) {
-        cursor = recipe.layout().open(item.index());
+    void open(Stretch stretch) {
+        cursor = recipe.layout().open(stretch);
+        nominal.open();
     }
 
     /// The next draws of the item.
@@ -41,11 +46,29 @@ final class Drawing {
     /// @param rows at most [Program#BLOCK]
     void next(int rows) {
         cursor.next(points, rows);
+        nominal.next(points[points.length - 1], rows);
         recipe.ties().tie(points, wanted, rows);
         for (int j = 0; j < columns.length; j++) {
             if (columns[j] != null) {
-                recipe.inversion(j).fill(columns[j], columns[j], rows);
+                invert(j, columns[j], rows);
             }
+        }
+    }
+
+    private void invert(int j, double[] x, int rows) {
+        var proposed = recipe.proposed(j);
+        if (proposed.isEmpty()) {
+            recipe.inversion(j).fill(x, x, rows);
+            return;
+        }
+        int count = nominal.count();
+        for (int i = 0; i < count; i++) {
+            few[i] = x[nominal.row(i)];
+        }
+        proposed.get().fill(x, x, rows);
+        recipe.inversion(j).fill(few, few, count);
+        for (int i = 0; i < count; i++) {
+            x[nominal.row(i)] = few[i];
         }
     }
 
@@ -55,7 +78,7 @@ final class Drawing {
         Arrays.fill(all, true);
         var drawing = new Drawing(recipe, all);
         var item = recipe.items().holding(draw);
-        drawing.open(item);
+        drawing.open(item.stretch());
         long from = item.firstDraw();
         drawing.next(Program.BLOCK);
         while (from + Program.BLOCK <= draw) {

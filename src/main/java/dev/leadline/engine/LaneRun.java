@@ -1,9 +1,7 @@
 package dev.leadline.engine;
 
-import dev.leadline.estimate.Accumulator;
 import dev.leadline.model.Stop;
 import dev.leadline.trace.Answers;
-import dev.leadline.trace.Blocks;
 import dev.leadline.trace.Failure;
 import dev.leadline.trace.Mark;
 import dev.leadline.trace.Trace;
@@ -31,8 +29,7 @@ public final class LaneRun {
     private final Workers workers;
     private final Queue<Future<Optional<ItemSums>>> ahead = new ArrayDeque<>();
 
-    private final Accumulator total;
-    private final Blocks blocks = new Blocks();
+    private final Tally tally;
     private final List<Mark> marks = new ArrayList<>();
     private final List<Failure> failures = new ArrayList<>();
     private long submitted;
@@ -44,9 +41,8 @@ public final class LaneRun {
         this.stop = stop;
         this.items = recipe.items();
         this.workers = workers;
-        this.total = new Accumulator(recipe.program().outputs());
-        int whole = recipe.lane().scheme().points().drawsPerObservation();
-        this.budget = stop.draws() / whole * whole;
+        this.tally = Tally.of(items, recipe.components());
+        this.budget = items.whole(stop.draws());
     }
 
     /// Merges the next item of work.
@@ -60,6 +56,9 @@ public final class LaneRun {
             return end("stopped by hand", seconds);
         }
         merge(sums.get());
+        if (!tally.isWhole()) {
+            return false;
+        }
         if (draws >= budget) {
             return end("all draws made", seconds);
         }
@@ -90,12 +89,7 @@ public final class LaneRun {
 
     public Trace trace() {
         return new Trace(
-                recipe.lane().name(),
-                recipe.lane().scheme().points().word(),
-                marks,
-                blocks.snapshot(),
-                failures,
-                stopReason);
+                recipe.lane().name(), recipe.lane().scheme().inWords(), marks, tally.blocks(), failures, stopReason);
     }
 
     private void submitAhead() {
@@ -110,8 +104,7 @@ public final class LaneRun {
     }
 
     private void merge(ItemSums item) {
-        total.merge(item.sums());
-        blocks.add(item.sums());
+        tally.add(item);
         draws += item.item().draws();
         for (var failure : item.failures()) {
             if (failures.size() < ItemSums.KEPT) {
@@ -135,13 +128,14 @@ public final class LaneRun {
         stopReason = Optional.of(reason);
         ahead.forEach(item -> item.cancel(false));
         ahead.clear();
-        if (draws > 0 && (marks.isEmpty() || marks.getLast().draws() < draws)) {
+        if (draws > 0 && tally.isWhole() && (marks.isEmpty() || marks.getLast().draws() < draws)) {
             mark(seconds);
         }
         return true;
     }
 
     private void mark(double seconds) {
-        marks.add(new Mark(draws, seconds, Answers.of(recipe.question(), total)));
+        marks.add(new Mark(
+                draws, seconds, Answers.of(recipe.question(), recipe.lane().scheme(), tally.total())));
     }
 }

@@ -14,8 +14,9 @@ import java.util.List;
 ///
 /// @param inputs values in the order of the question's inputs
 /// @param steps values in the order of the steps
-/// @param weight what the outcomes of integrals are multiplied by: the volume of bounded ranges, over the density
-///     drawn from on unbounded ones; 0 beyond a range; 1 where nothing weighs
+/// @param weight what outcomes are multiplied by: where the draw is from other densities, those of the inputs over
+///     them; of integrals also the volume of bounded ranges, and one over the density drawn from on unbounded ones; 0
+///     beyond a range; 1 where nothing weighs
 /// @param outcomes one for each thing asked, before the weight
 public record Look(List<Double> inputs, List<Double> steps, double weight, List<Double> outcomes) {
     public Look {
@@ -26,7 +27,9 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
 
     /// The draw with index `draw` (from 0) of a lane, made again from its address.
     public static Look at(Question question, Lane lane, long seed, long draw) {
-        return of(question, Drawing.inputs(Recipe.of(question, lane, seed), draw));
+        var recipe = Recipe.of(question, lane, seed);
+        double[] inputs = Drawing.inputs(recipe, draw);
+        return of(question, inputs, Weights.of(recipe, inputs));
     }
 
     /// Every input at its median.
@@ -35,10 +38,12 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
                 question,
                 question.inputs().stream()
                         .mapToDouble(input -> input.drawn().quantile(.5))
-                        .toArray());
+                        .toArray(),
+                1);
     }
 
-    private static Look of(Question question, double[] inputs) {
+    /// @param counted what the draw counts because of the density it was drawn from
+    private static Look of(Question question, double[] inputs, double counted) {
         Program program = question.working().everyStep();
         double[][] columns =
                 Arrays.stream(inputs).mapToObj(x -> new double[] {x}).toArray(double[][]::new);
@@ -48,7 +53,7 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
         return new Look(
                 Arrays.stream(inputs).boxed().toList(),
                 Arrays.stream(results).limit(steps).map(r -> r[0]).toList(),
-                weight(question, inputs),
+                counted * weight(question, inputs),
                 Arrays.stream(results).skip(steps).map(r -> r[0]).toList());
     }
 

@@ -7,20 +7,31 @@ import dev.leadline.model.Ask;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
+import dev.leadline.scheme.Control;
 import dev.leadline.scheme.Layout;
+import dev.leadline.scheme.Proposal;
+import dev.leadline.scheme.Replicated;
+import dev.leadline.scheme.Share;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.TreeMap;
 
 /// Everything that the draws of a lane follow from, made ready: compiled formulas, inversion tables,
 /// the layout of points. Immutable, safe for all threads; each worker takes a [Sampler] of its own.
 public final class Recipe {
+    /// Name of a coordinate: no input can be called so.
+    private static final String SHARE = "/";
+
     private final Question question;
     private final Lane lane;
     private final Layout layout;
     private final Ties ties;
     private final List<Inversion> inversions;
+    private final Map<Integer, Inversion> proposed;
     private final List<Integer> weighing;
     private final double volume;
 
@@ -29,10 +40,15 @@ public final class Recipe {
         this.lane = lane;
         this.ties = new Ties(question);
         this.layout =
-                lane.scheme().points().layout(new Address(seed, purpose, lane.name(), 0, "", 0), ties.coordinates());
+                lane.scheme().points().layout(new Address(seed, purpose, lane.address(), 0, "", 0), coordinates());
         this.inversions = question.inputs().stream()
                 .map(input -> Inversion.of(input.drawn()))
                 .toList();
+        this.proposed = new TreeMap<>();
+        lane.scheme()
+                .drawFrom()
+                .ifPresent(proposal ->
+                        proposal.densities().forEach((input, density) -> proposed.put(input, Inversion.of(density))));
         var unbounded = new ArrayList<Integer>();
         double product = 1;
         for (int j = 0; j < question.inputs().size(); j++) {
@@ -60,7 +76,31 @@ public final class Recipe {
     }
 
     public Items items() {
-        return new Items(lane.scheme().points().drawsPerObservation());
+        return Items.of(lane.scheme());
+    }
+
+    /// Names of the coordinates of the layout: those that the ties have and, last, one that says which draws of
+    /// replicated points come from the inputs' own densities.
+    private List<String> coordinates() {
+        var coordinates = new ArrayList<>(ties.coordinates());
+        if (isShareDrawn()) {
+            coordinates.add(SHARE);
+        }
+        return coordinates;
+    }
+
+    /// Whether chance decides which draws come from the inputs' own densities; in growing points their index does.
+    boolean isShareDrawn() {
+        return lane.scheme().points() instanceof Replicated && share().nominal() > 0;
+    }
+
+    Share share() {
+        return lane.scheme().drawFrom().map(Proposal::nominal).orElse(Share.NONE);
+    }
+
+    /// The components of an observation: what is asked, the control variates, and the weight where draws are weighted.
+    int components() {
+        return program().outputs() + (lane.scheme().isWeighted() ? 1 : 0);
     }
 
     public Question question() {
@@ -83,6 +123,19 @@ public final class Recipe {
         return inversions.get(input);
     }
 
+    /// Other densities that inputs are drawn from, by the index of the input.
+    Map<Integer, Density> proposal() {
+        return lane.scheme()
+                .drawFrom()
+                .<Map<Integer, Density>>map(Proposal::densities)
+                .orElse(Map.of());
+    }
+
+    /// Of an input that is drawn from another density.
+    Optional<Inversion> proposed(int input) {
+        return Optional.ofNullable(proposed.get(input));
+    }
+
     Density drawn(int input) {
         return question.inputs().get(input).drawn();
     }
@@ -103,7 +156,11 @@ public final class Recipe {
     }
 
     Program program() {
-        return question.working().program();
+        return lane.working().orElse(question.working()).program();
+    }
+
+    List<Control> controls() {
+        return lane.scheme().controls();
     }
 
     List<Ask> asks() {

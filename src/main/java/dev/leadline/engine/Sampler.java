@@ -20,8 +20,9 @@ public final class Sampler {
     private final Drawing drawing;
     private final double[][] columns;
     private final double[][] outcomes;
-    private final double[] weights;
-    private final double[] logPdf;
+    private final double[] ranges;
+    private final Weights weights;
+    private final Folding folding;
     private final Accumulator sums;
 
     Sampler(Recipe recipe) {
@@ -30,21 +31,24 @@ public final class Sampler {
         this.workspace = program.workspace();
         boolean[] wanted = new boolean[recipe.question().inputs().size()];
         for (int j = 0; j < wanted.length; j++) {
-            wanted[j] = program.uses(j) || recipe.weighing().contains(j);
+            wanted[j] = program.uses(j)
+                    || recipe.weighing().contains(j)
+                    || recipe.proposal().containsKey(j);
         }
         this.drawing = new Drawing(recipe, wanted);
         this.columns = drawing.columns();
-        this.outcomes = new double[program.outputs()][Program.BLOCK];
-        boolean weighs = !recipe.weighing().isEmpty();
-        this.weights = weighs ? new double[Program.BLOCK] : new double[0];
-        this.logPdf = weighs ? new double[Program.BLOCK] : new double[0];
+        this.outcomes = new double[recipe.components()][Program.BLOCK];
+        this.ranges = new double[recipe.weighing().isEmpty() ? 0 : Program.BLOCK];
+        this.weights = new Weights(recipe);
+        this.folding = Folding.of(recipe);
         this.sums = new Accumulator(outcomes.length);
     }
 
     /// @param cancelled looked at between blocks of draws
     /// @return empty where cancelled
     public Optional<ItemSums> compute(Item item, BooleanSupplier cancelled) {
-        drawing.open(item);
+        drawing.open(item.stretch());
+        folding.open();
         sums.clear();
         var failures = new ArrayList<Failure>();
         for (int from = 0; from < item.draws(); from += Program.BLOCK) {
@@ -55,54 +59,63 @@ public final class Sampler {
             drawing.next(rows);
             program.evaluate(columns, rows, outcomes, workspace);
             observe(rows);
-            long excluded = sums.excluded();
-            sums.add(outcomes, 0, rows);
-            if (sums.excluded() > excluded) {
+            if (!folding.addTo(sums, outcomes, rows)) {
                 keepFailures(item.firstDraw() + from, rows, failures);
             }
         }
         return Optional.of(new ItemSums(item, sums.copy(), List.copyOf(failures)));
     }
 
-    /// Turns outcomes into components of observations: integrals are weighed; an event is 1 or 0 as it is.
+    /// Turns what the formulas give into components of observations: integrals count the length of their ranges,
+    /// control
+    /// variates what they are more than their mean; an event is 1 or 0 as it is. All count their weight.
     private void observe(int rows) {
-        weigh(rows);
-        for (int k = 0; k < outcomes.length; k++) {
+        weighRanges(rows);
+        for (int k = 0; k < recipe.asks().size(); k++) {
             switch (recipe.asks().get(k).estimand()) {
                 case Estimand.Mean _, Estimand.Probability _ -> {}
                 case Estimand.Integral _ -> multiply(outcomes[k], rows);
             }
         }
+        for (int c = 0; c < recipe.controls().size(); c++) {
+            double[] control = outcomes[recipe.asks().size() + c];
+            double mean = recipe.controls().get(c).mean();
+            for (int i = 0; i < rows; i++) {
+                control[i] -= mean;
+            }
+        }
+        weights.weigh(columns, outcomes, rows);
     }
 
     /// `1 / pdf`, and 0 for a draw beyond its range, which the density drawn from may reach.
-    private void weigh(int rows) {
-        if (weights.length == 0) {
+    private void weighRanges(int rows) {
+        if (ranges.length == 0) {
             return;
         }
-        Arrays.fill(weights, 0, rows, 0);
+        Arrays.fill(ranges, 0, rows, 0);
+        double[] logPdf = weights.scratch();
         for (int j : recipe.weighing()) {
             double[] x = columns[j];
             double low = recipe.range(j).low();
             double high = recipe.range(j).high();
             recipe.drawn(j).logPdf(x, logPdf, rows);
             for (int i = 0; i < rows; i++) {
-                weights[i] -= x[i] >= low && x[i] <= high ? logPdf[i] : Double.POSITIVE_INFINITY;
+                ranges[i] -= x[i] >= low && x[i] <= high ? logPdf[i] : Double.POSITIVE_INFINITY;
             }
         }
-        Exp.exp(weights, weights, rows);
+        Exp.exp(ranges, ranges, rows);
     }
 
     private void multiply(double[] outcome, int rows) {
         double volume = recipe.volume();
-        if (weights.length == 0) {
+        if (ranges.length == 0) {
             for (int i = 0; i < rows; i++) {
                 outcome[i] *= volume;
             }
         } else {
             for (int i = 0; i < rows; i++) {
                 // Beyond the range the formula need not have a value.
-                outcome[i] = weights[i] == 0 ? 0 : outcome[i] * (volume * weights[i]);
+                outcome[i] = ranges[i] == 0 ? 0 : outcome[i] * (volume * ranges[i]);
             }
         }
     }

@@ -57,6 +57,11 @@ public record Interval(double low, double high, double level, String kind, Strin
         return lopsided(estimate) ? Math.max(high - estimate, estimate - low) : halfWidth();
     }
 
+    /// This interval as far as it lies between two limits that the value sought cannot pass.
+    public Interval within(double least, double most) {
+        return new Interval(Math.max(low, least), Math.min(high, most), level, kind, assumption, note);
+    }
+
     /// Half the length; `NaN` where a limit is missing.
     public double halfWidth() {
         return (high - low) / 2;

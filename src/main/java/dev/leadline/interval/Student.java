@@ -1,6 +1,7 @@
 package dev.leadline.interval;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Estimate;
 import dev.leadline.numeric.Rounding;
 import java.util.Optional;
 
@@ -20,7 +21,11 @@ public final class Student {
 
     /// The interval of one component.
     public static Interval of(Accumulator sums, int k, double level) {
-        return of(sums.mean(k), sums.standardError(k), sums.count(), level);
+        return of(Estimate.mean(sums, k), level);
+    }
+
+    public static Interval of(Estimate estimate, double level) {
+        return of(estimate.value(), estimate.standardError(), estimate.degrees() + 1, level);
     }
 
     /// @param standardError of the mean; exactly 0 where every observation is equal, and then there is no interval

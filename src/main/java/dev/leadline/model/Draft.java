@@ -6,6 +6,7 @@ import java.util.OptionalDouble;
 import java.util.OptionalLong;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
+import java.util.stream.Stream;
 
 /// A project as it was written, before anything was checked: what a file holds and what the window edits.
 ///
@@ -25,6 +26,7 @@ public record Draft(
         Optional<ToleranceDraft> tolerance,
         Optional<StopDraft> stop,
         OptionalLong seed,
+        boolean commonRandomNumbers,
         List<LaneDraft> lanes) {
 
     /// Most constants, inputs or steps of a project.
@@ -81,16 +83,13 @@ public record Draft(
 
     public record StopDraft(String rule, OptionalLong draws, OptionalDouble seconds) {}
 
-    public record LaneDraft(String name, String points) {}
-
     /// Names of the data files that inputs are drawn from, each once.
     public List<String> dataFiles() {
-        return inputs.stream()
-                .flatMap(input -> switch (input.from()) {
-                    case From.Density(var density) -> density.dataFiles();
-                    case From.Range(var _, var _, var drawFrom) ->
-                        drawFrom.stream().flatMap(DensityDraft::dataFiles);
-                })
+        var ofInputs = inputs.stream().flatMap(input -> switch (input.from()) {
+            case From.Density(var density) -> density.dataFiles();
+            case From.Range(var _, var _, var drawFrom) -> drawFrom.stream().flatMap(DensityDraft::dataFiles);
+        });
+        return Stream.concat(ofInputs, lanes.stream().flatMap(LaneDraft::dataFiles))
                 .distinct()
                 .toList();
     }

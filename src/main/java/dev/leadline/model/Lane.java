@@ -1,10 +1,32 @@
 package dev.leadline.model;
 
+import dev.leadline.formula.Working;
 import dev.leadline.scheme.Scheme;
+import dev.leadline.stream.Address;
+import java.util.Optional;
 
 /// One scheme being run under a name.
-public record Lane(String name, Scheme scheme) {
+///
+/// @param shares whether its random numbers are those of every other lane that shares them
+/// @param working the formulas of the question and, as further components, those of the control variates; empty where
+///     there are none
+public record Lane(String name, Scheme scheme, boolean shares, Optional<Working> working) {
 
     /// Lanes of one project at most: their rows are read together.
     public static final int MOST = 4;
+
+    /// A lane of its own random numbers, without control variates.
+    public static Lane of(String name, Scheme scheme) {
+        return new Lane(name, scheme, false, Optional.empty());
+    }
+
+    /// The lane in the address of its random numbers.
+    public String address() {
+        return shares ? Address.SHARED : name;
+    }
+
+    /// The lane as it is run with so many draws.
+    public Lane within(long draws) {
+        return new Lane(name, scheme.within(draws), shares, working);
+    }
 }

@@ -49,9 +49,12 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         Optional<Reference> reference = draft.reference().map(given -> reference(given, findings));
         double confidence = confidence(draft, findings);
         Optional<Tolerance> tolerance = draft.tolerance().map(given -> tolerance(given, findings));
-        Plan plan = Plans.of(draft, findings);
+        Stop stop = Plans.stop(draft, findings);
+        long seed = Plans.seed(draft, findings);
         Optional<Dependence> dependence =
                 draft.dependence().flatMap(given -> Dependences.of(given, draft.inputs(), inputs, findings));
+        boolean sound = working.isPresent() && inputs.size() == draft.inputs().size();
+        List<Lane> lanes = Lanes.of(draft, inputs, sound, dependence, noting(files, read), findings);
         findings.refuseIfAny();
         Question question = new Question(
                 draft.title(),
@@ -68,7 +71,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         List<Problem> notes = new ArrayList<>(Workings.notes(draft, question.working()));
         notes.addAll(findings.notes());
         dependence.ifPresent(tied -> notes.addAll(Dependences.notes(tied, inputs)));
-        return new Project(draft, question, plan, notes, read);
+        return new Project(draft, question, new Plan(stop, seed, lanes), notes, read);
     }
 
     /// One input by itself, whatever else is wrong in the draft.

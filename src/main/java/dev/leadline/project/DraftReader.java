@@ -7,11 +7,11 @@ import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
-import dev.leadline.model.Draft.LaneDraft;
 import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.model.LaneDraft;
 import dev.leadline.model.Stop;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
@@ -37,24 +37,14 @@ final class DraftReader {
     private static final int MOST_PAIRS = 10_000;
 
     private static final String LEAVE_OUT = "Leave it out.";
-    private static final String ONLY_PLAIN =
-            "Leave it out: lanes here draw independent points from the inputs' densities.";
+    private static final String IN_A_LANE =
+            "A lane says what its inputs are drawn from: {\"name\": \"B\", \"drawFrom\": {\"v\": …}}.";
     private static final String ONLY_FIXED = "Leave it out: {\"rule\": \"fixed\"} takes draws and seconds.";
     private static final String ONLY_VALUES =
             "Give the value itself: {\"value\": 0.12, \"error\": 1e-4, \"source\": \"…\"}.";
 
     private static final Map<String, String> WHOLE_LATER =
             Map.of("bounds", LEAVE_OUT, "logbook", "Leave it out: no run is written to a logbook.");
-    private static final Map<String, String> LANE_LATER = each(
-            ONLY_PLAIN,
-            "drawFrom",
-            "nominalShare",
-            "controlVariates",
-            "replicates",
-            "cells",
-            "scrambling",
-            "particles",
-            "repetitions");
     private static final Map<String, String> STOP_LATER = each(ONLY_FIXED, "hits", "guard");
     private static final Map<String, String> REFERENCE_LATER = each(ONLY_VALUES, "formula", "quadrature");
     private static final List<String> MEASURES = List.of("spearman", "kendall", "pearson");
@@ -95,8 +85,8 @@ final class DraftReader {
                 whole.object("stop", "a stop rule {\"rule\": \"fixed\", \"draws\": …}")
                         .map(this::stop),
                 whole.count("seed", 0, Long.MAX_VALUE),
+                whole.flag("commonRandomNumbers"),
                 lanes(whole));
-        onlyOff(whole, "commonRandomNumbers");
         onlyAuto(whole);
         whole.close(WHOLE_LATER);
         if (!indicesHold) {
@@ -163,7 +153,7 @@ final class DraftReader {
             return range(input, drawFrom);
         }
         if (drawFrom.isPresent()) {
-            problems.add(Fields.unavailable("\"drawFrom\" beside a density", ONLY_PLAIN)
+            problems.add(Fields.unavailable("\"drawFrom\" beside a density", IN_A_LANE)
                     .at(Place.of(input.pathOf("drawFrom"))));
         }
         return new From.Density(density.orElse(DensityDraft.unchosen()));
@@ -324,25 +314,18 @@ final class DraftReader {
     }
 
     private List<LaneDraft> lanes(Fields whole) {
-        List<LaneDraft> lanes =
-                each(whole, "lanes", Draft.MOST_ROWS, "a lane {\"name\": \"A\", \"points\": …}", fields -> {
-                    var lane = new LaneDraft(fields.requiredText("name", NAME), fields.requiredText("points", NAME));
-                    fields.close(LANE_LATER);
-                    return lane;
-                });
+        List<LaneDraft> lanes = each(
+                whole,
+                "lanes",
+                Draft.MOST_ROWS,
+                "a lane {\"name\": \"A\", \"points\": …}",
+                fields -> LaneReader.read(fields, problems));
         if (lanes.isEmpty() && whole.take("lanes").orElse(new Json.Null()) instanceof Json.Elements) {
             problems.add(Problem.of("there is no lane in lanes")
                     .tryThis("Leave the field out for one lane A of independent points.")
                     .at(Place.of(whole.pathOf("lanes"))));
         }
         return lanes;
-    }
-
-    private void onlyOff(Fields whole, String name) {
-        if (whole.flag(name)) {
-            problems.add(Fields.unavailable("\"%s\": true".formatted(name), LEAVE_OUT)
-                    .at(Place.of(whole.pathOf(name))));
-        }
     }
 
     private void onlyAuto(Fields whole) {

@@ -14,7 +14,6 @@ import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
-import dev.leadline.model.Draft.LaneDraft;
 import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
@@ -49,7 +48,10 @@ final class DraftWriter {
         draft.tolerance().ifPresent(tolerance -> whole.put("tolerance", tolerance(tolerance)));
         draft.stop().ifPresent(stop -> whole.put("stop", stop(stop)));
         draft.seed().ifPresent(seed -> whole.put("seed", Json.of(seed)));
-        list(whole, "lanes", draft.lanes(), DraftWriter::lane);
+        if (draft.commonRandomNumbers()) {
+            whole.put("commonRandomNumbers", Json.of(true));
+        }
+        list(whole, "lanes", draft.lanes(), LaneWriter::lane);
         return whole.build();
     }
 
@@ -196,13 +198,6 @@ final class DraftWriter {
         stop.draws().ifPresent(draws -> fields.put("draws", Json.of(draws)));
         number(fields, "seconds", stop.seconds());
         return fields.build();
-    }
-
-    private static Json lane(LaneDraft lane) {
-        return Json.object()
-                .put("name", lane.name())
-                .put("points", lane.points())
-                .build();
     }
 
     private static <T> void list(Json.Builder fields, String name, List<T> parts, Function<T, Json> json) {

@@ -96,7 +96,7 @@ public final class Study implements AutoCloseable {
     private void conduct() {
         try (workers) {
             publish(state);
-            var recipes = plan.lanes().stream()
+            var recipes = plan.settled().stream()
                     .map(lane -> Recipe.of(question, lane, plan.seed()))
                     .toList();
             var runs = recipes.stream()

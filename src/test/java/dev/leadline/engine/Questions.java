@@ -14,7 +14,7 @@ import dev.leadline.model.Question;
 import dev.leadline.model.Reference;
 import dev.leadline.model.Stop;
 import dev.leadline.model.Tolerance;
-import dev.leadline.scheme.Points;
+import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.Scheme;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -96,7 +96,7 @@ public final class Questions {
     }
 
     public static Lane lane(String name) {
-        return new Lane(name, new Scheme(new Points.Independent()));
+        return Lane.of(name, Scheme.of(new Independent()));
     }
 
     public static Plan plan(long draws, long seed) {

@@ -9,7 +9,7 @@ import java.util.concurrent.atomic.AtomicInteger;
 import org.junit.jupiter.api.Test;
 
 class SamplerTest {
-    private static final Item BIG = new Items(1).at(80);
+    private static final Item BIG = new GrowingItems(1).at(80);
 
     private static ItemSums compute(Question question, Item item) {
         return Recipe.of(question, Questions.lane("A"), 7)
@@ -24,7 +24,7 @@ class SamplerTest {
                 new Questions().uniform("x", 0, 1).normal("z").mean("x*exp(z)").build();
         var sampler = Recipe.of(question, Questions.lane("A"), 7).sampler();
         var first = sampler.compute(BIG, () -> false).orElseThrow();
-        sampler.compute(new Items(1).at(3), () -> false);
+        sampler.compute(new GrowingItems(1).at(3), () -> false);
         var again = sampler.compute(BIG, () -> false).orElseThrow();
         assertEquals(first.sums().mean(0), again.sums().mean(0));
         assertEquals(first.sums().variance(0), compute(question, BIG).sums().variance(0));

@@ -8,6 +8,8 @@ import dev.leadline.estimate.Accumulator;
 import dev.leadline.ground.Ground.Status;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.model.Question;
+import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.Scheme;
 import dev.leadline.study.Study;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Blocks;
@@ -150,7 +152,7 @@ class GroundsTest {
     private static List<Ground> judged(Question question, double... values) {
         var total = new Accumulator(1);
         total.add(new double[][] {values}, 0, values.length);
-        var mark = new Mark(values.length, 0, Answers.of(question, total));
+        var mark = new Mark(values.length, 0, Answers.of(question, Scheme.of(new Independent()), total));
         return Grounds.of(
                 question, new Trace("A", "independent", List.of(mark), List.of(total), List.of(), Optional.empty()));
     }
@@ -208,7 +210,7 @@ class GroundsTest {
             blocks.add(block);
             total.merge(block);
         }
-        var mark = new Mark(2_000, 0, Answers.of(question, total));
+        var mark = new Mark(2_000, 0, Answers.of(question, Scheme.of(new Independent()), total));
         return new Trace("A", "independent", List.of(mark), blocks.snapshot(), List.of(), Optional.empty());
     }
 

@@ -37,6 +37,7 @@ class ProjectTest {
                 Optional.empty(),
                 Optional.of(new StopDraft("fixed", OptionalLong.of(draws), OptionalDouble.empty())),
                 OptionalLong.of(1),
+                false,
                 List.of());
     }
 
@@ -78,6 +79,7 @@ class ProjectTest {
                 Optional.empty(),
                 Optional.empty(),
                 OptionalLong.empty(),
+                false,
                 List.of());
         var project = Project.of(bare);
         assertEquals(.95, project.question().confidence());

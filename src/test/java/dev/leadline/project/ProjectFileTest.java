@@ -21,11 +21,16 @@ import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
-import dev.leadline.model.Draft.LaneDraft;
 import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.model.LaneDraft;
+import dev.leadline.model.LaneDraft.ControlDraft;
+import dev.leadline.model.LaneDraft.DrawFrom;
+import dev.leadline.model.LaneDraft.Mean;
+import dev.leadline.model.LaneDraft.Other;
+import dev.leadline.model.LaneDraft.Settings;
 import dev.leadline.problem.Refusal;
 import java.io.IOException;
 import java.nio.ByteBuffer;
@@ -96,9 +101,40 @@ class ProjectFileTest {
             Optional.of(new ToleranceDraft(OptionalDouble.of(25), OptionalDouble.of(.1), Optional.of("both"))),
             Optional.of(new StopDraft("fixed", OptionalLong.of(200_000_000), OptionalDouble.of(.5))),
             OptionalLong.of(Long.MAX_VALUE),
-            List.of(new LaneDraft("A", "independent"), new LaneDraft("B", "scrambled-sobol")));
+            true,
+            List.of(
+                    LaneDraft.of("A", "independent"),
+                    new LaneDraft(
+                            "B",
+                            "stratified",
+                            new Settings(
+                                    OptionalLong.of(16),
+                                    OptionalLong.of(1000),
+                                    new LinkedHashMap<>(Map.of("v", 8L)),
+                                    Optional.of("nested"),
+                                    OptionalLong.of(100),
+                                    OptionalLong.of(20)),
+                            new DrawFrom.Adapted("grid"),
+                            OptionalDouble.of(.2),
+                            true,
+                            List.of(
+                                    new ControlDraft("v", new Mean.Exact()),
+                                    new ControlDraft("v^2", new Mean.Stated(3)),
+                                    new ControlDraft("x", new Mean.Quadrature()))),
+                    new LaneDraft(
+                            "C", "independent", Settings.NONE, others(), OptionalDouble.empty(), false, List.of())));
 
     private static final long MUTATED_PROJECTS = 1_000;
+
+    private static DrawFrom others() {
+        var others = new LinkedHashMap<String, Other>();
+        others.put("v", new Other.Another(DensityDraft.of("normal", new LinkedHashMap<>(Map.of("mean", 1.0)))));
+        others.put("w", new Other.Shift(3));
+        others.put("x", new Other.Widen(1.5));
+        others.put("y", new Other.Tilt(-2));
+        others.put("z", new Other.Adapt());
+        return new DrawFrom.Inputs(others);
+    }
 
     private static InputDraft input(String name, DensityDraft.Of of) {
         return new InputDraft(name, "", "", "", new From.Density(DensityDraft.of(of)));
@@ -151,6 +187,7 @@ class ProjectFileTest {
                 Optional.empty(),
                 Optional.empty(),
                 OptionalLong.empty(),
+                false,
                 List.of()));
         var reading = ProjectFile.examine(unfinished.getBytes(StandardCharsets.UTF_8));
         assertEquals(

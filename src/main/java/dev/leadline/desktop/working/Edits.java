@@ -35,6 +35,7 @@ public final class Edits {
                 Optional.empty(),
                 Optional.empty(),
                 OptionalLong.empty(),
+                false,
                 List.of());
     }
 
@@ -66,6 +67,7 @@ public final class Edits {
                 d.tolerance(),
                 d.stop(),
                 d.seed(),
+                d.commonRandomNumbers(),
                 d.lanes());
     }
 
@@ -86,6 +88,7 @@ public final class Edits {
                 d.tolerance(),
                 d.stop(),
                 d.seed(),
+                d.commonRandomNumbers(),
                 d.lanes());
     }
 
@@ -111,6 +114,7 @@ public final class Edits {
                 tolerance,
                 stop,
                 seed,
+                d.commonRandomNumbers(),
                 d.lanes());
     }
 
@@ -129,6 +133,7 @@ public final class Edits {
                 d.tolerance(),
                 d.stop(),
                 d.seed(),
+                d.commonRandomNumbers(),
                 d.lanes());
     }
 

@@ -91,6 +91,6 @@ public final class LookViewModel {
     }
 
     private static Look at(Project p, long draw) {
-        return Look.at(p.question(), p.plan().lanes().getFirst(), p.plan().seed(), draw);
+        return Look.at(p.question(), p.plan().settled().getFirst(), p.plan().seed(), draw);
     }
 }

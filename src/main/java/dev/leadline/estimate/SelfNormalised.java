@@ -1,0 +1,19 @@
+package dev.leadline.estimate;
+
+/// The mean of weighted outcomes over the mean of the weights. Its bias, of the order of one over the number of
+/// observations, is not corrected; its variance is that of the linear part (delta method).
+///
+/// Source: Hesterberg (1995), Technometrics 37, 185-194.
+public final class SelfNormalised {
+    private SelfNormalised() {}
+
+    /// @param k component of the weighted outcomes
+    /// @param w component of the weights
+    public static Estimate of(Accumulator sums, int k, int w) {
+        double ratio = sums.mean(k) / sums.mean(w);
+        double variance =
+                (sums.covariance(k, k) - 2 * ratio * sums.covariance(k, w) + ratio * ratio * sums.covariance(w, w))
+                        / (sums.mean(w) * sums.mean(w));
+        return new Estimate(ratio, Math.sqrt(Math.max(variance, 0) / sums.count()), sums.count() - 1);
+    }
+}

@@ -1,0 +1,108 @@
+package dev.leadline.model;
+
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+import java.util.SequencedMap;
+import java.util.stream.Stream;
+
+/// A lane as it was written.
+///
+/// @param points word of the layout
+/// @param nominalShare share of the draws from the inputs' own densities; empty means a tenth
+public record LaneDraft(
+        String name,
+        String points,
+        Settings settings,
+        DrawFrom drawFrom,
+        OptionalDouble nominalShare,
+        boolean selfNormalised,
+        List<ControlDraft> controls) {
+    public LaneDraft {
+        controls = List.copyOf(controls);
+    }
+
+    public static LaneDraft of(String name, String points) {
+        return new LaneDraft(name, points, Settings.NONE, DrawFrom.NOTHING, OptionalDouble.empty(), false, List.of());
+    }
+
+    /// What a layout may be told; each layout takes some of it.
+    ///
+    /// @param replicates independent repetitions of the points
+    /// @param cube points of a Latin hypercube
+    /// @param cells parts of the range of an input, by its name
+    /// @param scrambling word of the randomisation
+    /// @param particles of splitting
+    /// @param repetitions of splitting
+    public record Settings(
+            OptionalLong replicates,
+            OptionalLong cube,
+            SequencedMap<String, Long> cells,
+            Optional<String> scrambling,
+            OptionalLong particles,
+            OptionalLong repetitions) {
+        public static final Settings NONE = new Settings(
+                OptionalLong.empty(),
+                OptionalLong.empty(),
+                new LinkedHashMap<>(),
+                Optional.empty(),
+                OptionalLong.empty(),
+                OptionalLong.empty());
+    }
+
+    /// What inputs are drawn from instead of their own densities.
+    public sealed interface DrawFrom {
+        DrawFrom NOTHING = new Inputs(new LinkedHashMap<>());
+
+        /// Some inputs from densities of their own, by their names.
+        record Inputs(SequencedMap<String, Other> others) implements DrawFrom {}
+
+        /// All inputs from densities that are found before the run.
+        ///
+        /// @param way `cross-entropy` or `grid`
+        record Adapted(String way) implements DrawFrom {}
+    }
+
+    /// What one input is drawn from.
+    public sealed interface Other {
+        record Another(DensityDraft density) implements Other {}
+
+        /// Its own density, moved.
+        record Shift(double by) implements Other {}
+
+        /// Its own density, stretched about its middle.
+        record Widen(double by) implements Other {}
+
+        /// Its own density times `exp(by x)`.
+        record Tilt(double by) implements Other {}
+
+        /// A member of its own family that is found before the run.
+        record Adapt() implements Other {}
+    }
+
+    /// A control variate.
+    public record ControlDraft(String formula, Mean mean) {}
+
+    /// How the mean of a control variate is known.
+    public sealed interface Mean {
+        record Stated(double value) implements Mean {}
+
+        /// In closed form, from the inputs.
+        record Exact() implements Mean {}
+
+        /// By a deterministic rule, with an error.
+        record Quadrature() implements Mean {}
+    }
+
+    Stream<String> dataFiles() {
+        return switch (drawFrom) {
+            case DrawFrom.Inputs(var others) ->
+                others.values().stream()
+                        .flatMap(other ->
+                                other instanceof Other.Another(var density) ? density.dataFiles() : Stream.empty());
+            case DrawFrom.Adapted _ -> Stream.empty();
+        };
+    }
+}

@@ -1,0 +1,127 @@
+package dev.leadline.model;
+
+import dev.leadline.model.LaneDraft.Settings;
+import dev.leadline.problem.Nearest;
+import dev.leadline.problem.Problem;
+import dev.leadline.scheme.Antithetic;
+import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.LatinHypercube;
+import dev.leadline.scheme.Points;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalInt;
+import java.util.OptionalLong;
+import java.util.function.Function;
+
+/// Makes the layout of a lane's points of its draft.
+final class Layouts {
+    /// Below it, an error bar from replicates is too uncertain itself.
+    private static final int FEWEST_REPLICATES = 10;
+
+    private static final int MOST_REPLICATES = 10_000;
+    private static final int USUAL_CUBES = 30;
+
+    /// @param takes names of the settings that it takes
+    private record Kind(List<String> takes, Function<Layouts, Optional<Points>> made) {}
+
+    private static final Map<String, Kind> KINDS = kinds();
+
+    private final Settings settings;
+    private final String path;
+    private final Findings findings;
+
+    private Layouts(Settings settings, String path, Findings findings) {
+        this.settings = settings;
+        this.path = path;
+        this.findings = findings;
+    }
+
+    /// Words of the file, in the order in which they are offered.
+    static List<String> words() {
+        return List.copyOf(KINDS.keySet());
+    }
+
+    private static Map<String, Kind> kinds() {
+        var kinds = new LinkedHashMap<String, Kind>();
+        kinds.put("independent", new Kind(List.of(), _ -> Optional.of(new Independent())));
+        kinds.put("antithetic", new Kind(List.of(), _ -> Optional.of(new Antithetic())));
+        kinds.put(LatinHypercube.WORD, new Kind(List.of("replicates", "cube"), Layouts::latinHypercube));
+        return kinds;
+    }
+
+    /// @param path of the lane
+    static Optional<Points> of(LaneDraft lane, String path, Findings findings) {
+        var kind = KINDS.get(lane.points());
+        if (kind == null) {
+            findings.add(path + ".points", noPoints(lane.points()));
+            return Optional.empty();
+        }
+        var given = given(lane.settings());
+        given.removeAll(kind.takes());
+        given.forEach(name -> findings.add(
+                path + "." + name,
+                "%s points take no \"%s\"".formatted(lane.points(), name),
+                kind.takes().isEmpty()
+                        ? "They take no settings."
+                        : "They take %s.".formatted(String.join(", ", kind.takes())),
+                "Leave it out."));
+        return given.isEmpty() ? kind.made().apply(new Layouts(lane.settings(), path, findings)) : Optional.empty();
+    }
+
+    private static List<String> given(Settings settings) {
+        var given = new ArrayList<String>();
+        settings.replicates().ifPresent(_ -> given.add("replicates"));
+        settings.cube().ifPresent(_ -> given.add("cube"));
+        if (!settings.cells().isEmpty()) {
+            given.add("cells");
+        }
+        settings.scrambling().ifPresent(_ -> given.add("scrambling"));
+        settings.particles().ifPresent(_ -> given.add("particles"));
+        settings.repetitions().ifPresent(_ -> given.add("repetitions"));
+        return given;
+    }
+
+    private Optional<Points> latinHypercube() {
+        var replicates = count("replicates", settings.replicates(), USUAL_CUBES, FEWEST_REPLICATES, MOST_REPLICATES);
+        var cube = settings.cube().isEmpty()
+                ? OptionalInt.empty()
+                : count("cube", settings.cube(), 2, 2, LatinHypercube.MOST_POINTS);
+        if (settings.cube().isPresent() && settings.replicates().isPresent()) {
+            findings.add(
+                    path + ".cube",
+                    "a Latin hypercube has \"cube\" and \"replicates\"",
+                    "The points of a cube are either stated, or the draws of the lane over the replicates.",
+                    "Leave one of them out.");
+            return Optional.empty();
+        }
+        return replicates.isPresent() && (cube.isPresent() || settings.cube().isEmpty())
+                ? Optional.of(new LatinHypercube(cube, replicates.getAsInt()))
+                : Optional.empty();
+    }
+
+    private OptionalInt count(String name, OptionalLong given, int usual, int least, int most) {
+        long count = given.orElse(usual);
+        if (count < least || count > most) {
+            findings.add(
+                    path + "." + name,
+                    "%s is %d but must be from %d to %d".formatted(name, count, least, most),
+                    name.equals("replicates")
+                            ? "The error is judged by how far independent replicates differ, which takes at least %d."
+                                    .formatted(FEWEST_REPLICATES)
+                            : "Larger ones do not fit into an item of work.");
+            return OptionalInt.empty();
+        }
+        return OptionalInt.of((int) count);
+    }
+
+    private static Problem noPoints(String word) {
+        Problem problem = Problem.of("the points \"%s\" are not available".formatted(word))
+                .because("Points here are %s.".formatted(String.join(", ", words())));
+        return Nearest.to(word, KINDS.keySet())
+                .map(near -> problem.tryThis("Was \"%s\" meant?".formatted(near)))
+                .orElse(problem.tryThis("Write \"points\": \"independent\"."));
+    }
+}

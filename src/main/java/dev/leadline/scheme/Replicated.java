@@ -1,0 +1,12 @@
+package dev.leadline.scheme;
+
+/// Points of which no two are independent, in replicates that are: the mean of each replicate is an observation, which
+/// a longer run sharpens. They have as many points as a power of two.
+public sealed interface Replicated extends Points permits ScrambledSobol {
+    int replicates();
+
+    @Override
+    default String inWords() {
+        return word() + ", " + replicates() + " replicates";
+    }
+}
