@@ -50,7 +50,7 @@ public enum Measure {
         }
         if (this == PEARSON && (one instanceof Empirical || other instanceof Empirical)) {
             // Columns of data are too large to keep.
-            return new TiedPair(mixing, one, other).latent(target);
+            return TiedPair.of(mixing, one, other).latent(target);
         }
         if (SOLVED.size() > KEPT) {
             SOLVED.clear();
@@ -59,7 +59,8 @@ public enum Measure {
         var sought = this == SPEARMAN
                 ? new Sought(this, mixing, RANKS, RANKS, target)
                 : new Sought(this, mixing, one, other, target);
-        return SOLVED.computeIfAbsent(sought, s -> new TiedPair(s.mixing, s.one, s.other).latent(s.target));
+        return SOLVED.computeIfAbsent(
+                sought, s -> TiedPair.of(s.mixing, s.one, s.other).latent(s.target));
     }
 
     /// The value of this measure, given the correlation of the normals behind two inputs.
@@ -71,7 +72,7 @@ public enum Measure {
         if (this == SPEARMAN && mixing.equals(Mixing.NONE)) {
             return 6 / Math.PI * StrictMath.asin(latent / 2);
         }
-        var pair = this == SPEARMAN ? new TiedPair(mixing, RANKS, RANKS) : new TiedPair(mixing, one, other);
+        var pair = this == SPEARMAN ? TiedPair.of(mixing, RANKS, RANKS) : TiedPair.of(mixing, one, other);
         return pair.correlation(alpha);
     }
 }

@@ -1,9 +1,12 @@
 package dev.leadline.engine;
 
+import dev.leadline.density.Measure;
 import dev.leadline.estimate.Association;
+import dev.leadline.estimate.Correlation;
 import dev.leadline.formula.Program;
 import dev.leadline.interval.Interval;
 import dev.leadline.interval.Student;
+import dev.leadline.model.Dependence;
 import dev.leadline.model.Dependence.Tie;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
@@ -19,13 +22,13 @@ import java.util.stream.IntStream;
 /// The correlation that draws of two tied inputs have, by the measure it was stated in: seen in draws made for
 /// nothing else, so that it is independent of every answer.
 ///
-/// @param value mean over batches of draws; `NaN` where all values of an input in a batch are equal
-/// @param interval from the spread of the batches
+/// @param value of ranks and orders the mean over batches of draws, of values that of all draws; `NaN` where all values
+///     of an input in a batch are equal
+/// @param interval from the spread of the batches; none, with its reason, where rare values decide the correlation
 public record Achieved(Tie tie, double value, Interval interval) {
     private static final int BATCHES = 32;
 
-    /// Blocks of a batch. The bias of a rank correlation is at most about 1 over the draws of a batch, a tenth of the
-    /// standard error.
+    /// Blocks of a batch.
     private static final int BLOCKS = 4;
 
     /// How many draws are looked at.
@@ -48,24 +51,42 @@ public record Achieved(Tie tie, double value, Interval interval) {
         });
         var drawing = new Drawing(recipe, tied);
         double[][] seen = new double[ties.size()][BATCHES];
+        double[][][] drawn = new double[question.inputs().size()][BATCHES][];
         for (int batch = 0; batch < BATCHES; batch++) {
             double[][] values = batch(drawing, batch);
+            for (int input = 0; input < values.length; input++) {
+                drawn[input][batch] = values[input];
+            }
             double[][] ranks = Arrays.stream(values)
                     .map(column -> column == null ? null : Association.ranks(column))
                     .toArray(double[][]::new);
             for (int k = 0; k < ties.size(); k++) {
                 Tie tie = ties.get(k);
                 seen[k][batch] = switch (tie.measure()) {
-                    case SPEARMAN -> Association.pearson(ranks[tie.one()], ranks[tie.other()]);
+                    case SPEARMAN -> Association.spearman(ranks[tie.one()], ranks[tie.other()]);
                     case KENDALL -> Association.kendall(values[tie.one()], values[tie.other()]);
-                    case PEARSON -> Association.pearson(values[tie.one()], values[tie.other()]);
+                    case PEARSON -> Double.NaN; // of all draws together
                 };
             }
         }
         double level = question.confidence();
         return IntStream.range(0, ties.size())
-                .mapToObj(k -> of(ties.get(k), seen[k], level))
+                .mapToObj(k -> ties.get(k).measure() == Measure.PEARSON
+                        ? ofValues(question, ties.get(k), drawn, level)
+                        : of(ties.get(k), seen[k], level))
                 .toList();
+    }
+
+    private static Achieved ofValues(Question question, Tie tie, double[][][] drawn, double level) {
+        var seen = Correlation.of(drawn[tie.one()], drawn[tie.other()]);
+        var wild = Dependence.wild(tie, question.inputs());
+        var interval = wild.isEmpty()
+                ? Student.of(seen.value(), seen.standardError(), BATCHES, level)
+                : Student.none(
+                        level,
+                        "rare, large values of %s decide it, more than can be seen in the draws looked at"
+                                .formatted(String.join(" and ", wild)));
+        return new Achieved(tie, seen.value(), interval);
     }
 
     private static Achieved of(Tie tie, double[] seen, double level) {

@@ -35,6 +35,29 @@ public final class Association {
         return ranks;
     }
 
+    /// Spearman's correlation of the distribution that the rows were drawn from, without bias where it has no equal
+    /// values: the correlation of the ranks of n rows has the mean `((n - 2) ρ + 3 τ) / (n + 1)`, with Kendall's τ.
+    /// Where there are equal values it is the correlation of the ranks.
+    ///
+    /// Source: Hoeffding (1948), Annals of Mathematical Statistics 19, 293-325, section 9c.
+    ///
+    /// @param x ranks, as is `y`
+    public static double spearman(double[] x, double[] y) {
+        double ofRanks = pearson(x, y);
+        if (hasEqual(x) || hasEqual(y)) {
+            return ofRanks;
+        }
+        double n = x.length;
+        return ((n + 1) * ofRanks - 3 * kendall(x, y)) / (n - 2);
+    }
+
+    /// Equal values that share their mean rank have smaller squares.
+    private static boolean hasEqual(double[] ranks) {
+        double n = ranks.length;
+        double squares = Arrays.stream(ranks).map(rank -> rank * rank).sum();
+        return squares < (n - 1) * n * (2 * n - 1) / 6;
+    }
+
     /// Kendall's correlation, the form for ties (tau-b): pairs of rows in the same order in both columns less those in
     /// opposite order, over the root of the pairs that differ in the one times those that differ in the other.
     ///

@@ -56,7 +56,10 @@ public final class Student {
         return new Interval(mean - half, mean + half, level, KIND, ASSUMPTION, Optional.empty());
     }
 
-    private static Interval none(double level, String note) {
+    /// No interval.
+    ///
+    /// @param note why there is none
+    public static Interval none(double level, String note) {
         return new Interval(Double.NaN, Double.NaN, level, KIND, ASSUMPTION, Optional.of(note));
     }
 

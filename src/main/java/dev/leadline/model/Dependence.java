@@ -3,6 +3,8 @@ package dev.leadline.model;
 import dev.leadline.density.Copula;
 import dev.leadline.density.Measure;
 import java.util.List;
+import java.util.Set;
+import java.util.stream.Stream;
 
 /// How inputs are tied to each other.
 ///
@@ -16,6 +18,27 @@ public record Dependence(Copula copula, List<Integer> inputs, List<Tie> ties, Li
         inputs = List.copyOf(inputs);
         ties = List.copyOf(ties);
         repairs = List.copyOf(repairs);
+    }
+
+    /// Excess kurtosis above which few draws decide a product; a lognormal density of sigma 1.3 has more.
+    private static final double WILD = 1000;
+
+    /// Names of those inputs of a tie whose rare, large values decide Pearson's correlation.
+    public static List<String> wild(Tie tie, List<Input> inputs) {
+        return Stream.of(tie.one(), tie.other())
+                .map(inputs::get)
+                .filter(input -> !(input.drawn().excessKurtosis() <= WILD))
+                .map(Input::name)
+                .toList();
+    }
+
+    /// The value that is drawn with: the one stated, where no nearest takes its place.
+    public double taken(Tie tie) {
+        return repairs.stream()
+                .filter(repair -> Set.of(repair.one(), repair.other()).equals(Set.of(tie.one(), tie.other())))
+                .mapToDouble(Repair::to)
+                .findFirst()
+                .orElse(tie.target());
     }
 
     /// The correlation of two inputs.

@@ -30,9 +30,6 @@ import java.util.stream.Stream;
 
 /// Makes the dependence of inputs of its draft.
 final class Dependences {
-    /// Excess kurtosis above which few draws decide a product; a lognormal density of sigma 1.15 has it.
-    private static final double WILD = 1000;
-
     private static final String PATH = "$.dependence";
 
     /// Changed correlations that are named.
@@ -322,14 +319,10 @@ final class Dependences {
         }
         for (int i = 0; i < dependence.ties().size(); i++) {
             Tie tie = dependence.ties().get(i);
-            List<String> wild = IntStream.of(tie.one(), tie.other())
-                    .mapToObj(inputs::get)
-                    .filter(input -> !(input.drawn().excessKurtosis() <= WILD))
-                    .map(Input::name)
-                    .toList();
+            List<String> wild = Dependence.wild(tie, inputs);
             if (!wild.isEmpty() && tie.measure() == Measure.PEARSON) {
                 notes.add(Problem.of("pearson is hardly seen in draws of %s".formatted(String.join(" and ", wild)))
-                        .because("Rare, large values decide it; what is achieved in some draws scatters far beyond its"
+                        .because("Rare, large values decide it; what is achieved in some draws scatters too much for an"
                                 + " interval.")
                         .tryThis("Give spearman, which every draw speaks of.")
                         .at(Place.of("%s.pairs[%d].%s"

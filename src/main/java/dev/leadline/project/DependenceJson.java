@@ -7,9 +7,10 @@ import dev.leadline.model.Question;
 import java.util.List;
 
 /// How inputs are tied, as commands print it:
-/// `{"copula", "dof", "pairs": [{"of", "measure", "target", "latent", "achieved", "interval"}], "repaired"}`.
+/// `{"copula", "dof", "pairs": [{"of", "measure", "target", "taken", "latent", "achieved", "interval"}], "repaired"}`.
 ///
-/// `latent` is the correlation of the normals behind the two; `repaired` is `null`, or a list of what the nearest
+/// `target` is what was stated, `taken` what is drawn with: another only where it was repaired; `latent` is the
+/// correlation of the normals behind the two; `repaired` is `null`, or a list of what the nearest
 /// possible correlations changed.
 final class DependenceJson {
 
@@ -42,14 +43,16 @@ final class DependenceJson {
     private static Json pair(Question question, Achieved achieved) {
         var tie = achieved.tie();
         var interval = achieved.interval();
-        return Json.object()
+        var json = Json.object()
                 .put("of", names(question, tie.one(), tie.other()))
                 .put("measure", tie.measure().word())
                 .put("target", Json.of(tie.target()))
+                .put("taken", Json.of(question.dependence().orElseThrow().taken(tie)))
                 .put("latent", Json.of(tie.latent()))
                 .put("achieved", Json.orNull(achieved.value()))
-                .put("interval", Json.list(List.of(Json.orNull(interval.low()), Json.orNull(interval.high()))))
-                .build();
+                .put("interval", Json.list(List.of(Json.orNull(interval.low()), Json.orNull(interval.high()))));
+        interval.note().ifPresent(note -> json.put("intervalNote", note));
+        return json.build();
     }
 
     private static Json repair(Question question, Repair repair) {

@@ -162,8 +162,33 @@ class DependenceTest {
                 .required("latent")
                 .asDouble();
         assertTrue(latent < .9 && latent > .7, "" + latent);
+        var first = outcome.json().required("dependence").required("pairs").get(0);
+        assertEquals(.9, first.required("target").asDouble());
+        assertEquals(latent, first.required("taken").asDouble(), 1e-9);
+        String text = leadline("check", project).out();
+        assertTrue(text.contains("x, y  pearson 0.9, nearest %.4f  0.".formatted(latent)), text);
         var answer = outcome.json().required("lanes").get(0).required("answers").get(0);
         assertEquals(latent, answer.required("estimate").asDouble(), 4e-3 * 1.4);
+    }
+
+    @Test
+    void saysWhyThereIsNoInterval() throws IOException {
+        String inputs = NORMALS.replaceFirst(
+                "\"family\": \"normal\", \"mean\": 0, \"sd\": 1",
+                "\"family\": \"student\", \"dof\": 4, \"location\": 0, \"scale\": 1");
+        var project = project(
+                inputs,
+                "{\"copula\": \"gaussian\", \"pairs\": [{\"of\": [\"x\", \"y\"], \"pearson\": 0.6}]}",
+                "{\"mean\": \"x*y\"}");
+        String text = leadline("check", project).out();
+        assertTrue(text.contains(", no ±: rare, large values of x decide it"), text);
+        var pair = leadline("check", project, "--json")
+                .json()
+                .required("dependence")
+                .required("pairs")
+                .get(0);
+        assertTrue(pair.required("interval").get(0).isNull());
+        assertTrue(pair.required("intervalNote").asString().startsWith("rare, large values of x"));
     }
 
     /// Ranks of two values hardly tell anything; pearson speaks of the values.

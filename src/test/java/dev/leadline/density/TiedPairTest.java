@@ -3,6 +3,9 @@ package dev.leadline.density;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.Arrays;
+import java.util.Map;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvFileSource;
@@ -11,6 +14,9 @@ import org.junit.jupiter.params.provider.CsvSource;
 class TiedPairTest {
     private static final Density LOGNORMAL = new Lognormal(0, .8);
     private static final Density NORMAL = new Normal(3, 2);
+
+    /// Of inputs with steps, as `SteppedPair` says.
+    private static final double STEPPED = 1e-9;
 
     private static double value(Measure measure, Mixing mixing, Density one, Density other, double latent) {
         return measure.value(mixing, one, other, latent);
@@ -69,7 +75,7 @@ class TiedPairTest {
     @CsvSource({"-.8", "-.3", ".2", ".7", ".99"})
     void valuesOfTwoHalves(double rho) {
         var half = Empirical.of(0, 1);
-        assertEquals(2 / Math.PI * Math.asin(rho), value(Measure.PEARSON, Mixing.NONE, half, half, rho), 1e-4);
+        assertEquals(2 / Math.PI * Math.asin(rho), value(Measure.PEARSON, Mixing.NONE, half, half, rho), STEPPED);
         assertEquals(1, value(Measure.PEARSON, Mixing.NONE, half, half, 1), 1e-12);
     }
 
@@ -78,6 +84,43 @@ class TiedPairTest {
     void valuesOfAnEventAndANormal() {
         var quarter = Empirical.of(0, 0, 0, 1);
         double expected = .6 * .3177765726841069 / Math.sqrt(.1875);
-        assertEquals(expected, value(Measure.PEARSON, Mixing.NONE, quarter, NORMAL, .6), 1e-4);
+        assertEquals(expected, value(Measure.PEARSON, Mixing.NONE, quarter, NORMAL, .6), STEPPED);
+        assertEquals(.6, Measure.PEARSON.latent(Mixing.NONE, NORMAL, quarter, expected), 2 * STEPPED);
+    }
+
+    /// `stepped_pairs.py`: double sums over the steps, with the copula by another integral; closed forms.
+    @ParameterizedTest(name = "{0} and {1}, dof {2}, ρ {3}")
+    @CsvFileSource(resources = "/density/stepped-pairs.csv", delimiter = ';', useHeadersInDisplayName = true)
+    void valuesOfInputsWithSteps(String one, String other, double dof, double rho, double pearson) {
+        var mixing = dof == 0 ? Mixing.NONE : Mixing.student(dof);
+        assertEquals(pearson, value(Measure.PEARSON, mixing, density(one), density(other), rho), STEPPED);
+        assertEquals(pearson, value(Measure.PEARSON, mixing, density(other), density(one), rho), STEPPED);
+    }
+
+    private static Density density(String words) {
+        double[] numbers = Arrays.stream(
+                        words.replaceAll("^[^(]*|[^-.\\d]+", " ").strip().split(" +"))
+                .mapToDouble(Double::parseDouble)
+                .toArray();
+        return switch (words.replaceAll("\\(.*", "")) {
+            case "poisson" -> new Poisson(numbers[0]);
+            case "binomial" -> Catalogue.named("binomial").of(Map.of("trials", numbers[0], "probability", numbers[1]));
+            case "bernoulli" -> Catalogue.named("bernoulli").of(Map.of("probability", numbers[0]));
+            case "table" -> ValueTable.of(everyOther(numbers, 0), everyOther(numbers, 1));
+            default -> new Lognormal(numbers[0], numbers[1]);
+        };
+    }
+
+    private static double[] everyOther(double[] numbers, int from) {
+        return IntStream.range(0, numbers.length / 2)
+                .mapToDouble(i -> numbers[2 * i + from])
+                .toArray();
+    }
+
+    /// With too many values for that, two of Poisson's are nearly normal, and so is their correlation.
+    @Test
+    void valuesOfManySteps() {
+        var many = new Poisson(40_000);
+        assertEquals(.7, value(Measure.PEARSON, Mixing.NONE, many, many, .7), 1e-4);
     }
 }

@@ -7,9 +7,11 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import dev.leadline.density.Copula;
 import dev.leadline.density.Correlations;
 import dev.leadline.density.Density;
+import dev.leadline.density.Lognormal;
 import dev.leadline.density.Measure;
 import dev.leadline.density.Mixing;
 import dev.leadline.density.Normal;
+import dev.leadline.density.Student;
 import dev.leadline.density.Uniform;
 import dev.leadline.model.Dependence;
 import dev.leadline.model.Dependence.Tie;
@@ -24,11 +26,15 @@ class AchievedTest {
     private static final Density Y = new Uniform(0, 1);
 
     private static Question question(Measure measure, Mixing mixing, double target) {
-        double latent = measure.latent(mixing, X, Y, target);
+        return question(measure, mixing, target, X, Y);
+    }
+
+    private static Question question(Measure measure, Mixing mixing, double target, Density x, Density y) {
+        double latent = measure.latent(mixing, x, y, target);
         var copula = new Copula(mixing, Correlations.none(2).with(0, 1, latent));
         return new Questions()
-                .normal("x")
-                .uniform("y", 0, 1)
+                .input("x", x)
+                .input("y", y)
                 .tied(new Dependence(copula, List.of(0, 1), List.of(new Tie(0, 1, measure, target, latent)), List.of()))
                 .mean("x*y")
                 .build();
@@ -43,6 +49,7 @@ class AchievedTest {
     @ParameterizedTest(name = "{0} {2}, dof {1}")
     @CsvSource({
         "SPEARMAN, 0, .75",
+        "SPEARMAN, 0, .9999",
         "KENDALL, 0, -.4",
         "PEARSON, 0, .6",
         "SPEARMAN, 3, .5",
@@ -59,6 +66,35 @@ class AchievedTest {
             missed += interval.low() <= target && target <= interval.high() ? 0 : 1;
         }
         assertTrue(missed <= 7, missed + " missed");
+    }
+
+    /// As above, of two lognormals with an excess kurtosis of 340, whose correlation is `expm1(σ²ρ) / expm1(σ²)`.
+    @Test
+    void drawsOfHeavyTails() {
+        var heavy = new Lognormal(0, 1.15);
+        double target = Math.expm1(1.3225 * .7) / Math.expm1(1.3225);
+        var question = question(Measure.PEARSON, Mixing.NONE, target, heavy, heavy);
+        int missed = 0;
+        for (int seed = 0; seed < 40; seed++) {
+            var interval = Achieved.of(question, seed).getFirst().interval();
+            missed += interval.low() <= target && target <= interval.high() ? 0 : 1;
+        }
+        assertTrue(missed <= 7, missed + " missed");
+    }
+
+    /// The fourth moment of a t with 4 degrees of freedom is infinite.
+    @Test
+    void hasNoIntervalWhereRareValuesDecide() {
+        var question = question(Measure.PEARSON, Mixing.NONE, .6, X, new Student(4, 0, 1));
+        var achieved = Achieved.of(question, 1).getFirst();
+        assertEquals(.6, achieved.value(), .05);
+        assertTrue(Double.isNaN(achieved.interval().low())
+                && Double.isNaN(achieved.interval().high()));
+        assertEquals(
+                "rare, large values of y decide it, more than can be seen in the draws looked at",
+                achieved.interval().note().orElseThrow());
+        var ranks = question(Measure.SPEARMAN, Mixing.NONE, .6, X, new Student(4, 0, 1));
+        assertTrue(Achieved.of(ranks, 1).getFirst().interval().note().isEmpty());
     }
 
     @Test

@@ -40,6 +40,10 @@ public final class Questions {
         return input(name, density("normal", Map.of("mean", 0.0, "sd", 1.0)), new Role.Random());
     }
 
+    public Questions input(String name, Density density) {
+        return input(name, density, new Role.Random());
+    }
+
     public Questions range(String name, double low, double high) {
         return input(name, density("uniform", Map.of("from", low, "to", high)), new Role.Range(low, high));
     }

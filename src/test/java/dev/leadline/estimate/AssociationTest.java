@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Arrays;
+import java.util.Random;
 import java.util.SplittableRandom;
 import org.apache.commons.math3.stat.correlation.KendallsCorrelation;
 import org.apache.commons.math3.stat.correlation.PearsonsCorrelation;
@@ -49,5 +50,34 @@ class AssociationTest {
         Arrays.setAll(rising, i -> i);
         assertTrue(Double.isNaN(Association.pearson(equal, rising)));
         assertTrue(Double.isNaN(Association.kendall(rising, equal)));
+    }
+
+    /// Rows of two normals with ρ = .999: Spearman's correlation is `6/π asin(ρ/2)` (Kruskal 1958). Of five rows that
+    /// of
+    /// the ranks would be .014 too small; the mean of 20,000 batches has a standard error of 1.2e-4.
+    @Test
+    void spearmanHasNoBias() {
+        var random = new Random(7);
+        double rho = .999;
+        double sum = 0;
+        int batches = 20_000;
+        for (int batch = 0; batch < batches; batch++) {
+            var x = new double[5];
+            var y = new double[5];
+            for (int i = 0; i < 5; i++) {
+                x[i] = random.nextGaussian();
+                y[i] = rho * x[i] + Math.sqrt(1 - rho * rho) * random.nextGaussian();
+            }
+            sum += Association.spearman(Association.ranks(x), Association.ranks(y));
+        }
+        assertEquals(6 / Math.PI * Math.asin(rho / 2), sum / batches, 5e-4);
+    }
+
+    /// Equal values leave the correlation of the ranks as it is.
+    @Test
+    void spearmanOfEqualValues() {
+        double[] x = {0, 1, 1, 1, 4};
+        double[] y = {3, 1, 2, 4, 0};
+        assertEquals(Association.pearson(x, y), Association.spearman(x, y));
     }
 }

@@ -133,7 +133,14 @@ final class TiedView {
         for (int k = 0; k < found.size(); k++) {
             var value = new Label(found.get(k).achieved());
             value.getStyleClass().add("figure");
-            seen.addRow(k + 1, label(found.get(k).of()), value);
+            value.setWrapText(true);
+            value.setMinHeight(Region.USE_PREF_SIZE);
+            var of = label(found.get(k).of());
+            of.setTooltip(new Tooltip(found.get(k).target()));
+            seen.addRow(2 * k + 1, of, value);
+            if (found.get(k).isRepaired()) {
+                seen.add(label(found.get(k).target()), 0, 2 * k + 2, 2, 1);
+            }
         }
         see(seen, !found.isEmpty());
     }
