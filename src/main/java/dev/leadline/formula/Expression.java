@@ -21,6 +21,15 @@ final class Expression {
     /// For each node, whether its value can only be 0, 1 or `NaN`.
     private final List<Boolean> events = new ArrayList<>();
 
+    /// The same nodes, at the same indices; grows on its own.
+    Expression copy() {
+        var copy = new Expression();
+        copy.nodes.addAll(nodes);
+        copy.known.putAll(known);
+        copy.events.addAll(events);
+        return copy;
+    }
+
     List<Node> nodes() {
         return nodes;
     }

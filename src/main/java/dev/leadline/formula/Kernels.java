@@ -36,7 +36,15 @@ final class Kernels {
         return Double.isNaN(condition) ? Double.NaN : condition != 0 ? a : b;
     }
 
+    static double numberOrNever(double a) {
+        return Double.isNaN(a) ? Double.NEGATIVE_INFINITY : a;
+    }
+
     // One column.
+
+    static void numberOrNever(double[] a, double[] z, int n) {
+        for (int i = 0; i < n; i++) z[i] = numberOrNever(a[i]);
+    }
 
     static void negate(double[] a, double[] z, int n) {
         for (int i = 0; i < n; i++) z[i] = -a[i];

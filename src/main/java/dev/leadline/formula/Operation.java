@@ -34,6 +34,8 @@ enum Operation {
     /// 1 where the value is not 0.
     TRUTH(Kernels::truthOf, Kernels::truth),
     IF(Kernels::chosen, 3, Kernels::choose),
+    /// `-∞` where the value is `NaN`; no formula can say it ([EventScore]).
+    NAN_IS_NEVER(Kernels::numberOrNever, Kernels::numberOrNever),
 
     EXP(Exp::exp, Exp::exp),
     LOG(Log::log, Log::log),

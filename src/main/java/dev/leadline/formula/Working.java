@@ -16,24 +16,28 @@ public final class Working {
     private final List<Problem> notes;
     private final Program program;
     private final Program everyStep;
-    private final List<Boolean> events;
-    private final List<Double> numbers;
+    private final Expression expression;
+    private final List<Integer> askedNodes;
+    private final int inputs;
 
+    /// @param expression not changed any more
     private Working(
             List<Step> steps,
             List<Formula> asked,
             List<Problem> notes,
             Program program,
             Program everyStep,
-            List<Boolean> events,
-            List<Double> numbers) {
+            Expression expression,
+            List<Integer> askedNodes,
+            int inputs) {
         this.steps = List.copyOf(steps);
         this.asked = List.copyOf(asked);
         this.notes = List.copyOf(notes);
         this.program = program;
         this.everyStep = everyStep;
-        this.events = List.copyOf(events);
-        this.numbers = List.copyOf(numbers);
+        this.expression = expression;
+        this.askedNodes = List.copyOf(askedNodes);
+        this.inputs = inputs;
     }
 
     /// @param inputs names, in the order of the columns of draws
@@ -85,13 +89,29 @@ public final class Working {
 
     /// Whether the formula asked at `index` is an event (its value can only be 0, 1 or `NaN`).
     public boolean isEvent(int index) {
-        return events.get(index);
+        return expression.isEvent(askedNodes.get(index));
+    }
+
+    /// Inputs to the score of the event asked at `index`: above 0 exactly where the event is true, below 0 where it is
+    /// false, `NaN` where it is `NaN`, never 0, and the larger the nearer the event is to happening.
+    ///
+    /// @throws Refusal where the event does not say how far it is from happening, at `asked[index]`
+    public Program score(int index) {
+        if (!isEvent(index)) throw new IllegalArgumentException("formula " + index + " is no event");
+        Expression scored = expression.copy();
+        try {
+            return Program.of(scored, inputs, List.of(EventScore.write(scored, askedNodes.get(index))));
+        } catch (Refusal refusal) {
+            String path = "asked[" + index + "]";
+            throw new Refusal(
+                    refusal.problems().stream().map(problem -> problem.in(path)).toList());
+        }
     }
 
     /// The numbers that stand in the formulas and the values that follow from them and from constants alone,
     /// in the order in which they first stand, each once; up to their sign.
     public List<Double> numbers() {
-        return numbers;
+        return expression.numbers();
     }
 
     /// Lines that are no steps are reported and left out, so that those which use them are checked all the same.
@@ -154,7 +174,8 @@ public final class Working {
                                 inputs.size(),
                                 Stream.concat(stepNodes.stream(), askedNodes.stream())
                                         .toList()),
-                askedNodes.stream().map(expression::isEvent).toList(),
-                expression.numbers());
+                expression,
+                askedNodes,
+                inputs.size());
     }
 }
