@@ -35,6 +35,9 @@
 /// `NaN` where `x` is a number. `round` takes halves to the even neighbour. Division by 0, `log(0)` and the like
 /// follow IEEE 754.
 ///
+/// **Score.** An event made of `<`, `<=`, `>` and `>=` also has a number that says how far it is from happening
+/// (`EventScore`): splitting climbs by it.
+///
 /// **Bits.** Kernels use `+ - * /`, square roots, bit moves, `dev.leadline.numeric` and `StrictMath` only, so a
 /// formula has the same bits on every machine, in a block of any size, compiled or not. Exchanged are only forms
 /// that keep them: `a - 3` for `a + -3`, `x / 4` for `x * 0.25`; `x^2` and `x*x` are the same product.
