@@ -17,6 +17,7 @@ final class Lanes {
 
     private final Draft draft;
     private final boolean sound;
+    private final List<String> names;
     private final Proposals proposals;
     private final Controls controls;
     private final Findings findings;
@@ -24,6 +25,9 @@ final class Lanes {
     private Lanes(Draft draft, boolean sound, Proposals proposals, Controls controls, Findings findings) {
         this.draft = draft;
         this.sound = sound;
+        this.names = draft.inputs().stream()
+                .map(input -> Workings.composed(input.name()))
+                .toList();
         this.proposals = proposals;
         this.controls = controls;
         this.findings = findings;
@@ -86,7 +90,7 @@ final class Lanes {
     }
 
     private Optional<Lane> lane(LaneDraft lane, String path) {
-        var points = Layouts.of(lane, path, findings);
+        var points = Layouts.of(lane, names, path, findings);
         if (!sound) {
             return Optional.empty();
         }

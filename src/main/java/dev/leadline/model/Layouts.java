@@ -7,9 +7,11 @@ import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.LatinHypercube;
 import dev.leadline.scheme.Points;
+import dev.leadline.scheme.Stratified;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalInt;
@@ -30,11 +32,13 @@ final class Layouts {
     private static final Map<String, Kind> KINDS = kinds();
 
     private final Settings settings;
+    private final List<String> inputs;
     private final String path;
     private final Findings findings;
 
-    private Layouts(Settings settings, String path, Findings findings) {
+    private Layouts(Settings settings, List<String> inputs, String path, Findings findings) {
         this.settings = settings;
+        this.inputs = inputs;
         this.path = path;
         this.findings = findings;
     }
@@ -48,12 +52,14 @@ final class Layouts {
         var kinds = new LinkedHashMap<String, Kind>();
         kinds.put("independent", new Kind(List.of(), _ -> Optional.of(new Independent())));
         kinds.put("antithetic", new Kind(List.of(), _ -> Optional.of(new Antithetic())));
+        kinds.put(Stratified.WORD, new Kind(List.of("cells"), Layouts::stratified));
         kinds.put(LatinHypercube.WORD, new Kind(List.of("replicates", "cube"), Layouts::latinHypercube));
         return kinds;
     }
 
+    /// @param inputs names, in order
     /// @param path of the lane
-    static Optional<Points> of(LaneDraft lane, String path, Findings findings) {
+    static Optional<Points> of(LaneDraft lane, List<String> inputs, String path, Findings findings) {
         var kind = KINDS.get(lane.points());
         if (kind == null) {
             findings.add(path + ".points", noPoints(lane.points()));
@@ -68,7 +74,9 @@ final class Layouts {
                         ? "They take no settings."
                         : "They take %s.".formatted(String.join(", ", kind.takes())),
                 "Leave it out."));
-        return given.isEmpty() ? kind.made().apply(new Layouts(lane.settings(), path, findings)) : Optional.empty();
+        return given.isEmpty()
+                ? kind.made().apply(new Layouts(lane.settings(), inputs, path, findings))
+                : Optional.empty();
     }
 
     private static List<String> given(Settings settings) {
@@ -82,6 +90,47 @@ final class Layouts {
         settings.particles().ifPresent(_ -> given.add("particles"));
         settings.repetitions().ifPresent(_ -> given.add("repetitions"));
         return given;
+    }
+
+    private Optional<Points> stratified() {
+        if (settings.cells().isEmpty()) {
+            var points = Stratified.evenly(inputs);
+            if (points.cells().isEmpty()) {
+                findings.add(
+                        path + ".cells",
+                        "which of the %d inputs are to be stratified is not said".formatted(inputs.size()),
+                        "Two cells of each would be too many in all.",
+                        "Name the few that matter most, as \"cells\": {\"%s\": 64}.".formatted(inputs.getFirst()));
+                return Optional.empty();
+            }
+            return Optional.of(points);
+        }
+        var cells = new LinkedHashMap<String, Integer>();
+        double all = 1;
+        for (var entry : settings.cells().entrySet()) {
+            String name = Workings.composed(entry.getKey());
+            if (!inputs.contains(name)) {
+                findings.add(
+                        path + ".cells." + entry.getKey(),
+                        "there is no input %s to stratify".formatted(name),
+                        "cells names inputs of the question.");
+                return Optional.empty();
+            }
+            all *= entry.getValue();
+            cells.put(name, (int) Math.min(entry.getValue(), Integer.MAX_VALUE));
+        }
+        if (all > Stratified.MOST_CELLS) {
+            findings.add(
+                    path + ".cells",
+                    String.format(Locale.ROOT, "the grid has %,.0f cells", all),
+                    String.format(
+                            Locale.ROOT,
+                            "Every pass makes a draw in each; at most %,d fit into an item of work.",
+                            Stratified.MOST_CELLS),
+                    "Stratify fewer inputs, or coarser.");
+            return Optional.empty();
+        }
+        return Optional.of(new Stratified(cells));
     }
 
     private Optional<Points> latinHypercube() {
