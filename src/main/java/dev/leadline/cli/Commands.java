@@ -30,7 +30,7 @@ public final class Commands {
     public static final int OUR_FAULT = 3;
 
     /// Commands of the programme that this version lacks.
-    private static final Set<String> LATER = Set.of("compare", "rehearse", "plan", "suggest", "report", "replay");
+    private static final Set<String> LATER = Set.of("rehearse", "plan", "suggest", "report", "replay");
 
     /// Options of its commands that this version lacks.
     private static final Set<String> OPTIONS_LATER = Set.of("--record", "--report", "--repetitions");
@@ -46,6 +46,7 @@ public final class Commands {
                 new RunCommand(),
                 new CheckCommand(),
                 new LookCommand(),
+                new CompareCommand(),
                 new FigureCommand(),
                 new FamiliesCommand(),
                 new OpenCommand(window));

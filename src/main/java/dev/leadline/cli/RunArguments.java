@@ -21,6 +21,11 @@ final class RunArguments {
     private RunArguments() {}
 
     static void addTo(CommandSpec spec) {
+        addAllButLaneTo(spec);
+        spec.addOption(lane());
+    }
+
+    static void addAllButLaneTo(CommandSpec spec) {
         spec.addOption(Arguments.option(
                 "--draws",
                 "N",
@@ -40,7 +45,6 @@ final class RunArguments {
                 Long.class,
                 Arguments.whole(1, MOST_THREADS),
                 "Compute on N threads (all processors if left out). The digits do not depend on it."));
-        spec.addOption(lane());
     }
 
     static OptionSpec seed() {
@@ -74,19 +78,23 @@ final class RunArguments {
     }
 
     private static List<Lane> lanes(List<Lane> lanes, String name) {
-        if (name.isEmpty()) {
-            return lanes;
-        }
-        List<Lane> named =
-                lanes.stream().filter(lane -> lane.name().equals(name)).toList();
-        if (named.isEmpty()) {
-            List<String> names = lanes.stream().map(Lane::name).toList();
-            Problem problem = Problem.of("there is no lane \"%s\"".formatted(name))
-                    .because("Lanes of this project: %s.".formatted(String.join(", ", names)));
-            throw new Refusal(Nearest.to(name, names)
-                    .map(near -> problem.tryThis("Write --lane %s.".formatted(near)))
-                    .orElse(problem));
-        }
-        return named;
+        return name.isEmpty() ? lanes : List.of(lane(lanes, name));
+    }
+
+    /// @throws Refusal where no lane is called so
+    static Lane lane(List<Lane> lanes, String name) {
+        return lanes.stream()
+                .filter(lane -> lane.name().equals(name))
+                .findFirst()
+                .orElseThrow(() -> noLane(lanes, name));
+    }
+
+    private static Refusal noLane(List<Lane> lanes, String name) {
+        List<String> names = lanes.stream().map(Lane::name).toList();
+        Problem problem = Problem.of("there is no lane \"%s\"".formatted(name))
+                .because("Lanes of this project: %s.".formatted(String.join(", ", names)));
+        return new Refusal(Nearest.to(name, names)
+                .map(near -> problem.tryThis("Was %s meant?".formatted(near)))
+                .orElse(problem));
     }
 }

@@ -8,7 +8,10 @@ import dev.leadline.model.Plan;
 import dev.leadline.model.Project;
 import dev.leadline.model.Sentence;
 import dev.leadline.study.AnswerText;
+import dev.leadline.study.Comparison;
 import dev.leadline.study.LaneState;
+import dev.leadline.study.Need;
+import dev.leadline.study.RatioText;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Answer;
 import dev.leadline.trace.Mark;
@@ -48,6 +51,7 @@ final class RunText {
         wrapped("", Sentence.of(project.draft()).text());
         Ties.lines(project.question(), achieved).forEach(this::line);
         state.lanes().forEach(this::lane);
+        state.comparisons().forEach(this::comparison);
         line("");
         wrapped("", SAMPLING_ERROR_ONLY);
         if (project.question().safety()) {
@@ -73,6 +77,25 @@ final class RunText {
         line("  " + facts(lane, answers));
         line("");
         lane.grounds().forEach(this::ground);
+    }
+
+    /// What lanes are worth beside each other.
+    private void comparison(Comparison comparison) {
+        line("");
+        wrapped("  ", comparison.sentence());
+        comparison.notes().forEach(note -> wrapped("  ", note));
+        comparison.needs().forEach(need -> wrapped("  ", need(need)));
+    }
+
+    private static String need(Need need) {
+        return "%s meets the tolerance after %s draws%s: %s."
+                .formatted(
+                        need.lane(),
+                        RatioText.of(need.draws()),
+                        need.seconds()
+                                .map(seconds -> ", %s s on one thread".formatted(RatioText.of(seconds)))
+                                .orElse(""),
+                        need.basis());
     }
 
     private void answer(Answer answer) {

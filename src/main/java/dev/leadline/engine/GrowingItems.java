@@ -32,6 +32,11 @@ record GrowingItems(int drawsPerObservation) implements Items {
         return draws / drawsPerObservation * drawsPerObservation;
     }
 
+    /// Draws of the item before they are rounded up.
+    static long nominal(long index) {
+        return (long) SMALLEST << Math.min(index / PER_SIZE, SIZES - 1);
+    }
+
     private int draws(int size) {
         return Math.ceilDiv(SMALLEST << size, drawsPerObservation) * drawsPerObservation;
     }

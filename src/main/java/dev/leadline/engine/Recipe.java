@@ -67,7 +67,8 @@ public final class Recipe {
         return of(question, lane, seed, Purpose.RUN);
     }
 
-    static Recipe of(Question question, Lane lane, long seed, Purpose purpose) {
+    /// The same for draws that must not be those of a run.
+    public static Recipe of(Question question, Lane lane, long seed, Purpose purpose) {
         return new Recipe(question, lane, seed, purpose);
     }
 

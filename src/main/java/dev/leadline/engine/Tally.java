@@ -38,7 +38,7 @@ sealed interface Tally {
         @Override
         public void add(ItemSums item) {
             total.merge(item.sums());
-            blocks.add(item.sums());
+            blocks.add(item.sums(), GrowingItems.nominal(item.item().stretch().item()));
         }
 
         @Override

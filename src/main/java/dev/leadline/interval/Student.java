@@ -64,8 +64,8 @@ public final class Student {
     }
 
     /// The t with `P(|T| < t) = level`: T² is the odds of a Beta(1/2, ν/2) variable times ν.
-    static double quantile(long degrees, double level) {
-        double half = degrees / 2.0;
+    public static double quantile(double degrees, double level) {
+        double half = degrees / 2;
         double s = level > 0.5 ? LogOdds.upper(0.5, half, 1 - level) : -LogOdds.upper(half, 0.5, level);
         return StrictMath.exp(s / 2);
     }

@@ -10,6 +10,7 @@ import dev.leadline.model.Plan;
 import dev.leadline.model.Project;
 import dev.leadline.model.Reference;
 import dev.leadline.model.Sentence;
+import dev.leadline.study.Comparison;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Answer;
@@ -35,7 +36,8 @@ public final class RunJson {
     public static String of(String name, Project project, Plan plan, StudyState state, List<Achieved> achieved) {
         var question = project.question();
         var run = new RunJson(project);
-        return JsonWriter.pretty(Json.object()
+        List<Comparison> comparisons = state.comparisons();
+        var json = Json.object()
                 .put("project", question.title().isEmpty() ? name : question.title())
                 .put("question", Sentence.of(project.draft()).text())
                 .put("seed", Json.of(plan.seed()))
@@ -44,8 +46,13 @@ public final class RunJson {
                 .put("dependence", DependenceJson.of(question, achieved))
                 .put("lanes", Json.list(state.lanes().stream().map(run::lane).toList()))
                 .put("reference", question.reference().map(RunJson::reference).orElse(new Json.Null()))
-                .put("comparison", new Json.Null())
-                .build());
+                .put("comparison", comparisons.isEmpty() ? new Json.Null() : ComparisonJson.of(comparisons.getFirst()));
+        if (comparisons.size() > 1) {
+            json.put(
+                    "comparisons",
+                    Json.list(comparisons.stream().map(ComparisonJson::of).toList()));
+        }
+        return JsonWriter.pretty(json.build());
     }
 
     private Json lane(LaneState lane) {

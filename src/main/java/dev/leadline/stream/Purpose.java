@@ -5,7 +5,11 @@ public enum Purpose {
     /// Draws that enter a result.
     RUN(1),
     /// Draws that show what correlation tied inputs have.
-    DEPENDENCE(2);
+    DEPENDENCE(2),
+    /// Draws that take as long as others, for the clock.
+    TIMING(5),
+    /// Draws that say which scheme to recommend.
+    PILOT(6);
 
     private final int number;
 

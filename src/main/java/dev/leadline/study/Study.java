@@ -7,6 +7,7 @@ import dev.leadline.ground.Grounds;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.study.StudyState.Activity;
+import dev.leadline.trace.Trace;
 import java.util.Comparator;
 import java.util.List;
 import java.util.concurrent.CountDownLatch;
@@ -28,7 +29,7 @@ public final class Study implements AutoCloseable {
     private boolean paused;
     private boolean stopping;
 
-    private volatile StudyState state = new StudyState(Activity.PREPARING, List.of());
+    private volatile StudyState state = new StudyState(Activity.PREPARING, List.of(), List.of());
     private volatile Throwable fault;
 
     private Study(Question question, Plan plan, int threads, Consumer<StudyState> listener) {
@@ -156,17 +157,18 @@ public final class Study implements AutoCloseable {
     }
 
     private StudyState look(Activity activity, List<LaneRun> runs) {
+        List<Trace> traces = runs.stream().map(LaneRun::trace).toList();
         return new StudyState(
                 activity,
-                runs.stream()
-                        .map(LaneRun::trace)
+                traces.stream()
                         .map(trace -> new LaneState(trace, Grounds.of(question, trace)))
-                        .toList());
+                        .toList(),
+                Comparison.ofFirst(question, plan.settled(), traces));
     }
 
     private void fail(Throwable cause) {
         fault = cause;
-        publish(new StudyState(Activity.FAILED, state.lanes()));
+        publish(new StudyState(Activity.FAILED, state.lanes(), state.comparisons()));
     }
 
     private void publish(StudyState newer) {

@@ -5,7 +5,8 @@ import java.util.List;
 /// What a study has shown so far, a row for each lane. Immutable: each newer state replaces the last.
 ///
 /// @param lanes in the order of the plan
-public record StudyState(Activity activity, List<LaneState> lanes) {
+/// @param comparisons of the first lane with each other one, where both have shown something
+public record StudyState(Activity activity, List<LaneState> lanes, List<Comparison> comparisons) {
     public enum Activity {
         /// Inversion tables are being built.
         PREPARING,
@@ -18,6 +19,7 @@ public record StudyState(Activity activity, List<LaneState> lanes) {
 
     public StudyState {
         lanes = List.copyOf(lanes);
+        comparisons = List.copyOf(comparisons);
     }
 
     public boolean ended() {

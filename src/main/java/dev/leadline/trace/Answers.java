@@ -47,8 +47,10 @@ public final class Answers {
         return answer(ask, sums, estimate, bounded(ask, interval), OptionalLong.empty());
     }
 
+    /// The estimate alone, before its interval.
+    ///
     /// @param asks components before those of the control variates
-    private static Estimate estimate(Scheme scheme, Accumulator sums, int k, int asks) {
+    public static Estimate estimate(Scheme scheme, Accumulator sums, int k, int asks) {
         if (scheme.drawFrom().filter(Proposal::selfNormalised).isPresent()) {
             return SelfNormalised.of(sums, k, sums.components() - 1);
         }

@@ -181,8 +181,11 @@ class CommandsTest {
                 List.of("figure", "PROJECT", "-o", "figure.pdf"),
                 List.of("figure", "PROJECT", "-o", "nowhere/figure.png"),
                 List.of("figure", "PROJECT", "-o", "figure.png", "--width", "1"),
-                List.of("compare", "PROJECT"),
                 List.of("rehearse", "PROJECT"),
+                List.of("compare", "PROJECT"),
+                List.of("compare", "PROJECT", "A", "B"),
+                List.of("compare", "PROJECT", "A", "A"),
+                List.of("compare", "PROJECT", "--equal", "money"),
                 List.of("plan", "PROJECT"),
                 List.of("suggest", "PROJECT"),
                 List.of("report", "PROJECT"),
@@ -209,7 +212,7 @@ class CommandsTest {
 
     @Test
     void namesWhatIsNotAvailable() {
-        assertTrue(leadline("compare", project).err().contains("The command compare is not available"));
+        assertTrue(leadline("rehearse", project).err().contains("The command rehearse is not available"));
         assertTrue(leadline("run", project, "--record", "r").err().contains("--record is not available"));
         assertTrue(leadline("run", project, "--drawz", "9").err().contains("Was --draws meant?"));
     }

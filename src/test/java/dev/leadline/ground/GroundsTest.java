@@ -207,7 +207,7 @@ class GroundsTest {
             double[] values = random.doubles(50).map(u -> u + by).toArray();
             var block = new Accumulator(1);
             block.add(new double[][] {values}, 0, values.length);
-            blocks.add(block);
+            blocks.add(block, 50);
             total.merge(block);
         }
         var mark = new Mark(2_000, 0, Answers.of(question, Scheme.of(new Independent()), total));

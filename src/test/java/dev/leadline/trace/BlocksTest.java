@@ -24,7 +24,7 @@ class BlocksTest {
         var blocks = new Blocks();
         double sum = 0;
         for (int i = 1; i <= 5_000; i++) {
-            blocks.add(of(i, 2 * i));
+            blocks.add(of(i, 2 * i), 2);
             sum += 3 * i;
             assertTrue(blocks.snapshot().size() <= 64, "after " + i);
             assertEquals(2L * i, trace(blocks).total().count(), "after " + i);
@@ -36,7 +36,7 @@ class BlocksTest {
     void halvesSplitInTheMiddle() {
         var blocks = new Blocks();
         for (int i = 0; i < 4_096; i++) {
-            blocks.add(of(i < 2_048 ? 0 : 1));
+            blocks.add(of(i < 2_048 ? 0 : 1), 1);
         }
         var halves = trace(blocks).halves();
         assertEquals(2_048, halves.getFirst().count(), 64);
@@ -45,13 +45,34 @@ class BlocksTest {
         assertEquals(4_096, halves.getFirst().count() + halves.getLast().count());
     }
 
+    /// Pairs are half as many observations as draws, and the blocks stand at the same draws all the same.
+    @Test
+    void blocksDependOnNominalSizesAlone() {
+        var draws = new Blocks();
+        var pairs = new Blocks();
+        for (int i = 0; i < 300; i++) {
+            long size = 64L << Math.min(i / 8, 10);
+            draws.add(of(new double[(int) size]), size);
+            pairs.add(of(new double[(int) (size / 2 + i % 2)]), size);
+        }
+        var ofDraws = draws.snapshot();
+        var ofPairs = pairs.snapshot();
+        assertEquals(ofDraws.size(), ofPairs.size());
+        for (int j = 0; j < ofDraws.size(); j++) {
+            assertEquals(
+                    ofDraws.get(j).count() / 2.0,
+                    ofPairs.get(j).count(),
+                    1 + ofDraws.get(j).count() / 64.0);
+        }
+    }
+
     @Test
     void aSnapshotStaysAsItWas() {
         var blocks = new Blocks();
-        blocks.add(of(1));
+        blocks.add(of(1), 1);
         var before = trace(blocks);
         for (int i = 0; i < 500; i++) {
-            blocks.add(of(2));
+            blocks.add(of(2), 1);
         }
         assertEquals(1, before.total().count());
     }

@@ -21,7 +21,7 @@ class RunViewModelTest {
     private final RunViewModel run = new RunViewModel(studies, background);
 
     private void show(Activity activity) {
-        studies.listener.accept(new StudyState(activity, List.of()));
+        studies.listener.accept(new StudyState(activity, List.of(), List.of()));
         background.finishAll();
     }
 
@@ -62,9 +62,9 @@ class RunViewModelTest {
     @Test
     void showsTheNewestOfMany() {
         start();
-        studies.listener.accept(new StudyState(Activity.PREPARING, List.of()));
-        studies.listener.accept(new StudyState(Activity.RUNNING, List.of()));
-        studies.listener.accept(new StudyState(Activity.PAUSED, List.of()));
+        studies.listener.accept(new StudyState(Activity.PREPARING, List.of(), List.of()));
+        studies.listener.accept(new StudyState(Activity.RUNNING, List.of(), List.of()));
+        studies.listener.accept(new StudyState(Activity.PAUSED, List.of(), List.of()));
         assertEquals(1, background.waiting());
         background.finishAll();
         assertTrue(RunViewModel.isPaused(run.state().get()));
@@ -77,7 +77,7 @@ class RunViewModelTest {
         var old = studies.listener;
         run.leave();
         background.finishAll();
-        old.accept(new StudyState(Activity.FINISHED, List.of()));
+        old.accept(new StudyState(Activity.FINISHED, List.of(), List.of()));
         background.finishAll();
         assertInstanceOf(State.Ready.class, run.state().get());
         assertTrue(studies.heard.contains("close"));

@@ -196,7 +196,8 @@ class WorkbenchViewModelTest {
         studies.listener.accept(new StudyState(
                 Activity.RUNNING,
                 List.of(new LaneState(
-                        new Trace("A", "independent", List.of(), List.of(), List.of(), Optional.empty()), List.of()))));
+                        new Trace("A", "independent", List.of(), List.of(), List.of(), Optional.empty()), List.of())),
+                List.of()));
         background.finishAll();
         assertEquals("", WorkbenchViewModel.objectionsOf(model.run().state().get()));
         assertEquals("0 draws", model.progress().get());

@@ -1,0 +1,80 @@
+package dev.leadline.engine;
+
+import dev.leadline.estimate.Logarithm;
+import java.util.Arrays;
+
+/// How long a draw takes in one lane and in another, on one thread, weights and sums included.
+///
+/// Both do pieces of work of about equal length in pairs, one after the other, so that whatever slows the machine slows
+/// both; which goes first alternates. The ratio is that of the geometric means, its error from the spread of the pairs.
+///
+/// @param first seconds of a draw
+/// @param second likewise, of the other lane
+/// @param ratio the first over the second; more certain than either
+public record Timing(Logarithm first, Logarithm second, Logarithm ratio) {
+    private static final int PAIRS = 16;
+    private static final double WARM_UP = .25;
+    private static final double NANOSECOND = 1e-9;
+
+    /// A lane at work on the items at the end of so many draws, over and over. Confined to one thread.
+    private static final class Work {
+        private static final long TURNS = 8;
+
+        private final Sampler sampler;
+        private final Items items;
+        private final long last;
+        private long turn;
+
+        Work(Recipe recipe, long draws) {
+            sampler = recipe.sampler();
+            items = recipe.items();
+            last = items.holding(Math.max(0, items.whole(draws) - 1)).stretch().item();
+        }
+
+        /// Works for so long at least.
+        ///
+        /// @return seconds of a draw
+        double seconds(double least) {
+            long draws = 0;
+            double passed;
+            long start = System.nanoTime();
+            do {
+                Item item = items.at(Math.max(0, last - turn++ % TURNS));
+                sampler.compute(item, () -> false);
+                draws += item.draws();
+                passed = NANOSECOND * (System.nanoTime() - start);
+            } while (passed < least);
+            return passed / draws;
+        }
+    }
+
+    /// @param draws of each lane: later items may take longer than earlier ones
+    /// @param piece seconds of a piece of work at least
+    public static Timing of(Recipe first, long firstDraws, Recipe second, long secondDraws, double piece) {
+        var one = new Work(first, firstDraws);
+        var other = new Work(second, secondDraws);
+        for (double warm = 0; warm < WARM_UP; warm += 2 * piece) {
+            one.seconds(piece);
+            other.seconds(piece);
+        }
+        double[] here = new double[PAIRS];
+        double[] there = new double[PAIRS];
+        double[] ratios = new double[PAIRS];
+        for (int i = 0; i < PAIRS; i++) {
+            boolean even = i % 2 == 0;
+            double early = StrictMath.log((even ? one : other).seconds(piece));
+            double late = StrictMath.log((even ? other : one).seconds(piece));
+            here[i] = even ? early : late;
+            there[i] = even ? late : early;
+            ratios[i] = here[i] - there[i];
+        }
+        return new Timing(mean(here), mean(there), mean(ratios));
+    }
+
+    private static Logarithm mean(double[] logs) {
+        double mean = Arrays.stream(logs).average().orElseThrow();
+        double squares =
+                Arrays.stream(logs).map(log -> (log - mean) * (log - mean)).sum();
+        return new Logarithm(mean, squares / (logs.length - 1) / logs.length, logs.length - 1);
+    }
+}

@@ -1,0 +1,28 @@
+package dev.leadline.interval;
+
+import dev.leadline.estimate.Logarithm;
+
+/// A positive number with the limits between which it lies, Student's interval for its logarithm.
+public record Ratio(double low, double value, double high) {
+    public static Ratio of(Logarithm logarithm, double level) {
+        double half = Student.quantile(logarithm.degrees(), level) * logarithm.standardError();
+        return new Ratio(
+                StrictMath.exp(logarithm.value() - half),
+                StrictMath.exp(logarithm.value()),
+                StrictMath.exp(logarithm.value() + half));
+    }
+
+    public Ratio inverse() {
+        return new Ratio(1 / high, 1 / value, 1 / low);
+    }
+
+    /// Whether the number is 1, as far as the limits say.
+    public boolean holdsOne() {
+        return low <= 1 && high >= 1;
+    }
+
+    /// How far the limits are apart, as a factor; 1 where they are equal.
+    public double width() {
+        return high / low;
+    }
+}
