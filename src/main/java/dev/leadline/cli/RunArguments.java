@@ -39,12 +39,16 @@ final class RunArguments {
                 Arguments.positive(),
                 "Stop after S seconds of computing; without --draws as many draws as that gives."));
         spec.addOption(seed());
-        spec.addOption(Arguments.option(
+        spec.addOption(threads());
+    }
+
+    static OptionSpec threads() {
+        return Arguments.option(
                 "--threads",
                 "N",
                 Long.class,
                 Arguments.whole(1, MOST_THREADS),
-                "Compute on N threads (all processors if left out). The digits do not depend on it."));
+                "Compute on N threads (all processors if left out). The digits do not depend on it.");
     }
 
     static OptionSpec seed() {

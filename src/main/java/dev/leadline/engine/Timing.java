@@ -13,7 +13,7 @@ import java.util.Arrays;
 /// @param ratio the first over the second; more certain than either
 public record Timing(Logarithm first, Logarithm second, Logarithm ratio) {
     private static final int PAIRS = 16;
-    private static final double WARM_UP = .25;
+    private static final int WARM_UP = 12;
     private static final double NANOSECOND = 1e-9;
 
     /// A lane at work on the items at the end of so many draws, over and over. Confined to one thread.
@@ -53,7 +53,7 @@ public record Timing(Logarithm first, Logarithm second, Logarithm ratio) {
     public static Timing of(Recipe first, long firstDraws, Recipe second, long secondDraws, double piece) {
         var one = new Work(first, firstDraws);
         var other = new Work(second, secondDraws);
-        for (double warm = 0; warm < WARM_UP; warm += 2 * piece) {
+        for (int i = 0; i < WARM_UP; i++) {
             one.seconds(piece);
             other.seconds(piece);
         }

@@ -4,6 +4,8 @@ import dev.leadline.estimate.Logarithm;
 
 /// A positive number with the limits between which it lies, Student's interval for its logarithm.
 public record Ratio(double low, double value, double high) {
+    public static final Ratio ONE = new Ratio(1, 1, 1);
+
     public static Ratio of(Logarithm logarithm, double level) {
         double half = Student.quantile(logarithm.degrees(), level) * logarithm.standardError();
         return new Ratio(

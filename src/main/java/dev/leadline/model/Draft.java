@@ -83,6 +83,26 @@ public record Draft(
 
     public record StopDraft(String rule, OptionalLong draws, OptionalDouble seconds) {}
 
+    /// The same with other lanes.
+    Draft with(List<LaneDraft> others) {
+        return new Draft(
+                title,
+                notes,
+                safety,
+                constants,
+                inputs,
+                dependence,
+                steps,
+                asks,
+                reference,
+                confidence,
+                tolerance,
+                stop,
+                seed,
+                commonRandomNumbers,
+                others);
+    }
+
     /// Names of the data files that inputs are drawn from, each once.
     public List<String> dataFiles() {
         var ofInputs = inputs.stream().flatMap(input -> switch (input.from()) {

@@ -28,6 +28,11 @@ public record LaneDraft(
         return new LaneDraft(name, points, Settings.NONE, DrawFrom.NOTHING, OptionalDouble.empty(), false, List.of());
     }
 
+    /// The same under another name.
+    public LaneDraft named(String other) {
+        return new LaneDraft(other, points, settings, drawFrom, nominalShare, selfNormalised, controls);
+    }
+
     /// What a layout may be told; each layout takes some of it.
     ///
     /// @param replicates independent repetitions of the points

@@ -74,6 +74,27 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         return new Project(draft, question, new Plan(stop, seed, lanes), notes, read);
     }
 
+    /// A lane of this question, as if the project had it; it cannot draw from data.
+    ///
+    /// @throws Refusal with every problem found
+    public Lane lane(LaneDraft lane) {
+        var findings = new Findings();
+        List<Lane> made = Lanes.of(
+                draft.with(List.of(lane)),
+                question.inputs(),
+                true,
+                question.dependence(),
+                DataFiles.NONE,
+                findings);
+        findings.refuseIfAny();
+        return made.getFirst();
+    }
+
+    /// Words of the layouts of points, in the order in which they are offered.
+    public static List<String> layouts() {
+        return Layouts.words();
+    }
+
     /// One input by itself, whatever else is wrong in the draft.
     ///
     /// @throws Refusal with every problem found in it, each at its JSON path in the draft

@@ -75,6 +75,11 @@ final class Contender {
         return sums.count() + sums.excluded();
     }
 
+    /// Of an event, as far as every observation was one.
+    long hits() {
+        return total.hits(0).orElse(Long.MAX_VALUE);
+    }
+
     /// Draws of each group.
     double[] sizes() {
         return groups.stream().mapToDouble(this::draws).toArray();

@@ -144,7 +144,8 @@ class ComparisonCoverageTest {
         }
     }
 
-    /// At 4,000 draws there are two dozen items of work to leave out, and half of the numbers of the one lane are in the
+    /// At 4,000 draws there are two dozen items of work to leave out, and half of the numbers of the one lane are in
+    /// the
     /// other.
     @Test
     void commonRandomNumbersThroughTheEngine() throws InterruptedException {
