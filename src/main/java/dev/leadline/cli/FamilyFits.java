@@ -74,10 +74,22 @@ final class FamilyFits {
             console.err().flush();
         }
         if (Arguments.has(arguments, "--json")) {
-            console.out().print(FitsJson.of(fits));
+            console.out().print(FitsJson.of(fits, nameOf(file), column(name)));
         } else {
             table(fits, console);
+            densities(fits, nameOf(file), column(name), console);
         }
+    }
+
+    /// For a project in the folder of the file.
+    private static String nameOf(Path file) {
+        return String.valueOf(file.getFileName());
+    }
+
+    private static void densities(Fits fits, String file, Column column, Console console) {
+        console.out().println();
+        console.out().println("As the density of an input, in a project beside the file:");
+        fits.fits().forEach(fit -> console.out().println(FitsJson.density(fit, file, column)));
     }
 
     private static DataColumn read(Path file, Column column) {

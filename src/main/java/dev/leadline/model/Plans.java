@@ -10,8 +10,6 @@ import java.util.Set;
 /// Makes what a plan says beside its lanes of its draft.
 final class Plans {
 
-    private static final String FIXED = "fixed";
-
     private Plans() {}
 
     static Stop stop(Draft draft, Findings findings) {
@@ -21,13 +19,13 @@ final class Plans {
     }
 
     private static Stop stop(StopDraft draft, Findings findings) {
-        if (!draft.rule().equals(FIXED)) {
+        if (!draft.rule().equals(Stop.FIXED)) {
             Problem problem = Problem.of("the stop rule \"%s\" is not available".formatted(draft.rule()))
                     .because(
                             "The rule here is \"fixed\": a number of draws, or of seconds. A tolerance is judged at the end.");
             findings.add(
                     "$.stop.rule",
-                    Nearest.to(draft.rule(), Set.of(FIXED))
+                    Nearest.to(draft.rule(), Set.of(Stop.FIXED))
                             .map(near -> problem.tryThis("Was \"%s\" meant?".formatted(near)))
                             .orElse(problem.tryThis("Write \"stop\": {\"rule\": \"fixed\", \"draws\": 1000000}.")));
         }

@@ -7,6 +7,8 @@ import java.util.OptionalDouble;
 /// @param draws evaluations at most
 /// @param seconds of computing at most, empty for no limit
 public record Stop(long draws, OptionalDouble seconds) {
+    /// The rule of a project that names none.
+    public static final String FIXED = "fixed";
 
     /// Where a project says nothing.
     public static final long USUAL_DRAWS = 1_000_000;

@@ -12,6 +12,7 @@ import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.model.LaneDraft;
+import dev.leadline.density.Mixing;
 import dev.leadline.model.Stop;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
@@ -198,7 +199,7 @@ final class DraftReader {
 
     private DependenceDraft dependence(Fields fields) {
         var dependence = new DependenceDraft(
-                fields.requiredText("copula", NAME),
+                fields.has("copula") ? fields.requiredText("copula", NAME) : Mixing.GAUSSIAN,
                 fields.number("dof"),
                 fields.flag("repair"),
                 each(fields, "pairs", MOST_PAIRS, "a pair {\"of\": [\"a\", \"b\"], \"spearman\": …}", this::pair));
@@ -308,7 +309,9 @@ final class DraftReader {
 
     private StopDraft stop(Fields fields) {
         var stop = new StopDraft(
-                fields.requiredText("rule", NAME), fields.count("draws", 1, Stop.MOST_DRAWS), fields.number("seconds"));
+                fields.has("rule") ? fields.requiredText("rule", NAME) : Stop.FIXED,
+                fields.count("draws", 1, Stop.MOST_DRAWS),
+                fields.number("seconds"));
         fields.close(STOP_LATER);
         return stop;
     }

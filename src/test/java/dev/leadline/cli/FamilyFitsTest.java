@@ -67,6 +67,31 @@ class FamilyFitsTest {
         assertEquals(4, beta.required("values").asInt());
     }
 
+    /// A project that was given the line draws from the fitted member, and knows which data it was fitted to.
+    @Test
+    void printsDensitiesThatAProjectTakes() throws IOException {
+        String out = leadline("families", "--fit", data, "--column", "hours", "normal", "uniform")
+                .out();
+        var lines = out.lines().filter(line -> line.startsWith("{")).toList();
+        assertEquals(
+                "{\"data\": \"waits.csv\", \"column\": \"hours\", \"fitted\": {\"family\": \"uniform\", \"from\": 1, \"to\":"
+                        + " 9}}",
+                lines.getFirst());
+        assertEquals(2, lines.size());
+        for (String line : lines) {
+            var project = Files.writeString(
+                    folder.resolve("pasted.leadline"),
+                    "{\"leadline\": 1, \"inputs\": [{\"name\": \"t\", \"density\": %s}], \"ask\": {\"mean\": \"t\"}}"
+                            .formatted(line));
+            assertEquals(0, leadline("check", project).exitCode(), line);
+        }
+        var json = leadline("families", "--fit", data, "--column", "hours", "--json", "normal")
+                .json();
+        var density = json.required("fits").get(0).required("density");
+        assertEquals("waits.csv", density.required("data").asString());
+        assertEquals(4, density.required("fitted").required("mean").asDouble(), 1e-12);
+    }
+
     @Test
     void fitsAllWhereNoneIsNamed() {
         var json = leadline("families", "--fit", data, "--column", 2, "--json").json();

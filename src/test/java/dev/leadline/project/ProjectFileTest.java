@@ -31,6 +31,7 @@ import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Mean;
 import dev.leadline.model.LaneDraft.Other;
 import dev.leadline.model.LaneDraft.Settings;
+import dev.leadline.model.Project;
 import dev.leadline.problem.Refusal;
 import java.io.IOException;
 import java.nio.ByteBuffer;
@@ -305,5 +306,17 @@ class ProjectFileTest {
             }
         }
         return bytes;
+    }
+
+    @Test
+    void aRuleAndACopulaThatAreNotNamedAreTheUsualOnes() {
+        var draft = ProjectFile.parse("""
+                {"leadline": 1, "inputs": [{"name": "x", "density": {"family": "normal", "mean": 0, "sd": 1}},
+                 {"name": "y", "density": {"family": "normal", "mean": 0, "sd": 1}}],
+                 "dependence": {"pairs": [{"of": ["x", "y"], "spearman": 0.4}]}, "ask": {"mean": "x*y"}, "stop": {"draws": 5000}}
+                """);
+        assertEquals("fixed", draft.stop().orElseThrow().rule());
+        assertEquals("gaussian", draft.dependence().orElseThrow().copula());
+        assertEquals(5000, Project.of(draft).plan().stop().draws());
     }
 }

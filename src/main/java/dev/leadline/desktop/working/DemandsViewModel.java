@@ -6,6 +6,7 @@ import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.model.Sentence;
+import dev.leadline.model.Stop;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.Optional;
@@ -16,7 +17,7 @@ import java.util.OptionalLong;
 public final class DemandsViewModel {
     private static final ToleranceDraft NO_TOLERANCE =
             new ToleranceDraft(OptionalDouble.empty(), OptionalDouble.empty(), Optional.empty());
-    private static final StopDraft FIXED = new StopDraft("fixed", OptionalLong.empty(), OptionalDouble.empty());
+    private static final StopDraft FIXED = new StopDraft(Stop.FIXED, OptionalLong.empty(), OptionalDouble.empty());
 
     private final ProjectViewModel project;
 
