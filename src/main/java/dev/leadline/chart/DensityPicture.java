@@ -154,7 +154,9 @@ public final class DensityPicture {
         var room = new Rectangle2D.Double(
                 plot.getX(), plot.getMaxY() - full * plot.getHeight(), plot.getWidth(), full * plot.getHeight());
         silhouette.draw(g, room, over);
-        marks(g);
+        if (!portrait.isDiscrete()) {
+            marks(g);
+        }
         g.setColor(data());
         g.setStroke(new BasicStroke(1.4f));
         if (!portrait.isDiscrete()) {
@@ -177,9 +179,6 @@ public final class DensityPicture {
     private void marks(Graphics2D g) {
         g.setStroke(new BasicStroke(1, BasicStroke.CAP_BUTT, BasicStroke.JOIN_MITER, 10, new float[] {2, 3}, 0));
         g.setFont(font);
-        if (portrait.isDiscrete() && portrait.spread() == 0) {
-            return; // several would be one line
-        }
         double before = Double.NEGATIVE_INFINITY;
         for (var q : portrait.quantiles()) {
             boolean marked = q.below() == .05 || q.below() == .5 || q.above() == .05;

@@ -184,7 +184,7 @@ final class FamiliesCommand implements Command {
         var moments = new Columns();
         PortraitText.moments(portrait).forEach(row -> moments.add(row.name(), row.value(), row.remark()));
         moments.print(out);
-        out.println("chance below and value");
+        out.println(portrait.isDiscrete() ? "chance up to and value" : "chance below and value");
         var quantiles = new Columns();
         PortraitText.quantiles(portrait).forEach(row -> quantiles.add(row.name(), row.value(), row.remark()));
         quantiles.print(out);

@@ -293,9 +293,7 @@ public record Portrait(
 
     private static List<String> warnings(Density density) {
         var warnings = new ArrayList<String>();
-        if (density.isDiscrete()) {
-            warnings.add("it is discrete: each of its values has a probability of its own");
-        } else {
+        if (!density.isDiscrete()) {
             for (double end :
                     new double[] {density.support().low(), density.support().high()}) {
                 if (density.pdf(end) == Double.POSITIVE_INFINITY) {

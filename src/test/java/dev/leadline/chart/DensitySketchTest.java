@@ -3,9 +3,18 @@ package dev.leadline.chart;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.density.Borrowed;
+import dev.leadline.density.Catalogue;
+import dev.leadline.density.Density;
 import dev.leadline.density.Portrait;
+import dev.leadline.density.Typed;
+import dev.leadline.density.TypedText;
+import java.awt.geom.Rectangle2D;
 import java.awt.image.BufferedImage;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import org.apache.commons.statistics.distribution.BetaDistribution;
 import org.apache.commons.statistics.distribution.ContinuousDistribution;
 import org.apache.commons.statistics.distribution.GammaDistribution;
@@ -15,7 +24,7 @@ import org.junit.jupiter.api.Test;
 
 class DensitySketchTest {
     private static Portrait portrait(ContinuousDistribution of) {
-        return Portrait.of(new Borrowed(of));
+        return Portrait.of(Borrowed.of(of));
     }
 
     @Test
@@ -50,6 +59,55 @@ class DensitySketchTest {
                                 > 1000,
                         "" + of);
             }
+        }
+    }
+
+    /// Steep stretches of the outline.
+    ///
+    /// @param at value where it begins
+    /// @param wide how far it reaches, in pixels
+    private record Rise(double at, double wide) {}
+
+    /// Rises, or falls, by more than a tenth of the height.
+    private static List<Rise> rises(Density density) {
+        var portrait = Portrait.of(density);
+        var over = portrait.shown().orElseThrow();
+        var plot = new Rectangle2D.Double(0, 0, 400, 100);
+        var outline = Silhouette.of(portrait, over, 400, 25).curve(plot, over).getPathIterator(null);
+        var rises = new ArrayList<Rise>();
+        double[] at = new double[2];
+        double[] next = new double[2];
+        for (outline.currentSegment(at); !outline.isDone(); outline.next()) {
+            outline.currentSegment(next);
+            double rise = (at[1] - next[1]) / plot.getHeight();
+            if (Math.abs(rise) > .1) {
+                rises.add(new Rise(over.low() + at[0] / 400 * (over.high() - over.low()), next[0] - at[0]));
+            }
+            System.arraycopy(next, 0, at, 0, 2);
+        }
+        return rises;
+    }
+
+    @Test
+    void jumpsAreUpright() {
+        var uniform = rises(Catalogue.named("uniform").of(Map.of("from", 0.0, "to", 1.0)));
+        upright(uniform, 0, 1);
+        var swing = rises(Catalogue.named("arcsine").of(Map.of("from", -1.0, "to", 1.0)));
+        upright(List.of(swing.getFirst(), swing.getLast()), -1, 1);
+        // 4 from 0 to .1, then 2 to .3, then 1 to .5
+        var steps = Typed.of(
+                        new TypedText("[x>=0 & x<0.5]*(1 + [x<0.3] + 2*[x<0.1])", -1, 1, List.of(), false),
+                        "x",
+                        new LinkedHashMap<>())
+                .density();
+        upright(rises(steps), 0, .1, .3, .5);
+    }
+
+    private static void upright(List<Rise> rises, double... places) {
+        assertEquals(places.length, rises.size());
+        for (int k = 0; k < places.length; k++) {
+            assertEquals(places[k], rises.get(k).at(), 1e-6);
+            assertEquals(0, rises.get(k).wide());
         }
     }
 

@@ -1,5 +1,6 @@
 package dev.leadline.chart;
 
+import dev.leadline.density.Borrowed;
 import dev.leadline.density.Portrait;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.study.LaneState;
@@ -102,7 +103,7 @@ final class ShowPictures {
             g.setColor(theme.getValue().ground());
             g.fillRect(0, 0, 1000, 560);
             for (int i = 0; i < densities.size(); i++) {
-                var density = Portrait.of(new Borrowed(densities.get(i)));
+                var density = Portrait.of(Borrowed.of(densities.get(i)));
                 int x = 20 + i % 4 * 240;
                 int y = 20 + i / 4 * 270;
                 g.drawImage(DensitySketch.image(density, 72, 20, 1, theme.getValue()), x, y, null);

@@ -9,7 +9,6 @@ import java.util.List;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.apache.commons.statistics.distribution.BinomialDistribution;
-import org.apache.commons.statistics.distribution.DiscreteDistribution;
 import org.apache.commons.statistics.distribution.PoissonDistribution;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -122,7 +121,7 @@ class PortraitTest {
     @Test
     void aDiscreteDensityHasABarForEveryValue() {
         var of = BinomialDistribution.of(10, .3);
-        var bars = Portrait.of(new Counts(of)).bars();
+        var bars = Portrait.of(Borrowed.of(of)).bars();
         assertEquals(0, bars.getFirst().from()); // P(0) = .028
         assertEquals(8, bars.getLast().from()); // P(X > 8) < .001 <= P(X > 7) = .0016
         for (int i = 0; i < bars.size(); i++) {
@@ -135,7 +134,7 @@ class PortraitTest {
     @Test
     void manyValuesAreDrawnInStretches() {
         var of = PoissonDistribution.of(1e4);
-        var bars = Portrait.of(new Counts(of)).bars();
+        var bars = Portrait.of(Borrowed.of(of)).bars();
         assertTrue(bars.size() <= Portrait.MOST_BARS && bars.size() > Portrait.MOST_BARS / 2, bars.size() + " bars");
         for (var bar : bars) {
             double chance = of.probability((int) Math.floor(bar.from()), (int) Math.floor(bar.to()));
@@ -146,13 +145,16 @@ class PortraitTest {
     @Test
     void valuesThatAreSureOrNearlySoAreDrawn() {
         assertEquals(
-                1, Portrait.of(new Counts(BinomialDistribution.of(1, 1))).bars().size());
+                1,
+                Portrait.of(Borrowed.of(BinomialDistribution.of(1, 1))).bars().size());
         assertEquals(
                 2,
-                Portrait.of(new Counts(BinomialDistribution.of(1, 1e-6))).bars().size());
+                Portrait.of(Borrowed.of(BinomialDistribution.of(1, 1e-6)))
+                        .bars()
+                        .size());
         assertEquals(
                 2,
-                Portrait.of(new Counts(BinomialDistribution.of(1, .5))).bars().size());
+                Portrait.of(Borrowed.of(BinomialDistribution.of(1, .5))).bars().size());
     }
 
     /// Few data are drawn one by one, each as high as its share of them.
@@ -227,73 +229,5 @@ class PortraitTest {
             assertTrue(portrait.shown().isPresent());
         }
         assertTrue(best < 20e6, "%s takes %.1f ms".formatted(density, best / 1e6));
-    }
-
-    /// Whole numbers of the library of distributions.
-    private record Counts(DiscreteDistribution of) implements Density {
-        @Override
-        public double pdf(double x) {
-            return x == Math.rint(x) ? of.probability((int) x) : 0;
-        }
-
-        @Override
-        public double logPdf(double x) {
-            return StrictMath.log(pdf(x));
-        }
-
-        @Override
-        public double cdf(double x) {
-            return of.cumulativeProbability((int) Math.floor(x));
-        }
-
-        @Override
-        public double survival(double x) {
-            return of.survivalProbability((int) Math.floor(x));
-        }
-
-        @Override
-        public double quantile(double p) {
-            return of.inverseCumulativeProbability(p);
-        }
-
-        @Override
-        public double upperQuantile(double q) {
-            return of.inverseSurvivalProbability(q);
-        }
-
-        @Override
-        public double mean() {
-            return of.getMean();
-        }
-
-        @Override
-        public double variance() {
-            return of.getVariance();
-        }
-
-        @Override
-        public double skewness() {
-            return Double.NaN;
-        }
-
-        @Override
-        public double excessKurtosis() {
-            return Double.NaN;
-        }
-
-        @Override
-        public boolean isDiscrete() {
-            return true;
-        }
-
-        @Override
-        public Support support() {
-            return new Support(of.getSupportLowerBound(), of.getSupportUpperBound());
-        }
-
-        @Override
-        public Standardised standardised() {
-            throw new UnsupportedOperationException("only looked at, never sampled");
-        }
     }
 }

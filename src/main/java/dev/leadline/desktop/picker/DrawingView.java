@@ -1,48 +1,25 @@
 package dev.leadline.desktop.picker;
 
-import dev.leadline.desktop.style.Pixels;
-import java.util.List;
+import dev.leadline.desktop.style.ImageRegion;
 import java.util.Optional;
 import java.util.function.Consumer;
-import javafx.scene.AccessibleRole;
-import javafx.scene.image.ImageView;
 import javafx.scene.input.KeyEvent;
 import javafx.scene.input.MouseEvent;
-import javafx.scene.layout.Region;
-import javafx.scene.shape.Line;
-import javafx.stage.Window;
 
 /// Shows the drawing as large as there is room, with a line at the value that is read.
-final class DrawingView extends Region {
+final class DrawingView extends ImageRegion {
     private static final double STEP = 8;
 
     private final PickerViewModel model;
-    private final ImageView image = new ImageView();
-    private final Line line = new Line();
     private final Consumer<String> reading;
     private double x = Double.NaN;
 
     DrawingView(PickerViewModel model, Consumer<String> reading) {
+        super("density", "The density; left and right arrows read its values", 200, 150);
         this.model = model;
         this.reading = reading;
-        setId("density");
-        setFocusTraversable(true);
-        setAccessibleRole(AccessibleRole.IMAGE_VIEW);
-        setAccessibleText("The density; left and right arrows read its values");
-        setMinSize(200, 150);
-        image.setSmooth(false);
-        line.getStyleClass().add("cross");
-        line.setVisible(false);
-        for (var n : List.of(image, line)) {
-            n.setMouseTransparent(true);
-            n.setManaged(false);
-        }
-        getChildren().addAll(image, line);
         model.drawn().addListener((_, _, drawn) -> show(drawn));
-        model.outdated().addListener((_, _, outdated) -> image.setOpacity(outdated ? .45 : 1));
-        widthProperty().addListener((_, _, _) -> resized());
-        heightProperty().addListener((_, _, _) -> resized());
-        sceneProperty().flatMap(s -> s.windowProperty()).addListener((_, _, window) -> follow(window));
+        model.outdated().addListener((_, _, outdated) -> fade(outdated));
         addEventHandler(MouseEvent.MOUSE_MOVED, e -> read(e.getX()));
         addEventHandler(MouseEvent.MOUSE_DRAGGED, e -> read(e.getX()));
         addEventHandler(MouseEvent.MOUSE_EXITED, _ -> unread());
@@ -50,27 +27,13 @@ final class DrawingView extends Region {
         addEventHandler(KeyEvent.KEY_PRESSED, this::pressed);
     }
 
-    private void follow(Window window) {
-        if (window != null) {
-            window.renderScaleXProperty().addListener((_, _, _) -> resized());
-            resized();
-        }
-    }
-
-    private void resized() {
-        double scale = getScene() == null || getScene().getWindow() == null
-                ? 1
-                : getScene().getWindow().getRenderScaleX();
-        model.size((int) getWidth(), (int) getHeight(), scale);
+    @Override
+    protected void sized(int width, int height, double scale) {
+        model.size(width, height, scale);
     }
 
     private void show(Optional<PickerViewModel.Drawn> drawn) {
-        image.setVisible(drawn.isPresent());
-        drawn.ifPresent(d -> {
-            image.setImage(Pixels.shared(d.image()));
-            image.setFitWidth(d.image().getWidth() / d.scale());
-            image.setFitHeight(d.image().getHeight() / d.scale());
-        });
+        drawn.ifPresentOrElse(d -> show(d.image(), d.scale()), this::hideImage);
         if (!Double.isNaN(x)) {
             read(x);
         }
@@ -101,17 +64,13 @@ final class DrawingView extends Region {
         }
         x = at;
         double shown = model.drawn().get().orElseThrow().picture().xOf(value.getAsDouble());
-        line.setVisible(true);
-        line.setStartX(shown);
-        line.setEndX(shown);
-        line.setStartY(plot.get().getMinY());
-        line.setEndY(plot.get().getMaxY());
+        cross(shown, plot.get());
         reading.accept(model.reading(at, y).orElse(""));
     }
 
     private void unread() {
         x = Double.NaN;
-        line.setVisible(false);
+        hideCross();
         reading.accept("");
     }
 }

@@ -2,28 +2,20 @@ package dev.leadline.desktop.stage;
 
 import dev.leadline.chart.Picture;
 import dev.leadline.chart.Reading;
-import dev.leadline.desktop.style.Pixels;
-import java.util.List;
+import dev.leadline.desktop.style.ImageRegion;
 import java.util.Optional;
 import java.util.function.Consumer;
-import javafx.scene.AccessibleRole;
-import javafx.scene.image.ImageView;
 import javafx.scene.input.KeyEvent;
 import javafx.scene.input.MouseButton;
 import javafx.scene.input.MouseEvent;
 import javafx.scene.input.ScrollEvent;
-import javafx.scene.layout.Region;
 import javafx.scene.shape.Circle;
-import javafx.scene.shape.Line;
-import javafx.stage.Window;
 
 /// Shows the drawn picture as large as there is room, and answers to mouse and keys.
-final class PictureView extends Region {
+final class PictureView extends ImageRegion {
     private static final double STEP = .8;
 
     private final StageViewModel model;
-    private final ImageView image = new ImageView();
-    private final Line cross = new Line();
     private final Circle at = new Circle(5);
     private final Consumer<Optional<Reading>> reading;
     private Optional<Drag> drag = Optional.empty();
@@ -31,27 +23,19 @@ final class PictureView extends Region {
     private record Drag(Picture picture, double x, double y) {}
 
     PictureView(StageViewModel model, Consumer<Optional<Reading>> reading) {
+        super(
+                "picture",
+                "Settling: running estimate and interval against the number of draws",
+                Picture.LEAST_WIDTH,
+                Picture.LEAST_HEIGHT);
         this.model = model;
         this.reading = reading;
-        setId("picture");
-        setFocusTraversable(true);
-        setAccessibleRole(AccessibleRole.IMAGE_VIEW);
-        setAccessibleText("Settling: running estimate and interval against the number of draws");
-        setMinSize(Picture.LEAST_WIDTH, Picture.LEAST_HEIGHT);
-        image.setSmooth(false);
-        cross.getStyleClass().add("cross");
         at.getStyleClass().add("cross-point");
-        cross.setVisible(false);
         at.setVisible(false);
-        for (var n : List.of(image, cross, at)) {
-            n.setMouseTransparent(true);
-            n.setManaged(false);
-        }
-        getChildren().addAll(image, cross, at);
+        at.setMouseTransparent(true);
+        at.setManaged(false);
+        getChildren().add(at);
         model.drawn().addListener((_, _, drawn) -> show(drawn));
-        widthProperty().addListener((_, _, _) -> resized());
-        heightProperty().addListener((_, _, _) -> resized());
-        sceneProperty().flatMap(s -> s.windowProperty()).addListener((_, _, window) -> follow(window));
         addEventHandler(ScrollEvent.SCROLL, this::scrolled);
         addEventHandler(MouseEvent.MOUSE_MOVED, e -> read(e.getX(), e.getY()));
         addEventHandler(MouseEvent.MOUSE_EXITED, _ -> unread());
@@ -66,27 +50,13 @@ final class PictureView extends Region {
         addEventHandler(KeyEvent.KEY_PRESSED, this::pressed);
     }
 
-    private void follow(Window window) {
-        if (window != null) {
-            window.renderScaleXProperty().addListener((_, _, _) -> resized());
-            resized();
-        }
-    }
-
-    private void resized() {
-        double scale = getScene() == null || getScene().getWindow() == null
-                ? 1
-                : getScene().getWindow().getRenderScaleX();
-        model.size((int) getWidth(), (int) getHeight(), scale);
+    @Override
+    protected void sized(int width, int height, double scale) {
+        model.size(width, height, scale);
     }
 
     private void show(Optional<StageViewModel.Drawn> drawn) {
-        image.setVisible(drawn.isPresent());
-        drawn.ifPresent(d -> {
-            image.setImage(Pixels.shared(d.image()));
-            image.setFitWidth(d.image().getWidth() / d.scale());
-            image.setFitHeight(d.image().getHeight() / d.scale());
-        });
+        drawn.ifPresentOrElse(d -> show(d.image(), d.scale()), this::hideImage);
     }
 
     private void scrolled(ScrollEvent e) {
@@ -133,21 +103,18 @@ final class PictureView extends Region {
         reading.accept(found);
         var lane = found.flatMap(r -> r.lanes().stream().findFirst());
         var plot = model.drawn().get().map(d -> d.picture().plot());
-        cross.setVisible(lane.isPresent());
+        hideCross();
         at.setVisible(
                 lane.filter(l -> plot.orElseThrow().contains(l.x(), l.y())).isPresent());
         lane.ifPresent(l -> {
-            cross.setStartX(l.x());
-            cross.setEndX(l.x());
-            cross.setStartY(plot.orElseThrow().getMinY());
-            cross.setEndY(plot.orElseThrow().getMaxY());
+            cross(l.x(), plot.orElseThrow());
             at.setCenterX(l.x());
             at.setCenterY(l.y());
         });
     }
 
     private void unread() {
-        cross.setVisible(false);
+        hideCross();
         at.setVisible(false);
         reading.accept(Optional.empty());
     }
