@@ -86,8 +86,23 @@ record DensityAt(
         return get.apply(project.draft().get()).orElse(DensityDraft.unchosen());
     }
 
+    /// A sentence that was made for the density before goes with it.
     Draft changed(Draft d, UnaryOperator<DensityDraft> change) {
-        return set.apply(d, change.apply(get.apply(d).orElse(DensityDraft.unchosen())));
+        var before = get.apply(d).orElse(DensityDraft.unchosen());
+        var after = change.apply(before);
+        var drawn = set.apply(d, after);
+        boolean lost = !after.of().equals(before.of())
+                && project.isSuggested(drawn.inputs().get(input).provenance());
+        return lost ? with(drawn, "") : drawn;
+    }
+
+    private Draft with(Draft d, String provenance) {
+        return Edits.inputs(
+                d,
+                Edits.changed(
+                        d.inputs(),
+                        input,
+                        in -> new InputDraft(in.name(), in.unit(), in.label(), provenance, in.from())));
     }
 
     void edit(String key, UnaryOperator<DensityDraft> change) {
@@ -96,15 +111,8 @@ record DensityAt(
 
     /// The density made of something else and the sentence of where it comes from, as one edit.
     void edit(String key, DensityDraft.Of of, String provenance) {
-        project.edit(path + key, d -> {
-            var drawn = changed(d, old -> become(old, of));
-            return Edits.inputs(
-                    drawn,
-                    Edits.changed(
-                            drawn.inputs(),
-                            input,
-                            in -> new InputDraft(in.name(), in.unit(), in.label(), provenance, in.from())));
-        });
+        project.suggested(provenance);
+        project.edit(path + key, d -> with(changed(d, old -> become(old, of)), provenance));
     }
 
     /// The density made of something else. It stays cut where it was; it stays shifted and scaled unless the family has

@@ -22,6 +22,9 @@ final class FitsTable extends VBox {
     private static final int LOG_DIGITS = 4;
     private static final int DIGITS = 3;
 
+    /// Letters of a name that find room beside the figures.
+    private static final int LONG = 18;
+
     private final DataViewModel model;
     private final Button fit = new Button("fit families to it");
     private final Label chosen = Labels.wrapped("");
@@ -43,7 +46,7 @@ final class FitsTable extends VBox {
         var family = new ColumnConstraints();
         family.setHgrow(Priority.ALWAYS);
         table.getColumnConstraints().add(family);
-        for (int c = 0; c < 4; c++) {
+        for (int c = 0; c < 3; c++) {
             var column = new ColumnConstraints();
             column.setHalignment(HPos.RIGHT);
             table.getColumnConstraints().add(column);
@@ -80,27 +83,24 @@ final class FitsTable extends VBox {
         table.addRow(
                 0,
                 head("family", "Draws from it, once it is chosen"),
-                head("log L", "Logarithm of the likelihood: larger is better, but more parameters always help"),
                 head("AIC", "Akaike's criterion, which counts the parameters: smaller is better"),
                 head("KS", "Kolmogorov and Smirnov: largest difference between shares of data and chances"),
                 head("AD", "Anderson and Darling: all differences, those in the tails counting more"));
         int row = 1;
         for (Fit one : fits.fits()) {
             var use = Labels.link(
-                    one.family(),
+                    broken(one.family()),
                     "Use this fit: "
                             + DensityWords.of(DensityDraft.of(new DensityDraft.Member(one.family(), one.parameters()))),
                     () -> model.use(one));
             use.setId("use-" + one.family());
             use.setAccessibleText("Use the fit of " + one.family());
             use.setMinWidth(0);
+            var aic = figure(one.aic(), LOG_DIGITS);
+            aic.setTooltip(
+                    new Tooltip("Logarithm of the likelihood: " + Significant.text(one.logLikelihood(), LOG_DIGITS)));
             table.addRow(
-                    row++,
-                    use,
-                    figure(one.logLikelihood(), LOG_DIGITS),
-                    figure(one.aic(), LOG_DIGITS),
-                    figure(one.kolmogorovSmirnov(), DIGITS),
-                    figure(one.andersonDarling(), DIGITS));
+                    row++, use, aic, figure(one.kolmogorovSmirnov(), DIGITS), figure(one.andersonDarling(), DIGITS));
         }
         String lost = fits.refused().isEmpty()
                 ? ""
@@ -128,7 +128,12 @@ final class FitsTable extends VBox {
         return head;
     }
 
-    private static Node figure(double value, int digits) {
+    /// In two lines where it is long.
+    private static String broken(String family) {
+        return family.length() > LONG ? family.replaceFirst("-", "-\n") : family;
+    }
+
+    private static Label figure(double value, int digits) {
         var figure = new Label(Double.isNaN(value) ? "none" : Significant.text(value, digits));
         figure.getStyleClass().addAll("figure", "fit-figure");
         figure.setMinWidth(Label.USE_PREF_SIZE);

@@ -77,11 +77,12 @@ public final class PickerPane extends BorderPane {
         model.project().draft().addListener((_, _, _) -> update());
         model.project().problems().addListener((_, _, _) -> update());
         model.drawn().addListener((_, _, drawn) -> show(drawn));
-        model.outdated().addListener((_, _, outdated) -> Labels.see(remarks, !outdated));
+        model.outdated().addListener((_, _, _) -> showRemarks());
         build();
     }
 
     private void show(Optional<PickerViewModel.Drawn> drawn) {
+        showRemarks();
         numbers.show(drawn.map(d -> d.picture().portrait()), model.unit().strip());
         remarks.getChildren()
                 .setAll(model.remarks().stream().map(Labels::wrapped).toList());
@@ -90,6 +91,11 @@ public final class PickerPane extends BorderPane {
         if (drawn.isPresent() && !data && against.isSelected()) {
             density.setSelected(true);
         }
+    }
+
+    /// Remarks speak of the density as it is, not of one that is begun.
+    private void showRemarks() {
+        Labels.see(remarks, !model.outdated().get() && model.isAsShown());
     }
 
     private Node empty() {
@@ -196,6 +202,7 @@ public final class PickerPane extends BorderPane {
                             remarks,
                             shown.get(1).node());
         }
+        showRemarks();
         update();
     }
 

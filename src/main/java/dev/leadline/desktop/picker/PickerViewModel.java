@@ -189,6 +189,13 @@ public final class PickerViewModel {
         way.set(Optional.empty());
     }
 
+    /// Whether the form is that of the density there is; another was chosen but says nothing yet.
+    boolean isAsShown() {
+        return way.get().isEmpty()
+                || way.get().get() instanceof Way.Known
+                || way.get().equals(at.get().flatMap(place -> Way.of(place.now())));
+    }
+
     ObjectProperty<View> view() {
         return view;
     }

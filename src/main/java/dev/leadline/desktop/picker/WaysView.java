@@ -3,6 +3,7 @@ package dev.leadline.desktop.picker;
 import dev.leadline.desktop.style.Styles;
 import java.util.Locale;
 import java.util.function.Consumer;
+import javafx.geometry.Insets;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
 import javafx.scene.layout.VBox;
@@ -14,6 +15,7 @@ final class WaysView extends VBox {
         setId("ways");
         var title = new Label("What is known about it?");
         title.getStyleClass().add(Styles.PANE_TITLE);
+        setMargin(title, new Insets(0, 0, 5, 0));
         getChildren().add(title);
         for (Way way : Way.all()) {
             if (way == Way.Given.DATA) {

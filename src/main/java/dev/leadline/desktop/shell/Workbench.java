@@ -8,7 +8,10 @@ import dev.leadline.desktop.style.Styles;
 import dev.leadline.desktop.working.SketchView;
 import dev.leadline.desktop.working.WorkingPane;
 import dev.leadline.model.Sentence;
+import java.util.Arrays;
+import java.util.List;
 import java.util.Map;
+import javafx.scene.Node;
 import javafx.scene.control.Label;
 import javafx.scene.control.SplitPane;
 import javafx.scene.input.Clipboard;
@@ -23,6 +26,9 @@ public final class Workbench extends BorderPane {
     private static final String SAFETY = "Results support, and do not replace, the judgement of a licensed engineer or"
             + " qualified professional; applicable local codes and standards govern. A sampled probability rests on the"
             + " stated densities.";
+
+    /// From here on a density and its form find room beside the grounds.
+    private static final double WIDE = 1500;
 
     private final WorkbenchViewModel model;
     private final WorkingPane working;
@@ -63,6 +69,8 @@ public final class Workbench extends BorderPane {
         panes = new SplitPane(working, picture, grounds);
         panes.setDividerPositions(.325, .79);
         model.inputs().opened().addListener((_, _, input) -> stage(input.isPresent()));
+        widthProperty()
+                .addListener((_, _, _) -> stage(model.inputs().opened().get().isPresent()));
         SplitPane.setResizableWithParent(working, false);
         SplitPane.setResizableWithParent(grounds, false);
         start = new StartPage(model, background);
@@ -86,21 +94,18 @@ public final class Workbench extends BorderPane {
         }
     }
 
-    /// The picker takes the room of picture and grounds, which speak of a run.
+    /// The picker takes the place of the picture, and that of the grounds too where the window is narrow.
     private void stage(boolean picking) {
-        boolean isPicking = panes.getItems().contains(picker);
-        if (picking == isPicking) {
+        List<Node> shown = !picking
+                ? List.of(working, picture, grounds)
+                : getWidth() < WIDE ? List.of(working, picker) : List.of(working, picker, grounds);
+        if (panes.getItems().equals(shown)) {
             return;
         }
-        if (picking) {
-            dividers = panes.getDividerPositions();
-            panes.getItems().setAll(working, picker);
-            panes.setDividerPositions(dividers[0]);
-        } else {
-            dividers[0] = panes.getDividerPositions()[0];
-            panes.getItems().setAll(working, picture, grounds);
-            panes.setDividerPositions(dividers);
-        }
+        double[] now = panes.getDividerPositions();
+        dividers = now.length == 2 ? now : new double[] {now[0], dividers[1]};
+        panes.getItems().setAll(shown);
+        panes.setDividerPositions(Arrays.copyOf(dividers, shown.size() - 1));
     }
 
     private void showGrounds(Runnable reveal) {

@@ -9,9 +9,11 @@ import dev.leadline.problem.Refusal;
 import dev.leadline.project.DataFolder;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 import java.util.function.BiFunction;
 import java.util.function.UnaryOperator;
 import javafx.beans.property.ReadOnlyBooleanProperty;
@@ -46,6 +48,7 @@ public final class ProjectViewModel {
     private final ReadOnlyBooleanWrapper canRedo = new ReadOnlyBooleanWrapper();
     private final ReadOnlyObjectWrapper<List<Problem>> problems = new ReadOnlyObjectWrapper<>(List.of());
     private final ObservableMap<String, Unread> unread = FXCollections.observableHashMap();
+    private final Set<String> suggested = new HashSet<>();
     private History<Draft> history;
     private Draft saved;
     private long newestCheck;
@@ -154,6 +157,15 @@ public final class ProjectViewModel {
     public void redo() {
         unread.clear();
         history.redo().ifPresent(_ -> show());
+    }
+
+    /// A sentence of where a density comes from was made, not typed: it holds for that density alone.
+    public void suggested(String provenance) {
+        suggested.add(provenance);
+    }
+
+    public boolean isSuggested(String provenance) {
+        return suggested.contains(provenance);
     }
 
     /// A text typed in a number field. Where it is no number the draft goes back to the one that stood there before,

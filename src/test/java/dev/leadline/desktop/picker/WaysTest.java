@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import dev.leadline.density.Knowledge;
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
+import dev.leadline.desktop.working.InputsViewModel;
 import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.model.DataColumn;
 import dev.leadline.model.DataFiles;
@@ -101,6 +102,21 @@ class WaysTest {
         assertEquals("", known.text("high"));
         assertEquals(
                 "The density follows once all of it is told; until then it stays uniform(0, 1).", known.sentence());
+    }
+
+    @Test
+    void aSentenceThatWasMadeGoesWithItsDensity() {
+        new KnownViewModel(Knowledge.named("chance"), at).type("probability", "0.03");
+        assertTrue(provenance().contains("0.03"), provenance());
+        new ChangesViewModel(at).shift("1");
+        assertTrue(provenance().contains("0.03"), provenance());
+        new MemberViewModel(at).family("poisson");
+        assertEquals("", provenance());
+        project.undo();
+        assertTrue(provenance().contains("0.03"), provenance());
+        new InputsViewModel(project).provenance(0, "by hand");
+        new MemberViewModel(at).family("poisson");
+        assertEquals("by hand", provenance());
     }
 
     @Test
