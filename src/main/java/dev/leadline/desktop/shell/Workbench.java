@@ -69,8 +69,6 @@ public final class Workbench extends BorderPane {
         panes = new SplitPane(working, picture, grounds);
         panes.setDividerPositions(.325, .79);
         model.inputs().opened().addListener((_, _, input) -> stage(input.isPresent()));
-        widthProperty()
-                .addListener((_, _, _) -> stage(model.inputs().opened().get().isPresent()));
         SplitPane.setResizableWithParent(working, false);
         SplitPane.setResizableWithParent(grounds, false);
         start = new StartPage(model, background);

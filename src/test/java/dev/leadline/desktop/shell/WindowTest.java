@@ -249,6 +249,29 @@ class WindowTest {
     }
 
     @Test
+    void aWideWindowKeepsTheGroundsBesideADensity(FxRobot robot) throws TimeoutException {
+        opened(robot, Drafts.mean());
+        for (double width : new double[] {1280, 1600}) {
+            robot.interact(() -> stage.setWidth(width));
+            await(() -> stage.getScene().getWidth() > width - 50);
+            double working = widthOf(robot, ".working");
+            robot.interact(() -> model.inputs().open(0));
+            await(() -> robot.lookup("#picker").tryQuery().isPresent());
+            assertEquals(width > 1500, robot.lookup("#grounds").tryQuery().isPresent());
+            assertEquals(working, widthOf(robot, ".working"), 4);
+            assertTrue(widthOf(robot, "#picker") > 700);
+            robot.interact(() -> model.inputs().close());
+            await(() -> robot.lookup("#grounds").tryQuery().isPresent());
+            assertEquals(working, widthOf(robot, ".working"), 4);
+        }
+    }
+
+    private static double widthOf(FxRobot robot, String what) {
+        WaitForAsyncUtils.waitForFxEvents();
+        return robot.lookup(what).query().getBoundsInLocal().getWidth();
+    }
+
+    @Test
     void arrowsReadTheDensity(FxRobot robot) throws TimeoutException {
         opened(robot, Drafts.mean());
         robot.interact(() -> model.inputs().open(0));
