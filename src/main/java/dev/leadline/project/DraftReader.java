@@ -1,5 +1,6 @@
 package dev.leadline.project;
 
+import dev.leadline.density.Mixing;
 import dev.leadline.model.DensityDraft;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.AskDraft;
@@ -12,7 +13,6 @@ import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.model.LaneDraft;
-import dev.leadline.density.Mixing;
 import dev.leadline.model.Stop;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;

@@ -49,7 +49,6 @@ public final class PickerPane extends BorderPane {
         this.chooseData = chooseData;
         setId("picker");
         getStyleClass().addAll(Styles.PANE, Styles.STAGE, "picker");
-        setMinWidth(420);
         setTop(head());
         form.getStyleClass().add("content");
         forms.setFitToWidth(true);

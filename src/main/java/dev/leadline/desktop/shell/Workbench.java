@@ -30,6 +30,11 @@ public final class Workbench extends BorderPane {
     /// From here on a density and its form find room beside the grounds.
     private static final double WIDE = 1500;
 
+    /// Least widths; a window that is made narrow later takes room from the grounds.
+    private static final double PICKER = 420;
+
+    private static final double PICKER_BESIDE_GROUNDS = 700;
+
     private final WorkbenchViewModel model;
     private final WorkingPane working;
     private final GroundsPane grounds = new GroundsPane();
@@ -100,6 +105,7 @@ public final class Workbench extends BorderPane {
         if (panes.getItems().equals(shown)) {
             return;
         }
+        picker.setMinWidth(shown.contains(grounds) ? PICKER_BESIDE_GROUNDS : PICKER);
         double[] now = panes.getDividerPositions();
         dividers = now.length == 2 ? now : new double[] {now[0], dividers[1]};
         panes.getItems().setAll(shown);
