@@ -6,6 +6,7 @@ import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 
@@ -69,12 +70,12 @@ public record Beta(double alpha, double beta, double from, double to) implements
             return problems;
         }
         if (!(mean > from && mean < to)) {
-            String words = "between from, " + Rule.number(from) + ", and to, " + Rule.number(to);
+            String words = "between from, " + Shortest.text(from) + ", and to, " + Shortest.text(to);
             return List.of(Rule.problem("mean", mean, words, "The mean lies within the range.", ""));
         }
         double most = most(mean, from, to);
         if (!(sd < most)) {
-            String words = "less than " + Rule.number(most);
+            String words = "less than " + Shortest.text(most);
             return List.of(
                     Rule.problem("sd", sd, words, "So much is only possible with all values at the limits.", ""));
         }

@@ -2,6 +2,7 @@ package dev.leadline.density;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -70,7 +71,7 @@ record ByQuantiles(List<Rule> given, Solver solver) {
             throw new Refusal(Rule.problem(
                     low.name,
                     low.x,
-                    "greater than " + (from == 0 ? "0" : "from, " + Rule.number(from)),
+                    "greater than " + (from == 0 ? "0" : "from, " + Shortest.text(from)),
                     "All values lie above that.",
                     ""));
         }
@@ -91,7 +92,7 @@ record ByQuantiles(List<Rule> given, Solver solver) {
         if (falls == excess.applyAsDouble(most) > 0) {
             throw new Refusal(Problem.of("no member of the family has these two quantiles")
                     .because("%s = %s and %s = %s are too close together or too far apart for it."
-                            .formatted(low.name, Rule.number(low.x), high.name, Rule.number(high.x)))
+                            .formatted(low.name, Shortest.text(low.x), high.name, Shortest.text(high.x)))
                     .tryThis("Take a family with another spread, or check the two values.")
                     .at(Place.of(high.name)));
         }
@@ -164,7 +165,7 @@ record ByQuantiles(List<Rule> given, Solver solver) {
             problems.add(Rule.problem(
                     quantiles.get(1).name,
                     quantiles.get(1).x,
-                    "greater than %s, which is %s".formatted(quantiles.get(0).name, Rule.number(quantiles.get(0).x)),
+                    "greater than %s, which is %s".formatted(quantiles.get(0).name, Shortest.text(quantiles.get(0).x)),
                     "A larger share of the values is below the larger quantile.",
                     ""));
         } else if (problems.isEmpty()) {

@@ -4,6 +4,7 @@ import static dev.leadline.density.Rule.finite;
 import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 
@@ -41,7 +42,7 @@ public record CurvilinearTrapezoid(double from, double to, double inexact) imple
                 : List.of(Rule.problem(
                         "inexact",
                         inexact,
-                        "less than half of the distance between from and to, " + Rule.number(half),
+                        "less than half of the distance between from and to, " + Shortest.text(half),
                         "Otherwise the limits could change places.",
                         ""));
     }

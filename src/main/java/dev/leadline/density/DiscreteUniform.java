@@ -3,6 +3,7 @@ package dev.leadline.density;
 import static dev.leadline.density.Rule.whole;
 
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 
@@ -29,8 +30,8 @@ public record DiscreteUniform(double from, double to) implements WholeNumbers, C
     private static List<Problem> ordered(double from, double to) {
         return to >= from
                 ? List.of()
-                : List.of(
-                        Rule.problem("to", to, "at least from, " + Rule.number(from), "The range would be empty.", ""));
+                : List.of(Rule.problem(
+                        "to", to, "at least from, " + Shortest.text(from), "The range would be empty.", ""));
     }
 
     private double count() {

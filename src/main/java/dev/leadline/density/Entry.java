@@ -1,5 +1,6 @@
 package dev.leadline.density;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
@@ -31,7 +32,7 @@ record Entry(List<Rule> rules, Function<double[], List<Problem>> between, Functi
         var broken = new ArrayList<String>();
         for (int i = 0; i < values.length; i++) {
             var rule = rules.get(i);
-            gives.add(rule.name() + " " + Rule.number(values[i]));
+            gives.add(rule.name() + " " + Shortest.text(values[i]));
             if (rule.broken(values[i]).isPresent()) {
                 broken.add(rule.name() + " must be " + rule.words());
             }

@@ -4,6 +4,7 @@ import static dev.leadline.density.Rule.finite;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 
@@ -31,7 +32,7 @@ public record Exponential(double mean, double from) implements Scaled {
 
     private static List<Problem> problems(double mean, double from) {
         if (!(mean > from)) {
-            String words = from == 0 ? "greater than 0" : "greater than from, " + Rule.number(from);
+            String words = from == 0 ? "greater than 0" : "greater than from, " + Shortest.text(from);
             return List.of(Rule.problem("mean", mean, words, "The mean lies above the least value.", ""));
         }
         return Uniform.rising("from", from, "mean", mean);

@@ -5,6 +5,7 @@ import static dev.leadline.density.Rule.whole;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 import java.util.stream.Stream;
@@ -44,7 +45,7 @@ public record Hypergeometric(double population, double marked, double drawn) imp
                 : List.of(Rule.problem(
                         name,
                         value,
-                        "at most the population, " + Rule.number(population),
+                        "at most the population, " + Shortest.text(population),
                         "There are no more than that.",
                         ""));
     }

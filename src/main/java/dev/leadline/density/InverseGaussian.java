@@ -5,6 +5,7 @@ import static dev.leadline.density.Rule.positive;
 import dev.leadline.numeric.ErrorFunction;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 
@@ -57,7 +58,7 @@ public record InverseGaussian(double mean, double shape) implements Scaled {
                 : List.of(Rule.problem(
                         name,
                         value,
-                        times + " times the mean, " + Rule.number(mean),
+                        times + " times the mean, " + Shortest.text(mean),
                         "Beyond, its values are too close or too far apart for numbers of 16 digits.",
                         "Check the units of both."));
     }

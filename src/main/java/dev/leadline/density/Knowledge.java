@@ -2,9 +2,9 @@ package dev.leadline.density;
 
 import static dev.leadline.density.Rule.between;
 import static dev.leadline.density.Rule.finite;
-import static dev.leadline.density.Rule.number;
 import static dev.leadline.density.Rule.positive;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
@@ -41,8 +41,8 @@ public final class Knowledge {
                             "uniform",
                             parameters("from", v[0], "to", v[1]),
                             "between %s and %s, nothing more is known: uniform (%s6.4.2)",
-                            number(v[0]),
-                            number(v[1]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
                             GUIDE)),
             new Knowledge(
                     "rough-limits",
@@ -55,9 +55,9 @@ public final class Knowledge {
                             "curvilinear-trapezoid",
                             parameters("from", v[0], "to", v[1], "inexact", v[2]),
                             "between about %s and %s, each limit known to ±%s: curvilinear trapezoid (%s6.4.3)",
-                            number(v[0]),
-                            number(v[1]),
-                            number(v[2]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
+                            Shortest.text(v[2]),
                             GUIDE)),
             new Knowledge(
                     "likely",
@@ -67,9 +67,9 @@ public final class Knowledge {
                             "triangular",
                             parameters("from", v[0], "mode", v[1], "to", v[2]),
                             "between %s and %s, most likely %s: triangular (common practice)",
-                            number(v[0]),
-                            number(v[2]),
-                            number(v[1]))),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[2]),
+                            Shortest.text(v[1]))),
             new Knowledge(
                     "judged",
                     "three judged points, the middle one well founded",
@@ -78,9 +78,9 @@ public final class Knowledge {
                             "pert",
                             parameters("from", v[0], "mode", v[1], "to", v[2]),
                             "judged least %s, most likely %s, greatest %s: beta by three points (common practice)",
-                            number(v[0]),
-                            number(v[1]),
-                            number(v[2]))),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
+                            Shortest.text(v[2]))),
             new Knowledge(
                     "swing",
                     "it swings to and fro between limits like a sine",
@@ -89,8 +89,8 @@ public final class Knowledge {
                             "arcsine",
                             parameters("from", v[0], "to", v[1]),
                             "swings like a sine between %s and %s, phase unknown: arcsine (%s6.4.6)",
-                            number(v[0]),
-                            number(v[1]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
                             GUIDE)),
             new Knowledge(
                     "mean-and-sd",
@@ -100,8 +100,8 @@ public final class Knowledge {
                             "normal",
                             parameters("mean", v[0], "sd", v[1]),
                             "best estimate %s with standard uncertainty %s: normal (%s6.4.7)",
-                            number(v[0]),
-                            number(v[1]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
                             GUIDE)),
             new Knowledge(
                     "positive-mean-and-sd",
@@ -111,8 +111,8 @@ public final class Knowledge {
                             "lognormal",
                             parameters("mean", v[0], "sd", v[1]),
                             "positive, mean %s, standard deviation %s: lognormal (common practice)",
-                            number(v[0]),
-                            number(v[1]))),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]))),
             new Knowledge(
                     "positive-mean",
                     "nothing but the mean of a positive quantity",
@@ -121,7 +121,7 @@ public final class Knowledge {
                             "exponential",
                             parameters("mean", v[0]),
                             "positive, best estimate %s, nothing more is known: exponential (%s6.4.10)",
-                            number(v[0]),
+                            Shortest.text(v[0]),
                             GUIDE)),
             new Knowledge(
                     "two-quantiles",
@@ -131,10 +131,10 @@ public final class Knowledge {
                             "normal",
                             parameters(percent(v[1]), v[0], percent(v[3]), v[2]),
                             "%s %% of the values below %s, %s %% below %s: normal (common practice)",
-                            number(v[1]),
-                            number(v[0]),
-                            number(v[3]),
-                            number(v[2]))),
+                            Shortest.text(v[1]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[3]),
+                            Shortest.text(v[2]))),
             new Knowledge(
                     "positive-quantiles",
                     "two values of a positive quantity, each with the chance of a smaller one",
@@ -145,10 +145,10 @@ public final class Knowledge {
                             "lognormal",
                             parameters(percent(v[1]), v[0], percent(v[3]), v[2]),
                             "positive, %s %% of the values below %s, %s %% below %s: lognormal (common practice)",
-                            number(v[1]),
-                            number(v[0]),
-                            number(v[3]),
-                            number(v[2]))),
+                            Shortest.text(v[1]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[3]),
+                            Shortest.text(v[2]))),
             new Knowledge(
                     "readings",
                     "repeated readings: their number, mean and standard deviation",
@@ -163,10 +163,10 @@ public final class Knowledge {
                             "student",
                             parameters("dof", v[0] - 1, "location", v[1], "scale", v[2] / Math.sqrt(v[0])),
                             "mean of %s readings %s, standard deviation of one %s: Student's t with %s degrees of freedom (%s6.4.9.2)",
-                            number(v[0]),
-                            number(v[1]),
-                            number(v[2]),
-                            number(v[0] - 1),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
+                            Shortest.text(v[2]),
+                            Shortest.text(v[0] - 1),
                             GUIDE)),
             new Knowledge(
                     "certificate",
@@ -179,9 +179,9 @@ public final class Knowledge {
                             "normal",
                             parameters("mean", v[0], "sd", v[1] / v[2]),
                             "certificate: %s, U = %s, k = %s: normal (%s6.4.7)",
-                            number(v[0]),
-                            number(v[1]),
-                            number(v[2]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
+                            Shortest.text(v[2]),
                             GUIDE)),
             new Knowledge(
                     "certificate-dof",
@@ -195,10 +195,10 @@ public final class Knowledge {
                             "student",
                             parameters("dof", v[3], "location", v[0], "scale", v[1] / v[2]),
                             "certificate: %s, U = %s, k = %s, %s degrees of freedom: Student's t (%s6.4.9.7)",
-                            number(v[0]),
-                            number(v[1]),
-                            number(v[2]),
-                            number(v[3]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
+                            Shortest.text(v[2]),
+                            Shortest.text(v[3]),
                             GUIDE)),
             new Knowledge(
                     "count",
@@ -213,8 +213,8 @@ public final class Knowledge {
                             "gamma",
                             parameters("shape", v[0] + 1, "scale", 1 / v[1]),
                             "%s events counted over %s: gamma for their rate (%s6.4.11)",
-                            number(v[0]),
-                            number(v[1]),
+                            Shortest.text(v[0]),
+                            Shortest.text(v[1]),
                             GUIDE)),
             new Knowledge(
                     "chance",
@@ -224,7 +224,7 @@ public final class Knowledge {
                             "bernoulli",
                             parameters("probability", v[0]),
                             "happens with probability %s: 1 if it does, else 0",
-                            number(v[0]))));
+                            Shortest.text(v[0]))));
 
     private final String word;
     private final String title;
@@ -324,7 +324,7 @@ public final class Knowledge {
     }
 
     private static String percent(double percentage) {
-        return "q" + number(percentage);
+        return "q" + Shortest.text(percentage);
     }
 
     private static SequencedMap<String, Double> parameters(Object... namesAndValues) {

@@ -6,6 +6,7 @@ import static dev.leadline.density.Search.Free.positive;
 import dev.leadline.density.Search.Free;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.numeric.Significant;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -67,7 +68,7 @@ final class Likelihoods {
 
         private static Sample above(Sample sample, double from) {
             if (!(sample.least() > from)) {
-                throw outside(sample.least(), "greater than " + Rule.number(from));
+                throw outside(sample.least(), "greater than " + Shortest.text(from));
             }
             return sample.mapped(x -> x - from);
         }
@@ -209,7 +210,7 @@ final class Likelihoods {
         }
         double[] above = Arrays.stream(sorted).filter(x -> x > threshold).toArray();
         if (Arrays.stream(above).distinct().limit(3).count() < 3) {
-            throw new Refusal(Problem.of("too few values exceed %s".formatted(Rule.number(threshold)))
+            throw new Refusal(Problem.of("too few values exceed %s".formatted(Shortest.text(threshold)))
                     .because("Its scale and shape need at least three different values.")
                     .tryThis("Give a lower location."));
         }
@@ -281,7 +282,7 @@ final class Likelihoods {
 
     private static double mean(Sample sample, double from) {
         if (!(sample.least() >= from)) {
-            throw outside(sample.least(), "at least " + Rule.number(from));
+            throw outside(sample.least(), "at least " + Shortest.text(from));
         }
         return sample.mean() - from;
     }
@@ -322,8 +323,8 @@ final class Likelihoods {
                             .formatted(
                                     Significant.text(s.least(), 6),
                                     Significant.text(s.most(), 6),
-                                    Rule.number(from),
-                                    Rule.number(to)))
+                                    Shortest.text(from),
+                                    Shortest.text(to)))
                     .because("The range of a beta density is given, not fitted.")
                     .tryThis("Write beta from=… to=…"));
         }

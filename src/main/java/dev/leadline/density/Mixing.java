@@ -2,6 +2,7 @@ package dev.leadline.density;
 
 import static dev.leadline.density.Rule.between;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Refusal;
 import java.util.Map;
 import java.util.OptionalDouble;
@@ -114,7 +115,7 @@ public sealed interface Mixing {
 
         @Override
         public String inWords() {
-            return "Student (dof " + Rule.number(dof) + ")";
+            return "Student (dof " + Shortest.text(dof) + ")";
         }
 
         @Override

@@ -2,6 +2,7 @@ package dev.leadline.density;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -54,9 +55,9 @@ public record Mixture(List<Part> parts) implements Shape {
         }
         double sum = parts.stream().mapToDouble(Part::weight).sum();
         if (problems.isEmpty() && Math.abs(sum - 1) > ROUNDING) {
-            problems.add(Problem.of("the weights add up to " + Rule.number(sum) + " but must add up to 1")
+            problems.add(Problem.of("the weights add up to " + Shortest.text(sum) + " but must add up to 1")
                     .because("A weight is the chance that a value comes from its part.")
-                    .tryThis("Divide each weight by " + Rule.number(sum) + "."));
+                    .tryThis("Divide each weight by " + Shortest.text(sum) + "."));
         }
         if (parts.stream().map(part -> part.density.isDiscrete()).distinct().count() > 1) {
             problems.add(Problem.of("a mixture has both discrete and continuous parts")

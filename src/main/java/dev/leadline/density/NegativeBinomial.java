@@ -6,6 +6,7 @@ import static dev.leadline.density.Rule.positive;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.GammaFunction;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import java.util.List;
@@ -86,9 +87,9 @@ public record NegativeBinomial(double size, double mean) implements WholeNumbers
         return mean <= LARGEST
                 ? List.of()
                 : List.of(Problem.of("size %s with probability %s is too extreme"
-                                .formatted(Rule.number(size), Rule.number(probability)))
+                                .formatted(Shortest.text(size), Shortest.text(probability)))
                         .because("They give the mean %s; it must be at most %s."
-                                .formatted(Rule.number(mean), Rule.number(LARGEST))));
+                                .formatted(Shortest.text(mean), Shortest.text(LARGEST))));
     }
 
     private static double sizeOf(double mean, double sd) {
@@ -100,7 +101,7 @@ public record NegativeBinomial(double size, double mean) implements WholeNumbers
             return List.of(Rule.problem(
                             "sd",
                             sd,
-                            "greater than the square root of the mean, " + Rule.number(Math.sqrt(mean)),
+                            "greater than the square root of the mean, " + Shortest.text(Math.sqrt(mean)),
                             "This density varies more than a Poisson number of the same mean.",
                             "For one that varies as much, take poisson; for less, binomial.")
                     .at(Place.of("sd")));
@@ -108,9 +109,10 @@ public record NegativeBinomial(double size, double mean) implements WholeNumbers
         double size = sizeOf(mean, sd);
         return size >= SMALLEST_SIZE && size <= LARGEST
                 ? List.of()
-                : List.of(Problem.of("mean %s with sd %s is too extreme".formatted(Rule.number(mean), Rule.number(sd)))
+                : List.of(Problem.of(
+                                "mean %s with sd %s is too extreme".formatted(Shortest.text(mean), Shortest.text(sd)))
                         .because("They give the size %s; it must be at least %s and at most %s."
-                                .formatted(Rule.number(size), Rule.number(SMALLEST_SIZE), Rule.number(LARGEST))));
+                                .formatted(Shortest.text(size), Shortest.text(SMALLEST_SIZE), Shortest.text(LARGEST))));
     }
 
     private double success() {

@@ -3,6 +3,7 @@ package dev.leadline.density;
 import static dev.leadline.density.Rule.finite;
 import static dev.leadline.density.Rule.positive;
 
+import dev.leadline.numeric.Shortest;
 import java.util.OptionalDouble;
 
 /// The normal density.
@@ -26,7 +27,9 @@ public record Normal(double mean, double sd) implements Scaled {
 
     private static final Entry BY_CV = Entry.of(v -> new Normal(v[0], Math.abs(v[0]) * v[1]), MEAN_OF_CV, Rule.cv())
             .and(v -> ENTRY.tooExtreme(
-                    "mean %s with cv %s".formatted(Rule.number(v[0]), Rule.number(v[1])), v[0], Math.abs(v[0]) * v[1]));
+                    "mean %s with cv %s".formatted(Shortest.text(v[0]), Shortest.text(v[1])),
+                    v[0],
+                    Math.abs(v[0]) * v[1]));
 
     static final Family FAMILY = new Described(
                     "normal",

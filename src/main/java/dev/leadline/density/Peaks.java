@@ -1,5 +1,6 @@
 package dev.leadline.density;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Refusal;
 import java.util.Arrays;
 import java.util.Comparator;
@@ -123,7 +124,7 @@ final class Peaks {
                 .filter(i -> relief.isBad(heights[i], Math.max(top, 0)) && counts.test(i))
                 .boxed()
                 .min(Comparator.comparing((Integer i) -> heights[i] == Double.NEGATIVE_INFINITY)
-                        .thenComparingInt(i -> Rule.number(points[i]).length()))
+                        .thenComparingInt(i -> Shortest.text(points[i]).length()))
                 .ifPresent(i -> {
                     throw new Refusal(relief.bad(points[i], heights[i]));
                 });

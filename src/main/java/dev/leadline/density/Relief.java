@@ -3,6 +3,7 @@ package dev.leadline.density;
 import dev.leadline.formula.Program;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -87,7 +88,7 @@ record Relief(Heights heights, String variable, boolean log) {
                     .because("It may grow without bound only towards an end of the range or a break.")
                     .tryThis("Add a break there; where only its numbers get too large, give its logarithm (log).");
         }
-        return about("density is " + Rule.number(height) + " at " + at(variable, x) + " but must not be below 0")
+        return about("density is " + Shortest.text(height) + " at " + at(variable, x) + " but must not be below 0")
                 .because("A probability cannot be negative.")
                 .tryThis("Narrow the range to where it is positive, or write max(0, ...).");
     }
@@ -132,7 +133,7 @@ record Relief(Heights heights, String variable, boolean log) {
     }
 
     private static String at(String variable, double x) {
-        return variable + " = " + Rule.number(x);
+        return variable + " = " + Shortest.text(x);
     }
 
     private static Problem about(String primary) {

@@ -5,6 +5,7 @@ import static dev.leadline.density.Rule.positive;
 import dev.leadline.numeric.Bessel;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 import java.util.OptionalDouble;
@@ -48,7 +49,7 @@ public record Rice(double distance, double scale) implements Scaled {
                 : List.of(Rule.problem(
                         "distance",
                         distance,
-                        "at most 10000 times the scale, " + Rule.number(scale),
+                        "at most 10000 times the scale, " + Shortest.text(scale),
                         "Beyond, it is the normal density to less than 1e-4 of its spread.",
                         "Check the units of both, or use normal."));
     }

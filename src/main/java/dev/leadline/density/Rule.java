@@ -1,5 +1,6 @@
 package dev.leadline.density;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import java.util.Optional;
@@ -34,7 +35,7 @@ record Rule(
 
     /// @param why why these limits
     static Rule between(double least, double most, String name, String use, String why) {
-        String words = "at least " + number(least) + " and at most " + number(most);
+        String words = "at least " + Shortest.text(least) + " and at most " + Shortest.text(most);
         return new Rule(name, use, words, v -> v >= least && v <= most, why, "", OptionalDouble.empty());
     }
 
@@ -46,7 +47,7 @@ record Rule(
 
     /// @param why why these limits
     static Rule whole(double least, double most, String name, String use, String why) {
-        String words = "a whole number, at least " + number(least) + " and at most " + number(most);
+        String words = "a whole number, at least " + Shortest.text(least) + " and at most " + Shortest.text(most);
         return new Rule(
                 name, use, words, v -> v >= least && v <= most && v == Math.rint(v), why, "", OptionalDouble.empty());
     }
@@ -60,7 +61,8 @@ record Rule(
     }
 
     Parameter parameter() {
-        String rule = otherwise.isPresent() ? words + "; " + number(otherwise.getAsDouble()) + " if left out" : words;
+        String rule =
+                otherwise.isPresent() ? words + "; " + Shortest.text(otherwise.getAsDouble()) + " if left out" : words;
         return new Parameter(name, rule, otherwise.isPresent(), use);
     }
 
@@ -74,20 +76,13 @@ record Rule(
 
     /// The sentence of every refused value.
     static Problem problem(String name, double value, String words, String why, String hint) {
-        var said = Problem.of(name + " is " + number(value) + " but must be " + words)
+        var said = Problem.of(name + " is " + Shortest.text(value) + " but must be " + words)
                 .at(Place.of(name));
         var explained = why.isEmpty() ? said : said.because(why);
         return hint.isEmpty() ? explained : explained.tryThis(hint);
     }
 
     static String meanWithSd(double mean, double sd) {
-        return "mean " + number(mean) + " with sd " + number(sd);
-    }
-
-    /// A number as a person writes it: no `.0` behind a whole number.
-    static String number(double value) {
-        return value == Math.rint(value) && Math.abs(value) < 1e15
-                ? Long.toString((long) value)
-                : Double.toString(value).replace("Infinity", "∞").replace('E', 'e');
+        return "mean " + Shortest.text(mean) + " with sd " + Shortest.text(sd);
     }
 }

@@ -1,6 +1,7 @@
 package dev.leadline.density;
 
 import dev.leadline.numeric.Power;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -67,7 +68,7 @@ public record Smoothed(Density standard, double location, double bandwidth) impl
         double reach = 0.5 * most - 0.5 * least + Bumps.REACH * bandwidth;
         if (!(reach < Double.MAX_VALUE / 2)) {
             throw new Refusal(
-                    Problem.of("values smoothed with bandwidth %s reach too far".formatted(Rule.number(bandwidth)))
+                    Problem.of("values smoothed with bandwidth %s reach too far".formatted(Shortest.text(bandwidth)))
                             .because("They would exceed half the largest number there is, 1.8e308.")
                             .tryThis("Check the unit of the values, or take a smaller bandwidth.")
                             .at(Place.of(BANDWIDTH)));
@@ -82,7 +83,7 @@ public record Smoothed(Density standard, double location, double bandwidth) impl
     }
 
     private static Refusal tooNarrow(double bandwidth) {
-        return new Refusal(Problem.of("bandwidth %s is too small for these values".formatted(Rule.number(bandwidth)))
+        return new Refusal(Problem.of("bandwidth %s is too small for these values".formatted(Shortest.text(bandwidth)))
                 .because("The values lie so many bandwidths apart that nothing is smoothed.")
                 .tryThis("Take a larger one, or draw the values themselves (empirical).")
                 .at(Place.of(BANDWIDTH)));
@@ -95,7 +96,7 @@ public record Smoothed(Density standard, double location, double bandwidth) impl
                     .tryThis("Draw the values themselves (empirical): with so many, smoothing changes little."));
         }
         if (Arrays.stream(values).distinct().limit(2).count() < 2) {
-            throw new Refusal(Problem.of("all values are the same, %s".formatted(Rule.number(values[0])))
+            throw new Refusal(Problem.of("all values are the same, %s".formatted(Shortest.text(values[0])))
                     .because("Their standard deviation is 0; there is nothing to smooth.")
                     .tryThis("For a fixed value use a constant."));
         }

@@ -3,6 +3,7 @@ package dev.leadline.density;
 import static dev.leadline.density.Rule.between;
 import static dev.leadline.density.Rule.finite;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.List;
@@ -71,7 +72,7 @@ public record Trapezoidal(double from, double flatFrom, double flatTo, double to
             problems.add(Rule.problem(
                     name,
                     value,
-                    "between " + low + ", " + Rule.number(least) + ", and to, " + Rule.number(to),
+                    "between " + low + ", " + Shortest.text(least) + ", and to, " + Shortest.text(to),
                     "The top lies within the range.",
                     ""));
         }

@@ -2,6 +2,7 @@ package dev.leadline.density;
 
 import static dev.leadline.density.Rule.finite;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.ArrayList;
 import java.util.List;
@@ -32,7 +33,7 @@ public record Triangular(double from, double mode, double to) implements Straigh
             problems.add(Rule.problem(
                     "mode",
                     mode,
-                    "between from, " + Rule.number(from) + ", and to, " + Rule.number(to),
+                    "between from, " + Shortest.text(from) + ", and to, " + Shortest.text(to),
                     "The most likely value lies within the range.",
                     ""));
         }

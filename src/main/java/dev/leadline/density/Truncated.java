@@ -1,6 +1,7 @@
 package dev.leadline.density;
 
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.numeric.Significant;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -54,12 +55,12 @@ public final class Truncated implements Shape {
                 ? new Truncated(density, Atoms.from(density, low), Atoms.upTo(density, high))
                 : new Truncated(density, low, high);
         if (!(truncated.mass >= LEAST_MASS)) {
-            throw new Refusal(Problem.of(
-                            "the interval from %s to %s keeps nothing".formatted(Rule.number(low), Rule.number(high)))
+            throw new Refusal(Problem.of("the interval from %s to %s keeps nothing"
+                            .formatted(Shortest.text(low), Shortest.text(high)))
                     .because(
                             truncated.mass > 0
                                     ? "The chance of a value in it is %s; it must be at least %s, or draws lose digits."
-                                            .formatted(Significant.text(truncated.mass, 3), Rule.number(LEAST_MASS))
+                                            .formatted(Significant.text(truncated.mass, 3), Shortest.text(LEAST_MASS))
                                     : "The chance of a value in it is 0.")
                     .tryThis("Check the unit of the ends, or take a wider interval."));
         }
@@ -81,7 +82,7 @@ public final class Truncated implements Shape {
             return List.of(Rule.problem(
                     "the upper end",
                     high,
-                    "greater than the lower one, " + Rule.number(low),
+                    "greater than the lower one, " + Shortest.text(low),
                     low == high ? "The interval would be a single point." : "The interval would be empty.",
                     low == high ? "For a fixed value use a constant." : "Swap the two ends."));
         }
@@ -91,9 +92,9 @@ public final class Truncated implements Shape {
                 : high <= support.low() || low >= support.high();
         return isMissed
                 ? List.of(Problem.of("the interval from %s to %s misses all values of the density"
-                                .formatted(Rule.number(low), Rule.number(high)))
+                                .formatted(Shortest.text(low), Shortest.text(high)))
                         .because("They lie between %s and %s."
-                                .formatted(Rule.number(support.low()), Rule.number(support.high())))
+                                .formatted(Shortest.text(support.low()), Shortest.text(support.high())))
                         .tryThis("Check the unit of the ends."))
                 : List.of();
     }

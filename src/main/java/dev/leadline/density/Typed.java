@@ -3,6 +3,7 @@ package dev.leadline.density;
 import dev.leadline.formula.Program;
 import dev.leadline.formula.Reader;
 import dev.leadline.formula.Working;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -110,7 +111,7 @@ public record Typed(Integrated density, List<Problem> notes) {
                 problems.add(Rule.problem(
                         path,
                         x,
-                        "between from, " + Rule.number(text.from()) + ", and to, " + Rule.number(text.to()),
+                        "between from, " + Shortest.text(text.from()) + ", and to, " + Shortest.text(text.to()),
                         "A break lies inside the range; its ends need none.",
                         ""));
             } else if (i > 0 && !(x > text.breaks().get(i - 1))) {
@@ -118,7 +119,7 @@ public record Typed(Integrated density, List<Problem> notes) {
                         path,
                         x,
                         "greater than the one before, "
-                                + Rule.number(text.breaks().get(i - 1)),
+                                + Shortest.text(text.breaks().get(i - 1)),
                         "Breaks stand in rising order, each once.",
                         ""));
             }
@@ -174,6 +175,6 @@ public record Typed(Integrated density, List<Problem> notes) {
 
     /// A place found by halving, to ten digits.
     private static String shown(double x) {
-        return Rule.number(new BigDecimal(x).round(new MathContext(10)).doubleValue());
+        return Shortest.text(new BigDecimal(x).round(new MathContext(10)).doubleValue());
     }
 }

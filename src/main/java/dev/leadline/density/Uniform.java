@@ -3,6 +3,7 @@ package dev.leadline.density;
 import static dev.leadline.density.Rule.finite;
 
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import java.util.List;
@@ -29,7 +30,7 @@ public record Uniform(double from, double to) implements Scaled {
             return List.of(Rule.problem(
                     high,
                     to,
-                    "greater than " + low + ", " + Rule.number(from),
+                    "greater than " + low + ", " + Shortest.text(from),
                     to == from ? "The range would be a single point." : "The range would be empty.",
                     to == from ? "For a fixed value use a constant." : ""));
         }

@@ -1,6 +1,7 @@
 package dev.leadline.density;
 
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -101,7 +102,7 @@ public final class ValueTable implements Discrete {
         }
         if (problems.isEmpty() && !(Math.abs(sum.value() - 1) <= NEAR_ONE)) {
             problems.add(Problem.of(
-                            "the probabilities add up to %s but must add up to 1".formatted(Rule.number(sum.value())))
+                            "the probabilities add up to %s but must add up to 1".formatted(Shortest.text(sum.value())))
                     .because("The table must say what happens in all cases.")
                     .tryThis("Divide each by their sum, or add the value that is missing.")
                     .at(Place.of("probabilities")));
@@ -237,6 +238,6 @@ public final class ValueTable implements Discrete {
     @Override
     public String toString() {
         return "ValueTable[%d values from %s to %s]"
-                .formatted(values.length, Rule.number(values[0]), Rule.number(values[values.length - 1]));
+                .formatted(values.length, Shortest.text(values[0]), Shortest.text(values[values.length - 1]));
     }
 }

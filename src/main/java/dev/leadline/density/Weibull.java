@@ -6,6 +6,7 @@ import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.List;
 
@@ -46,7 +47,7 @@ public record Weibull(double shape, double scale, double from) implements Scaled
 
     private static List<Problem> problems(double mean, double sd, double from) {
         if (!(mean > from)) {
-            String words = "greater than from, " + Rule.number(from);
+            String words = "greater than from, " + Shortest.text(from);
             return List.of(Rule.problem("mean", mean, words, "The mean lies above the least value.", ""));
         }
         double shape = shape(sd / (mean - from));

@@ -7,6 +7,7 @@ import dev.leadline.model.DensityDraft.Member;
 import dev.leadline.model.DensityDraft.Mixture;
 import dev.leadline.model.DensityDraft.Typed;
 import dev.leadline.model.DensityDraft.Values;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.numeric.Significant;
 import java.util.stream.Collectors;
 
@@ -69,10 +70,7 @@ public final class DensityWords {
     }
 
     private static String number(double value) {
-        if (Double.isInfinite(value)) {
-            return value < 0 ? "-∞" : "∞";
-        }
-        String text = Findings.number(value);
+        String text = Shortest.text(value);
         return text.length() <= LONGEST ? text : Significant.text(value, DIGITS);
     }
 }

@@ -11,6 +11,7 @@ import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.PairDraft;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
@@ -180,7 +181,7 @@ final class Dependences {
             return true;
         }
         Problem problem = Problem.of(
-                "%s is %s but must be between -1 and 1".formatted(pair.measure(), Findings.number(pair.value())));
+                "%s is %s but must be between -1 and 1".formatted(pair.measure(), Shortest.text(pair.value())));
         findings.add(
                 path + "." + pair.measure(),
                 Math.abs(pair.value()) == 1
@@ -254,7 +255,7 @@ final class Dependences {
                     "%s is %s but must be between %s and %s"
                             .formatted(
                                     pair.measure().word(),
-                                    Findings.number(pair.target()),
+                                    Shortest.text(pair.target()),
                                     rounded(least, RoundingMode.CEILING),
                                     rounded(most, RoundingMode.FLOOR)),
                     "With densities of such shapes the values cannot be correlated more strongly.",
@@ -293,7 +294,7 @@ final class Dependences {
                                 repair.measure().word(),
                                 names.get(repair.one()),
                                 names.get(repair.other()),
-                                Findings.number(repair.from()),
+                                Shortest.text(repair.from()),
                                 rounded(repair.to(), RoundingMode.HALF_EVEN)))
                 .collect(Collectors.joining(", "));
         return repairs.size() <= MOST_NAMED ? largest : largest + ", others less";
@@ -302,7 +303,7 @@ final class Dependences {
     private static String rounded(double correlation, RoundingMode mode) {
         return Double.isNaN(correlation)
                 ? "not a number"
-                : Findings.number(
+                : Shortest.text(
                         new BigDecimal(correlation).setScale(PLACES, mode).doubleValue());
     }
 

@@ -3,7 +3,6 @@ package dev.leadline.model;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
-import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -12,9 +11,6 @@ import java.util.function.UnaryOperator;
 
 /// The problems found in a draft so far.
 final class Findings {
-
-    /// Digits of a whole number that are written out.
-    private static final int LONGEST_WHOLE = 15;
 
     private final List<Problem> problems = new ArrayList<>();
     private final List<Problem> notes = new ArrayList<>();
@@ -52,18 +48,6 @@ final class Findings {
                             problems.add(problem.in(place.apply(problem.place().path()))));
             return Optional.empty();
         }
-    }
-
-    /// A number as it stands in a project: no `.0` behind a whole one.
-    static String number(double value) {
-        if (!Double.isFinite(value)) {
-            return String.valueOf(value);
-        }
-        BigDecimal decimal = BigDecimal.valueOf(value).stripTrailingZeros();
-        boolean whole = decimal.scale() <= 0 && decimal.precision() - decimal.scale() <= LONGEST_WHOLE;
-        return whole
-                ? decimal.toPlainString()
-                : decimal.toString().replace("E+", "e").replace('E', 'e');
     }
 
     void refuseIfAny() {

@@ -5,6 +5,7 @@ import dev.leadline.density.Support;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Input.Role;
+import dev.leadline.numeric.Shortest;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -121,6 +122,6 @@ final class Inputs {
     }
 
     private static String number(double end) {
-        return Double.isInfinite(end) ? (end < 0 ? "-inf" : "inf") : Findings.number(end);
+        return Double.isInfinite(end) ? (end < 0 ? "-inf" : "inf") : Shortest.text(end);
     }
 }

@@ -1,6 +1,7 @@
 package dev.leadline.model;
 
 import dev.leadline.model.Draft.StopDraft;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
 import java.security.SecureRandom;
@@ -41,7 +42,7 @@ final class Plans {
             if (!(seconds > 0 && Double.isFinite(seconds))) {
                 findings.add(
                         "$.stop.seconds",
-                        "seconds is %s but must be greater than 0".formatted(Findings.number(seconds)),
+                        "seconds is %s but must be greater than 0".formatted(Shortest.text(seconds)),
                         "It is the time a lane may compute.");
             }
         });

@@ -4,6 +4,7 @@ import dev.leadline.density.Density;
 import dev.leadline.formula.Working;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
@@ -160,7 +161,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         if (!(error >= 0 && Double.isFinite(error))) {
             findings.add(
                     "$.reference.error",
-                    "error is %s but must be 0 or more".formatted(Findings.number(error)),
+                    "error is %s but must be 0 or more".formatted(Shortest.text(error)),
                     "It is the standard uncertainty of the reference value.");
         }
         return new Reference(draft.value(), error, draft.source());
@@ -171,7 +172,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         if (!(confidence > 0 && confidence < 1)) {
             findings.add(
                     "$.confidence",
-                    "confidence is %s but must be between 0 and 1".formatted(Findings.number(confidence)),
+                    "confidence is %s but must be between 0 and 1".formatted(Shortest.text(confidence)),
                     "It is the chance that the interval holds the value sought.",
                     "Write 0.95 for 95 %.");
         }
@@ -213,7 +214,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
             if (!(value > 0 && Double.isFinite(value))) {
                 findings.add(
                         "$.tolerance." + name,
-                        "%s is %s but must be greater than 0".formatted(name, Findings.number(value)),
+                        "%s is %s but must be greater than 0".formatted(name, Shortest.text(value)),
                         "The half-width of the interval is compared with it.");
             }
         });

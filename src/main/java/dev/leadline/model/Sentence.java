@@ -4,6 +4,7 @@ import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.numeric.Shortest;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
@@ -68,7 +69,7 @@ public record Sentence(List<Part> parts) {
             String unit = draft.asks().isEmpty()
                     ? ""
                     : UnitWords.after(draft.asks().getFirst().unit());
-            tolerance.absolute().ifPresent(width -> ends.add("±" + Findings.number(width) + unit));
+            tolerance.absolute().ifPresent(width -> ends.add("±" + Shortest.text(width) + unit));
             tolerance.relative().ifPresent(part -> ends.add("±" + percent(part)));
             return String.join(isBoth(tolerance) ? " and " : " or ", ends);
         });

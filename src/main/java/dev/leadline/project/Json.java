@@ -1,5 +1,6 @@
 package dev.leadline.project;
 
+import dev.leadline.numeric.Shortest;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.Collections;
@@ -60,7 +61,7 @@ public sealed interface Json {
 
     /// JSON has no number for what is not finite: `Infinity`, `-Infinity` and `NaN` become text.
     static Json of(double number) {
-        return Double.isFinite(number) ? new Number(JsonNumber.text(number)) : new Text(Double.toString(number));
+        return Double.isFinite(number) ? new Number(Shortest.text(number)) : new Text(Double.toString(number));
     }
 
     /// `null` for `NaN`, the number that does not exist.

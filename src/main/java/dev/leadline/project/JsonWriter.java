@@ -1,5 +1,6 @@
 package dev.leadline.project;
 
+import dev.leadline.numeric.Shortest;
 import java.util.Iterator;
 import java.util.Map;
 import java.util.TreeMap;
@@ -144,7 +145,7 @@ public final class JsonWriter {
             }
             case Json.Elements(var list) ->
                 Json.list(list.stream().map(JsonWriter::sorted).toList());
-            case Json.Number number -> new Json.Number(JsonNumber.canonical(number.value()));
+            case Json.Number number -> new Json.Number(Shortest.canonical(number.value()));
             case Json.Text _, Json.Flag _, Json.Null _ -> json;
         };
     }

@@ -149,7 +149,7 @@ class CompositesTest {
     @Test
     void saysHowLittleIsKept() {
         assertEquals(
-                "The chance of a value in it is 4.18e-284; it must be at least 1.0e-280, or draws lose digits.",
+                "The chance of a value in it is 4.18e-284; it must be at least 1e-280, or draws lose digits.",
                 why(NORMAL, 36, 40));
         assertEquals("The chance of a value in it is 0.", why(new Poisson(4), 2.2, 2.8));
     }

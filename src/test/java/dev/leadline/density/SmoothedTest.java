@@ -157,10 +157,10 @@ class SmoothedTest {
         refused("bandwidth is 0 but must be greater than 0", () -> Smoothed.of(0, 3, 4));
         refused("bandwidth is NaN but must be greater than 0", () -> Smoothed.of(Double.NaN, 3, 4));
         refused("bandwidth is ∞ but must be a finite number", () -> Smoothed.of(Double.POSITIVE_INFINITY, 3, 4));
-        refused("values smoothed with bandwidth 1.0e308 reach too far", () -> Smoothed.of(1e308, 3, 4));
+        refused("values smoothed with bandwidth 1e308 reach too far", () -> Smoothed.of(1e308, 3, 4));
         refused("values smoothed with bandwidth 2 reach too far", () -> Smoothed.of(2, -1e308, 1e308));
-        refused("bandwidth 1.0e-300 is too small for these values", () -> Smoothed.of(1e-300, 3, 4));
-        refused("bandwidth 1.0e-7 is too small for these values", () -> Smoothed.of(1e-7, waits(10_000)));
+        refused("bandwidth 1e-300 is too small for these values", () -> Smoothed.of(1e-300, 3, 4));
+        refused("bandwidth 1e-7 is too small for these values", () -> Smoothed.of(1e-7, waits(10_000)));
     }
 
     private static void refused(String primary, org.junit.jupiter.api.function.Executable of) {

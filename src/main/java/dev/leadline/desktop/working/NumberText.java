@@ -1,5 +1,6 @@
 package dev.leadline.desktop.working;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
 import java.util.OptionalDouble;
 import java.util.regex.Pattern;
@@ -31,19 +32,7 @@ public final class NumberText {
         if (Double.isInfinite(value)) {
             return value > 0 ? "inf" : "-inf";
         }
-        String text = Double.toString(value);
-        int e = text.indexOf('E');
-        String digits = e < 0 ? text : text.substring(0, e);
-        if (digits.endsWith(".0")) {
-            digits = digits.substring(0, digits.length() - 2);
-        }
-        if (e < 0) {
-            return digits;
-        }
-        int power = Integer.parseInt(text.substring(e + 1));
-        return power >= 0 && power <= 15 || power == -4
-                ? new java.math.BigDecimal(text).stripTrailingZeros().toPlainString()
-                : digits + "e" + power;
+        return Shortest.text(value);
     }
 
     /// What to say about a text that is no number.

@@ -1,22 +1,29 @@
-package dev.leadline.project;
+package dev.leadline.numeric;
 
 import java.math.BigDecimal;
 
-/// Finite doubles as decimal text: the fewest digits that read back as the same double, and of those the closest.
+/// Doubles as decimal text: the fewest digits that read back as the same double, and of those the closest.
 ///
 /// `Double.toString` gives such digits but never fewer than two (4.9E-324, where 5e-324 reads back as the same double);
 /// the second digit is dropped here where one is enough.
-final class JsonNumber {
+public final class Shortest {
 
-    private JsonNumber() {}
+    private Shortest() {}
 
-    /// For files and messages: `1e-5` and `1e16` take an exponent, `0.0001` and `1200000` do not.
-    static String text(double x) {
-        return write(x, -4, 16);
+    /// As people write numbers, in files, fields and messages: `1e-5` and `1e15` take an exponent, `0.0001` and
+    /// `1200000` do not; `∞`, `-∞` and `NaN` where it is none.
+    public static String text(double x) {
+        if (Double.isInfinite(x)) {
+            return x < 0 ? "-∞" : "∞";
+        }
+        return Double.isNaN(x) ? "NaN" : write(x, -4, 15);
     }
 
     /// As ECMAScript writes numbers, which RFC 8785 §3.2.2.3 asks for: `0.000001`, `1e-7`, `1e+21`, `0` for -0.
-    static String canonical(double x) {
+    public static String canonical(double x) {
+        if (!Double.isFinite(x)) {
+            throw new IllegalArgumentException("JSON has no number " + x);
+        }
         String text = write(x == 0 ? 0.0 : x, -6, 21);
         int e = text.indexOf('e');
         return e < 0 || text.charAt(e + 1) == '-' ? text : text.substring(0, e) + "e+" + text.substring(e + 1);
@@ -25,9 +32,6 @@ final class JsonNumber {
     /// @param least smallest decimal exponent that is written without `e`
     /// @param below exponents from here on take an `e`
     private static String write(double x, int least, int below) {
-        if (!Double.isFinite(x)) {
-            throw new IllegalArgumentException("JSON has no number " + x);
-        }
         if (x == 0) {
             return 1 / x < 0 ? "-0" : "0";
         }
