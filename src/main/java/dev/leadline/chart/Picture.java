@@ -65,8 +65,8 @@ public final class Picture {
         this.width = Math.max(width, LEAST_WIDTH);
         this.height = Math.max(height, LEAST_HEIGHT);
         this.font = Typeface.sans(this.width < 560 ? 11 : 12);
-        this.draws = view.draws().orElseGet(() -> Fit.draws(settling, view.logDraws()));
-        this.values = view.values().orElseGet(() -> Fit.values(settling));
+        this.draws = view.draws().orElseGet(() -> Framing.draws(settling, view.logDraws()));
+        this.values = view.values().orElseGet(() -> Framing.values(settling));
 
         int line = font.getSize() + 8;
         int bottom = 2 * line + 6;
@@ -201,7 +201,7 @@ public final class Picture {
     private Range drawsBetween(double left, double right) {
         double low = drawsAt(left);
         double high = drawsAt(right);
-        double most = Fit.draws(settling, view.logDraws()).high();
+        double most = Framing.draws(settling, view.logDraws()).high();
         boolean sensible = view.logDraws()
                 ? low >= .1 && high <= 30 * most && high >= 1.01 * low
                 : low >= -most && high <= 3 * most && high - low >= 1 && high - low >= 1e-9 * high;
@@ -211,10 +211,10 @@ public final class Picture {
     private Range valuesBetween(double top, double bottom) {
         double low = valueAt(bottom);
         double high = valueAt(top);
-        var most = Fit.outermost(settling);
+        var most = Framing.outermost(settling);
         boolean sensible = most.contains(low)
                 && most.contains(high)
-                && high - low >= Fit.LEAST
+                && high - low >= Framing.LEAST
                 && high - low >= 1e-11 * Math.max(Math.abs(low), Math.abs(high));
         return sensible ? new Range(low, high) : values;
     }

@@ -13,7 +13,7 @@
 ///   [Caption][dev.leadline.chart.Caption] inside for people who cannot see it.
 /// - **An input's row** shows a [DensitySketch][dev.leadline.chart.DensitySketch].
 ///
-/// What ranges a picture chooses by itself is told in `Fit`, how lanes look in
+/// What ranges a picture chooses by itself is told in `Framing`, how lanes look in
 /// [LaneLook][dev.leadline.chart.LaneLook], what is named along an axis in `Ticks`. The charting library gives axes
 /// and grid; bands, lines, markers and key are drawn here. Layout does not depend on where a picture is drawn, so
 /// screen, image and vector file agree.

@@ -34,7 +34,7 @@ final class CheckCommand implements Command {
             console.out().print(ProblemsJson.none(question, achieved));
         } else {
             console.out().println(Sentence.of(open.project().draft()).text());
-            Ties.lines(question, achieved).forEach(console.out()::println);
+            TiedText.lines(question, achieved).forEach(console.out()::println);
             console.out().println("No problem found.");
         }
         return Commands.DONE;

@@ -49,7 +49,7 @@ final class RunText {
             line(console.bold(project.question().title().strip()));
         }
         wrapped("", Sentence.of(project.draft()).text());
-        Ties.lines(project.question(), achieved).forEach(this::line);
+        TiedText.lines(project.question(), achieved).forEach(this::line);
         state.lanes().forEach(this::lane);
         state.comparisons().forEach(this::comparison);
         line("");

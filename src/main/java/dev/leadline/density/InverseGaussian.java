@@ -146,23 +146,20 @@ public record InverseGaussian(double mean, double shape) implements Scaled {
 
         @Override
         public double inner(double p) {
-            double w =
-                    TailRoot.of(w1 -> cdf(Exp.exp(w1)), this::slope, p, least(), 8 - least(), like(NORMAL.quantile(p)));
+            double w = logarithm(NORMAL.quantile(p)).rising(w1 -> cdf(Exp.exp(w1)), this::slope, p);
             double z = Exp.exp(w);
             return z - (cdf(z) - p) / pdf(z);
         }
 
         @Override
         public double upperInner(double q) {
-            double w = TailRoot.of(
-                    w1 -> survival(Exp.exp(w1)),
-                    w1 -> -slope(w1),
-                    q,
-                    least(),
-                    8 - least(),
-                    like(NORMAL.upperQuantile(q)));
+            double w = logarithm(NORMAL.upperQuantile(q)).falling(w1 -> survival(Exp.exp(w1)), w1 -> -slope(w1), q);
             double z = Exp.exp(w);
             return z + (survival(z) - q) / pdf(z);
+        }
+
+        private Root logarithm(double normal) {
+            return Root.between(least(), 8 - least()).from(like(normal)).roughly();
         }
 
         /// Below `exp` of this there is less mass than any double.

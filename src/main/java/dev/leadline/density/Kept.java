@@ -46,6 +46,8 @@ record Kept(Density of, double low, double high, double below, double above) {
         }
         double beyond =
                 below <= 0.5 ? of.quantile(below * (1 + 2 * NARROW)) : of.upperQuantile(above * (1 - 2 * NARROW));
-        return Root.rising(this::mass, of::pdf, mass, low, Math.clamp(beyond, low, high), low + mass / of.pdf(low));
+        return Root.between(low, Math.clamp(beyond, low, high))
+                .from(low + mass / of.pdf(low))
+                .rising(this::mass, of::pdf, mass);
     }
 }

@@ -121,7 +121,7 @@ public record Mixture(List<Part> parts) implements Shape {
         if (ends.low() == ends.high()) {
             return ends.low();
         }
-        double x = Root.rising(this::cdf, this::slope, p, ends.low(), ends.high());
+        double x = Root.between(ends.low(), ends.high()).rising(this::cdf, this::slope, p);
         return isDiscrete() ? value(x) : x;
     }
 
@@ -131,9 +131,10 @@ public record Mixture(List<Part> parts) implements Shape {
         if (ends.low() == ends.high()) {
             return ends.low();
         }
+        var root = Root.between(ends.low(), ends.high());
         return isDiscrete()
-                ? value(Root.rising(x -> survival(x) <= q ? 1 : 0, _ -> 0, 1, ends.low(), ends.high()))
-                : -Root.rising(x -> survival(-x), x -> pdf(-x), q, -ends.high(), -ends.low());
+                ? value(root.rising(x -> survival(x) <= q ? 1 : 0, _ -> 0, 1))
+                : root.falling(this::survival, x -> -pdf(x), q);
     }
 
     /// The value of a part at `x`, or just below.

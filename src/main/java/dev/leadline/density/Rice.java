@@ -122,19 +122,18 @@ public record Rice(double distance, double scale) implements Scaled {
             double small = 0.5 * Log.log(2 * p) + 0.25 * distance * distance;
             double normal = middle() + NORMAL.quantile(p);
             boolean isSmall = small < -0.5 && small + Log.log(distance) < 0 || normal < 0.2;
-            return TailRoot.of(
-                    w -> cdf(Exp.exp(w)),
-                    this::slope,
-                    p,
-                    Math.min(-1, small - 10) - 400,
-                    Log.log(middle() + 40),
-                    isSmall ? Math.min(small, 0) : Log.log(normal));
+            return Root.between(Math.min(-1, small - 10) - 400, Log.log(middle() + 40))
+                    .from(isSmall ? Math.min(small, 0) : Log.log(normal))
+                    .roughly()
+                    .rising(w -> cdf(Exp.exp(w)), this::slope, p);
         }
 
         private double logUpperInner(double q) {
             double normal = Math.max(0.5, middle() + NORMAL.upperQuantile(q));
-            return TailRoot.of(
-                    w -> survival(Exp.exp(w)), w -> -slope(w), q, -400, Log.log(middle() + 40), Log.log(normal));
+            return Root.between(-400, Log.log(middle() + 40))
+                    .from(Log.log(normal))
+                    .roughly()
+                    .falling(w -> survival(Exp.exp(w)), w -> -slope(w), q);
         }
 
         /// Of the mass below `exp(w)`.

@@ -108,13 +108,10 @@ public record VonMises(double mean, double concentration) implements Ended {
             double most = Math.min(Math.PI, p / pdf(Math.PI));
             double sine = NORMAL.quantile(p) / (2 * Math.sqrt(concentration));
             double like = sine > -1 ? Math.PI + 2 * StrictMath.asin(sine) : most;
-            double w = TailRoot.of(
-                    w1 -> cdf(Exp.exp(w1) - Math.PI),
-                    w1 -> Exp.exp(w1) * pdf(Exp.exp(w1) - Math.PI),
-                    p,
-                    Log.log(p * integral) - 1e-9,
-                    Log.log(most) + 1e-9,
-                    Log.log(Math.min(like, most)));
+            double w = Root.between(Log.log(p * integral) - 1e-9, Log.log(most) + 1e-9)
+                    .from(Log.log(Math.min(like, most)))
+                    .roughly()
+                    .rising(w1 -> cdf(Exp.exp(w1) - Math.PI), w1 -> Exp.exp(w1) * pdf(Exp.exp(w1) - Math.PI), p);
             double z = Math.min(Exp.exp(w) - Math.PI, 0);
             return Math.max(z - (cdf(z) - p) / pdf(z), -Math.PI);
         }

@@ -180,8 +180,8 @@ final class Dependences {
         if (pair.value() > -1 && pair.value() < 1) {
             return true;
         }
-        Problem problem = Problem.of(
-                "%s is %s but must be between -1 and 1".formatted(pair.measure(), Shortest.text(pair.value())));
+        Problem problem = Problem.of("%s is %s but must be between -1 and 1, both excluded"
+                .formatted(pair.measure(), Shortest.text(pair.value())));
         findings.add(
                 path + "." + pair.measure(),
                 Math.abs(pair.value()) == 1

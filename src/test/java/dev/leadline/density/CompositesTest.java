@@ -334,9 +334,28 @@ class CompositesTest {
         }
     }
 
+    /// A mass that is no number has no side, and would end the search anywhere.
+    @Test
+    void aMassThatIsNotANumberIsAnError() {
+        var root = Root.between(0, 8).from(4);
+        var e = assertThrows(
+                ArithmeticException.class, () -> root.rising(x -> x == 4 ? Double.NaN : x / 8, _ -> 1 / 8.0, 0.25));
+        assertEquals("The mass at 4.0 is not a number.", e.getMessage());
+        assertThrows(ArithmeticException.class, () -> root.falling(_ -> Double.NaN, _ -> 1, 0.25));
+    }
+
+    /// The logarithm of a falling mass, to the step that leaves the rest to one of Newton's.
+    @Test
+    void aRootOfAFallingMass() {
+        var root = Root.between(0.5, 700);
+        assertEquals(
+                StrictMath.log(1e300), root.falling(x -> StrictMath.exp(-x), x -> -StrictMath.exp(-x), 1e-300), 1e-12);
+        assertEquals(2, root.roughly().falling(x -> 1 / (x * x * x), x -> -3 / (x * x * x * x), 0.125), 1e-12);
+    }
+
     /// The root of `x + 1`, whose slope is said to be infinite wherever it is asked.
     @Test
     void aSlopeMayBeInfinite() {
-        assertEquals(2, Root.rising(x -> x + 1, _ -> INFINITY, 3, -10, 1e300), 1e-15);
+        assertEquals(2, Root.between(-10, 1e300).rising(x -> x + 1, _ -> INFINITY, 3), 1e-15);
     }
 }

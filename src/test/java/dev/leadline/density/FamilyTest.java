@@ -77,7 +77,7 @@ class FamilyTest {
                 "gamma | shape 0 scale 1 | shape is 0 but must be at least 0.001 and at most 1000000",
                 "beta | alpha 1 beta 0.001 | beta is 0.001 but must be at least 0.01 and at most 1000000",
                 "beta | alpha 1 beta 1 from 1 | to is 1 but must be greater than from, 1",
-                "weibull | shape 0 scale -0.0 | shape is 0 but must be at least 0.01 and at most 1000000; scale is 0 but must be greater than 0",
+                "weibull | shape 0 scale -0.0 | shape is 0 but must be at least 0.01 and at most 1000000; scale is -0 but must be greater than 0",
                 "student | dof 0 | dof is 0 but must be at least 0.1 and at most 10000000000",
                 "student | dof 0.1 scale 1e200 | some draws of this density would exceed the largest number there is, 1.8e308",
                 "binomial | trials 2.5 probability .5 | trials is 2.5 but must be a whole number, at least 0 and at most 1000000000",

@@ -80,7 +80,7 @@ public final class InputsViewModel {
                 "$.inputs",
                 d -> Edits.dependence(
                         Edits.inputs(d, Edits.without(d.inputs(), i)),
-                        d.dependence().flatMap(tied -> Ties.without(tied, name))));
+                        d.dependence().flatMap(tied -> TiedEdits.without(tied, name))));
         opened.set(OptionalInt.empty());
     }
 
@@ -122,7 +122,7 @@ public final class InputsViewModel {
     /// @param before what was tied then
     private record Renaming(int input, String first, String now, Optional<DependenceDraft> before) {
         Optional<DependenceDraft> tied() {
-            return before.map(tied -> Ties.renamed(tied, first, now));
+            return before.map(tied -> TiedEdits.renamed(tied, first, now));
         }
     }
 

@@ -66,7 +66,7 @@ final class TiedViewModel {
 
     void add() {
         project.settle();
-        next().ifPresent(pair -> edit(PATH, tied -> Ties.with(tied, Edits.with(tied.pairs(), pair))));
+        next().ifPresent(pair -> edit(PATH, tied -> TiedEdits.with(tied, Edits.with(tied.pairs(), pair))));
     }
 
     void remove(int k) {
@@ -77,7 +77,7 @@ final class TiedViewModel {
                 d -> Edits.dependence(
                         d,
                         d.dependence()
-                                .map(tied -> Ties.with(tied, Edits.without(tied.pairs(), k)))
+                                .map(tied -> TiedEdits.with(tied, Edits.without(tied.pairs(), k)))
                                 .filter(tied -> !tied.pairs().isEmpty())));
     }
 
@@ -96,7 +96,7 @@ final class TiedViewModel {
 
     private void pair(int k, UnaryOperator<PairDraft> change) {
         project.settle();
-        edit(pairPath(k), tied -> Ties.with(tied, Edits.changed(tied.pairs(), k, change)));
+        edit(pairPath(k), tied -> TiedEdits.with(tied, Edits.changed(tied.pairs(), k, change)));
     }
 
     void value(int k, String text) {
@@ -107,7 +107,7 @@ final class TiedViewModel {
                 text,
                 (d, value) -> changed(
                         d,
-                        tied -> Ties.with(
+                        tied -> TiedEdits.with(
                                 tied,
                                 Edits.changed(
                                         tied.pairs(), k, p -> new PairDraft(p.one(), p.other(), p.measure(), value)))));

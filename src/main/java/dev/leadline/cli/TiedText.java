@@ -8,9 +8,9 @@ import java.io.StringWriter;
 import java.util.List;
 
 /// Tied inputs for people.
-final class Ties {
+final class TiedText {
 
-    private Ties() {}
+    private TiedText() {}
 
     /// A heading and a line for each pair; none where no inputs are tied.
     static List<String> lines(Question question, List<Achieved> achieved) {

@@ -6,8 +6,8 @@ import java.util.List;
 import java.util.Optional;
 
 /// What ties inputs, with one thing changed.
-final class Ties {
-    private Ties() {}
+final class TiedEdits {
+    private TiedEdits() {}
 
     static DependenceDraft with(DependenceDraft tied, List<PairDraft> pairs) {
         return new DependenceDraft(tied.copula(), tied.dof(), tied.repair(), pairs);

@@ -16,14 +16,14 @@ import java.util.Locale;
 /// Nanoseconds of processor time that tying inputs costs per draw, on one thread; random numbers and the densities of
 /// the inputs not included.
 ///
-/// `Ties FILE` writes its table to the file, as Markdown.
-public final class Ties {
+/// `TieCost FILE` writes its table to the file, as Markdown.
+public final class TieCost {
     private static final int BLOCK = 1024;
     private static final int BLOCKS = 512;
     private static final int ROUNDS = 31;
     private static final int[] INPUTS = {2, 4, 10};
 
-    private Ties() {}
+    private TieCost() {}
 
     public static void main(String[] args) throws IOException {
         var text = new StringBuilder("""

@@ -17,7 +17,7 @@ import java.util.stream.DoubleStream;
 /// The strip of the tolerance and the reference value are taken in where that does not more than double the height;
 /// a reference value farther away is named in the key instead. The range is then widened to half steps of the axis,
 /// so that it does not tremble with every new mark, but not far below 0 where nothing is negative.
-final class Fit {
+final class Framing {
     private static final double LONGER = 5;
     private static final double DECADES = 1e4;
 
@@ -27,7 +27,7 @@ final class Fit {
     /// A length below which nothing can be told apart.
     static final double LEAST = 1e-300;
 
-    private Fit() {}
+    private Framing() {}
 
     static Range draws(Settling settling, boolean log) {
         var last = settling.lanes().stream()
@@ -50,9 +50,12 @@ final class Fit {
     }
 
     static Range values(Settling settling) {
-        var seen = hull(settling.lanes().stream().flatMapToDouble(Fit::laterPart));
+        var seen = hull(settling.lanes().stream().flatMapToDouble(Framing::laterPart));
         if (seen.isEmpty()) {
-            return settling.reference().flatMap(Fit::about).map(Fit::roomy).orElse(new Range(0, 1));
+            return settling.reference()
+                    .flatMap(Framing::about)
+                    .map(Framing::roomy)
+                    .orElse(new Range(0, 1));
         }
         var reference = settling.reference().map(r -> List.of(r.value() - r.error(), r.value() + r.error()));
         var range = seen.get();
@@ -77,7 +80,7 @@ final class Fit {
     static Range outermost(Settling settling) {
         var all = hull(settling.lanes().stream()
                         .flatMap(lane -> lane.points().stream())
-                        .flatMapToDouble(Fit::valuesOf))
+                        .flatMapToDouble(Framing::valuesOf))
                 .map(values(settling)::with)
                 .orElseGet(() -> values(settling));
         double more = Math.min(4.5 * all.length(), MOST);
@@ -93,7 +96,7 @@ final class Fit {
 
     private static DoubleStream laterPart(Series lane) {
         var points = lane.points();
-        return points.subList(start(points), points.size()).stream().flatMapToDouble(Fit::valuesOf);
+        return points.subList(start(points), points.size()).stream().flatMapToDouble(Framing::valuesOf);
     }
 
     private static DoubleStream valuesOf(Point point) {
