@@ -54,7 +54,7 @@ class SentenceTest {
                 """);
         assertEquals(
                 "The mean of x in m, and the chance that x > 0.07 per year, with 1 input,"
-                        + " to \u00b10.00002 m and \u00b17 % at 99.9 %.",
+                        + " to \u00b12e-5 m and \u00b17 % at 99.9 %.",
                 Sentence.of(draft).text());
     }
 }
