@@ -79,6 +79,7 @@ final class FamiliesCommand implements Command {
         } else {
             Family family = Catalogue.named(name);
             Density member = family.of(parameters(values));
+            family.notes(parameters(values)).forEach(note -> console.err().print(ProblemText.note(note)));
             if (json) {
                 console.out().print(FamiliesJson.of(family, Portrait.of(member)));
             } else {

@@ -1,9 +1,11 @@
 package dev.leadline.density;
 
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -19,6 +21,9 @@ import java.util.stream.Stream;
 ///
 /// @param quantiles the entry by two quantiles, where there is one
 record Described(String name, String use, List<Entry> ways, Optional<ByQuantiles> quantiles) implements Family {
+
+    /// From here on, a cv is more likely one in per cent than that of a density.
+    private static final double DOUBTFUL_CV = 3;
 
     /// Parameters by other names that are in use; the first of those that the family has.
     private static final Map<String, List<String>> ALSO_CALLED = Map.ofEntries(
@@ -57,6 +62,21 @@ record Described(String name, String use, List<Entry> ways, Optional<ByQuantiles
         return Stream.concat(
                         ways.stream().map(Entry::parameters), quantiles.stream().map(ByQuantiles::parameters))
                 .toList();
+    }
+
+    @Override
+    public List<Problem> notes(Map<String, Double> parameters) {
+        double cv = parameters.getOrDefault("cv", 0.0);
+        return cv > DOUBTFUL_CV
+                ? List.of(Problem.of("cv is %s: the standard deviation is %s times the mean"
+                                .formatted(Shortest.text(cv), Shortest.text(cv)))
+                        .because("cv is a fraction: %s for %s %%.".formatted(hundredth(cv), Shortest.text(cv)))
+                        .at(Place.of("cv")))
+                : List.of();
+    }
+
+    private static String hundredth(double percent) {
+        return Shortest.text(BigDecimal.valueOf(percent).movePointLeft(2).doubleValue());
     }
 
     @Override

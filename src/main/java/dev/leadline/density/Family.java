@@ -1,5 +1,6 @@
 package dev.leadline.density;
 
+import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.List;
 import java.util.Map;
@@ -14,6 +15,9 @@ public interface Family {
 
     /// What it is used for, in the trades' words.
     String use();
+
+    /// What is allowed but may surprise, at the path of its parameter.
+    List<Problem> notes(Map<String, Double> parameters);
 
     /// @throws Refusal with every problem found, each at the path of its parameter (`scale`), or at no path
     Density of(Map<String, Double> parameters);

@@ -5,6 +5,8 @@ import static dev.leadline.density.Rule.positive;
 
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.problem.Problem;
+import java.util.List;
 
 /// The Gumbel density for largest values: `cdf(x) = exp(-exp(-(x - location) / scale))`.
 ///
@@ -26,8 +28,14 @@ public record Gumbel(double location, double scale) implements Scaled {
             positive("sd", "standard deviation of the largest values", "The Gumbel density divides by it.")
                     .tryThis("For a fixed value use a constant."));
 
+    private static final Entry BY_CV = Entry.of(
+                    v -> ofMeanAndSd(v[0], Math.abs(v[0]) * v[1]),
+                    Rule.meanOfCv("mean of the largest values"),
+                    Rule.cv())
+            .and(v -> problems(v[0], v[1]));
+
     static final Family FAMILY = new Described(
-                    "gumbel", "largest value of a period: gusts, waves, floods, loads", ENTRY, BY_MEAN)
+                    "gumbel", "largest value of a period: gusts, waves, floods, loads", ENTRY, BY_MEAN, BY_CV)
             .enteredBy(ByQuantiles.ofLocationAndScale(v -> new Gumbel(v[0], v[1])));
 
     public Gumbel {
@@ -39,6 +47,11 @@ public record Gumbel(double location, double scale) implements Scaled {
         BY_MEAN.check(mean, sd);
         double scale = sd / Math.sqrt(Standard.VARIANCE);
         return new Gumbel(Math.fma(-Standard.EULER, scale, mean), scale);
+    }
+
+    private static List<Problem> problems(double mean, double cv) {
+        double scale = Math.abs(mean) * cv / Math.sqrt(Standard.VARIANCE);
+        return ENTRY.tooExtreme(Rule.meanWithCv(mean, cv), Math.fma(-Standard.EULER, scale, mean), scale);
     }
 
     @Override

@@ -3,9 +3,6 @@ package dev.leadline.density;
 import static dev.leadline.density.Rule.finite;
 import static dev.leadline.density.Rule.positive;
 
-import dev.leadline.numeric.Shortest;
-import java.util.OptionalDouble;
-
 /// The normal density.
 ///
 /// Error: relative 1e-13 in both tails (`DensityTablesTest`).
@@ -16,20 +13,9 @@ public record Normal(double mean, double sd) implements Scaled {
             positive("sd", "standard deviation", "The normal density divides by its standard deviation.")
                     .tryThis("For a fixed value use a constant."));
 
-    private static final Rule MEAN_OF_CV = new Rule(
-            "mean",
-            "middle value",
-            "a finite number other than 0",
-            v -> v != 0,
-            "The cv is a share of the mean.",
-            "Give sd instead of cv.",
-            OptionalDouble.empty());
-
-    private static final Entry BY_CV = Entry.of(v -> new Normal(v[0], Math.abs(v[0]) * v[1]), MEAN_OF_CV, Rule.cv())
-            .and(v -> ENTRY.tooExtreme(
-                    "mean %s with cv %s".formatted(Shortest.text(v[0]), Shortest.text(v[1])),
-                    v[0],
-                    Math.abs(v[0]) * v[1]));
+    private static final Entry BY_CV = Entry.of(
+                    v -> new Normal(v[0], Math.abs(v[0]) * v[1]), Rule.meanOfCv("middle value"), Rule.cv())
+            .and(v -> ENTRY.tooExtreme(Rule.meanWithCv(v[0], v[1]), v[0], Math.abs(v[0]) * v[1]));
 
     static final Family FAMILY = new Described(
                     "normal",

@@ -45,6 +45,18 @@ record Rule(
                 .tryThis("10 % is 0.1.");
     }
 
+    /// The mean that a cv is a share of.
+    static Rule meanOfCv(String use) {
+        return new Rule(
+                "mean",
+                use,
+                "a finite number other than 0",
+                v -> v != 0,
+                "The cv is a share of the mean.",
+                "Give sd instead of cv.",
+                OptionalDouble.empty());
+    }
+
     /// @param why why these limits
     static Rule whole(double least, double most, String name, String use, String why) {
         String words = "a whole number, at least " + Shortest.text(least) + " and at most " + Shortest.text(most);
@@ -80,6 +92,10 @@ record Rule(
                 .at(Place.of(name));
         var explained = why.isEmpty() ? said : said.because(why);
         return hint.isEmpty() ? explained : explained.tryThis(hint);
+    }
+
+    static String meanWithCv(double mean, double cv) {
+        return "mean " + Shortest.text(mean) + " with cv " + Shortest.text(cv);
     }
 
     static String meanWithSd(double mean, double sd) {

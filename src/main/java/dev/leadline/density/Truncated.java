@@ -9,7 +9,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
 
-/// A density of which only the values in an interval are kept, its ends included.
+/// A density of which only the values in an interval are kept, its ends included, and of a discrete one the values that
+/// equal an end to rounding.
 ///
 /// What is kept is measured from the nearer tail of the density, and where the two masses that differ are
 /// nearly the same, by quadrature of the density between them: so intervals far out in a tail, and narrow ones
@@ -52,7 +53,10 @@ public final class Truncated implements Shape {
             return of(t.of, Math.max(low, t.low), Math.min(high, t.high));
         }
         var truncated = density.isDiscrete()
-                ? new Truncated(density, Atoms.from(density, low), Atoms.upTo(density, high))
+                ? new Truncated(
+                        density,
+                        Atoms.from(density, low - rounding(density, low)),
+                        Atoms.upTo(density, high + rounding(density, high)))
                 : new Truncated(density, low, high);
         if (!(truncated.mass >= LEAST_MASS)) {
             throw new Refusal(Problem.of("the interval from %s to %s keeps nothing"
@@ -65,6 +69,16 @@ public final class Truncated implements Shape {
                     .tryThis("Check the unit of the ends, or take a wider interval."));
         }
         return truncated;
+    }
+
+    /// How far from an end, as typed, a value of a discrete density may be that equals it: the third of `.1, .2, .3` is
+    /// `.30000000000000004` where it is three times `.1`.
+    private static double rounding(Density density, double end) {
+        return Double.isInfinite(end)
+                ? 0
+                : 4
+                        * Math.ulp(Math.max(
+                                Math.abs(end), Math.abs(density.standardised().location())));
     }
 
     private static List<Problem> problems(Density density, double low, double high) {
@@ -88,7 +102,7 @@ public final class Truncated implements Shape {
         }
         var support = density.support();
         boolean isMissed = density.isDiscrete()
-                ? high < support.low() || low > support.high()
+                ? high + rounding(density, high) < support.low() || low - rounding(density, low) > support.high()
                 : high <= support.low() || low >= support.high();
         return isMissed
                 ? List.of(Problem.of("the interval from %s to %s misses all values of the density"

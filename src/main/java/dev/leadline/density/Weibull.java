@@ -31,7 +31,14 @@ public record Weibull(double shape, double scale, double from) implements Scaled
                     finite("from", "least value").or(0))
             .and(v -> problems(v[0], v[1], v[2]));
 
-    static final Family FAMILY = new Described("weibull", "lifetimes, strengths, wind speeds", ENTRY, BY_MEAN)
+    private static final Entry BY_CV = Entry.of(
+                    v -> ofMeanAndSd(v[0], Math.abs(v[0]) * v[1], v[2]),
+                    Rule.meanOfCv("mean value"),
+                    Rule.cv(),
+                    finite("from", "least value").or(0))
+            .and(v -> problems(v[0], Math.abs(v[0]) * v[1], v[2]));
+
+    static final Family FAMILY = new Described("weibull", "lifetimes, strengths, wind speeds", ENTRY, BY_MEAN, BY_CV)
             .enteredBy(ByQuantiles.ofShapeAndScale(0.01, 1e6, v -> new Weibull(v[0], v[1], v[2])));
 
     public Weibull {

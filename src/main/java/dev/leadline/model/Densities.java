@@ -47,14 +47,23 @@ final class Densities {
 
     private Optional<Density> plain(DensityDraft.Of of, String variable, String path) {
         return switch (of) {
-            case Member member ->
-                made(path, () -> Catalogue.named(member.family()).of(member.parameters()));
+            case Member member -> member(member, path);
             case Values(var values, var probabilities) ->
                 made(path, () -> ValueTable.of(numbers(values), numbers(probabilities)));
             case Mixture(var parts) -> mixture(parts, variable, path);
             case Typed typed -> typed(typed, variable, path);
             case Data data -> new DataDensities(files, this, findings).of(data, path);
         };
+    }
+
+    private Optional<Density> member(Member member, String path) {
+        var made = made(path, () -> Catalogue.named(member.family()).of(member.parameters()));
+        made.ifPresent(_ -> note(Catalogue.named(member.family()).notes(member.parameters()), path));
+        return made;
+    }
+
+    private void note(List<Problem> notes, String path) {
+        notes.forEach(note -> findings.note(path + "." + note.place().path(), note));
     }
 
     private Optional<Density> mixture(List<DensityDraft.Part> drafts, String variable, String path) {
@@ -75,8 +84,7 @@ final class Densities {
         others.remove(variable);
         var made = findings.made(
                 within -> path + "." + within, () -> dev.leadline.density.Typed.of(text, variable, others));
-        made.ifPresent(density -> density.notes()
-                .forEach(note -> findings.note(path + "." + note.place().path(), note)));
+        made.ifPresent(density -> note(density.notes(), path));
         return made.map(dev.leadline.density.Typed::density);
     }
 

@@ -4,6 +4,7 @@ import dev.leadline.density.Density;
 import dev.leadline.density.Support;
 import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Other;
+import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
 import dev.leadline.scheme.Proposal;
@@ -84,7 +85,7 @@ final class Proposals {
             findings.add(
                     path + ".nominalShare",
                     "nominalShare is %s but must be a whole number of hundredths below 1"
-                            .formatted(Findings.number(given.orElseThrow())),
+                            .formatted(Shortest.text(given.orElseThrow())),
                     "So many of every hundred draws come from the inputs' own densities, which keeps weights small.",
                     "Write 0.1 for one in ten.");
             return Share.NONE;
@@ -150,10 +151,10 @@ final class Proposals {
                     "the density to draw %s from covers %s to %s, not its values from %s to %s"
                             .formatted(
                                     input.name(),
-                                    Findings.number(given.low()),
-                                    Findings.number(given.high()),
-                                    Findings.number(needed.low()),
-                                    Findings.number(needed.high())),
+                                    Shortest.text(given.low()),
+                                    Shortest.text(given.high()),
+                                    Shortest.text(needed.low()),
+                                    Shortest.text(needed.high())),
                     "What is never drawn would be missing from the answer.",
                     "Choose one that is positive wherever the input's own is, or a nominalShare above 0.");
             return false;

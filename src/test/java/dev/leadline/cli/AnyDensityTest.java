@@ -2,6 +2,7 @@ package dev.leadline.cli;
 
 import static dev.leadline.cli.CommandLines.leadline;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
@@ -65,6 +66,17 @@ class AnyDensityTest {
     void saysWhereATypedDensityHasAGap() throws IOException {
         var outcome = run("{\"formula\": \"[abs(s) > 1]\", \"from\": -2, \"to\": 2}", "s");
         assertTrue(outcome.err().contains("no density between s = -1 and 1"), outcome::err);
+    }
+
+    @Test
+    void saysThatACvIsMoreLikelyOneInPerCent() throws IOException {
+        String note = "cv is 15: the standard deviation is 15 times the mean";
+        var outcome = run("{\"family\": \"weibull\", \"mean\": 8, \"cv\": 15}", "s");
+        assertTrue(outcome.err().contains(note), outcome::err);
+        assertTrue(outcome.err().contains("cv is a fraction: 0.15 for 15 %."), outcome::err);
+        assertFalse(run("{\"family\": \"weibull\", \"mean\": 8, \"cv\": 0.15}", "s")
+                .err()
+                .contains("cv is"));
     }
 
     /// The kept mass by mpmath: 3.2503307e-15.

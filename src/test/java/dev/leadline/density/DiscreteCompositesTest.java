@@ -10,6 +10,7 @@ import java.util.function.DoubleUnaryOperator;
 import java.util.stream.Stream;
 import org.apache.commons.statistics.distribution.BinomialDistribution;
 import org.apache.commons.statistics.distribution.PoissonDistribution;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
@@ -99,5 +100,27 @@ class DiscreteCompositesTest {
         assertEquals(mean, c.density.mean(), 1e-9 * Math.abs(mean));
         assertEquals(variance, c.density.variance(), 1e-8 * variance);
         assertEquals(fourth / (variance * variance) - 3, c.density.excessKurtosis(), 1e-6);
+    }
+
+    /// Seven times a tenth is the double above .7, three times a tenth the one above .3, and what is typed is decimal.
+    @Test
+    void valuesThatEqualAnEndToRoundingAreKept() {
+        var tenths = new Shifted(new DiscreteUniform(0, 10), 0, 0.1);
+        var kept = Truncated.of(tenths, 0.3, 0.7);
+        var mirrored = Truncated.of(new Shifted(new DiscreteUniform(0, 10), 0, -0.1), -0.7, -0.3);
+        for (int k = 0; k <= 10; k++) {
+            double expected = k >= 3 && k <= 7 ? 0.2 : 0;
+            assertEquals(expected, kept.pdf(k * 0.1), 1e-15, "at " + k);
+            assertEquals(expected, mirrored.pdf(k * -0.1), 1e-15, "at " + -k);
+        }
+        assertEquals(0.5, kept.mean(), 1e-15);
+        var shifted = Truncated.of(new Shifted(new DiscreteUniform(0, 10), 1000, 0.1), 1000.3, 1000.7);
+        assertEquals(5 / 11.0, shifted.keptMass(), 1e-15);
+        var ofOne = Truncated.of(new Shifted(new DiscreteUniform(7, 10), 0, 0.1), 0, 0.7);
+        assertEquals(0.25, ofOne.keptMass(), 1e-15);
+        assertEquals(
+                4 / 11.0,
+                Truncated.of(tenths, Math.nextDown(0.3) - 1e-15, 0.7 - 1e-15).keptMass(),
+                1e-15);
     }
 }
