@@ -35,14 +35,17 @@ record NestedScrambling(int seed, int shift, int next) implements Randomisation 
         }
     }
 
+    /// This and what it calls have at most 35 bytes each: they are inlined however little has been seen of them.
     private double point(int digits, int factor) {
-        int x = digits;
-        x ^= x * 0x3d20adea;
+        return Fraction.of(Integer.reverse(nested(digits, factor)) ^ shift, hash(digits ^ next) >>> 12);
+    }
+
+    private int nested(int digits, int factor) {
+        int x = digits ^ digits * 0x3d20adea;
         x += seed;
         x *= factor;
         x ^= x * 0x05526c56;
-        x ^= x * 0x53a22864;
-        return Fraction.of(Integer.reverse(x) ^ shift, hash(digits ^ next) >>> 12);
+        return x ^ x * 0x53a22864;
     }
 
     /// `lowbias32` of Wellons (2018), Prospecting for Hash Functions.
