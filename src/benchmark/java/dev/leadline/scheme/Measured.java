@@ -15,10 +15,12 @@ public record Measured(String name, Function<Stream, Fill> opened) {
 
     public static List<Measured> all() {
         var sobol = Sobol.dimension(100);
+        var lattice = Lattice.dimension(100);
         return List.of(
                 new Measured("Sobol, nested scrambling", numbers -> sobol.randomised(Scrambling.NESTED, numbers)::fill),
                 new Measured(
-                        "Sobol, digital shift", numbers -> sobol.randomised(Scrambling.DIGITAL_SHIFT, numbers)::fill));
+                        "Sobol, digital shift", numbers -> sobol.randomised(Scrambling.DIGITAL_SHIFT, numbers)::fill),
+                new Measured("lattice, shifted", numbers -> lattice.shifted(numbers)::fill));
     }
 
     /// A dimension before it is randomised, which a lane has once.

@@ -20,7 +20,8 @@ class CoordinateTest {
     static java.util.stream.Stream<Coordinate> coordinates() {
         return java.util.stream.Stream.of(
                 Sobol.dimension(17).randomised(Scrambling.NESTED, Stream.at(ADDRESS)),
-                Sobol.dimension(17).randomised(Scrambling.DIGITAL_SHIFT, Stream.at(ADDRESS)));
+                Sobol.dimension(17).randomised(Scrambling.DIGITAL_SHIFT, Stream.at(ADDRESS)),
+                Lattice.dimension(17).shifted(Stream.at(ADDRESS)));
     }
 
     @ParameterizedTest

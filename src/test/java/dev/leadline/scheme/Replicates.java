@@ -58,6 +58,13 @@ record Replicates(double[] means) {
                 .toArray(Dimension[]::new);
     }
 
+    static Dimension[] lattice(int dimensions) {
+        return IntStream.rangeClosed(1, dimensions)
+                .mapToObj(Lattice::dimension)
+                .map(lattice -> (Dimension) lattice::shifted)
+                .toArray(Dimension[]::new);
+    }
+
     /// Sums by blocks, so that rounding stays far below the differences of replicates.
     static double mean(Coordinate[] coordinates, int n, Integrand f) {
         int rows = Math.min(n, BLOCK);
