@@ -30,7 +30,7 @@ public final class Commands {
     public static final int OUR_FAULT = 3;
 
     /// Commands of the programme that this version lacks.
-    private static final Set<String> LATER = Set.of("rehearse", "plan", "suggest", "report", "replay");
+    private static final Set<String> LATER = Set.of("rehearse", "plan", "report", "replay");
 
     /// Options of its commands that this version lacks.
     private static final Set<String> OPTIONS_LATER = Set.of("--record", "--report", "--repetitions");
@@ -47,6 +47,7 @@ public final class Commands {
                 new CheckCommand(),
                 new LookCommand(),
                 new CompareCommand(),
+                new SuggestCommand(),
                 new FigureCommand(),
                 new FamiliesCommand(),
                 new OpenCommand(window));

@@ -1,6 +1,8 @@
 package dev.leadline.engine;
 
 import dev.leadline.estimate.Logarithm;
+import java.lang.management.ManagementFactory;
+import java.lang.management.ThreadMXBean;
 import java.util.Arrays;
 
 /// How long a draw takes in one lane and in another, on one thread, weights and sums included.
@@ -8,13 +10,20 @@ import java.util.Arrays;
 /// Both do pieces of work of about equal length in pairs, one after the other, so that whatever slows the machine slows
 /// both; which goes first alternates. The ratio is that of the geometric means, its error from the spread of the pairs.
 ///
-/// @param first seconds of a draw
+/// @param first seconds of a draw on a processor
 /// @param second likewise, of the other lane
 /// @param ratio the first over the second; more certain than either
 public record Timing(Logarithm first, Logarithm second, Logarithm ratio) {
     private static final int PAIRS = 16;
     private static final int WARM_UP = 12;
     private static final double NANOSECOND = 1e-9;
+
+    private static final ThreadMXBean CLOCK = ManagementFactory.getThreadMXBean();
+
+    /// Of the processor where it is told, so that what else the machine is busy with does not count.
+    private static long now() {
+        return CLOCK.isCurrentThreadCpuTimeSupported() ? CLOCK.getCurrentThreadCpuTime() : System.nanoTime();
+    }
 
     /// A lane at work on the items at the end of so many draws, over and over. Confined to one thread.
     private static final class Work {
@@ -37,12 +46,12 @@ public record Timing(Logarithm first, Logarithm second, Logarithm ratio) {
         double seconds(double least) {
             long draws = 0;
             double passed;
-            long start = System.nanoTime();
+            long start = now();
             do {
                 Item item = items.at(Math.max(0, last - turn++ % TURNS));
                 sampler.compute(item, () -> false);
                 draws += item.draws();
-                passed = NANOSECOND * (System.nanoTime() - start);
+                passed = NANOSECOND * (now() - start);
             } while (passed < least);
             return passed / draws;
         }

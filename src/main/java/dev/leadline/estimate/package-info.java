@@ -2,5 +2,6 @@
 ///
 /// An [Estimand][dev.leadline.estimate.Estimand] names what is asked; an
 /// [Accumulator][dev.leadline.estimate.Accumulator] keeps the moments of the observations, in memory that does not grow
-/// with their number. [Association][dev.leadline.estimate.Association] measures how two columns go together.
+/// with their number. [Jackknife][dev.leadline.estimate.Jackknife] gives the variance of what is made of them.
+/// [Association][dev.leadline.estimate.Association] measures how two columns go together.
 package dev.leadline.estimate;

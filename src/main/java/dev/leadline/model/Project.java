@@ -81,12 +81,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
     public Lane lane(LaneDraft lane) {
         var findings = new Findings();
         List<Lane> made = Lanes.of(
-                draft.with(List.of(lane)),
-                question.inputs(),
-                true,
-                question.dependence(),
-                DataFiles.NONE,
-                findings);
+                draft.with(List.of(lane)), question.inputs(), true, question.dependence(), DataFiles.NONE, findings);
         findings.refuseIfAny();
         return made.getFirst();
     }

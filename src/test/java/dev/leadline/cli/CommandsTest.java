@@ -187,7 +187,7 @@ class CommandsTest {
                 List.of("compare", "PROJECT", "A", "A"),
                 List.of("compare", "PROJECT", "--equal", "money"),
                 List.of("plan", "PROJECT"),
-                List.of("suggest", "PROJECT"),
+                List.of("suggest", "PROJECT", "--draws", "10"),
                 List.of("report", "PROJECT"),
                 List.of("replay", "PROJECT"),
                 List.of("run", "@PROJECT"));

@@ -1,0 +1,23 @@
+package dev.leadline.study.candidate;
+
+import java.util.List;
+
+/// All of them.
+public final class Candidates {
+    public static final List<Candidate> ALL = List.of(
+            new LaidOut("antithetic", "opposite draws cancel what rises or falls with an input"),
+            new LaidOut("stratified", "draws are spread over cells, which takes out the differences between them"),
+            new LaidOut(
+                    "latin-hypercube",
+                    "every part of the range of every input is drawn equally often, which takes out what adds up"
+                            + " input by input"),
+            new LaidOut("scrambled-sobol", "points fill the space evenly, which pays where the outcome is smooth"),
+            new LaidOut("shifted-lattice", "points fill the space evenly, which pays where the outcome is smooth"),
+            new LaidOut("splitting", "particles climb towards the event step by step"),
+            new InputControls(),
+            new ShiftedDensities(),
+            new TiltedDensities(),
+            new WidenedDensities());
+
+    private Candidates() {}
+}

@@ -1,0 +1,136 @@
+package dev.leadline.study;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.engine.Questions;
+import dev.leadline.interval.Ratio;
+import dev.leadline.model.LaneDraft;
+import dev.leadline.model.Project;
+import dev.leadline.project.ProjectFile;
+import dev.leadline.study.candidate.Candidate;
+import dev.leadline.study.candidate.Candidates;
+import dev.leadline.study.candidate.Offer;
+import java.util.List;
+import java.util.Set;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
+import org.junit.jupiter.api.Test;
+
+/// Each scheme is recommended for a question that it is made for, and plain draws for one that none helps.
+class SuggestionTest {
+    private static final long DRAWS = 32_768;
+
+    /// @param density of each of the inputs `x1`, `x2` …
+    private static Project project(int inputs, String density, String ask) {
+        String rows = IntStream.rangeClosed(1, inputs)
+                .mapToObj(i -> "{\"name\": \"x%d\", \"density\": %s}".formatted(i, density))
+                .collect(Collectors.joining(","));
+        return Project.of(ProjectFile.parse("""
+                {"leadline": 1, "inputs": [%s], "ask": %s, "seed": 5, "lanes": [{"name": "A", "points": "independent"}]}
+                """.formatted(rows, ask)));
+    }
+
+    private static Suggestion suggested(int normals, String formula) throws InterruptedException {
+        return suggested(project(
+                normals, "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}", "{\"mean\": \"%s\"}".formatted(formula)));
+    }
+
+    private static Suggestion suggested(Project project) throws InterruptedException {
+        return Suggestion.of(project, 5, DRAWS, 1, _ -> {});
+    }
+
+    private static LaneDraft recommended(Suggestion suggestion) {
+        var row = suggestion.recommended();
+        assertEquals(row, suggestion.rows().getFirst());
+        assertTrue(row.efficiencyRatio().orElseThrow().low() >= 1, row::toString);
+        assertEquals("B", row.lane().name());
+        return row.lane();
+    }
+
+    /// All but a hundredth changes its sign with the inputs.
+    @Test
+    void antitheticPoints() throws InterruptedException {
+        var lane = recommended(suggested(7, "x1*x2*x3*x4*x5*x6*x7 + 0.02*sin(x1*x2)"));
+        assertEquals("antithetic", lane.points());
+    }
+
+    /// Half of the plane is worth something else than the other, and no input tells by itself.
+    @Test
+    void stratifiedPoints() throws InterruptedException {
+        var lane = recommended(suggested(2, "if(x1*x2 > 0, 1, -1)*(2 + cos(x1))"));
+        assertTrue(Set.of("stratified", "scrambled-sobol", "shifted-lattice").contains(lane.points()), lane::toString);
+    }
+
+    /// What adds up input by input; of points that are even in more than one input at a time nothing is tried.
+    @Test
+    void latinHypercubes() throws InterruptedException {
+        var project = project(
+                10,
+                "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}",
+                "{\"mean\": \"x1^2+x2^2+x3^2+x4^2+x5^2+x6^2+x7^2+x8^2+x9^2+x10^2\"}");
+        List<Candidate> some = Candidates.ALL.stream()
+                .filter(candidate -> !candidate.toString().contains("sobol")
+                        && !candidate.toString().contains("lattice"))
+                .toList();
+        var lane = recommended(Suggestion.of(project, 5, DRAWS, 1, _ -> {}, some));
+        assertEquals("latin-hypercube", lane.points());
+    }
+
+    /// A straight line in one input, and waves too short for any layout of so few points.
+    @Test
+    void controlVariates() throws InterruptedException {
+        var lane = recommended(suggested(8, "3*x1 + cos(9*(x1+x2+x3+x4+x5+x6+x7+x8))"));
+        assertEquals("independent", lane.points());
+        assertEquals(8, lane.controls().size());
+    }
+
+    @Test
+    void plainDraws() throws InterruptedException {
+        var suggestion = suggested(8, "cos(9*(x1+x2+x3+x4+x5+x6+x7+x8))");
+        assertEquals(LaneDraft.of("B", "independent"), recommended(suggestion));
+        assertEquals(Ratio.ONE, suggestion.recommended().efficiencyRatio().orElseThrow());
+        assertTrue(suggestion.rows().size() >= 5);
+        assertTrue(
+                suggestion.rows().stream().anyMatch(row -> row.reason().equals("Loses here.")), suggestion::toString);
+    }
+
+    /// A scheme that is plain draws itself is preferred to them in one of forty, as its limits say.
+    @Test
+    void recommendsNothingForChance() throws InterruptedException {
+        var project = project(1, "{\"family\": \"uniform\", \"from\": 0, \"to\": 1}", "{\"mean\": \"exp(x1)\"}");
+        Candidate same = (_, _) -> List.of(new Offer(LaneDraft.of("", "independent"), "chance"));
+        int wrong = 0;
+        for (int seed = 0; seed < 20; seed++) {
+            var suggestion = Suggestion.of(project, seed, 8_192, 1, _ -> {}, List.of(same));
+            wrong += suggestion.recommended().reason().startsWith("Chance") ? 1 : 0;
+        }
+        int seen = wrong;
+        assertTrue(seen <= 3, () -> seen + " of 20");
+    }
+
+    /// The draws of a pilot are none of a run.
+    @Test
+    void pilotsDrawNumbersOfTheirOwn() throws InterruptedException {
+        var project = project(1, "{\"family\": \"uniform\", \"from\": 0, \"to\": 1}", "{\"mean\": \"exp(x1)\"}");
+        try (var pilots = new Pilots(project, 5, 1_000, 1);
+                var study = Study.start(project.question(), Questions.plan(1_000, 5), 1, _ -> {})) {
+            var pilot = pilots.run(LaneDraft.of("A", "independent"), "A").orElseThrow();
+            assertNotEquals(
+                    study.await().lanes().getFirst().trace().total().mean(0),
+                    pilot.trace().total().mean(0));
+        }
+    }
+
+    @Test
+    void everyLayoutIsTried() {
+        for (String word : Project.layouts()) {
+            assertTrue(
+                    word.equals("independent")
+                            || Candidates.ALL.stream()
+                                    .anyMatch(candidate -> candidate.toString().contains(word)),
+                    word);
+        }
+    }
+}
