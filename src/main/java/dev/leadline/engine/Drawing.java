@@ -4,6 +4,7 @@ import dev.leadline.formula.Program;
 import dev.leadline.scheme.Cursor;
 import dev.leadline.scheme.Stretch;
 import java.util.Arrays;
+import java.util.Optional;
 
 /// Draws inputs of a recipe, block by block. Scratch of one worker, confined to it.
 ///
@@ -14,6 +15,7 @@ final class Drawing {
     private final double[][] columns;
     private final double[][] points;
     private final Nominal nominal;
+    private final Optional<Warping> warping;
     private final double[] few = new double[Program.BLOCK];
     private Cursor cursor;
 
@@ -29,6 +31,7 @@ final class Drawing {
             }
         }
         this.nominal = Nominal.of(recipe);
+        this.warping = Warping.of(recipe);
         this.columns = new double[wanted.length][];
         for (int j = 0; j < columns.length; j++) {
             columns[j] = wanted[j] ? points[j] : null;
@@ -39,13 +42,26 @@ final class Drawing {
     void open(Stretch stretch) {
         cursor = recipe.layout().open(stretch);
         nominal.open();
+        warping.ifPresent(Warping::open);
     }
 
     /// The next draws of the item.
     ///
     /// @param rows at most [Program#BLOCK]
     void next(int rows) {
+        place(rows);
+        fill(rows);
+    }
+
+    /// The next points, in the unit cube.
+    double[][] place(int rows) {
         cursor.next(points, rows);
+        warping.ifPresent(w -> w.move(points, rows));
+        return points;
+    }
+
+    /// The inputs at those points, which become scratch.
+    void fill(int rows) {
         nominal.next(points[points.length - 1], rows);
         recipe.ties().tie(points, wanted, rows);
         for (int j = 0; j < columns.length; j++) {
@@ -72,8 +88,14 @@ final class Drawing {
         }
     }
 
-    /// Every input of the draw with index `draw` in the lane.
-    static double[] inputs(Recipe recipe, long draw) {
+    /// One draw.
+    ///
+    /// @param inputs every input
+    /// @param weight what it counts that comes from a density found for its points; 1 otherwise
+    record Single(double[] inputs, double weight) {}
+
+    /// The draw with index `draw` in the lane.
+    static Single single(Recipe recipe, long draw) {
         boolean[] all = new boolean[recipe.question().inputs().size()];
         Arrays.fill(all, true);
         var drawing = new Drawing(recipe, all);
@@ -86,7 +108,16 @@ final class Drawing {
             from += Program.BLOCK;
         }
         int row = (int) (draw - from);
-        return Arrays.stream(drawing.columns).mapToDouble(column -> column[row]).toArray();
+        return new Single(
+                Arrays.stream(drawing.columns)
+                        .mapToDouble(column -> column[row])
+                        .toArray(),
+                drawing.weights().map(weights -> weights[row]).orElse(1.0));
+    }
+
+    /// What draws count that come from a density found for them.
+    Optional<double[]> weights() {
+        return warping.map(Warping::weights);
     }
 
     /// Values of each input; `null` for one that is not wanted. The arrays stay the same.

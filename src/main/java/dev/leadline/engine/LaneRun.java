@@ -118,7 +118,7 @@ public final class LaneRun {
         return failure.inputs().contains(Double.NaN)
                 ? new Failure(
                         failure.draw(),
-                        Arrays.stream(Drawing.inputs(recipe, failure.draw()))
+                        Arrays.stream(Drawing.single(recipe, failure.draw()).inputs())
                                 .boxed()
                                 .toList())
                 : failure;

@@ -28,8 +28,8 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
     /// The draw with index `draw` (from 0) of a lane, made again from its address.
     public static Look at(Question question, Lane lane, long seed, long draw) {
         var recipe = Recipe.of(question, lane, seed);
-        double[] inputs = Drawing.inputs(recipe, draw);
-        return of(question, inputs, Weights.of(recipe, inputs));
+        var drawn = Drawing.single(recipe, draw);
+        return of(question, drawn.inputs(), drawn.weight() * Weights.of(recipe, drawn.inputs()));
     }
 
     /// Every input at its median.

@@ -12,6 +12,7 @@ import dev.leadline.scheme.Layout;
 import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Replicated;
 import dev.leadline.scheme.Share;
+import dev.leadline.scheme.Tuned;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
 import java.util.ArrayList;
@@ -35,12 +36,13 @@ public final class Recipe {
     private final List<Integer> weighing;
     private final double volume;
 
-    private Recipe(Question question, Lane lane, long seed, Purpose purpose) {
+    private Recipe(Question question, Lane lane, long seed, Purpose purpose, int replicate) {
         this.question = question;
         this.lane = lane;
         this.ties = new Ties(question);
-        this.layout =
-                lane.scheme().points().layout(new Address(seed, purpose, lane.address(), 0, "", 0), coordinates());
+        this.layout = lane.scheme()
+                .points()
+                .layout(new Address(seed, purpose, lane.address(), replicate, "", 0), coordinates());
         this.inversions = question.inputs().stream()
                 .map(input -> Inversion.of(input.drawn()))
                 .toList();
@@ -62,14 +64,21 @@ public final class Recipe {
         this.volume = product;
     }
 
-    /// Builds the inversion tables that are not in the cache yet: up to 100 ms for each new shape.
+    /// Builds the inversion tables that are not in the cache yet, and finds the density to draw from where the lane
+    /// wants
+    /// one.
     public static Recipe of(Question question, Lane lane, long seed) {
         return of(question, lane, seed, Purpose.RUN);
     }
 
     /// The same for draws that must not be those of a run.
     public static Recipe of(Question question, Lane lane, long seed, Purpose purpose) {
-        return new Recipe(question, lane, seed, purpose);
+        return new Recipe(question, Tuning.found(question, lane, seed), seed, purpose, 0);
+    }
+
+    /// The recipe of a stage of tuning.
+    static Recipe ofStage(Question question, Lane lane, long seed, int stage) {
+        return new Recipe(question, lane, seed, Purpose.TUNING, stage);
     }
 
     public Sampler sampler() {
@@ -92,11 +101,15 @@ public final class Recipe {
 
     /// Whether chance decides which draws come from the inputs' own densities; in growing points their index does.
     boolean isShareDrawn() {
-        return lane.scheme().points() instanceof Replicated && share().nominal() > 0;
+        return lane.scheme().points() instanceof Replicated && (share().nominal() > 0 || tuned().isPresent());
     }
 
     Share share() {
         return lane.scheme().drawFrom().map(Proposal::nominal).orElse(Share.NONE);
+    }
+
+    Optional<Tuned> tuned() {
+        return lane.scheme().tuned();
     }
 
     /// The components of an observation: what is asked, the control variates, and the weight where draws are weighted.

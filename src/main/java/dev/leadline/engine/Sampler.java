@@ -84,7 +84,7 @@ public final class Sampler {
                 control[i] -= mean;
             }
         }
-        weights.weigh(columns, outcomes, rows);
+        weights.weigh(columns, drawing.weights(), outcomes, rows);
     }
 
     /// `1 / pdf`, and 0 for a draw beyond its range, which the density drawn from may reach.

@@ -1,6 +1,7 @@
 package dev.leadline.model;
 
 import dev.leadline.formula.Working;
+import dev.leadline.scheme.Adapted;
 import dev.leadline.scheme.Control;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.Scheme;
@@ -95,6 +96,7 @@ final class Lanes {
             return Optional.empty();
         }
         var drawFrom = proposals.of(lane, path);
+        Optional<Adapted> adapted = proposals.adaptation(lane, path).map(Adapted.class::cast);
         List<Control> controlled = controls.of(lane, path);
         Optional<Working> working = controlled.isEmpty() ? Optional.empty() : controls.working(lane, path);
         if (lane.selfNormalised() && !controlled.isEmpty()) {
@@ -104,7 +106,7 @@ final class Lanes {
                     "Weights divided by their mean have no means that are known.",
                     "Leave one of them out.");
         }
-        return points.map(
-                p -> new Lane(lane.name(), new Scheme(p, drawFrom, controlled), draft.commonRandomNumbers(), working));
+        return points.map(p -> new Lane(
+                lane.name(), new Scheme(p, drawFrom, controlled, adapted), draft.commonRandomNumbers(), working));
     }
 }

@@ -7,12 +7,17 @@ import dev.leadline.model.LaneDraft.Other;
 import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
+import dev.leadline.scheme.Adaptation;
 import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Share;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.TreeMap;
+import java.util.TreeSet;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 
 /// Makes what a lane's inputs are drawn from of its draft.
 final class Proposals {
@@ -40,13 +45,7 @@ final class Proposals {
         }
         Share share = share(lane.nominalShare(), path);
         return switch (lane.drawFrom()) {
-            case DrawFrom.Adapted(String way) -> {
-                findings.add(
-                        path + ".drawFrom.adapt",
-                        "\"adapt\": \"%s\" is not available".formatted(way),
-                        "Densities to draw from are stated by input.");
-                yield Optional.empty();
-            }
+            case DrawFrom.Adapted _ -> Optional.empty();
             case DrawFrom.Inputs(var others) -> {
                 var found = new TreeMap<Integer, Density>();
                 others.forEach((name, other) -> {
@@ -59,6 +58,32 @@ final class Proposals {
                 yield Optional.of(new Proposal(found, share, lane.selfNormalised()));
             }
         };
+    }
+
+    /// The wish to find a density before the run; empty where the lane has none.
+    Optional<Adaptation> adaptation(LaneDraft lane, String path) {
+        if (!(lane.drawFrom() instanceof DrawFrom.Adapted(String word))) {
+            return Optional.empty();
+        }
+        var way = Arrays.stream(Adaptation.Way.values())
+                .filter(w -> w.word().equals(word))
+                .findFirst();
+        if (way.isEmpty()) {
+            findings.add(
+                    path + ".drawFrom.adapt",
+                    "adapt is \"%s\" but must be \"cross-entropy\" or \"grid\"".formatted(word),
+                    "It is the way in which a density to draw from is found.");
+            return Optional.empty();
+        }
+        if (lane.selfNormalised()) {
+            findings.add(
+                    path + ".selfNormalised",
+                    "selfNormalised beside \"adapt\" is not available",
+                    "The density that is found is known with its factor.",
+                    "Leave it out.");
+        }
+        var all = IntStream.range(0, inputs.size()).boxed().collect(Collectors.toCollection(TreeSet::new));
+        return Optional.of(new Adaptation(way.get(), all, share(lane.nominalShare(), path)));
     }
 
     private void alone(LaneDraft lane, String path) {

@@ -4,9 +4,15 @@ import java.util.List;
 import java.util.Optional;
 
 /// How a lane samples: a layout of points, optionally other densities to draw from and control variates.
-public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> controls) {
+///
+/// @param adapted a density of the points that is, or was, found before the run; never beside `drawFrom`
+public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> controls, Optional<Adapted> adapted) {
     public Scheme {
         controls = List.copyOf(controls);
+    }
+
+    public Scheme(Points points, Optional<Proposal> drawFrom, List<Control> controls) {
+        this(points, drawFrom, controls, Optional.empty());
     }
 
     public static Scheme of(Points points) {
@@ -15,27 +21,48 @@ public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> c
 
     /// Whether every draw is an observation of its own and counts 1.
     public boolean isPlain() {
-        return points instanceof Independent && drawFrom.isEmpty() && controls.isEmpty();
+        return points instanceof Independent && !isWeighted() && controls.isEmpty();
     }
 
     /// Of growing points: draws whose mean is one independent observation.
     public int drawsPerObservation() {
-        return ((Growing) points).drawsPerObservation()
-                * drawFrom.map(proposal -> proposal.nominal().of()).orElse(1);
+        return ((Growing) points).drawsPerObservation() * turns();
+    }
+
+    /// Observations of the layout alone that take turns in the densities they are drawn from.
+    private int turns() {
+        int adapting = adapted.map(density -> switch (density) {
+                    case Adaptation wish -> wish.units();
+                    case Tuned tuned -> tuned.of();
+                })
+                .orElse(1);
+        return adapting * drawFrom.map(proposal -> proposal.nominal().of()).orElse(1);
     }
 
     public boolean isWeighted() {
-        return drawFrom.isPresent();
+        return drawFrom.isPresent() || adapted.isPresent();
+    }
+
+    /// What was found before the run.
+    public Optional<Tuned> tuned() {
+        return adapted.flatMap(density -> density instanceof Tuned tuned ? Optional.of(tuned) : Optional.empty());
+    }
+
+    /// This scheme with what was found.
+    public Scheme with(Tuned tuned) {
+        return new Scheme(points, drawFrom, controls, Optional.of(tuned));
     }
 
     /// This scheme as a lane of so many draws has it.
     public Scheme within(long draws) {
-        return new Scheme(points.within(draws), drawFrom, controls);
+        return new Scheme(points.within(draws / turns()), drawFrom, controls, adapted);
     }
 
     /// As `independent, drawn from other densities, 2 control variates`.
     public String inWords() {
-        String weighted = isWeighted() ? ", drawn from other densities" : "";
+        String weighted = drawFrom.isPresent()
+                ? ", drawn from other densities"
+                : adapted.map(density -> ", " + density.inWords()).orElse("");
         String controlled = controls.isEmpty()
                 ? ""
                 : controls.size() == 1 ? ", 1 control variate" : ", " + controls.size() + " control variates";

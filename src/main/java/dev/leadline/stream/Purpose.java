@@ -9,7 +9,9 @@ public enum Purpose {
     /// Draws that take as long as others, for the clock.
     TIMING(5),
     /// Draws that say which scheme to recommend.
-    PILOT(6);
+    PILOT(6),
+    /// Draws that the densities to draw from are found by.
+    TUNING(10);
 
     private final int number;
 
