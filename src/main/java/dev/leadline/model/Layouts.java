@@ -7,8 +7,11 @@ import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.LatinHypercube;
 import dev.leadline.scheme.Points;
+import dev.leadline.scheme.ScrambledSobol;
+import dev.leadline.scheme.Scrambling;
 import dev.leadline.scheme.Stratified;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -25,6 +28,7 @@ final class Layouts {
 
     private static final int MOST_REPLICATES = 10_000;
     private static final int USUAL_CUBES = 30;
+    private static final int USUAL_REPLICATES = 16;
 
     /// @param takes names of the settings that it takes
     private record Kind(List<String> takes, Function<Layouts, Optional<Points>> made) {}
@@ -54,6 +58,7 @@ final class Layouts {
         kinds.put("antithetic", new Kind(List.of(), _ -> Optional.of(new Antithetic())));
         kinds.put(Stratified.WORD, new Kind(List.of("cells"), Layouts::stratified));
         kinds.put(LatinHypercube.WORD, new Kind(List.of("replicates", "cube"), Layouts::latinHypercube));
+        kinds.put(ScrambledSobol.WORD, new Kind(List.of("replicates", "scrambling"), Layouts::scrambledSobol));
         return kinds;
     }
 
@@ -148,6 +153,24 @@ final class Layouts {
         }
         return replicates.isPresent() && (cube.isPresent() || settings.cube().isEmpty())
                 ? Optional.of(new LatinHypercube(cube, replicates.getAsInt()))
+                : Optional.empty();
+    }
+
+    private Optional<Points> scrambledSobol() {
+        var replicates =
+                count("replicates", settings.replicates(), USUAL_REPLICATES, FEWEST_REPLICATES, MOST_REPLICATES);
+        String word = settings.scrambling().orElse(Scrambling.NESTED.word());
+        var scrambling = Arrays.stream(Scrambling.values())
+                .filter(s -> s.word().equals(word))
+                .findFirst();
+        if (scrambling.isEmpty()) {
+            findings.add(
+                    path + ".scrambling",
+                    "scrambling is \"%s\" but must be \"nested\" or \"digital-shift\"".formatted(word),
+                    "It is how replicates of the points are made random.");
+        }
+        return replicates.isPresent() && scrambling.isPresent()
+                ? Optional.of(new ScrambledSobol(replicates.getAsInt(), scrambling.get()))
                 : Optional.empty();
     }
 
