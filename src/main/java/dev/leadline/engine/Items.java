@@ -10,7 +10,7 @@ public sealed interface Items permits GrowingItems, Rounds {
     static Items of(Scheme scheme) {
         return switch (scheme.points()) {
             case Growing growing -> new GrowingItems(scheme.drawsPerObservation());
-            case Replicated replicated -> new Rounds(replicated.replicates());
+            case Replicated replicated -> new Rounds(replicated.replicates(), replicated.mostPoints());
         };
     }
 

@@ -3,8 +3,9 @@ package dev.leadline.engine;
 import dev.leadline.scheme.Stretch;
 
 /// Items of replicated points. Round 0 takes all replicates to their first point, round m from `2^(m-1)` to `2^m`
-/// points; within a round one replicate comes after the other, each in parts of at most 65,536 draws.
-record Rounds(int replicates) implements Items {
+/// points, up to the most that the points have; within a round one replicate comes after the other, each in parts of at
+/// most 65,536 draws.
+record Rounds(int replicates, long mostPoints) implements Items {
     private static final int LARGEST = 65_536;
 
     @Override
@@ -36,7 +37,7 @@ record Rounds(int replicates) implements Items {
 
     @Override
     public long whole(long draws) {
-        return Long.highestOneBit(draws / replicates) * replicates;
+        return Math.min(Long.highestOneBit(draws / replicates), mostPoints) * replicates;
     }
 
     /// Whether a round ends with so many draws.

@@ -9,6 +9,7 @@ import dev.leadline.scheme.LatinHypercube;
 import dev.leadline.scheme.Points;
 import dev.leadline.scheme.ScrambledSobol;
 import dev.leadline.scheme.Scrambling;
+import dev.leadline.scheme.ShiftedLattice;
 import dev.leadline.scheme.Stratified;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -59,6 +60,7 @@ final class Layouts {
         kinds.put(Stratified.WORD, new Kind(List.of("cells"), Layouts::stratified));
         kinds.put(LatinHypercube.WORD, new Kind(List.of("replicates", "cube"), Layouts::latinHypercube));
         kinds.put(ScrambledSobol.WORD, new Kind(List.of("replicates", "scrambling"), Layouts::scrambledSobol));
+        kinds.put(ShiftedLattice.WORD, new Kind(List.of("replicates"), Layouts::shiftedLattice));
         return kinds;
     }
 
@@ -156,9 +158,17 @@ final class Layouts {
                 : Optional.empty();
     }
 
+    private OptionalInt replicates() {
+        return count("replicates", settings.replicates(), USUAL_REPLICATES, FEWEST_REPLICATES, MOST_REPLICATES);
+    }
+
+    private Optional<Points> shiftedLattice() {
+        var replicates = replicates();
+        return replicates.isPresent() ? Optional.of(new ShiftedLattice(replicates.getAsInt())) : Optional.empty();
+    }
+
     private Optional<Points> scrambledSobol() {
-        var replicates =
-                count("replicates", settings.replicates(), USUAL_REPLICATES, FEWEST_REPLICATES, MOST_REPLICATES);
+        var replicates = replicates();
         String word = settings.scrambling().orElse(Scrambling.NESTED.word());
         var scrambling = Arrays.stream(Scrambling.values())
                 .filter(s -> s.word().equals(word))

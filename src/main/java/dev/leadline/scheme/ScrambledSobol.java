@@ -10,9 +10,6 @@ import java.util.stream.IntStream;
 public record ScrambledSobol(int replicates, Scrambling scrambling) implements Replicated {
     public static final String WORD = "scrambled-sobol";
 
-    /// Coordinates that there are dimensions for.
-    public static final int MOST_COORDINATES = Sobol.DIMENSIONS;
-
     @Override
     public String word() {
         return WORD;
@@ -24,6 +21,11 @@ public record ScrambledSobol(int replicates, Scrambling scrambling) implements R
             case NESTED -> Replicated.super.inWords();
             case DIGITAL_SHIFT -> Replicated.super.inWords() + " by digital shift";
         };
+    }
+
+    @Override
+    public long mostPoints() {
+        return Sobol.POINTS;
     }
 
     @Override

@@ -18,6 +18,7 @@ import dev.leadline.scheme.LatinHypercube;
 import dev.leadline.scheme.Points;
 import dev.leadline.scheme.Scheme;
 import dev.leadline.scheme.ScrambledSobol;
+import dev.leadline.scheme.Scrambling;
 import dev.leadline.study.Comparison.Outcome;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Mark;
@@ -169,7 +170,7 @@ class ComparisonTest {
     @Test
     void replicatedPointsAreQuotedAtTheirDraws() throws InterruptedException {
         var a = lane("A", new Independent());
-        var b = lane("B", new ScrambledSobol(16));
+        var b = lane("B", new ScrambledSobol(16, Scrambling.NESTED));
         var plain = run(OF_ROUNDS, 20_000, a).lanes().getFirst().trace();
         var comparison =
                 Comparison.of(OF_ROUNDS, a, plain, b, rounds(b, 16, 10)).orElseThrow();
@@ -181,7 +182,8 @@ class ComparisonTest {
         var ratio = comparison.varianceRatio().orElseThrow();
         assertEquals(.2420356 * 16_384.0 * 16_384, ratio.value(), .04 * ratio.value());
         assertTrue(comparison.notes().getFirst().contains("A comparison wants 30 replicates"));
-        var more = Comparison.of(OF_ROUNDS, a, plain, lane("B", new ScrambledSobol(32)), rounds(b, 32, 10));
+        var more = Comparison.of(
+                OF_ROUNDS, a, plain, lane("B", new ScrambledSobol(32, Scrambling.NESTED)), rounds(b, 32, 10));
         assertFalse(more.orElseThrow().notes().getFirst().contains("wants"));
     }
 
@@ -190,7 +192,7 @@ class ComparisonTest {
     @Test
     void roundsToTheToleranceFollowTheFittedDecay() throws InterruptedException {
         var a = lane("A", new Independent());
-        var b = lane("B", new ScrambledSobol(16));
+        var b = lane("B", new ScrambledSobol(16, Scrambling.NESTED));
         var plain = run(OF_ROUNDS, 20_000, a).lanes().getFirst().trace();
         var need = Comparison.of(OF_ROUNDS, a, plain, b, rounds(b, 16, 8))
                 .orElseThrow()
