@@ -196,10 +196,15 @@ public final class Commands {
         if (lack.isPresent()) {
             return refuse(List.of(lack.get()), ProblemText.of("", List.of(lack.get()), Optional.empty()), json);
         }
-        Problem said = cause instanceof OutOfMemoryError
+        boolean isMemory = Stream.iterate(cause, behind -> behind != null, Throwable::getCause)
+                .limit(20)
+                .anyMatch(behind -> behind instanceof OutOfMemoryError);
+        Problem said = isMemory
                 ? Problem.of("there was not enough memory to go on")
-                        .because("No result was lost: nothing had been written.")
-                        .tryThis("Close other programs or run with fewer threads, then try again.")
+                        .because(
+                                "It may use %d MB; every input whose shape no other has keeps a table of 60 kB or more."
+                                        .formatted(Runtime.getRuntime().maxMemory() >> 20))
+                        .tryThis("Run with fewer threads, or allow it more: JAVA_TOOL_OPTIONS=-Xmx1g.")
                 : Problem.of("Leadline failed; this is our fault, not yours")
                         .because("Your project was not changed.")
                         .tryThis("Please report it with what you did.");

@@ -2,75 +2,72 @@ package dev.leadline.density;
 
 import java.util.List;
 
-/// The parts of those cells of a table that one polynomial does not fit: polynomials of degree 5 of what the argument
-/// of the cell is beyond the beginning of the part. Immutable.
+/// The parts of what one polynomial of a table does not fit: polynomials of degree 13 of what the argument is beyond
+/// the beginning of the part. They are searched, which is slow, and seldom asked. Immutable.
 ///
-/// @param from where each part begins, rising within a cell from 0
-/// @param until where it ends, in the same units
-/// @param coefficients six of each part, lowest degree first
-/// @param guide the part at the beginning of each of the 64 slices of a cell, where a search begins
-/// @param perUnit slices in an argument of 1
-record Parts(double[] from, double[] until, double[] coefficients, int[] guide, double perUnit) {
-    static final Parts NONE = new Parts(new double[0], new double[0], new double[0], new int[0], 0);
+/// @param first the number of the first part of each whole, and at last the number of all parts
+/// @param from where each part begins, rising within a whole from 0
+/// @param coefficients [#STRIDE] of each part, lowest degree first
+record Parts(int[] first, double[] from, double[] coefficients) {
+    static final Parts NONE = new Parts(new int[1], new double[0], new double[0]);
 
-    private static final int SLICES = 64;
+    /// Coefficients of a part.
+    static final int STRIDE = 14;
 
-    /// @param cells the parts of each cell: coefficients, then where it begins
-    /// @param width of a cell
-    static Parts of(List<List<double[]>> cells, double width) {
-        int size = cells.stream().mapToInt(List::size).sum();
-        var parts = new Parts(
-                new double[size],
-                new double[size],
-                new double[size * Table.STRIDE],
-                new int[cells.size() * SLICES],
-                SLICES / width);
-        int begin = 0;
-        for (int number = 0; number < cells.size(); number++) {
-            parts.put(cells.get(number), begin, number, width);
-            begin += cells.get(number).size();
+    /// @param wholes the parts of each: coefficients, then where it begins
+    static Parts of(List<List<double[]>> wholes) {
+        int size = wholes.stream().mapToInt(List::size).sum();
+        var parts = new Parts(new int[wholes.size() + 1], new double[size], new double[size * STRIDE]);
+        int k = 0;
+        for (int number = 0; number < wholes.size(); number++) {
+            for (double[] part : wholes.get(number)) {
+                parts.from[k] = part[STRIDE];
+                System.arraycopy(part, 0, parts.coefficients, k * STRIDE, STRIDE);
+                k++;
+            }
+            parts.first[number + 1] = k;
         }
         return parts;
     }
 
-    private void put(List<double[]> cell, int begin, int number, double width) {
-        for (int i = 0; i < cell.size(); i++) {
-            from[begin + i] = cell.get(i)[Table.STRIDE];
-            until[begin + i] = i + 1 < cell.size() ? cell.get(i + 1)[Table.STRIDE] : width;
-            System.arraycopy(cell.get(i), 0, coefficients, (begin + i) * Table.STRIDE, Table.STRIDE);
-        }
-        int part = begin;
-        for (int slice = 0; slice < SLICES; slice++) {
-            while (until[part] <= slice / perUnit) {
-                part++;
+    int wholes() {
+        return first.length - 1;
+    }
+
+    long bytes() {
+        return 4L * first.length + 8L * (from.length + coefficients.length);
+    }
+
+    /// The polynomial of one of the parts of a whole.
+    double at(int whole, double t) {
+        int low = first[whole];
+        int high = first[whole + 1];
+        while (high - low > 1) {
+            int middle = (low + high) >>> 1;
+            if (from[middle] <= t) {
+                low = middle;
+            } else {
+                high = middle;
             }
-            guide[number * SLICES + slice] = part;
         }
+        return polynomial(coefficients, low * STRIDE, STRIDE, t - from[low]);
     }
 
-    int size() {
-        return from.length;
-    }
-
-    boolean isEmpty() {
-        return from.length == 0;
-    }
-
-    /// The polynomial of one of the parts of a cell.
+    /// Horner's rule with the rounding errors of its steps carried along, so that only the result is rounded: what is
+    /// monotone stays so at every double.
     ///
-    /// @param cell its number among those that have parts
-    double at(int cell, double t) {
-        int part = guide[cell * SLICES + (int) (t * perUnit)];
-        while (until[part] <= t) {
-            part++;
+    /// Source: Graillat, Langlois and Louvet (2009), Compensated Horner scheme.
+    static double polynomial(double[] c, int at, int n, double t) {
+        double y = c[at + n - 1];
+        double error = 0;
+        for (int i = n - 2; i >= 0; i--) {
+            double product = y * t;
+            double sum = product + c[at + i];
+            double added = sum - product;
+            double lost = Math.fma(y, t, -product) + ((product - (sum - added)) + (c[at + i] - added));
+            error = Math.fma(error, t, lost);
+            y = sum;
         }
-        double[] c = coefficients;
-        int k = part * Table.STRIDE;
-        double s = t - from[part];
-        double y = Math.fma(c[k + 5], s, c[k + 4]);
-        y = Math.fma(y, s, c[k + 3]);
-        y = Math.fma(y, s, c[k + 2]);
-        y = Math.fma(y, s, c[k + 1]);
-        return Math.fma(y, s, c[k]);
+        return y + error;
     }
 }

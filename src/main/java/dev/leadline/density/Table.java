@@ -9,95 +9,196 @@ import java.util.HexFormat;
 /// The quantile function of a shape, or its link, as polynomials of degree 5. Immutable.
 ///
 /// With `p = min(u, 1 - u)`, the exponent of `p` and the first `bits` bits of its mantissa name a cell; the bits behind
-/// them are the argument of the cell's polynomial. Lower and upper tail have cells of their own, down to `p = 2^-53`;
-/// one more cell of each holds the median. A cell that one polynomial does not fit, at a kink or a jump of the
-/// quantile, has [parts][Parts]. A table without cells is legal: then every draw costs a quantile.
+/// them are the argument of the cell's polynomial. Lower and upper tail have cells of their own, down to `p = 2^-16`:
+/// for the upper one, `p` is multiplied by `2^16`, which puts its cells behind those of the lower, with the cell of the
+/// median between.
 ///
-/// @param cells the coefficients, lowest degree first, where [#index] says; the last is `NaN` in a cell that has parts,
-///     and the first is its number among those
-/// @param parts empty where every cell is one polynomial
-record Table(Density shape, Link link, int bits, double[] cells, Parts parts, double uError) implements Curve {
-    /// Octaves below 1/2, down to `2^-53`, the smallest probability drawn; octave 52 has the median alone.
-    static final int OCTAVES = 52;
+/// Cells need not be alike: with `grades`, each is cut into as many as it needs.
+///
+/// What is seldom drawn is marked, and mended after all draws of a block have been computed: at a kink or a jump of the
+/// quantile, where one polynomial does not fit a cell, it has [parts][Parts], and so have the octaves below `2^-16`,
+/// which are one marked cell for each tail. The last coefficient of a marked cell is [#MARKED], so are the draws from
+/// it
+/// `NaN`; that of others has another last bit, so that a block is looked through without a branch.
+///
+/// A table without cells is legal: then every draw costs a quantile.
+///
+/// @param grades for each cell, in the low half how far an address is shifted to name those it is cut into, in the high
+///     half from there to their number; empty where cells are alike
+/// @param cells the coefficients, lowest degree first; of one that has parts, the first is its number among the wholes
+///     that have
+/// @param parts of each octave below `2^-16`, lower tail first, then of cells
+record Table(Density shape, Link link, int bits, long[] grades, double[] cells, Parts parts, double uError)
+        implements Curve {
+    /// Octaves of each tail that have cells, from `2^-16` to 1/2.
+    static final int OCTAVES = 15;
+
+    /// Octaves below them, down to `2^-53`, the smallest probability drawn.
+    static final int DEEP = 37;
 
     /// Coefficients of a cell.
     static final int STRIDE = 6;
 
+    /// The last bit of [#MARKED].
+    static final long MARK = 1;
+
+    static final double MARKED = Double.longBitsToDouble(0x7ff8_0000_0000_0000L | MARK);
+
+    private static final double SEAM = 0x1p-16;
+    private static final double BELOW_SEAM = Math.nextDown(SEAM);
     private static final double SMALLEST = 0x1p-53;
     private static final int MANTISSA = 52;
     private static final long ONE = 0x3ff0_0000_0000_0000L;
 
-    /// Exponents of a double, and one more bit above them for the sign.
-    private static final int EXPONENTS = 1 << 11;
+    /// Of the lower tail's first octave.
+    private static final int FIRST_EXPONENT = Double.MAX_EXPONENT - 16;
 
-    static double[] emptyCells(int bits) {
-        return new double[2 * cellsOfTail(bits) * STRIDE];
+    /// For the tail at hand, 1, and for the other `2^16`: `1 + near (FACTOR near - FACTOR)`.
+    private static final double FACTOR = 0x1p15 - 0.5;
+
+    /// Those of both tails, those of the octave between them, of which the first holds the median and the last what
+    /// lies
+    /// below the upper tail, and one for what lies below the lower tail.
+    static int numberOfCells(int bits) {
+        return ((2 * OCTAVES + 1) << bits) + 1;
     }
 
-    private static int cellsOfTail(int bits) {
-        return (OCTAVES << bits) + 1;
-    }
-
-    /// Where the coefficients of a cell begin.
+    /// The number of a cell, where they are alike.
     ///
     /// @param tail 0 lower, 1 upper
-    static int index(int bits, int tail, int octave, int cell) {
-        return (cellsOfTail(bits) * tail + (octave << bits) + cell) * STRIDE;
+    static int number(int bits, int tail, int octave, int cell) {
+        return 1 + (((OCTAVES + 1) * tail + octave) << bits) + cell;
+    }
+
+    static int median(int bits) {
+        return number(bits, 0, OCTAVES, 0);
+    }
+
+    /// What lies below the octaves of a tail.
+    static int below(int bits, int tail) {
+        return number(bits, tail, -1, (1 << bits) - 1);
+    }
+
+    /// @param number of a cell, where they are alike
+    /// @param cut how often it is halved
+    /// @param first of those it is cut into, among all
+    static long grade(int bits, int number, int cut, int first) {
+        int leading = (first(bits) + number) << cut;
+        return (long) (first - leading) << 32 | (MANTISSA - bits - cut);
+    }
+
+    /// Exponent and leading bits of what lies below the lower tail.
+    private static int first(int bits) {
+        return (FIRST_EXPONENT << bits) - 1;
     }
 
     @Override
     public void fill(double[] u, double[] x, int n, double location, double scale) {
-        if (link == Link.NONE) {
-            polynomials(u, x, n, location, scale, Math.signum(scale));
+        if (cells.length == 0) {
+            for (int i = 0; i < n; i++) {
+                x[i] = Math.fma(scale, exact(u[i]), location);
+            }
             return;
         }
-        polynomials(u, x, n, 0, 1, Math.signum(scale));
-        link.invert(x, n);
+        var columns = Columns.ofThread(n);
+        double side = Math.signum(scale);
+        double[] given = u;
+        if (u == x) {
+            given = columns.a();
+            System.arraycopy(u, 0, given, 0, n);
+        }
+        if (link.isSum()) {
+            tabulated(given, x, n, Math.fma(link.added(), scale, location), scale, side);
+            return;
+        }
+        tabulated(given, x, n, -0.0, 1, side);
+        link.invert(x, n, columns);
         for (int i = 0; i < n; i++) {
             x[i] = Math.fma(scale, x[i], location);
         }
     }
 
     /// @param side 1, or -1 where the other tail is wanted
-    private void polynomials(double[] u, double[] x, int n, double location, double scale, double side) {
+    private void tabulated(double[] u, double[] x, int n, double location, double scale, double side) {
         tails(u, x, n, side);
-        double[] c = cells;
-        if (c.length == 0) {
-            for (int i = 0; i < n; i++) {
-                x[i] = Math.fma(scale, exact(x[i]), location);
-            }
-            return;
-        }
-        int shift = MANTISSA - bits;
-        int first = (Double.MAX_EXPONENT - 53) << bits;
-        int upper = cellsOfTail(bits) - (EXPONENTS << bits);
-        if (parts.isEmpty()) {
-            for (int i = 0; i < n; i++) {
-                x[i] = Math.fma(scale, polynomial(c, shift, first, upper, x[i]), location);
-            }
-            return;
-        }
-        for (int i = 0; i < n; i++) {
-            double y = polynomial(c, shift, first, upper, x[i]);
-            x[i] = Math.fma(scale, Double.isNaN(y) ? part(shift, first, upper, x[i]) : y, location);
+        long marks = grades.length == 0
+                ? alike(cells, bits, x, n, location, scale)
+                : graded(cells, grades, bits, x, n, location, scale);
+        if ((marks & MARK) != 0) {
+            mend(u, x, n, location, scale, side);
         }
     }
 
-    /// The probability of the nearer tail, with a minus sign for the upper one: one number that names the cell. It is
-    /// never below the smallest that has one, which moves no probability by more than that, `1.1e-16`.
+    /// The probability of the nearer tail, as a number that names the cell.
     ///
     /// In a loop of its own, without a branch, this is vectorised.
     private static void tails(double[] u, double[] x, int n, double side) {
         for (int i = 0; i < n; i++) {
-            double near = Math.signum(0.5 - u[i]);
-            x[i] = Math.max(Math.min(u[i], 1 - u[i]), SMALLEST) * (near + (1 - near * near)) * side;
+            double near = Math.signum(0.5 - u[i]) * side;
+            double p = Math.max(Math.min(u[i], 1 - u[i]), BELOW_SEAM);
+            x[i] = p * Math.fma(near, Math.fma(FACTOR, near, -FACTOR), 1);
         }
     }
 
-    private static double polynomial(double[] c, int shift, int first, int upper, double tail) {
-        long address = Double.doubleToRawLongBits(tail);
-        int k = index(address, shift, first, upper);
-        double t = argument(address, shift);
+    /// @return all marks seen
+    private static long alike(double[] c, int bits, double[] x, int n, double location, double scale) {
+        int shift = MANTISSA - bits;
+        int first = first(bits);
+        long marks = 0;
+        for (int i = 0; i < n; i++) {
+            long address = Double.doubleToRawLongBits(x[i]);
+            int k = ((int) (address >>> shift) - first) * STRIDE;
+            double y = polynomial(c, k, argument(address, shift));
+            marks |= Double.doubleToRawLongBits(c[k + 5]);
+            x[i] = Math.fma(scale, y, location);
+        }
+        return marks;
+    }
+
+    private static long graded(double[] c, long[] grades, int bits, double[] x, int n, double location, double scale) {
+        int shift = MANTISSA - bits;
+        int first = first(bits);
+        long marks = 0;
+        for (int i = 0; i < n; i++) {
+            long address = Double.doubleToRawLongBits(x[i]);
+            long grade = grades[(int) (address >>> shift) - first];
+            int k = ((int) (address >>> (int) grade) + (int) (grade >> 32)) * STRIDE;
+            double y = polynomial(c, k, argument(address, (int) grade));
+            marks |= Double.doubleToRawLongBits(c[k + 5]);
+            x[i] = Math.fma(scale, y, location);
+        }
+        return marks;
+    }
+
+    /// No probability is below the smallest drawn, which moves none by more than that, `1.1e-16`.
+    private void mend(double[] u, double[] x, int n, double location, double scale, double side) {
+        for (int i = 0; i < n; i++) {
+            if (Double.isNaN(x[i])) {
+                double p = Math.max(Math.min(u[i], 1 - u[i]), SMALLEST);
+                boolean upper = (0.5 - u[i]) * side < 0;
+                x[i] = Math.fma(scale, p < SEAM ? deep(p, upper) : part(p, upper), location);
+            }
+        }
+    }
+
+    private double deep(double p, boolean upper) {
+        long address = Double.doubleToRawLongBits(p);
+        int octave = Math.getExponent(p) - Math.getExponent(SMALLEST);
+        return parts.at(upper ? DEEP + octave : octave, argument(address, MANTISSA));
+    }
+
+    private double part(double p, boolean upper) {
+        long address = Double.doubleToRawLongBits(upper ? 0x1p16 * p : p);
+        long grade = grades[(int) (address >>> (MANTISSA - bits)) - first(bits)];
+        int k = ((int) (address >>> (int) grade) + (int) (grade >> 32)) * STRIDE;
+        return parts.at((int) cells[k], argument(address, (int) grade));
+    }
+
+    private static double argument(long address, int shift) {
+        return Double.longBitsToDouble((address & ((1L << shift) - 1)) | ONE) - 1;
+    }
+
+    static double polynomial(double[] c, int k, double t) {
         double y = Math.fma(c[k + 5], t, c[k + 4]);
         y = Math.fma(y, t, c[k + 3]);
         y = Math.fma(y, t, c[k + 2]);
@@ -105,42 +206,26 @@ record Table(Density shape, Link link, int bits, double[] cells, Parts parts, do
         return Math.fma(y, t, c[k]);
     }
 
-    /// @param first exponent and leading bits of the smallest probability
-    /// @param upper from the address of a lower tail to the cell of the upper one, less the sign that is part of it
-    private static int index(long address, int shift, int first, int upper) {
-        return ((int) (address >>> shift) - first + ((int) (address >> 63) & upper)) * STRIDE;
-    }
-
-    private static double argument(long address, int shift) {
-        return Double.longBitsToDouble((address & ((1L << shift) - 1)) | ONE) - 1;
-    }
-
-    private double part(int shift, int first, int upper, double tail) {
-        long address = Double.doubleToRawLongBits(tail);
-        int k = index(address, shift, first, upper);
-        return parts.at((int) cells[k], argument(address, shift));
-    }
-
     /// From the quantile function itself, where there are no cells.
-    private double exact(double tail) {
-        boolean lower = Double.doubleToRawLongBits(tail) >= 0;
-        if (link == Link.NONE) {
-            return lower ? shape.quantile(tail) : shape.upperQuantile(-tail);
-        }
-        var linked = (Linked) shape;
-        return lower ? linked.linked(tail) : linked.upperLinked(-tail);
+    private double exact(double u) {
+        return u <= 0.5 ? shape.quantile(Math.max(u, SMALLEST)) : shape.upperQuantile(Math.max(1 - u, SMALLEST));
     }
 
     @Override
     public long bytes() {
-        return 8L * cells.length;
+        return 8L * (cells.length + grades.length) + parts.bytes();
     }
 
     @Override
     public String hash() {
-        var bytes = ByteBuffer.allocate(8 + 8 * (cells.length + parts.size() * (1 + STRIDE)));
+        double[] from = parts.from();
+        double[] coefficients = parts.coefficients();
+        var bytes = ByteBuffer.allocate(8 * (1 + grades.length + cells.length + from.length + coefficients.length));
         bytes.putInt(link.ordinal()).putInt(bits);
-        bytes.asDoubleBuffer().put(cells).put(parts.from()).put(parts.coefficients());
+        for (long grade : grades) {
+            bytes.putLong(grade);
+        }
+        bytes.asDoubleBuffer().put(cells).put(from).put(coefficients);
         try {
             var digest = MessageDigest.getInstance("SHA-256");
             digest.update(shape.toString().getBytes(StandardCharsets.UTF_8));

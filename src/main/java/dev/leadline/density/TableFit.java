@@ -7,14 +7,15 @@ import java.util.Optional;
 
 /// Builds the table of a shape, and measures it.
 ///
-/// A cell's polynomial passes through the quantile at both ends of the cell and at the four Chebyshev-Lobatto points
-/// between. It is anchored at the quantile of its first end, and its slope is trimmed by rounding errors until its last
-/// value does not pass the quantile of the other end: so the table is monotone across cells. Where quantiles fall back
-/// by rounding errors, the first of them counts, from the middle outwards.
+/// A polynomial passes through the quantile at both ends of its cell and at the Chebyshev-Lobatto points between. It is
+/// anchored at the quantile of its first end, and its slope is trimmed by rounding errors until its last value does not
+/// pass the quantile of the other end: so the table is monotone across cells. Where quantiles fall back by rounding
+/// errors, the first of them counts, from the middle outwards.
 ///
-/// A cell that misses is halved, and so on, until every part of it is hit. At a jump of the quantile that ends where
-/// the part is narrower than the error that is allowed: any value between those of its ends is right there, and it gets
-/// the value of its first end, so that no draw falls into the gap.
+/// A cell that misses is cut in two, four, and so on. At a kink or a jump that does not end: once what is missed is
+/// seldom drawn, it gets parts, each halved until it is hit. At a jump that ends where the part is narrower than the
+/// error that is allowed: any value between those of its ends is right there, and it gets the value of its first end,
+/// so that no draw falls into the gap.
 ///
 /// What is measured is how far the probability lies from what the drawn value, or a neighbour of it among the doubles,
 /// stands for: near 1, say, a steep distribution cannot be hit more closely. Of a discrete shape that is how far it
@@ -29,114 +30,145 @@ final class TableFit {
     /// A few times the distance between neighbouring u.
     private static final double FEW_ULP = 1e-15;
 
-    private static final int LEAST_BITS = 5;
+    /// Of the smallest table.
+    private static final int BITS = 5;
 
-    /// Up to here a plain table is tried before one of distances to both ends, which costs a tenth more.
-    private static final int FEW_BITS = 6;
+    /// A table whose cells are cut this often is as fast with all cells alike.
+    private static final int FEW_CUTS = 2;
 
-    private static final int MOST_BITS = 8;
+    private static final int MOST_CUTS = 8;
 
-    /// The probability of a draw in a cell of parts above which a table of more bits is faster; such a draw costs as
-    /// much as ten others.
-    private static final double SELDOM = 0.004;
+    /// A cell may have parts once what is missed has this probability, and is such a part of the cell.
+    private static final double SELDOM = 0x1p-14;
 
-    /// A cell that has more parts than this is not spoilt by a few kinks or jumps, but by noise.
-    private static final int PARTS_OF_CELL = 400;
+    private static final double FEW = 1 / 8.0;
 
-    /// As much memory as twice the cells of the smallest table.
-    private static final int PARTS = 6_000;
+    /// Coefficients of a part so narrow that rounding spoils more of them.
+    private static final int LOWER = 5;
 
-    /// `(1 - cos(k pi / 5)) / 2`.
-    private static final double[] LOBATTO = {
-        0, 0.09549150281252627, 0.3454915028125263, 0.6545084971874737, 0.9045084971874737, 1
-    };
+    /// What has more parts than this is not spoilt by a few kinks or jumps, but by noise.
+    private static final int PARTS = 400;
 
-    /// Where a cell is measured: its ends, and between the points it passes through.
-    private static final double[] MEASURED = {0, 0.03, 0.22, 0.5, 0.78, 0.97, 1};
+    /// Enough for what is smooth.
+    private static final int FEW_PARTS = 8;
 
-    /// From the coefficients of a polynomial of degree 4 to those in Bernstein's form: `C(i, j) / C(4, j)`.
-    private static final double[][] BERNSTEIN = {
-        {1}, {1, 1 / 4.0}, {1, 2 / 4.0, 1 / 6.0}, {1, 3 / 4.0, 3 / 6.0, 1 / 4.0}, {1, 1, 1, 1, 1}
-    };
+    /// As much memory as ten times the smallest table.
+    private static final int PARTS_IN_ALL = 4_000;
 
     private final Density shape;
     private final Link link;
     private final int bits;
-    private final double[] cells;
+    private final int cuts;
+    private final boolean isCut;
+
+    /// Coefficients of each cell, or of those that it is cut into.
+    private final double[][] cells;
+
     private final List<List<double[]>> parts = new ArrayList<>();
     private int partsInAll;
+    private int mostCut;
     private double worst;
 
-    private TableFit(Density shape, Link link, int bits) {
+    /// @param cuts a cell that misses is halved as often, if need be
+    /// @param isCut whether cells may have parts
+    private TableFit(Density shape, Link link, int bits, int cuts, boolean isCut) {
         this.shape = shape;
         this.link = link;
         this.bits = bits;
-        this.cells = Table.emptyCells(bits);
+        this.cuts = cuts;
+        this.isCut = isCut;
+        this.cells = new double[Table.numberOfCells(bits)][Table.STRIDE];
+        for (int i = 0; i < 2 * Table.DEEP; i++) {
+            parts.add(new ArrayList<>());
+        }
     }
 
     /// The smallest and fastest table that is accurate; where none is, one that has no cells.
     ///
     /// A shape that has a link is smooth through it: what its plain table misses, it misses by rounding, and
-    /// parts would only hide that. Up to 7 bits its table is faster than an exponential function.
+    /// parts would only hide that.
     static Table of(Density shape) {
         Optional<Table> table = Optional.empty();
         if (shape instanceof Linked linked) {
-            table = least(shape, Link.NONE, LEAST_BITS, FEW_BITS, 0);
-            if (table.isEmpty() && linked.link() == Link.LOGIT) {
-                table = least(shape, Link.ENDS, LEAST_BITS, MOST_BITS, 0);
+            table = smooth(shape, Link.NONE, 1);
+            if (table.isEmpty() && linked.link() == Link.LOG_OF_ENDS) {
+                table = smooth(shape, Link.ENDS, 3);
             }
-            table = table.or(() -> least(shape, Link.NONE, FEW_BITS + 1, MOST_BITS - 1, 0))
-                    .or(() -> least(shape, linked.link(), LEAST_BITS, MOST_BITS, 0));
-        } else {
-            table = least(shape, Link.NONE, LEAST_BITS, MOST_BITS, SELDOM);
+            if (table.isEmpty() && linked.link() == Link.LOG && shape.quantile(0x1p-53) > 0.5) {
+                table = smooth(shape, Link.ABOVE_ONE, 1);
+            }
+            table = table.or(() -> smooth(shape, linked.link(), 3));
         }
-        return table.or(() -> new TableFit(shape, Link.NONE, MOST_BITS).table(1))
-                .orElseGet(() -> slow(shape));
+        return table.or(() -> broken(shape)).orElseGet(() -> slow(shape));
     }
 
-    private static Optional<Table> least(Density shape, Link link, int from, int to, double most) {
-        for (int bits = from; bits <= to; bits++) {
-            var table = new TableFit(shape, link, bits).table(most);
-            if (table.isPresent()) {
-                return table;
-            }
-        }
-        return Optional.empty();
+    private static Optional<Table> smooth(Density shape, Link link, int cuts) {
+        return whole(shape, link, new TableFit(shape, link, BITS, cuts, false));
+    }
+
+    private static Optional<Table> broken(Density shape) {
+        return whole(shape, Link.NONE, new TableFit(shape, Link.NONE, BITS, MOST_CUTS, true));
+    }
+
+    private static Optional<Table> whole(Density shape, Link link, TableFit fit) {
+        var table = fit.table();
+        boolean isSmooth = fit.parts.size() == 2 * Table.DEEP;
+        return table.isPresent() && fit.mostCut > 0 && fit.mostCut <= FEW_CUTS && isSmooth
+                ? new TableFit(shape, link, BITS + fit.mostCut, 0, false)
+                        .table()
+                        .or(() -> table)
+                : table;
     }
 
     /// Without cells: every draw costs a quantile.
     static Table slow(Density shape) {
-        var slow = new Table(shape, Link.NONE, 0, new double[0], Parts.NONE, 0);
-        return new Table(shape, Link.NONE, 0, slow.cells(), Parts.NONE, worst(shape, slow));
+        var slow = new Table(shape, Link.NONE, 0, new long[0], new double[0], Parts.NONE, 0);
+        return new Table(shape, Link.NONE, 0, slow.grades(), slow.cells(), Parts.NONE, worst(shape, slow));
     }
 
-    /// Empty as soon as cells of more probability than `most` are missed, or a cell cannot be mended by parts.
-    private Optional<Table> table(double most) {
-        fillMedian();
-        var whole = new Table(shape, link, bits, cells, Parts.NONE, 0);
-        var missed = new ArrayList<Cell>();
-        double mass = 0;
-        double[] limits = {value(0.5, 0), value(0.5, 1)};
-        for (int octave = Table.OCTAVES - 1; octave >= 0; octave--) {
+    /// Empty as soon as something is missed for good.
+    private Optional<Table> table() {
+        double median = value(0.5, 0);
+        double[] limits = {median, median};
+        cells[Table.median(bits)][0] = median;
+        for (int tail = 0; tail < 2; tail++) {
+            mark(cells[Table.below(bits, tail)], 0);
+        }
+        for (int octave = Table.OCTAVES - 1; octave >= -Table.DEEP; octave--) {
+            double base = StrictMath.scalb(1.0, octave - 16);
             for (int tail = 0; tail < 2; tail++) {
-                double first = within(value(StrictMath.scalb(1.0, octave - 53), tail), limits[tail], tail);
-                double last = limits[tail];
-                limits[tail] = first;
-                for (var cell : fit(whole, octave, tail, first, last)) {
-                    missed.add(cell);
-                    mass += cell.width(bits);
-                    if (mass > most) {
-                        return Optional.empty();
-                    }
+                double first = within(value(base, tail), limits[tail], tail);
+                boolean isHit = octave < 0
+                        ? deep(octave, new Cell(base, 0, 1, tail, first, limits[tail]))
+                        : fit(octave, new Cell(base, 0, 1, tail, first, limits[tail]));
+                if (!isHit) {
+                    return Optional.empty();
                 }
+                limits[tail] = first;
             }
         }
-        for (var cell : missed) {
-            if (!split(cell)) {
-                return Optional.empty();
-            }
+        return Optional.of(mostCut == 0 && parts.size() == 2 * Table.DEEP ? alike() : graded());
+    }
+
+    private Table alike() {
+        var all = new double[cells.length * Table.STRIDE];
+        for (int i = 0; i < cells.length; i++) {
+            System.arraycopy(cells[i], 0, all, i * Table.STRIDE, Table.STRIDE);
         }
-        return Optional.of(new Table(shape, link, bits, cells, Parts.of(parts, StrictMath.scalb(1.0, -bits)), worst));
+        return new Table(shape, link, bits, new long[0], all, Parts.of(parts), worst);
+    }
+
+    private Table graded() {
+        var all = new double[Arrays.stream(cells).mapToInt(c -> c.length).sum()];
+        var grades = new long[cells.length];
+        int from = 0;
+        for (int i = 0; i < cells.length; i++) {
+            int cut = Integer.numberOfTrailingZeros(cells[i].length / Table.STRIDE);
+            grades[i] = Table.grade(bits, i, cut, from / Table.STRIDE);
+            System.arraycopy(cells[i], 0, all, from, cells[i].length);
+            from += cells[i].length;
+        }
+        return new Table(shape, link, bits, grades, all, Parts.of(parts), worst);
     }
 
     /// A value, or the limit that it must not pass on the way to the middle.
@@ -145,28 +177,30 @@ final class TableFit {
         return passes ? limit : value;
     }
 
-    /// @param octave counted from the smallest probability
-    /// @param first what is tabulated at its smallest probability
-    /// @param last what is tabulated where the next begins
-    private record Cell(int octave, int cell, int tail, double first, double last) {
-        /// The probability at which the octave begins.
-        double base() {
-            return StrictMath.scalb(1.0, octave - 53);
+    /// A stretch of one tail.
+    ///
+    /// @param base the probability at which its octave begins
+    /// @param from where it begins in the octave, in units of the base
+    /// @param width in the same units
+    /// @param first what is tabulated where it begins
+    /// @param last what no value of it passes; where it is known what is tabulated where it ends, that
+    private record Cell(double base, double from, double width, int tail, double first, double last) {
+        double p(double part) {
+            return base * (1 + from + part * width);
         }
 
-        /// In probability.
-        double width(int bits) {
-            return StrictMath.scalb(1.0, octave - 53 - bits);
+        /// What a polynomial is asked with.
+        double argument(double p) {
+            return p / base - 1 - from;
         }
 
-        int index(int bits) {
-            return Table.index(bits, tail, octave, cell);
+        double mass() {
+            return base * width;
         }
-    }
 
-    private void fillMedian() {
-        for (int tail = 0; tail < 2; tail++) {
-            cells[Table.index(bits, tail, Table.OCTAVES, 0)] = value(0.5, tail);
+        /// Whether it can be halved, and has to.
+        boolean isWide() {
+            return mass() > 0.5 * Math.min(U_ERROR, RELATIVE * p(0));
         }
     }
 
@@ -179,121 +213,138 @@ final class TableFit {
         return link.tabulated(tail == 0 ? linked.linked(p) : linked.upperLinked(p));
     }
 
-    /// Fits the cells of an octave.
-    ///
-    /// @return those that were missed
-    private List<Cell> fit(Table table, int octave, int tail, double first, double last) {
-        var missed = new ArrayList<Cell>();
-        var ends = new double[(1 << bits) + 1];
-        ends[0] = first;
+    /// Fits the cells of an octave. False where one is missed for good.
+    private boolean fit(int octave, Cell whole) {
         double width = StrictMath.scalb(1.0, -bits);
-        for (int number = 0; number < 1 << bits; number++) {
-            var cell = new Cell(octave, number, tail, ends[number], last);
-            var t = new double[LOBATTO.length];
-            var y = new double[LOBATTO.length];
-            points(cell, 0, width, cell.first(), last, t, y);
-            ends[number + 1] = y[t.length - 1];
-            var c = through(t, link.smooth(y), tail)
-                    .filter(c_ -> !(shape instanceof Linked) || isMonotone(c_, width, tail));
-            if (c.isPresent()) {
-                System.arraycopy(c.get(), 0, cells, cell.index(bits), Table.STRIDE);
-            } else {
-                Arrays.fill(cells, cell.index(bits), cell.index(bits) + Table.STRIDE, Double.NaN);
+        double first = whole.first();
+        for (int cell = 0; cell < 1 << bits; cell++) {
+            int number = Table.number(bits, whole.tail(), octave, cell);
+            var stretch = new Cell(whole.base(), cell * width, width, whole.tail(), first, whole.last());
+            boolean isHit = false;
+            for (int cut = 0; cut <= cuts && !isHit; cut++) {
+                var missed = new ArrayList<Integer>();
+                var ends = new double[(1 << cut) + 1];
+                cells[number] = cut(stretch, cut, ends, missed);
+                isHit = missed.isEmpty();
+                first = ends[1 << cut];
+                if (!isHit && isCut && (cut == cuts || isSeldom(missed.size(), cut, stretch))) {
+                    for (int k : missed) {
+                        if (!part(cells[number], k, piece(stretch, cut, k, ends[k], ends[k + 1]))) {
+                            return false;
+                        }
+                    }
+                    isHit = true;
+                }
+                mostCut = isHit ? Math.max(mostCut, cut) : mostCut;
+            }
+            if (!isHit) {
+                return false;
             }
         }
-        double[] errors = errors(shape, table, octave, bits, tail);
-        for (int number = 0; number < errors.length; number++) {
-            if (errors[number] <= U_ERROR) {
-                worst = Math.max(worst, errors[number]);
-            } else {
-                missed.add(new Cell(octave, number, tail, ends[number], ends[number + 1]));
-            }
-        }
-        return missed;
+        return true;
     }
 
-    /// The points that a part of a cell passes through.
+    /// Whether what is missed of a cell that is cut may have parts.
+    private static boolean isSeldom(int missed, int cut, Cell cell) {
+        double mass = StrictMath.scalb(cell.mass(), -cut) * missed;
+        return mass <= SELDOM && missed <= StrictMath.scalb(FEW, cut);
+    }
+
+    private static Cell piece(Cell whole, int cut, int number, double first, double last) {
+        double width = StrictMath.scalb(whole.width(), -cut);
+        return new Cell(whole.base(), whole.from() + number * width, width, whole.tail(), first, last);
+    }
+
+    /// The polynomials of a cell that is cut.
     ///
-    /// @param from where it begins, in units of the octave's first probability
-    /// @param y what is tabulated there; the first is `first`, none is before that or beyond `last`
-    private void points(Cell cell, double from, double width, double first, double last, double[] t, double[] y) {
-        double before = StrictMath.scalb(cell.cell(), -bits) + from;
-        for (int j = 0; j < t.length; j++) {
-            double p = cell.base() * (1 + before + LOBATTO[j] * width);
-            t[j] = p / cell.base() - 1 - before;
-            y[j] = j == 0 ? first : within(within(value(p, cell.tail()), y[j - 1], 1 - cell.tail()), last, cell.tail());
+    /// @param ends filled with what is tabulated where those it is cut into begin, and where the last ends
+    /// @param missed filled with the numbers of those whose polynomial misses
+    private double[] cut(Cell whole, int cut, double[] ends, List<Integer> missed) {
+        var all = new double[Table.STRIDE << cut];
+        ends[0] = whole.first();
+        for (int k = 0; k < 1 << cut; k++) {
+            var piece = piece(whole, cut, k, ends[k], whole.last());
+            var nodes = new Nodes(piece, Table.STRIDE);
+            ends[k + 1] = nodes.end();
+            var c = nodes.through().filter(c_ -> !(shape instanceof Linked) || isMonotone(c_, piece));
+            double error = c.isPresent() ? error(piece, c.get()) : Double.POSITIVE_INFINITY;
+            if (error <= U_ERROR) {
+                worst = Math.max(worst, error);
+                System.arraycopy(c.get(), 0, all, k * Table.STRIDE, Table.STRIDE);
+            } else {
+                missed.add(k);
+            }
         }
+        return all;
     }
 
-    /// Halves a cell until all of its parts are hit. False where too many would be needed.
-    private boolean split(Cell cell) {
-        var ofCell = new ArrayList<double[]>();
-        if (!halve(cell, 0, StrictMath.scalb(1.0, -bits), cell.first(), cell.last(), ofCell)) {
+    /// Gives parts to one of the cells whose coefficients are given.
+    private boolean part(double[] c, int number, Cell cell) {
+        int from = number * Table.STRIDE;
+        Arrays.fill(c, from, from + Table.STRIDE, 0);
+        c[from] = parts.size();
+        mark(c, from);
+        parts.add(new ArrayList<>());
+        return cover(cell, cell.from(), PARTS, parts.getLast());
+    }
+
+    private static void mark(double[] c, int from) {
+        c[from + Table.STRIDE - 1] = Table.MARKED;
+    }
+
+    private boolean deep(int octave, Cell whole) {
+        return cover(whole, 0, isCut ? PARTS : FEW_PARTS, parts.get(whole.tail() * Table.DEEP + octave + Table.DEEP));
+    }
+
+    /// Adds parts until all of a cell is hit. False where too many would be needed.
+    ///
+    /// @param from where the whole begins that has the parts
+    private boolean cover(Cell cell, double from, int most, List<double[]> ofWhole) {
+        var hit = hit(cell);
+        if (hit.isPresent()) {
+            var part = Arrays.copyOf(hit.get(), Parts.STRIDE + 1);
+            part[Parts.STRIDE] = cell.from() - from;
+            ofWhole.add(part);
+            partsInAll++;
+            return true;
+        }
+        if (!cell.isWide() || ofWhole.size() >= most || partsInAll >= PARTS_IN_ALL) {
             return false;
         }
-        int k = cell.index(bits);
-        Arrays.fill(cells, k, k + Table.STRIDE, Double.NaN);
-        cells[k] = parts.size();
-        parts.add(ofCell);
-        partsInAll += ofCell.size();
-        return true;
+        double p = cell.p(0.5);
+        double middle = within(within(value(p, cell.tail()), cell.first(), 1 - cell.tail()), cell.last(), cell.tail());
+        return cover(piece(cell, 1, 0, cell.first(), middle), from, most, ofWhole)
+                && cover(piece(cell, 1, 1, middle, cell.last()), from, most, ofWhole);
     }
 
-    private boolean halve(Cell cell, double from, double width, double first, double last, List<double[]> ofCell) {
-        double half = 0.5 * width;
-        double p = cell.base() * (1 + StrictMath.scalb(cell.cell(), -bits) + from + half);
-        double middle = within(within(value(p, cell.tail()), first, 1 - cell.tail()), last, cell.tail());
-        boolean isWide = cell.base() * half > 0.5 * Math.min(U_ERROR, RELATIVE * p);
-        for (int side = 0; side < 2; side++) {
-            double begin = from + side * half;
-            double a = side == 0 ? first : middle;
-            double b = side == 0 ? middle : last;
-            if (!isHit(cell, begin, half, a, b, isWide, ofCell)
-                    && !(isWide && halve(cell, begin, half, a, b, ofCell))) {
-                return false;
-            }
-            if (ofCell.size() > PARTS_OF_CELL || partsInAll + ofCell.size() > PARTS) {
-                return false;
-            }
-        }
-        return true;
+    /// A polynomial for all of a cell, one of a lower degree, or at a jump, or where values differ by rounding errors,
+    /// one value.
+    private Optional<double[]> hit(Cell cell) {
+        return hit(cell, new Nodes(cell, Parts.STRIDE).through())
+                .or(() -> hit(cell, new Nodes(cell, LOWER).through()))
+                .or(() -> hit(cell, Optional.of(new double[] {cell.first()})));
     }
 
-    /// Adds a part, if one polynomial, or at a jump one value, is right for all of it.
-    private boolean isHit(
-            Cell cell, double from, double width, double first, double last, boolean isWide, List<double[]> ofCell) {
-        var t = new double[LOBATTO.length];
-        var y = new double[LOBATTO.length];
-        points(cell, from, width, first, last, t, y);
-        var c = through(t, link.smooth(y), cell.tail()).filter(c_ -> isMonotone(c_, width, cell.tail()));
-        double error = c.isPresent() ? error(cell, from, width, c.get()) : Double.POSITIVE_INFINITY;
-        if (!(error <= U_ERROR) && !isWide) {
-            c = Optional.of(new double[] {first, 0, 0, 0, 0, 0});
-            error = error(cell, from, width, c.get());
-        }
+    private Optional<double[]> hit(Cell cell, Optional<double[]> c) {
+        double error =
+                c.filter(c_ -> isMonotone(c_, cell)).map(c_ -> error(cell, c_)).orElse(Double.NaN);
         if (!(error <= U_ERROR)) {
-            return false;
+            return Optional.empty();
         }
         worst = Math.max(worst, error);
-        var part = Arrays.copyOf(c.get(), Table.STRIDE + 1);
-        part[Table.STRIDE] = from;
-        ofCell.add(part);
-        return true;
+        return c;
     }
 
     /// Whether the Bernstein coefficients of the slope have one sign, which is enough.
-    private static boolean isMonotone(double[] c, double width, int tail) {
-        var slope = new double[5];
-        double power = width;
-        for (int j = 0; j < 5; j++) {
-            slope[j] = (j + 1) * c[j + 1] * power;
-            power *= width;
-        }
-        double sign = tail == 0 ? 1 : -1;
-        for (int i = 0; i < 5; i++) {
+    private static boolean isMonotone(double[] c, Cell cell) {
+        int degree = c.length - 2;
+        double sign = cell.tail() == 0 ? 1 : -1;
+        for (int i = 0; i <= degree; i++) {
             double sum = 0;
+            double weight = cell.width();
             for (int j = 0; j <= i; j++) {
-                sum += BERNSTEIN[i][j] * slope[j];
+                sum += weight * (j + 1) * c[j + 1];
+                weight *= cell.width() * (i - j) / (degree - j);
             }
             if (!(sign * sum >= 0)) {
                 return false;
@@ -302,20 +353,23 @@ final class TableFit {
         return true;
     }
 
-    private double error(Cell cell, double from, double width, double[] c) {
-        int n = MEASURED.length;
-        var x = new double[n];
-        var p = new double[n];
-        double before = StrictMath.scalb(cell.cell(), -bits) + from;
-        for (int i = 0; i < n; i++) {
-            p[i] = cell.base() * (1 + before + MEASURED[i] * width);
-            x[i] = at(c, p[i] / cell.base() - 1 - before);
+    /// As the table computes it: a cell, or a part.
+    private static double at(double[] c, double t) {
+        return c.length == Table.STRIDE ? Table.polynomial(c, 0, t) : Parts.polynomial(c, 0, c.length, t);
+    }
+
+    private double error(Cell cell, double[] c) {
+        double[] measured = Lobatto.measured(c.length);
+        var x = new double[measured.length];
+        for (int i = 0; i < x.length; i++) {
+            x[i] = at(c, cell.argument(cell.p(measured[i])));
         }
-        link.invert(x, n);
+        link.invert(x, x.length, Columns.ofThread(x.length));
         double largest = 0;
-        for (int i = 0; i < n; i++) {
-            double error = error(shape, x[i], p[i], cell.tail());
-            if (!(error <= RELATIVE * p[i])) {
+        for (int i = 0; i < x.length; i++) {
+            double p = cell.p(measured[i]);
+            double error = error(shape, x[i], p, cell.tail(), 1);
+            if (!(error <= RELATIVE * p)) {
                 return Double.POSITIVE_INFINITY;
             }
             largest = Math.max(largest, error);
@@ -323,92 +377,113 @@ final class TableFit {
         return largest;
     }
 
-    /// Newton's divided differences, expanded; then the trim, if that succeeds.
-    private static Optional<double[]> through(double[] t, double[] y, int tail) {
-        int n = t.length;
-        var difference = y.clone();
-        for (int order = 1; order < n; order++) {
-            for (int j = n - 1; j >= order; j--) {
-                difference[j] = (difference[j] - difference[j - 1]) / (t[j] - t[j - order]);
+    /// What a polynomial of `n` coefficients passes through: arguments, and what is tabulated there.
+    private final class Nodes {
+        private final Cell cell;
+        private final double[] t;
+        private final double[] y;
+
+        Nodes(Cell cell, int n) {
+            this.cell = cell;
+            this.t = new double[n];
+            this.y = new double[n];
+            double[] nodes = Lobatto.nodes(n);
+            y[0] = cell.first();
+            for (int j = 1; j < n; j++) {
+                double p = cell.p(nodes[j]);
+                t[j] = cell.argument(p);
+                y[j] = within(within(value(p, cell.tail()), y[j - 1], 1 - cell.tail()), cell.last(), cell.tail());
             }
         }
-        var c = new double[n];
-        for (int j = n - 1; j >= 0; j--) {
-            for (int i = n - 1; i > 0; i--) {
-                c[i] = c[i - 1] - t[j] * c[i];
-            }
-            c[0] = difference[j] - t[j] * c[0];
+
+        double end() {
+            return y[y.length - 1];
         }
-        c[0] = y[0];
-        double end = y[n - 1];
-        double last = t[n - 1] - 0x1p-52;
-        double sign = tail == 0 ? 1 : -1;
-        for (int trial = 0; trial < 8; trial++) {
-            double excess = sign * (at(c, last) - end);
-            if (excess <= 0) {
-                return Optional.of(c);
+
+        /// Newton's divided differences, expanded; then the trim, if that succeeds.
+        Optional<double[]> through() {
+            int n = t.length;
+            double[] smooth = link.smooth(y);
+            var difference = smooth.clone();
+            for (int order = 1; order < n; order++) {
+                for (int j = n - 1; j >= order; j--) {
+                    difference[j] = (difference[j] - difference[j - 1]) / (t[j] - t[j - order]);
+                }
             }
-            c[1] -= sign * Math.max(excess, Math.ulp(end)) / last;
+            var c = new double[n];
+            for (int j = n - 1; j >= 0; j--) {
+                for (int i = n - 1; i > 0; i--) {
+                    c[i] = c[i - 1] - t[j] * c[i];
+                }
+                c[0] = difference[j] - t[j] * c[0];
+            }
+            c[0] = smooth[0];
+            c[n - 1] = unmarked(c[n - 1]);
+            return trimmed(c, smooth[n - 1]);
         }
-        return Optional.empty();
+
+        private static double unmarked(double coefficient) {
+            return Double.longBitsToDouble(Double.doubleToRawLongBits(coefficient) & ~Table.MARK);
+        }
+
+        private Optional<double[]> trimmed(double[] c, double end) {
+            double last = t[t.length - 1] - 0x1p-52;
+            double sign = cell.tail() == 0 ? 1 : -1;
+            for (int trial = 0; trial < 8; trial++) {
+                double excess = sign * (at(c, last) - end);
+                if (excess <= 0) {
+                    return Optional.of(c);
+                }
+                c[1] -= sign * Math.max(excess, Math.ulp(end)) / last;
+            }
+            return Optional.empty();
+        }
     }
 
-    private static double at(double[] c, double t) {
-        double y = Math.fma(c[5], t, c[4]);
-        y = Math.fma(y, t, c[3]);
-        y = Math.fma(y, t, c[2]);
-        y = Math.fma(y, t, c[1]);
-        return Math.fma(y, t, c[0]);
-    }
-
-    /// Largest error of a curve that has no cells, measured where those of a table would be.
+    /// Largest error of a curve that has no cells, measured in each octave.
     static double worst(Density shape, Curve curve) {
         double worst = 0;
-        for (int octave = 0; octave < Table.OCTAVES; octave++) {
+        for (int octave = 0; octave < Table.OCTAVES + Table.DEEP; octave++) {
             for (int tail = 0; tail < 2; tail++) {
-                worst = Math.max(
-                        worst,
-                        Arrays.stream(errors(shape, curve, octave, 2, tail))
-                                .max()
-                                .orElseThrow());
+                worst = Math.max(worst, worst(shape, curve, octave, tail));
             }
         }
         return worst;
     }
 
-    /// Largest error of each cell; infinite where an error is too large for its tail.
-    private static double[] errors(Density shape, Curve curve, int octave, int bits, int tail) {
+    /// At four times the points of a cell; infinite where an error is too large for its tail.
+    private static double worst(Density shape, Curve curve, int octave, int tail) {
         double base = StrictMath.scalb(1.0, octave - 53);
-        int n = MEASURED.length << bits;
-        var u = new double[n];
-        for (int i = 0; i < n; i++) {
-            double cell = i / MEASURED.length + MEASURED[i % MEASURED.length] * (1 - 0x1p-40);
-            double p = base * (1 + StrictMath.scalb(cell, -bits));
+        double[] measured = Lobatto.measured(Table.STRIDE);
+        var u = new double[4 * measured.length];
+        for (int i = 0; i < u.length; i++) {
+            double p = base * (1 + (i / measured.length + measured[i % measured.length] * (1 - 0x1p-40)) / 4);
             u[i] = tail == 0 ? p : 1 - p;
         }
-        var x = new double[n];
-        curve.fill(u, x, n, 0, 1);
-        var largest = new double[1 << bits];
-        for (int i = 0; i < n; i++) {
-            int cell = i / MEASURED.length;
+        var x = new double[u.length];
+        curve.fill(u, x, u.length, 0, 1);
+        double worst = 0;
+        for (int i = 0; i < u.length; i++) {
             double p = tail == 0 ? u[i] : 1 - u[i];
-            double error =
-                    largest[cell] < Double.POSITIVE_INFINITY ? error(shape, x[i], p, tail) : Double.POSITIVE_INFINITY;
-            largest[cell] = error <= RELATIVE * p ? Math.max(largest[cell], error) : Double.POSITIVE_INFINITY;
+            double error = error(shape, x[i], p, tail, 8);
+            if (!(error <= RELATIVE * p)) {
+                return Double.POSITIVE_INFINITY;
+            }
+            worst = Math.max(worst, error);
         }
-        return largest;
+        return worst;
     }
 
     /// How far p lies from the probabilities between the neighbours of x, one step away; where the error is as small as
-    /// that of u itself, eight.
-    private static double error(Density shape, double x, double p, int tail) {
+    /// that of u itself, more.
+    private static double error(Density shape, double x, double p, int tail, int steps) {
         double plain = Math.abs(mass(shape, x, tail) - p);
         if (plain <= 1e-14 * p) {
             return plain;
         }
         double below = x;
         double above = x;
-        for (int i = 0; i < (plain <= FEW_ULP ? 8 : 1); i++) {
+        for (int i = 0; i < (plain <= FEW_ULP ? steps : 1); i++) {
             below = Math.nextDown(below);
             above = Math.nextUp(above);
         }

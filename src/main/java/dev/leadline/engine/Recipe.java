@@ -4,6 +4,7 @@ import dev.leadline.density.Density;
 import dev.leadline.density.Inversion;
 import dev.leadline.formula.Program;
 import dev.leadline.model.Ask;
+import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
@@ -43,9 +44,8 @@ public final class Recipe {
         this.layout = lane.scheme()
                 .points()
                 .layout(new Address(seed, purpose, lane.address(), replicate, "", 0), coordinates());
-        this.inversions = question.inputs().stream()
-                .map(input -> Inversion.of(input.drawn()))
-                .toList();
+        this.inversions =
+                Inversion.of(question.inputs().stream().map(Input::drawn).toList());
         this.proposed = new TreeMap<>();
         lane.scheme()
                 .drawFrom()
@@ -64,7 +64,7 @@ public final class Recipe {
         this.volume = product;
     }
 
-    /// Builds the inversion tables that are not in the cache yet, and finds the density to draw from where the lane
+    /// Builds the inversion tables that are not in the cache yet, side by side, and finds the density to draw from where the lane
     /// wants
     /// one.
     public static Recipe of(Question question, Lane lane, long seed) {

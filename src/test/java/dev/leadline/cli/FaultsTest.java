@@ -66,6 +66,16 @@ class FaultsTest {
         assertTrue(err.toString().startsWith("There was not enough memory"), err.toString());
     }
 
+    /// As it comes from the builders of tables, which work side by side.
+    @Test
+    void saysThatMemoryRanOutBehindOtherErrors() {
+        var error = new OutOfMemoryError("Java heap space");
+        assertEquals(3, with(new IllegalStateException(new IllegalStateException("no table of x", error))));
+        assertTrue(err.toString().startsWith("There was not enough memory"), err.toString());
+        assertTrue(err.toString().contains("-Xmx"), err.toString());
+        assertFalse(err.toString().contains("our fault"), err.toString());
+    }
+
     @Test
     void saysWhatTheComputerLacks() {
         assertEquals(2, with(new RuntimeException(new UnsupportedOperationException("Unable to open DISPLAY"))));
