@@ -85,11 +85,10 @@ public final class DrawsByDensity {
 
                 %s
 
-                What is slow by its nature: quantiles that span more decades than doubles hold (gamma and Weibull of very small \
-                shape, beta of parameters below about 0.05) or lie within rounding errors of 1 (lognormal of tiny sigma) go \
-                through an exponential function; where parts of a mixture lie far apart, tables have most bits, which leave \
-                the first level of the cache, and cells that are searched; discrete densities of more values than are kept \
-                cost a search or a quantile each.
+                What is slower by its nature: quantiles that span more decades than doubles hold (gamma and Weibull of very \
+                small shape, beta of parameters below about 0.05) go through a power of two; where parts of a mixture lie far \
+                apart, or a density has kinks, cells are graded, and a few draws are searched; discrete densities of more \
+                values than are kept cost a search or a quantile each.
 
                 | density | ns | times the normal |
                 |---|---|---|
