@@ -86,7 +86,7 @@ final class TableFit {
     /// The smallest and fastest table that is accurate; where none is, one that has no cells.
     ///
     /// A shape that has a link is smooth through it: what its plain table misses, it misses by rounding, and
-    /// parts would only hide that.
+    /// parts would only hide that. Of few cuts a plain table is faster than a power of two.
     static Table of(Density shape) {
         Optional<Table> table = Optional.empty();
         if (shape instanceof Linked linked) {
@@ -97,7 +97,7 @@ final class TableFit {
             if (table.isEmpty() && linked.link() == Link.LOG && shape.quantile(0x1p-53) > 0.5) {
                 table = smooth(shape, Link.ABOVE_ONE, 1);
             }
-            table = table.or(() -> smooth(shape, linked.link(), 3));
+            table = table.or(() -> smooth(shape, Link.NONE, FEW_CUTS)).or(() -> smooth(shape, linked.link(), 3));
         }
         return table.or(() -> broken(shape)).orElseGet(() -> slow(shape));
     }
