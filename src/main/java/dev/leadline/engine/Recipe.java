@@ -64,7 +64,8 @@ public final class Recipe {
         this.volume = product;
     }
 
-    /// Builds the inversion tables that are not in the cache yet, side by side, and finds the density to draw from where the lane
+    /// Builds the inversion tables that are not in the cache yet, side by side, and finds the density to draw from
+    /// where the lane
     /// wants
     /// one.
     public static Recipe of(Question question, Lane lane, long seed) {
