@@ -55,7 +55,14 @@ public final class Copula {
     ///
     /// @param u one array for each coordinate, at least `rows` long; `null` for one that is not [behind][#behind]
     public void tie(double[][] u, boolean[] wanted, int rows) {
-        for (int i = 0; i < factor.length; i++) {
+        tie(u, wanted, rows, 0);
+    }
+
+    /// The same, where some inputs have their values already.
+    ///
+    /// @param given so many of the first arrays hold what [#untie] made of normals of theirs, not probabilities
+    public void tie(double[][] u, boolean[] wanted, int rows, int given) {
+        for (int i = given; i < factor.length; i++) {
             if (u[i] != null) {
                 normal.fill(u[i], u[i], rows);
             }
@@ -73,6 +80,20 @@ public final class Copula {
                 }
                 mixing.probabilities(u[i], rows);
                 clamp(u[i], rows);
+            }
+        }
+    }
+
+    /// Replaces tied normals of the first inputs by the independent ones that they are combined of.
+    ///
+    /// @param z one array for each of them
+    public void untie(double[][] z, int rows) {
+        for (int i = 0; i < z.length; i++) {
+            for (int j = 0; j < i; j++) {
+                add(-factor[i][j], z[j], z[i], rows);
+            }
+            for (int row = 0; row < rows; row++) {
+                z[i][row] /= factor[i][i];
             }
         }
     }

@@ -33,6 +33,19 @@ public final class Correlations {
         return new Correlations(changed);
     }
 
+    /// Those of some of the inputs, in the order given.
+    ///
+    /// @param inputs indices
+    public Correlations of(int... inputs) {
+        double[][] some = new double[inputs.length][inputs.length];
+        for (int i = 0; i < inputs.length; i++) {
+            for (int j = 0; j < inputs.length; j++) {
+                some[i][j] = rows[inputs[i]][inputs[j]];
+            }
+        }
+        return new Correlations(some);
+    }
+
     public int size() {
         return rows.length;
     }

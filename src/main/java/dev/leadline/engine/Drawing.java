@@ -16,6 +16,7 @@ final class Drawing {
     private final double[][] points;
     private final Nominal nominal;
     private final Optional<Warping> warping;
+    private final Optional<TiedProposal> tied;
     private final double[] few = new double[Program.BLOCK];
     private Cursor cursor;
 
@@ -36,6 +37,8 @@ final class Drawing {
         for (int j = 0; j < columns.length; j++) {
             columns[j] = wanted[j] ? points[j] : null;
         }
+        this.tied = TiedProposal.of(recipe);
+        tied.ifPresent(these -> these.putInto(columns));
     }
 
     /// Goes to the first draw of an item.
@@ -63,14 +66,16 @@ final class Drawing {
     /// The inputs at those points, which become scratch.
     void fill(int rows) {
         nominal.next(points[points.length - 1], rows);
+        tied.ifPresent(these -> these.draw(points, this::invert, nominal, rows));
         recipe.ties().tie(points, wanted, rows);
         for (int j = 0; j < columns.length; j++) {
-            if (columns[j] != null) {
+            if (columns[j] == points[j] && columns[j] != null) {
                 invert(j, columns[j], rows);
             }
         }
     }
 
+    /// @param x probabilities, replaced by values
     private void invert(int j, double[] x, int rows) {
         var proposed = recipe.proposed(j);
         if (proposed.isEmpty()) {

@@ -1,5 +1,6 @@
 package dev.leadline.engine;
 
+import dev.leadline.estimate.Extremes;
 import dev.leadline.model.Stop;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Failure;
@@ -30,6 +31,7 @@ public final class LaneRun {
     private final Queue<Future<Optional<ItemSums>>> ahead = new ArrayDeque<>();
 
     private final Tally tally;
+    private final Optional<Extremes> extremes;
     private final List<Mark> marks = new ArrayList<>();
     private final List<Failure> failures = new ArrayList<>();
     private long submitted;
@@ -42,6 +44,8 @@ public final class LaneRun {
         this.items = recipe.items();
         this.workers = workers;
         this.tally = Tally.of(items, recipe.components());
+        this.extremes =
+                recipe.lane().scheme().isWeighted() ? Optional.of(new Extremes(recipe.components())) : Optional.empty();
         this.budget = items.whole(stop.draws());
     }
 
@@ -89,7 +93,13 @@ public final class LaneRun {
 
     public Trace trace() {
         return new Trace(
-                recipe.lane().name(), recipe.lane().scheme().inWords(), marks, tally.blocks(), failures, stopReason);
+                recipe.lane().name(),
+                recipe.lane().scheme().inWords(),
+                marks,
+                tally.blocks(),
+                extremes.map(Extremes::copy),
+                failures,
+                stopReason);
     }
 
     private void submitAhead() {
@@ -105,6 +115,7 @@ public final class LaneRun {
 
     private void merge(ItemSums item) {
         tally.add(item);
+        extremes.ifPresent(all -> all.merge(item.extremes().orElseThrow()));
         draws += item.item().draws();
         for (var failure : item.failures()) {
             if (failures.size() < ItemSums.KEPT) {

@@ -7,6 +7,8 @@ import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
+import dev.leadline.numeric.Exp;
+import dev.leadline.numeric.Log;
 import java.util.Arrays;
 import java.util.List;
 
@@ -29,7 +31,10 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
     public static Look at(Question question, Lane lane, long seed, long draw) {
         var recipe = Recipe.of(question, lane, seed);
         var drawn = Drawing.single(recipe, draw);
-        return of(question, drawn.inputs(), drawn.weight() * Weights.of(recipe, drawn.inputs()));
+        double[] inputs = drawn.inputs();
+        double weight = drawn.weight() * Weights.of(recipe, inputs);
+        double log = isIntegral(question) ? Log.log(drawn.weight()) + Weights.logOf(recipe, inputs) : 0;
+        return of(question, inputs, log, weight);
     }
 
     /// Every input at its median.
@@ -39,11 +44,13 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
                 question.inputs().stream()
                         .mapToDouble(input -> input.drawn().quantile(.5))
                         .toArray(),
+                0,
                 1);
     }
 
     /// @param counted what the draw counts because of the density it was drawn from
-    private static Look of(Question question, double[] inputs, double counted) {
+    /// @param log its logarithm
+    private static Look of(Question question, double[] inputs, double log, double counted) {
         Program program = question.working().everyStep();
         double[][] columns =
                 Arrays.stream(inputs).mapToObj(x -> new double[] {x}).toArray(double[][]::new);
@@ -53,24 +60,28 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
         return new Look(
                 Arrays.stream(inputs).boxed().toList(),
                 Arrays.stream(results).limit(steps).map(r -> r[0]).toList(),
-                counted * weight(question, inputs),
+                isIntegral(question) ? weight(question, inputs, log) : counted,
                 Arrays.stream(results).skip(steps).map(r -> r[0]).toList());
     }
 
-    private static double weight(Question question, double[] inputs) {
-        if (question.asks().stream().map(Ask::estimand).noneMatch(Estimand.Integral.class::isInstance)) {
-            return 1;
-        }
-        double weight = 1;
+    private static boolean isIntegral(Question question) {
+        return question.asks().stream().map(Ask::estimand).anyMatch(Estimand.Integral.class::isInstance);
+    }
+
+    private static double weight(Question question, double[] inputs, double counted) {
+        double volume = 1;
+        double log = counted;
         for (int j = 0; j < inputs.length; j++) {
             Input input = question.inputs().get(j);
-            weight *= switch (input.role()) {
-                case Role.Random _ -> 1;
-                case Role.Range(double low, double high) -> high - low;
+            switch (input.role()) {
+                case Role.Random _ -> {}
+                case Role.Range(double low, double high) -> volume *= high - low;
                 case Role.UnboundedRange(double low, double high) ->
-                    inputs[j] >= low && inputs[j] <= high ? 1 / input.drawn().pdf(inputs[j]) : 0;
-            };
+                    log -= inputs[j] >= low && inputs[j] <= high
+                            ? input.drawn().logPdf(inputs[j])
+                            : Double.POSITIVE_INFINITY;
+            }
         }
-        return weight;
+        return volume * Exp.exp(log);
     }
 }

@@ -40,7 +40,7 @@ public final class Recipe {
     private Recipe(Question question, Lane lane, long seed, Purpose purpose, int replicate) {
         this.question = question;
         this.lane = lane;
-        this.ties = new Ties(question);
+        this.ties = new Ties(question, proposal().keySet());
         this.layout = lane.scheme()
                 .points()
                 .layout(new Address(seed, purpose, lane.address(), replicate, "", 0), coordinates());

@@ -2,6 +2,7 @@ package dev.leadline.engine;
 
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Estimand;
+import dev.leadline.estimate.Extremes;
 import dev.leadline.formula.Program;
 import dev.leadline.numeric.Exp;
 import dev.leadline.trace.Failure;
@@ -21,9 +22,12 @@ public final class Sampler {
     private final double[][] columns;
     private final double[][] outcomes;
     private final double[] ranges;
+    private final double[] logPdf;
+    private final boolean isWeighted;
     private final Weights weights;
     private final Folding folding;
     private final Accumulator sums;
+    private final Optional<Extremes> extremes;
 
     Sampler(Recipe recipe) {
         this.recipe = recipe;
@@ -39,9 +43,12 @@ public final class Sampler {
         this.columns = drawing.columns();
         this.outcomes = new double[recipe.components()][Program.BLOCK];
         this.ranges = new double[recipe.weighing().isEmpty() ? 0 : Program.BLOCK];
+        this.logPdf = new double[ranges.length];
+        this.isWeighted = recipe.lane().scheme().isWeighted();
         this.weights = new Weights(recipe);
         this.folding = Folding.of(recipe);
         this.sums = new Accumulator(outcomes.length);
+        this.extremes = isWeighted ? Optional.of(new Extremes(outcomes.length)) : Optional.empty();
     }
 
     /// @param cancelled looked at between blocks of draws
@@ -50,6 +57,7 @@ public final class Sampler {
         drawing.open(item.stretch());
         folding.open();
         sums.clear();
+        extremes.ifPresent(Extremes::clear);
         var failures = new ArrayList<Failure>();
         for (int from = 0; from < item.draws(); from += Program.BLOCK) {
             if (cancelled.getAsBoolean()) {
@@ -59,21 +67,24 @@ public final class Sampler {
             drawing.next(rows);
             program.evaluate(columns, rows, outcomes, workspace);
             observe(rows);
+            extremes.ifPresent(seen -> seen.add(outcomes, rows));
             if (!folding.addTo(sums, outcomes, rows)) {
                 keepFailures(item.firstDraw() + from, rows, failures);
             }
         }
-        return Optional.of(new ItemSums(item, sums.copy(), List.copyOf(failures)));
+        return Optional.of(new ItemSums(item, sums.copy(), extremes.map(Extremes::copy), List.copyOf(failures)));
     }
 
     /// Turns what the formulas give into components of observations: integrals count the length of their ranges,
-    /// control
-    /// variates what they are more than their mean; an event is 1 or 0 as it is. All count their weight.
+    /// control variates what they are more than their mean; an event is 1 or 0 as it is. All count their weight.
     private void observe(int rows) {
+        if (isWeighted) {
+            weights.fill(columns, drawing.weights(), outcomes[outcomes.length - 1], rows);
+        }
         weighRanges(rows);
         for (int k = 0; k < recipe.asks().size(); k++) {
             switch (recipe.asks().get(k).estimand()) {
-                case Estimand.Mean _, Estimand.Probability _ -> {}
+                case Estimand.Mean _, Estimand.Probability _ -> weigh(outcomes[k], rows);
                 case Estimand.Integral _ -> multiply(outcomes[k], rows);
             }
         }
@@ -83,17 +94,16 @@ public final class Sampler {
             for (int i = 0; i < rows; i++) {
                 control[i] -= mean;
             }
+            weigh(control, rows);
         }
-        weights.weigh(columns, drawing.weights(), outcomes, rows);
     }
 
-    /// `1 / pdf`, and 0 for a draw beyond its range, which the density drawn from may reach.
+    /// `1 / pdf`, and 0 for a draw beyond its range, which the density drawn from may reach; times the weight.
     private void weighRanges(int rows) {
         if (ranges.length == 0) {
             return;
         }
         Arrays.fill(ranges, 0, rows, 0);
-        double[] logPdf = weights.scratch();
         for (int j : recipe.weighing()) {
             double[] x = columns[j];
             double low = recipe.range(j).low();
@@ -102,6 +112,9 @@ public final class Sampler {
             for (int i = 0; i < rows; i++) {
                 ranges[i] -= x[i] >= low && x[i] <= high ? logPdf[i] : Double.POSITIVE_INFINITY;
             }
+        }
+        if (isWeighted) {
+            weights.addLogs(ranges, rows);
         }
         Exp.exp(ranges, ranges, rows);
     }
@@ -112,11 +125,23 @@ public final class Sampler {
             for (int i = 0; i < rows; i++) {
                 outcome[i] *= volume;
             }
+            weigh(outcome, rows);
         } else {
             for (int i = 0; i < rows; i++) {
                 // Beyond the range the formula need not have a value.
                 outcome[i] = ranges[i] == 0 ? 0 : outcome[i] * (volume * ranges[i]);
             }
+        }
+    }
+
+    /// A draw that the inputs cannot have counts nothing, whatever its outcome.
+    private void weigh(double[] outcome, int rows) {
+        if (!isWeighted) {
+            return;
+        }
+        double[] weight = outcomes[outcomes.length - 1];
+        for (int i = 0; i < rows; i++) {
+            outcome[i] = weight[i] == 0 ? 0 : outcome[i] * weight[i];
         }
     }
 

@@ -2,6 +2,7 @@ package dev.leadline.ground;
 
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
+import dev.leadline.interval.ToRounding;
 import dev.leadline.model.Question;
 import dev.leadline.trace.Trace;
 import java.util.ArrayList;
@@ -20,11 +21,18 @@ public final class Grounds {
         var evidence = Evidence.of(question, trace);
         var grounds = new ArrayList<Ground>();
         for (int k = 0; k < evidence.answers().size(); k++) {
-            Spread.judge(evidence, k).ifPresent(grounds::add);
             Hits.judge(evidence, k).ifPresent(grounds::add);
+            if (evidence.answers().get(k).interval().kind().equals(ToRounding.KIND)) {
+                grounds.add(Ground.shown(
+                        "spread", evidence.of(k) + "every draw gives the same value up to rounding, by its weight"));
+                continue;
+            }
+            Spread.judge(evidence, k).ifPresent(grounds::add);
             Settled.judge(evidence, k).ifPresent(grounds::add);
             Skewness.judge(evidence, k).ifPresent(grounds::add);
+            LargestShare.judge(evidence, k).ifPresent(grounds::add);
         }
+        MeanWeight.judge(evidence).ifPresent(grounds::add);
         grounds.add(FailedEvaluations.judge(evidence));
         NumericalTolerance.judge(evidence).ifPresent(grounds::add);
         grounds.add(AgainstReference.judge(evidence));

@@ -1,5 +1,7 @@
 package dev.leadline.ground;
 
+import dev.leadline.estimate.Estimand;
+import dev.leadline.estimate.Extremes;
 import dev.leadline.ground.Ground.Strength;
 import java.util.Optional;
 
@@ -13,7 +15,9 @@ final class Hits {
     static Optional<Ground> judge(Evidence evidence, int k) {
         var answer = evidence.answers().get(k);
         if (answer.hits().isEmpty() || answer.observations() == 0) {
-            return Optional.empty();
+            return answer.estimand() instanceof Estimand.Probability
+                    ? evidence.trace().extremes().map(draws -> weighted(evidence, draws, k))
+                    : Optional.empty();
         }
         long hits = answer.hits().getAsLong();
         long misses = answer.observations() - hits;
@@ -34,6 +38,25 @@ final class Hits {
                 Strength.CAUTION,
                 of + text,
                 "Make more draws: %d %s or more are wanted".formatted(ENOUGH, plural(what))));
+    }
+
+    /// A miss needs no weight, so that only hits count.
+    private static Ground weighted(Evidence evidence, Extremes draws, int k) {
+        long hits = draws.nonzero(k);
+        String text = evidence.of(k)
+                + "%s %s in %s weighted draws"
+                        .formatted(
+                                hits < ENOUGH && hits > 0 ? "only " + hits : Numbers.count(hits),
+                                hits == 1 ? "hit" : "hits",
+                                Numbers.count(draws.draws()));
+        return hits >= ENOUGH
+                ? Ground.shown("hits", text)
+                : Ground.doubted(
+                        "hits",
+                        Strength.CAUTION,
+                        text,
+                        "Make more draws, or draw from densities nearer to the event: %d hits or more are wanted"
+                                .formatted(ENOUGH));
     }
 
     private static String plural(String what) {

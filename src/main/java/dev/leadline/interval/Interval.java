@@ -57,9 +57,27 @@ public record Interval(double low, double high, double level, String kind, Strin
         return lopsided(estimate) ? Math.max(high - estimate, estimate - low) : halfWidth();
     }
 
-    /// This interval as far as it lies between two limits that the value sought cannot pass.
+    /// This interval as far as it lies between two limits that the value sought cannot pass; a limit that was moved is
+    /// told.
     public Interval within(double least, double most) {
-        return new Interval(Math.max(low, least), Math.min(high, most), level, kind, assumption, note);
+        if (!(low < least || high > most)) {
+            return this;
+        }
+        String moved =
+                (low < least ? "the lower limit is %s, which the value sought is not below".formatted(text(least)) : "")
+                        + (low < least && high > most ? "; " : "")
+                        + (high > most ? "the upper limit is %s, which it is not above".formatted(text(most)) : "");
+        return new Interval(
+                Math.clamp(low, least, most),
+                Math.clamp(high, least, most),
+                level,
+                kind,
+                assumption,
+                Optional.of(note.map(said -> said + "; ").orElse("") + moved));
+    }
+
+    private static String text(double limit) {
+        return new BigDecimal(limit).stripTrailingZeros().toPlainString();
     }
 
     /// Half the length; `NaN` where a limit is missing.

@@ -1,7 +1,10 @@
 package dev.leadline.model;
 
 import dev.leadline.density.Density;
+import dev.leadline.density.Shifted;
+import dev.leadline.density.Stretches;
 import dev.leadline.density.Support;
+import dev.leadline.density.Tilted;
 import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Other;
 import dev.leadline.numeric.Shortest;
@@ -11,13 +14,16 @@ import dev.leadline.scheme.Adaptation;
 import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Share;
 import java.util.Arrays;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.SortedMap;
 import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
+import java.util.function.Supplier;
 
 /// Makes what a lane's inputs are drawn from of its draft.
 final class Proposals {
@@ -48,14 +54,18 @@ final class Proposals {
             case DrawFrom.Adapted _ -> Optional.empty();
             case DrawFrom.Inputs(var others) -> {
                 var found = new TreeMap<Integer, Density>();
+                var changes = new ArrayList<String>();
                 others.forEach((name, other) -> {
                     String place = path + ".drawFrom." + name;
-                    index(name, place)
-                            .ifPresent(j -> density(j, other, place)
-                                    .filter(density -> isFit(j, density, share, place))
-                                    .ifPresent(density -> found.put(j, density)));
+                    index(name, place).ifPresent(j -> {
+                        changes.add(inputs.get(j).name() + " " + words(other));
+                        density(j, other, place)
+                                .filter(density -> isFit(j, density, share, place))
+                                .ifPresent(density -> found.put(j, density));
+                    });
                 });
-                yield Optional.of(new Proposal(found, share, lane.selfNormalised()));
+                checkTies(found, path);
+                yield Optional.of(new Proposal(found, share, lane.selfNormalised(), changes));
             }
         };
     }
@@ -84,6 +94,16 @@ final class Proposals {
         }
         var all = IntStream.range(0, inputs.size()).boxed().collect(Collectors.toCollection(TreeSet::new));
         return Optional.of(new Adaptation(way.get(), all, share(lane.nominalShare(), path)));
+    }
+
+    private static String words(Other other) {
+        return switch (other) {
+            case Other.Another(var draft) -> "from " + DensityWords.of(draft);
+            case Other.Shift(double by) -> "shifted by " + Shortest.text(by);
+            case Other.Widen(double by) -> "widened " + Shortest.text(by) + " times about its median";
+            case Other.Tilt(double by) -> "tilted by " + Shortest.text(by);
+            case Other.Adapt _ -> "adapted";
+        };
     }
 
     private void alone(LaneDraft lane, String path) {
@@ -135,55 +155,109 @@ final class Proposals {
     }
 
     private Optional<Density> density(int j, Other other, String place) {
+        Density own = inputs.get(j).drawn();
         return switch (other) {
             case Other.Another(var draft) -> densities.of(draft, inputs.get(j).name(), place);
-            case Other.Shift _, Other.Widen _, Other.Tilt _, Other.Adapt _ -> {
+            case Other.Shift(double by) -> made(place, () -> new Shifted(own, by, 1));
+            case Other.Widen(double by) -> widened(j, by, place);
+            case Other.Tilt(double by) -> made(place, () -> Tilted.of(own, by).density());
+            case Other.Adapt _ -> {
                 findings.add(
                         place,
-                        "a change of the input's own density is not available",
+                        "a density that is found before the run is not available",
                         "Densities to draw from are stated.",
-                        "Write the density itself.");
+                        "Write the density itself, or a change of its own as {\"shift\": 3}.");
                 yield Optional.empty();
             }
         };
     }
 
+    private Optional<Density> made(String place, Supplier<Density> density) {
+        return findings.made(within -> within.isEmpty() ? place : place + "." + within, density);
+    }
+
+    /// About the median, which the density keeps.
+    private Optional<Density> widened(int j, double by, String place) {
+        Density own = inputs.get(j).drawn();
+        if (!(by > 0 && Double.isFinite(by))) {
+            findings.add(
+                    place + ".widen",
+                    "widen is %s but must be greater than 0".formatted(Shortest.text(by)),
+                    "Every distance from the median is multiplied by it.");
+            return Optional.empty();
+        }
+        if (own.isDiscrete()) {
+            findings.add(
+                    place + ".widen",
+                    "%s has separate values, which cannot be widened"
+                            .formatted(inputs.get(j).name()),
+                    "They would come to lie between those that it can have.",
+                    "Tilt it, or write the density itself.");
+            return Optional.empty();
+        }
+        return made(place, () -> new Shifted(own, own.quantile(0.5) * (1 - by), by));
+    }
+
     /// Whether weights have a meaning: every value that the input can have must be drawn now and then.
     private boolean isFit(int j, Density density, Share share, String place) {
-        Input input = inputs.get(j);
-        if (dependence.filter(ties -> ties.inputs().contains(j)).isPresent()) {
-            findings.add(
-                    place,
-                    "%s is tied to other inputs".formatted(input.name()),
-                    "Drawing a tied input from another density is not available.");
-            return false;
-        }
-        Density own = input.drawn();
+        String name = inputs.get(j).name();
+        Density own = inputs.get(j).drawn();
         if (own.isDiscrete() != density.isDiscrete()) {
             findings.add(
                     place,
                     own.isDiscrete()
-                            ? "%s has separate values, the density to draw it from has not".formatted(input.name())
-                            : "%s has no separate values, the density to draw it from has".formatted(input.name()),
+                            ? "%s has separate values, the density to draw it from has not".formatted(name)
+                            : "%s has no separate values, the density to draw it from has".formatted(name),
                     "A draw counts the one's chance over the other's, which here have nothing in common.");
             return false;
         }
-        Support needed = own.support();
-        Support given = density.support();
-        if (share.nominal() == 0 && !(given.low() <= needed.low() && given.high() >= needed.high())) {
+        if (Stretches.areApart(own, density)) {
             findings.add(
                     place,
-                    "the density to draw %s from covers %s to %s, not its values from %s to %s"
-                            .formatted(
-                                    input.name(),
-                                    Shortest.text(given.low()),
-                                    Shortest.text(given.high()),
-                                    Shortest.text(needed.low()),
-                                    Shortest.text(needed.high())),
-                    "What is never drawn would be missing from the answer.",
-                    "Choose one that is positive wherever the input's own is, or a nominalShare above 0.");
+                    "the density to draw %s from gives no value that %s can have".formatted(name, name),
+                    "Every draw from it would count nothing.",
+                    "Choose one that is positive where the input's own is.");
             return false;
         }
-        return true;
+        var missed = share.nominal() > 0 ? Optional.<Support>empty() : Stretches.missed(own, density);
+        missed.ifPresent(stretch -> findings.add(
+                place,
+                own.isDiscrete()
+                        ? "the density to draw %s from never gives %s".formatted(name, Shortest.text(stretch.low()))
+                        : "the density to draw %s from gives nothing from %s to %s"
+                                .formatted(name, Shortest.text(stretch.low()), Shortest.text(stretch.high())),
+                "%s has values there, and what is never drawn would be missing from the answer.".formatted(name),
+                "Choose one that is positive wherever the input's own is, or a nominalShare above 0."));
+        return missed.isEmpty();
+    }
+
+    /// A tied input keeps what the others are when it is given: known for normals behind, and of separate values where
+    /// the others keep their own densities.
+    private void checkTies(SortedMap<Integer, Density> found, String path) {
+        if (dependence.isEmpty()) {
+            return;
+        }
+        var tied = found.keySet().stream()
+                .filter(dependence.get().inputs()::contains)
+                .toList();
+        var copula = dependence.get().copula();
+        for (int j : tied) {
+            String name = inputs.get(j).name();
+            if (copula.mixing().isRandom()) {
+                findings.add(
+                        path + ".drawFrom." + name,
+                        "%s is tied by a Student copula".formatted(name),
+                        "The factor that all tied inputs share has another density when %s is given; it is not drawn here, so that draws have no weight."
+                                .formatted(name),
+                        "Draw an input from another density that is not tied, or tie by a Gaussian copula.");
+            } else if (tied.size() > 1 && inputs.get(j).drawn().isDiscrete()) {
+                findings.add(
+                        path + ".drawFrom." + name,
+                        "%s has separate values and is tied, as others that are drawn from another density"
+                                .formatted(name),
+                        "A separate value stands for a range of the normals behind, so that the draw has no weight that follows from its values.",
+                        "Draw one of the tied inputs alone from another density.");
+            }
+        }
     }
 }

@@ -3,6 +3,7 @@ package dev.leadline.project;
 import dev.leadline.engine.Achieved;
 import dev.leadline.estimate.Chance;
 import dev.leadline.estimate.Estimand;
+import dev.leadline.estimate.Extremes;
 import dev.leadline.ground.Ground;
 import dev.leadline.interval.ClopperPearson;
 import dev.leadline.model.Input;
@@ -16,8 +17,10 @@ import dev.leadline.study.StudyState;
 import dev.leadline.trace.Answer;
 import dev.leadline.trace.Failure;
 import dev.leadline.trace.Mark;
+import dev.leadline.trace.Trace;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.IntStream;
 
 /// A finished run as the command `run` prints it. Nothing in it but `seconds` depends on a clock.
 ///
@@ -75,12 +78,34 @@ public final class RunJson {
                 .put(
                         "grounds",
                         Json.list(lane.grounds().stream().map(RunJson::ground).toList()));
+        trace.extremes().filter(_ -> last.isPresent()).ifPresent(draws -> json.put("weights", weights(trace, draws)));
         if (!trace.failures().isEmpty()) {
             json.put(
                     "failures",
                     Json.list(trace.failures().stream().map(this::failure).toList()));
         }
         return json.build();
+    }
+
+    /// @param draws of weights, the last component
+    private static Json weights(Trace trace, Extremes draws) {
+        int w = draws.components() - 1;
+        double[] greatest = draws.greatest(w);
+        var total = trace.total();
+        return Json.object()
+                .put("mean", Json.orNull(total.mean(w)))
+                .put("standardError", Json.orNull(total.standardError(w)))
+                .put("greatest", Json.orNull(greatest.length == 0 ? Double.NaN : greatest[0]))
+                .put("effectiveDraws", Json.orNull(draws.effective(w)))
+                .put("largestShares", largestShares(trace, draws))
+                .build();
+    }
+
+    /// Of each answer: what part of the sum its largest draw has.
+    private static Json largestShares(Trace trace, Extremes draws) {
+        return Json.list(IntStream.range(0, trace.last().orElseThrow().answers().size())
+                .mapToObj(k -> Json.orNull(draws.largestShare(k)))
+                .toList());
     }
 
     private static double microseconds(double seconds) {

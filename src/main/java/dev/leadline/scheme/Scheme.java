@@ -29,8 +29,18 @@ public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> c
         return ((Growing) points).drawsPerObservation() * turns();
     }
 
+    /// The least share of a draw's density that the inputs' own have; 0 for none.
+    public double nominalShare() {
+        return drawFrom.map(proposal -> proposal.nominal().value())
+                .or(() -> adapted.map(density -> switch (density) {
+                    case Adaptation wish -> wish.nominal().value();
+                    case Tuned tuned -> (double) tuned.nominal() / tuned.of();
+                }))
+                .orElse(0.0);
+    }
+
     /// Observations of the layout alone that take turns in the densities they are drawn from.
-    private int turns() {
+    public int turns() {
         int adapting = adapted.map(density -> switch (density) {
                     case Adaptation wish -> wish.units();
                     case Tuned tuned -> tuned.of();
@@ -58,11 +68,12 @@ public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> c
         return new Scheme(points.within(draws / turns()), drawFrom, controls, adapted);
     }
 
-    /// As `independent, drawn from other densities, 2 control variates`.
+    /// As `independent, v from gumbel(42, 4), 10 % from its own, 2 control variates`.
     public String inWords() {
-        String weighted = drawFrom.isPresent()
-                ? ", drawn from other densities"
-                : adapted.map(density -> ", " + density.inWords()).orElse("");
+        String weighted = drawFrom.map(Proposal::inWords)
+                .or(() -> adapted.map(Adapted::inWords))
+                .map(words -> ", " + words)
+                .orElse("");
         String controlled = controls.isEmpty()
                 ? ""
                 : controls.size() == 1 ? ", 1 control variate" : ", " + controls.size() + " control variates";

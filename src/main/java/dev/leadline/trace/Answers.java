@@ -7,9 +7,14 @@ import dev.leadline.estimate.Regression;
 import dev.leadline.estimate.SelfNormalised;
 import dev.leadline.interval.ClopperPearson;
 import dev.leadline.interval.Interval;
+import dev.leadline.interval.NoHit;
 import dev.leadline.interval.Student;
+import dev.leadline.interval.ToRounding;
 import dev.leadline.model.Ask;
+import dev.leadline.model.Input;
+import dev.leadline.model.Input.Role;
 import dev.leadline.model.Question;
+import dev.leadline.scheme.Growing;
 import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Scheme;
 import java.util.ArrayList;
@@ -42,9 +47,41 @@ public final class Answers {
             var interval = ClopperPearson.of(hits, sums.count(), sums.excluded(), level);
             return answer(ask, sums, Estimate.mean(sums, k), interval, OptionalLong.of(hits));
         }
+        boolean isNoHit = ask.estimand() instanceof Estimand.Probability && scheme.isWeighted() && isZero(sums, k);
+        if (isNoHit) {
+            return answer(ask, sums, new Estimate(0, Double.NaN, sums.count() - 1), noHit(scheme, sums, level));
+        }
+        if (mayBePerfect(question, scheme, sums, k) && ToRounding.isMet(sums.min(k), sums.max(k))) {
+            double value = sums.mean(k);
+            return answer(
+                    ask,
+                    sums,
+                    new Estimate(value, ToRounding.standardError(value), sums.count() - 1),
+                    ToRounding.of(value, sums.count(), level));
+        }
         Estimate estimate = estimate(scheme, sums, k, question.asks().size());
-        var interval = Student.of(estimate, level);
-        return answer(ask, sums, estimate, bounded(ask, interval), OptionalLong.empty());
+        return answer(ask, sums, estimate, bounded(ask, Student.of(estimate, level)));
+    }
+
+    private static boolean isZero(Accumulator sums, int k) {
+        return sums.count() > 0 && sums.min(k) == 0 && sums.max(k) == 0;
+    }
+
+    private static Interval noHit(Scheme scheme, Accumulator sums, double level) {
+        long draws = scheme.points() instanceof Growing ? sums.count() * scheme.turns() : sums.count();
+        return NoHit.of(draws, scheme.nominalShare(), sums.excluded(), level);
+    }
+
+    /// Whether equal values say that the density drawn from is perfect: they do where the weights are not all equal.
+    private static boolean mayBePerfect(Question question, Scheme scheme, Accumulator sums, int k) {
+        boolean isWeighed = question.asks().get(k).estimand() instanceof Estimand.Integral
+                && question.inputs().stream().map(Input::role).anyMatch(Role.UnboundedRange.class::isInstance);
+        return sums.count() > 1
+                && (isWeighed && scheme.controls().isEmpty()
+                        || scheme.isWeighted()
+                                && scheme.drawFrom().filter(Proposal::selfNormalised).isEmpty()
+                                && !ToRounding.isMet(
+                                        sums.min(sums.components() - 1), sums.max(sums.components() - 1)));
     }
 
     /// The estimate alone, before its interval.
@@ -62,6 +99,10 @@ public final class Answers {
     /// A chance is neither below 0 nor above 1.
     private static Interval bounded(Ask ask, Interval interval) {
         return ask.estimand() instanceof Estimand.Probability ? interval.within(0, 1) : interval;
+    }
+
+    private static Answer answer(Ask ask, Accumulator sums, Estimate estimate, Interval interval) {
+        return answer(ask, sums, estimate, interval, OptionalLong.empty());
     }
 
     private static Answer answer(Ask ask, Accumulator sums, Estimate estimate, Interval interval, OptionalLong hits) {

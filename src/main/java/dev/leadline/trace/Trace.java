@@ -1,6 +1,7 @@
 package dev.leadline.trace;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Extremes;
 import java.util.List;
 import java.util.Optional;
 
@@ -10,6 +11,8 @@ import java.util.Optional;
 /// @param scheme in words
 /// @param marks oldest first; empty before the first item is in
 /// @param blocks sums of consecutive blocks of draws, at most 64 (see [Blocks])
+/// @param extremes of the draws one by one: outcomes by their weights, control variates likewise, and the weights;
+///     empty where every draw counts 1
 /// @param failures the first 20
 /// @param stopReason empty while the lane runs or pauses
 public record Trace(
@@ -17,12 +20,24 @@ public record Trace(
         String scheme,
         List<Mark> marks,
         List<Accumulator> blocks,
+        Optional<Extremes> extremes,
         List<Failure> failures,
         Optional<String> stopReason) {
     public Trace {
         marks = List.copyOf(marks);
         blocks = List.copyOf(blocks);
         failures = List.copyOf(failures);
+    }
+
+    /// Of a lane whose draws count 1 each.
+    public Trace(
+            String lane,
+            String scheme,
+            List<Mark> marks,
+            List<Accumulator> blocks,
+            List<Failure> failures,
+            Optional<String> stopReason) {
+        this(lane, scheme, marks, blocks, Optional.empty(), failures, stopReason);
     }
 
     public Optional<Mark> last() {
