@@ -58,9 +58,8 @@ final class TiedProposal {
 
     /// Draws them.
     ///
-    /// @param points probabilities of all inputs; those of these become the independent normals that their values
-    are
-    ///     combined of
+    /// @param points probabilities of all inputs; those of these become the independent normals that their values are
+    ///     made of
     /// @param nominal which come from the inputs' own densities
     void draw(double[][] points, Inverting inverting, Nominal nominal, int rows) {
         for (int i = 0; i < inputs.length; i++) {

@@ -44,6 +44,10 @@ public final class Questions {
         return input(name, density, new Role.Random());
     }
 
+    public Questions random(String name, Density drawn) {
+        return input(name, drawn, new Role.Random());
+    }
+
     public Questions range(String name, double low, double high) {
         return input(name, density("uniform", Map.of("from", low, "to", high)), new Role.Range(low, high));
     }
