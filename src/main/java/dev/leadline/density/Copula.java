@@ -3,9 +3,9 @@ package dev.leadline.density;
 /// Ties inputs to each other without touching the density of any: independent probabilities in, tied ones out.
 /// Immutable, safe for all threads.
 ///
-/// The probabilities become independent normal values, these are combined by the triangular factor of the correlations,
-/// multiplied by what the mixing draws, and become probabilities again. So the tie of an input depends on those before
-/// it only, and any layout of points will do.
+/// The probabilities become independent normal values, these are combined by the triangular factor of the
+/// correlations, multiplied by what the mixing draws, and become probabilities again. So the tie of an input depends
+/// on those before it only, and any layout of points will do.
 public final class Copula {
     /// Name of the coordinate that the mixing is drawn by: no input can be called so.
     public static final String COORDINATE = "*";

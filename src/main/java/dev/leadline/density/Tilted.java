@@ -13,8 +13,8 @@ import java.util.stream.DoubleStream;
 
 /// A density times `exp(by x)`, over the mean of that factor: exponential tilting.
 ///
-/// In closed form where the family has one, by the parts of mixtures and of what is shifted, scaled or truncated; value
-/// by value where there are finitely many; numerically otherwise ([Integrated]).
+/// In closed form where the family has one, by the parts of mixtures and of what is shifted, scaled or truncated;
+/// value by value where there are finitely many; numerically otherwise ([Integrated]).
 ///
 /// Source: Asmussen and Glynn (2007), Stochastic Simulation, chapter II. Closed forms by hand, checked against
 /// quadrature (`TiltedTest`).

@@ -58,8 +58,8 @@ final class TiedProposal {
 
     /// Draws them.
     ///
-    /// @param points probabilities of all inputs; those of these become the independent normals that their values are
-    ///     made of
+    /// @param points probabilities of all inputs; those of these become the independent normals that their values
+    ///     are made of
     /// @param nominal which come from the inputs' own densities
     void draw(double[][] points, Inverting inverting, Nominal nominal, int rows) {
         for (int i = 0; i < inputs.length; i++) {
@@ -82,7 +82,8 @@ final class TiedProposal {
         copula.untie(behind, rows);
     }
 
-    /// Adds what the ties of these to each other make of the logarithm of the density drawn from over the inputs' own.
+    /// Adds what the ties of these to each other make of the logarithm of the density drawn from over the inputs'
+    /// own.
     void addRatio(double[][] columns, double[] logs, int rows) {
         if (inputs.length == 1) {
             return;
@@ -123,8 +124,8 @@ final class TiedProposal {
         return Math.clamp(z, -FARTHEST, FARTHEST);
     }
 
-    /// A separate value stands for a range of probabilities: where in it the draw lies under the density drawn from, it
-    /// lies under the input's own.
+    /// A separate value stands for a range of probabilities: where in it the draw lies under the density drawn from,
+    /// it lies under the input's own.
     ///
     /// @param u probabilities that the values were drawn by; replaced by normals
     private void inSteps(int j, double[] u, double[] x, Nominal nominal, int rows) {

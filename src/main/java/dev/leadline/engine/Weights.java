@@ -9,8 +9,8 @@ import java.util.Map;
 import java.util.Optional;
 
 /// What draws from other densities count: the density of the inputs over the density they were drawn from, the latter
-/// with the share of the former in it (the balance heuristic of Veach and Guibas 1995, SIGGRAPH 95, 419-428; Hesterberg
-/// 1995, Technometrics 37, 185-194). Scratch of one worker.
+/// with the share of the former in it (the balance heuristic of Veach and Guibas 1995, SIGGRAPH 95, 419-428;
+/// Hesterberg 1995, Technometrics 37, 185-194). Scratch of one worker.
 ///
 /// In logarithms, so that ratios of any size are right; with a share `a` no weight is above `1 / a`.
 final class Weights {

@@ -2,11 +2,11 @@ package dev.leadline.estimate;
 
 import java.util.Arrays;
 
-/// The outermost values of each component of weighted draws, and the sums that say how much of all they make. Confined
-/// to one worker; its memory does not grow with the draws.
+/// The outermost values of each component of weighted draws, and the sums that say how much of all they make.
+/// Confined to one worker; its memory does not grow with the draws.
 ///
-/// Draws one by one, where an [Accumulator] sees observations of several. Which values are kept does not depend on how
-/// draws are divided over calls; the sums do, so that the order of merging must be fixed.
+/// Draws one by one, where an [Accumulator] sees observations of several. Which values are kept does not depend on
+/// how draws are divided over calls; the sums do, so that the order of merging must be fixed.
 public final class Extremes {
     /// Largest and smallest values kept of each component.
     public static final int KEPT = 1024;

@@ -4,8 +4,8 @@ import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.Student;
 import java.util.Optional;
 
-/// Whether the weights of draws from other densities have the mean 1 that they must have. A mean that is not says that
-/// a part of the inputs' own densities is hardly ever drawn, or that a density is not what it says.
+/// Whether the weights of draws from other densities have the mean 1 that they must have. A mean that is not says
+/// that a part of the inputs' own densities is hardly ever drawn, or that a density is not what it says.
 ///
 /// It is an objection only where the observations are many for the skewness of their weights, or the mean is ten
 /// standard errors off.

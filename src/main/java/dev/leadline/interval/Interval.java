@@ -27,8 +27,8 @@ public record Interval(double low, double high, double level, String kind, Strin
         return percent(level);
     }
 
-    /// A level as `95 %`; one with many digits, as that of each of three intervals that hold together, a little lower:
-    /// a third of 5 % off is `98.33 %`.
+    /// A level as `95 %`; one with many digits, as that of each of three intervals that hold together, a little
+    /// lower: a third of 5 % off is `98.33 %`.
     public static String percent(double level) {
         BigDecimal shown = new BigDecimal(level)
                 .setScale(LEVEL_NOISE, RoundingMode.HALF_EVEN)
@@ -57,8 +57,8 @@ public record Interval(double low, double high, double level, String kind, Strin
         return lopsided(estimate) ? Math.max(high - estimate, estimate - low) : halfWidth();
     }
 
-    /// This interval as far as it lies between two limits that the value sought cannot pass; a limit that was moved is
-    /// told.
+    /// This interval as far as it lies between two limits that the value sought cannot pass; a limit that was moved
+    /// is told.
     public Interval within(double least, double most) {
         if (!(low < least || high > most)) {
             return this;

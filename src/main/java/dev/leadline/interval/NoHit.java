@@ -4,8 +4,8 @@ import dev.leadline.numeric.Rounding;
 import java.util.Locale;
 import java.util.Optional;
 
-/// The limit of a chance of which weighted draws have shown no hit: where no weight is above `1 / share`, a chance `p`
-/// gives a hit in a draw with at least `share p`, and n draws miss all with at most `(1 - share p)^n`.
+/// The limit of a chance of which weighted draws have shown no hit: where no weight is above `1 / share`, a chance
+/// `p` gives a hit in a draw with at least `share p`, and n draws miss all with at most `(1 - share p)^n`.
 public final class NoHit {
     /// Word of the commands.
     public static final String KIND = "no-hit";

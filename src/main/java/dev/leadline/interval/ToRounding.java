@@ -3,8 +3,8 @@ package dev.leadline.interval;
 import dev.leadline.numeric.Rounding;
 import java.util.Optional;
 
-/// The interval of a value that every weighted draw gives alike: the density drawn from is perfect for it, and what is
-/// left is the rounding of weights.
+/// The interval of a value that every weighted draw gives alike: the density drawn from is perfect for it, and what
+/// is left is the rounding of weights.
 ///
 /// Error: `2^-40`, relative, is taken for it; densities are accurate to 1e-12 (`PerfectDensityTest`).
 public final class ToRounding {

@@ -13,17 +13,17 @@ import dev.leadline.problem.Problem;
 import dev.leadline.scheme.Adaptation;
 import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Share;
-import java.util.Arrays;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.SortedMap;
 import java.util.TreeMap;
 import java.util.TreeSet;
+import java.util.function.Supplier;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
-import java.util.function.Supplier;
 
 /// Makes what a lane's inputs are drawn from of its draft.
 final class Proposals {
@@ -231,8 +231,8 @@ final class Proposals {
         return missed.isEmpty();
     }
 
-    /// A tied input keeps what the others are when it is given: known for normals behind, and of separate values where
-    /// the others keep their own densities.
+    /// A tied input keeps what the others are when it is given: known for normals behind, and of separate values
+    /// where the others keep their own densities.
     private void checkTies(SortedMap<Integer, Density> found, String path) {
         if (dependence.isEmpty()) {
             return;

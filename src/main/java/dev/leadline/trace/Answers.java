@@ -79,9 +79,10 @@ public final class Answers {
         return sums.count() > 1
                 && (isWeighed && scheme.controls().isEmpty()
                         || scheme.isWeighted()
-                                && scheme.drawFrom().filter(Proposal::selfNormalised).isEmpty()
-                                && !ToRounding.isMet(
-                                        sums.min(sums.components() - 1), sums.max(sums.components() - 1)));
+                                && scheme.drawFrom()
+                                        .filter(Proposal::selfNormalised)
+                                        .isEmpty()
+                                && !ToRounding.isMet(sums.min(sums.components() - 1), sums.max(sums.components() - 1)));
     }
 
     /// The estimate alone, before its interval.

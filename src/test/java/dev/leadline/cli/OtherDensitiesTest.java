@@ -96,8 +96,8 @@ class OtherDensitiesTest {
         assertEquals(200, below, 4 * Math.sqrt(100));
     }
 
-    /// Values in closed form: E exp(X) of a normal, a gamma and a Poisson density; the integral of 1/√x over (0, 1) is
-    /// 2, that of exp(-x²/2) √(2π).
+    /// Values in closed form: E exp(X) of a normal, a gamma and a Poisson density; the integral of 1/√x over (0, 1)
+    /// is 2, that of exp(-x²/2) √(2π).
     @ParameterizedTest(name = "{0}")
     @CsvSource(
             delimiter = ';',
@@ -176,8 +176,8 @@ class OtherDensitiesTest {
                 answer.required("intervalNote").asString());
     }
 
-    /// The target Exp(1) drawn from twice as long: weights `2 exp(-x/2)`. The mean of x with weights over their mean has
-    /// the variance `∫ f²/g (x - 1)² = 20/27` a draw, with weights as they are `∫ f²/g x² - 1 = 5/27`.
+    /// The target Exp(1) drawn from twice as long: weights `2 exp(-x/2)`. The mean of x with weights over their mean
+    /// has the variance `∫ f²/g (x - 1)² = 20/27` a draw, with weights as they are `∫ f²/g x² - 1 = 5/27`.
     @Test
     void weightsMayBeDividedByTheirMean() throws IOException {
         String lane = "\"drawFrom\": {\"x\": {\"family\": \"exponential\", \"mean\": 2}}, \"nominalShare\": 0";

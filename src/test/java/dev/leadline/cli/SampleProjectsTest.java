@@ -197,8 +197,9 @@ class SampleProjectsTest {
     }
 
     /// Lanes that draw from other densities, against the values known apart from this program: the mooring line as
-    /// above, the delay by its closed form, the water by 1e8 weighted draws with numpy and scipy (standard error .0002).
-    /// Variances of a draw over the square of the value, found the same way: 160 (in six runs 156 to 175), 4.41, 2.8.
+    /// above, the delay by its closed form, the water by 1e8 weighted draws with numpy and scipy (standard error
+    /// .0002). Variances of a draw over the square of the value, found the same way: 160 (in six runs 156 to 175),
+    /// 4.41, 2.8.
     @ParameterizedTest(name = "{0}")
     @CsvSource({
         "mooring-line, B, 1.2568e-5, 4e-9, 166, .07",
@@ -210,7 +211,13 @@ class SampleProjectsTest {
             String name, String lane, double value, double error, double variance, double spread) {
         double draws = 1e6;
         var answer = leadline(
-                        "run", SAMPLES.resolve(name + ProjectFile.EXTENSION), "--json", "--draws", draws, "--lane", lane)
+                        "run",
+                        SAMPLES.resolve(name + ProjectFile.EXTENSION),
+                        "--json",
+                        "--draws",
+                        draws,
+                        "--lane",
+                        lane)
                 .json()
                 .required("lanes")
                 .get(0)
@@ -221,17 +228,25 @@ class SampleProjectsTest {
         assertEquals(1, reported * reported * draws / (value * value) / variance, spread + .05);
     }
 
-    /// A wind drawn from too narrow a density, and none from its own: found apart from this program, runs of 1e6 draws
-    /// give .975 with a standard error of .055, and miss the value 1.2028 in 87 of 100. The mean weight tells it.
+    /// A wind drawn from too narrow a density, and none from its own: found apart from this program, runs of 1e6
+    /// draws give .975 with a standard error of .055, and miss the value 1.2028 in 87 of 100. The mean weight tells
+    /// it.
     @Test
     void theNarrowDensityIsObjectedTo() {
         var outcome = leadline(
-                "run", SAMPLES.resolve("wave-overtopping" + ProjectFile.EXTENSION), "--json", "--draws", 1e6, "--lane", "C");
+                "run",
+                SAMPLES.resolve("wave-overtopping" + ProjectFile.EXTENSION),
+                "--json",
+                "--draws",
+                1e6,
+                "--lane",
+                "C");
         var lane = outcome.json().required("lanes").get(0);
         double estimate = lane.required("answers").get(0).required("estimate").asDouble();
         assertTrue(estimate > .85 && estimate < 1.15, "estimate " + estimate);
         assertEquals(1, outcome.exitCode());
-        var ground = lane.required("grounds").valueStream()
+        var ground = lane.required("grounds")
+                .valueStream()
                 .filter(g -> g.required("code").asString().equals("mean-weight"))
                 .findFirst()
                 .orElseThrow();

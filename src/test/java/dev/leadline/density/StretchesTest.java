@@ -49,7 +49,8 @@ class StretchesTest {
 
     @Test
     void findsNoneWhereAllIsCovered() {
-        assertEquals(Optional.empty(), Stretches.missed(new Uniform(0, 2), halves(new Uniform(0, 1), new Uniform(1, 3))));
+        assertEquals(
+                Optional.empty(), Stretches.missed(new Uniform(0, 2), halves(new Uniform(0, 1), new Uniform(1, 3))));
         assertEquals(Optional.empty(), Stretches.missed(new Exponential(1), new Normal(0, 1)));
         // an end that is off by rounding
         assertEquals(Optional.empty(), Stretches.missed(new Uniform(0, .3), new Shifted(new Uniform(0, .1), 0, 3)));

@@ -24,9 +24,11 @@ class TiltedTest {
             Map<String, Double> parameters = Arrays.stream(cells[1].split(";"))
                     .map(pair -> pair.split("="))
                     .collect(Collectors.toMap(pair -> pair[0], pair -> Double.valueOf(pair[1])));
-            double[] n = Arrays.stream(cells).skip(2).mapToDouble(Double::parseDouble).toArray();
-            return new Row(
-                    Catalogue.family(cells[0]).orElseThrow().of(parameters), n[0], n[1], n[2], n[3], n[4]);
+            double[] n = Arrays.stream(cells)
+                    .skip(2)
+                    .mapToDouble(Double::parseDouble)
+                    .toArray();
+            return new Row(Catalogue.family(cells[0]).orElseThrow().of(parameters), n[0], n[1], n[2], n[3], n[4]);
         }
     }
 
@@ -75,12 +77,12 @@ class TiltedTest {
                 Truncated.of(new Normal(0, 1), 1, Double.POSITIVE_INFINITY),
                 Truncated.of(new Lognormal(0, 1), 0, 20),
                 Truncated.of(new Poisson(4), 2, 9),
-                new Mixture(List.of(
-                        new Mixture.Part(.9, new Normal(0, 1)), new Mixture.Part(.1, new Exponential(2)))));
+                new Mixture(List.of(new Mixture.Part(.9, new Normal(0, 1)), new Mixture.Part(.1, new Exponential(2)))));
     }
 
-    /// By definition: the logarithm of the density over the input's own is `by x` less that of the mean factor, at all
-    /// values; and what is divided by is the mean, so that the tilted density has the mass 1 below its last quantile.
+    /// By definition: the logarithm of the density over the input's own is `by x` less that of the mean factor, at
+    /// all values; and what is divided by is the mean, so that the tilted density has the mass 1 below its last
+    /// quantile.
     @ParameterizedTest
     @MethodSource("densities")
     void isTheDensityTimesTheFactor(Density density) {
@@ -103,7 +105,7 @@ class TiltedTest {
     @Test
     void refusesWhereTheFactorHasNoMean() {
         refuses(new Lognormal(0, 1), .01, "exp(0.01 x) has no finite mean");
-        refuses(new Student(4, 0, 1), -1e-6, "exp(-1.0e-6 x) has no finite mean");
+        refuses(new Student(4, 0, 1), -1e-6, "exp(-1e-6 x) has no finite mean");
         refuses(new Exponential(2), .5, "exp(0.5 x) has no finite mean");
         refuses(new Gamma(3, .5), 2.5, "exp(2.5 x) has no finite mean");
         refuses(new Laplace(0, 1), -1, "exp(-1 x) has no finite mean");

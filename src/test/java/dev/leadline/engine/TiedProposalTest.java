@@ -91,7 +91,8 @@ class TiedProposalTest {
                 Map.of(0, new Normal(2.5, 1), 2, new Shifted(new Normal(0, 1), 2.5, 1)));
     }
 
-    /// Far in either tail of an exponential density, where 1 less its probability has few digits, and where it has none.
+    /// Far in either tail of an exponential density, where 1 less its probability has few digits, and where it has
+    /// none.
     @Test
     void probabilitiesComeFromTheNearerTail() {
         for (double far : new double[] {20, 60}) {

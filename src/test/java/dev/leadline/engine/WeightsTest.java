@@ -61,7 +61,10 @@ class WeightsTest {
         var exact = caseOf(RECORD, "c=" + c);
         double p = expected(exact, "probability");
         assertMoments(
-                p, expected(exact, "variance_shift_c"), 1, sums(tail(c), new Shifted(new Normal(0, 1), c, 1), Share.NONE));
+                p,
+                expected(exact, "variance_shift_c"),
+                1,
+                sums(tail(c), new Shifted(new Normal(0, 1), c, 1), Share.NONE));
         double theta = expected(exact, "cross_entropy_shift");
         assertMoments(p, expected(exact, "variance_ce_shift"), 1, sums(tail(c), new Normal(theta, 1), Share.NONE));
     }
@@ -99,8 +102,8 @@ class WeightsTest {
     }
 
     /// Coverage of the 95 % interval where Exp(1) is drawn from Exp(rate a) and the mean of x is sought: found by a
-    /// program of its own with 3,800 repetitions (standard error at most .0035 at .95, .0081 at .5). The tail index of
-    /// the weights is (a - 1)/a, so that from 2 on their variance is infinite.
+    /// program of its own with 3,800 repetitions (standard error at most .0035 at .95, .0081 at .5). The tail index
+    /// of the weights is (a - 1)/a, so that from 2 on their variance is infinite.
     @ParameterizedTest(name = "a = {0}")
     @CsvSource({"1.25, .941, .949, .951", "1.5, .906, .938, .947", "2.05, .791, .843, .874", "2.5, .690, .742, .784"})
     void intervalsHoldAsOftenAsTheyAreKnownTo(double a, double of1e3, double of1e4, double of1e5) {
@@ -186,8 +189,10 @@ class WeightsTest {
     /// What the inputs cannot have counts nothing, though the formula has no value there.
     @Test
     void drawsBeyondTheInputsCountNothing() {
-        var question =
-                new Questions().random("x", new Uniform(0, 1)).mean("sqrt(x*(1 - x))").build();
+        var question = new Questions()
+                .random("x", new Uniform(0, 1))
+                .mean("sqrt(x*(1 - x))")
+                .build();
         var sums = sums(question, new Normal(.5, .4), Share.NONE);
         assertEquals(0, sums.excluded());
         assertEquals(Math.PI / 8, sums.mean(0), 4 * sums.standardError(0));

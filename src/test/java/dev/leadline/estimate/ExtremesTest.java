@@ -13,7 +13,12 @@ class ExtremesTest {
     }
 
     private static double[] sortedDown(double[] values) {
-        return Arrays.stream(values).map(x -> -x).sorted().map(x -> -x).limit(Extremes.KEPT).toArray();
+        return Arrays.stream(values)
+                .map(x -> -x)
+                .sorted()
+                .map(x -> -x)
+                .limit(Extremes.KEPT)
+                .toArray();
     }
 
     /// Against all values, sorted, however they are divided.
@@ -31,7 +36,8 @@ class ExtremesTest {
         assertEquals(x.length, all.nonzero(0));
         assertEquals(0, all.nonzero(1));
         double[] up = sortedDown(Arrays.stream(x).filter(v -> v > 0).toArray());
-        double[] down = sortedDown(Arrays.stream(x).filter(v -> v < 0).map(v -> -v).toArray());
+        double[] down =
+                sortedDown(Arrays.stream(x).filter(v -> v < 0).map(v -> -v).toArray());
         assertArrayEquals(up, all.greatest(0));
         assertArrayEquals(down, all.copy().greatestBelow(0));
         double size = Arrays.stream(x).map(Math::abs).sum();
