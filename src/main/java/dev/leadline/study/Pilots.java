@@ -31,7 +31,9 @@ final class Pilots implements AutoCloseable {
     private final Workers workers;
 
     /// A lane that was run.
-    record Pilot(Lane lane, Recipe recipe, Trace trace) {}
+    ///
+    /// @param draft as a project has it
+    record Pilot(LaneDraft draft, Lane lane, Recipe recipe, Trace trace) {}
 
     Pilots(Project project, long seed, long draws, int threads) {
         this.project = project;
@@ -44,11 +46,13 @@ final class Pilots implements AutoCloseable {
     ///
     /// @param address in place of the lane's name: equal ones draw the same numbers
     Optional<Pilot> run(LaneDraft draft, String address) throws InterruptedException {
-        Optional<Lane> lane = taken(draft)
-                .flatMap(made -> made.scheme().points() instanceof Replicated points && points.replicates() < REPLICATES
-                        ? taken(withReplicates(draft))
-                        : Optional.of(made));
-        return lane.isEmpty() ? Optional.empty() : run(lane.get(), address);
+        Optional<Lane> lane = taken(draft);
+        boolean few = lane.filter(
+                        made -> made.scheme().points() instanceof Replicated points && points.replicates() < REPLICATES)
+                .isPresent();
+        LaneDraft tried = few ? withReplicates(draft) : draft;
+        lane = few ? taken(tried) : lane;
+        return lane.isEmpty() ? Optional.empty() : run(tried, lane.get(), address);
     }
 
     private Optional<Lane> taken(LaneDraft draft) {
@@ -77,7 +81,7 @@ final class Pilots implements AutoCloseable {
                 draft.controls());
     }
 
-    private Optional<Pilot> run(Lane lane, String address) throws InterruptedException {
+    private Optional<Pilot> run(LaneDraft draft, Lane lane, String address) throws InterruptedException {
         var own = new Lane(address, lane.scheme(), false, lane.working()).within(draws);
         var recipe = Recipe.of(project.question(), own, seed, Purpose.PILOT);
         if (recipe.items().whole(draws) == 0) {
@@ -91,7 +95,7 @@ final class Pilots implements AutoCloseable {
         } catch (ExecutionException e) {
             throw new IllegalStateException("a pilot ended by a fault", e.getCause());
         }
-        return Optional.of(new Pilot(own, recipe, run.trace()))
+        return Optional.of(new Pilot(draft, own, recipe, run.trace()))
                 .filter(pilot -> pilot.trace().last().isPresent());
     }
 

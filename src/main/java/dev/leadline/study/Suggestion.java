@@ -84,6 +84,8 @@ public record Suggestion(List<Row> rows, Row recommended, long draws) {
         return String.valueOf(name);
     }
 
+    private record Tried(String reason, Pilot pilot, Contender contender) {}
+
     /// One suggestion being made.
     private record Suggesting(Project project, Pilots pilots, String name, Consumer<String> listener) {
         Suggestion suggestion(long draws, List<Candidate> candidates) throws InterruptedException {
@@ -92,14 +94,18 @@ public record Suggestion(List<Row> rows, Row recommended, long draws) {
             Pilot plain = pilots.run(ofPlain, "independent").orElseThrow();
             List<Offer> offers = offers(candidates);
             double level = 1 - (1 - project.question().confidence()) / Math.max(1, offers.size());
-            List<Row> rows = new ArrayList<>();
+            List<Tried> tried = new ArrayList<>();
             for (int i = 0; i < offers.size(); i++) {
                 var lane = offers.get(i).lane().named(name);
                 listener.accept(lane.points());
                 Optional<Pilot> pilot = pilots.run(lane, "candidate " + i);
                 if (pilot.isPresent()) {
-                    rows.add(row(plain, pilot.get(), lane, offers.get(i).reason(), level));
+                    tried.add(new Tried(offers.get(i).reason(), pilot.get(), contender(pilot.get())));
                 }
+            }
+            List<Row> rows = new ArrayList<>();
+            for (Tried one : tried) {
+                rows.add(row(plain, one, tried, level));
             }
             rows.add(new Row(
                     ofPlain,
@@ -131,24 +137,29 @@ public record Suggestion(List<Row> rows, Row recommended, long draws) {
             }
         }
 
-        private Row row(Pilot plain, Pilot pilot, LaneDraft lane, String reason, double level) {
-            var one = new Contender(project.question(), plain.lane(), plain.trace());
-            var other = new Contender(project.question(), pilot.lane(), pilot.trace());
+        private Contender contender(Pilot pilot) {
+            return new Contender(project.question(), pilot.lane(), pilot.trace());
+        }
+
+        private Row row(Pilot plain, Tried tried, List<Tried> all, double level) {
+            var one = contender(plain);
+            var other = tried.contender();
             var variance = variance(one, other).filter(log -> log.standardError() <= Comparison.MOST_ERROR);
-            var time = pilots.time(plain, pilot).ratio();
+            var time = pilots.time(plain, tried.pilot()).ratio();
             var efficiency = variance.map(time::plus).map(log -> Ratio.of(log, level));
-            boolean disagrees = disagrees(one, other);
+            boolean wrong =
+                    differ(one, other) || all.stream().anyMatch(another -> missesWhat(other, another.contender()));
             return new Row(
-                    lane,
-                    pilot.lane().scheme().inWords(),
+                    tried.pilot().draft(),
+                    tried.pilot().lane().scheme().inWords(),
                     variance.map(log -> Ratio.of(log, level)),
                     Optional.of(Ratio.of(time, level)),
-                    disagrees ? Optional.empty() : efficiency,
-                    disagrees
-                            ? "Its estimate disagrees with that of plain draws."
+                    wrong ? Optional.empty() : efficiency,
+                    wrong
+                            ? "It misses something: its estimate disagrees with another."
                             : efficiency
-                                    .map(ratio -> said(ratio, reason, other))
-                                    .orElse("What it is worth cannot be" + " judged in so few draws."));
+                                    .map(ratio -> said(ratio, tried.reason(), other))
+                                    .orElse("What it is worth cannot be judged in so few draws."));
         }
 
         private static String said(Ratio efficiency, String reason, Contender lane) {
@@ -178,13 +189,21 @@ public record Suggestion(List<Row> rows, Row recommended, long draws) {
                     : plain.variance().flatMap(one -> other.variance().map(one::minus));
         }
 
-        private static boolean disagrees(Contender plain, Contender other) {
-            if (!plain.spreads() || !other.spreads()) {
+        /// Of two weighted estimates that disagree, the smaller one misses what its draws hardly reach.
+        private static boolean missesWhat(Contender lane, Contender another) {
+            return lane.scheme().isWeighted()
+                    && Math.abs(lane.estimate().value())
+                            < Math.abs(another.estimate().value())
+                    && differ(lane, another);
+        }
+
+        private static boolean differ(Contender one, Contender other) {
+            if (!one.spreads() || !other.spreads()) {
                 return false;
             }
-            double error = Math.hypot(
-                    plain.estimate().standardError(), other.estimate().standardError());
-            return Math.abs(plain.estimate().value() - other.estimate().value()) > DISAGREES * error;
+            double error =
+                    Math.hypot(one.estimate().standardError(), other.estimate().standardError());
+            return Math.abs(one.estimate().value() - other.estimate().value()) > DISAGREES * error;
         }
     }
 }

@@ -1,6 +1,5 @@
 package dev.leadline.study.candidate;
 
-import dev.leadline.density.Density;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
@@ -26,8 +25,8 @@ import java.util.function.Function;
 ///
 /// The components that tell are carried as control variates: the outcome's size, and its products with the inputs.
 public final class Gains {
-    /// Draws that would say as much, were they all equal, below which the means are not trusted.
-    private static final double ENOUGH = 30;
+    /// Draws that would say as much, were they all equal, below which the means are no guess to refine.
+    private static final double ENOUGH = 8;
 
     private static final double[] WIDER = {1.5, 2, 3};
     private static final int REFINEMENTS = 3;
@@ -52,10 +51,17 @@ public final class Gains {
     }
 
     /// A lane that draws some inputs from other densities.
-    static LaneDraft lane(List<Gain> gains, Function<Gain, Other> other) {
+    ///
+    /// @param other of an input that is one of them
+    static Optional<LaneDraft> lane(List<Gain> gains, Function<Gain, Optional<Other>> other) {
+        var others = others(gains, other);
+        return others.isEmpty() ? Optional.empty() : Optional.of(lane(others, List.of()));
+    }
+
+    private static SequencedMap<String, Other> others(List<Gain> gains, Function<Gain, Optional<Other>> other) {
         var others = new LinkedHashMap<String, Other>();
-        gains.forEach(gain -> others.put(gain.input(), other.apply(gain)));
-        return lane(others, List.of());
+        gains.forEach(gain -> other.apply(gain).ifPresent(density -> others.put(gain.name(), density)));
+        return others;
     }
 
     private static LaneDraft lane(SequencedMap<String, Other> others, List<ControlDraft> controls) {
@@ -91,20 +97,12 @@ public final class Gains {
         for (int i = 0; i < WIDER.length && seen.isEmpty(); i++) {
             double by = WIDER[i];
             var wider = new LinkedHashMap<String, Other>();
-            inputs.stream()
-                    .filter(input -> !input.drawn().isDiscrete())
-                    .forEach(input -> wider.put(input.name(), new Other.Widen(by)));
-            seen = seen(inputs, wider, "wider " + by);
+            inputs.stream().filter(Gains::hasTail).forEach(input -> wider.put(input.name(), new Other.Widen(by)));
+            seen = wider.isEmpty() ? seen : seen(inputs, wider, "wider " + by);
         }
         for (int i = 0; i < REFINEMENTS && seen.isPresent(); i++) {
-            var shifted = new LinkedHashMap<String, Other>();
-            seen.get().stream()
-                    .filter(gain -> gain.isAside() && !gain.discrete())
-                    .forEach(gain -> shifted.put(gain.input(), new Other.Shift(Digits.three(gain.away()))));
-            if (shifted.isEmpty()) {
-                break;
-            }
-            var finer = seen(inputs, shifted, "shifted " + i);
+            var moved = others(seen.get().stream().filter(Gain::isAside).toList(), Gain::moved);
+            var finer = moved.isEmpty() ? Optional.<List<Gain>>empty() : seen(inputs, moved, "moved " + i);
             if (finer.isEmpty()) {
                 break;
             }
@@ -118,7 +116,7 @@ public final class Gains {
         List<ControlDraft> controls = new ArrayList<>();
         controls.add(new ControlDraft(size, new Mean.Stated(0)));
         for (Input input : inputs) {
-            String away = "(%s - (%s))".formatted(input.name(), Digits.plain(middle(input.drawn())));
+            String away = "(%s - (%s))".formatted(input.name(), Digits.plain(Gain.middle(input.drawn())));
             controls.add(new ControlDraft(size + "*" + away, new Mean.Stated(0)));
             controls.add(new ControlDraft(size + "*" + away + "^2", new Mean.Stated(0)));
         }
@@ -128,10 +126,10 @@ public final class Gains {
                 .map(sums -> {
                     List<Gain> gains = new ArrayList<>();
                     for (int j = 0; j < inputs.size(); j++) {
-                        gains.add(gain(
+                        gains.add(new Gain(
                                 inputs.get(j),
                                 sums.mean(first + 1 + 2 * j) / sums.mean(first),
-                                sums.mean(first + 2 + 2 * j) / sums.mean(first)));
+                                Math.sqrt(sums.mean(first + 2 + 2 * j) / sums.mean(first))));
                     }
                     return gains;
                 });
@@ -143,16 +141,9 @@ public final class Gains {
         return sums.count() * mean * mean / (mean * mean + sums.variance(k));
     }
 
-    private static double middle(Density own) {
-        return Double.isFinite(own.mean()) ? own.mean() : own.quantile(.5);
-    }
-
-    private static Gain gain(Input input, double away, double square) {
-        Density own = input.drawn();
-        double spread = Math.sqrt(own.variance());
-        if (!(spread > 0 && Double.isFinite(spread))) {
-            spread = (own.quantile(.84) - own.quantile(.16)) / 2;
-        }
-        return new Gain(input.name(), own.isDiscrete(), away, Math.sqrt(square), spread);
+    private static boolean hasTail(Input input) {
+        var support = input.drawn().support();
+        return !input.drawn().isDiscrete()
+                && (support.low() == Double.NEGATIVE_INFINITY || support.high() == Double.POSITIVE_INFINITY);
     }
 }

@@ -3,6 +3,7 @@ package dev.leadline.study.candidate;
 import dev.leadline.model.LaneDraft.Other;
 import dev.leadline.model.Project;
 import java.util.List;
+import java.util.Optional;
 import java.util.stream.Collectors;
 
 /// Inputs drawn from their own densities, stretched to reach where the outcome comes from.
@@ -11,15 +12,13 @@ record WidenedDensities() implements Candidate {
 
     @Override
     public List<Offer> offers(Project project, Gains gains) {
-        List<Gain> widened = gains.all().stream()
-                .filter(gain -> gain.isBeyond() && !gain.discrete())
-                .toList();
-        return widened.isEmpty()
-                ? List.of()
-                : List.of(new Offer(
-                        Gains.lane(widened, gain -> new Other.Widen(factor(gain))),
+        List<Gain> rare = gains.all().stream().filter(Gain::isBeyond).toList();
+        return Gains.lane(rare, gain -> Optional.of(new Other.Widen(factor(gain)))).stream()
+                .map(lane -> new Offer(
+                        lane,
                         "the outcome comes from rare values of %s, which wider densities reach more often"
-                                .formatted(widened.stream().map(Gain::input).collect(Collectors.joining(", ")))));
+                                .formatted(rare.stream().map(Gain::name).collect(Collectors.joining(", ")))))
+                .toList();
     }
 
     private static double factor(Gain gain) {
