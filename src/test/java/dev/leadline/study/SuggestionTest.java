@@ -8,6 +8,7 @@ import dev.leadline.engine.Questions;
 import dev.leadline.interval.Ratio;
 import dev.leadline.model.LaneDraft;
 import dev.leadline.model.LaneDraft.DrawFrom;
+import dev.leadline.model.LaneDraft.Other;
 import dev.leadline.model.Project;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.study.candidate.Candidate;
@@ -22,6 +23,7 @@ import org.junit.jupiter.api.Test;
 /// Each scheme is recommended for a question that it is made for, and plain draws for one that none helps.
 class SuggestionTest {
     private static final long DRAWS = 32_768;
+    private static final String NORMAL = "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}";
 
     /// @param density of each of the inputs `x1`, `x2` …
     private static Project project(int inputs, String density, String ask) {
@@ -34,8 +36,7 @@ class SuggestionTest {
     }
 
     private static Suggestion suggested(int normals, String formula) throws InterruptedException {
-        return suggested(project(
-                normals, "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}", "{\"mean\": \"%s\"}".formatted(formula)));
+        return suggested(project(normals, NORMAL, "{\"mean\": \"%s\"}".formatted(formula)));
     }
 
     private static Suggestion suggested(Project project) throws InterruptedException {
@@ -57,15 +58,10 @@ class SuggestionTest {
         assertEquals("antithetic", lane.points());
     }
 
-    private static final Project HALVES = project(
-            2,
-            "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}",
-            "{\"mean\": \"if(x1*x2 > 0, 1, -1)*(2 + cos(x1))\"}");
+    private static final Project HALVES = project(2, NORMAL, "{\"mean\": \"if(x1*x2 > 0, 1, -1)*(2 + cos(x1))\"}");
 
-    private static final Project SQUARES = project(
-            10,
-            "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}",
-            "{\"mean\": \"x1^2+x2^2+x3^2+x4^2+x5^2+x6^2+x7^2+x8^2+x9^2+x10^2\"}");
+    private static final Project SQUARES =
+            project(10, NORMAL, "{\"mean\": \"x1^2+x2^2+x3^2+x4^2+x5^2+x6^2+x7^2+x8^2+x9^2+x10^2\"}");
 
     /// Of all candidates those whose words hold none of these.
     private static Suggestion without(Project project, String... words) throws InterruptedException {
@@ -157,12 +153,57 @@ class SuggestionTest {
     }
 
     /// The chance of a far corner, 4.4e-6 (the tail of a normal sum, by scipy): plain draws of a pilot see none.
+    private static final Project CORNER = project(3, NORMAL, "{\"probability\": \"x1 + x2 + x3 > 7.7\"}");
+
+    private static LaneDraft gainsHundredfold(Suggestion suggestion) {
+        var lane = recommended(suggestion);
+        assertTrue(suggestion.recommended().efficiencyRatio().orElseThrow().low() > 100, suggestion::toString);
+        return lane;
+    }
+
+    private static List<Other> others(LaneDraft lane) {
+        return List.copyOf(((DrawFrom.Inputs) lane.drawFrom()).others().values());
+    }
+
+    @Test
+    void someOtherDensitiesForARareEvent() throws InterruptedException {
+        assertNotEquals(DrawFrom.NOTHING, gainsHundredfold(suggested(CORNER)).drawFrom());
+    }
+
     @Test
     void densitiesFoundBeforeTheRun() throws InterruptedException {
-        var suggestion = suggested(project(
-                3, "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}", "{\"probability\": \"x1 + x2 + x3 > 7.7\"}"));
-        assertEquals(
-                new DrawFrom.Adapted("cross-entropy"), recommended(suggestion).drawFrom());
-        assertTrue(suggestion.recommended().efficiencyRatio().orElseThrow().low() > 100);
+        var lane = gainsHundredfold(without(CORNER, "Shifted", "Tilted", "Widened"));
+        assertEquals(new DrawFrom.Adapted("cross-entropy"), lane.drawFrom());
+    }
+
+    /// The event is most likely at a third of 7.7 in each input.
+    @Test
+    void shiftedDensities() throws InterruptedException {
+        var others = others(gainsHundredfold(without(CORNER, "Adapted", "Tilted")));
+        assertEquals(3, others.size());
+        for (Other other : others) {
+            assertEquals(7.7 / 3, ((Other.Shift) other).by(), .4);
+        }
+    }
+
+    /// A shift of exponential draws would leave a gap behind it. Of five whose sum exceeds 25 each is 5 or a little
+    /// more, which a tilt of 1 - 1/5 gives.
+    @Test
+    void tiltedDensities() throws InterruptedException {
+        var corner = project(
+                5, "{\"family\": \"exponential\", \"mean\": 1}", "{\"probability\": \"x1 + x2 + x3 + x4 + x5 > 25\"}");
+        var others = others(gainsHundredfold(without(corner, "Adapted")));
+        assertEquals(5, others.size());
+        for (Other other : others) {
+            assertEquals(.8, ((Other.Tilt) other).by(), .06);
+        }
+    }
+
+    /// Both tails at once: neither side is the one to move to.
+    @Test
+    void widenedDensities() throws InterruptedException {
+        var tails = project(1, NORMAL, "{\"probability\": \"abs(x1) > 4.5\"}");
+        var others = others(gainsHundredfold(without(tails, "Adapted")));
+        assertEquals(4.7, ((Other.Widen) others.getFirst()).by(), .4);
     }
 }

@@ -16,6 +16,7 @@ public final class Candidates {
             new LaidOut("splitting", "particles climb towards the event step by step"),
             new InputControls(),
             new ShiftedDensities(),
+            new TiltedDensities(),
             new WidenedDensities(),
             new AdaptedDensities("cross-entropy", "rare outcomes are drawn more often, as draws before the run taught"),
             new AdaptedDensities(

@@ -4,7 +4,7 @@ import dev.leadline.model.Project;
 import java.util.List;
 import java.util.stream.Collectors;
 
-/// Inputs drawn from their own densities shifted to where the outcome comes from, where that leaves no gap behind.
+/// Inputs drawn from their own densities moved to where the outcome comes from, by a shift where that leaves no gap.
 record ShiftedDensities() implements Candidate {
     @Override
     public List<Offer> offers(Project project, Gains gains) {
