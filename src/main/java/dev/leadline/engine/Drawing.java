@@ -125,6 +125,11 @@ final class Drawing {
         return warping.map(Warping::weights);
     }
 
+    /// Where points stand before [#fill(int)]; `null` for a coordinate that nobody reads.
+    double[][] points() {
+        return points;
+    }
+
     /// Values of each input; `null` for one that is not wanted. The arrays stay the same.
     double[][] columns() {
         return columns;

@@ -66,6 +66,9 @@ public final class LaneRun {
         if (draws >= budget) {
             return end("all draws made", seconds);
         }
+        if (ahead.isEmpty() && items.within(submitted, budget).isEmpty()) {
+            return end("all repetitions made", seconds);
+        }
         if (stop.seconds().isPresent() && seconds >= stop.seconds().getAsDouble()) {
             return end("time used up", seconds);
         }
@@ -104,12 +107,12 @@ public final class LaneRun {
 
     private void submitAhead() {
         while (ahead.size() < workers.ahead()) {
-            Item item = items.at(submitted);
-            if (item.firstDraw() >= budget) {
+            var item = items.within(submitted, budget);
+            if (item.isEmpty()) {
                 return;
             }
             submitted++;
-            ahead.add(workers.submit(recipe, item.first(budget - item.firstDraw())));
+            ahead.add(workers.submit(recipe, item.get()));
         }
     }
 

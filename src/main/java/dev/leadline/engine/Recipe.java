@@ -9,13 +9,17 @@ import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
 import dev.leadline.scheme.Control;
+import dev.leadline.scheme.LaidOut;
 import dev.leadline.scheme.Layout;
 import dev.leadline.scheme.Proposal;
+import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.Replicated;
 import dev.leadline.scheme.Share;
 import dev.leadline.scheme.Tuned;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
+import dev.leadline.stream.Stream;
+import dev.leadline.stream.StreamKey;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
@@ -28,9 +32,13 @@ public final class Recipe {
     /// Name of a coordinate: no input can be called so.
     private static final String SHARE = "/";
 
+    /// Name in the address of the random numbers of splitting.
+    private static final String SPLITTING = "^";
+
     private final Question question;
     private final Lane lane;
-    private final Layout layout;
+    private final Address address;
+    private final Optional<Layout> layout;
     private final Ties ties;
     private final List<Inversion> inversions;
     private final Map<Integer, Inversion> proposed;
@@ -41,9 +49,10 @@ public final class Recipe {
         this.question = question;
         this.lane = lane;
         this.ties = new Ties(question, proposal().keySet());
-        this.layout = lane.scheme()
-                .points()
-                .layout(new Address(seed, purpose, lane.address(), replicate, "", 0), coordinates());
+        this.address = new Address(seed, purpose, lane.address(), replicate, "", 0);
+        this.layout = lane.scheme().points() instanceof LaidOut points
+                ? Optional.of(points.layout(address, coordinates()))
+                : Optional.empty();
         this.inversions =
                 Inversion.of(question.inputs().stream().map(Input::drawn).toList());
         this.proposed = new TreeMap<>();
@@ -86,6 +95,13 @@ public final class Recipe {
         return new Sampler(this);
     }
 
+    /// What a worker computes the items with.
+    ItemWork work() {
+        return lane.scheme().points() instanceof Repetitions repetitions
+                ? new Climber(this, repetitions)
+                : new Sampler(this);
+    }
+
     public Items items() {
         return Items.of(lane.scheme());
     }
@@ -115,7 +131,9 @@ public final class Recipe {
 
     /// The components of an observation: what is asked, the control variates, and the weight where draws are weighted.
     int components() {
-        return program().outputs() + (lane.scheme().isWeighted() ? 1 : 0);
+        return lane.scheme().points() instanceof Repetitions
+                ? Repetitions.COMPONENTS
+                : program().outputs() + (lane.scheme().isWeighted() ? 1 : 0);
     }
 
     public Question question() {
@@ -123,7 +141,12 @@ public final class Recipe {
     }
 
     Layout layout() {
-        return layout;
+        return layout.orElseThrow();
+    }
+
+    /// The random numbers of a repetition of splitting.
+    Stream numbers(long repetition) {
+        return StreamKey.of(address.forInput(SPLITTING)).stream(repetition);
     }
 
     Lane lane() {

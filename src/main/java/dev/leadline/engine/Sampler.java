@@ -14,7 +14,7 @@ import java.util.function.BooleanSupplier;
 
 /// Makes the draws of an item of work and accumulates them. Scratch of one worker, confined to it; what it returns
 /// is a pure function of the recipe and the item.
-public final class Sampler {
+public final class Sampler implements ItemWork {
     private final Recipe recipe;
     private final Program program;
     private final Program.Workspace workspace;
@@ -51,8 +51,7 @@ public final class Sampler {
         this.extremes = isWeighted ? Optional.of(new Extremes(outcomes.length)) : Optional.empty();
     }
 
-    /// @param cancelled looked at between blocks of draws
-    /// @return empty where cancelled
+    @Override
     public Optional<ItemSums> compute(Item item, BooleanSupplier cancelled) {
         drawing.open(item.stretch());
         folding.open();

@@ -10,7 +10,7 @@ sealed interface Tally {
     /// @param items those of the lane
     static Tally of(Items items, int components) {
         return switch (items) {
-            case GrowingItems _ -> new Growing(components);
+            case GrowingItems _, RepetitionItems _ -> new Growing(components);
             case Rounds rounds -> new Replicates(rounds, components);
         };
     }

@@ -11,7 +11,7 @@ import java.util.concurrent.Future;
 public final class Workers implements AutoCloseable {
     private final int threads;
     private final ExecutorService pool;
-    private final ThreadLocal<Map<Recipe, Sampler>> samplers = ThreadLocal.withInitial(IdentityHashMap::new);
+    private final ThreadLocal<Map<Recipe, ItemWork>> samplers = ThreadLocal.withInitial(IdentityHashMap::new);
     private volatile boolean cancelled;
 
     public Workers(int threads) {
@@ -29,7 +29,7 @@ public final class Workers implements AutoCloseable {
     /// @return empty where cancelled before its end
     Future<Optional<ItemSums>> submit(Recipe recipe, Item item) {
         return pool.submit(
-                () -> samplers.get().computeIfAbsent(recipe, Recipe::sampler).compute(item, () -> cancelled));
+                () -> samplers.get().computeIfAbsent(recipe, Recipe::work).compute(item, () -> cancelled));
     }
 
     /// Lets workers drop what they are at, between two blocks of draws.

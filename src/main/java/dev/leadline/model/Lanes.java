@@ -1,9 +1,11 @@
 package dev.leadline.model;
 
+import dev.leadline.estimate.Estimand;
 import dev.leadline.formula.Working;
 import dev.leadline.scheme.Adapted;
 import dev.leadline.scheme.Control;
 import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.Scheme;
 import java.util.ArrayList;
 import java.util.HashSet;
@@ -17,15 +19,15 @@ final class Lanes {
     private static final Pattern LANE = Pattern.compile("[\\p{L}\\p{Nd}_][\\p{L}\\p{Nd}_.-]{0,19}");
 
     private final Draft draft;
-    private final boolean sound;
+    private final Optional<Working> working;
     private final List<String> names;
     private final Proposals proposals;
     private final Controls controls;
     private final Findings findings;
 
-    private Lanes(Draft draft, boolean sound, Proposals proposals, Controls controls, Findings findings) {
+    private Lanes(Draft draft, Optional<Working> working, Proposals proposals, Controls controls, Findings findings) {
         this.draft = draft;
-        this.sound = sound;
+        this.working = working;
         this.names = draft.inputs().stream()
                 .map(input -> Workings.composed(input.name()))
                 .toList();
@@ -36,11 +38,11 @@ final class Lanes {
 
     /// Those that have no problem.
     ///
-    /// @param sound whether all inputs and formulas are: only then can lanes speak of them
+    /// @param working the formulas, where these and all inputs are sound: only then can lanes speak of them
     static List<Lane> of(
             Draft draft,
             List<Input> inputs,
-            boolean sound,
+            Optional<Working> working,
             Optional<Dependence> dependence,
             DataFiles files,
             Findings findings) {
@@ -50,7 +52,7 @@ final class Lanes {
         var densities = new Densities(files, Workings.constants(draft), findings);
         return new Lanes(
                         draft,
-                        sound,
+                        working,
                         new Proposals(inputs, dependence, densities, findings),
                         new Controls(draft, inputs, findings),
                         findings)
@@ -75,6 +77,35 @@ final class Lanes {
         return lanes;
     }
 
+    /// Splitting climbs to one event, from the inputs' own densities.
+    private void checkSplitting(LaneDraft lane, String path) {
+        if (!lane.drawFrom().equals(LaneDraft.DrawFrom.NOTHING)) {
+            findings.add(
+                    path + ".drawFrom",
+                    "splitting draws from no other densities",
+                    "Its particles move from the inputs' own densities towards the event.",
+                    "Leave drawFrom out, or take independent points.");
+        }
+        if (!lane.controls().isEmpty()) {
+            findings.add(
+                    path + ".controlVariates",
+                    "splitting takes no control variates",
+                    "Its observations are numbers of replacements, whose means nobody knows.",
+                    "Leave them out.");
+        }
+        boolean isOneEvent = draft.asks().size() == 1
+                && draft.asks().getFirst().estimand().equals(new Estimand.Probability().word());
+        if (!isOneEvent) {
+            findings.add(
+                    path + ".points",
+                    "splitting answers one probability",
+                    "Its particles climb towards one event.",
+                    "Ask for one probability, or take other points.");
+        } else {
+            findings.made(_ -> path + ".points", () -> working.orElseThrow().score(0));
+        }
+    }
+
     private void checkName(String name, String path, Set<String> names) {
         if (!LANE.matcher(name).matches()) {
             findings.add(
@@ -92,13 +123,13 @@ final class Lanes {
 
     private Optional<Lane> lane(LaneDraft lane, String path) {
         var points = Layouts.of(lane, names, path, findings);
-        if (!sound) {
+        if (working.isEmpty()) {
             return Optional.empty();
         }
         var drawFrom = proposals.of(lane, path);
         Optional<Adapted> adapted = proposals.adaptation(lane, path).map(Adapted.class::cast);
         List<Control> controlled = controls.of(lane, path);
-        Optional<Working> working = controlled.isEmpty() ? Optional.empty() : controls.working(lane, path);
+        Optional<Working> formulas = controlled.isEmpty() ? Optional.empty() : controls.working(lane, path);
         if (lane.selfNormalised() && !controlled.isEmpty()) {
             findings.add(
                     path + ".controlVariates",
@@ -106,7 +137,10 @@ final class Lanes {
                     "Weights divided by their mean have no means that are known.",
                     "Leave one of them out.");
         }
+        if (points.filter(Repetitions.class::isInstance).isPresent()) {
+            checkSplitting(lane, path);
+        }
         return points.map(p -> new Lane(
-                lane.name(), new Scheme(p, drawFrom, controlled, adapted), draft.commonRandomNumbers(), working));
+                lane.name(), new Scheme(p, drawFrom, controlled, adapted), draft.commonRandomNumbers(), formulas));
     }
 }

@@ -1,5 +1,6 @@
 package dev.leadline.model;
 
+import dev.leadline.interval.SplittingSteps;
 import dev.leadline.model.LaneDraft.Settings;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
@@ -7,9 +8,11 @@ import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.LatinHypercube;
 import dev.leadline.scheme.Points;
+import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.ScrambledSobol;
 import dev.leadline.scheme.Scrambling;
 import dev.leadline.scheme.ShiftedLattice;
+import dev.leadline.scheme.Splitting;
 import dev.leadline.scheme.Stratified;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -29,6 +32,8 @@ final class Layouts {
 
     private static final int MOST_REPLICATES = 10_000;
     private static final int USUAL_CUBES = 30;
+    private static final int FEWEST_PARTICLES = 10;
+    private static final int MOST_PARTICLES = 10_000;
     private static final int USUAL_REPLICATES = 16;
 
     /// @param takes names of the settings that it takes
@@ -61,6 +66,7 @@ final class Layouts {
         kinds.put(LatinHypercube.WORD, new Kind(List.of("replicates", "cube"), Layouts::latinHypercube));
         kinds.put(ScrambledSobol.WORD, new Kind(List.of("replicates", "scrambling"), Layouts::scrambledSobol));
         kinds.put(ShiftedLattice.WORD, new Kind(List.of("replicates"), Layouts::shiftedLattice));
+        kinds.put(Repetitions.WORD, new Kind(List.of("particles", "repetitions"), Layouts::splitting));
         return kinds;
     }
 
@@ -155,6 +161,19 @@ final class Layouts {
         }
         return replicates.isPresent() && (cube.isPresent() || settings.cube().isEmpty())
                 ? Optional.of(new LatinHypercube(cube, replicates.getAsInt()))
+                : Optional.empty();
+    }
+
+    private Optional<Points> splitting() {
+        var particles = count(
+                "particles", settings.particles(), Splitting.DEFAULT.particles(), FEWEST_PARTICLES, MOST_PARTICLES);
+        var repetitions = settings.repetitions().isEmpty()
+                ? OptionalInt.empty()
+                : count("repetitions", settings.repetitions(), 0, SplittingSteps.LEAST, MOST_REPLICATES);
+        return particles.isPresent()
+                        && (repetitions.isPresent() || settings.repetitions().isEmpty())
+                ? Optional.of(
+                        new Repetitions(new Splitting(particles.getAsInt(), Splitting.DEFAULT.moves()), repetitions))
                 : Optional.empty();
     }
 

@@ -54,7 +54,8 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         long seed = Plans.seed(draft, findings);
         Optional<Dependence> dependence =
                 draft.dependence().flatMap(given -> Dependences.of(given, draft.inputs(), inputs, findings));
-        boolean sound = working.isPresent() && inputs.size() == draft.inputs().size();
+        Optional<Working> sound =
+                working.filter(_ -> inputs.size() == draft.inputs().size());
         List<Lane> lanes = Lanes.of(draft, inputs, sound, dependence, noting(files, read), findings);
         findings.refuseIfAny();
         Question question = new Question(
@@ -81,7 +82,12 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
     public Lane lane(LaneDraft lane) {
         var findings = new Findings();
         List<Lane> made = Lanes.of(
-                draft.with(List.of(lane)), question.inputs(), true, question.dependence(), DataFiles.NONE, findings);
+                draft.with(List.of(lane)),
+                question.inputs(),
+                Optional.of(question.working()),
+                question.dependence(),
+                DataFiles.NONE,
+                findings);
         findings.refuseIfAny();
         return made.getFirst();
     }

@@ -1,7 +1,7 @@
 package dev.leadline.scheme;
 
 /// Points whose observations follow one another, independent of each other: a longer run has more of them.
-public sealed interface Growing extends Points permits Independent, Antithetic, Stratified, LatinHypercube {
+public sealed interface Growing extends LaidOut permits Independent, Antithetic, Stratified, LatinHypercube {
     /// Number of consecutive draws that together form one independent observation, their mean.
     int drawsPerObservation();
 }

@@ -1,10 +1,7 @@
 package dev.leadline.scheme;
 
-import dev.leadline.stream.Address;
-import java.util.List;
-
 /// How the points of a lane are laid out in the unit cube. Immutable, safe for all threads.
-public sealed interface Points permits Growing, Replicated {
+public sealed interface Points permits LaidOut, Repetitions {
     /// Word of the project file.
     String word();
 
@@ -12,11 +9,6 @@ public sealed interface Points permits Growing, Replicated {
     default String inWords() {
         return word();
     }
-
-    /// The points of a lane; the address of each coordinate is `lane` with its name.
-    ///
-    /// @param lane its replicate, input and item do not matter
-    Layout layout(Address lane, List<String> coordinates);
 
     /// These points as a lane of so many draws has them, where their layout depends on that.
     default Points within(long draws) {

@@ -114,7 +114,7 @@ final class Contender {
         if (!spreads()) {
             return Optional.empty();
         }
-        Optional<Logarithm> found = isMean() && grows() && total.count() > groups.size()
+        Optional<Logarithm> found = isMean() && total.count() > groups.size()
                 ? Optional.of(Jackknife.ofVariance(total, 0))
                         .map(ofOne -> new Logarithm(logOfVariance(), ofOne.variance(), ofOne.degrees()))
                 : jackknife(this::logOfVariance);
@@ -123,7 +123,8 @@ final class Contender {
 
     /// Whether the answer is a mean of observations, and not a function of several.
     private boolean isMean() {
-        return scheme().controls().isEmpty()
+        return grows()
+                && scheme().controls().isEmpty()
                 && scheme().drawFrom().filter(Proposal::selfNormalised).isEmpty();
     }
 

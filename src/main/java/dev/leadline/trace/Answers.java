@@ -8,6 +8,7 @@ import dev.leadline.estimate.SelfNormalised;
 import dev.leadline.interval.ClopperPearson;
 import dev.leadline.interval.Interval;
 import dev.leadline.interval.NoHit;
+import dev.leadline.interval.SplittingSteps;
 import dev.leadline.interval.Student;
 import dev.leadline.interval.ToRounding;
 import dev.leadline.model.Ask;
@@ -16,9 +17,12 @@ import dev.leadline.model.Input.Role;
 import dev.leadline.model.Question;
 import dev.leadline.scheme.Growing;
 import dev.leadline.scheme.Proposal;
+import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.Scheme;
+import dev.leadline.scheme.SplittingOutcome;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalLong;
 
 /// What the sums of the observations say about each thing asked.
@@ -46,6 +50,9 @@ public final class Answers {
             long hits = sums.hits(k).orElseThrow();
             var interval = ClopperPearson.of(hits, sums.count(), sums.excluded(), level);
             return answer(ask, sums, Estimate.mean(sums, k), interval, OptionalLong.of(hits));
+        }
+        if (scheme.points() instanceof Repetitions repetitions) {
+            return climbed(ask, repetitions, sums, level);
         }
         boolean isNoHit = ask.estimand() instanceof Estimand.Probability && scheme.isWeighted() && isZero(sums, k);
         if (isNoHit) {
@@ -89,12 +96,35 @@ public final class Answers {
     ///
     /// @param asks components before those of the control variates
     public static Estimate estimate(Scheme scheme, Accumulator sums, int k, int asks) {
+        if (scheme.points() instanceof Repetitions repetitions) {
+            var steps = steps(repetitions, sums);
+            return new Estimate(steps.estimate(), steps.error(), sums.count() - 1);
+        }
         if (scheme.drawFrom().filter(Proposal::selfNormalised).isPresent()) {
             return SelfNormalised.of(sums, k, sums.components() - 1);
         }
         return scheme.controls().isEmpty()
                 ? Estimate.mean(sums, k)
                 : Regression.of(sums, k, asks, scheme.controls().size());
+    }
+
+    /// Of splitting: no answer once a repetition has given up, for those that did not are the lucky ones.
+    private static Answer climbed(Ask ask, Repetitions repetitions, Accumulator sums, double level) {
+        int end = sums.count() == 0 ? 0 : (int) sums.max(Repetitions.COMPONENTS - 1);
+        if (end > 0) {
+            String why = SplittingOutcome.End.values()[end].words();
+            var none = new Interval(
+                    Double.NaN, Double.NaN, level, SplittingSteps.KIND, "A repetition gave up.", Optional.of(why));
+            return answer(
+                    ask, sums, new Estimate(Double.NaN, Double.NaN, sums.count() - 1), none, OptionalLong.empty());
+        }
+        var steps = steps(repetitions, sums);
+        var estimate = new Estimate(steps.estimate(), steps.error(), sums.count() - 1);
+        return answer(ask, sums, estimate, steps.interval(level), OptionalLong.empty());
+    }
+
+    private static SplittingSteps steps(Repetitions repetitions, Accumulator sums) {
+        return SplittingSteps.of(sums, 0, repetitions.splitting().particles());
     }
 
     /// A chance is neither below 0 nor above 1.

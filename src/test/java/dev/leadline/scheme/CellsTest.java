@@ -21,7 +21,7 @@ class CellsTest {
     private static final int[] BLOCKS = {1024, 8, 2, 640, 1024};
 
     /// @return one array for each coordinate
-    private static double[][] draws(Points points, List<String> names, long item, int n) {
+    private static double[][] draws(LaidOut points, List<String> names, long item, int n) {
         var cursor = points.layout(LANE, names).open(new Stretch(item, 0, 0));
         double[][] all = new double[names.size()][n];
         double[][] block = new double[names.size()][1024];
