@@ -6,6 +6,8 @@ import dev.leadline.model.Tolerance;
 import dev.leadline.numeric.Rounding;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
 
 /// What a picture says, in words: the caption under a figure, and the text for people who cannot see it.
 public final class Caption {
@@ -27,6 +29,43 @@ public final class Caption {
         sentences.add("Seed " + settling.seed() + ".");
         sentences.add("The intervals cover sampling error only.");
         return String.join(" ", sentences);
+    }
+
+    public static String of(ErrorDecay decay) {
+        var sentences = new ArrayList<String>();
+        sentences.add("Half-width of the " + Interval.percent(decay.level()) + " interval of " + decay.quantity()
+                + " against the number of draws, both axes logarithmic.");
+        for (var lane : decay.lanes()) {
+            String name = "Lane " + lane.series().lane() + " (" + lane.series().scheme() + "): ";
+            sentences.add(lane.series()
+                    .last()
+                    .filter(point -> ErrorDecay.reach(point) > 0)
+                    .map(point -> name + Typeset.quantity(Typeset.number(ErrorDecay.reach(point), 2), decay.unit())
+                            + " after " + Typeset.count(point.draws()) + " draws"
+                            + slope(lane).map(text -> ", " + text).orElse("") + ".")
+                    .orElse(name + "no interval yet."));
+        }
+        if (decay.lanes().stream().anyMatch(lane -> lane.promised().isPresent())) {
+            sentences.add("Thin lines have the slope that a scheme promises.");
+        }
+        decay.allowed()
+                .ifPresent(width -> sentences.add("Strip: where the numerical tolerance "
+                        + of(decay.tolerance().orElseThrow(), decay.unit()) + " is met, below "
+                        + Typeset.quantity(Typeset.number(width, 3), decay.unit()) + "."));
+        sentences.add("Seed " + decay.seed() + ".");
+        sentences.add("The intervals cover sampling error only.");
+        return String.join(" ", sentences);
+    }
+
+    /// As `slope −0.51 (promised −½)`, or `slope −1.02 (none promised)`; empty where none can be fitted.
+    static Optional<String> slope(ErrorDecay.Decay lane) {
+        var slope = lane.slope();
+        return slope.isEmpty()
+                ? Optional.empty()
+                : Optional.of("slope "
+                        + String.format(Locale.ROOT, "%.2f", slope.getAsDouble())
+                                .replace('-', '−')
+                        + (lane.promised().isPresent() ? " (promised −½)" : " (none promised)"));
     }
 
     private static String of(Series lane, Settling settling) {

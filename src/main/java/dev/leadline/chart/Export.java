@@ -16,7 +16,7 @@ import javax.imageio.metadata.IIOMetadataNode;
 import org.jfree.svg.SVGGraphics2D;
 import org.jfree.svg.ViewBox;
 
-/// Pictures as the bytes of a file: always light, with the [Caption] inside as text, the same bytes for the same
+/// Pictures as the bytes of a file: always light, with the caption inside as text, the same bytes for the same
 /// picture.
 public enum Export {
     PNG,
@@ -44,35 +44,35 @@ public enum Export {
     /// A picture of `width` by `height` pixels at 96 to the inch.
     ///
     /// @param dpi dots to the inch of an image, which the file declares; the size on paper does not depend on it
-    public byte[] bytes(Settling settling, View view, int width, int height, int dpi) {
+    public byte[] bytes(Subject subject, View view, int width, int height, int dpi) {
         return switch (this) {
-            case PNG -> png(settling, view, width, height, dpi);
-            case SVG -> svg(settling, view, width, height).getBytes(StandardCharsets.UTF_8);
+            case PNG -> png(subject, view, width, height, dpi);
+            case SVG -> svg(subject, view, width, height).getBytes(StandardCharsets.UTF_8);
         };
     }
 
-    private static String svg(Settling settling, View view, int width, int height) {
-        var picture = Picture.of(settling, view, Theme.LIGHT, width, height);
+    private static String svg(Subject subject, View view, int width, int height) {
+        var picture = Picture.of(subject, view, Theme.LIGHT, width, height);
         var g = new SVGGraphics2D(picture.width(), picture.height());
-        g.setDefsKeyPrefix("settling-");
+        g.setDefsKeyPrefix("picture-");
         g.setFontFunction(family -> family.equals("DejaVu Sans") ? "DejaVu Sans, Verdana, sans-serif" : family);
         g.setGeomDoubleConverter(Export::hundredths);
         picture.draw(g);
         String drawing = g.getSVGElement(null, true, new ViewBox(0, 0, picture.width(), picture.height()), null, null);
         int end = drawing.indexOf('>', drawing.indexOf("<svg")) + 1;
-        return drawing.substring(0, end - 1) + " role=\"img\"><title>" + escaped(settling.title()) + "</title><desc>"
-                + escaped(Caption.of(settling)) + "</desc>" + drawing.substring(end) + "\n";
+        return drawing.substring(0, end - 1) + " role=\"img\"><title>" + escaped(subject.title()) + "</title><desc>"
+                + escaped(subject.caption()) + "</desc>" + drawing.substring(end) + "\n";
     }
 
-    private static byte[] png(Settling settling, View view, int width, int height, int dpi) {
-        var image = Picture.of(settling, view, Theme.LIGHT, width, height).image(dpi / PIXELS_PER_INCH);
+    private static byte[] png(Subject subject, View view, int width, int height, int dpi) {
+        var image = Picture.of(subject, view, Theme.LIGHT, width, height).image(dpi / PIXELS_PER_INCH);
         var writer = ImageIO.getImageWritersByFormatName("png").next();
         try (var bytes = new ByteArrayOutputStream();
                 var out = ImageIO.createImageOutputStream(bytes)) {
             var metadata = writer.getDefaultImageMetadata(ImageTypeSpecifier.createFromRenderedImage(image), null);
             var root = new IIOMetadataNode("javax_imageio_png_1.0");
             root.appendChild(resolution(dpi));
-            root.appendChild(texts(settling));
+            root.appendChild(texts(subject));
             metadata.mergeTree("javax_imageio_png_1.0", root);
             writer.setOutput(out);
             writer.write(new IIOImage(image, null, metadata));
@@ -96,10 +96,10 @@ public enum Export {
         return node;
     }
 
-    private static IIOMetadataNode texts(Settling settling) {
+    private static IIOMetadataNode texts(Subject subject) {
         var node = new IIOMetadataNode("iTXt");
-        node.appendChild(text("Title", settling.title()));
-        node.appendChild(text("Description", Caption.of(settling)));
+        node.appendChild(text("Title", subject.title()));
+        node.appendChild(text("Description", subject.caption()));
         return node;
     }
 

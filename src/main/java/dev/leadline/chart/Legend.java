@@ -15,9 +15,15 @@ final class Legend {
     sealed interface Of {
         record Lane(LaneLook look) implements Of {}
 
+        /// The line and marker of a lane, without a band.
+        record Trail(LaneLook look) implements Of {}
+
         record ReferenceLine() implements Of {}
 
         record Strip() implements Of {}
+
+        /// What lies below a line.
+        record Below() implements Of {}
 
         /// Words only.
         record Remark() implements Of {}
@@ -27,7 +33,7 @@ final class Legend {
         int sample() {
             return switch (of) {
                 case Of.Remark _ -> 0;
-                case Of.Lane _, Of.ReferenceLine _, Of.Strip _ -> SAMPLE + GAP;
+                case Of.Lane _, Of.Trail _, Of.ReferenceLine _, Of.Strip _, Of.Below _ -> SAMPLE + GAP;
             };
         }
     }

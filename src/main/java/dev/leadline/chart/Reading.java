@@ -1,6 +1,7 @@
 package dev.leadline.chart;
 
 import java.util.List;
+import java.util.stream.Collectors;
 
 /// What stands at a pixel of a picture.
 ///
@@ -12,8 +13,14 @@ public record Reading(double draws, double value, List<At> lanes) {
         lanes = List.copyOf(lanes);
     }
 
-    /// A mark, and the pixel at which its estimate stands.
+    /// A mark, and the pixel at which it stands.
     ///
-    /// @param y `NaN` where there is no estimate; outside the picture where the estimate is
-    public record At(String lane, LaneLook look, Point point, double x, double y) {}
+    /// @param words what it says
+    /// @param y `NaN` where there is nothing to show; outside the picture where the mark is
+    public record At(String lane, LaneLook look, String words, Point point, double x, double y) {}
+
+    /// As `A: 1.3e-5 ± .7e-5 after 1,120,000 draws`, of each lane.
+    public String text() {
+        return lanes.stream().map(at -> at.lane() + ": " + at.words()).collect(Collectors.joining("    "));
+    }
 }

@@ -27,7 +27,8 @@ public record Settling(
         long seed,
         Optional<Reference> reference,
         Optional<Tolerance> tolerance,
-        List<Series> lanes) {
+        List<Series> lanes)
+        implements Subject {
 
     public Settling {
         lanes = List.copyOf(lanes);
@@ -78,6 +79,11 @@ public record Settling(
         return low < high && Double.isFinite(low) && Double.isFinite(high)
                 ? Optional.of(new Range(low, high))
                 : Optional.empty();
+    }
+
+    @Override
+    public String caption() {
+        return Caption.of(this);
     }
 
     /// The values behind the picture, a row for each mark of each lane.

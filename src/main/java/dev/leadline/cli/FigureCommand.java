@@ -1,9 +1,8 @@
 package dev.leadline.cli;
 
-import dev.leadline.chart.Caption;
 import dev.leadline.chart.Export;
 import dev.leadline.chart.Picture;
-import dev.leadline.chart.Settling;
+import dev.leadline.chart.PictureKind;
 import dev.leadline.chart.View;
 import dev.leadline.engine.Achieved;
 import dev.leadline.model.Plan;
@@ -13,11 +12,14 @@ import dev.leadline.project.WholeFile;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
 import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.stream.Collectors;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Model.OptionSpec;
 import picocli.CommandLine.ParseResult;
+import picocli.CommandLine.TypeConversionException;
 
-/// `figure`: runs a project and draws its *Settling* picture into a file.
+/// `figure`: runs a project and draws a picture of it into a file.
 final class FigureCommand implements Command {
 
     private static final int MOST_PIXELS = 8000;
@@ -31,9 +33,9 @@ final class FigureCommand implements Command {
     public CommandSpec spec() {
         var spec = Arguments.command(
                 name(),
-                "Run a project and draw how its estimate settled, with the interval, the reference and the tolerance.",
+                "Run a project and draw how its estimate settled, or how its error shrank, lane by lane.",
                 "leadline figure mooring-line.leadline -o settling.png",
-                "leadline figure mooring-line.leadline -o settling.svg --width 900 --height 500 --draws 1e6");
+                "leadline figure mooring-line.leadline -o error.svg --view error-decay --width 900 --height 500 --draws 1e6");
         spec.addPositional(Arguments.project());
         spec.addOption(OptionSpec.builder("-o", "--output")
                 .paramLabel("FILE")
@@ -42,6 +44,12 @@ final class FigureCommand implements Command {
                 .required(true)
                 .description("The file to write, .png or .svg; replaced where it is there.")
                 .build());
+        spec.addOption(Arguments.option(
+                "--view",
+                "VIEW",
+                PictureKind.class,
+                FigureCommand::kind,
+                "Which picture: %s (settling if left out).".formatted(words())));
         spec.addOption(size("--width", Picture.LEAST_WIDTH, "Pixels across, at 96 to the inch (1000 if left out)."));
         spec.addOption(size("--height", Picture.LEAST_HEIGHT, "Pixels down (600 if left out)."));
         spec.addOption(Arguments.option(
@@ -54,6 +62,7 @@ final class FigureCommand implements Command {
     public int run(ParseResult arguments, Console console) throws InterruptedException {
         Path file = arguments.matchedOptionValue("--output", Path.of(""));
         // Before anything is computed: a run of minutes must not end in a file that cannot be written.
+        PictureKind kind = arguments.matchedOptionValue("--view", PictureKind.SETTLING);
         var export = Export.of(file);
         WholeFile.check(file);
         int width = (int) Arguments.whole(arguments, "--width").orElse(1000);
@@ -65,9 +74,9 @@ final class FigureCommand implements Command {
         Question question = open.project().question();
         Plan plan = RunArguments.override(open.project().plan(), arguments);
         StudyState state = RunCommand.run(question, plan, RunArguments.threads(arguments), console, quiet);
-        var settling = Settling.of(
+        var subject = kind.of(
                 question, plan, state.lanes().stream().map(LaneState::trace).toList());
-        WholeFile.write(file, export.bytes(settling, View.FOLLOWING, width, height, dpi));
+        WholeFile.write(file, export.bytes(subject, View.FOLLOWING, width, height, dpi));
         if (Arguments.has(arguments, "--json")) {
             console.out()
                     .print(RunJson.of(
@@ -77,13 +86,24 @@ final class FigureCommand implements Command {
                             state,
                             Achieved.of(open.project().question(), plan.seed())));
         } else {
-            console.out().println(Caption.of(settling));
+            console.out().println(subject.caption());
             console.out().println("Written to " + file);
             if (!quiet) {
                 console.err().print(new RunText(console, open.project(), plan).doubts(state));
             }
         }
         return RunCommand.exitCode(question, state);
+    }
+
+    private static String words() {
+        return Arrays.stream(PictureKind.values()).map(PictureKind::word).collect(Collectors.joining(", "));
+    }
+
+    private static PictureKind kind(String word) {
+        return Arrays.stream(PictureKind.values())
+                .filter(kind -> kind.word().equals(word))
+                .findFirst()
+                .orElseThrow(() -> new TypeConversionException("'%s' is not one of %s".formatted(word, words())));
     }
 
     private static OptionSpec size(String name, int least, String description) {

@@ -181,6 +181,7 @@ class CommandsTest {
                 List.of("figure", "PROJECT", "-o", "figure.pdf"),
                 List.of("figure", "PROJECT", "-o", "nowhere/figure.png"),
                 List.of("figure", "PROJECT", "-o", "figure.png", "--width", "1"),
+                List.of("figure", "PROJECT", "-o", "figure.png", "--view", "decay"),
                 List.of("rehearse", "PROJECT"),
                 List.of("compare", "PROJECT"),
                 List.of("compare", "PROJECT", "A", "B"),
@@ -511,6 +512,10 @@ class CommandsTest {
         assertEquals(400, image.getWidth());
         assertEquals(300, image.getHeight());
         assertTrue(outcome.out().contains("Lane A"), outcome.out());
+        Path decay = folder.resolve("decay.png");
+        assertTrue(leadline("figure", project, "-o", decay, "--view", "error-decay")
+                .out()
+                .startsWith("Half-width of"));
         Path svg = folder.resolve("figure.svg");
         assertEquals(0, leadline("figure", project, "-o", svg, "--json").exitCode());
         assertTrue(Files.readString(svg).contains("<svg"));

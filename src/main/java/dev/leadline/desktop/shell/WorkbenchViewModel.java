@@ -445,22 +445,22 @@ public final class WorkbenchViewModel {
     ///
     /// @param kind `png` or `svg`
     public void exportFigure(String kind) {
-        var settling = stage.settling();
-        if (settling.isEmpty()) {
+        var subject = stage.subject();
+        if (subject.isEmpty()) {
             dialogs.tell(
                     "There is no picture yet",
                     List.of(Problem.of("The question is not complete").tryThis("Complete it and press Run.")));
             return;
         }
         var view = stage.view().get();
-        dialogs.chooseFigure(stem(title.get()) + "-settling." + kind, kind)
+        dialogs.chooseFigure(stem(title.get()) + "-" + stage.kind().get().word() + "." + kind, kind)
                 .map(file -> withExtension(file, "." + kind))
                 .ifPresent(file -> background.run(
                         () -> {
                             WholeFile.write(
                                     file,
                                     Export.of(file)
-                                            .bytes(settling.get(), view, FIGURE_WIDTH, FIGURE_HEIGHT, FIGURE_DPI));
+                                            .bytes(subject.get(), view, FIGURE_WIDTH, FIGURE_HEIGHT, FIGURE_DPI));
                             return file;
                         },
                         _ -> notice.set("Picture written to " + file.getFileName()),

@@ -1,6 +1,7 @@
 package dev.leadline.desktop.stage;
 
 import dev.leadline.chart.Picture;
+import dev.leadline.chart.PictureKind;
 import dev.leadline.chart.Reading;
 import dev.leadline.desktop.style.ImageRegion;
 import java.util.Optional;
@@ -23,11 +24,7 @@ final class PictureView extends ImageRegion {
     private record Drag(Picture picture, double x, double y) {}
 
     PictureView(StageViewModel model, Consumer<Optional<Reading>> reading) {
-        super(
-                "picture",
-                "Settling: running estimate and interval against the number of draws",
-                Picture.LEAST_WIDTH,
-                Picture.LEAST_HEIGHT);
+        super("picture", words(model.kind().get()), Picture.LEAST_WIDTH, Picture.LEAST_HEIGHT);
         this.model = model;
         this.reading = reading;
         at.getStyleClass().add("cross-point");
@@ -36,6 +33,10 @@ final class PictureView extends ImageRegion {
         at.setManaged(false);
         getChildren().add(at);
         model.drawn().addListener((_, _, drawn) -> show(drawn));
+        model.kind().addListener((_, _, kind) -> {
+            unread();
+            setAccessibleText(words(kind));
+        });
         addEventHandler(ScrollEvent.SCROLL, this::scrolled);
         addEventHandler(MouseEvent.MOUSE_MOVED, e -> read(e.getX(), e.getY()));
         addEventHandler(MouseEvent.MOUSE_EXITED, _ -> unread());
@@ -48,6 +49,10 @@ final class PictureView extends ImageRegion {
             }
         });
         addEventHandler(KeyEvent.KEY_PRESSED, this::pressed);
+    }
+
+    private static String words(PictureKind kind) {
+        return kind.title() + ": " + kind.shows();
     }
 
     @Override

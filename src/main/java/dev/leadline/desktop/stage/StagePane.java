@@ -1,12 +1,14 @@
 package dev.leadline.desktop.stage;
 
+import dev.leadline.chart.PictureKind;
+import dev.leadline.chart.Reading;
 import dev.leadline.chart.View;
 import dev.leadline.desktop.run.RunViewModel;
 import dev.leadline.desktop.style.Styles;
-import dev.leadline.model.UnitWords;
 import java.util.List;
 import javafx.beans.binding.Bindings;
 import javafx.geometry.Pos;
+import javafx.scene.Node;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
 import javafx.scene.control.ToggleButton;
@@ -28,9 +30,6 @@ public final class StagePane extends BorderPane {
     public StagePane(StageViewModel model, RunViewModel run) {
         this.model = model;
         getStyleClass().addAll(Styles.PANE, Styles.STAGE);
-        var title = new Label("Settling");
-        title.getStyleClass().add(Styles.PANE_TITLE);
-        title.setMinWidth(USE_PREF_SIZE);
         reading.getStyleClass().add(Styles.READING);
         reading.setId("reading");
         reading.setMinWidth(0);
@@ -60,13 +59,12 @@ public final class StagePane extends BorderPane {
         follow.disableProperty()
                 .bind(Bindings.createBooleanBinding(
                         () -> isFollowing(model.view().get()), model.view()));
-        var head = new HBox(10, title, reading, gap, follow, pair);
+        pair.disableProperty().bind(model.kind().isNotEqualTo(PictureKind.SETTLING));
+        var head = new HBox(10, tabs(), reading, gap, follow, pair);
         head.setAlignment(Pos.CENTER_LEFT);
         head.getStyleClass().add(Styles.STAGE_HEAD);
         var picture = new PictureView(
-                model,
-                found -> reading.setText(
-                        found.map(r -> ReadingText.of(r, unit())).orElse("")));
+                model, found -> reading.setText(found.map(Reading::text).orElse("")));
         var empty = new Label("The picture appears once the question is complete.");
         empty.getStyleClass().add(Styles.QUIET);
         empty.setMouseTransparent(true);
@@ -80,8 +78,28 @@ public final class StagePane extends BorderPane {
         show(run.state().get());
     }
 
-    private String unit() {
-        return model.settling().map(s -> UnitWords.after(s.unit()).strip()).orElse("");
+    /// The names of the pictures, the one that is shown pressed.
+    private Node tabs() {
+        var tabs = new HBox(2);
+        tabs.getStyleClass().add("stage-tabs");
+        tabs.setMinWidth(USE_PREF_SIZE);
+        var group = new ToggleGroup();
+        for (var kind : PictureKind.values()) {
+            var tab = new ToggleButton(kind.title());
+            tab.setId("view-" + kind.word());
+            tab.getStyleClass().setAll("stage-tab");
+            tab.setMinWidth(USE_PREF_SIZE);
+            tab.setToggleGroup(group);
+            tab.setTooltip(new Tooltip(kind.title() + ": " + kind.shows()));
+            tab.setSelected(kind == model.kind().get());
+            tab.setOnAction(_ -> {
+                tab.setSelected(true);
+                model.kind().set(kind);
+            });
+            model.kind().addListener((_, _, now) -> tab.setSelected(now == kind));
+            tabs.getChildren().add(tab);
+        }
+        return tabs;
     }
 
     private static boolean isFollowing(View view) {

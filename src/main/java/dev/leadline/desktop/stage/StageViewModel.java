@@ -1,8 +1,9 @@
 package dev.leadline.desktop.stage;
 
 import dev.leadline.chart.Picture;
+import dev.leadline.chart.PictureKind;
 import dev.leadline.chart.Reading;
-import dev.leadline.chart.Settling;
+import dev.leadline.chart.Subject;
 import dev.leadline.chart.Theme;
 import dev.leadline.chart.View;
 import dev.leadline.desktop.background.Background;
@@ -13,11 +14,13 @@ import java.awt.image.BufferedImage;
 import java.util.List;
 import java.util.Optional;
 import javafx.beans.property.BooleanProperty;
+import javafx.beans.property.ObjectProperty;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 import javafx.beans.property.SimpleBooleanProperty;
+import javafx.beans.property.SimpleObjectProperty;
 
-/// The *Settling* picture: what it shows, which part of it is looked at, and what stands at the mouse.
+/// The picture of the stage: what it shows, which part of it is looked at, and what stands at the mouse.
 ///
 /// A picture is laid out and drawn in the background; while one is being drawn the wishes for the next collapse into
 /// the newest.
@@ -27,7 +30,7 @@ public final class StageViewModel {
     /// @param image its pixels; `scale` of them to one of the picture
     public record Drawn(Picture picture, BufferedImage image, double scale) {}
 
-    private record Wish(Settling settling, View view, Theme theme, int width, int height, double scale) {}
+    private record Wish(Subject subject, View view, Theme theme, int width, int height, double scale) {}
 
     private final ProjectViewModel project;
     private final RunViewModel run;
@@ -36,6 +39,7 @@ public final class StageViewModel {
     private final BooleanProperty logDraws = new SimpleBooleanProperty(true);
     private final ReadOnlyObjectWrapper<Optional<Drawn>> drawn = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ReadOnlyObjectWrapper<View> view = new ReadOnlyObjectWrapper<>(View.FOLLOWING);
+    private final ObjectProperty<PictureKind> kind = new SimpleObjectProperty<>(PictureKind.SETTLING);
     private int width;
     private int height;
     private double scale = 1;
@@ -56,6 +60,10 @@ public final class StageViewModel {
         project.check().addListener((_, _, _) -> draw());
         dark.addListener((_, _, _) -> draw());
         view.addListener((_, _, _) -> draw());
+        kind.addListener((_, _, _) -> {
+            reset();
+            draw();
+        });
         logDraws.addListener((_, _, log) -> view.set(view.get().withLogDraws(log)));
     }
 
@@ -65,6 +73,11 @@ public final class StageViewModel {
 
     public ReadOnlyObjectProperty<View> view() {
         return view.getReadOnlyProperty();
+    }
+
+    /// Which picture; another one starts following the run.
+    public ObjectProperty<PictureKind> kind() {
+        return kind;
     }
 
     /// Whether the draws stand on a logarithmic axis.
@@ -99,23 +112,24 @@ public final class StageViewModel {
     }
 
     /// What is shown: the run, else the question with no draws yet.
-    public Optional<Settling> settling() {
+    public Optional<Subject> subject() {
         var shownRun = RunViewModel.shown(run.state().get());
         if (shownRun.isPresent()) {
             var s = shownRun.get();
-            return Optional.of(Settling.of(
-                    s.project().question(),
-                    s.project().plan(),
-                    s.study().lanes().stream().map(LaneState::trace).toList()));
+            return Optional.of(kind.get()
+                    .of(
+                            s.project().question(),
+                            s.project().plan(),
+                            s.study().lanes().stream().map(LaneState::trace).toList()));
         }
-        return project.sound().map(p -> Settling.of(p.question(), p.plan(), List.of()));
+        return project.sound().map(p -> kind.get().of(p.question(), p.plan(), List.of()));
     }
 
     private void draw() {
         if (drawing || width <= 0 || height <= 0) {
             return;
         }
-        var wish = settling()
+        var wish = subject()
                 .map(s -> new Wish(s, view.get(), dark.get() ? Theme.DARK : Theme.LIGHT, width, height, scale));
         if (wish.equals(shown)) {
             return;
@@ -129,7 +143,7 @@ public final class StageViewModel {
         background.run(
                 () -> {
                     Wish w = wish.get();
-                    var picture = Picture.of(w.settling, w.view, w.theme, w.width, w.height);
+                    var picture = Picture.of(w.subject, w.view, w.theme, w.width, w.height);
                     return new Drawn(picture, picture.image(w.scale), w.scale);
                 },
                 result -> {

@@ -4,6 +4,8 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.chart.ErrorDecay;
+import dev.leadline.chart.PictureKind;
 import dev.leadline.chart.View;
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
@@ -85,5 +87,17 @@ class StageViewModelTest {
         background.finishAll();
         assertEquals(Optional.empty(), stage.at(1, 1));
         assertTrue(stage.at(320, 240).isPresent());
+    }
+
+    @Test
+    void anotherPictureFollowsTheRunAgain() {
+        stage.size(640, 480, 1);
+        background.finishAll();
+        stage.zoom(300, 200, .5);
+        background.finishAll();
+        stage.kind().set(PictureKind.ERROR_DECAY);
+        assertEquals(View.FOLLOWING, stage.view().get());
+        background.finishAll();
+        assertTrue(stage.subject().orElseThrow() instanceof ErrorDecay);
     }
 }

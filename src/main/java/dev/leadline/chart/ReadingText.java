@@ -1,0 +1,43 @@
+package dev.leadline.chart;
+
+import dev.leadline.interval.Interval;
+import dev.leadline.model.UnitWords;
+import dev.leadline.numeric.Rounding;
+import dev.leadline.numeric.Significant;
+
+/// What the mouse reads at a mark.
+final class ReadingText {
+    private static final int DIGITS = 6;
+
+    private ReadingText() {}
+
+    /// As `1.3e-5 ± .7e-5 per year after 1,120,000 draws`.
+    static String of(Point p, String unit) {
+        String after = after(p);
+        String in = UnitWords.after(unit);
+        double half = (p.high() - p.low()) / 2;
+        if (!Double.isFinite(p.estimate())) {
+            return "no estimate yet" + after;
+        }
+        if (!(half > 0)) {
+            return Significant.text(p.estimate(), DIGITS) + in + after;
+        }
+        var text = Rounding.of(p.estimate(), half);
+        if (Interval.lopsided(p.estimate(), p.low(), p.high())) {
+            return text.value() + in + ", between " + text.down(p.low()) + " and " + text.up(p.high()) + after;
+        }
+        return text.value() + " ± " + text.uncertainty().orElse("") + in + after;
+    }
+
+    /// As `± .7e-5 per year after 1,120,000 draws`.
+    static String ofReach(Point p, String unit) {
+        double reach = ErrorDecay.reach(p);
+        return reach > 0
+                ? "± " + Significant.text(reach, 3) + UnitWords.after(unit) + after(p)
+                : "no interval yet" + after(p);
+    }
+
+    private static String after(Point p) {
+        return " after " + Typeset.count(p.draws()) + " draws";
+    }
+}
