@@ -37,6 +37,8 @@ final class LookCommand implements Command {
                         Arguments.whole(0, Stop.MOST_DRAWS - 1),
                         "The draw with index K, counted from 0, as a run of this seed makes it."))
                 .addOption(Arguments.flag("--nominal", "Every input at its median."))
+                .addOption(RunArguments.draws(
+                        "The draws of the run, where its points follow from them: a Latin hypercube's do."))
                 .addOption(RunArguments.seed())
                 .addOption(RunArguments.lane());
     }

@@ -26,12 +26,8 @@ final class RunArguments {
     }
 
     static void addAllButLaneTo(CommandSpec spec) {
-        spec.addOption(Arguments.option(
-                "--draws",
-                "N",
-                Long.class,
-                Arguments.whole(1, Stop.MOST_DRAWS),
-                "Make exactly N draws in each lane, also written 1e6; without --seconds no time limit applies."));
+        spec.addOption(draws("Make N draws in each lane, also written 1e6, down to whole observations or rounds;"
+                + " without --seconds no time limit applies."));
         spec.addOption(Arguments.option(
                 "--seconds",
                 "S",
@@ -40,6 +36,10 @@ final class RunArguments {
                 "Stop after S seconds of computing; without --draws as many draws as that gives."));
         spec.addOption(seed());
         spec.addOption(threads());
+    }
+
+    static OptionSpec draws(String description) {
+        return Arguments.option("--draws", "N", Long.class, Arguments.whole(1, Stop.MOST_DRAWS), description);
     }
 
     static OptionSpec threads() {
@@ -72,9 +72,13 @@ final class RunArguments {
     /// The plan with what the arguments say.
     static Plan override(Plan plan, ParseResult arguments) {
         return new Plan(
-                stop(plan.stop(), Arguments.whole(arguments, "--draws"), Arguments.number(arguments, "--seconds")),
-                Arguments.whole(arguments, "--seed").orElse(plan.seed()),
-                lanes(plan.lanes(), arguments.matchedOptionValue("--lane", "")));
+                        stop(
+                                plan.stop(),
+                                Arguments.whole(arguments, "--draws"),
+                                Arguments.number(arguments, "--seconds")),
+                        Arguments.whole(arguments, "--seed").orElse(plan.seed()),
+                        lanes(plan.lanes(), arguments.matchedOptionValue("--lane", "")))
+                .checked();
     }
 
     private static Stop stop(Stop stop, OptionalLong draws, OptionalDouble seconds) {

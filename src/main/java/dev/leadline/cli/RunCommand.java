@@ -66,6 +66,7 @@ final class RunCommand implements Command {
     private static boolean isMet(Question question, LaneState lane) {
         boolean objected = lane.grounds().stream().anyMatch(Ground::objects);
         return !objected
+                && lane.trace().last().isPresent()
                 && question.tolerance()
                         .map(tolerance -> lane.trace()
                                 .last()

@@ -72,6 +72,9 @@ final class RunText {
     private void lane(LaneState lane) {
         line("");
         List<Answer> answers = lane.trace().last().map(Mark::answers).orElse(List.of());
+        if (answers.isEmpty()) {
+            line("  no answer yet");
+        }
         answers.forEach(this::answer);
         together(answers);
         line("  " + facts(lane, answers));

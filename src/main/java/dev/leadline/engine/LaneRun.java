@@ -2,6 +2,7 @@ package dev.leadline.engine;
 
 import dev.leadline.estimate.Extremes;
 import dev.leadline.model.Stop;
+import dev.leadline.scheme.Replicated;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Failure;
 import dev.leadline.trace.Mark;
@@ -10,6 +11,7 @@ import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.Queue;
 import java.util.concurrent.ExecutionException;
@@ -60,11 +62,8 @@ public final class LaneRun {
             return end("stopped by hand", seconds);
         }
         merge(sums.get());
-        if (!tally.isWhole()) {
-            return false;
-        }
         if (draws >= budget) {
-            return end("all draws made", seconds);
+            return end(allMade(), seconds);
         }
         if (ahead.isEmpty() && items.within(submitted, budget).isEmpty()) {
             return end("all repetitions made", seconds);
@@ -72,11 +71,25 @@ public final class LaneRun {
         if (stop.seconds().isPresent() && seconds >= stop.seconds().getAsDouble()) {
             return end("time used up", seconds);
         }
+        if (!tally.isWhole()) {
+            return false;
+        }
         if (marks.isEmpty() || draws >= NEXT_MARK * marks.getLast().draws()) {
             mark(seconds);
             return true;
         }
         return false;
+    }
+
+    private String allMade() {
+        return budget == stop.draws()
+                ? "all draws made"
+                : String.format(
+                        Locale.ROOT,
+                        "%s of %,d draws are %,d",
+                        recipe.lane().scheme().points() instanceof Replicated ? "whole rounds" : "whole observations",
+                        stop.draws(),
+                        budget);
     }
 
     /// Ends with what has been merged.

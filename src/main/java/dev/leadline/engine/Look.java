@@ -7,10 +7,14 @@ import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
+import dev.leadline.model.Stop;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.Log;
+import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Locale;
 
 /// One draw looked at again.
 ///
@@ -28,8 +32,17 @@ public record Look(List<Double> inputs, List<Double> steps, double weight, List<
     }
 
     /// The draw with index `draw` (from 0) of a lane, made again from its address.
+    ///
+    /// @throws Refusal where the lane has no such draw
     public static Look at(Question question, Lane lane, long seed, long draw) {
         var recipe = Recipe.of(question, lane, seed);
+        long most = recipe.items().whole(Stop.MOST_DRAWS);
+        if (draw >= most) {
+            throw new Refusal(
+                    Problem.of(String.format(Locale.ROOT, "there is no draw %,d in lane %s", draw, lane.name()))
+                            .because(String.format(
+                                    Locale.ROOT, "Its points end with draw %,d; the first is draw 0.", most - 1)));
+        }
         var drawn = Drawing.single(recipe, draw);
         double[] inputs = drawn.inputs();
         double weight = drawn.weight() * Weights.of(recipe, inputs);

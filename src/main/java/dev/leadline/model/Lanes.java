@@ -1,11 +1,16 @@
 package dev.leadline.model;
 
 import dev.leadline.estimate.Estimand;
+import dev.leadline.estimate.Regression;
 import dev.leadline.formula.Working;
 import dev.leadline.scheme.Adapted;
 import dev.leadline.scheme.Control;
+import dev.leadline.scheme.Growing;
 import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.LatinHypercube;
+import dev.leadline.scheme.Points;
 import dev.leadline.scheme.Repetitions;
+import dev.leadline.scheme.Replicated;
 import dev.leadline.scheme.Scheme;
 import java.util.ArrayList;
 import java.util.HashSet;
@@ -140,7 +145,24 @@ final class Lanes {
         if (points.filter(Repetitions.class::isInstance).isPresent()) {
             checkSplitting(lane, path);
         }
+        points.ifPresent(p -> checkReplicates(p, controlled.size(), path));
         return points.map(p -> new Lane(
                 lane.name(), new Scheme(p, drawFrom, controlled, adapted), draft.commonRandomNumbers(), formulas));
+    }
+
+    private void checkReplicates(Points points, int controls, String path) {
+        int replicates = switch (points) {
+            case Replicated replicated -> replicated.replicates();
+            case LatinHypercube cubes when cubes.points().isEmpty() -> cubes.replicates();
+            case Growing _, Repetitions _ -> Integer.MAX_VALUE;
+        };
+        if (controls > 0 && replicates < Regression.fewest(controls)) {
+            findings.add(
+                    path + ".controlVariates",
+                    "%d control variates are too many for %d replicates".formatted(controls, replicates),
+                    "Their coefficients are fitted to the means of the replicates, which takes %d."
+                            .formatted(Regression.fewest(controls)),
+                    "Write \"replicates\": %d, or leave some out.".formatted(Regression.fewest(controls)));
+        }
     }
 }

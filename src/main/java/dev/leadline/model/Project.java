@@ -57,6 +57,11 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         Optional<Working> sound =
                 working.filter(_ -> inputs.size() == draft.inputs().size());
         List<Lane> lanes = Lanes.of(draft, inputs, sound, dependence, noting(files, read), findings);
+        findings.made(
+                _ -> draft.stop()
+                        .flatMap(given -> given.draws().isPresent() ? Optional.of("$.stop.draws") : Optional.empty())
+                        .orElse("$.lanes"),
+                () -> new Plan(stop, seed, lanes).checked());
         findings.refuseIfAny();
         Question question = new Question(
                 draft.title(),

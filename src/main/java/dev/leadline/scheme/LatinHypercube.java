@@ -35,6 +35,11 @@ public record LatinHypercube(OptionalInt points, int replicates) implements Grow
                 : new LatinHypercube(OptionalInt.of(Math.clamp(draws / replicates, 1, MOST_POINTS)), replicates);
     }
 
+    /// Of one cube; of all, one point each, where their size follows from the draws of the lane.
+    int fewestDraws() {
+        return points.orElse(replicates);
+    }
+
     @Override
     public int drawsPerObservation() {
         return points.orElseThrow();

@@ -49,6 +49,16 @@ public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> c
         return adapting * drawFrom.map(proposal -> proposal.nominal().of()).orElse(1);
     }
 
+    /// Draws of the least that has a mean: one observation, or the first point of each replicate.
+    public long fewestDraws() {
+        return switch (points) {
+            case LatinHypercube cubes -> (long) cubes.fewestDraws() * turns();
+            case Growing growing -> (long) growing.drawsPerObservation() * turns();
+            case Replicated replicated -> replicated.replicates();
+            case Repetitions _ -> 1;
+        };
+    }
+
     public boolean isWeighted() {
         return drawFrom.isPresent() || adapted.isPresent();
     }

@@ -47,7 +47,10 @@ public record Comparing(Question question, List<Plan> plans, Timing timing) {
 
     private static List<Plan> ofEqualTime(Plan plan, Timing timing) {
         double times = StrictMath.exp(timing.ratio().value());
-        long draws = Math.clamp(Math.round(plan.stop().draws() * times), 1, Stop.MOST_DRAWS);
+        long draws = Math.clamp(
+                Math.round(plan.stop().draws() * times),
+                plan.lanes().getLast().scheme().fewestDraws(),
+                Stop.MOST_DRAWS);
         return List.of(
                 new Plan(plan.stop(), plan.seed(), List.of(plan.lanes().getFirst())),
                 new Plan(

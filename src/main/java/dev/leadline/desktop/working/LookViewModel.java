@@ -4,6 +4,7 @@ import dev.leadline.desktop.background.Background;
 import dev.leadline.engine.Look;
 import dev.leadline.model.Project;
 import dev.leadline.problem.Problem;
+import dev.leadline.problem.Refusal;
 import dev.leadline.study.LookRow;
 import java.util.List;
 import java.util.Optional;
@@ -81,7 +82,10 @@ public final class LookViewModel {
                 },
                 failure -> {
                     if (turn == newest) {
-                        state.set(new State.Refused(Problem.of("This draw cannot be looked at: " + failure)));
+                        state.set(new State.Refused(
+                                failure instanceof Refusal refused
+                                        ? refused.problems().getFirst()
+                                        : Problem.of("This draw cannot be looked at: " + failure)));
                     }
                 });
     }
