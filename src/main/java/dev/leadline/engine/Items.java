@@ -28,6 +28,11 @@ public sealed interface Items permits GrowingItems, Rounds, RepetitionItems {
     /// The item that holds the draw with index `draw`.
     Item holding(long draw);
 
+    /// Index of the last item of a run of so many draws, as far as that is known beforehand.
+    default long last(long draws) {
+        return holding(Math.max(0, whole(draws) - 1)).stretch().item();
+    }
+
     /// Of so many draws, those that are made: whole observations, or whole rounds.
     long whole(long draws);
 }

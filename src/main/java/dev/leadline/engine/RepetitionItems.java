@@ -26,6 +26,11 @@ record RepetitionItems(OptionalInt most) implements Items {
     }
 
     @Override
+    public long last(long draws) {
+        return most.orElse(1) - 1L;
+    }
+
+    @Override
     public long whole(long draws) {
         return draws;
     }

@@ -29,15 +29,15 @@ public record Timing(Logarithm first, Logarithm second, Logarithm ratio) {
     private static final class Work {
         private static final long TURNS = 8;
 
-        private final Sampler sampler;
+        private final ItemWork work;
         private final Items items;
         private final long last;
         private long turn;
 
         Work(Recipe recipe, long draws) {
-            sampler = recipe.sampler();
+            work = recipe.work();
             items = recipe.items();
-            last = items.holding(Math.max(0, items.whole(draws) - 1)).stretch().item();
+            last = items.last(draws);
         }
 
         /// Works for so long at least.
@@ -49,8 +49,7 @@ public record Timing(Logarithm first, Logarithm second, Logarithm ratio) {
             long start = now();
             do {
                 Item item = items.at(Math.max(0, last - turn++ % TURNS));
-                sampler.compute(item, () -> false);
-                draws += item.draws();
+                draws += work.compute(item, () -> false).orElseThrow().item().draws();
                 passed = NANOSECOND * (now() - start);
             } while (passed < least);
             return passed / draws;

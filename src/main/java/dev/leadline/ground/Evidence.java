@@ -16,6 +16,11 @@ record Evidence(Question question, Trace trace, List<Answer> answers, Accumulato
         return new Evidence(question, trace, trace.last().orElseThrow().answers(), trace.total(), trace.halves());
     }
 
+    /// Evaluations behind the answers.
+    long draws() {
+        return trace.last().orElseThrow().draws();
+    }
+
     /// What to call an answer in a sentence, with a colon; nothing where there is only one.
     String of(int answer) {
         if (answers.size() == 1) {

@@ -32,7 +32,7 @@ final class NumericalTolerance {
                 return Ground.shown("tolerance", text);
             }
             double times = reach / allowed;
-            double draws = answer.observations() * times * times;
+            double draws = evidence.draws() * times * times;
             return Ground.doubted(
                     "tolerance",
                     Strength.CAUTION,
