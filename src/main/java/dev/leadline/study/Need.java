@@ -5,6 +5,7 @@ import dev.leadline.interval.Ratio;
 import dev.leadline.interval.Student;
 import dev.leadline.model.Question;
 import dev.leadline.model.Tolerance;
+import dev.leadline.scheme.Replicated;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Mark;
 import java.util.List;
@@ -34,8 +35,9 @@ public record Need(String lane, Ratio draws, Optional<Ratio> seconds, String bas
     static Optional<Need> of(Question question, Contender lane, Optional<Logarithm> perDraw) {
         return question.tolerance()
                 .filter(_ -> lane.spreads())
-                .flatMap(tolerance ->
-                        lane.grows() ? growing(question, tolerance, lane) : rounds(question, tolerance, lane))
+                .flatMap(tolerance -> lane.scheme().points() instanceof Replicated
+                        ? rounds(question, tolerance, lane)
+                        : growing(question, tolerance, lane))
                 .map(found -> of(question, lane, found, perDraw));
     }
 
