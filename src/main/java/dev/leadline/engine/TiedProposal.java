@@ -112,13 +112,23 @@ final class TiedProposal {
         }
     }
 
-    /// The normals that are as unlikely as values, each from the nearer tail.
+    /// The normals that are as unlikely as values, each from the nearer tail; of a normal density at once.
     private static void normals(Density density, double[] x, double[] z, int rows) {
+        var standardised = density.standardised();
+        if (standardised.shape().equals(NORMAL.standard())) {
+            double scale = Math.abs(standardised.scale());
+            for (int i = 0; i < rows; i++) {
+                z[i] = (x[i] - standardised.location()) / scale;
+            }
+            return;
+        }
         for (int i = 0; i < rows; i++) {
-            z[i] = normal(density.cdf(x[i]), density.survival(x[i]));
+            double below = density.cdf(x[i]);
+            z[i] = below <= 0.5 ? normal(below, 1) : normal(1, density.survival(x[i]));
         }
     }
 
+    /// @param below probability; does not matter where `above` is less
     private static double normal(double below, double above) {
         double z = below <= above ? NORMAL.quantile(below) : NORMAL.upperQuantile(above);
         return Math.clamp(z, -FARTHEST, FARTHEST);

@@ -44,21 +44,34 @@ public final class Extremes {
         long count = 0;
         for (int i = 0; i < rows; i++) {
             double x = values[i];
-            if (x == 0 || !Double.isFinite(x)) {
-                continue;
-            }
-            count++;
             sum += Math.abs(x);
             sumOfSquares = Math.fma(x, x, sumOfSquares);
-            if (x > 0) {
-                upper[k].add(x);
-            } else {
-                lower[k].add(-x);
+            count += x == 0 ? 0 : 1;
+        }
+        if (!Double.isFinite(sum)) {
+            double[] finite = finite(values, rows);
+            if (finite.length < rows) {
+                add(k, finite, finite.length);
+                return;
             }
         }
         size[k] += sum;
         squares[k] += sumOfSquares;
         nonzero[k] += count;
+        Side above = upper[k];
+        Side below = lower[k];
+        for (int i = 0; i < rows; i++) {
+            if (values[i] > above.threshold) {
+                above.add(values[i]);
+            }
+            if (-values[i] > below.threshold) {
+                below.add(-values[i]);
+            }
+        }
+    }
+
+    private static double[] finite(double[] values, int rows) {
+        return Arrays.stream(values, 0, rows).filter(Double::isFinite).toArray();
     }
 
     public void merge(Extremes later) {

@@ -6,6 +6,7 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Extremes;
 import dev.leadline.ground.Ground;
 import dev.leadline.interval.ClopperPearson;
+import dev.leadline.interval.NoHit;
 import dev.leadline.model.Input;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Project;
@@ -128,6 +129,9 @@ public final class RunJson {
         interval.note().ifPresent(note -> json.put("intervalNote", note));
         if (answer.estimand() instanceof Estimand.Probability) {
             answer.hits().ifPresent(hits -> json.put("hits", Json.of(hits)).put("oneSided", oneSided(answer, hits)));
+            if (interval.kind().equals(NoHit.KIND)) {
+                json.put("oneSided", Json.orNull(interval.high()));
+            }
             json.put("beta", Json.orNull(Chance.beta(answer.estimate())))
                     .put("oneIn", Json.orNull(Chance.oneIn(answer.estimate())));
         }

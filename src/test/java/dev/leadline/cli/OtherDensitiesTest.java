@@ -149,6 +149,7 @@ class OtherDensitiesTest {
         assertEquals("no-hit", answer.required("intervalKind").asString());
         assertEquals(0, answer.required("interval").get(0).asDouble());
         assertEquals(.029912495450953, answer.required("interval").get(1).asDouble(), 1e-14);
+        assertEquals(.029912495450953, of(answer, "oneSided"), 1e-14);
         assertTrue(run(shared, "--draws", 1000).out().contains("at most 0.030"));
         // the two points of a cube depend on each other: each cube counts as one draw
         var cubes = Files.writeString(

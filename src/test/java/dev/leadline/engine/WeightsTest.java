@@ -21,6 +21,8 @@ import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.LatinHypercube;
 import dev.leadline.scheme.Points;
+import dev.leadline.scheme.ScrambledSobol;
+import dev.leadline.scheme.Scrambling;
 import dev.leadline.scheme.Share;
 import java.util.Map;
 import java.util.OptionalInt;
@@ -129,7 +131,7 @@ class WeightsTest {
     }
 
     static Stream<Points> layouts() {
-        return Stream.of(new Independent(), new Antithetic(), new LatinHypercube(OptionalInt.of(50), 30));
+        return Stream.of(new Independent(), new Antithetic(), new LatinHypercube(OptionalInt.of(50), 30), new ScrambledSobol(16, Scrambling.NESTED));
     }
 
     /// `E[x exp(z)]` with x of mean 2 is `2 exp(1/2)`, whichever points and shares; weights have the mean 1.
