@@ -131,7 +131,11 @@ class WeightsTest {
     }
 
     static Stream<Points> layouts() {
-        return Stream.of(new Independent(), new Antithetic(), new LatinHypercube(OptionalInt.of(50), 30), new ScrambledSobol(16, Scrambling.NESTED));
+        return Stream.of(
+                new Independent(),
+                new Antithetic(),
+                new LatinHypercube(OptionalInt.of(50), 30),
+                new ScrambledSobol(16, Scrambling.NESTED));
     }
 
     /// `E[x exp(z)]` with x of mean 2 is `2 exp(1/2)`, whichever points and shares; weights have the mean 1.
