@@ -96,7 +96,8 @@ public record Suggestion(List<Row> rows, Row recommended, long draws) {
             double level = 1 - (1 - project.question().confidence()) / Math.max(1, offers.size());
             List<Tried> tried = new ArrayList<>();
             for (int i = 0; i < offers.size(); i++) {
-                var lane = offers.get(i).lane().named(name);
+                LaneDraft offered = offers.get(i).lane();
+                var lane = offered.name().isEmpty() ? offered.named(name) : offered;
                 listener.accept(lane.points());
                 Optional<Pilot> pilot = pilots.run(lane, "candidate " + i);
                 if (pilot.isPresent()) {

@@ -76,6 +76,27 @@ class CompareTest {
         assertEquals(1, leadline("compare", project, "--draws", "4").exitCode());
     }
 
+    /// What is recommended can be written into the project as it stands; a lane that is there already keeps its name.
+    @Test
+    void suggestsALaneThatTheProjectTakes() throws IOException {
+        var outcome = leadline("suggest", project, "--draws", "8192", "--json");
+        assertEquals(0, outcome.exitCode(), outcome.err());
+        var rows = outcome.json().required("suggestions");
+        double least = rows.get(0).required("efficiencyRatio").get(0).asDouble();
+        assertTrue(least > 100, outcome.out());
+        assertEquals(rows.get(0).required("lane"), outcome.json().required("recommended"));
+        assertTrue(outcome.out().contains("This is lane B of the project."), outcome.out());
+        Files.writeString(
+                project,
+                Files.readString(project)
+                        .replace(
+                                "{\"name\": \"A\", \"points\": \"independent\"},",
+                                "{\"name\": \"A\", \"points\": \"independent\"}],")
+                        .replaceAll("(?s)\\],\\s*\\{\"name\": \"B\".*", ", %s]}")
+                        .replace("%s", outcome.json().required("recommended").toString()));
+        assertEquals(0, leadline("check", project).exitCode(), Files.readString(project));
+    }
+
     /// Nothing in a run but its seconds depends on a clock.
     @Test
     void aRunComparesWithoutTimes() {

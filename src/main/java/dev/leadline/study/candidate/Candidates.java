@@ -5,6 +5,7 @@ import java.util.List;
 /// All of them.
 public final class Candidates {
     public static final List<Candidate> ALL = List.of(
+            new OwnLanes(),
             new LaidOut("antithetic", "opposite draws cancel what rises or falls with an input"),
             new LaidOut("stratified", "draws are spread over cells, which takes out the differences between them"),
             new LaidOut(
