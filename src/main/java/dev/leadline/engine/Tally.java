@@ -4,13 +4,15 @@ import dev.leadline.estimate.Accumulator;
 import dev.leadline.trace.Blocks;
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.LongUnaryOperator;
 
 /// What the merged items of a lane come to: its observations. Confined to the thread that conducts the study.
 sealed interface Tally {
     /// @param items those of the lane
     static Tally of(Items items, int components) {
         return switch (items) {
-            case GrowingItems _, RepetitionItems _ -> new Growing(components);
+            case GrowingItems _ -> new Growing(components, GrowingItems::nominal);
+            case RepetitionItems _ -> new Growing(components, _ -> 1);
             case Rounds rounds -> new Replicates(rounds, components);
         };
     }
@@ -31,14 +33,18 @@ sealed interface Tally {
         private final Accumulator total;
         private final Blocks blocks = new Blocks();
 
-        private Growing(int components) {
+        private final LongUnaryOperator nominal;
+
+        /// @param nominal size of an item, by its index
+        private Growing(int components, LongUnaryOperator nominal) {
             total = new Accumulator(components);
+            this.nominal = nominal;
         }
 
         @Override
         public void add(ItemSums item) {
             total.merge(item.sums());
-            blocks.add(item.sums(), GrowingItems.nominal(item.item().stretch().item()));
+            blocks.add(item.sums(), nominal.applyAsLong(item.item().stretch().item()));
         }
 
         @Override

@@ -83,7 +83,12 @@ final class Pilots implements AutoCloseable {
 
     private Optional<Pilot> run(LaneDraft draft, Lane lane, String address) throws InterruptedException {
         var own = new Lane(address, lane.scheme(), false, lane.working()).within(draws);
-        var recipe = Recipe.of(project.question(), own, seed, Purpose.PILOT);
+        Recipe recipe;
+        try {
+            recipe = Recipe.of(project.question(), own, seed, Purpose.PILOT);
+        } catch (Refusal _) {
+            return Optional.empty();
+        }
         if (recipe.items().whole(draws) == 0) {
             return Optional.empty();
         }

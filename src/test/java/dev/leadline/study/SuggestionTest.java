@@ -206,4 +206,15 @@ class SuggestionTest {
         var others = others(gainsHundredfold(without(tails, "Adapted")));
         assertEquals(4.7, ((Other.Widen) others.getFirst()).by(), .4);
     }
+
+    /// The chance is 1e-9; a pilot has some two dozen repetitions.
+    @Test
+    void splitting() throws InterruptedException {
+        var corner = project(3, NORMAL, "{\"probability\": \"x1 + x2 + x3 > 10.4\"}");
+        List<Candidate> some = Candidates.ALL.stream()
+                .filter(candidate -> candidate.toString().contains("splitting"))
+                .toList();
+        var suggestion = Suggestion.of(corner, 5, 1_000_000, 1, _ -> {}, some);
+        assertEquals("splitting", gainsHundredfold(suggestion).points());
+    }
 }
