@@ -57,6 +57,24 @@ public final class Caption {
         return String.join(" ", sentences);
     }
 
+    public static String of(Weights weights) {
+        var sentences = new ArrayList<String>();
+        sentences.add("The largest weights of draws over the mean weight, by rank, both axes logarithmic.");
+        weights.lanes()
+                .forEach(lane ->
+                        sentences.add("Lane %s (%s): %s.".formatted(lane.lane(), lane.scheme(), effective(lane))));
+        sentences.add("Seed " + weights.seed() + ".");
+        return String.join(" ", sentences);
+    }
+
+    /// As `3,000,000 draws worth 21,000 of equal weights`.
+    static String effective(Weights.Weighed lane) {
+        return lane.largest().isEmpty()
+                ? "every draw counts 1"
+                : Typeset.count(lane.draws()) + " draws worth " + Typeset.number(lane.effective(), 2)
+                        + " of equal weights";
+    }
+
     /// As `slope −0.51 (promised −½)`, or `slope −1.02 (none promised)`; empty where none can be fitted.
     static Optional<String> slope(ErrorDecay.Decay lane) {
         var slope = lane.slope();

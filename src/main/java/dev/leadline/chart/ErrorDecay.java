@@ -4,7 +4,7 @@ import dev.leadline.interval.Interval;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Tolerance;
-import dev.leadline.scheme.Growing;
+import dev.leadline.scheme.Replicated;
 import dev.leadline.trace.Trace;
 import java.util.ArrayList;
 import java.util.List;
@@ -51,9 +51,9 @@ public record ErrorDecay(
         var settling = Settling.of(question, plan, traces);
         var lanes = new ArrayList<Decay>();
         for (int i = 0; i < settling.lanes().size(); i++) {
-            boolean growing = plan.lanes().get(i).scheme().points() instanceof Growing;
-            lanes.add(
-                    new Decay(settling.lanes().get(i), growing ? OptionalDouble.of(PROMISED) : OptionalDouble.empty()));
+            boolean replicated = plan.lanes().get(i).scheme().points() instanceof Replicated;
+            lanes.add(new Decay(
+                    settling.lanes().get(i), replicated ? OptionalDouble.empty() : OptionalDouble.of(PROMISED)));
         }
         return new ErrorDecay(
                 settling.title(),

@@ -30,7 +30,7 @@ import org.jfree.chart.ui.RectangleInsets;
 ///
 /// Confined to one thread at a time, because the axes of the charting library are; nothing in it changes after it was
 /// made.
-public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture {
+public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture, WeightsPicture {
     /// Smallest size in which every label still has room.
     public static final int LEAST_WIDTH = 240;
 
@@ -109,6 +109,7 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture 
     public static Picture of(Subject subject, View view, Theme theme, int width, int height) {
         return switch (subject) {
             case Settling settling -> new SettlingPicture(settling, view, theme, width, height);
+            case Weights weights -> new WeightsPicture(weights, view, theme, width, height);
             case ErrorDecay decay -> new ErrorDecayPicture(decay, view, theme, width, height);
         };
     }

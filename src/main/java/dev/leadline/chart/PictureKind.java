@@ -19,6 +19,17 @@ public enum PictureKind {
         public Subject of(Question question, Plan plan, List<Trace> traces) {
             return ErrorDecay.of(question, plan, traces);
         }
+    },
+    WEIGHTS("Weights", "weights", "the largest weights of draws from other densities") {
+        @Override
+        public Subject of(Question question, Plan plan, List<Trace> traces) {
+            return Weights.of(question, plan, traces);
+        }
+
+        @Override
+        public boolean isSeen(List<Trace> traces) {
+            return Weights.isSeen(traces);
+        }
     };
 
     private final String title;
@@ -43,6 +54,11 @@ public enum PictureKind {
     /// What is drawn, as a clause.
     public String shows() {
         return shows;
+    }
+
+    /// Whether there is something to see of these lanes.
+    public boolean isSeen(List<Trace> traces) {
+        return true;
     }
 
     /// @param traces those of the plan's lanes, in order; fewer before a run

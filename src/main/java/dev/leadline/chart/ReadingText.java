@@ -37,6 +37,16 @@ final class ReadingText {
                 : "no interval yet" + after(p);
     }
 
+    /// As `weight 10 is 5.31 times the mean; the largest 10 have 0.02 % of all weight`.
+    static String ofWeight(Weights.Weighed lane, int rank) {
+        String mean = Significant.text(lane.largest().get(rank - 1).estimate(), 3);
+        String share = Significant.text(100 * lane.share(rank), 2);
+        return rank == 1
+                ? "the largest weight is %s times the mean, %s %% of all weight".formatted(mean, share)
+                : "weight %d is %s times the mean; the largest %d have %s %% of all weight"
+                        .formatted(rank, mean, rank, share);
+    }
+
     private static String after(Point p) {
         return " after " + Typeset.count(p.draws()) + " draws";
     }

@@ -25,8 +25,8 @@ import java.util.OptionalInt;
 import java.util.OptionalLong;
 import java.util.function.Function;
 
-/// Makes the layout of a lane's points of its draft.
-final class Layouts {
+/// Layouts of points as projects write them: their words, what each may be told, and a lane's layout made of its draft.
+public final class Layouts {
     /// Below it, an error bar from replicates is too uncertain itself.
     private static final int FEWEST_REPLICATES = 10;
 
@@ -54,8 +54,14 @@ final class Layouts {
     }
 
     /// Words of the file, in the order in which they are offered.
-    static List<String> words() {
+    public static List<String> words() {
         return List.copyOf(KINDS.keySet());
+    }
+
+    /// Names of the settings that a layout takes; none of one that is not known.
+    public static List<String> takes(String word) {
+        var kind = KINDS.get(word);
+        return kind == null ? List.of() : kind.takes();
     }
 
     private static Map<String, Kind> kinds() {

@@ -26,7 +26,8 @@ public record Sentence(List<Part> parts) {
         FORMULA,
         UNIT,
         INPUTS,
-        DEMANDS
+        DEMANDS,
+        LANE
     }
 
     public Sentence {
@@ -55,6 +56,15 @@ public record Sentence(List<Part> parts) {
         parts.add(new Part(confidence(draft), Optional.of(Door.DEMANDS)));
         parts.add(words("."));
         return new Sentence(parts);
+    }
+
+    /// The same, answered by one lane of several.
+    public Sentence by(String lane) {
+        var by = new ArrayList<>(parts.subList(0, parts.size() - 1));
+        by.add(words(", by "));
+        by.add(new Part("lane " + lane, Optional.of(Door.LANE)));
+        by.add(words("."));
+        return new Sentence(by);
     }
 
     /// The whole, as it is read aloud.

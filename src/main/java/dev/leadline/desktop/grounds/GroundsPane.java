@@ -4,6 +4,8 @@ import dev.leadline.desktop.style.Styles;
 import dev.leadline.ground.Ground;
 import java.util.List;
 import java.util.Locale;
+import javafx.beans.property.SimpleStringProperty;
+import javafx.beans.property.StringProperty;
 import javafx.scene.Node;
 import javafx.scene.control.Label;
 import javafx.scene.control.ScrollPane;
@@ -16,12 +18,14 @@ import javafx.scene.layout.VBox;
 public final class GroundsPane extends BorderPane {
     private final VBox list = new VBox();
     private final ScrollPane scroll = new ScrollPane(list);
+    private final StringProperty lane = new SimpleStringProperty("");
     private List<Ground> shown = List.of();
 
     public GroundsPane() {
         getStyleClass().addAll(Styles.PANE, "grounds");
-        var title = new Label("Grounds");
+        var title = new Label();
         title.getStyleClass().add(Styles.PANE_TITLE);
+        title.textProperty().bind(lane.map(of -> of.isEmpty() ? "Grounds" : "Grounds \u00b7 " + of));
         list.getStyleClass().add("content");
         list.setId("grounds");
         scroll.setFitToWidth(true);
@@ -29,6 +33,11 @@ public final class GroundsPane extends BorderPane {
         setTop(title);
         setCenter(scroll);
         fill();
+    }
+
+    /// Which lane they speak of, as `lane B`; empty where there is only one.
+    public StringProperty lane() {
+        return lane;
     }
 
     /// @param grounds strongest doubts first

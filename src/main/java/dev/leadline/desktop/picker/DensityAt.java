@@ -11,20 +11,26 @@ import dev.leadline.model.DensityDraft.Part;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.LaneDraft;
+import dev.leadline.model.LaneDraft.DrawFrom;
+import dev.leadline.model.LaneDraft.Other;
+import java.util.LinkedHashMap;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.BiFunction;
 import java.util.function.Function;
 import java.util.function.UnaryOperator;
 
-/// Where a density stands in the draft: that of an input, or a part of a mixture.
+/// Where a density stands in the draft: that of an input, one that a lane draws it from, or a part of a mixture.
 ///
 /// @param input index of the input
 /// @param path its JSON path
+/// @param isOwn whether it is that of the input itself, with the sentence of where it comes from
 /// @param of whose density it is, in words
 record DensityAt(
         ProjectViewModel project,
         int input,
+        boolean isOwn,
         String path,
         String of,
         Function<Draft, Optional<DensityDraft>> get,
@@ -37,10 +43,48 @@ record DensityAt(
         return new DensityAt(
                 project,
                 index,
+                true,
                 "$.inputs[" + index + "]" + field,
                 input.name(),
                 d -> index < d.inputs().size() ? of(d.inputs().get(index).from()) : Optional.empty(),
                 (d, density) -> Edits.inputs(d, Edits.changed(d.inputs(), index, in -> with(in, density))));
+    }
+
+    /// The density that a lane draws an input from.
+    static DensityAt lane(ProjectViewModel project, int lane, int index) {
+        String input = project.draft().get().inputs().get(index).name();
+        return new DensityAt(
+                project,
+                index,
+                false,
+                "$.lanes[" + lane + "].drawFrom." + input,
+                input,
+                d -> lane < d.lanes().size() ? of(d.lanes().get(lane), input) : Optional.empty(),
+                (d, density) ->
+                        Edits.lanes(d, Edits.changed(d.lanes(), lane, written -> with(written, input, density))));
+    }
+
+    private static Optional<DensityDraft> of(LaneDraft lane, String input) {
+        return lane.drawFrom() instanceof DrawFrom.Inputs(var others)
+                        && others.get(input) instanceof Other.Another(var density)
+                ? Optional.of(density)
+                : Optional.empty();
+    }
+
+    private static LaneDraft with(LaneDraft lane, String input, DensityDraft density) {
+        var others = new LinkedHashMap<String, Other>();
+        if (lane.drawFrom() instanceof DrawFrom.Inputs(var before)) {
+            others.putAll(before);
+        }
+        others.put(input, new Other.Another(density));
+        return new LaneDraft(
+                lane.name(),
+                lane.points(),
+                lane.settings(),
+                new DrawFrom.Inputs(others),
+                lane.nominalShare(),
+                lane.selfNormalised(),
+                lane.controls());
     }
 
     private static Optional<DensityDraft> of(From from) {
@@ -63,6 +107,7 @@ record DensityAt(
         return new DensityAt(
                 project,
                 input,
+                isOwn,
                 path + ".mixture[" + k + "]",
                 "part " + (k + 1) + " of " + of,
                 d -> get.apply(d)
@@ -91,12 +136,16 @@ record DensityAt(
         var before = get.apply(d).orElse(DensityDraft.unchosen());
         var after = change.apply(before);
         var drawn = set.apply(d, after);
-        boolean lost = !after.of().equals(before.of())
+        boolean lost = isOwn
+                && !after.of().equals(before.of())
                 && project.isSuggested(drawn.inputs().get(input).provenance());
         return lost ? with(drawn, "") : drawn;
     }
 
     private Draft with(Draft d, String provenance) {
+        if (!isOwn) {
+            return d;
+        }
         return Edits.inputs(
                 d,
                 Edits.changed(

@@ -3,7 +3,6 @@ package dev.leadline.desktop.picker;
 import dev.leadline.chart.DensityPicture.View;
 import dev.leadline.desktop.style.Styles;
 import dev.leadline.desktop.working.Messages;
-import dev.leadline.model.Draft.InputDraft;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
@@ -222,16 +221,12 @@ public final class PickerPane extends BorderPane {
     }
 
     private void update() {
-        model.inputDraft().ifPresent(in -> {
-            title.setText(titleOf(in));
+        model.inputDraft().ifPresent(_ -> {
+            title.setText(model.title());
             shown.forEach(Form::update);
             messages.show(model.problems().stream()
                     .filter(p -> !p.place().path().endsWith(".formula")) // stands under the formula
                     .toList());
         });
-    }
-
-    private static String titleOf(InputDraft in) {
-        return in.name() + (in.label().isBlank() ? "" : ": " + in.label());
     }
 }

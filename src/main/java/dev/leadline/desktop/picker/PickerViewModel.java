@@ -9,6 +9,7 @@ import dev.leadline.density.Knowledge;
 import dev.leadline.density.Portrait;
 import dev.leadline.density.PortraitText;
 import dev.leadline.desktop.background.Background;
+import dev.leadline.desktop.working.Edits;
 import dev.leadline.desktop.working.InputsViewModel;
 import dev.leadline.desktop.working.ProjectViewModel;
 import dev.leadline.model.DataFiles;
@@ -67,6 +68,7 @@ public final class PickerViewModel {
     private final ReadOnlyObjectWrapper<Optional<Way>> way = new ReadOnlyObjectWrapper<>(Optional.empty());
     private final ObjectProperty<View> view = new SimpleObjectProperty<>(View.PDF);
     private final ReadOnlyObjectWrapper<Optional<Drawn>> drawn = new ReadOnlyObjectWrapper<>(Optional.empty());
+    private final ReadOnlyBooleanWrapper opened = new ReadOnlyBooleanWrapper();
     private final ReadOnlyBooleanWrapper outdated = new ReadOnlyBooleanWrapper();
     private int width;
     private int height;
@@ -74,6 +76,8 @@ public final class PickerViewModel {
     private boolean drawing;
     private boolean failed;
     private Optional<Wish> shown = Optional.empty();
+    private Optional<DensityAt> elsewhere = Optional.empty();
+    private String lane = "";
     private Optional<KnownViewModel> known = Optional.empty();
 
     public PickerViewModel(
@@ -90,6 +94,22 @@ public final class PickerViewModel {
     }
 
     private void open(OptionalInt input) {
+        elsewhere = Optional.empty();
+        show(input);
+    }
+
+    /// The density that a lane draws an input from.
+    public void openFor(int lane, String input) {
+        int index = inputs.inputs().stream().map(InputDraft::name).toList().indexOf(input);
+        if (index >= 0) {
+            inputs.close();
+            elsewhere = Optional.of(DensityAt.lane(project, lane, index));
+            this.lane = project.draft().get().lanes().get(lane).name();
+            show(OptionalInt.of(index));
+        }
+    }
+
+    private void show(OptionalInt input) {
         project.settle();
         shown = Optional.empty();
         failed = false;
@@ -100,10 +120,13 @@ public final class PickerViewModel {
     }
 
     private void place(OptionalInt input) {
+        opened.set(input.isPresent());
         at.set(
-                input.isPresent() && isChosen(input.getAsInt())
-                        ? Optional.of(DensityAt.input(project, input.getAsInt()))
-                        : Optional.empty());
+                elsewhere.isPresent()
+                        ? elsewhere
+                        : input.isPresent() && isChosen(input.getAsInt())
+                                ? Optional.of(DensityAt.input(project, input.getAsInt()))
+                                : Optional.empty());
         way.set(at.get().flatMap(this::wayOf));
     }
 
@@ -130,8 +153,18 @@ public final class PickerViewModel {
                                 .isPresent()));
     }
 
-    /// A range may have got an end, or lost it.
+    /// A range may have got an end, or lost it; a lane may draw its input from elsewhere.
     private void follow() {
+        if (elsewhere
+                .filter(place -> place.get().apply(project.draft().get()).isEmpty())
+                .isPresent()) {
+            close();
+            return;
+        }
+        if (elsewhere.isPresent()) {
+            draw();
+            return;
+        }
         if (inputDraft().isPresent() && at.get().isPresent() != isChosen(input().getAsInt())) {
             place(input());
         }
@@ -154,17 +187,43 @@ public final class PickerViewModel {
         return project;
     }
 
-    public OptionalInt input() {
-        return inputs.opened().get();
+    private OptionalInt input() {
+        return elsewhere
+                .map(place -> OptionalInt.of(place.input()))
+                .orElse(inputs.opened().get());
+    }
+
+    /// Whether a density is being chosen.
+    public ReadOnlyBooleanProperty opened() {
+        return opened.getReadOnlyProperty();
+    }
+
+    /// As `v in lane B: largest gust`.
+    String title() {
+        return inputDraft()
+                .map(in -> in.name()
+                        + (elsewhere.isPresent() ? ", drawn from in lane " + lane : "")
+                        + (in.label().isBlank() ? "" : ": " + in.label()))
+                .orElse("");
     }
 
     Optional<InputDraft> inputDraft() {
         return input().isPresent() && input().getAsInt() < inputs.inputs().size()
-                ? Optional.of(inputs.inputs().get(input().getAsInt()))
+                ? Optional.of(drawnFrom(inputs.inputs().get(input().getAsInt())))
                 : Optional.empty();
     }
 
+    /// The input as it would be with the density that a lane draws it from.
+    private InputDraft drawnFrom(InputDraft in) {
+        return elsewhere
+                .map(place -> new InputDraft(in.name(), in.unit(), in.label(), "", new From.Density(place.now())))
+                .orElse(in);
+    }
+
     public void close() {
+        if (elsewhere.isPresent()) {
+            open(OptionalInt.empty());
+        }
         inputs.close();
     }
 
@@ -254,8 +313,9 @@ public final class PickerViewModel {
         if (drawing || input.isEmpty() || width < 40 || height < 40) {
             return;
         }
-        Draft d = project.draft().get();
         int index = input().getAsInt();
+        Draft d = project.draft().get();
+        Draft asDrawn = Edits.inputs(d, Edits.changed(d.inputs(), index, _ -> input.get()));
         var wish = new Wish(
                 input.get(),
                 d.constants(),
@@ -271,7 +331,7 @@ public final class PickerViewModel {
         shown = Optional.of(wish);
         drawing = true;
         background.run(
-                () -> draw(wish, d, index),
+                () -> draw(wish, asDrawn, index),
                 result -> {
                     drawing = false;
                     if (input().equals(OptionalInt.of(index))) {

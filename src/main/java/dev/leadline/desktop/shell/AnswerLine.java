@@ -59,6 +59,7 @@ final class AnswerLine extends HBox {
         copyButton.disableProperty().bind(model.answer().isEmpty());
         getChildren().addAll(answer, edited, gap, progress, bar, objections, copyButton);
         model.run().state().addListener((_, _, _) -> update());
+        model.grounds().addListener((_, _, _) -> update());
         update();
     }
 
@@ -75,13 +76,13 @@ final class AnswerLine extends HBox {
 
     private void update() {
         var state = model.run().state().get();
-        String count = WorkbenchViewModel.objectionsOf(state);
+        String count = WorkbenchViewModel.objectionsOf(state, model.lanes().selectedName());
         objections.setText(count);
         objections.setVisible(!count.isEmpty());
         objections.setManaged(!count.isEmpty());
         objections.pseudoClassStateChanged(
                 javafx.css.PseudoClass.getPseudoClass("standing"), !count.isEmpty() && !count.startsWith("no"));
-        double part = WorkbenchViewModel.partOf(state);
+        double part = WorkbenchViewModel.partOf(state, model.lanes().selectedName());
         bar.setProgress(Double.isNaN(part) ? 0 : part);
         bar.setVisible(!Double.isNaN(part));
         bar.setManaged(!Double.isNaN(part));

@@ -2,6 +2,7 @@ package dev.leadline.desktop.shell;
 
 import dev.leadline.desktop.background.Background;
 import dev.leadline.desktop.grounds.GroundsPane;
+import dev.leadline.desktop.lanes.LanesPane;
 import dev.leadline.desktop.picker.PickerPane;
 import dev.leadline.desktop.stage.StagePane;
 import dev.leadline.desktop.style.Styles;
@@ -69,16 +70,22 @@ public final class Workbench extends BorderPane {
         safety.managedProperty().bind(safety.visibleProperty());
         safety.visibleProperty().bind(model.project().draft().map(d -> d.safety()));
         bottom = new VBox(safety, new AnswerLine(model, () -> showGrounds(grounds::reveal), this::copyAnswer));
-        picture = new StagePane(model.stage(), model.run());
+        picture = new StagePane(
+                model.stage(),
+                new LanesPane(
+                        model.lanes(),
+                        model.suggestion(),
+                        (lane, input) -> model.picker().openFor(lane, input)));
         picker = new PickerPane(model.picker(), model::chooseData);
         panes = new SplitPane(working, picture, grounds);
         panes.setDividerPositions(.325, .79);
-        model.inputs().opened().addListener((_, _, input) -> stage(input.isPresent()));
+        model.picker().opened().addListener((_, _, picking) -> stage(picking));
         SplitPane.setResizableWithParent(working, false);
         SplitPane.setResizableWithParent(grounds, false);
         start = new StartPage(model, background);
         setTop(new VBox(menus, top));
-        model.run().state().addListener((_, _, s) -> grounds.show(WorkbenchViewModel.groundsOf(s)));
+        model.grounds().addListener((_, _, shown) -> grounds.show(shown));
+        grounds.lane().bind(model.groundsOf());
         model.started().addListener((_, _, started) -> arrange(started));
         arrange(model.started().get());
         model.dark().addListener((_, _, dark) -> recolour(dark));
@@ -113,13 +120,13 @@ public final class Workbench extends BorderPane {
     }
 
     private void showGrounds(Runnable reveal) {
-        model.inputs().close();
+        model.picker().close();
         reveal.run();
     }
 
     private void leaveWithEscape(KeyEvent e) {
-        if (e.getCode() == KeyCode.ESCAPE && model.inputs().opened().get().isPresent()) {
-            model.inputs().close();
+        if (e.getCode() == KeyCode.ESCAPE && model.picker().opened().get()) {
+            model.picker().close();
             e.consume();
         }
     }
@@ -138,6 +145,10 @@ public final class Workbench extends BorderPane {
             case UNIT -> working.focusUnit();
             case INPUTS -> working.focusInputs();
             case DEMANDS -> working.focusTolerance();
+            case LANE -> {
+                model.picker().close();
+                model.lanes().open().set(true);
+            }
         }
     }
 

@@ -2,6 +2,8 @@ package dev.leadline.desktop.shell;
 
 import dev.leadline.chart.Export;
 import dev.leadline.desktop.background.Background;
+import dev.leadline.desktop.lanes.LanesViewModel;
+import dev.leadline.desktop.lanes.SuggestionViewModel;
 import dev.leadline.desktop.picker.PickerViewModel;
 import dev.leadline.desktop.run.Progress;
 import dev.leadline.desktop.run.RunViewModel;
@@ -59,6 +61,8 @@ public final class WorkbenchViewModel {
     private final InputsViewModel inputs;
     private final AchievedViewModel achieved;
     private final PickerViewModel picker;
+    private final LanesViewModel lanes;
+    private final SuggestionViewModel suggestion;
     private final ReadOnlyBooleanWrapper started = new ReadOnlyBooleanWrapper();
     private final ReadOnlyStringWrapper notice = new ReadOnlyStringWrapper("");
 
@@ -68,6 +72,8 @@ public final class WorkbenchViewModel {
     private final StringBinding whyNotRun;
     private final StringBinding answer;
     private final StringBinding progress;
+    private final ObjectBinding<List<Ground>> grounds;
+    private final StringBinding groundsOf;
     private final BooleanBinding editedSinceRun;
 
     public WorkbenchViewModel(Studies studies, Dialogs dialogs, Background background) {
@@ -80,10 +86,11 @@ public final class WorkbenchViewModel {
         inputs = new InputsViewModel(project);
         achieved = new AchievedViewModel(project, background);
         picker = new PickerViewModel(project, inputs, dark, background);
+        lanes = new LanesViewModel(project, run);
+        suggestion = new SuggestionViewModel(project, lanes, SuggestionViewModel.Suggestions.engine(), background);
         title = Bindings.createStringBinding(
                 () -> titleOf(project.draft().get(), project.file().get()), project.draft(), project.file());
-        sentence =
-                Bindings.createObjectBinding(() -> Sentence.of(project.draft().get()), project.draft());
+        sentence = Bindings.createObjectBinding(this::sentenceNow, project.draft(), lanes.selected());
         canRun = Bindings.createBooleanBinding(
                 () -> RunViewModel.canStart(run.state().get())
                         && project.problems().get().isEmpty()
@@ -92,8 +99,25 @@ public final class WorkbenchViewModel {
                 project.problems(),
                 project.check());
         whyNotRun = Bindings.createStringBinding(this::reasonNotToRun, run.state(), project.problems());
-        answer = Bindings.createStringBinding(() -> answerOf(run.state().get()), run.state());
-        progress = Bindings.createStringBinding(() -> progressOf(run.state().get()), run.state());
+        answer = Bindings.createStringBinding(
+                () -> answerOf(run.state().get(), lanes.selectedName()),
+                run.state(),
+                project.draft(),
+                lanes.selected());
+        progress = Bindings.createStringBinding(
+                () -> progressOf(run.state().get(), lanes.selectedName()),
+                run.state(),
+                project.draft(),
+                lanes.selected());
+        grounds = Bindings.createObjectBinding(
+                () -> groundsOf(run.state().get(), lanes.selectedName()),
+                run.state(),
+                project.draft(),
+                lanes.selected());
+        groundsOf = Bindings.createStringBinding(
+                () -> lanes.lanes().size() > 1 ? "lane " + lanes.selectedName() : "",
+                project.draft(),
+                lanes.selected());
         editedSinceRun = Bindings.createBooleanBinding(
                 () -> RunViewModel.isEditedSince(
                         run.state().get(), project.draft().get()),
@@ -128,6 +152,29 @@ public final class WorkbenchViewModel {
     /// The density that is being chosen, while an input's row is open.
     public PickerViewModel picker() {
         return picker;
+    }
+
+    /// The lanes of the project, and which of them is spoken of.
+    public LanesViewModel lanes() {
+        return lanes;
+    }
+
+    public SuggestionViewModel suggestion() {
+        return suggestion;
+    }
+
+    ObjectBinding<List<Ground>> grounds() {
+        return grounds;
+    }
+
+    /// Which lane the grounds are of, as `lane B`; empty where there is only one.
+    StringBinding groundsOf() {
+        return groundsOf;
+    }
+
+    private Sentence sentenceNow() {
+        var sentence = Sentence.of(project.draft().get());
+        return lanes.lanes().size() > 1 ? sentence.by(lanes.selectedName()) : sentence;
     }
 
     /// A file of data below the project's folder.
@@ -198,7 +245,7 @@ public final class WorkbenchViewModel {
     public void startRun() {
         if (canRun.get()) {
             notice.set("");
-            inputs.close();
+            picker.close();
             run.start(project.draft().get(), project.files());
         }
     }
@@ -211,12 +258,16 @@ public final class WorkbenchViewModel {
         return toMend.isEmpty() ? "Draws as the stop rule says" : toMend;
     }
 
-    static Optional<LaneState> firstLane(RunViewModel.State state) {
-        return RunViewModel.shown(state).flatMap(s -> s.study().lanes().stream().findFirst());
+    /// What the run shows of a lane; nothing where it was not run.
+    private static Optional<LaneState> laneOf(RunViewModel.State state, String lane) {
+        return RunViewModel.shown(state)
+                .flatMap(s -> s.study().lanes().stream()
+                        .filter(l -> l.trace().lane().equals(lane))
+                        .findFirst());
     }
 
-    static String answerOf(RunViewModel.State state) {
-        return firstLane(state)
+    static String answerOf(RunViewModel.State state, String name) {
+        return laneOf(state, name)
                 .flatMap(lane -> lane.trace()
                         .last()
                         .map(mark -> AnswerText.of(
@@ -224,13 +275,13 @@ public final class WorkbenchViewModel {
                 .orElse("");
     }
 
-    static String progressOf(RunViewModel.State state) {
+    static String progressOf(RunViewModel.State state, String name) {
         return switch (state) {
             case RunViewModel.State.Ready _ -> "";
             case RunViewModel.State.Starting _ -> "building the tables of the densities";
             case RunViewModel.State.Failed(Problem problem) -> problem.primary();
             case RunViewModel.State.Shown shown -> {
-                var lane = firstLane(state);
+                var lane = laneOf(state, name);
                 if (lane.isEmpty()) {
                     yield "building the tables of the densities";
                 }
@@ -247,7 +298,7 @@ public final class WorkbenchViewModel {
     }
 
     /// How far the run has come, from 0 to 1; negative where that cannot be said yet, `NaN` where nothing runs.
-    static double partOf(RunViewModel.State state) {
+    static double partOf(RunViewModel.State state, String name) {
         return switch (state) {
             case RunViewModel.State.Ready _, RunViewModel.State.Failed _ -> Double.NaN;
             case RunViewModel.State.Starting _ -> -1;
@@ -255,7 +306,7 @@ public final class WorkbenchViewModel {
                 if (shown.study().ended()) {
                     yield Double.NaN;
                 }
-                yield firstLane(state)
+                yield laneOf(state, name)
                         .map(lane -> Progress.of(
                                         lane.trace().marks(),
                                         shown.project().plan().stop())
@@ -265,16 +316,16 @@ public final class WorkbenchViewModel {
         };
     }
 
-    static List<Ground> groundsOf(RunViewModel.State state) {
-        return firstLane(state).map(LaneState::grounds).orElse(List.of());
+    static List<Ground> groundsOf(RunViewModel.State state, String name) {
+        return laneOf(state, name).map(LaneState::grounds).orElse(List.of());
     }
 
     /// As `2 objections`; empty before anything was shown.
-    static String objectionsOf(RunViewModel.State state) {
-        if (firstLane(state).flatMap(lane -> lane.trace().last()).isEmpty()) {
+    static String objectionsOf(RunViewModel.State state, String name) {
+        if (laneOf(state, name).flatMap(lane -> lane.trace().last()).isEmpty()) {
             return "";
         }
-        long n = groundsOf(state).stream()
+        long n = groundsOf(state, name).stream()
                 .filter(g ->
                         g.strength().filter(Ground.Strength.OBJECTION::equals).isPresent())
                 .count();
@@ -333,8 +384,10 @@ public final class WorkbenchViewModel {
     private void show(Draft draft, Optional<Path> file, DataFiles files) {
         run.leave();
         stage.reset();
-        inputs.close();
+        picker.close();
+        suggestion.leave();
         project.replace(draft, file, files);
+        lanes.reset();
         started.set(true);
         notice.set("");
     }
@@ -343,7 +396,8 @@ public final class WorkbenchViewModel {
     public void closeProject() {
         leaving(() -> {
             run.leave();
-            inputs.close();
+            picker.close();
+            suggestion.leave();
             project.replace(Edits.asking("mean"), Optional.empty(), DataFiles.NONE);
             started.set(false);
         });

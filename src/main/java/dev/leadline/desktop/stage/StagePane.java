@@ -3,9 +3,7 @@ package dev.leadline.desktop.stage;
 import dev.leadline.chart.PictureKind;
 import dev.leadline.chart.Reading;
 import dev.leadline.chart.View;
-import dev.leadline.desktop.run.RunViewModel;
 import dev.leadline.desktop.style.Styles;
-import java.util.List;
 import javafx.beans.binding.Bindings;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
@@ -19,15 +17,14 @@ import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
 import javafx.scene.layout.StackPane;
-import javafx.scene.layout.VBox;
 
 /// The centre of the window: the picture, and the lanes under it.
 public final class StagePane extends BorderPane {
-    private final LaneTable lanes = new LaneTable();
     private final Label reading = new Label();
     private final StageViewModel model;
 
-    public StagePane(StageViewModel model, RunViewModel run) {
+    /// @param lanes what stands under the picture
+    public StagePane(StageViewModel model, Node lanes) {
         this.model = model;
         getStyleClass().addAll(Styles.PANE, Styles.STAGE);
         reading.getStyleClass().add(Styles.READING);
@@ -72,10 +69,8 @@ public final class StagePane extends BorderPane {
                 .bind(Bindings.createBooleanBinding(() -> model.drawn().get().isEmpty(), model.drawn()));
         setTop(head);
         setCenter(new StackPane(picture, empty));
-        setBottom(new VBox(lanes));
+        setBottom(lanes);
         setMinWidth(420);
-        run.state().addListener((_, _, state) -> show(state));
-        show(run.state().get());
     }
 
     /// The names of the pictures, the one that is shown pressed.
@@ -97,6 +92,10 @@ public final class StagePane extends BorderPane {
                 model.kind().set(kind);
             });
             model.kind().addListener((_, _, now) -> tab.setSelected(now == kind));
+            tab.visibleProperty()
+                    .bind(Bindings.createBooleanBinding(
+                            () -> model.isSeen(kind) || model.kind().get() == kind, model.run(), model.kind()));
+            tab.managedProperty().bind(tab.visibleProperty());
             tabs.getChildren().add(tab);
         }
         return tabs;
@@ -104,13 +103,6 @@ public final class StagePane extends BorderPane {
 
     private static boolean isFollowing(View view) {
         return view.draws().isEmpty() && view.values().isEmpty();
-    }
-
-    private void show(RunViewModel.State state) {
-        var run = RunViewModel.shown(state);
-        lanes.show(
-                run.map(LaneRows::of).orElse(List.of()),
-                run.map(LaneRows::valueHead).orElse("value"));
     }
 
     private static ToggleButton scaleButton(String text, String tip, ToggleGroup group) {

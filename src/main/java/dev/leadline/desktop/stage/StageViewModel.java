@@ -55,6 +55,11 @@ public final class StageViewModel {
             if (!(was instanceof RunViewModel.State.Shown) && is instanceof RunViewModel.State.Starting) {
                 reset();
             }
+            if (is instanceof RunViewModel.State.Shown now
+                    && !now.study().lanes().isEmpty()
+                    && !isSeen(kind.get())) {
+                kind.set(PictureKind.SETTLING);
+            }
             draw();
         });
         project.check().addListener((_, _, _) -> draw());
@@ -78,6 +83,18 @@ public final class StageViewModel {
     /// Which picture; another one starts following the run.
     public ObjectProperty<PictureKind> kind() {
         return kind;
+    }
+
+    /// Whether a picture has something to show of the run.
+    boolean isSeen(PictureKind one) {
+        return one.isSeen(RunViewModel.shown(run.state().get()).stream()
+                .flatMap(s -> s.study().lanes().stream())
+                .map(LaneState::trace)
+                .toList());
+    }
+
+    ReadOnlyObjectProperty<RunViewModel.State> run() {
+        return run.state();
     }
 
     /// Whether the draws stand on a logarithmic axis.

@@ -8,6 +8,7 @@ import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
+import dev.leadline.model.LaneDraft;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -135,6 +136,34 @@ public final class Edits {
                 d.seed(),
                 d.commonRandomNumbers(),
                 d.lanes());
+    }
+
+    public static Draft lanes(Draft d, List<LaneDraft> lanes) {
+        return schemes(d, d.commonRandomNumbers(), lanes);
+    }
+
+    public static Draft commonRandomNumbers(Draft d, boolean common) {
+        return schemes(d, common, d.lanes());
+    }
+
+    /// The parts that say how it is sampled.
+    private static Draft schemes(Draft d, boolean commonRandomNumbers, List<LaneDraft> lanes) {
+        return new Draft(
+                d.title(),
+                d.notes(),
+                d.safety(),
+                d.constants(),
+                d.inputs(),
+                d.dependence(),
+                d.steps(),
+                d.asks(),
+                d.reference(),
+                d.confidence(),
+                d.tolerance(),
+                d.stop(),
+                d.seed(),
+                commonRandomNumbers,
+                lanes);
     }
 
     static Draft constants(Draft d, List<ConstantDraft> constants) {

@@ -10,6 +10,8 @@ import dev.leadline.desktop.run.HeldStudies;
 import dev.leadline.desktop.shell.Dialogs.Unsaved;
 import dev.leadline.desktop.working.Edits;
 import dev.leadline.ground.Ground;
+import dev.leadline.model.DataFiles;
+import dev.leadline.model.LaneDraft;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
@@ -199,12 +201,12 @@ class WorkbenchViewModelTest {
                         new Trace("A", "independent", List.of(), List.of(), List.of(), Optional.empty()), List.of())),
                 List.of()));
         background.finishAll();
-        assertEquals("", WorkbenchViewModel.objectionsOf(model.run().state().get()));
+        assertEquals("", WorkbenchViewModel.objectionsOf(model.run().state().get(), "A"));
         assertEquals("0 draws", model.progress().get());
         assertEquals("seed 7", WorkbenchViewModel.seedOf(model.run().state().get()));
         assertEquals(
                 List.<Ground>of(),
-                WorkbenchViewModel.groundsOf(model.run().state().get()));
+                WorkbenchViewModel.groundsOf(model.run().state().get(), "A"));
     }
 
     @Test
@@ -245,5 +247,21 @@ class WorkbenchViewModelTest {
             assertEquals(List.of(), model.project().problems().get(), name);
             assertTrue(model.project().file().get().isEmpty(), name);
         }
+    }
+
+    @Test
+    void sentenceAnswerAndGroundsSpeakOfTheSelectedLane() {
+        model.project().replace(Drafts.mean(), Optional.empty(), DataFiles.NONE);
+        assertFalse(model.sentence().get().text().contains("lane"));
+        model.project()
+                .edit(
+                        "$.lanes",
+                        d -> Edits.lanes(
+                                d, List.of(LaneDraft.of("A", "independent"), LaneDraft.of("B", "antithetic"))));
+        model.lanes().select(1);
+        assertTrue(model.sentence().get().text().endsWith(", by lane B."));
+        assertEquals("lane B", model.groundsOf().get());
+        model.lanes().select(0);
+        assertEquals("lane A", model.groundsOf().get());
     }
 }

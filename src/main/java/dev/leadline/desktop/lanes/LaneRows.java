@@ -1,9 +1,10 @@
-package dev.leadline.desktop.stage;
+package dev.leadline.desktop.lanes;
 
 import dev.leadline.chart.LaneLook;
 import dev.leadline.desktop.run.Progress;
 import dev.leadline.desktop.run.RunViewModel.State;
 import dev.leadline.desktop.style.Figures;
+import dev.leadline.model.LaneDraft;
 import dev.leadline.model.Tolerance;
 import dev.leadline.model.UnitWords;
 import dev.leadline.numeric.Rounding;
@@ -13,18 +14,24 @@ import dev.leadline.trace.Answer;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 
-/// The rows of the lane table.
+/// The rows of the lane table: the lanes of the project as they are written now, with what the run shows of each.
 final class LaneRows {
     private LaneRows() {}
 
+    /// @param lane its index in the project
+    /// @param name empty in rows of further answers
     /// @param look marker and dash of the lane in the picture
+    /// @param scheme in words
     /// @param of which answer; empty where there is only one
     /// @param left time left, or whether the numerical tolerance is met
     /// @param why the lane goes on, or stopped
     record Row(
-            String lane,
+            int lane,
+            String name,
             LaneLook look,
+            String scheme,
             String of,
             String value,
             String plusMinus,
@@ -32,26 +39,58 @@ final class LaneRows {
             String left,
             String why) {}
 
-    static List<Row> of(State.Shown shown) {
+    static List<Row> of(List<LaneDraft> drafts, Optional<State.Shown> run) {
         var rows = new ArrayList<Row>();
-        var lanes = shown.study().lanes();
-        for (int i = 0; i < lanes.size(); i++) {
-            var look = LaneLook.values()[i];
-            var lane = lanes.get(i);
-            var mark = lane.trace().last();
-            if (mark.isEmpty()) {
-                rows.add(new Row(lane.trace().lane(), look, "", "", "", "0", "", "starting"));
+        var looks = looks(drafts, run);
+        for (int i = 0; i < drafts.size(); i++) {
+            var draft = drafts.get(i);
+            var look = looks.get(i);
+            var state = run.flatMap(shown -> state(shown, draft.name()));
+            if (state.isEmpty() || state.get().trace().last().isEmpty()) {
+                String why = state.isPresent() ? "starting" : run.isPresent() ? "not in this run" : "not run yet";
+                rows.add(new Row(i, draft.name(), look, SchemeWords.of(draft), "", "", "", "", "", why));
                 continue;
             }
-            var answers = mark.get().answers();
+            var answers = state.get().trace().last().orElseThrow().answers();
             for (int k = 0; k < answers.size(); k++) {
-                rows.add(row(shown, lane, look, answers.get(k), k, answers.size()));
+                rows.add(row(i, draft, look, run.orElseThrow(), state.get(), answers.get(k), k, answers.size()));
             }
         }
         return rows;
     }
 
-    private static Row row(State.Shown shown, LaneState lane, LaneLook look, Answer a, int k, int answers) {
+    /// A lane that was run looks as in the picture; the others take looks that are left.
+    private static List<LaneLook> looks(List<LaneDraft> drafts, Optional<State.Shown> run) {
+        var names = run.stream()
+                .flatMap(shown -> shown.study().lanes().stream())
+                .map(lane -> lane.trace().lane())
+                .toList();
+        var left = new ArrayList<>(Stream.of(LaneLook.values()).toList());
+        drafts.forEach(draft -> {
+            int at = names.indexOf(draft.name());
+            if (at >= 0) {
+                left.remove(LaneLook.values()[at]);
+            }
+        });
+        var looks = new ArrayList<LaneLook>();
+        for (var draft : drafts) {
+            int at = names.indexOf(draft.name());
+            looks.add(
+                    at >= 0
+                            ? LaneLook.values()[at]
+                            : left.isEmpty() ? LaneLook.values()[LaneLook.values().length - 1] : left.removeFirst());
+        }
+        return looks;
+    }
+
+    private static Optional<LaneState> state(State.Shown shown, String name) {
+        return shown.study().lanes().stream()
+                .filter(lane -> lane.trace().lane().equals(name))
+                .findFirst();
+    }
+
+    private static Row row(
+            int i, LaneDraft draft, LaneLook look, State.Shown shown, LaneState lane, Answer a, int k, int answers) {
         boolean first = k == 0;
         double half = a.interval().halfWidth();
         boolean whole = Double.isFinite(a.estimate()) && half > 0 && Double.isFinite(half);
@@ -59,14 +98,16 @@ final class LaneRows {
         String name = answers == 1 ? "" : a.label().isBlank() ? "answer " + (k + 1) : a.label();
         String unit = answers == 1 ? "" : UnitWords.after(a.unit()).strip();
         return new Row(
-                first ? lane.trace().lane() : "",
+                i,
+                first ? draft.name() : "",
                 look,
+                first ? SchemeWords.of(draft) : "",
                 name,
                 (whole ? text.value() : alone(a)) + (unit.isEmpty() ? "" : " " + unit),
                 whole ? uncertainty(a, text) : "",
                 first ? Figures.count(lane.trace().last().orElseThrow().draws()) : "",
                 first ? left(shown, lane, a) : "",
-                first ? why(shown, lane) : "");
+                first ? why(draft, shown, lane) : "");
     }
 
     /// The half-width; both limits where one lies much farther off than the other.
@@ -77,7 +118,11 @@ final class LaneRows {
     }
 
     /// What the head of the column of values says.
-    static String valueHead(State.Shown shown) {
+    static String valueHead(Optional<State.Shown> run) {
+        return run.map(LaneRows::valueHead).orElse("value");
+    }
+
+    private static String valueHead(State.Shown shown) {
         var asks = shown.project().question().asks();
         String unit = UnitWords.after(asks.getFirst().unit()).strip();
         return asks.size() > 1 || unit.isEmpty()
@@ -106,7 +151,11 @@ final class LaneRows {
                 : "";
     }
 
-    private static String why(State.Shown shown, LaneState lane) {
-        return lane.trace().stopReason().orElse(shown.study().activity() == Activity.PAUSED ? "paused" : "running");
+    private static String why(LaneDraft draft, State.Shown shown, LaneState lane) {
+        boolean edited = shown.project().draft().lanes().stream().noneMatch(draft::equals)
+                && !shown.project().draft().lanes().isEmpty();
+        String why =
+                lane.trace().stopReason().orElse(shown.study().activity() == Activity.PAUSED ? "paused" : "running");
+        return edited ? "edited since; " + why : why;
     }
 }
