@@ -3,6 +3,7 @@ package dev.leadline.ground;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.ClopperPearson;
+import dev.leadline.interval.Student;
 import dev.leadline.model.Reference;
 import dev.leadline.numeric.Rounding;
 import dev.leadline.trace.Answer;
@@ -22,6 +23,9 @@ final class AgainstReference {
 
     /// `2 Φ(-4)`.
     private static final double BEYOND_LIMIT = 6.334248366623985e-5;
+
+    /// Where ten standard errors of very few observations, two replicates perhaps, would be no surprise.
+    private static final double BEYOND_TEN = 1e-6;
 
     private static final String REMEDY = "Check formula, densities and units, and where the reference value comes from";
 
@@ -75,16 +79,17 @@ final class AgainstReference {
         }
         String text = "%s standard errors %s the reference value"
                 .formatted(Numbers.ratio(Math.abs(z)), z < 0 ? "below" : "above");
-        if (Math.abs(z) <= LIMIT) {
+        long n = evidence.total().count();
+        if (Math.abs(z) <= Math.max(LIMIT, Student.quantile(n - 1, 1 - BEYOND_LIMIT))) {
             return Ground.shown("reference", text);
         }
         boolean many = evidence.total().count() >= MANY && Skewness.isMet(evidence.total(), 0);
-        return Math.abs(z) > (many ? LIMIT : OF_FEW)
+        return Math.abs(z) > (many ? LIMIT : Math.max(OF_FEW, Student.quantile(n - 1, 1 - BEYOND_TEN)))
                 ? Ground.doubted("reference", Strength.OBJECTION, text, REMEDY)
                 : Ground.doubted(
                         "reference",
                         Strength.CAUTION,
-                        text + "; with so few draws chance may do that",
+                        text + "; with so few observations chance may do that",
                         "Make more draws; if it stays, check formula, densities and units");
     }
 

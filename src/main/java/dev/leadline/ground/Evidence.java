@@ -21,6 +21,11 @@ record Evidence(Question question, Trace trace, List<Answer> answers, Accumulato
         return trace.last().orElseThrow().draws();
     }
 
+    /// Draws whose mean is an observation, those of a replicate so far where it is one.
+    double drawsPerObservation() {
+        return (double) draws() / (total.count() + total.excluded());
+    }
+
     /// What to call an answer in a sentence, with a colon; nothing where there is only one.
     String of(int answer) {
         if (answers.size() == 1) {

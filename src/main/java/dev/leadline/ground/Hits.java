@@ -3,6 +3,7 @@ package dev.leadline.ground;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Extremes;
 import dev.leadline.ground.Ground.Strength;
+import dev.leadline.interval.Student;
 import java.util.Optional;
 
 /// Whether an event has been seen often enough, and its opposite too. The rarer of the two counts; 25 of it is common
@@ -15,23 +16,38 @@ final class Hits {
     static Optional<Ground> judge(Evidence evidence, int k) {
         var answer = evidence.answers().get(k);
         if (answer.hits().isEmpty() || answer.observations() == 0) {
-            return answer.estimand() instanceof Estimand.Probability
-                    ? evidence.trace().extremes().map(draws -> weighted(evidence, draws, k))
+            return answer.estimand() instanceof Estimand.Probability && answer.observations() > 0
+                    ? evidence.trace()
+                            .extremes()
+                            .map(draws -> weighted(evidence, draws, k))
+                            .or(() -> folded(evidence, k))
                     : Optional.empty();
         }
-        long hits = answer.hits().getAsLong();
-        long misses = answer.observations() - hits;
+        return judged(evidence, k, answer.hits().getAsLong(), answer.observations());
+    }
+
+    /// Of observations that are means of several draws: the sum of their hits. Those of splitting are none.
+    private static Optional<Ground> folded(Evidence evidence, int k) {
+        if (!evidence.answers().get(k).interval().kind().equals(Student.KIND)) {
+            return Optional.empty();
+        }
+        double draws = evidence.total().count() * evidence.drawsPerObservation();
+        return judged(evidence, k, Math.round(evidence.total().mean(k) * draws), Math.round(draws));
+    }
+
+    private static Optional<Ground> judged(Evidence evidence, int k, long hits, long all) {
+        long misses = all - hits;
         long rarer = Math.min(hits, misses);
         String of = evidence.of(k);
         String what = hits <= misses ? "hit" : "miss";
-        String draws = Numbers.count(answer.observations()) + (answer.observations() == 1 ? " draw" : " draws");
+        String draws = Numbers.count(all) + (all == 1 ? " draw" : " draws");
         if (rarer >= ENOUGH) {
             return Optional.of(
                     Ground.shown("hits", of + "%s %s in %s".formatted(Numbers.count(rarer), plural(what), draws)));
         }
         String text = rarer == 0
                 ? "no %s in %s: a part of probability below %s may be unseen"
-                        .formatted(what, draws, Numbers.value(Math.min(1, 3.0 / answer.observations())))
+                        .formatted(what, draws, Numbers.value(Math.min(1, 3.0 / all)))
                 : "only %d %s in %s".formatted(rarer, rarer == 1 ? what : plural(what), draws);
         return Optional.of(Ground.doubted(
                 "hits",

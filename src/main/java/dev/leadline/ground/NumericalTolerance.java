@@ -37,7 +37,10 @@ final class NumericalTolerance {
                     "tolerance",
                     Strength.CAUTION,
                     text + ": not met",
-                    "Make about %s draws in all".formatted(Numbers.about(draws)));
+                    (evidence.drawsPerObservation() > 1
+                                    ? "Make more draws: at most about %s in all, fewer where errors fall faster than their square root"
+                                    : "Make about %s draws in all")
+                            .formatted(Numbers.about(draws)));
         });
     }
 }

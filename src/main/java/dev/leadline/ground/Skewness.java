@@ -6,7 +6,8 @@ import dev.leadline.ground.Ground.Strength;
 import java.util.Optional;
 
 /// Whether there are enough observations for a Student interval in spite of lopsided outcomes: n of at least 25 times
-/// the squared skewness (Cochran's rule; common practice).
+/// the squared skewness (Cochran's rule; common practice). A skewness within two standard errors of 0, as those of
+/// normal values have them, is no doubt: below 25 observations that may be .8 and more.
 final class Skewness {
     private static final double PER_SQUARE = 25;
 
@@ -30,9 +31,11 @@ final class Skewness {
         }
         double wanted = wanted(skewness);
         String text = evidence.of(k)
-                + "skewness %s asks for about %s observations; there are %s"
+                + "skewness %s asks for about %s; there are %s"
                         .formatted(
-                                Numbers.ratio(skewness), Numbers.about(Math.ceil(wanted)), Numbers.count(sums.count()));
+                                Numbers.ratio(skewness),
+                                observations(Math.ceil(wanted), evidence.drawsPerObservation()),
+                                Numbers.count(sums.count()));
         return Optional.of(
                 isMet(sums, k)
                         ? Ground.shown("skewness", text)
@@ -40,12 +43,25 @@ final class Skewness {
                                 "skewness",
                                 Strength.CAUTION,
                                 text,
-                                "Make more draws: until then the interval misses more often than it says"));
+                                (evidence.drawsPerObservation() > 1
+                                                ? "Make more observations: more draws, or more replicates where these are"
+                                                        + " the observations"
+                                                : "Make more draws")
+                                        + "; until then the interval misses more often than it says"));
+    }
+
+    private static String observations(double count, double draws) {
+        return Numbers.about(count)
+                + (count == 1 ? " observation" : " observations")
+                + (draws > 1 ? " of %s draws each".formatted(Numbers.about(draws)) : "");
     }
 
     /// False where the skewness is not known.
     static boolean isMet(Accumulator sums, int k) {
-        return sums.count() >= wanted(sums.skewness(k));
+        double skewness = sums.skewness(k);
+        double n = sums.count();
+        double error = Math.sqrt(6 * n * (n - 1) / ((n - 2) * (n + 1) * (n + 3)));
+        return n >= wanted(skewness) || Math.abs(skewness) <= 2 * error;
     }
 
     private static double wanted(double skewness) {

@@ -7,9 +7,16 @@ import dev.leadline.engine.Questions;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.ground.Ground.Status;
 import dev.leadline.ground.Ground.Strength;
+import dev.leadline.model.Lane;
+import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
+import dev.leadline.model.Stop;
+import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.Points;
 import dev.leadline.scheme.Scheme;
+import dev.leadline.scheme.ScrambledSobol;
+import dev.leadline.scheme.Scrambling;
 import dev.leadline.study.Study;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Blocks;
@@ -17,6 +24,7 @@ import dev.leadline.trace.Mark;
 import dev.leadline.trace.Trace;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.random.RandomGenerator;
 import java.util.random.RandomGeneratorFactory;
 import org.junit.jupiter.api.Test;
@@ -109,6 +117,42 @@ class GroundsTest {
         assertEquals(Status.NOT_DONE, ground("skewness", large).status());
     }
 
+    private static List<Ground> run(Question question, Points points, long draws) throws InterruptedException {
+        var lane = Lane.of("B", Scheme.of(points));
+        var plan = new Plan(new Stop(draws, OptionalDouble.empty()), 11, List.of(lane));
+        try (var study = Study.start(question, plan, 1, _ -> {})) {
+            return study.await().lanes().getFirst().grounds();
+        }
+    }
+
+    /// Hits are counted in draws, also where observations are means of several.
+    @Test
+    void hitsOfObservationsOfSeveralDraws() throws InterruptedException {
+        var rare = new Questions().uniform("x", 0, 1).probability("x < 0.01").build();
+        var pairs = ground("hits", run(rare, new Antithetic(), 1_000));
+        cautions(pairs);
+        assertTrue(pairs.text().endsWith("hits in 1,000 draws"), pairs.text());
+        // 1,024 points in each of 16 replicates: 10 or 11 of each below .01
+        var sobol = ground("hits", run(rare, new ScrambledSobol(16, Scrambling.NESTED), 16_384));
+        shows(sobol);
+        assertTrue(sobol.text().matches("16\\d hits in 16,384 draws"), sobol.text());
+    }
+
+    @Test
+    void skewnessOfReplicates() throws InterruptedException {
+        var steep = new Questions().normal("z").mean("exp(2*z)").build();
+        var ground = ground("skewness", run(steep, new ScrambledSobol(16, Scrambling.NESTED), 1 << 12));
+        cautions(ground);
+        assertTrue(ground.text().matches("Skewness .* observations of 260 draws each; there are 16"), ground.text());
+        assertTrue(ground.remedy().orElseThrow().contains("more replicates"));
+        shows(ground(
+                "skewness",
+                run(
+                        new Questions().normal("z").mean("z").build(),
+                        new ScrambledSobol(16, Scrambling.NESTED),
+                        1 << 12)));
+    }
+
     @Test
     void reference() throws InterruptedException {
         var question = new Questions().uniform("x", 0, 1).mean("x");
@@ -162,11 +206,12 @@ class GroundsTest {
     @Test
     void referenceAgainstFewDraws() {
         var question = new Questions().uniform("x", 0, 1).mean("x");
-        // mean 2.5, standard error 0.645
+        // mean 2.5, standard error 0.645; Student's t with 3 degrees of freedom is beyond 32.5 with chance 6.3e-5,
+        // beyond 130 with chance 1e-6
         double[] values = {1, 2, 3, 4};
-        shows(ground("reference", judged(question.reference(4.5).build(), values)));
-        cautions(ground("reference", judged(question.reference(6).build(), values)));
-        objects(ground("reference", judged(question.reference(10).build(), values)));
+        shows(ground("reference", judged(question.reference(2.5 + 32 * .6455).build(), values)));
+        cautions(ground("reference", judged(question.reference(2.5 + 35 * .6455).build(), values)));
+        objects(ground("reference", judged(question.reference(2.5 + 135 * .6455).build(), values)));
     }
 
     @Test
