@@ -205,7 +205,7 @@ final class LaneForm extends VBox {
     private Node elsewhere(int i) {
         var menu = new MenuButton("+ input");
         menu.setId("draw-elsewhere");
-        menu.getStyleClass().add("small");
+        menu.getStyleClass().add("small-menu");
         menu.setMinWidth(USE_PREF_SIZE);
         menu.setTooltip(new Tooltip("An input to draw from another density than its own"));
         var drawn = model.drawnElsewhere(i);
@@ -355,7 +355,7 @@ final class LaneForm extends VBox {
     private static FlowPane flow(Node... nodes) {
         var flow = new FlowPane(8, 4, nodes);
         flow.setRowValignment(javafx.geometry.VPos.CENTER);
-        flow.setPrefWrapLength(400);
+        flow.setPrefWrapLength(520);
         return flow;
     }
 

@@ -66,12 +66,7 @@ public final class LanesPane extends VBox {
         below.setAlignment(Pos.CENTER_LEFT);
         below.getStyleClass().add("below-lanes");
         var all = new VBox(table, sentences, below, new SuggestionView(suggestion));
-        var scroll = new ScrollPane(all);
-        scroll.setFitToWidth(true);
-        scroll.setHbarPolicy(ScrollPane.ScrollBarPolicy.NEVER);
-        scroll.setMaxHeight(MOST_HEIGHT);
-        all.heightProperty().addListener((_, _, height) -> fit(scroll, height.doubleValue()));
-        getChildren().add(scroll);
+        getChildren().add(new Fitting(all));
         model.project().draft().addListener((_, _, _) -> update());
         model.project().problems().addListener((_, _, _) -> update());
         model.selected().addListener((_, _, _) -> update());
@@ -80,10 +75,23 @@ public final class LanesPane extends VBox {
         update();
     }
 
-    private static void fit(ScrollPane scroll, double height) {
-        double fitting = Math.min(MOST_HEIGHT, Math.ceil(height) + 2);
-        scroll.setPrefHeight(fitting);
-        scroll.setMinHeight(Math.min(fitting, 120));
+    /// As high as what is in it, up to a limit; from there on it scrolls.
+    private static final class Fitting extends ScrollPane {
+        private final Region content;
+
+        Fitting(Region content) {
+            super(content);
+            this.content = content;
+            setFitToWidth(true);
+            setHbarPolicy(ScrollBarPolicy.NEVER);
+            setMinHeight(USE_PREF_SIZE);
+            setMaxHeight(USE_PREF_SIZE);
+        }
+
+        @Override
+        protected double computePrefHeight(double width) {
+            return Math.min(MOST_HEIGHT, Math.ceil(content.prefHeight(getWidth())) + 2);
+        }
     }
 
     private void update() {
@@ -91,8 +99,23 @@ public final class LanesPane extends VBox {
         boolean several = model.lanes().size() > 1;
         see(shares, several || model.isShared());
         shares.setSelected(model.isShared());
+        openWhereFaulty();
         showRun();
         form.update();
+    }
+
+    /// A fault is never folded away.
+    private void openWhereFaulty() {
+        if (model.open().get()) {
+            return;
+        }
+        for (int i = 0; i < model.lanes().size(); i++) {
+            if (!model.problems(i).isEmpty()) {
+                model.select(i);
+                model.open().set(true);
+                return;
+            }
+        }
     }
 
     private void showRun() {

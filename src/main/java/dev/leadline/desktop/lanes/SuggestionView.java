@@ -8,13 +8,10 @@ import dev.leadline.study.RatioText;
 import dev.leadline.study.Suggestion;
 import java.util.List;
 import javafx.geometry.Pos;
-import javafx.geometry.VPos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
 import javafx.scene.control.Tooltip;
-import javafx.scene.layout.ColumnConstraints;
-import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
@@ -56,37 +53,36 @@ final class SuggestionView extends VBox {
     }
 
     private List<Node> found(Suggestion suggestion) {
-        var head = quiet("How many times less time than plain draws for the same error, in pilots of "
-                + Figures.count(suggestion.draws()) + " draws");
-        var table = new GridPane(12, 2);
+        var head =
+                quiet("Times less time than plain draws, in pilots of " + Figures.count(suggestion.draws()) + " draws");
+        var table = new VBox(4);
         table.setId("suggestion-table");
-        var reasons = new ColumnConstraints();
-        reasons.setHgrow(Priority.ALWAYS);
-        table.getColumnConstraints().addAll(new ColumnConstraints(), new ColumnConstraints(), reasons);
         for (int r = 0; r < suggestion.rows().size(); r++) {
-            var row = suggestion.rows().get(r);
-            boolean recommended = row.equals(suggestion.recommended());
-            var scheme = new Label(row.scheme());
-            scheme.setWrapText(true);
-            scheme.setMaxWidth(250);
-            scheme.setMinHeight(USE_PREF_SIZE);
-            scheme.getStyleClass().add(recommended ? "primary" : "scheme");
-            var times = new Label(row.efficiencyRatio().map(RatioText::of).orElse("?"));
-            times.getStyleClass().add("figure");
-            times.setMinWidth(USE_PREF_SIZE);
-            var reason = quiet(row.reason());
-            reason.setWrapText(true);
-            reason.setMinHeight(USE_PREF_SIZE);
-            var add = button(
-                    "add as lane " + model.lanes().nextName(), "Samples so in a lane of its own", () -> model.add(row));
-            add.setId("add-suggested-" + r);
-            add.setDisable(!model.lanes().canAdd());
-            table.addRow(r, scheme, times, reason, add);
-            for (Node cell : List.of(scheme, times, reason, add)) {
-                GridPane.setValignment(cell, VPos.TOP);
-            }
+            table.getChildren().add(row(r, suggestion));
         }
         return List.of(line(head, button("close", "Puts the table away", model::leave)), table);
+    }
+
+    private Node row(int r, Suggestion suggestion) {
+        var row = suggestion.rows().get(r);
+        boolean recommended = row.equals(suggestion.recommended());
+        var times = new Label(row.efficiencyRatio().map(RatioText::of).orElse("?"));
+        times.getStyleClass().add("figure");
+        times.setMinWidth(USE_PREF_SIZE);
+        var scheme = new Label(row.scheme() + (recommended ? " (recommended)" : ""));
+        scheme.setMinWidth(0);
+        scheme.setTooltip(new Tooltip(row.scheme()));
+        scheme.getStyleClass().add(recommended ? "primary" : "scheme");
+        var gap = new Region();
+        HBox.setHgrow(gap, Priority.ALWAYS);
+        var add = button(
+                "add as lane " + model.lanes().nextName(), "Samples so in a lane of its own", () -> model.add(row));
+        add.setId("add-suggested-" + r);
+        add.setDisable(!model.lanes().canAdd());
+        var reason = quiet(row.reason());
+        reason.setWrapText(true);
+        reason.setMinHeight(USE_PREF_SIZE);
+        return new VBox(line(times, scheme, gap, add), reason);
     }
 
     private static Label quiet(String text) {

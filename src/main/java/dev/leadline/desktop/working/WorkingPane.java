@@ -193,6 +193,7 @@ public final class WorkingPane extends BorderPane {
             return List.of();
         }
         return project.problems().get().stream()
+                .filter(p -> !p.place().path().startsWith("$.lanes")) // stand with their lane
                 .filter(p -> !(p.place().path().equals("$.inputs")
                         && !formulas.unknownNames().isEmpty()))
                 .filter(p -> !FormulasViewModel.isInFormulas(p.place())
