@@ -33,7 +33,7 @@ public record Series(String lane, String scheme, List<Point> points, OptionalLon
         Optional<Answer> latest = trace.last().map(mark -> mark.answers().get(answer));
         return new Series(
                 trace.lane(),
-                trace.scheme(),
+                trace.scheme().inWords(),
                 points,
                 latest.map(Answer::hits).orElse(OptionalLong.empty()),
                 latest.map(Answer::nonFinite).orElse(0L));

@@ -32,7 +32,7 @@ public record Weights(String title, long seed, List<Weighed> lanes) implements S
         static Weighed of(Trace trace) {
             Optional<Extremes> extremes = trace.extremes().filter(e -> e.draws() > 0);
             return extremes.map(e -> of(trace, e))
-                    .orElse(new Weighed(trace.lane(), trace.scheme(), List.of(), 0, Double.NaN));
+                    .orElse(new Weighed(trace.lane(), trace.scheme().inWords(), List.of(), 0, Double.NaN));
         }
 
         private static Weighed of(Trace trace, Extremes extremes) {
@@ -45,7 +45,7 @@ public record Weights(String title, long seed, List<Weighed> lanes) implements S
                     points.add(new Point(i + 1, greatest[i] / mean, Double.NaN, Double.NaN));
                 }
             }
-            return new Weighed(trace.lane(), trace.scheme(), points, extremes.draws(), extremes.effective(weights));
+            return new Weighed(trace.lane(), trace.scheme().inWords(), points, extremes.draws(), extremes.effective(weights));
         }
 
         /// Part of all weight that the largest ones up to a rank have.

@@ -132,7 +132,8 @@ final class RunText {
 
     private String facts(LaneState lane, List<Answer> answers) {
         List<String> facts = new ArrayList<>();
-        facts.add("lane %s: %s".formatted(lane.trace().lane(), lane.trace().scheme()));
+        facts.add("lane %s: %s"
+                .formatted(lane.trace().lane(), lane.trace().scheme().inWords()));
         lane.trace().last().ifPresent(mark -> {
             facts.add(String.format(Locale.ROOT, "%,d draw%s", mark.draws(), mark.draws() == 1 ? "" : "s"));
             if (answers.size() == 1 && answers.getFirst().hits().isPresent()) {

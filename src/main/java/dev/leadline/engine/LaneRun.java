@@ -110,7 +110,7 @@ public final class LaneRun {
     public Trace trace() {
         return new Trace(
                 recipe.lane().name(),
-                recipe.lane().scheme().inWords(),
+                recipe.lane().scheme(),
                 marks,
                 tally.blocks(),
                 extremes.map(Extremes::copy),
@@ -163,6 +163,6 @@ public final class LaneRun {
 
     private void mark(double seconds) {
         marks.add(new Mark(
-                draws, seconds, Answers.of(recipe.question(), recipe.lane().scheme(), tally.total())));
+                draws, seconds, Answers.of(recipe.question(), recipe.lane().scheme(), tally.total(), tally.blocks())));
     }
 }

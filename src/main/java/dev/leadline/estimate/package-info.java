@@ -2,6 +2,8 @@
 ///
 /// An [Estimand][dev.leadline.estimate.Estimand] names what is asked; an
 /// [Accumulator][dev.leadline.estimate.Accumulator] keeps the moments of the observations, in memory that does not grow
-/// with their number. [Jackknife][dev.leadline.estimate.Jackknife] gives the variance of what is made of them.
+/// with their number. [Regression][dev.leadline.estimate.Regression] and [CrossFit][dev.leadline.estimate.CrossFit]
+/// correct a mean by control variates. [Jackknife][dev.leadline.estimate.Jackknife] gives the variance of what is made
+/// of them.
 /// [Association][dev.leadline.estimate.Association] measures how two columns go together.
 package dev.leadline.estimate;

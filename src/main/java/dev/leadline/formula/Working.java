@@ -7,6 +7,7 @@ import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.SequencedMap;
+import java.util.function.IntFunction;
 import java.util.stream.Stream;
 
 /// The formulas of a question, checked together: its steps and what is asked. Immutable, safe for all threads.
@@ -82,6 +83,11 @@ public final class Working {
         return program;
     }
 
+    /// Inputs to the formula asked at `index` alone.
+    public Program program(int index) {
+        return Program.of(expression, inputs, List.of(askedNodes.get(index)));
+    }
+
     /// Inputs to every step, in the order of [#steps()], then to the components asked for.
     public Program everyStep() {
         return everyStep;
@@ -106,6 +112,15 @@ public final class Working {
             throw new Refusal(
                     refusal.problems().stream().map(problem -> problem.in(path)).toList());
         }
+    }
+
+    /// The formula asked at `index` as a sum of products of powers of its inputs.
+    ///
+    /// @param measures how each input is measured, by its index; only asked for inputs that the formula
+    ///     reads
+    /// @throws Refusal where it is none, saying what it does instead
+    public Polynomial polynomial(int index, IntFunction<Polynomial.Measured> measures) {
+        return Polynomial.of(expression, askedNodes.get(index), measures);
     }
 
     /// The numbers that stand in the formulas and the values that follow from them and from constants alone,

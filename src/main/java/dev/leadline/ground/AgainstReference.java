@@ -41,7 +41,8 @@ final class AgainstReference {
         var reference = evidence.question().reference().get();
         var answer = evidence.answers().getFirst();
         return switch (answer.estimand()) {
-            case Estimand.Probability _ when answer.hits().isPresent() -> chance(answer, reference);
+            case Estimand.Probability _
+            when answer.interval().kind().equals(ClopperPearson.KIND) -> chance(answer, reference);
             case Estimand.Probability _, Estimand.Mean _, Estimand.Integral _ -> mean(evidence, answer, reference);
         };
     }

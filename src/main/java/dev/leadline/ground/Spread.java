@@ -14,6 +14,9 @@ final class Spread {
         if (evidence.answers().get(k).estimand() instanceof Estimand.Probability || sums.count() == 0) {
             return Optional.empty();
         }
+        if (!sums.constant(k) && !evidence.trace().scheme().controls().isEmpty()) {
+            return Optional.empty();
+        }
         if (!sums.constant(k)) {
             var interval = evidence.answers().get(k).interval();
             return interval.note()

@@ -24,8 +24,19 @@ public final class Student {
         return of(Estimate.mean(sums, k), level);
     }
 
+    /// Widened on either side by what the estimate may be off beside chance.
     public static Interval of(Estimate estimate, double level) {
-        return of(estimate.value(), estimate.standardError(), estimate.degrees() + 1, level);
+        var interval = of(estimate.value(), estimate.standardError(), estimate.degrees() + 1, level);
+        double bias = estimate.bias();
+        return bias == 0
+                ? interval
+                : new Interval(
+                        interval.low() - bias,
+                        interval.high() + bias,
+                        level,
+                        KIND,
+                        ASSUMPTION + " Means that are known with an error are off by no more than its bound.",
+                        interval.note());
     }
 
     /// @param standardError of the mean; exactly 0 where every observation is equal, and then there is no interval

@@ -5,11 +5,11 @@ import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.LaneDraft.ControlDraft;
 import dev.leadline.model.LaneDraft.Mean;
+import dev.leadline.problem.Refusal;
 import dev.leadline.scheme.Control;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
@@ -19,64 +19,99 @@ final class Controls {
     private static final Pattern ASKED = Pattern.compile("asked\\[(\\d+)]");
 
     private final Draft draft;
-    private final List<Input> inputs;
+    private final ExactMean exact;
+    private final QuadratureMean quadrature;
     private final Findings findings;
 
-    Controls(Draft draft, List<Input> inputs, Findings findings) {
+    Controls(Draft draft, List<Input> inputs, Optional<Dependence> dependence, Findings findings) {
         this.draft = draft;
-        this.inputs = inputs;
+        this.exact = new ExactMean(inputs, dependence);
+        this.quadrature = new QuadratureMean(inputs, dependence);
         this.findings = findings;
     }
 
     /// Those whose mean is known.
-    List<Control> of(LaneDraft lane, String path) {
+    ///
+    /// @param working the formulas of the question, then those of the control variates
+    List<Control> of(LaneDraft lane, Working working, String path) {
         var controls = new ArrayList<Control>();
         for (int c = 0; c < lane.controls().size(); c++) {
             ControlDraft control = lane.controls().get(c);
-            mean(control, path + ".controlVariates[" + c + "].mean")
-                    .ifPresent(mean -> controls.add(new Control(control.formula(), mean, 0)));
+            known(control, working, draft.asks().size() + c, path + ".controlVariates[" + c + "].mean")
+                    .ifPresent(controls::add);
         }
         return controls;
     }
 
-    private OptionalDouble mean(ControlDraft control, String path) {
+    private Optional<Control> known(ControlDraft control, Working working, int index, String path) {
+        String formula = control.formula();
         return switch (control.mean()) {
-            case Mean.Stated(double value) -> stated(value, path);
-            case Mean.Exact _ -> exact(control.formula(), path);
+            case Mean.Stated(double value) -> stated(formula, value, path);
+            case Mean.Exact _ -> {
+                try {
+                    yield Optional.of(new Control(formula, exact.of(working, index), 0));
+                } catch (Refusal refusal) {
+                    boolean canBe = isFound(control, working, index);
+                    findings.add(
+                            path,
+                            unknown(formula, "in closed form", refusal),
+                            "\"exact\" knows sums of products of independent inputs, to the fourth power.",
+                            canBe ? "Write \"mean\": \"quadrature\"." : "State the mean as a number.");
+                    yield Optional.empty();
+                }
+            }
             case Mean.Quadrature _ -> {
-                findings.add(
-                        path,
-                        "a mean by quadrature is not available",
-                        "The mean of a control variate is stated, or that of an input.");
-                yield OptionalDouble.empty();
+                try {
+                    var found = quadrature.of(working, index, text(control));
+                    yield Optional.of(new Control(formula, found.mean(), found.error()));
+                } catch (Refusal refusal) {
+                    findings.add(
+                            path,
+                            unknown(formula, "by quadrature", refusal),
+                            "\"quadrature\" integrates over up to 3 independent inputs, and its error must be small.",
+                            isExact(working, index)
+                                    ? "Write \"mean\": \"exact\"."
+                                    : "State the mean as a number, or choose another control variate.");
+                    yield Optional.empty();
+                }
             }
         };
     }
 
-    private OptionalDouble stated(double value, String path) {
-        if (!Double.isFinite(value)) {
-            findings.add(path, "mean is %s but must be finite".formatted(value), "It corrects the estimate.");
-            return OptionalDouble.empty();
-        }
-        return OptionalDouble.of(value);
+    private static String unknown(String formula, String how, Refusal refusal) {
+        return "the mean of %s is not known %s: %s"
+                .formatted(formula, how, refusal.problems().getFirst().primary());
     }
 
-    private OptionalDouble exact(String formula, String path) {
-        var input = inputs.stream()
-                .filter(i -> i.name().equals(Workings.composed(formula.strip())))
-                .findFirst();
-        double mean = input.map(i -> i.drawn().mean()).orElse(Double.NaN);
-        if (!Double.isFinite(mean)) {
-            findings.add(
-                    path,
-                    input.isPresent()
-                            ? "%s has no finite mean".formatted(formula)
-                            : "the mean of %s is not known in closed form".formatted(formula),
-                    "\"exact\" is the mean of an input.",
-                    input.isPresent() ? "Choose another control variate." : "State the mean as a number.");
-            return OptionalDouble.empty();
+    private boolean isFound(ControlDraft control, Working working, int index) {
+        try {
+            quadrature.of(working, index, text(control));
+            return true;
+        } catch (Refusal _) {
+            return false;
         }
-        return OptionalDouble.of(mean);
+    }
+
+    private boolean isExact(Working working, int index) {
+        try {
+            exact.of(working, index);
+            return true;
+        } catch (Refusal _) {
+            return false;
+        }
+    }
+
+    /// The formula with everything that it is made of.
+    private String text(ControlDraft control) {
+        return "%s\n%s\n%s".formatted(control.formula(), draft.steps(), Workings.constants(draft));
+    }
+
+    private Optional<Control> stated(String formula, double value, String path) {
+        if (!Double.isFinite(value)) {
+            findings.add(path, "mean is %s but must be finite".formatted(value), "It corrects the estimate.");
+            return Optional.empty();
+        }
+        return Optional.of(new Control(formula, value, 0));
     }
 
     /// The formulas of the question, then those of the control variates; empty where one of the latter is not sound.

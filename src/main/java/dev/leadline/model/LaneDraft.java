@@ -12,6 +12,8 @@ import java.util.stream.Stream;
 ///
 /// @param points word of the layout
 /// @param nominalShare share of the draws from the inputs' own densities; empty means a tenth
+/// @param crossFitted whether coefficients of control variates come from other observations than they
+///     correct
 public record LaneDraft(
         String name,
         String points,
@@ -19,18 +21,20 @@ public record LaneDraft(
         DrawFrom drawFrom,
         OptionalDouble nominalShare,
         boolean selfNormalised,
-        List<ControlDraft> controls) {
+        List<ControlDraft> controls,
+        boolean crossFitted) {
     public LaneDraft {
         controls = List.copyOf(controls);
     }
 
     public static LaneDraft of(String name, String points) {
-        return new LaneDraft(name, points, Settings.NONE, DrawFrom.NOTHING, OptionalDouble.empty(), false, List.of());
+        return new LaneDraft(
+                name, points, Settings.NONE, DrawFrom.NOTHING, OptionalDouble.empty(), false, List.of(), false);
     }
 
     /// The same under another name.
     public LaneDraft named(String other) {
-        return new LaneDraft(other, points, settings, drawFrom, nominalShare, selfNormalised, controls);
+        return new LaneDraft(other, points, settings, drawFrom, nominalShare, selfNormalised, controls, crossFitted);
     }
 
     /// What a layout may be told; each layout takes some of it.

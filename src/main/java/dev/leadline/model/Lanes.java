@@ -59,7 +59,7 @@ final class Lanes {
                         draft,
                         working,
                         new Proposals(inputs, dependence, densities, findings),
-                        new Controls(draft, inputs, findings),
+                        new Controls(draft, inputs, dependence, findings),
                         findings)
                 .all();
     }
@@ -133,8 +133,16 @@ final class Lanes {
         }
         var drawFrom = proposals.of(lane, path);
         Optional<Adapted> adapted = proposals.adaptation(lane, path).map(Adapted.class::cast);
-        List<Control> controlled = controls.of(lane, path);
-        Optional<Working> formulas = controlled.isEmpty() ? Optional.empty() : controls.working(lane, path);
+        Optional<Working> formulas = lane.controls().isEmpty() ? Optional.empty() : controls.working(lane, path);
+        List<Control> controlled =
+                formulas.map(all -> controls.of(lane, all, path)).orElse(List.of());
+        if (lane.crossFitted() && lane.controls().isEmpty()) {
+            findings.add(
+                    path + ".crossFitted",
+                    "crossFitted has no control variates to fit",
+                    "It says where the coefficients of control variates come from.",
+                    "Leave it out, or add \"controlVariates\".");
+        }
         if (lane.selfNormalised() && !controlled.isEmpty()) {
             findings.add(
                     path + ".controlVariates",
@@ -147,7 +155,10 @@ final class Lanes {
         }
         points.ifPresent(p -> checkReplicates(p, controlled.size(), path));
         return points.map(p -> new Lane(
-                lane.name(), new Scheme(p, drawFrom, controlled, adapted), draft.commonRandomNumbers(), formulas));
+                lane.name(),
+                new Scheme(p, drawFrom, controlled, lane.crossFitted(), adapted),
+                draft.commonRandomNumbers(),
+                formulas));
     }
 
     private void checkReplicates(Points points, int controls, String path) {

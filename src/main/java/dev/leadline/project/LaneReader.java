@@ -42,7 +42,8 @@ final class LaneReader {
                         .orElse(DrawFrom.NOTHING),
                 fields.number("nominalShare"),
                 fields.flag("selfNormalised"),
-                controls(fields));
+                controls(fields),
+                fields.flag("crossFitted"));
         fields.close(Map.of());
         return lane;
     }

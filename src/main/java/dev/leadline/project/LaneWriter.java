@@ -36,6 +36,9 @@ final class LaneWriter {
                     "controlVariates",
                     Json.list(lane.controls().stream().map(LaneWriter::control).toList()));
         }
+        if (lane.crossFitted()) {
+            fields.put("crossFitted", Json.of(true));
+        }
         return fields.build();
     }
 

@@ -65,7 +65,7 @@ public final class RunJson {
         List<Answer> answers = last.map(Mark::answers).orElse(List.of());
         var json = Json.object()
                 .put("lane", trace.lane())
-                .put("scheme", trace.scheme())
+                .put("scheme", trace.scheme().inWords())
                 .put("draws", Json.of(last.map(Mark::draws).orElse(0L)))
                 .put(
                         "observations",
@@ -128,7 +128,12 @@ public final class RunJson {
                 .put("band", new Json.Null());
         interval.note().ifPresent(note -> json.put("intervalNote", note));
         if (answer.estimand() instanceof Estimand.Probability) {
-            answer.hits().ifPresent(hits -> json.put("hits", Json.of(hits)).put("oneSided", oneSided(answer, hits)));
+            answer.hits().ifPresent(hits -> {
+                json.put("hits", Json.of(hits));
+                if (interval.kind().equals(ClopperPearson.KIND)) {
+                    json.put("oneSided", oneSided(answer, hits));
+                }
+            });
             if (interval.kind().equals(NoHit.KIND)) {
                 json.put("oneSided", Json.orNull(interval.high()));
             }

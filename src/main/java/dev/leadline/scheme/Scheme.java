@@ -5,14 +5,21 @@ import java.util.Optional;
 
 /// How a lane samples: a layout of points, optionally other densities to draw from and control variates.
 ///
+/// @param crossFitted whether the coefficients of the control variates come from other observations than those they
+///     correct
 /// @param adapted a density of the points that is, or was, found before the run; never beside `drawFrom`
-public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> controls, Optional<Adapted> adapted) {
+public record Scheme(
+        Points points,
+        Optional<Proposal> drawFrom,
+        List<Control> controls,
+        boolean crossFitted,
+        Optional<Adapted> adapted) {
     public Scheme {
         controls = List.copyOf(controls);
     }
 
     public Scheme(Points points, Optional<Proposal> drawFrom, List<Control> controls) {
-        this(points, drawFrom, controls, Optional.empty());
+        this(points, drawFrom, controls, false, Optional.empty());
     }
 
     public static Scheme of(Points points) {
@@ -70,12 +77,12 @@ public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> c
 
     /// This scheme with what was found.
     public Scheme with(Tuned tuned) {
-        return new Scheme(points, drawFrom, controls, Optional.of(tuned));
+        return new Scheme(points, drawFrom, controls, crossFitted, Optional.of(tuned));
     }
 
     /// This scheme as a lane of so many draws has it.
     public Scheme within(long draws) {
-        return new Scheme(points.within(draws / turns()), drawFrom, controls, adapted);
+        return new Scheme(points.within(draws / turns()), drawFrom, controls, crossFitted, adapted);
     }
 
     /// As `independent, v from gumbel(42, 4), 10 % from its own, 2 control variates`.
@@ -87,6 +94,6 @@ public record Scheme(Points points, Optional<Proposal> drawFrom, List<Control> c
         String controlled = controls.isEmpty()
                 ? ""
                 : controls.size() == 1 ? ", 1 control variate" : ", " + controls.size() + " control variates";
-        return points.inWords() + weighted + controlled;
+        return points.inWords() + weighted + controlled + (crossFitted ? ", cross-fitted" : "");
     }
 }

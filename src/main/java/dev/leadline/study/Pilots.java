@@ -78,7 +78,8 @@ final class Pilots implements AutoCloseable {
                 draft.drawFrom(),
                 draft.nominalShare(),
                 draft.selfNormalised(),
-                draft.controls());
+                draft.controls(),
+                draft.crossFitted());
     }
 
     private Optional<Pilot> run(LaneDraft draft, Lane lane, String address) throws InterruptedException {

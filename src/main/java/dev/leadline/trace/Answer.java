@@ -8,7 +8,7 @@ import java.util.OptionalLong;
 ///
 /// @param estimate `NaN` where there is none yet
 /// @param standardError `NaN` where none can be said (no spread or no hit seen yet)
-/// @param hits of an event, for probabilities under unweighted draws
+/// @param hits of an event, for probabilities where independent draws count 1 each
 /// @param observations that entered the estimate
 /// @param nonFinite evaluations left out because they were not finite
 public record Answer(

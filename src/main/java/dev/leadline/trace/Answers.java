@@ -1,6 +1,7 @@
 package dev.leadline.trace;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.CrossFit;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Estimate;
 import dev.leadline.estimate.Regression;
@@ -15,7 +16,9 @@ import dev.leadline.model.Ask;
 import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Question;
+import dev.leadline.scheme.Control;
 import dev.leadline.scheme.Growing;
+import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.Scheme;
@@ -35,21 +38,30 @@ public final class Answers {
         return answers == 1 ? question.confidence() : 1 - (1 - question.confidence()) / answers;
     }
 
+    /// @param sums of every observation
     public static List<Answer> of(Question question, Scheme scheme, Accumulator sums) {
+        return of(question, scheme, sums, List.of(sums));
+    }
+
+    /// @param sums of every observation
+    /// @param blocks the same, in parts that are independent of each other
+    public static List<Answer> of(Question question, Scheme scheme, Accumulator sums, List<Accumulator> blocks) {
         double level = level(question);
         var answers = new ArrayList<Answer>();
         for (int k = 0; k < question.asks().size(); k++) {
-            answers.add(answer(question, scheme, sums, k, level));
+            answers.add(answer(question, scheme, sums, blocks, k, level));
         }
         return answers;
     }
 
-    private static Answer answer(Question question, Scheme scheme, Accumulator sums, int k, double level) {
+    private static Answer answer(
+            Question question, Scheme scheme, Accumulator sums, List<Accumulator> blocks, int k, double level) {
         Ask ask = question.asks().get(k);
-        if (ask.estimand() instanceof Estimand.Probability && scheme.isPlain()) {
-            long hits = sums.hits(k).orElseThrow();
-            var interval = ClopperPearson.of(hits, sums.count(), sums.excluded(), level);
-            return answer(ask, sums, Estimate.mean(sums, k), interval, OptionalLong.of(hits));
+        OptionalLong hits =
+                ask.estimand() instanceof Estimand.Probability ? hits(scheme, sums, k) : OptionalLong.empty();
+        if (scheme.isPlain() && hits.isPresent()) {
+            var interval = ClopperPearson.of(hits.getAsLong(), sums.count(), sums.excluded(), level);
+            return answer(ask, sums, Estimate.mean(sums, k), interval, hits);
         }
         if (scheme.points() instanceof Repetitions repetitions) {
             return climbed(ask, repetitions, sums, level);
@@ -66,8 +78,22 @@ public final class Answers {
                     new Estimate(value, ToRounding.standardError(value), sums.count() - 1),
                     ToRounding.of(value, sums.count(), level));
         }
-        Estimate estimate = estimate(scheme, sums, k, question.asks().size());
-        return answer(ask, sums, estimate, bounded(ask, Student.of(estimate, level)));
+        int asks = question.asks().size();
+        Optional<String> hindrance =
+                scheme.controls().isEmpty() ? Optional.empty() : hindrance(scheme, sums, blocks, k, asks);
+        if (hindrance.isPresent()) {
+            var none = new Estimate(Double.NaN, Double.NaN, 0);
+            return answer(ask, sums, none, Student.none(level, hindrance.get()), hits);
+        }
+        Estimate estimate = scheme.crossFitted()
+                ? new CrossFit(blocks, k, asks, scheme.controls().size()).estimate(errors(scheme))
+                : estimate(scheme, sums, k, asks);
+        var interval = !scheme.controls().isEmpty() && estimate.standardError() == 0 && !sums.constant(k)
+                ? Student.none(
+                        level,
+                        "the control variates explain every outcome seen so far: no spread to build an interval from")
+                : Student.of(estimate, level);
+        return answer(ask, sums, estimate, bounded(ask, interval), hits);
     }
 
     private static boolean isZero(Accumulator sums, int k) {
@@ -92,6 +118,35 @@ public final class Answers {
                                 && !ToRounding.isMet(sums.min(sums.components() - 1), sums.max(sums.components() - 1)));
     }
 
+    /// Of single draws that count 1 each.
+    private static OptionalLong hits(Scheme scheme, Accumulator sums, int k) {
+        return scheme.points() instanceof Independent && !scheme.isWeighted() ? sums.hits(k) : OptionalLong.empty();
+    }
+
+    /// Why the coefficients of the control variates cannot be fitted yet, and what number of observations
+    /// would do.
+    private static Optional<String> hindrance(
+            Scheme scheme, Accumulator sums, List<Accumulator> blocks, int k, int asks) {
+        int controls = scheme.controls().size();
+        long wanted = Regression.fewest(controls);
+        String needed = controls == 1
+                ? "1 control variate needs at least %d observations".formatted(wanted)
+                : "%d control variates need at least %d observations".formatted(controls, wanted);
+        if (sums.count() < wanted) {
+            return Optional.of("%s, 10 for each; so far there %s"
+                    .formatted(needed, sums.count() == 1 ? "is 1" : "are " + sums.count()));
+        }
+        long others = scheme.crossFitted() ? new CrossFit(blocks, k, asks, controls).fewest() : wanted;
+        return others >= wanted
+                ? Optional.empty()
+                : Optional.of("%s outside every part of the draws that is corrected; so far there are %d of %d"
+                        .formatted(needed, others, sums.count()));
+    }
+
+    private static double[] errors(Scheme scheme) {
+        return scheme.controls().stream().mapToDouble(Control::error).toArray();
+    }
+
     /// The estimate alone, before its interval.
     ///
     /// @param asks components before those of the control variates
@@ -105,7 +160,7 @@ public final class Answers {
         }
         return scheme.controls().isEmpty()
                 ? Estimate.mean(sums, k)
-                : Regression.of(sums, k, asks, scheme.controls().size());
+                : new Regression(sums, k, asks, scheme.controls().size()).estimate(errors(scheme));
     }
 
     /// Of splitting: no answer once a repetition has given up, for those that did not are the lucky ones.
@@ -142,7 +197,7 @@ public final class Answers {
                 ask.unit(),
                 ask.label(),
                 estimate.value(),
-                estimate.standardError() == 0 ? Double.NaN : estimate.standardError(),
+                estimate.standardError() == 0 ? Double.NaN : estimate.error(),
                 interval,
                 hits,
                 sums.count(),

@@ -2,13 +2,14 @@ package dev.leadline.trace;
 
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Extremes;
+import dev.leadline.scheme.Scheme;
 import java.util.List;
 import java.util.Optional;
 
 /// What a lane has shown so far. Immutable: nobody changes the accumulators in it.
 ///
 /// @param lane its name
-/// @param scheme in words
+/// @param scheme as it was run
 /// @param marks oldest first; empty before the first item is in
 /// @param blocks sums of consecutive blocks of draws, at most 64 (see [Blocks])
 /// @param extremes of the draws one by one: outcomes by their weights, control variates likewise, and the weights;
@@ -17,7 +18,7 @@ import java.util.Optional;
 /// @param stopReason empty while the lane runs or pauses
 public record Trace(
         String lane,
-        String scheme,
+        Scheme scheme,
         List<Mark> marks,
         List<Accumulator> blocks,
         Optional<Extremes> extremes,
@@ -32,7 +33,7 @@ public record Trace(
     /// Of a lane whose draws count 1 each.
     public Trace(
             String lane,
-            String scheme,
+            Scheme scheme,
             List<Mark> marks,
             List<Accumulator> blocks,
             List<Failure> failures,

@@ -35,7 +35,7 @@ class TuningTest {
         var inputs =
                 IntStream.range(0, question.inputs().size()).boxed().collect(Collectors.toCollection(TreeSet::new));
         var wish = new Adaptation(way, inputs, Share.of(.1));
-        return Lane.of("B", new Scheme(new Independent(), Optional.empty(), List.of(), Optional.of(wish)));
+        return Lane.of("B", new Scheme(new Independent(), Optional.empty(), List.of(), false, Optional.of(wish)));
     }
 
     private static Accumulator run(Question question, Way way, long seed, int draws) {

@@ -198,7 +198,9 @@ class GroundsTest {
         total.add(new double[][] {values}, 0, values.length);
         var mark = new Mark(values.length, 0, Answers.of(question, Scheme.of(new Independent()), total));
         return Grounds.of(
-                question, new Trace("A", "independent", List.of(mark), List.of(total), List.of(), Optional.empty()));
+                question,
+                new Trace(
+                        "A", Scheme.of(new Independent()), List.of(mark), List.of(total), List.of(), Optional.empty()));
     }
 
     /// Few draws of lopsided outcomes lie 4 standard errors off far more often than one time in 10,000: 30 of a
@@ -256,7 +258,8 @@ class GroundsTest {
             total.merge(block);
         }
         var mark = new Mark(2_000, 0, Answers.of(question, Scheme.of(new Independent()), total));
-        return new Trace("A", "independent", List.of(mark), blocks.snapshot(), List.of(), Optional.empty());
+        return new Trace(
+                "A", Scheme.of(new Independent()), List.of(mark), blocks.snapshot(), List.of(), Optional.empty());
     }
 
     @Test
@@ -294,7 +297,7 @@ class GroundsTest {
     @Test
     void nothingIsJudgedBeforeTheFirstMark() {
         var question = new Questions().uniform("x", 0, 1).mean("x").build();
-        var empty = new Trace("A", "independent", List.of(), List.of(), List.of(), Optional.empty());
+        var empty = new Trace("A", Scheme.of(new Independent()), List.of(), List.of(), List.of(), Optional.empty());
         assertEquals(List.of(), Grounds.of(question, empty));
     }
 }

@@ -121,9 +121,17 @@ class ProjectFileTest {
                             List.of(
                                     new ControlDraft("v", new Mean.Exact()),
                                     new ControlDraft("v^2", new Mean.Stated(3)),
-                                    new ControlDraft("x", new Mean.Quadrature()))),
+                                    new ControlDraft("x", new Mean.Quadrature())),
+                            true),
                     new LaneDraft(
-                            "C", "independent", Settings.NONE, others(), OptionalDouble.empty(), false, List.of())));
+                            "C",
+                            "independent",
+                            Settings.NONE,
+                            others(),
+                            OptionalDouble.empty(),
+                            false,
+                            List.of(),
+                            false)));
 
     private static final long MUTATED_PROJECTS = 1_000;
 

@@ -66,7 +66,7 @@ class ComparisonCoverageTest {
         }
         long draws = (long) observations.length * lane.scheme().drawsPerObservation();
         var mark = new Mark(draws, 0, Answers.of(QUESTION, lane.scheme(), total));
-        return new Trace(lane.name(), "", List.of(mark), blocks, List.of(), Optional.empty());
+        return new Trace(lane.name(), lane.scheme(), List.of(mark), blocks, List.of(), Optional.empty());
     }
 
     private static void gate(double expected, int held, int repetitions) {

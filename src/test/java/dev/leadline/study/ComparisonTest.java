@@ -164,7 +164,7 @@ class ComparisonTest {
             }
             marks.add(new Mark((long) replicates << m, 0, Answers.of(OF_ROUNDS, lane.scheme(), total)));
         }
-        return new Trace(lane.name(), "", marks, blocks, List.of(), Optional.empty());
+        return new Trace(lane.name(), lane.scheme(), marks, blocks, List.of(), Optional.empty());
     }
 
     @Test

@@ -4,6 +4,8 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.Scheme;
 import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
@@ -16,7 +18,7 @@ class BlocksTest {
     }
 
     private static Trace trace(Blocks blocks) {
-        return new Trace("A", "", List.of(), blocks.snapshot(), List.of(), Optional.empty());
+        return new Trace("A", Scheme.of(new Independent()), List.of(), blocks.snapshot(), List.of(), Optional.empty());
     }
 
     @Test

@@ -84,7 +84,8 @@ record DensityAt(
                 new DrawFrom.Inputs(others),
                 lane.nominalShare(),
                 lane.selfNormalised(),
-                lane.controls());
+                lane.controls(),
+                lane.crossFitted());
     }
 
     private static Optional<DensityDraft> of(From from) {

@@ -15,7 +15,14 @@ record AdaptedDensities(String way, String reason) implements Candidate {
     @Override
     public List<Offer> offers(Project project, Gains gains) {
         var lane = new LaneDraft(
-                "", "independent", Settings.NONE, new DrawFrom.Adapted(way), OptionalDouble.empty(), false, List.of());
+                "",
+                "independent",
+                Settings.NONE,
+                new DrawFrom.Adapted(way),
+                OptionalDouble.empty(),
+                false,
+                List.of(),
+                false);
         return List.of(new Offer(lane, reason));
     }
 }

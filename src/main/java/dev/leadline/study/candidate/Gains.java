@@ -72,7 +72,8 @@ public final class Gains {
                 others.isEmpty() ? DrawFrom.NOTHING : new DrawFrom.Inputs(others),
                 OptionalDouble.empty(),
                 false,
-                controls);
+                controls,
+                false);
     }
 
     private List<Input> inputs() {

@@ -39,7 +39,8 @@ record InputControls() implements Candidate {
                 false,
                 names.stream()
                         .map(name -> new ControlDraft(name, new Mean.Exact()))
-                        .toList());
+                        .toList(),
+                false);
         return List.of(new Offer(
                 lane,
                 "the known %s of %s %s what follows the inputs in straight lines"

@@ -13,6 +13,8 @@ import dev.leadline.ground.Ground;
 import dev.leadline.model.DataFiles;
 import dev.leadline.model.LaneDraft;
 import dev.leadline.project.ProjectFile;
+import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.Scheme;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
 import dev.leadline.study.StudyState.Activity;
@@ -198,7 +200,8 @@ class WorkbenchViewModelTest {
         studies.listener.accept(new StudyState(
                 Activity.RUNNING,
                 List.of(new LaneState(
-                        new Trace("A", "independent", List.of(), List.of(), List.of(), Optional.empty()), List.of())),
+                        new Trace("A", Scheme.of(new Independent()), List.of(), List.of(), List.of(), Optional.empty()),
+                        List.of())),
                 List.of()));
         background.finishAll();
         assertEquals("", WorkbenchViewModel.objectionsOf(model.run().state().get(), "A"));
