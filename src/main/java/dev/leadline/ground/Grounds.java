@@ -33,6 +33,8 @@ public final class Grounds {
             LargestShare.judge(evidence, k).ifPresent(grounds::add);
         }
         MeanWeight.judge(evidence).ifPresent(grounds::add);
+        Mixing.judge(evidence).ifPresent(grounds::add);
+        Stages.judge(evidence).ifPresent(grounds::add);
         grounds.addAll(ControlVariates.judge(evidence));
         grounds.add(FailedEvaluations.judge(evidence));
         NumericalTolerance.judge(evidence).ifPresent(grounds::add);

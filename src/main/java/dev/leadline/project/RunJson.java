@@ -79,6 +79,7 @@ public final class RunJson {
                 .put(
                         "grounds",
                         Json.list(lane.grounds().stream().map(RunJson::ground).toList()));
+        trace.scheme().tuned().ifPresent(tuned -> json.put("tuning", TuningJson.of(project.question(), tuned)));
         trace.extremes().filter(_ -> last.isPresent()).ifPresent(draws -> json.put("weights", weights(trace, draws)));
         if (!trace.failures().isEmpty()) {
             json.put(

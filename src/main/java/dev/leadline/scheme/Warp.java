@@ -21,6 +21,11 @@ public sealed interface Warp {
             edges = edges.clone();
         }
 
+        @Override
+        public double[] edges() {
+            return edges.clone();
+        }
+
         public double moved(double v) {
             int cells = edges.length - 1;
             int cell = (int) (v * cells);
