@@ -45,7 +45,8 @@ public record Weights(String title, long seed, List<Weighed> lanes) implements S
                     points.add(new Point(i + 1, greatest[i] / mean, Double.NaN, Double.NaN));
                 }
             }
-            return new Weighed(trace.lane(), trace.scheme().inWords(), points, extremes.draws(), extremes.effective(weights));
+            return new Weighed(
+                    trace.lane(), trace.scheme().inWords(), points, extremes.draws(), extremes.effective(weights));
         }
 
         /// Part of all weight that the largest ones up to a rank have.

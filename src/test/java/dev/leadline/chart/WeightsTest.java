@@ -5,6 +5,8 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.estimate.Extremes;
+import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.Scheme;
 import dev.leadline.trace.Trace;
 import java.util.List;
 import java.util.Optional;
@@ -17,7 +19,7 @@ class WeightsTest {
         extremes.add(new double[][] {{1, 0, 0, 0}, {1, 4, 1, 2}}, 4);
         return new Trace(
                 "B",
-                "independent, v from elsewhere",
+                Scheme.of(new Independent()),
                 List.of(),
                 List.of(),
                 Optional.of(extremes),
@@ -26,7 +28,7 @@ class WeightsTest {
     }
 
     private static Trace plain() {
-        return new Trace("A", "independent", List.of(), List.of(), List.of(), Optional.empty());
+        return new Trace("A", Scheme.of(new Independent()), List.of(), List.of(), List.of(), Optional.empty());
     }
 
     private static Weights of(Trace... traces) {

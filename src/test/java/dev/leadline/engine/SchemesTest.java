@@ -63,7 +63,7 @@ class SchemesTest {
         }
         var all = IntStream.range(0, inputs).boxed().collect(Collectors.toCollection(TreeSet::new));
         var wish = new Adaptation(Way.valueOf(name), all, Share.of(.1));
-        return new Scheme(new Independent(), Optional.empty(), List.of(), Optional.of(wish));
+        return new Scheme(new Independent(), Optional.empty(), List.of(), false, Optional.of(wish));
     }
 
     static Stream<Arguments> integrals() {

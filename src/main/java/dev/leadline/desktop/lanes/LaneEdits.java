@@ -34,12 +34,20 @@ final class LaneEdits {
                 l.drawFrom(),
                 l.nominalShare(),
                 l.selfNormalised(),
-                l.controls(), l.crossFitted());
+                l.controls(),
+                l.crossFitted());
     }
 
     private static LaneDraft settings(LaneDraft l, Settings settings) {
         return new LaneDraft(
-                l.name(), l.points(), settings, l.drawFrom(), l.nominalShare(), l.selfNormalised(), l.controls(), l.crossFitted());
+                l.name(),
+                l.points(),
+                settings,
+                l.drawFrom(),
+                l.nominalShare(),
+                l.selfNormalised(),
+                l.controls(),
+                l.crossFitted());
     }
 
     /// A count of the layout, by the word of the file.
@@ -97,7 +105,8 @@ final class LaneEdits {
                 drawFrom,
                 weighted ? l.nominalShare() : OptionalDouble.empty(),
                 weighted && stated && l.selfNormalised(),
-                l.controls(), l.crossFitted());
+                l.controls(),
+                l.crossFitted());
     }
 
     /// @param other empty for the input's own density
@@ -110,16 +119,39 @@ final class LaneEdits {
     }
 
     static LaneDraft nominalShare(LaneDraft l, OptionalDouble share) {
-        return new LaneDraft(l.name(), l.points(), l.settings(), l.drawFrom(), share, l.selfNormalised(), l.controls(), l.crossFitted());
+        return new LaneDraft(
+                l.name(),
+                l.points(),
+                l.settings(),
+                l.drawFrom(),
+                share,
+                l.selfNormalised(),
+                l.controls(),
+                l.crossFitted());
     }
 
     static LaneDraft selfNormalised(LaneDraft l, boolean self) {
-        return new LaneDraft(l.name(), l.points(), l.settings(), l.drawFrom(), l.nominalShare(), self, l.controls(), l.crossFitted());
+        return new LaneDraft(
+                l.name(),
+                l.points(),
+                l.settings(),
+                l.drawFrom(),
+                l.nominalShare(),
+                self,
+                l.controls(),
+                l.crossFitted());
     }
 
     static LaneDraft controls(LaneDraft l, List<ControlDraft> controls) {
         return new LaneDraft(
-                l.name(), l.points(), l.settings(), l.drawFrom(), l.nominalShare(), l.selfNormalised(), controls, l.crossFitted() && !controls.isEmpty());
+                l.name(),
+                l.points(),
+                l.settings(),
+                l.drawFrom(),
+                l.nominalShare(),
+                l.selfNormalised(),
+                controls,
+                l.crossFitted() && !controls.isEmpty());
     }
 
     private static <V> SequencedMap<String, V> with(SequencedMap<String, V> map, String key, Optional<V> value) {
