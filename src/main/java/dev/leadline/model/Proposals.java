@@ -18,12 +18,14 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.SequencedMap;
 import java.util.SortedMap;
 import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.function.Supplier;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
+import java.util.stream.Stream;
 
 /// Makes what a lane's inputs are drawn from of its draft.
 final class Proposals {
@@ -52,6 +54,7 @@ final class Proposals {
         Share share = share(lane.nominalShare(), path);
         return switch (lane.drawFrom()) {
             case DrawFrom.Adapted _ -> Optional.empty();
+            case DrawFrom.Inputs(var others) when isAdapted(others) -> Optional.empty();
             case DrawFrom.Inputs(var others) -> {
                 var found = new TreeMap<Integer, Density>();
                 var changes = new ArrayList<String>();
@@ -72,9 +75,27 @@ final class Proposals {
 
     /// The wish to find a density before the run; empty where the lane has none.
     Optional<Adaptation> adaptation(LaneDraft lane, String path) {
-        if (!(lane.drawFrom() instanceof DrawFrom.Adapted(String word))) {
-            return Optional.empty();
-        }
+        return switch (lane.drawFrom()) {
+            case DrawFrom.Adapted(String word) ->
+                way(word, path)
+                        .map(way -> adaptation(
+                                way, IntStream.range(0, inputs.size()).boxed(), lane, path));
+            case DrawFrom.Inputs(var others)
+            when isAdapted(others) -> {
+                var named = others.keySet().stream()
+                        .flatMap(name -> index(name, path + ".drawFrom." + name).stream())
+                        .toList();
+                yield Optional.of(adaptation(Adaptation.Way.CROSS_ENTROPY, named.stream(), lane, path));
+            }
+            case DrawFrom.Inputs _ -> Optional.empty();
+        };
+    }
+
+    private static boolean isAdapted(SequencedMap<String, Other> others) {
+        return !others.isEmpty() && others.values().stream().allMatch(Other.Adapt.class::isInstance);
+    }
+
+    private Optional<Adaptation.Way> way(String word, String path) {
         var way = Arrays.stream(Adaptation.Way.values())
                 .filter(w -> w.word().equals(word))
                 .findFirst();
@@ -83,8 +104,11 @@ final class Proposals {
                     path + ".drawFrom.adapt",
                     "adapt is \"%s\" but must be \"cross-entropy\" or \"grid\"".formatted(word),
                     "It is the way in which a density to draw from is found.");
-            return Optional.empty();
         }
+        return way;
+    }
+
+    private Adaptation adaptation(Adaptation.Way way, Stream<Integer> which, LaneDraft lane, String path) {
         if (lane.selfNormalised()) {
             findings.add(
                     path + ".selfNormalised",
@@ -92,8 +116,8 @@ final class Proposals {
                     "The density that is found is known with its factor.",
                     "Leave it out.");
         }
-        var all = IntStream.range(0, inputs.size()).boxed().collect(Collectors.toCollection(TreeSet::new));
-        return Optional.of(new Adaptation(way.get(), all, share(lane.nominalShare(), path)));
+        var chosen = which.collect(Collectors.toCollection(TreeSet::new));
+        return new Adaptation(way, chosen, share(lane.nominalShare(), path));
     }
 
     private static String words(Other other) {
@@ -164,9 +188,9 @@ final class Proposals {
             case Other.Adapt _ -> {
                 findings.add(
                         place,
-                        "a density that is found before the run is not available",
-                        "Densities to draw from are stated.",
-                        "Write the density itself, or a change of its own as {\"shift\": 3}.");
+                        "\"adapt\" beside densities that are stated is not available",
+                        "What is found before the run is found for every input of drawFrom together.",
+                        "Write \"adapt\" for each of them, or state them all.");
                 yield Optional.empty();
             }
         };

@@ -18,6 +18,7 @@ import dev.leadline.scheme.Tuned;
 import dev.leadline.scheme.Warp;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
@@ -125,6 +126,15 @@ class TuningTest {
         assertTrue(found.parts().stream().noneMatch(part -> part.warps().containsKey(1)));
         double mean = ((Warp.OfScores) found.parts().getFirst().warps().get(0)).mean();
         assertEquals(3, mean, .3, "the best normal density has the mean 3");
+    }
+
+    @Test
+    void onlyTheInputsThatAreNamedAreMoved() {
+        var question = normals(2, "x1 + x2 > 5");
+        var wish = new Adaptation(Way.CROSS_ENTROPY, new TreeSet<>(List.of(1)), Share.of(.1));
+        var lane = Lane.of("B", new Scheme(new Independent(), Optional.empty(), List.of(), false, Optional.of(wish)));
+        var found = Tuning.found(question, lane, 3).scheme().tuned().orElseThrow();
+        assertTrue(found.parts().stream().allMatch(part -> part.warps().keySet().equals(Set.of(1))));
     }
 
     @Test
