@@ -28,6 +28,7 @@ final class Pilots implements AutoCloseable {
     private final Project project;
     private final long seed;
     private final long draws;
+    private final Clock clock;
     private final Workers workers;
 
     /// A lane that was run.
@@ -35,10 +36,18 @@ final class Pilots implements AutoCloseable {
     /// @param draft as a project has it
     record Pilot(LaneDraft draft, Lane lane, Recipe recipe, Trace trace) {}
 
-    Pilots(Project project, long seed, long draws, int threads) {
+    /// How long a draw takes in one pilot and in another.
+    interface Clock {
+        Clock OF_PROCESSOR = (one, other, draws) -> Timing.of(one.recipe(), draws, other.recipe(), draws, PIECE);
+
+        Timing time(Pilot one, Pilot other, long draws);
+    }
+
+    Pilots(Project project, long seed, long draws, int threads, Clock clock) {
         this.project = project;
         this.seed = seed;
         this.draws = draws;
+        this.clock = clock;
         this.workers = new Workers(threads);
     }
 
@@ -106,7 +115,7 @@ final class Pilots implements AutoCloseable {
     }
 
     Timing time(Pilot one, Pilot other) {
-        return Timing.of(one.recipe(), draws, other.recipe(), draws, PIECE);
+        return clock.time(one, other, draws);
     }
 
     @Override

@@ -63,13 +63,19 @@ public record Suggestion(List<Row> rows, Row recommended, long draws) {
     /// @param listener gets the name of each scheme before it is tried
     public static Suggestion of(Project project, long seed, long draws, int threads, Consumer<String> listener)
             throws InterruptedException {
-        return of(project, seed, draws, threads, listener, Candidates.ALL);
+        return of(project, seed, draws, threads, listener, Candidates.ALL, Pilots.Clock.OF_PROCESSOR);
     }
 
     static Suggestion of(
-            Project project, long seed, long draws, int threads, Consumer<String> listener, List<Candidate> candidates)
+            Project project,
+            long seed,
+            long draws,
+            int threads,
+            Consumer<String> listener,
+            List<Candidate> candidates,
+            Pilots.Clock clock)
             throws InterruptedException {
-        try (var pilots = new Pilots(project, seed, draws, threads)) {
+        try (var pilots = new Pilots(project, seed, draws, threads, clock)) {
             return new Suggesting(project, pilots, freeName(project), listener).suggestion(draws, candidates);
         }
     }

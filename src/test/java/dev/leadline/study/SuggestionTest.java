@@ -5,6 +5,8 @@ import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.engine.Questions;
+import dev.leadline.engine.Timing;
+import dev.leadline.estimate.Logarithm;
 import dev.leadline.interval.Ratio;
 import dev.leadline.model.LaneDraft;
 import dev.leadline.model.LaneDraft.DrawFrom;
@@ -23,6 +25,13 @@ import org.junit.jupiter.api.Test;
 /// Each scheme is recommended for a question that it is made for, and plain draws for one that none helps.
 class SuggestionTest {
     private static final long DRAWS = 32_768;
+
+    /// Draws of all schemes take as long here: what machines are busy with must not decide a test.
+    private static final Pilots.Clock EVEN = (_, _, _) -> {
+        var same = new Logarithm(0, 1e-6, 30);
+        return new Timing(same, same, same);
+    };
+
     private static final String NORMAL = "{\"family\": \"normal\", \"mean\": 0, \"sd\": 1}";
 
     /// @param density of each of the inputs `x1`, `x2` …
@@ -40,7 +49,7 @@ class SuggestionTest {
     }
 
     private static Suggestion suggested(Project project) throws InterruptedException {
-        return Suggestion.of(project, 5, DRAWS, 1, _ -> {});
+        return Suggestion.of(project, 5, DRAWS, 1, _ -> {}, Candidates.ALL, EVEN);
     }
 
     private static LaneDraft recommended(Suggestion suggestion) {
@@ -69,7 +78,7 @@ class SuggestionTest {
                 .filter(candidate -> Arrays.stream(words)
                         .noneMatch(word -> candidate.toString().contains(word)))
                 .toList();
-        return Suggestion.of(project, 5, DRAWS, 1, _ -> {}, some);
+        return Suggestion.of(project, 5, DRAWS, 1, _ -> {}, some, EVEN);
     }
 
     /// Two quarters of the plane are worth something else than the others, and no input tells by itself.
@@ -121,7 +130,7 @@ class SuggestionTest {
         Candidate same = (_, _) -> List.of(new Offer(LaneDraft.of("", "independent"), "chance"));
         int wrong = 0;
         for (int seed = 0; seed < 20; seed++) {
-            var suggestion = Suggestion.of(project, seed, 8_192, 1, _ -> {}, List.of(same));
+            var suggestion = Suggestion.of(project, seed, 8_192, 1, _ -> {}, List.of(same), EVEN);
             wrong += suggestion.recommended().reason().startsWith("Chance") ? 1 : 0;
         }
         int seen = wrong;
@@ -132,7 +141,7 @@ class SuggestionTest {
     @Test
     void pilotsDrawNumbersOfTheirOwn() throws InterruptedException {
         var project = project(1, "{\"family\": \"uniform\", \"from\": 0, \"to\": 1}", "{\"mean\": \"exp(x1)\"}");
-        try (var pilots = new Pilots(project, 5, 1_000, 1);
+        try (var pilots = new Pilots(project, 5, 1_000, 1, EVEN);
                 var study = Study.start(project.question(), Questions.plan(1_000, 5), 1, _ -> {})) {
             var pilot = pilots.run(LaneDraft.of("A", "independent"), "A").orElseThrow();
             assertNotEquals(
@@ -214,7 +223,7 @@ class SuggestionTest {
         List<Candidate> some = Candidates.ALL.stream()
                 .filter(candidate -> candidate.toString().contains("splitting"))
                 .toList();
-        var suggestion = Suggestion.of(corner, 5, 1_000_000, 1, _ -> {}, some);
+        var suggestion = Suggestion.of(corner, 5, 1_000_000, 1, _ -> {}, some, EVEN);
         assertEquals("splitting", gainsHundredfold(suggestion).points());
     }
 }
