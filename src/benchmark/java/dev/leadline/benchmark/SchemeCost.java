@@ -113,7 +113,7 @@ public final class SchemeCost {
         var wish = new Adaptation(way, new TreeSet<>(List.of(0)), Share.of(.1));
         return new Work(
                 "independent, " + way.word(),
-                new Scheme(new Independent(), Optional.empty(), List.of(), Optional.of(wish)));
+                new Scheme(new Independent(), Optional.empty(), List.of(), false, Optional.of(wish)));
     }
 
     private static double median(double[] values) {
