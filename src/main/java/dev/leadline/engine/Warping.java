@@ -27,6 +27,7 @@ final class Warping {
     private final int[] part = new int[Program.BLOCK];
     private final double[] z = new double[Program.BLOCK];
     private final double[][] logDensity;
+    private final double[][][] logsOfCells;
     private final double[] weights = new double[Program.BLOCK];
     private long seen;
 
@@ -34,6 +35,7 @@ final class Warping {
         this.tuned = tuned;
         this.together = together;
         this.turns = new int[tuned.of()];
+        this.logsOfCells = logsOfCells(tuned);
         this.logDensity = new double[tuned.parts().size()][Program.BLOCK];
         int turn = tuned.nominal();
         Arrays.fill(turns, 0, turn, -1);
@@ -129,11 +131,31 @@ final class Warping {
         }
         for (int p = 0; p < logDensity.length; p++) {
             if (tuned.parts().get(p).warps().get(j) instanceof Warp.Steps steps) {
+                double[] logs = logDensity[p];
+                double[] ofCells = logsOfCells[p][j];
                 for (int i = 0; i < rows; i++) {
-                    logDensity[p][i] += StrictMath.log(steps.density(u[i]));
+                    logs[i] += ofCells[steps.cell(u[i])];
                 }
             }
         }
+    }
+
+    /// Of each part and coordinate that has steps.
+    private static double[][][] logsOfCells(Tuned tuned) {
+        return tuned.parts().stream()
+                .map(part -> {
+                    double[][] logs =
+                            new double[part.warps().isEmpty() ? 0 : part.warps().lastKey() + 1][];
+                    part.warps().forEach((j, warp) -> {
+                        if (warp instanceof Warp.Steps steps) {
+                            logs[j] = Arrays.stream(steps.densities())
+                                    .map(StrictMath::log)
+                                    .toArray();
+                        }
+                    });
+                    return logs;
+                })
+                .toArray(double[][][]::new);
     }
 
     /// One over the mixture of the densities.

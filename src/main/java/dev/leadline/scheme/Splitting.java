@@ -31,7 +31,7 @@ public record Splitting(int particles, int moves) {
     public static final int BLOCK = 1024;
 
     /// With 30 moves the variance of the replacements is 1.00 ± .02 times their mean over four events of 2 to 20
-    /// dimensions (1.06 with 20 moves, 1.5 with 5), and the mean estimate within 1 % of the probability.
+    /// dimensions (1.06 with 20 moves, 1.5 with 5), and the mean estimate within 2 % of the probability.
     public static final Splitting DEFAULT = new Splitting(100, 30);
 
     public Splitting {

@@ -32,11 +32,20 @@ public sealed interface Warp {
             return Math.fma(v * cells - cell, edges[cell + 1] - edges[cell], edges[cell]);
         }
 
-        /// Relative to the uniform density.
-        public double density(double u) {
+        /// The cell that holds u.
+        public int cell(double u) {
             int at = Arrays.binarySearch(edges, u);
-            int cell = Math.min(at >= 0 ? at : -at - 2, edges.length - 2);
-            return 1 / ((edges.length - 1) * (edges[cell + 1] - edges[cell]));
+            return Math.min(at >= 0 ? at : -at - 2, edges.length - 2);
+        }
+
+        /// Of each cell, relative to the uniform density.
+        public double[] densities() {
+            int cells = edges.length - 1;
+            double[] densities = new double[cells];
+            for (int c = 0; c < cells; c++) {
+                densities[c] = 1 / (cells * (edges[c + 1] - edges[c]));
+            }
+            return densities;
         }
 
         @Override

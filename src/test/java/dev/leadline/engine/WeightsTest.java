@@ -72,7 +72,7 @@ class WeightsTest {
     }
 
     /// With a tenth of the draws from the input's own density. The record has the variance of a draw whose density is
-    /// chosen by chance; fixed shares spare what the means under the two differ by: here 2 to 4 % of it.
+    /// chosen by chance; fixed shares spare what the means under the two differ by.
     @ParameterizedTest
     @ValueSource(ints = {3, 4, 5})
     void fixedSharesGainOverChance(int c) {
