@@ -17,12 +17,11 @@ import java.util.TreeMap;
 ///
 /// For an event each stage takes the tenth of the draws that are nearest to it, until a tenth reach it; then, as for a
 /// mean at once, every draw counts what it adds to the answer, or a power of it while a few would count for all. An
-/// input that those draws do not tell apart from its own
-/// density stays as it is.
+/// input that those draws do not tell apart from its own density stays as it is.
 ///
 /// Source: Rubinstein and Kroese (2004), The cross-entropy method; Kurtz and Song (2013), Structural Safety 42, 35-44,
 /// for the mixture.
-final class CrossEntropy {
+record CrossEntropy(Question question, Lane lane, Adaptation wish, long seed) {
     private static final int DRAWS = 4_096;
     private static final int LAST_DRAWS = 8_192;
     private static final int MOST_STAGES = 24;
@@ -36,18 +35,6 @@ final class CrossEntropy {
     private static final double SOME = 0.02;
 
     private static final double LEAST_POWER = 0.01;
-
-    private final Question question;
-    private final Lane lane;
-    private final Adaptation wish;
-    private final long seed;
-
-    CrossEntropy(Question question, Lane lane, Adaptation wish, long seed) {
-        this.question = question;
-        this.lane = lane;
-        this.wish = wish;
-        this.seed = seed;
-    }
 
     Tuned found() {
         var found = Tuned.untouched(wish);

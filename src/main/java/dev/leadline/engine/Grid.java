@@ -16,25 +16,13 @@ import java.util.TreeMap;
 /// much of the second moment of the weighted outcomes.
 ///
 /// Source: Lepage (1978), Journal of Computational Physics 27, 192-203; the damping is his.
-final class Grid {
+record Grid(Question question, Lane lane, Adaptation wish, long seed) {
     private static final int STAGES = 6;
     private static final int DRAWS = 16_384;
     private static final int CELLS = 64;
 
     /// Between 0, no change, and 1: keeps a stage with few draws in the tails from running away.
     private static final double DAMPING = 0.75;
-
-    private final Question question;
-    private final Lane lane;
-    private final Adaptation wish;
-    private final long seed;
-
-    Grid(Question question, Lane lane, Adaptation wish, long seed) {
-        this.question = question;
-        this.lane = lane;
-        this.wish = wish;
-        this.seed = seed;
-    }
 
     Tuned found() {
         var found = Tuned.untouched(wish);

@@ -5,9 +5,8 @@ import dev.leadline.model.Question;
 import dev.leadline.scheme.Adaptation;
 import dev.leadline.scheme.Tuned;
 
-/// Finds, before the run, the density that a lane wants to draw from. Its draws have a purpose of their own and enter
-/// no
-/// answer; what they teach is kept as it is for the whole run.
+/// Finds, before the run, the density that a lane wants to draw from. Its draws have a purpose of their own and
+/// enter no answer; what they teach is kept as it is for the whole run.
 final class Tuning {
     private Tuning() {}
 

@@ -3,6 +3,7 @@ package dev.leadline.interval;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Estimate;
 import dev.leadline.numeric.Rounding;
+import dev.leadline.numeric.Shortest;
 import java.util.Optional;
 
 /// Student's t interval for a mean of independent observations.
@@ -53,7 +54,7 @@ public final class Student {
         if (standardError == 0) {
             return none(
                     level,
-                    "every value seen so far is equal (" + mean
+                    "every value seen so far is equal (" + Shortest.text(mean)
                             + "): no spread to build an interval from; at most a part" + " of probability below 3/n = "
                             + Rounding.atMost(Math.min(1, 3.0 / n)) + " may be unseen");
         }

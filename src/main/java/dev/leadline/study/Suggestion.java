@@ -208,8 +208,8 @@ public record Suggestion(List<Row> rows, Row recommended, long draws) {
             if (!one.spreads() || !other.spreads()) {
                 return false;
             }
-            double error =
-                    Math.hypot(one.estimate().standardError(), other.estimate().standardError());
+            double error = StrictMath.hypot(
+                    one.estimate().standardError(), other.estimate().standardError());
             return Math.abs(one.estimate().value() - other.estimate().value()) > DISAGREES * error;
         }
     }
