@@ -45,11 +45,23 @@ public final class ClopperPearson {
                 note(hits, n, failed, level));
     }
 
+    /// The limits wanted; see [#of(long, long, long, double)].
+    public static Interval of(long hits, long n, long failed, double level, Sides sides) {
+        var interval = sides.of(level, twoSided -> of(hits, n, failed, twoSided));
+        return sides == Sides.BOTH || n + failed == 0
+                ? interval
+                : new Interval(interval.low(), interval.high(), level, KIND, ASSUMPTION, bracket(failed));
+    }
+
+    private static Optional<String> bracket(long failed) {
+        return failed == 0
+                ? Optional.empty()
+                : Optional.of(String.format(Locale.ROOT, "%,d failed evaluations", failed)
+                        + " count as misses in the lower limit and as hits in the upper one");
+    }
+
     private static Optional<String> note(long hits, long n, long failed, double level) {
-        String bracket = failed == 0
-                ? ""
-                : String.format(Locale.ROOT, "; %,d failed evaluations", failed)
-                        + " count as misses in the lower limit and as hits in the upper one";
+        String bracket = bracket(failed).map(text -> "; " + text).orElse("");
         String percent = Interval.percent(level);
         if (hits == 0 && n > 0) {
             return Optional.of("no hit in " + draws(n) + ": below " + Rounding.atMost(upperLimit(0, n, failed, level))
@@ -61,7 +73,7 @@ public final class ClopperPearson {
                     + " one-sided confidence"
                     + bracket);
         }
-        return failed == 0 ? Optional.empty() : Optional.of(bracket.substring(2));
+        return bracket(failed);
     }
 
     /// Rounded down, to three significant digits of what is missing to 1: 0.99963 says more than 0.999.
@@ -93,9 +105,7 @@ public final class ClopperPearson {
         if (hits < 0 || hits > n || failed < 0) {
             throw new IllegalArgumentException(hits + " hits of " + n + " draws, " + failed + " failed");
         }
-        if (!(level > 0 && level < 1)) {
-            throw new IllegalArgumentException("level " + level + " is not between 0 and 1");
-        }
+        Level.check(level);
     }
 
     private static double low(long k, long n, double tail) {

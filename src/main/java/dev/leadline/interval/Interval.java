@@ -22,6 +22,23 @@ public record Interval(double low, double high, double level, String kind, Strin
     /// Digits of a level from here on are rounding errors.
     private static final int LEVEL_NOISE = 14;
 
+    /// No interval.
+    ///
+    /// @param note why there is none, and which n would do
+    static Interval none(double level, String kind, String assumption, String note) {
+        return new Interval(Double.NaN, Double.NaN, level, kind, assumption, Optional.of(note));
+    }
+
+    /// Whether both limits are missing.
+    boolean isNone() {
+        return Double.isNaN(low) && Double.isNaN(high);
+    }
+
+    /// The same limits, or the same reason for none, under the word of another kind.
+    Interval as(String otherKind, String otherAssumption) {
+        return new Interval(low, high, level, otherKind, otherAssumption, note);
+    }
+
     /// The level as `95 %`.
     public String percent() {
         return percent(level);

@@ -71,9 +71,7 @@ public record SplittingSteps(int particles, long repetitions, double mean, doubl
     /// The score interval for the mean of the Poisson number of all replacements: beside the reported one, not in its
     /// place, since moves that are too few or too short make the replacements vary more.
     public Interval ideal(double level) {
-        if (!(level > 0 && level < 1)) {
-            throw new IllegalArgumentException("level " + level + " is not between 0 and 1");
-        }
+        Level.check(level);
         double z = Normal.upperQuantile((1 - level) / 2);
         double middle = Math.sqrt(mean / particles + z * z / (4 * all()));
         double half = z / (2 * Math.sqrt(all()));

@@ -44,9 +44,7 @@ public final class Student {
     /// @param n observations
     /// @param level of confidence, between 0 and 1
     public static Interval of(double mean, double standardError, long n, double level) {
-        if (!(level > 0 && level < 1)) {
-            throw new IllegalArgumentException("level " + level + " is not between 0 and 1");
-        }
+        Level.check(level);
         if (n < 2) {
             return none(
                     level, "an interval needs at least 2 observations; so far there " + (n == 1 ? "is 1" : "are " + n));

@@ -6,63 +6,51 @@ import dev.leadline.estimate.Accumulator;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
 import dev.leadline.stream.Stream;
-import java.util.function.DoubleUnaryOperator;
-import org.apache.commons.statistics.distribution.NormalDistribution;
+import java.util.function.Function;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
-/// How often a 95 % interval holds what it should, over repetitions with our own streams.
+/// How often a 95 % interval holds what it should.
 ///
-/// The expected coverages are those of an independent experiment with at least 20,000 repetitions (standard error at
-/// most .0016). With R repetitions here the gate is four joint standard errors: a right program fails a case with
-/// probability 6e-5, and at R = 4,000 a coverage that is off by .02 is noticed nearly always.
+/// The expected coverages are those of an independent experiment with at least 20,000 repetitions (standard
+/// error at most .0016). With R repetitions here the gate is four joint standard errors: a right program
+/// fails a case with probability 6e-5, and at R = 4,000 a coverage that is off by .02 is noticed nearly
+/// always.
 class CoverageTest {
     private static final long SEED = 20261201;
     private static final double OTHER_ERROR = 0.0016;
 
-    private static DoubleUnaryOperator quantile(String density) {
-        var normal = NormalDistribution.of(0, 1);
-        return switch (density) {
-            case "normal" -> normal::inverseCumulativeProbability;
-            case "exponential" -> u -> -Math.log(u);
-            case "lognormal" -> u -> Math.exp(normal.inverseCumulativeProbability(u));
-            default -> throw new IllegalArgumentException(density);
-        };
-    }
-
-    private static double mean(String density) {
-        return switch (density) {
-            case "normal" -> 0;
-            case "exponential" -> 1;
-            default -> Math.exp(.5);
-        };
+    @ParameterizedTest(name = "{0}")
+    @CsvSource({
+        "NORMAL, .951, .951, .951, .950, .950",
+        "EXPONENTIAL, .901, .928, .941, .951, .951",
+        "LOGNORMAL_1, .839, .883, .917, .943, .949",
+        "LOGNORMAL_2, .570, .654, .740, .854, .910",
+        "PARETO_2_5, .793, .843, .885, .927, .944",
+        "PARETO_1_5, .622, .661, .703, .760, .788"
+    })
+    void studentCoversAsItShould(
+            Observed density, double of10, double of30, double of100, double of1000, double of10000) {
+        covers(density, 10, 4_000, of10, sums -> Student.of(sums, 0, .95));
+        covers(density, 30, 4_000, of30, sums -> Student.of(sums, 0, .95));
+        covers(density, 100, 4_000, of100, sums -> Student.of(sums, 0, .95));
+        covers(density, 1_000, 2_000, of1000, sums -> Student.of(sums, 0, .95));
+        covers(density, 10_000, 1_000, of10000, sums -> Student.of(sums, 0, .95));
     }
 
     @ParameterizedTest(name = "{0}, n = {1}: {2}")
-    @CsvSource({
-        "normal, 10, .951",
-        "exponential, 10, .901",
-        "exponential, 30, .928",
-        "exponential, 100, .941",
-        "lognormal, 30, .883",
-        "lognormal, 100, .917"
-    })
-    void studentCoversAsItShould(String density, int n, double coverage) {
-        int repetitions = 4_000;
-        var quantile = quantile(density);
-        double mean = mean(density);
-        var values = new double[1][n];
+    @CsvSource({"EXPONENTIAL, 10, .934", "EXPONENTIAL, 30, .946", "EXPONENTIAL, 100, .948", "LOGNORMAL_1, 100, .936"})
+    void skewnessCorrectedCoversAsItShould(Observed density, int n, double coverage) {
+        covers(density, n, 20_000, coverage, sums -> SkewnessCorrected.of(sums, 0, .95));
+    }
+
+    private static void covers(
+            Observed density, int n, int repetitions, double coverage, Function<Accumulator, Interval> kind) {
+        var random = Observed.random(SEED + n);
         int covered = 0;
         for (int r = 0; r < repetitions; r++) {
-            Stream.at(new Address(SEED, Purpose.RUN, "A", 0, density + " " + n, r))
-                    .fill(values[0], 0, n);
-            for (int i = 0; i < n; i++) {
-                values[0][i] = quantile.applyAsDouble(values[0][i]);
-            }
-            var sums = new Accumulator(1);
-            sums.add(values, 0, n);
-            var interval = Student.of(sums, 0, .95);
-            covered += interval.low() <= mean && mean <= interval.high() ? 1 : 0;
+            var interval = kind.apply(Observed.sums(density.draws(random, n)));
+            covered += interval.low() <= density.mean && density.mean <= interval.high() ? 1 : 0;
         }
         gate(coverage, covered, repetitions, OTHER_ERROR);
     }

@@ -1,0 +1,35 @@
+package dev.leadline.interval;
+
+import dev.leadline.estimate.Accumulator;
+
+/// Hoeffding's interval for a mean of independent observations that lie within known bounds: it holds with
+/// at least its level at any n, whatever the density. It looks at the bounds alone, so that it is long
+/// where most values lie close together.
+///
+/// Source: Hoeffding (1963), Journal of the American Statistical Association 58, 13-30, theorem 2.
+public final class Hoeffding {
+    /// Word of the project file and of the commands.
+    public static final String KIND = "hoeffding";
+
+    private static final String ASSUMPTION =
+            "The observations are independent and lie within the bounds stated; nothing else is taken for granted.";
+
+    private Hoeffding() {}
+
+    /// @param least bound of the observations of component k
+    /// @param most bound, above `least`
+    public static Interval of(Accumulator sums, int k, double least, double most, double level) {
+        Level.check(level);
+        return Bounded.refusal(sums, k, 1, least, most)
+                .map(note -> Interval.none(level, KIND, ASSUMPTION, note))
+                .orElseGet(() -> {
+                    double half = (most - least) * halfWidth(sums.count(), level);
+                    return Bounded.interval(sums.mean(k), half, least, most, level, KIND, ASSUMPTION);
+                });
+    }
+
+    /// Half the length where the bounds are 1 apart.
+    static double halfWidth(long n, double level) {
+        return Math.sqrt(StrictMath.log(2 / (1 - level)) / (2.0 * n));
+    }
+}
