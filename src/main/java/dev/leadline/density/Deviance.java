@@ -6,7 +6,7 @@ import dev.leadline.numeric.Log;
 /// exponents of gamma and beta densities lose no digits in this form.
 ///
 /// Source: Loader (2000), Fast and accurate computation of binomial probabilities. From memory.
-final class Deviance {
+public final class Deviance {
     private Deviance() {}
 
     /// `a log(a / x) + x - a`.
@@ -18,7 +18,7 @@ final class Deviance {
     }
 
     /// `log(1 + u) - u` for `|u| <= 1/2`.
-    static double logOnePlusLess(double u) {
+    public static double logOnePlusLess(double u) {
         double r = u / (2 + u);
         double square = r * r;
         double sum = 0;

@@ -1,5 +1,7 @@
 package dev.leadline.interval;
 
+import dev.leadline.density.Deviance;
+
 /// Quantiles of the log-odds of a beta variable, from which the exact limits of a probability and those of Student's t
 /// follow.
 ///
@@ -7,9 +9,11 @@ package dev.leadline.interval;
 /// `h(s) = exp(a s - (a+b) ln(1 + (e^s - 1) a/(a+b)))`: analytic on the whole line, its logarithm concave, its peak
 /// `h(0) = 1`. So the whole integral is a plain trapezoidal sum, a tail is a few Gauss-Legendre panels, and their ratio
 /// needs no gamma function. Digits that cancel in the exponent for large a and b do so in proportion to the width of
-/// the density, hence not in the quantile.
+/// the density, hence not in the quantile; a tail needs them all, and beyond [#MANY] the exponent is written as
+/// deviances
+/// from the peak, which do not cancel.
 ///
-/// Error: see [Student] and [ClopperPearson]. Bit-stable: `StrictMath` only.
+/// Error: see [Student], [ClopperPearson] and [BinomialTail]. Bit-stable: `StrictMath` only.
 ///
 /// Cost: 20 to 60 µs.
 final class LogOdds {
@@ -18,6 +22,9 @@ final class LogOdds {
 
     /// Panels grow as the density loses its curvature.
     private static final double GROWTH = 1.25;
+
+    /// From here on, of the smaller of a and b, deviances are taken.
+    private static final double MANY = 1e6;
 
     /// The positive nodes of the Gauss-Legendre rule of 16 points (mpmath, 40 digits).
     private static final double[] NODES = {
@@ -64,6 +71,16 @@ final class LogOdds {
         return new LogOdds(a, b).upper(tail);
     }
 
+    /// `P(S > s)`.
+    static double beyond(double a, double b, double s) {
+        return s < 0 ? 1 - beyond(b, a, -s) : new LogOdds(a, b).tail(s);
+    }
+
+    private double tail(double s) {
+        double height = StrictMath.exp(logH(s));
+        return height == 0 ? 0 : height * beyond(s) / whole();
+    }
+
     /// Halley's method: with `m` the tail divided by h, the logarithm of the tail has the derivatives `-1/m` and
     /// `-(1 + m slope)/m²`. Its error is cubed by each step.
     private double upper(double tail) {
@@ -82,6 +99,11 @@ final class LogOdds {
     /// Written from the rarer side, whose share of `a + b` keeps its digits.
     private double logH(double s) {
         double n = a + b;
+        if (Math.min(a, b) > MANY && Math.abs(s) < 0.25) {
+            double e = StrictMath.expm1(s);
+            double off = e / (1 + a / n * e);
+            return a * Deviance.logOnePlusLess(b / n * off) + b * Deviance.logOnePlusLess(-a / n * off);
+        }
         return a <= b
                 ? a * s - n * StrictMath.log1p(a / n * StrictMath.expm1(s))
                 : -b * s - n * StrictMath.log1p(b / n * StrictMath.expm1(-s));

@@ -76,7 +76,7 @@ class CoverageTest {
         gate(coverage, covered, repetitions, 0);
     }
 
-    private static void gate(double expected, int covered, int repetitions, double otherError) {
+    static void gate(double expected, int covered, int repetitions, double otherError) {
         double here = (double) covered / repetitions;
         double error = Math.sqrt(expected * (1 - expected) / repetitions + otherError * otherError);
         assertTrue(

@@ -1,0 +1,207 @@
+package dev.leadline.interval;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.leadline.ReferenceValues;
+import java.util.Arrays;
+import java.util.Random;
+import org.apache.commons.statistics.distribution.BinomialDistribution;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvFileSource;
+import org.junit.jupiter.params.provider.CsvSource;
+
+class RanksTest {
+    private static final double STATED_ERROR = 1e-12;
+    private static final String RECORD = "quant-order-statistic-ranks";
+
+    /// Record quant-order-statistic-ranks.
+    @Test
+    void agreesWithTheRecord() {
+        int checked = 0;
+        for (var entry : ReferenceValues.record(RECORD).required("cases")) {
+            var parts =
+                    entry.required("label").asString().replaceAll("[a-z= ]", "").split(",");
+            var ranks = Ranks.of(
+                    Long.parseLong(parts[0]), Double.parseDouble(parts[1]), Double.parseDouble(parts[2]), Sides.BOTH);
+            assertEquals((long) ReferenceValues.expected(entry, "lower_rank"), ranks.low());
+            assertEquals(ReferenceValues.expected(entry, "coverage"), ranks.coverage(), 1e-12);
+            if (parts[0].equals("200")) {
+                assertFalse(ranks.hasHigh());
+            } else {
+                assertEquals((long) ReferenceValues.expected(entry, "upper_rank"), ranks.high());
+            }
+            checked++;
+        }
+        assertEquals(10, checked);
+    }
+
+    /// The published table of the median in record quant-order-statistic-ranks, whose ranks are those
+    /// nearest to 95 % and not always at least 95 %: the coverage of those ranks.
+    @Test
+    void coverageAgreesWithThePublishedTable() {
+        int checked = 0;
+        for (var row : ReferenceValues.record(RECORD).required("data").required("median_table")) {
+            long n = row.required("n").asLong();
+            long low = row.required("lower").asLong();
+            long high = row.required("upper").asLong();
+            double covered = 1 - BinomialTail.atMost(low - 1, n, .5) - BinomialTail.atLeast(high, n, .5);
+            assertEquals(row.required("exact_percent").asDouble(), 100 * covered, 1e-11);
+            var ranks = Ranks.of(n, .5, .95, Sides.BOTH);
+            assertTrue(ranks.low() <= low && ranks.high() >= high);
+            checked++;
+        }
+        assertEquals(16, checked);
+    }
+
+    /// Enumerated apart from this code.
+    @ParameterizedTest
+    @CsvSource({
+        "100, .5, 40, 61, .96480",
+        "1000, .95, 936, 964, .95810",
+        "1000, .99, 983, 997, .97609",
+        "10000, .999, 9983, 9997, .97546"
+    })
+    void agreesWithFiguresFoundBefore(long n, double q, long low, long high, double coverage) {
+        var ranks = Ranks.of(n, q, .95, Sides.BOTH);
+        assertEquals(low, ranks.low());
+        assertEquals(high, ranks.high());
+        assertEquals(coverage, ranks.coverage(), 5e-6);
+    }
+
+    /// Made by `fixed_draws.py` with 40 digits: ranks to the unit, to 1e13 draws; coverage with the error
+    /// stated.
+    @ParameterizedTest(name = "n = {0}, q = {1}, level {2}")
+    @CsvFileSource(resources = "/interval/ranks.csv", numLinesToSkip = 2)
+    void agreesToTheUnit(long n, double q, double level, long low, long high, double coverage) {
+        var ranks = Ranks.of(n, q, level, Sides.BOTH);
+        assertEquals(low, ranks.low());
+        assertEquals(high, ranks.high());
+        assertEquals(1 - coverage, 1 - ranks.coverage(), STATED_ERROR * (1 - coverage) + 2e-16);
+    }
+
+    /// Tails of Commons Statistics, to 1e6 draws, which are off by 1.4e-11 themselves.
+    @Test
+    void tailsAgreeWithALibrary() {
+        var random = new Random(20261201);
+        for (int i = 0; i < 300; i++) {
+            int n = (int) Math.exp(random.nextDouble() * 13.8);
+            double q = i % 3 == 0 ? random.nextDouble() : Math.exp(-8 * random.nextDouble());
+            var binomial = BinomialDistribution.of(n, q);
+            double mean = n * q;
+            double sd = Math.sqrt(mean * (1 - q));
+            int k = (int) Math.clamp(mean + sd * random.nextGaussian() * 3, 0, n);
+            double least = binomial.cumulativeProbability(k);
+            double most = binomial.survivalProbability(k - 1);
+            assertEquals(least, BinomialTail.atMost(k, n, q), 1e-10 * least);
+            assertEquals(most, BinomialTail.atLeast(k, n, q), 1e-10 * most);
+        }
+    }
+
+    /// Level and tail are binary fractions: of 5 draws the least is below the median with probability
+    /// 31/32, exactly.
+    @Test
+    void aTailThatIsJustLeftOutCounts() {
+        assertEquals(1, Ranks.of(5, .5, 1 - 2.0 / 32, Sides.BOTH).low());
+        assertEquals(0, Ranks.of(5, .5, 1 - 1.9999 / 32, Sides.BOTH).low());
+        assertEquals(5, Ranks.of(5, .5, 1 - 2.0 / 32, Sides.BOTH).high());
+        assertEquals(5, Ranks.of(5, .5, 1 - 1.0 / 32, Sides.UPPER).high());
+    }
+
+    /// Record int-wilks: the largest of n as a limit, and both the least and the largest, which have the
+    /// size of the second largest. The five sizes at 95 %/95 % are common practice.
+    @Test
+    void sizesAreWilks() {
+        assertEquals(expected("one_sided_95_95"), Ranks.drawsForUpper(.95, .95, 1));
+        assertEquals(expected("one_sided_95_99"), Ranks.drawsForUpper(.95, .99, 1));
+        assertEquals(expected("one_sided_99_95"), Ranks.drawsForUpper(.99, .95, 1));
+        assertEquals(expected("one_sided_90_95"), Ranks.drawsForUpper(.90, .95, 1));
+        assertEquals(expected("two_sided_95_95"), Ranks.drawsForUpper(.95, .95, 2));
+        assertEquals(expected("two_sided_99_95"), Ranks.drawsForUpper(.99, .95, 2));
+        long[] sizes = {59, 93, 124, 153, 181};
+        for (int r = 1; r <= 5; r++) {
+            assertEquals(sizes[r - 1], Ranks.drawsForUpper(.95, .95, r));
+            assertEquals(sizes[r - 1], Ranks.drawsForLower(.05, .95, r));
+            assertEquals(
+                    sizes[r - 1] - r + 1,
+                    Ranks.of(sizes[r - 1], .95, .95, Sides.UPPER).high());
+            assertEquals(
+                    sizes[r - 1] - r + 1,
+                    Ranks.of(sizes[r - 1] - 1, .95, .95, Sides.UPPER).high());
+        }
+    }
+
+    private static long expected(String name) {
+        return (long) ReferenceValues.expected("int-wilks", name);
+    }
+
+    /// The notes of record quant-order-statistic-ranks; 59 draws have a one-sided limit at 95 %, and no
+    /// two-sided one.
+    @Test
+    void saysWhichLimitIsMissingAndHowManyDrawsHaveIt() {
+        var few = new double[200];
+        Arrays.setAll(few, i -> i);
+        var interval = Ranks.of(200, .99, .95, Sides.BOTH).interval(few);
+        assertEquals(194, interval.low());
+        assertTrue(Double.isNaN(interval.high()));
+        assertEquals(
+                "no upper limit of the 0.99 quantile at this n (200); needs n = 368",
+                interval.note().orElseThrow());
+        assertFalse(Ranks.of(367, .99, .95, Sides.BOTH).hasHigh());
+        assertTrue(Ranks.of(368, .99, .95, Sides.BOTH).hasHigh());
+        assertFalse(Ranks.of(59, .95, .95, Sides.BOTH).hasHigh());
+        var upper = Ranks.of(59, .95, .95, Sides.UPPER).interval(few);
+        assertEquals(58, upper.high());
+        assertEquals(Double.NEGATIVE_INFINITY, upper.low());
+        assertTrue(upper.note().isEmpty());
+        assertEquals(
+                "no upper limit of the 0.95 quantile at this n (58); needs n = 59",
+                Ranks.of(58, .95, .95, Sides.UPPER).interval(few).note().orElseThrow());
+        assertTrue(Ranks.of(58, .95, .95, Sides.LOWER).interval(few).note().isEmpty());
+        assertEquals(
+                "no lower limit of the 0.5 quantile at this n (0); needs n = 6; no upper limit of the 0.5 quantile at"
+                        + " this n (0); needs n = 6",
+                Ranks.of(0, .5, .95, Sides.BOTH).interval(few).note().orElseThrow());
+    }
+
+    /// Sizes to 1e13 draws and more: `ln(.025) / ln(q)`, rounded up.
+    @Test
+    void sizesOfRareQuantilesAreExact() {
+        for (double q : new double[] {.999, .999999, 1 - 1e-9, 1 - 1e-12}) {
+            double size = Math.log(.025) / Math.log1p(-(1 - q));
+            assertEquals(Math.ceil(size), Ranks.drawsForUpper(q, .975, 1), 1e-12 * size);
+        }
+    }
+
+    /// Intervals of seeded draws hold the median as often as they say, and more often where values repeat.
+    @Test
+    void coversAsItSays() {
+        var random = Observed.random(20261201);
+        int repetitions = 4_000;
+        var ranks = Ranks.of(100, .5, .95, Sides.BOTH);
+        int covered = 0;
+        int ofWhole = 0;
+        for (int r = 0; r < repetitions; r++) {
+            double[] sorted = Observed.EXPONENTIAL.draws(random, 100);
+            Arrays.sort(sorted);
+            var interval = ranks.interval(sorted);
+            covered += interval.low() <= Math.log(2) && Math.log(2) <= interval.high() ? 1 : 0;
+            double[] whole = Arrays.stream(sorted).map(Math::ceil).toArray();
+            var another = ranks.interval(whole);
+            ofWhole += another.low() <= 1 && 1 <= another.high() ? 1 : 0;
+        }
+        double error = Math.sqrt(ranks.coverage() * (1 - ranks.coverage()) / repetitions);
+        assertEquals(ranks.coverage(), (double) covered / repetitions, 4 * error);
+        assertTrue(ofWhole >= covered);
+    }
+
+    @Test
+    void refusesWhatIsNoQuantile() {
+        assertThrows(IllegalArgumentException.class, () -> Ranks.of(10, 0, .95, Sides.BOTH));
+        assertThrows(IllegalArgumentException.class, () -> Ranks.of(10, 1, .95, Sides.BOTH));
+        assertThrows(IllegalArgumentException.class, () -> Ranks.of(10, .5, 1, Sides.BOTH));
+    }
+}
