@@ -96,7 +96,8 @@ final class Drawing {
     /// One draw.
     ///
     /// @param inputs every input
-    /// @param weight what it counts that comes from a density found for its points; 1 otherwise
+    /// @param weight what it counts because of a density found for its points and of how cells share draws;
+    ///     else 1
     record Single(double[] inputs, double weight) {}
 
     /// The draw with index `draw` in the lane.
@@ -117,7 +118,16 @@ final class Drawing {
                 Arrays.stream(drawing.columns)
                         .mapToDouble(column -> column[row])
                         .toArray(),
-                drawing.weights().map(weights -> weights[row]).orElse(1.0));
+                drawing.weights().map(weights -> weights[row]).orElse(1.0) * share(recipe, draw));
+    }
+
+    /// What a draw counts in its pass, 1 on average.
+    private static double share(Recipe recipe, long draw) {
+        return recipe.lane()
+                .scheme()
+                .allotted()
+                .map(found -> found.counts()[found.cellOf(draw)])
+                .orElse(1.0);
     }
 
     /// What draws count that come from a density found for them.

@@ -1,85 +1,27 @@
 package dev.leadline.engine;
 
 import dev.leadline.estimate.Accumulator;
-import dev.leadline.formula.Program;
 import dev.leadline.scheme.Growing;
 
-/// Makes observations of draws: the mean of so many that follow one another. Scratch of one worker.
-final class Folding {
-    private final int draws;
-    private final double[] part;
-    private final double[][] observations;
-    private int seen;
-
-    private Folding(int draws, int components) {
-        this.draws = draws;
-        this.part = new double[components];
-        this.observations = new double[draws == 1 ? 0 : components][Program.BLOCK];
-    }
-
+/// Makes observations of draws. Scratch of one worker.
+sealed interface Folding permits Means, CellMeans, CellSpreads {
     static Folding of(Recipe recipe) {
         var scheme = recipe.lane().scheme();
-        return new Folding(scheme.points() instanceof Growing ? scheme.drawsPerObservation() : 1, recipe.components());
+        return scheme.allotted()
+                .<Folding>map(found -> new CellMeans(found, scheme.turns(), recipe.components()))
+                .orElseGet(() -> new Means(
+                        scheme.points() instanceof Growing ? scheme.drawsPerObservation() : 1, recipe.components()));
     }
 
     /// Goes to the first draw of an item.
-    void open() {
-        seen = 0;
-    }
+    void open();
 
     /// Adds the observations that end in these draws. False where a draw is not finite.
-    boolean addTo(Accumulator sums, double[][] components, int rows) {
-        if (draws == 1) {
-            long excluded = sums.excluded();
-            sums.add(components, 0, rows);
-            return sums.excluded() == excluded;
-        }
-        boolean finite = true;
-        int ended = (seen + rows) / draws;
-        for (int k = 0; k < components.length; k++) {
-            finite &= fold(k, components[k], rows);
-        }
-        seen = (seen + rows) % draws;
-        sums.add(observations, 0, ended);
-        return finite;
-    }
+    boolean addTo(Accumulator sums, double[][] components, int rows);
 
-    private boolean fold(int k, double[] x, int rows) {
-        double[] means = observations[k];
-        double divisor = draws;
-        double all = 0;
-        int row = 0;
-        for (int ended = 0; row < rows; ended++) {
-            int until = Math.min(rows, row + draws - (ended == 0 ? seen : 0));
-            double sum = (ended == 0 && seen > 0 ? part[k] : 0) + sum(x, row, until);
-            all += sum;
-            boolean whole = until - row == draws - (ended == 0 ? seen : 0);
-            if (whole) {
-                means[ended] = sum / divisor;
-            } else {
-                part[k] = sum;
-            }
-            row = until;
-        }
-        return Double.isFinite(all);
-    }
-
-    /// Four sums side by side, in a fixed order: one would wait for itself.
-    private static double sum(double[] x, int from, int to) {
-        double a = 0;
-        double b = 0;
-        double c = 0;
-        double d = 0;
-        int i = from;
-        for (; i + 3 < to; i += 4) {
-            a += x[i];
-            b += x[i + 1];
-            c += x[i + 2];
-            d += x[i + 3];
-        }
-        for (; i < to; i++) {
-            a += x[i];
-        }
-        return (a + b) + (c + d);
+    /// The same draws, not added yet, each times what it counts in its observation beside the others; 1 on
+    /// average.
+    default double[][] counted(double[][] components, int rows) {
+        return components;
     }
 }

@@ -20,9 +20,10 @@ import java.util.Locale;
 ///
 /// @param inputs values in the order of the question's inputs
 /// @param steps values in the order of the steps
-/// @param weight what outcomes are multiplied by: where the draw is from other densities, those of the inputs over
-///     them; of integrals also the volume of bounded ranges, and one over the density drawn from on unbounded ones; 0
-///     beyond a range; 1 where nothing weighs
+/// @param weight what outcomes are multiplied by: where the draw is from other densities, those of the inputs
+///     over them; where cells share the draws of a pass, what it counts among them; of integrals also the
+///     volume of bounded ranges, and one over the density drawn from on unbounded ones; 0 beyond a range; 1
+///     where nothing weighs
 /// @param outcomes one for each thing asked, before the weight
 public record Look(List<Double> inputs, List<Double> steps, double weight, List<Double> outcomes) {
     public Look {

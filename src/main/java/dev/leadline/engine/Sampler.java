@@ -30,6 +30,11 @@ public final class Sampler implements ItemWork {
     private final Optional<Extremes> extremes;
 
     Sampler(Recipe recipe) {
+        this(recipe, Folding.of(recipe));
+    }
+
+    /// @param folding what becomes of the draws
+    Sampler(Recipe recipe, Folding folding) {
         this.recipe = recipe;
         this.program = recipe.program();
         this.workspace = program.workspace();
@@ -46,9 +51,10 @@ public final class Sampler implements ItemWork {
         this.logPdf = new double[ranges.length];
         this.isWeighted = recipe.lane().scheme().isWeighted();
         this.weights = new Weights(recipe);
-        this.folding = Folding.of(recipe);
+        this.folding = folding;
         this.sums = new Accumulator(outcomes.length);
-        this.extremes = isWeighted ? Optional.of(new Extremes(outcomes.length)) : Optional.empty();
+        this.extremes =
+                recipe.lane().scheme().isUneven() ? Optional.of(new Extremes(outcomes.length)) : Optional.empty();
     }
 
     @Override
@@ -66,7 +72,7 @@ public final class Sampler implements ItemWork {
             drawing.next(rows);
             program.evaluate(columns, rows, outcomes, workspace);
             observe(rows);
-            extremes.ifPresent(seen -> seen.add(outcomes, rows));
+            extremes.ifPresent(seen -> seen.add(folding.counted(outcomes, rows), rows));
             if (!folding.addTo(sums, outcomes, rows)) {
                 keepFailures(item.firstDraw() + from, rows, failures);
             }

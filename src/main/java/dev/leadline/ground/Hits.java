@@ -18,7 +18,7 @@ final class Hits {
         if (answer.hits().isEmpty() || answer.observations() == 0) {
             return answer.estimand() instanceof Estimand.Probability && answer.observations() > 0
                     ? evidence.trace()
-                            .extremes()
+                            .weighted()
                             .map(draws -> weighted(evidence, draws, k))
                             .or(() -> folded(evidence, k))
                     : Optional.empty();
@@ -30,6 +30,10 @@ final class Hits {
     private static Optional<Ground> folded(Evidence evidence, int k) {
         if (!evidence.answers().get(k).interval().kind().equals(Student.KIND)) {
             return Optional.empty();
+        }
+        var uneven = evidence.trace().extremes();
+        if (uneven.isPresent()) {
+            return judged(evidence, k, uneven.get().nonzero(k), uneven.get().draws());
         }
         double draws = evidence.total().count() * evidence.drawsPerObservation();
         return judged(evidence, k, Math.round(evidence.total().mean(k) * draws), Math.round(draws));

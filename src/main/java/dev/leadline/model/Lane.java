@@ -27,6 +27,11 @@ public record Lane(String name, Scheme scheme, boolean shares, Optional<Working>
 
     /// The lane as it is run with so many draws.
     public Lane within(long draws) {
-        return new Lane(name, scheme.within(draws), shares, working);
+        return with(scheme.within(draws));
+    }
+
+    /// The lane with what was found for its scheme.
+    public Lane with(Scheme settled) {
+        return new Lane(name, settled, shares, working);
     }
 }

@@ -37,6 +37,21 @@ public record LaneDraft(
         return new LaneDraft(other, points, settings, drawFrom, nominalShare, selfNormalised, controls, crossFitted);
     }
 
+    /// The same with other settings of its points.
+    public LaneDraft with(Settings others) {
+        return new LaneDraft(name, points, others, drawFrom, nominalShare, selfNormalised, controls, crossFitted);
+    }
+
+    /// The same drawn from other densities.
+    public LaneDraft with(DrawFrom others) {
+        return new LaneDraft(name, points, settings, others, nominalShare, selfNormalised, controls, crossFitted);
+    }
+
+    /// The same with other control variates.
+    public LaneDraft with(List<ControlDraft> others) {
+        return new LaneDraft(name, points, settings, drawFrom, nominalShare, selfNormalised, others, crossFitted);
+    }
+
     /// What a layout may be told; each layout takes some of it.
     ///
     /// @param replicates independent repetitions of the points
@@ -45,20 +60,23 @@ public record LaneDraft(
     /// @param scrambling word of the randomisation
     /// @param particles of splitting
     /// @param repetitions of splitting
+    /// @param allocation word of how cells share the draws of a pass
     public record Settings(
             OptionalLong replicates,
             OptionalLong cube,
             SequencedMap<String, Long> cells,
             Optional<String> scrambling,
             OptionalLong particles,
-            OptionalLong repetitions) {
+            OptionalLong repetitions,
+            Optional<String> allocation) {
         public static final Settings NONE = new Settings(
                 OptionalLong.empty(),
                 OptionalLong.empty(),
                 new LinkedHashMap<>(),
                 Optional.empty(),
                 OptionalLong.empty(),
-                OptionalLong.empty());
+                OptionalLong.empty(),
+                Optional.empty());
     }
 
     /// What inputs are drawn from instead of their own densities.

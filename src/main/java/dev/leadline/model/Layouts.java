@@ -4,6 +4,7 @@ import dev.leadline.interval.SplittingSteps;
 import dev.leadline.model.LaneDraft.Settings;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
+import dev.leadline.scheme.Allocation;
 import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.LatinHypercube;
@@ -36,6 +37,9 @@ public final class Layouts {
     private static final int MOST_PARTICLES = 10_000;
     private static final int USUAL_REPLICATES = 16;
 
+    private static final String EQUAL = "equal";
+    private static final String NEYMAN = "neyman";
+
     /// @param takes names of the settings that it takes
     private record Kind(List<String> takes, Function<Layouts, Optional<Points>> made) {}
 
@@ -53,6 +57,11 @@ public final class Layouts {
         this.findings = findings;
     }
 
+    /// Words of how cells share the draws of a pass; the first is the usual one.
+    public static List<String> allocations() {
+        return List.of(EQUAL, NEYMAN);
+    }
+
     /// Words of the file, in the order in which they are offered.
     public static List<String> words() {
         return List.copyOf(KINDS.keySet());
@@ -68,7 +77,7 @@ public final class Layouts {
         var kinds = new LinkedHashMap<String, Kind>();
         kinds.put("independent", new Kind(List.of(), _ -> Optional.of(new Independent())));
         kinds.put("antithetic", new Kind(List.of(), _ -> Optional.of(new Antithetic())));
-        kinds.put(Stratified.WORD, new Kind(List.of("cells"), Layouts::stratified));
+        kinds.put(Stratified.WORD, new Kind(List.of("cells", "allocation"), Layouts::stratified));
         kinds.put(LatinHypercube.WORD, new Kind(List.of("replicates", "cube"), Layouts::latinHypercube));
         kinds.put(ScrambledSobol.WORD, new Kind(List.of("replicates", "scrambling"), Layouts::scrambledSobol));
         kinds.put(ShiftedLattice.WORD, new Kind(List.of("replicates"), Layouts::shiftedLattice));
@@ -108,12 +117,17 @@ public final class Layouts {
         settings.scrambling().ifPresent(_ -> given.add("scrambling"));
         settings.particles().ifPresent(_ -> given.add("particles"));
         settings.repetitions().ifPresent(_ -> given.add("repetitions"));
+        settings.allocation().ifPresent(_ -> given.add("allocation"));
         return given;
     }
 
     private Optional<Points> stratified() {
+        var allocation = allocation();
+        if (allocation.isEmpty()) {
+            return Optional.empty();
+        }
         if (settings.cells().isEmpty()) {
-            var points = Stratified.evenly(inputs);
+            var points = Stratified.evenly(inputs, allocation.get());
             if (points.cells().isEmpty()) {
                 findings.add(
                         path + ".cells",
@@ -138,18 +152,56 @@ public final class Layouts {
             all *= entry.getValue();
             cells.put(name, (int) Math.min(entry.getValue(), Integer.MAX_VALUE));
         }
-        if (all > Stratified.MOST_CELLS) {
+        return isFit(allocation.get(), all) ? Optional.of(new Stratified(cells, allocation.get())) : Optional.empty();
+    }
+
+    private Optional<Allocation> allocation() {
+        String word = settings.allocation().orElse(EQUAL);
+        return switch (word) {
+            case EQUAL -> Optional.of(new Allocation.Equal());
+            case NEYMAN -> Optional.of(new Allocation.Neyman());
+            default -> {
+                findings.add(
+                        path + ".allocation",
+                        "allocation is \"%s\" but must be \"equal\" or \"neyman\"".formatted(word),
+                        "It is how the draws of a pass are shared among the cells.");
+                yield Optional.empty();
+            }
+        };
+    }
+
+    /// @param cells of the grid
+    private boolean isFit(Allocation allocation, double cells) {
+        boolean shared = allocation instanceof Allocation.Neyman;
+        if (shared && cells == 1) {
+            findings.add(
+                    path + ".allocation",
+                    "the draws of a pass have one cell to go to",
+                    "\"neyman\" shares them among cells by how much outcomes vary there.",
+                    "Cut an input into several, as \"cells\": {\"%s\": 64}.".formatted(inputs.getFirst()));
+            return false;
+        }
+        int least = shared ? Stratified.LEAST_SHARED : 1;
+        int most = Stratified.MOST_DRAWS / least;
+        if (cells > most) {
             findings.add(
                     path + ".cells",
-                    String.format(Locale.ROOT, "the grid has %,.0f cells", all),
-                    String.format(
-                            Locale.ROOT,
-                            "Every pass makes a draw in each; at most %,d fit into an item of work.",
-                            Stratified.MOST_CELLS),
+                    String.format(Locale.ROOT, "the grid has %,.0f cells", cells),
+                    shared
+                            ? String.format(
+                                    Locale.ROOT,
+                                    "To be shared, the draws of a pass are %d for each on average; with at most %,d cells"
+                                            + " they fit into an item of work.",
+                                    least,
+                                    most)
+                            : String.format(
+                                    Locale.ROOT,
+                                    "Every pass makes a draw in each; at most %,d fit into an item of work.",
+                                    most),
                     "Stratify fewer inputs, or coarser.");
-            return Optional.empty();
+            return false;
         }
-        return Optional.of(new Stratified(cells));
+        return true;
     }
 
     private Optional<Points> latinHypercube() {

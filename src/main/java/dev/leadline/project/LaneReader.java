@@ -57,7 +57,8 @@ final class LaneReader {
                         .orElse(new LinkedHashMap<>()),
                 fields.has("scrambling") ? Optional.of(fields.text("scrambling", DraftReader.NAME)) : Optional.empty(),
                 fields.count("particles", 1, MOST),
-                fields.count("repetitions", 1, MOST));
+                fields.count("repetitions", 1, MOST),
+                fields.has("allocation") ? Optional.of(fields.text("allocation", DraftReader.NAME)) : Optional.empty());
     }
 
     private SequencedMap<String, Long> cells(Fields fields) {

@@ -21,6 +21,7 @@ final class LaneWriter {
             settings.cells().forEach((input, count) -> cells.put(input, Json.of(count)));
             fields.put("cells", cells.build());
         }
+        settings.allocation().ifPresent(word -> fields.put("allocation", word));
         settings.scrambling().ifPresent(word -> fields.put("scrambling", word));
         count(fields, "particles", settings.particles());
         count(fields, "repetitions", settings.repetitions());

@@ -12,6 +12,7 @@ import dev.leadline.model.Plan;
 import dev.leadline.model.Project;
 import dev.leadline.model.Reference;
 import dev.leadline.model.Sentence;
+import dev.leadline.scheme.Stratified;
 import dev.leadline.study.Comparison;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
@@ -80,7 +81,11 @@ public final class RunJson {
                         "grounds",
                         Json.list(lane.grounds().stream().map(RunJson::ground).toList()));
         trace.scheme().tuned().ifPresent(tuned -> json.put("tuning", TuningJson.of(project.question(), tuned)));
-        trace.extremes().filter(_ -> last.isPresent()).ifPresent(draws -> json.put("weights", weights(trace, draws)));
+        if (trace.scheme().points() instanceof Stratified points) {
+            points.found()
+                    .ifPresent(found -> json.put("allocation", AllocationJson.of(project.question(), points, found)));
+        }
+        trace.weighted().filter(_ -> last.isPresent()).ifPresent(draws -> json.put("weights", weights(trace, draws)));
         if (!trace.failures().isEmpty()) {
             json.put(
                     "failures",

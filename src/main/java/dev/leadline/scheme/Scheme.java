@@ -70,6 +70,16 @@ public record Scheme(
         return drawFrom.isPresent() || adapted.isPresent();
     }
 
+    /// Whether what a draw counts is not the same for all.
+    public boolean isUneven() {
+        return isWeighted() || allotted().isPresent();
+    }
+
+    /// How the draws of a pass were shared before the run.
+    public Optional<Allocation.Found> allotted() {
+        return points instanceof Stratified cells ? cells.found() : Optional.empty();
+    }
+
     /// What was found before the run.
     public Optional<Tuned> tuned() {
         return adapted.flatMap(density -> density instanceof Tuned tuned ? Optional.of(tuned) : Optional.empty());
@@ -80,9 +90,14 @@ public record Scheme(
         return new Scheme(points, drawFrom, controls, crossFitted, Optional.of(tuned));
     }
 
+    /// This scheme with other points.
+    public Scheme with(Points others) {
+        return new Scheme(others, drawFrom, controls, crossFitted, adapted);
+    }
+
     /// This scheme as a lane of so many draws has it.
     public Scheme within(long draws) {
-        return new Scheme(points.within(draws / turns()), drawFrom, controls, crossFitted, adapted);
+        return with(points.within(draws / turns()));
     }
 
     /// As `independent, v from gumbel(42, 4), 10 % from its own, 2 control variates`.

@@ -6,30 +6,48 @@ import java.util.Arrays;
 import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
 import java.util.SequencedMap;
 import java.util.stream.Collectors;
 
-/// Passes over a grid of equally probable cells, one draw in each cell and pass: the pass is the observation.
+/// Passes over a grid of equally probable cells, each drawn from in every pass: the observation is a pass,
+/// the mean over the cells of the means in them.
 ///
-/// What varies between cells is gone from the error; what varies within them is left.
+/// What varies between cells is gone from the error; what varies within them is left. Where draws are shared
+/// by a pilot, which may miss what is rare, no cell has less than an eighth of the even share.
 ///
 /// @param cells parts of the range of probabilities of an input, by its name; an input that is not named has one
-public record Stratified(SequencedMap<String, Integer> cells) implements Growing {
+public record Stratified(SequencedMap<String, Integer> cells, Allocation allocation) implements Growing {
     public static final String WORD = "stratified";
 
-    /// Cells of a grid at most, as many as the draws of an item of work.
-    public static final int MOST_CELLS = 65_536;
+    /// Draws of a pass at most, as many as an item of work has.
+    public static final int MOST_DRAWS = 65_536;
 
-    private static final int USUAL_CELLS = 1024;
+    /// Draws of a pass for each cell, on average, where they are shared by a pilot; fewer where a pass would
+    /// be too long.
+    public static final int SHARED = 8;
+
+    /// The same for the largest grid.
+    public static final int LEAST_SHARED = 4;
+
+    private static final int USUAL_DRAWS = 1024;
 
     public Stratified {
         cells = Collections.unmodifiableSequencedMap(new LinkedHashMap<>(cells));
     }
 
-    /// As many cells for each input, at most 1,024 in all; empty for more than ten inputs, which get none.
-    public static Stratified evenly(List<String> inputs) {
+    /// One draw in each cell and pass.
+    public Stratified(SequencedMap<String, Integer> cells) {
+        this(cells, new Allocation.Equal());
+    }
+
+    /// As many cells for each input, with at most 1,024 draws in a pass; none where there are too many
+    /// inputs, of which ten can have two cells, or seven where draws are shared by a pilot.
+    public static Stratified evenly(List<String> inputs, Allocation allocation) {
+        int most = allocation instanceof Allocation.Equal ? USUAL_DRAWS : USUAL_DRAWS / SHARED;
         int each = 1;
-        while (!inputs.isEmpty() && power(each + 1, inputs.size()) <= USUAL_CELLS) {
+        while (!inputs.isEmpty() && power(each + 1, inputs.size()) <= most) {
             each++;
         }
         var cells = new LinkedHashMap<String, Integer>();
@@ -38,7 +56,7 @@ public record Stratified(SequencedMap<String, Integer> cells) implements Growing
                 cells.put(input, each);
             }
         }
-        return new Stratified(cells);
+        return new Stratified(cells, allocation);
     }
 
     private static double power(int base, int exponent) {
@@ -59,12 +77,50 @@ public record Stratified(SequencedMap<String, Integer> cells) implements Growing
         return word() + " in "
                 + cells.entrySet().stream()
                         .map(entry -> entry.getValue() + " cells of " + entry.getKey())
-                        .collect(Collectors.joining(" × "));
+                        .collect(Collectors.joining(" × "))
+                + switch (allocation) {
+                    case Allocation.Equal _ -> "";
+                    case Allocation.Neyman _ -> ", draws shared by a pilot";
+                    case Allocation.Found found -> inWords(found);
+                };
+    }
+
+    private static String inWords(Allocation.Found found) {
+        int least = Collections.min(found.draws());
+        int most = Collections.max(found.draws());
+        return String.format(
+                Locale.ROOT,
+                ", %s of %,d draws to a cell by a pilot of %,d",
+                least == most ? String.valueOf(least) : least + " to " + most,
+                found.pass(),
+                found.pilot());
+    }
+
+    /// Of the grid.
+    public int cellsInAll() {
+        return cells.values().stream().mapToInt(Integer::intValue).reduce(1, Math::multiplyExact);
     }
 
     @Override
     public int drawsPerObservation() {
-        return cells.values().stream().mapToInt(Integer::intValue).reduce(1, Math::multiplyExact);
+        return switch (allocation) {
+            case Allocation.Equal _ -> cellsInAll();
+            case Allocation.Neyman _ -> Math.min(SHARED * cellsInAll(), MOST_DRAWS);
+            case Allocation.Found found -> found.pass();
+        };
+    }
+
+    /// How draws are shared, once that is found.
+    public Optional<Allocation.Found> found() {
+        return allocation instanceof Allocation.Found found ? Optional.of(found) : Optional.empty();
+    }
+
+    /// The draws that this shares by a pilot, shared by what it saw.
+    ///
+    /// @param deviations standard deviation within each cell
+    /// @param pilot its draws
+    public Stratified shared(double[] deviations, long pilot) {
+        return new Stratified(cells, Allocation.Found.of(deviations, drawsPerObservation(), pilot));
     }
 
     @Override
@@ -74,19 +130,35 @@ public record Stratified(SequencedMap<String, Integer> cells) implements Growing
         int[] parts = coordinates.stream()
                 .mapToInt(name -> cells.getOrDefault(name, 1))
                 .toArray();
-        char[][] cell = grid(parts, pass);
+        char[][] cell = grid(parts, order(pass));
         return stretch -> new Passes(keys.open(stretch.item()), parts, cell, pass);
     }
 
-    /// The cell of each draw of a pass, for each coordinate that has several.
-    private static char[][] grid(int[] parts, int pass) {
+    /// The cell of the grid of each draw of a pass.
+    private int[] order(int pass) {
+        int[] order = new int[pass];
+        if (allocation instanceof Allocation.Found found) {
+            int from = 0;
+            for (int c = 0; c < found.draws().size(); c++) {
+                int until = from + found.draws().get(c);
+                Arrays.fill(order, from, until, c);
+                from = until;
+            }
+        } else {
+            Arrays.setAll(order, i -> i);
+        }
+        return order;
+    }
+
+    /// The part that each draw of a pass lies in, for each coordinate that has several.
+    private static char[][] grid(int[] parts, int[] order) {
         char[][] cell = new char[parts.length][];
         int stride = 1;
         for (int j = 0; j < parts.length; j++) {
             if (parts[j] > 1) {
-                cell[j] = new char[pass];
-                for (int i = 0; i < pass; i++) {
-                    cell[j][i] = (char) (i / stride % parts[j]);
+                cell[j] = new char[order.length];
+                for (int i = 0; i < order.length; i++) {
+                    cell[j][i] = (char) (order[i] / stride % parts[j]);
                 }
                 stride *= parts[j];
             }

@@ -11,7 +11,9 @@ public enum Purpose {
     /// Draws that say which scheme to recommend.
     PILOT(6),
     /// Draws that the densities to draw from are found by.
-    TUNING(10);
+    TUNING(10),
+    /// Draws that show how the draws of a pass are best shared among its cells.
+    ALLOCATION(11);
 
     private final int number;
 

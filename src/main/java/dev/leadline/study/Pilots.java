@@ -74,21 +74,14 @@ final class Pilots implements AutoCloseable {
 
     private static LaneDraft withReplicates(LaneDraft draft) {
         var settings = draft.settings();
-        return new LaneDraft(
-                draft.name(),
-                draft.points(),
-                new Settings(
-                        OptionalLong.of(REPLICATES),
-                        settings.cube(),
-                        settings.cells(),
-                        settings.scrambling(),
-                        settings.particles(),
-                        settings.repetitions()),
-                draft.drawFrom(),
-                draft.nominalShare(),
-                draft.selfNormalised(),
-                draft.controls(),
-                draft.crossFitted());
+        return draft.with(new Settings(
+                OptionalLong.of(REPLICATES),
+                settings.cube(),
+                settings.cells(),
+                settings.scrambling(),
+                settings.particles(),
+                settings.repetitions(),
+                settings.allocation()));
     }
 
     private Optional<Pilot> run(LaneDraft draft, Lane lane, String address) throws InterruptedException {

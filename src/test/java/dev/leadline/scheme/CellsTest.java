@@ -89,16 +89,46 @@ class CellsTest {
         assertEquals(0.5, y, 4 * Math.sqrt(1 / 12.0 / 1400), "an input without cells is free");
     }
 
+    /// Draws stand cell by cell, x running fastest, as many as was found.
+    @Test
+    void aPassOfSharedDrawsHasAsManyInEachCellAsWasFound() {
+        var shared = new Stratified(new LinkedHashMap<>(Map.of("z", 2, "x", 3)), new Allocation.Neyman());
+        var points = shared.shared(new double[] {1, 0, 2, 5, 3, .5}, 96);
+        var draws = points.found().orElseThrow().draws();
+        assertEquals(48, points.drawsPerObservation());
+        assertEquals(48, shared.drawsPerObservation());
+        double[][] u = draws(points, List.of("x", "y", "z"), 2, 48 * 60);
+        for (int pass = 0; pass < 60; pass++) {
+            int i = 48 * pass;
+            for (int c = 0; c < 6; c++) {
+                for (int k = 0; k < draws.get(c); k++, i++) {
+                    assertEquals(c, (int) (u[0][i] * 3) + 3 * (int) (u[2][i] * 2), "draw " + i);
+                }
+            }
+        }
+    }
+
     @Test
     void strataAreEvenlySpreadOverInputs() {
         var names = new ArrayList<String>();
         int[] each = {1024, 32, 10, 5, 4, 3, 2, 2, 2, 2};
         for (int d = 1; d <= 10; d++) {
             names.add("x" + d);
-            assertEquals(each[d - 1], Stratified.evenly(names).cells().get("x1"), d + " inputs");
+            assertEquals(
+                    each[d - 1],
+                    Stratified.evenly(names, new Allocation.Equal()).cells().get("x1"),
+                    d + " inputs");
         }
         names.add("x11");
-        assertTrue(Stratified.evenly(names).cells().isEmpty());
+        int[] shared = {128, 11, 5, 3, 2, 2, 2};
+        for (int d = 1; d <= 7; d++) {
+            var cells = Stratified.evenly(names.subList(0, d), new Allocation.Neyman());
+            assertEquals(shared[d - 1], cells.cells().get("x1"), d + " inputs");
+        }
+        assertTrue(Stratified.evenly(names.subList(0, 8), new Allocation.Neyman())
+                .cells()
+                .isEmpty());
+        assertTrue(Stratified.evenly(names, new Allocation.Equal()).cells().isEmpty());
     }
 
     @Test

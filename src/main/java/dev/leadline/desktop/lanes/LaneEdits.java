@@ -30,19 +30,8 @@ final class LaneEdits {
                         takes.contains("cells") ? s.cells() : new LinkedHashMap<>(),
                         takes.contains("scrambling") ? s.scrambling() : Optional.empty(),
                         takes.contains("particles") ? s.particles() : OptionalLong.empty(),
-                        takes.contains("repetitions") ? s.repetitions() : OptionalLong.empty()),
-                l.drawFrom(),
-                l.nominalShare(),
-                l.selfNormalised(),
-                l.controls(),
-                l.crossFitted());
-    }
-
-    private static LaneDraft settings(LaneDraft l, Settings settings) {
-        return new LaneDraft(
-                l.name(),
-                l.points(),
-                settings,
+                        takes.contains("repetitions") ? s.repetitions() : OptionalLong.empty(),
+                        takes.contains("allocation") ? s.allocation() : Optional.empty()),
                 l.drawFrom(),
                 l.nominalShare(),
                 l.selfNormalised(),
@@ -53,15 +42,14 @@ final class LaneEdits {
     /// A count of the layout, by the word of the file.
     static LaneDraft count(LaneDraft l, String word, OptionalLong count) {
         var s = l.settings();
-        return settings(
-                l,
-                new Settings(
-                        word.equals("replicates") ? count : s.replicates(),
-                        word.equals("cube") ? count : s.cube(),
-                        s.cells(),
-                        s.scrambling(),
-                        word.equals("particles") ? count : s.particles(),
-                        word.equals("repetitions") ? count : s.repetitions()));
+        return l.with(new Settings(
+                word.equals("replicates") ? count : s.replicates(),
+                word.equals("cube") ? count : s.cube(),
+                s.cells(),
+                s.scrambling(),
+                word.equals("particles") ? count : s.particles(),
+                word.equals("repetitions") ? count : s.repetitions(),
+                s.allocation()));
     }
 
     static OptionalLong count(LaneDraft l, String word) {
@@ -77,21 +65,26 @@ final class LaneEdits {
 
     static LaneDraft cells(LaneDraft l, String input, OptionalLong cells) {
         var s = l.settings();
-        return settings(
-                l,
-                new Settings(
-                        s.replicates(),
-                        s.cube(),
-                        with(s.cells(), input, cells.isPresent() ? Optional.of(cells.getAsLong()) : Optional.empty()),
-                        s.scrambling(),
-                        s.particles(),
-                        s.repetitions()));
+        return l.with(new Settings(
+                s.replicates(),
+                s.cube(),
+                with(s.cells(), input, cells.isPresent() ? Optional.of(cells.getAsLong()) : Optional.empty()),
+                s.scrambling(),
+                s.particles(),
+                s.repetitions(),
+                s.allocation()));
     }
 
     static LaneDraft scrambling(LaneDraft l, Optional<String> scrambling) {
         var s = l.settings();
-        return settings(
-                l, new Settings(s.replicates(), s.cube(), s.cells(), scrambling, s.particles(), s.repetitions()));
+        return l.with(new Settings(
+                s.replicates(), s.cube(), s.cells(), scrambling, s.particles(), s.repetitions(), s.allocation()));
+    }
+
+    static LaneDraft allocation(LaneDraft l, Optional<String> allocation) {
+        var s = l.settings();
+        return l.with(new Settings(
+                s.replicates(), s.cube(), s.cells(), s.scrambling(), s.particles(), s.repetitions(), allocation));
     }
 
     /// What belongs to weights goes with the last other density.

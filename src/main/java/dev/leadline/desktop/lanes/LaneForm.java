@@ -158,6 +158,13 @@ final class LaneForm extends VBox {
             fault(cells, LanesViewModel.path(i) + ".cells." + input);
             line.getChildren().add(pair(input, cells));
         }
+        var allocation = choice(
+                "lane-allocation",
+                "draws shared equally, or by a pilot: more in cells where outcomes vary more",
+                Layouts.allocations(),
+                word -> model.allocation(i, word));
+        updates.add(() -> allocation.setValue(model.allocationWord(i)));
+        line.getChildren().add(pair("allocation", allocation));
         return line;
     }
 

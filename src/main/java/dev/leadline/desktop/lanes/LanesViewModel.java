@@ -14,6 +14,7 @@ import dev.leadline.model.LaneDraft.ControlDraft;
 import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Mean;
 import dev.leadline.model.LaneDraft.Other;
+import dev.leadline.model.Layouts;
 import dev.leadline.problem.Problem;
 import dev.leadline.study.Comparison;
 import java.util.ArrayList;
@@ -231,7 +232,7 @@ public final class LanesViewModel {
 
     void points(int i, String word) {
         project.settle();
-        List.of("replicates", "cube", "cells", "scrambling", "particles", "repetitions")
+        List.of("replicates", "cube", "cells", "scrambling", "particles", "repetitions", "allocation")
                 .forEach(field -> project.forget(path(i) + "." + field));
         edit(i, ".points", lane -> LaneEdits.points(lane, word));
     }
@@ -289,6 +290,17 @@ public final class LanesViewModel {
 
     String scramblingWord(int i) {
         return lane(i).settings().scrambling().orElse("nested");
+    }
+
+    /// The usual one is not written.
+    void allocation(int i, String word) {
+        project.settle();
+        boolean usual = word.equals(Layouts.allocations().getFirst());
+        edit(i, ".allocation", lane -> LaneEdits.allocation(lane, usual ? Optional.empty() : Optional.of(word)));
+    }
+
+    String allocationWord(int i) {
+        return lane(i).settings().allocation().orElse(Layouts.allocations().getFirst());
     }
 
     // ---- what inputs are drawn from

@@ -20,6 +20,7 @@ final class SchemeWords {
         if (!s.cells().isEmpty()) {
             words.add("cells in " + String.join(", ", s.cells().keySet()));
         }
+        s.allocation().ifPresent(word -> words.add(word + " allocation"));
         s.particles().ifPresent(n -> words.add(n + " particles"));
         s.repetitions().ifPresent(n -> words.add(n + " repetitions"));
         switch (lane.drawFrom()) {

@@ -77,15 +77,7 @@ record DensityAt(
             others.putAll(before);
         }
         others.put(input, new Other.Another(density));
-        return new LaneDraft(
-                lane.name(),
-                lane.points(),
-                lane.settings(),
-                new DrawFrom.Inputs(others),
-                lane.nominalShare(),
-                lane.selfNormalised(),
-                lane.controls(),
-                lane.crossFitted());
+        return lane.with(new DrawFrom.Inputs(others));
     }
 
     private static Optional<DensityDraft> of(From from) {

@@ -8,13 +8,11 @@ import dev.leadline.model.LaneDraft.ControlDraft;
 import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Mean;
 import dev.leadline.model.LaneDraft.Other;
-import dev.leadline.model.LaneDraft.Settings;
 import dev.leadline.model.Project;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.SequencedMap;
 import java.util.function.BiFunction;
 import java.util.function.Function;
@@ -65,15 +63,9 @@ public final class Gains {
     }
 
     private static LaneDraft lane(SequencedMap<String, Other> others, List<ControlDraft> controls) {
-        return new LaneDraft(
-                "",
-                "independent",
-                Settings.NONE,
-                others.isEmpty() ? DrawFrom.NOTHING : new DrawFrom.Inputs(others),
-                OptionalDouble.empty(),
-                false,
-                controls,
-                false);
+        return LaneDraft.of("", "independent")
+                .with(others.isEmpty() ? DrawFrom.NOTHING : new DrawFrom.Inputs(others))
+                .with(controls);
     }
 
     private List<Input> inputs() {

@@ -3,12 +3,9 @@ package dev.leadline.study.candidate;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.LaneDraft;
 import dev.leadline.model.LaneDraft.ControlDraft;
-import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Mean;
-import dev.leadline.model.LaneDraft.Settings;
 import dev.leadline.model.Project;
 import java.util.List;
-import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 
 /// The inputs themselves as control variates, those whose mean is known.
@@ -30,17 +27,10 @@ record InputControls() implements Candidate {
         if (names.isEmpty()) {
             return List.of();
         }
-        var lane = new LaneDraft(
-                "",
-                "independent",
-                Settings.NONE,
-                DrawFrom.NOTHING,
-                OptionalDouble.empty(),
-                false,
-                names.stream()
+        var lane = LaneDraft.of("", "independent")
+                .with(names.stream()
                         .map(name -> new ControlDraft(name, new Mean.Exact()))
-                        .toList(),
-                false);
+                        .toList());
         return List.of(new Offer(
                 lane,
                 "the known %s of %s %s what follows the inputs in straight lines"

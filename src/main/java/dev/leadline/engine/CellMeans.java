@@ -1,0 +1,116 @@
+package dev.leadline.engine;
+
+import dev.leadline.estimate.Accumulator;
+import dev.leadline.formula.Program;
+import dev.leadline.scheme.Allocation;
+
+/// Observations that are the mean over cells of the means in them, which have different numbers of draws.
+/// Scratch of one worker.
+///
+/// Draws of a cell are summed one after the other, however they are divided over calls, so that equal passes
+/// give equal bits: what never varies shows no spread.
+final class CellMeans implements Folding {
+    /// Of each cell of a pass.
+    private final int[] draws;
+
+    /// What a draw of each cell counts, 1 on average.
+    private final double[] counts;
+
+    /// Cells of an observation, which may have several passes.
+    private final int cells;
+
+    /// Of each component: the sum in the cell that is under way, and that of the means of those before it.
+    private final double[] inCell;
+
+    private final double[] before;
+
+    private final double[][] observations;
+    private final double[][] counted;
+
+    /// The cell that is under way, and how many of its draws were seen.
+    private int cell;
+
+    private int seen;
+
+    /// @param turns passes of an observation
+    CellMeans(Allocation.Found found, int turns, int components) {
+        this.draws = found.draws().stream().mapToInt(Integer::intValue).toArray();
+        this.counts = found.counts();
+        this.cells = turns * draws.length;
+        this.inCell = new double[components];
+        this.before = new double[components];
+        this.observations = new double[components][Program.BLOCK];
+        this.counted = new double[components][Program.BLOCK];
+    }
+
+    @Override
+    public void open() {
+        cell = 0;
+        seen = 0;
+        for (int k = 0; k < inCell.length; k++) {
+            inCell[k] = 0;
+            before[k] = 0;
+        }
+    }
+
+    @Override
+    public boolean addTo(Accumulator sums, double[][] components, int rows) {
+        boolean finite = true;
+        int ended = 0;
+        int cellAfter = cell;
+        int seenAfter = seen;
+        for (int k = 0; k < components.length; k++) {
+            double[] x = components[k];
+            double sum = inCell[k];
+            double means = before[k];
+            double all = 0;
+            ended = 0;
+            cellAfter = cell;
+            seenAfter = seen;
+            for (int row = 0; row < rows; ) {
+                int wanted = draws[cellAfter % draws.length];
+                int until = Math.min(rows, row + wanted - seenAfter);
+                seenAfter += until - row;
+                for (; row < until; row++) {
+                    sum += x[row];
+                }
+                all += sum;
+                if (seenAfter == wanted) {
+                    means += sum / wanted;
+                    sum = 0;
+                    seenAfter = 0;
+                    cellAfter++;
+                }
+                if (cellAfter == cells) {
+                    observations[k][ended++] = means / cells;
+                    means = 0;
+                    cellAfter = 0;
+                }
+            }
+            inCell[k] = sum;
+            before[k] = means;
+            finite &= Double.isFinite(all);
+        }
+        cell = cellAfter;
+        seen = seenAfter;
+        sums.add(observations, 0, ended);
+        return finite;
+    }
+
+    @Override
+    public double[][] counted(double[][] components, int rows) {
+        int at = cell;
+        int used = seen;
+        for (int i = 0; i < rows; i++) {
+            double count = counts[at % draws.length];
+            for (int k = 0; k < components.length; k++) {
+                counted[k][i] = components[k][i] * count;
+            }
+            if (++used == draws[at % draws.length]) {
+                used = 0;
+                at++;
+            }
+        }
+        return counted;
+    }
+}
