@@ -77,6 +77,11 @@ public record LaneDraft(
                 OptionalLong.empty(),
                 OptionalLong.empty(),
                 Optional.empty());
+
+        /// The same with draws of a pass shared so.
+        public Settings sharedAs(String word) {
+            return new Settings(replicates, cube, cells, scrambling, particles, repetitions, Optional.of(word));
+        }
     }
 
     /// What inputs are drawn from instead of their own densities.

@@ -29,6 +29,7 @@ class WholeObservationsTest {
     @CsvSource(quoteCharacter = '\'', textBlock = """
             '"points": "antithetic"', 2, One observation of its scheme is the mean of 2 draws.
             '"points": "stratified", "cells": {"x": 7}', 7, One observation of its scheme is the mean of 7 draws.
+            '"points": "stratified", "cells": {"x": 7}, "allocation": "neyman"', 56, One observation of its scheme is the mean of 56 draws.
             '"points": "latin-hypercube"', 30, A point for each of its 30 cubes takes 30 draws.
             '"points": "latin-hypercube", "cube": 50', 50, One observation of its scheme is the mean of 50 draws.
             '"points": "scrambled-sobol"', 16, The first point of each of its 16 replicates takes 16 draws.

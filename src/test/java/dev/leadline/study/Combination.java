@@ -17,6 +17,7 @@ public record Combination(String points, String drawFrom, String controls, Strin
             "independent", "",
             "antithetic", "",
             "stratified", ", \"cells\": {\"x\": 8}",
+            "stratified, shared", ", \"cells\": {\"x\": 8}, \"allocation\": \"neyman\"",
             "latin-hypercube", "",
             "scrambled-sobol", "",
             "shifted-lattice", "",
@@ -86,7 +87,12 @@ public record Combination(String points, String drawFrom, String controls, Strin
 
     /// The words of all layouts.
     static List<String> layouts() {
-        return List.copyOf(POINTS.keySet());
+        return POINTS.keySet().stream().map(Combination::layout).distinct().toList();
+    }
+
+    /// The word of the layout, without what it is told.
+    private static String layout(String points) {
+        return points.replaceFirst(",.*", "");
     }
 
     double value() {
@@ -107,7 +113,7 @@ public record Combination(String points, String drawFrom, String controls, Strin
                         draws,
                         x,
                         ESTIMANDS.get(estimand).ask(),
-                        points,
+                        layout(points),
                         choice(POINTS, points) + choice(DRAW_FROM, drawFrom) + choice(CONTROLS, controls))));
     }
 

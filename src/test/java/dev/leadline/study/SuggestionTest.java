@@ -18,6 +18,7 @@ import dev.leadline.study.candidate.Candidates;
 import dev.leadline.study.candidate.Offer;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
@@ -90,6 +91,15 @@ class SuggestionTest {
     @Test
     void stratifiedPointsWhereNoFinerOnesAreTried() throws InterruptedException {
         assertEquals("stratified", recommended(without(HALVES, "sobol")).points());
+    }
+
+    /// All that varies lies in a fifteenth of the range of an input, in waves too short for any layout of points.
+    @Test
+    void stratifiedPointsWithSharedDrawsWhereNoOtherDensitiesAreTried() throws InterruptedException {
+        var corner = project(2, NORMAL, "{\"mean\": \"if(x1 > 1.5, 1 + sin(9000*x2), 0)\"}");
+        var lane = recommended(without(corner, "Adapted", "Shifted", "Tilted", "Widened"));
+        assertEquals("stratified", lane.points());
+        assertEquals(Optional.of("neyman"), lane.settings().allocation());
     }
 
     /// What adds up input by input.

@@ -1,5 +1,6 @@
 package dev.leadline.study.candidate;
 
+import dev.leadline.model.LaneDraft;
 import java.util.List;
 
 /// All of them.
@@ -8,6 +9,10 @@ public final class Candidates {
             new OwnLanes(),
             new LaidOut("antithetic", "opposite draws cancel what rises or falls with an input"),
             new LaidOut("stratified", "draws are spread over cells, which takes out the differences between them"),
+            new LaidOut(
+                    shared(),
+                    "draws are spread over cells, more where a pilot saw the outcome vary more, which takes out the"
+                            + " differences between them"),
             new LaidOut(
                     "latin-hypercube",
                     "every part of the range of every input is drawn equally often, which takes out what adds up"
@@ -24,4 +29,9 @@ public final class Candidates {
                     "grid", "parts of inputs that count more are drawn more often, as draws before the run taught"));
 
     private Candidates() {}
+
+    private static LaneDraft shared() {
+        var lane = LaneDraft.of("", "stratified");
+        return lane.with(lane.settings().sharedAs("neyman"));
+    }
 }

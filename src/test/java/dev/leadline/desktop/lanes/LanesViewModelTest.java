@@ -99,6 +99,14 @@ class LanesViewModelTest {
         lanes.points(0, "stratified");
         lanes.cells(0, "x", "64");
         assertEquals(lane("{\"name\": \"A\", \"points\": \"stratified\", \"cells\": {\"x\": 64}}"), lanes.lane(0));
+        lanes.allocation(0, "neyman");
+        assertEquals("neyman", lanes.allocationWord(0));
+        assertEquals(
+                lane("{\"name\": \"A\", \"points\": \"stratified\", \"cells\": {\"x\": 64},"
+                        + " \"allocation\": \"neyman\"}"),
+                lanes.lane(0));
+        lanes.allocation(0, "equal");
+        assertEquals("equal", lanes.allocationWord(0));
         lanes.cells(0, "x", "");
         assertEquals(lane("{\"name\": \"A\", \"points\": \"stratified\"}"), lanes.lane(0));
     }
