@@ -30,7 +30,7 @@ public record Weights(String title, long seed, List<Weighed> lanes) implements S
         }
 
         static Weighed of(Trace trace) {
-            Optional<Extremes> extremes = trace.weighted().filter(e -> e.draws() > 0);
+            Optional<Extremes> extremes = trace.extremes().filter(e -> e.draws() > 0);
             return extremes.map(e -> of(trace, e))
                     .orElse(new Weighed(trace.lane(), trace.scheme().inWords(), List.of(), 0, Double.NaN));
         }
@@ -60,7 +60,7 @@ public record Weights(String title, long seed, List<Weighed> lanes) implements S
 
     /// Whether there is something to see.
     public static boolean isSeen(List<Trace> traces) {
-        return traces.stream().anyMatch(trace -> trace.weighted().isPresent());
+        return traces.stream().anyMatch(trace -> trace.extremes().isPresent());
     }
 
     public static Weights of(Question question, Plan plan, List<Trace> traces) {

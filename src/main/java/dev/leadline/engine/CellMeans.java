@@ -99,17 +99,20 @@ final class CellMeans implements Folding {
 
     @Override
     public double[][] counted(double[][] components, int rows) {
-        int at = cell;
-        int used = seen;
-        for (int i = 0; i < rows; i++) {
-            double count = counts[at % draws.length];
-            for (int k = 0; k < components.length; k++) {
-                counted[k][i] = components[k][i] * count;
+        int at = cell % draws.length;
+        int until = Math.min(rows, draws[at] - seen);
+        for (int row = 0; row < rows; ) {
+            double count = counts[at];
+            for (int k = 0; k < counted.length; k++) {
+                double[] x = components[k];
+                double[] y = counted[k];
+                for (int i = row; i < until; i++) {
+                    y[i] = x[i] * count;
+                }
             }
-            if (++used == draws[at % draws.length]) {
-                used = 0;
-                at++;
-            }
+            row = until;
+            at = (at + 1) % draws.length;
+            until = Math.min(rows, row + draws[at]);
         }
         return counted;
     }

@@ -47,7 +47,7 @@ public final class LaneRun {
         this.workers = workers;
         this.tally = Tally.of(items, recipe.components());
         this.extremes =
-                recipe.lane().scheme().isUneven() ? Optional.of(new Extremes(recipe.components())) : Optional.empty();
+                recipe.lane().scheme().isWeighted() ? Optional.of(new Extremes(recipe.components())) : Optional.empty();
         this.budget = items.whole(stop.draws());
     }
 

@@ -53,8 +53,7 @@ public final class Sampler implements ItemWork {
         this.weights = new Weights(recipe);
         this.folding = folding;
         this.sums = new Accumulator(outcomes.length);
-        this.extremes =
-                recipe.lane().scheme().isUneven() ? Optional.of(new Extremes(outcomes.length)) : Optional.empty();
+        this.extremes = isWeighted ? Optional.of(new Extremes(outcomes.length)) : Optional.empty();
     }
 
     @Override

@@ -4,6 +4,7 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Extremes;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.Student;
+import java.util.Arrays;
 import java.util.Optional;
 
 /// Whether an event has been seen often enough, and its opposite too. The rarer of the two counts; 25 of it is common
@@ -18,7 +19,7 @@ final class Hits {
         if (answer.hits().isEmpty() || answer.observations() == 0) {
             return answer.estimand() instanceof Estimand.Probability && answer.observations() > 0
                     ? evidence.trace()
-                            .weighted()
+                            .extremes()
                             .map(draws -> weighted(evidence, draws, k))
                             .or(() -> folded(evidence, k))
                     : Optional.empty();
@@ -31,12 +32,13 @@ final class Hits {
         if (!evidence.answers().get(k).interval().kind().equals(Student.KIND)) {
             return Optional.empty();
         }
-        var uneven = evidence.trace().extremes();
-        if (uneven.isPresent()) {
-            return judged(evidence, k, uneven.get().nonzero(k), uneven.get().draws());
+        double mean = evidence.total().mean(k);
+        if (evidence.trace().scheme().allotted().isPresent() && mean > 0 && mean < 1) {
+            // Cells count alike and have different numbers of draws: hits do not follow from their share.
+            return Optional.empty();
         }
         double draws = evidence.total().count() * evidence.drawsPerObservation();
-        return judged(evidence, k, Math.round(evidence.total().mean(k) * draws), Math.round(draws));
+        return judged(evidence, k, Math.round(mean * draws), Math.round(draws));
     }
 
     private static Optional<Ground> judged(Evidence evidence, int k, long hits, long all) {
@@ -51,13 +53,22 @@ final class Hits {
         }
         String text = rarer == 0
                 ? "no %s in %s: a part of probability below %s may be unseen"
-                        .formatted(what, draws, Numbers.value(Math.min(1, 3.0 / all)))
+                        .formatted(what, draws, Numbers.value(Math.min(1, 3.0 / (all * leastShare(evidence)))))
                 : "only %d %s in %s".formatted(rarer, rarer == 1 ? what : plural(what), draws);
         return Optional.of(Ground.doubted(
                 "hits",
                 Strength.CAUTION,
                 of + text,
                 "Make more draws: %d %s or more are wanted".formatted(ENOUGH, plural(what))));
+    }
+
+    /// Draws of the cell that has fewest, over the even share; 1 where nothing is shared.
+    private static double leastShare(Evidence evidence) {
+        return evidence.trace()
+                .scheme()
+                .allotted()
+                .map(found -> 1 / Arrays.stream(found.counts()).max().orElseThrow())
+                .orElse(1.0);
     }
 
     /// A miss needs no weight, so that only hits count.

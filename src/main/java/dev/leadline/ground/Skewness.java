@@ -16,7 +16,7 @@ final class Skewness {
     static Optional<Ground> judge(Evidence evidence, int k) {
         var sums = evidence.total();
         double skewness = sums.count() < 3 ? Double.NaN : sums.skewness(k);
-        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability) {
+        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability && !isJudgedByPasses(evidence, k)) {
             return Optional.empty();
         }
         if (Double.isNaN(skewness)) {
@@ -48,6 +48,14 @@ final class Skewness {
                                                         + " the observations"
                                                 : "Make more draws")
                                         + "; until then the interval misses more often than it says"));
+    }
+
+    /// Of an event whose hits are not counted; for rare ones the rule asks for 25 of them, as [Hits] does.
+    private static boolean isJudgedByPasses(Evidence evidence, int k) {
+        var scheme = evidence.trace().scheme();
+        return scheme.allotted().isPresent()
+                && !scheme.isWeighted()
+                && !evidence.total().constant(k);
     }
 
     private static String observations(double count, double draws) {

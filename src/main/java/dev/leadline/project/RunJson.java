@@ -85,7 +85,7 @@ public final class RunJson {
             points.found()
                     .ifPresent(found -> json.put("allocation", AllocationJson.of(project.question(), points, found)));
         }
-        trace.weighted().filter(_ -> last.isPresent()).ifPresent(draws -> json.put("weights", weights(trace, draws)));
+        trace.extremes().filter(_ -> last.isPresent()).ifPresent(draws -> json.put("weights", weights(trace, draws)));
         if (!trace.failures().isEmpty()) {
             json.put(
                     "failures",

@@ -70,11 +70,6 @@ public record Scheme(
         return drawFrom.isPresent() || adapted.isPresent();
     }
 
-    /// Whether what a draw counts is not the same for all.
-    public boolean isUneven() {
-        return isWeighted() || allotted().isPresent();
-    }
-
     /// How the draws of a pass were shared before the run.
     public Optional<Allocation.Found> allotted() {
         return points instanceof Stratified cells ? cells.found() : Optional.empty();

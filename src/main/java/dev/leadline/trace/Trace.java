@@ -12,8 +12,8 @@ import java.util.Optional;
 /// @param scheme as it was run
 /// @param marks oldest first; empty before the first item is in
 /// @param blocks sums of consecutive blocks of draws, at most 64 (see [Blocks])
-/// @param extremes of the draws one by one: outcomes by what they count, control variates likewise, and the
-///     weights where there are some; empty where every draw counts 1
+/// @param extremes of the draws one by one: outcomes by their weights, control variates likewise, and the weights;
+///     empty where every draw counts 1
 /// @param failures the first 20
 /// @param stopReason empty while the lane runs or pauses
 public record Trace(
@@ -39,11 +39,6 @@ public record Trace(
             List<Failure> failures,
             Optional<String> stopReason) {
         this(lane, scheme, marks, blocks, Optional.empty(), failures, stopReason);
-    }
-
-    /// The extremes of weighted draws: the last component is the weight.
-    public Optional<Extremes> weighted() {
-        return extremes.filter(_ -> scheme.isWeighted());
     }
 
     public Optional<Mark> last() {

@@ -5,16 +5,11 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.estimate.Extremes;
-import dev.leadline.scheme.Adaptation;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.Scheme;
-import dev.leadline.scheme.Share;
-import dev.leadline.scheme.Tuned;
 import dev.leadline.trace.Trace;
 import java.util.List;
 import java.util.Optional;
-import java.util.Set;
-import java.util.TreeSet;
 import org.junit.jupiter.api.Test;
 
 class WeightsTest {
@@ -22,10 +17,9 @@ class WeightsTest {
     private static Trace weighed() {
         var extremes = new Extremes(2);
         extremes.add(new double[][] {{1, 0, 0, 0}, {1, 4, 1, 2}}, 4);
-        var wish = new Adaptation(Adaptation.Way.GRID, new TreeSet<>(Set.of(0)), Share.of(.1));
         return new Trace(
                 "B",
-                Scheme.of(new Independent()).with(Tuned.untouched(wish)),
+                Scheme.of(new Independent()),
                 List.of(),
                 List.of(),
                 Optional.of(extremes),
