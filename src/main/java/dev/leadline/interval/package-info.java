@@ -1,7 +1,17 @@
 /// Intervals for a fixed number of draws.
 ///
-/// Start with [Interval][dev.leadline.interval.Interval]; [Student][dev.leadline.interval.Student] makes one for a
-/// mean, [ClopperPearson][dev.leadline.interval.ClopperPearson] one for a probability from independent draws,
-/// [SplittingSteps][dev.leadline.interval.SplittingSteps] one for a probability from splitting. Every interval says its
-/// kind, its level and what it takes for granted, and none is ever 0 ± 0.
+/// Start with [Interval][dev.leadline.interval.Interval]. Every interval says its kind, its level and what it takes for
+/// granted, and none is ever 0 ± 0; [Sides][dev.leadline.interval.Sides] gives the limit of one side of each.
+///
+/// - A mean: [Student][dev.leadline.interval.Student], [SkewnessCorrected][dev.leadline.interval.SkewnessCorrected],
+///   [BootstrapT][dev.leadline.interval.BootstrapT]; within known bounds [Hoeffding][dev.leadline.interval.Hoeffding],
+///   [EmpiricalBernstein][dev.leadline.interval.EmpiricalBernstein].
+/// - A probability: [ClopperPearson][dev.leadline.interval.ClopperPearson], [Wilson][dev.leadline.interval.Wilson],
+///   [SplittingSteps][dev.leadline.interval.SplittingSteps] from splitting, [NoHit][dev.leadline.interval.NoHit].
+/// - A quantile: [Ranks][dev.leadline.interval.Ranks] of independent draws, else
+///   [InvertedCdf][dev.leadline.interval.InvertedCdf]; a distribution function: [Dkw][dev.leadline.interval.Dkw].
+/// - What is made of means: [Delta][dev.leadline.interval.Delta], [Fieller][dev.leadline.interval.Fieller] for a ratio,
+///   [LogScale][dev.leadline.interval.LogScale] for a standard deviation.
+///
+/// [CoverageInterval][dev.leadline.interval.CoverageInterval] says where an outcome lies, not what is known of it.
 package dev.leadline.interval;

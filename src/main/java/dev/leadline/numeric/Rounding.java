@@ -55,6 +55,23 @@ public record Rounding(String value, Optional<String> uncertainty, Optional<Inte
                 exponent);
     }
 
+    /// How far a number may be off for so many significant digits of its uncertainty to mean something: half a unit of
+    /// the last of them.
+    ///
+    /// Source: JCGM 101:2008, 7.9.2.
+    ///
+    /// @param uncertainty above 0, finite
+    /// @param digits at least 1
+    public static double tolerance(double uncertainty, int digits) {
+        if (!(uncertainty > 0 && uncertainty < Double.POSITIVE_INFINITY)) {
+            throw new IllegalArgumentException("Uncertainty is " + uncertainty + " but must be above 0 and finite");
+        }
+        BigDecimal rounded = decimal(uncertainty).round(new MathContext(digits, RoundingMode.HALF_EVEN));
+        return new BigDecimal("0.5")
+                .scaleByPowerOfTen(1 - digits + leadingPlace(rounded))
+                .doubleValue();
+    }
+
     /// An upper limit that stands alone: its own two significant digits, rounded upwards.
     ///
     /// @param limit at least 0

@@ -13,7 +13,9 @@ public enum Purpose {
     /// Draws that the densities to draw from are found by.
     TUNING(10),
     /// Draws that show how the draws of a pass are best shared among its cells.
-    ALLOCATION(11);
+    ALLOCATION(11),
+    /// Draws from the observations themselves, of which an interval is made.
+    BOOTSTRAP(16);
 
     private final int number;
 

@@ -2,6 +2,7 @@ package dev.leadline.estimate;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
+import dev.leadline.ReferenceValues;
 import java.util.Arrays;
 import java.util.random.RandomGeneratorFactory;
 import org.junit.jupiter.api.Test;
@@ -63,5 +64,70 @@ class RatioOfMeansTest {
         double error = Math.sqrt(squares / repetitions / repetitions);
         assertEquals(.0025, off / repetitions, 4 * error + .0001);
         assertEquals(1, variance / squares, .05);
+    }
+
+    /// Record prop-gum-h2: three quantities from five simultaneous readings of voltage, current and phase.
+    /// The ratio of the first two is a ratio of means; the others have their linear part from the same
+    /// covariances here.
+    @Test
+    void agreesWithTheImpedance() {
+        var id = "prop-gum-h2";
+        var data = ReferenceValues.record(id).required("data");
+        double[] volt = ReferenceValues.numbers(data.required("V"));
+        double[] ampere = Arrays.stream(ReferenceValues.numbers(data.required("I_mA")))
+                .map(x -> x / 1000)
+                .toArray();
+        double[] phase = ReferenceValues.numbers(data.required("phi"));
+        var sums = new Accumulator(3);
+        sums.add(new double[][] {volt, ampere, phase}, 0, 5);
+        agrees(id, "V_mean", sums.mean(0));
+        agrees(id, "I_mean", sums.mean(1));
+        agrees(id, "phi_mean", sums.mean(2));
+        agrees(id, "r_VI", correlation(sums, 0, 1));
+        agrees(id, "r_Vphi", correlation(sums, 0, 2));
+        agrees(id, "r_Iphi", correlation(sums, 1, 2));
+        var ratio = RatioOfMeans.of(sums, 0, 1);
+        agrees(id, "Z", ratio.value());
+        agrees(id, "u_Z", ratio.standardError());
+        double z = ratio.value();
+        double cos = Math.cos(sums.mean(2));
+        double sin = Math.sin(sums.mean(2));
+        double[] ofR = {cos / sums.mean(1), -z * cos / sums.mean(1), -z * sin};
+        double[] ofX = {sin / sums.mean(1), -z * sin / sums.mean(1), z * cos};
+        double[] ofZ = {1 / sums.mean(1), -z / sums.mean(1), 0};
+        agrees(id, "u_R", Math.sqrt(linear(sums, ofR, ofR)));
+        agrees(id, "u_X", Math.sqrt(linear(sums, ofX, ofX)));
+        agrees(id, "r_RX", linear(sums, ofR, ofX) / Math.sqrt(linear(sums, ofR, ofR) * linear(sums, ofX, ofX)));
+        agrees(id, "r_XZ", linear(sums, ofX, ofZ) / Math.sqrt(linear(sums, ofX, ofX) * linear(sums, ofZ, ofZ)));
+    }
+
+    private static double correlation(Accumulator sums, int j, int k) {
+        return sums.covariance(j, k) / Math.sqrt(sums.variance(j) * sums.variance(k));
+    }
+
+    private static double linear(Accumulator sums, double[] slopes, double[] others) {
+        double sum = 0;
+        for (int j = 0; j < 3; j++) {
+            for (int k = 0; k < 3; k++) {
+                sum += slopes[j] * others[k] * sums.covariance(j, k) / sums.count();
+            }
+        }
+        return sum;
+    }
+
+    /// Record acc-weighted-logspace: its standard error has the divisor n where this one has n - 1.
+    @Test
+    void agreesWithAWeightedMean() {
+        var id = "acc-weighted-logspace";
+        double[] weights = {.5, 1, 2, 4.5};
+        double[] weighted = {.5 * 3, -1, 2 * 2, 4.5 * .5};
+        var ratio = of(weighted, weights);
+        agrees(id, "weighted_mean", ratio.value());
+        agrees(id, "self_normalised_se", ratio.standardError() * Math.sqrt(3 / 4.0));
+    }
+
+    private static void agrees(String id, String name, double actual) {
+        double expected = ReferenceValues.expected(id, name);
+        assertEquals(expected, actual, ReferenceValues.relativeTolerance(id) * Math.abs(expected), name);
     }
 }

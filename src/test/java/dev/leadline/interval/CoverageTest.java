@@ -6,6 +6,7 @@ import dev.leadline.estimate.Accumulator;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
 import dev.leadline.stream.Stream;
+import dev.leadline.stream.StreamKey;
 import java.util.function.Function;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -42,6 +43,21 @@ class CoverageTest {
     @CsvSource({"EXPONENTIAL, 10, .934", "EXPONENTIAL, 30, .946", "EXPONENTIAL, 100, .948", "LOGNORMAL_1, 100, .936"})
     void skewnessCorrectedCoversAsItShould(Observed density, int n, double coverage) {
         covers(density, n, 20_000, coverage, sums -> SkewnessCorrected.of(sums, 0, .95));
+    }
+
+    /// The repetitions are few, since each takes 1,999 samples.
+    @ParameterizedTest(name = "{0}, n = {1}: {2}")
+    @CsvSource({"LOGNORMAL_1, 30, .932", "LOGNORMAL_1, 100, .934"})
+    void bootstrapTCoversAsItShould(Observed density, int n, double coverage) {
+        var random = Observed.random(SEED + n);
+        int repetitions = 2_000;
+        int covered = 0;
+        for (int r = 0; r < repetitions; r++) {
+            var key = StreamKey.of(new Address(SEED, Purpose.BOOTSTRAP, "A", r, density + " " + n, 0));
+            var interval = BootstrapT.of(density.draws(random, n), .95, key);
+            covered += interval.low() <= density.mean && density.mean <= interval.high() ? 1 : 0;
+        }
+        gate(coverage, covered, repetitions, OTHER_ERROR);
     }
 
     private static void covers(

@@ -40,6 +40,19 @@ class StudentTest {
         within(STATED_ERROR, t, Student.quantile(degrees, level));
     }
 
+    /// Record int-common-practice: the normal multipliers, from which t differs by a relative `(z² + 1)/(4 ν)`.
+    @ParameterizedTest
+    @CsvSource({"z_975, .95", "z_95, .9", "z_995, .99"})
+    void isNormalWithManyDegrees(String name, double level) {
+        within(3e-12, ReferenceValues.expected("int-common-practice", name), Student.quantile(1e12, level));
+    }
+
+    /// Record prop-gum-h1: the multiplier of its expanded uncertainty.
+    @Test
+    void agreesWithTheEndGauge() {
+        within(1e-10, ReferenceValues.expected("prop-gum-h1", "t_99_16"), Student.quantile(16, .99));
+    }
+
     /// Record int-student-zarr13: the summary of 195 readings.
     @Test
     void makesTheIntervalOfASummary() {

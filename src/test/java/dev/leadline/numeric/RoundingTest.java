@@ -55,13 +55,13 @@ class RoundingTest {
         assertEquals(up, rounding.up(high));
     }
 
-    /// JCGM 100:2008, 7.2.2 and 7.2.6, from memory; by hand.
     @Test
     void aLimitOfZeroHasNoPowerOfTen() {
         assertEquals("0", Rounding.of(1.2e-5, 3e-6).down(0));
         assertEquals("0.000", Rounding.of(.12, .013).down(0));
     }
 
+    /// Record prop-rounding-report: JCGM 100:2008, 7.2.2 and 7.2.6, from memory; by hand.
     @Test
     void agreesWithCommonPractice() {
         int checked = 0;
@@ -76,6 +76,14 @@ class RoundingTest {
             checked++;
         }
         assertEquals(7, checked);
+    }
+
+    /// Record prop-jcgm101-tolerance, whose statement names the uncertainties and their digits.
+    @ParameterizedTest
+    @CsvSource({"1, 0.00035, 2", "2, 2, 1", "3, 0.0754, 2", "4, 0.0754, 1", "5, 35.8, 2", "6, 0.0996, 2"})
+    void numericalToleranceFollowsTheSupplement(int which, double uncertainty, int digits) {
+        double expected = ReferenceValues.expected("prop-jcgm101-tolerance", "delta_" + which);
+        assertEquals(expected, Rounding.tolerance(uncertainty, digits));
     }
 
     /// Nothing is rounded, and `± 0` is never printed.
@@ -110,6 +118,13 @@ class RoundingTest {
         assertEquals("NaN", Rounding.of(Double.NaN, 0.1).value());
         assertEquals("-∞", Rounding.of(Double.NEGATIVE_INFINITY, 0.1).value());
         assertEquals(Optional.of("0.10"), Rounding.of(Double.NaN, 0.1).uncertainty());
+    }
+
+    @Test
+    void refusesToleranceWithoutUncertainty() {
+        assertThrows(IllegalArgumentException.class, () -> Rounding.tolerance(0, 2));
+        assertThrows(IllegalArgumentException.class, () -> Rounding.tolerance(Double.POSITIVE_INFINITY, 2));
+        assertThrows(IllegalArgumentException.class, () -> Rounding.tolerance(Double.NaN, 2));
     }
 
     @Test
