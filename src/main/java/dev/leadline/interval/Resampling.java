@@ -7,7 +7,7 @@ import java.util.Arrays;
 /// observations, and the standard errors of those means. Each sample has a stream of its own, so that it
 /// does not depend on the others.
 ///
-/// Cost: 3 ns for an observation of a sample.
+/// Cost: 2 ns for an observation of a sample, 3 ns where there are 100,000.
 final class Resampling {
     /// Deviations from the mean, in parts of the largest, so that no square overflows.
     private final double[] deviations;
