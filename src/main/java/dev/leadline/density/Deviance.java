@@ -12,7 +12,7 @@ public final class Deviance {
     /// `a log(a / x) + x - a`.
     ///
     /// @param difference `x - a`, which a caller may know better than the subtraction would
-    static double of(double a, double x, double difference) {
+    public static double of(double a, double x, double difference) {
         double u = difference / a;
         return Math.abs(u) < 0.5 ? -a * logOnePlusLess(u) : difference - a * Log.log(x / a);
     }
