@@ -44,6 +44,13 @@ enum Observed {
         double draw(RandomGenerator random) {
             return Math.exp(random.nextExponential() / 1.5);
         }
+    },
+    /// 1 in 100 is 1, the others 0.
+    BERNOULLI_01(.01, Math.sqrt(.0099)) {
+        @Override
+        double draw(RandomGenerator random) {
+            return random.nextDouble() < .01 ? 1 : 0;
+        }
     };
 
     final double mean;
