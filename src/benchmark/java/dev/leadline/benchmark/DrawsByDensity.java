@@ -86,8 +86,8 @@ public final class DrawsByDensity {
                 %s
 
                 What is slower by its nature: quantiles that span more decades than doubles hold (gamma and Weibull of very \
-                small shape, beta of parameters below about 0.05) go through a power of two; where parts of a mixture lie far \
-                apart, or a density has kinks, cells are graded, and a few draws are searched; discrete densities of more \
+                small shape, beta of parameters below about 0.05) are powers of what is tabulated; where parts of a mixture lie \
+                far apart, or a density has kinks, cells are graded, and a few draws are searched; discrete densities of more \
                 values than are kept cost a search or a quantile each.
 
                 | density | ns | times the normal |

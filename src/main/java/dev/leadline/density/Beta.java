@@ -206,7 +206,7 @@ public record Beta(double alpha, double beta, double from, double to) implements
 
         @Override
         public Link link() {
-            return Link.LOG_OF_ENDS;
+            return Link.ROOT_OF_ENDS;
         }
 
         @Override

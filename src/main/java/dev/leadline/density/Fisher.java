@@ -99,7 +99,7 @@ public record Fisher(double dof1, double dof2) implements Scaled {
 
         @Override
         public Link link() {
-            return Link.LOG;
+            return Link.ROOT;
         }
 
         @Override

@@ -106,7 +106,7 @@ public record Gamma(double shape, double scale) implements Scaled {
 
         @Override
         public Link link() {
-            return Link.LOG;
+            return Link.ROOT;
         }
 
         @Override

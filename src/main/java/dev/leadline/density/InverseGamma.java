@@ -84,7 +84,7 @@ public record InverseGamma(double shape, double scale) implements Scaled {
 
         @Override
         public Link link() {
-            return Link.LOG;
+            return Link.ROOT;
         }
 
         @Override

@@ -87,7 +87,7 @@ public record LogLogistic(double shape, double scale) implements Scaled {
 
         @Override
         public Link link() {
-            return Link.LOG;
+            return Link.ROOT;
         }
 
         @Override

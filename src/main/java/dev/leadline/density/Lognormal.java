@@ -133,7 +133,7 @@ public record Lognormal(double mu, double sigma) implements Scaled {
 
         @Override
         public Link link() {
-            return Link.LOG;
+            return Link.ROOT;
         }
 
         @Override

@@ -28,13 +28,16 @@ import java.util.HexFormat;
 /// @param cells the coefficients, lowest degree first; of one that has parts, the first is its number among the wholes
 ///     that have
 /// @param parts of each octave below `2^-16`, lower tail first, then of cells
-record Table(Density shape, Link link, int bits, long[] grades, double[] cells, Parts parts, double uError)
+record Table(Density shape, Link link, int bits, int[] grades, double[] cells, Parts parts, double uError)
         implements Curve {
     /// Octaves of each tail that have cells, from `2^-16` to 1/2.
     static final int OCTAVES = 15;
 
     /// Octaves below them, down to `2^-53`, the smallest probability drawn.
     static final int DEEP = 37;
+
+    /// Of the smallest table, and of every one whose cells are not alike.
+    static final int SMALLEST_BITS = 5;
 
     /// Coefficients of a cell.
     static final int STRIDE = 6;
@@ -44,6 +47,9 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
 
     static final double MARKED = Double.longBitsToDouble(0x7ff8_0000_0000_0000L | MARK);
 
+    /// Draws between two looks at the marks.
+    private static final int STRETCH = 64;
+
     private static final double SEAM = 0x1p-16;
     private static final double BELOW_SEAM = Math.nextDown(SEAM);
     private static final double SMALLEST = 0x1p-53;
@@ -52,6 +58,14 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
 
     /// Of the lower tail's first octave.
     private static final int FIRST_EXPONENT = Double.MAX_EXPONENT - 16;
+
+    /// How far the addresses of cells that are not alike are shifted, before they are cut; and the first of them.
+    private static final int GRADED = MANTISSA - SMALLEST_BITS;
+
+    private static final int FIRST_GRADED = (FIRST_EXPONENT << SMALLEST_BITS) - 1;
+
+    /// Bits of the shift in a grade.
+    private static final int ADDRESS = 6;
 
     /// For the tail at hand, 1, and for the other `2^16`: `1 + near (FACTOR near - FACTOR)`.
     private static final double FACTOR = 0x1p15 - 0.5;
@@ -79,12 +93,12 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
         return number(bits, tail, -1, (1 << bits) - 1);
     }
 
-    /// @param number of a cell, where they are alike
+    /// @param number of a cell, before it is cut
     /// @param cut how often it is halved
     /// @param first of those it is cut into, among all
-    static long grade(int bits, int number, int cut, int first) {
-        int leading = (first(bits) + number) << cut;
-        return (long) (first - leading) << 32 | (MANTISSA - bits - cut);
+    static int grade(int number, int cut, int first) {
+        int leading = (FIRST_GRADED + number) << cut;
+        return (first - leading) << ADDRESS | (GRADED - cut);
     }
 
     /// Exponent and leading bits of what lies below the lower tail.
@@ -100,11 +114,10 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
             }
             return;
         }
-        var columns = Columns.ofThread(n);
         double side = Math.signum(scale);
         double[] given = u;
         if (u == x) {
-            given = columns.a();
+            given = Column.ofThread(n);
             System.arraycopy(u, 0, given, 0, n);
         }
         if (link.isSum()) {
@@ -112,20 +125,20 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
             return;
         }
         tabulated(given, x, n, -0.0, 1, side);
-        link.invert(x, n, columns);
-        for (int i = 0; i < n; i++) {
-            x[i] = Math.fma(scale, x[i], location);
-        }
+        link.invert(x, n, location, scale);
     }
 
     /// @param side 1, or -1 where the other tail is wanted
     private void tabulated(double[] u, double[] x, int n, double location, double scale, double side) {
         tails(u, x, n, side);
-        long marks = grades.length == 0
-                ? alike(cells, bits, x, n, location, scale)
-                : graded(cells, grades, bits, x, n, location, scale);
-        if ((marks & MARK) != 0) {
-            mend(u, x, n, location, scale, side);
+        for (int from = 0; from < n; from += STRETCH) {
+            int to = Math.min(n, from + STRETCH);
+            long marks = grades.length == 0
+                    ? alike(cells, bits, x, from, to, location, scale)
+                    : graded(cells, grades, x, from, to, location, scale);
+            if ((marks & MARK) != 0) {
+                mend(u, x, from, to, location, scale, side);
+            }
         }
     }
 
@@ -141,11 +154,11 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
     }
 
     /// @return all marks seen
-    private static long alike(double[] c, int bits, double[] x, int n, double location, double scale) {
+    private static long alike(double[] c, int bits, double[] x, int from, int to, double location, double scale) {
         int shift = MANTISSA - bits;
         int first = first(bits);
         long marks = 0;
-        for (int i = 0; i < n; i++) {
+        for (int i = from; i < to; i++) {
             long address = Double.doubleToRawLongBits(x[i]);
             int k = ((int) (address >>> shift) - first) * STRIDE;
             double y = polynomial(c, k, argument(address, shift));
@@ -155,15 +168,14 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
         return marks;
     }
 
-    private static long graded(double[] c, long[] grades, int bits, double[] x, int n, double location, double scale) {
-        int shift = MANTISSA - bits;
-        int first = first(bits);
+    private static long graded(double[] c, int[] grades, double[] x, int from, int to, double location, double scale) {
         long marks = 0;
-        for (int i = 0; i < n; i++) {
+        for (int i = from; i < to; i++) {
             long address = Double.doubleToRawLongBits(x[i]);
-            long grade = grades[(int) (address >>> shift) - first];
-            int k = ((int) (address >>> (int) grade) + (int) (grade >> 32)) * STRIDE;
-            double y = polynomial(c, k, argument(address, (int) grade));
+            int grade = grades[(int) (address >>> GRADED) - FIRST_GRADED];
+            long leading = address >>> grade;
+            int k = ((int) leading + (grade >> ADDRESS)) * STRIDE;
+            double y = polynomial(c, k, Double.longBitsToDouble((address - (leading << grade)) | ONE) - 1);
             marks |= Double.doubleToRawLongBits(c[k + 5]);
             x[i] = Math.fma(scale, y, location);
         }
@@ -171,8 +183,8 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
     }
 
     /// No probability is below the smallest drawn, which moves none by more than that, `1.1e-16`.
-    private void mend(double[] u, double[] x, int n, double location, double scale, double side) {
-        for (int i = 0; i < n; i++) {
+    private void mend(double[] u, double[] x, int from, int to, double location, double scale, double side) {
+        for (int i = from; i < to; i++) {
             if (Double.isNaN(x[i])) {
                 double p = Math.max(Math.min(u[i], 1 - u[i]), SMALLEST);
                 boolean upper = (0.5 - u[i]) * side < 0;
@@ -189,9 +201,9 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
 
     private double part(double p, boolean upper) {
         long address = Double.doubleToRawLongBits(upper ? 0x1p16 * p : p);
-        long grade = grades[(int) (address >>> (MANTISSA - bits)) - first(bits)];
-        int k = ((int) (address >>> (int) grade) + (int) (grade >> 32)) * STRIDE;
-        return parts.at((int) cells[k], argument(address, (int) grade));
+        int grade = grades[(int) (address >>> GRADED) - FIRST_GRADED];
+        int k = ((int) (address >>> grade) + (grade >> ADDRESS)) * STRIDE;
+        return parts.at((int) cells[k], argument(address, grade));
     }
 
     private static double argument(long address, int shift) {
@@ -213,17 +225,17 @@ record Table(Density shape, Link link, int bits, long[] grades, double[] cells, 
 
     @Override
     public long bytes() {
-        return 8L * (cells.length + grades.length) + parts.bytes();
+        return 8L * cells.length + 4L * grades.length + parts.bytes();
     }
 
     @Override
     public String hash() {
         double[] from = parts.from();
         double[] coefficients = parts.coefficients();
-        var bytes = ByteBuffer.allocate(8 * (1 + grades.length + cells.length + from.length + coefficients.length));
+        var bytes = ByteBuffer.allocate(4 * grades.length + 8 * (1 + cells.length + from.length + coefficients.length));
         bytes.putInt(link.ordinal()).putInt(bits);
-        for (long grade : grades) {
-            bytes.putLong(grade);
+        for (int grade : grades) {
+            bytes.putInt(grade);
         }
         bytes.asDoubleBuffer().put(cells).put(from).put(coefficients);
         try {

@@ -30,9 +30,6 @@ final class TableFit {
     /// A few times the distance between neighbouring u.
     private static final double FEW_ULP = 1e-15;
 
-    /// Of the smallest table.
-    private static final int BITS = 5;
-
     /// A table whose cells are cut this often is as fast with all cells alike.
     private static final int FEW_CUTS = 2;
 
@@ -86,15 +83,15 @@ final class TableFit {
     /// The smallest and fastest table that is accurate; where none is, one that has no cells.
     ///
     /// A shape that has a link is smooth through it: what its plain table misses, it misses by rounding, and
-    /// parts would only hide that. Of few cuts a plain table is faster than a power of two.
+    /// parts would only hide that. Of few cuts a plain table is faster than a power.
     static Table of(Density shape) {
         Optional<Table> table = Optional.empty();
         if (shape instanceof Linked linked) {
             table = smooth(shape, Link.NONE, 1);
-            if (table.isEmpty() && linked.link() == Link.LOG_OF_ENDS) {
+            if (table.isEmpty() && linked.link() == Link.ROOT_OF_ENDS) {
                 table = smooth(shape, Link.ENDS, 3);
             }
-            if (table.isEmpty() && linked.link() == Link.LOG && shape.quantile(0x1p-53) > 0.5) {
+            if (table.isEmpty() && linked.link() == Link.ROOT && shape.quantile(0x1p-53) > 0.5) {
                 table = smooth(shape, Link.ABOVE_ONE, 1);
             }
             table = table.or(() -> smooth(shape, Link.NONE, FEW_CUTS)).or(() -> smooth(shape, linked.link(), 3));
@@ -103,18 +100,18 @@ final class TableFit {
     }
 
     private static Optional<Table> smooth(Density shape, Link link, int cuts) {
-        return whole(shape, link, new TableFit(shape, link, BITS, cuts, false));
+        return whole(shape, link, new TableFit(shape, link, Table.SMALLEST_BITS, cuts, false));
     }
 
     private static Optional<Table> broken(Density shape) {
-        return whole(shape, Link.NONE, new TableFit(shape, Link.NONE, BITS, MOST_CUTS, true));
+        return whole(shape, Link.NONE, new TableFit(shape, Link.NONE, Table.SMALLEST_BITS, MOST_CUTS, true));
     }
 
     private static Optional<Table> whole(Density shape, Link link, TableFit fit) {
         var table = fit.table();
         boolean isSmooth = fit.parts.size() == 2 * Table.DEEP;
         return table.isPresent() && fit.mostCut > 0 && fit.mostCut <= FEW_CUTS && isSmooth
-                ? new TableFit(shape, link, BITS + fit.mostCut, 0, false)
+                ? new TableFit(shape, link, Table.SMALLEST_BITS + fit.mostCut, 0, false)
                         .table()
                         .or(() -> table)
                 : table;
@@ -122,7 +119,7 @@ final class TableFit {
 
     /// Without cells: every draw costs a quantile.
     static Table slow(Density shape) {
-        var slow = new Table(shape, Link.NONE, 0, new long[0], new double[0], Parts.NONE, 0);
+        var slow = new Table(shape, Link.NONE, 0, new int[0], new double[0], Parts.NONE, 0);
         return new Table(shape, Link.NONE, 0, slow.grades(), slow.cells(), Parts.NONE, worst(shape, slow));
     }
 
@@ -155,16 +152,16 @@ final class TableFit {
         for (int i = 0; i < cells.length; i++) {
             System.arraycopy(cells[i], 0, all, i * Table.STRIDE, Table.STRIDE);
         }
-        return new Table(shape, link, bits, new long[0], all, Parts.of(parts), worst);
+        return new Table(shape, link, bits, new int[0], all, Parts.of(parts), worst);
     }
 
     private Table graded() {
         var all = new double[Arrays.stream(cells).mapToInt(c -> c.length).sum()];
-        var grades = new long[cells.length];
+        var grades = new int[cells.length];
         int from = 0;
         for (int i = 0; i < cells.length; i++) {
             int cut = Integer.numberOfTrailingZeros(cells[i].length / Table.STRIDE);
-            grades[i] = Table.grade(bits, i, cut, from / Table.STRIDE);
+            grades[i] = Table.grade(i, cut, from / Table.STRIDE);
             System.arraycopy(cells[i], 0, all, from, cells[i].length);
             from += cells[i].length;
         }
@@ -364,7 +361,7 @@ final class TableFit {
         for (int i = 0; i < x.length; i++) {
             x[i] = at(c, cell.argument(cell.p(measured[i])));
         }
-        link.invert(x, x.length, Columns.ofThread(x.length));
+        link.invert(x, x.length, 0, 1);
         double largest = 0;
         for (int i = 0; i < x.length; i++) {
             double p = cell.p(measured[i]);

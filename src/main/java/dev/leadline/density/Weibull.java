@@ -139,7 +139,7 @@ public record Weibull(double shape, double scale, double from) implements Scaled
 
         @Override
         public Link link() {
-            return Link.LOG;
+            return Link.ROOT;
         }
 
         @Override
