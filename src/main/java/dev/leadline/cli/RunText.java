@@ -15,6 +15,7 @@ import dev.leadline.study.RatioText;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Answer;
 import dev.leadline.trace.Mark;
+import dev.leadline.trace.Trace;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -78,8 +79,21 @@ final class RunText {
         answers.forEach(this::answer);
         together(answers);
         line("  " + facts(lane, answers));
+        lane.trace().audit().flatMap(Trace::last).ifPresent(this::audit);
         line("");
         lane.grounds().forEach(this::ground);
+    }
+
+    private void audit(Mark plain) {
+        wrapped(
+                "  ",
+                String.format(
+                        Locale.ROOT,
+                        "audit: %,d draws from the inputs' own densities, which enter no interval above: %s",
+                        plain.draws(),
+                        String.join(
+                                ", ",
+                                plain.answers().stream().map(AnswerText::value).toList())));
     }
 
     /// What lanes are worth beside each other.

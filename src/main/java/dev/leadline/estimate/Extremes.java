@@ -15,6 +15,7 @@ public final class Extremes {
     private final Side[] lower;
     private final double[] size;
     private final double[] squares;
+    private final double[] ownSquares;
     private final long[] nonzero;
     private long draws;
 
@@ -25,6 +26,7 @@ public final class Extremes {
         Arrays.setAll(lower, _ -> new Side());
         size = new double[components];
         squares = new double[components];
+        ownSquares = new double[components];
         nonzero = new long[components];
     }
 
@@ -35,7 +37,18 @@ public final class Extremes {
         draws += rows;
         for (int k = 0; k < upper.length; k++) {
             add(k, values[k], rows);
+            ownSquares[k] += ownSquares(values[k], values[upper.length - 1], rows);
         }
+    }
+
+    /// `weight outcome²`, of outcomes by their weights.
+    private static double ownSquares(double[] values, double[] weights, int rows) {
+        double sum = 0;
+        for (int i = 0; i < rows; i++) {
+            double square = values[i] * (values[i] / weights[i]);
+            sum += Double.isFinite(square) ? square : 0;
+        }
+        return sum;
     }
 
     private void add(int k, double[] values, int rows) {
@@ -81,6 +94,7 @@ public final class Extremes {
             lower[k].merge(later.lower[k]);
             size[k] += later.size[k];
             squares[k] += later.squares[k];
+            ownSquares[k] += later.ownSquares[k];
             nonzero[k] += later.nonzero[k];
         }
     }
@@ -98,6 +112,7 @@ public final class Extremes {
             lower[k].clear();
             size[k] = 0;
             squares[k] = 0;
+            ownSquares[k] = 0;
             nonzero[k] = 0;
         }
     }
@@ -134,6 +149,12 @@ public final class Extremes {
     /// How many equal values would estimate their mean as well: the square of the sum of sizes over that of squares.
     public double effective(int k) {
         return size[k] * (size[k] / squares[k]);
+    }
+
+    /// The mean square that an outcome has where nothing is weighted, as far as these draws tell. The last
+    /// component are the weights.
+    public double ownSquare(int k) {
+        return ownSquares[k] / size[size.length - 1];
     }
 
     /// The greatest of many values, at most [#KEPT].

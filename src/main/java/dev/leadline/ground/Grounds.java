@@ -35,6 +35,7 @@ public final class Grounds {
         MeanWeight.judge(evidence).ifPresent(grounds::add);
         Mixing.judge(evidence).ifPresent(grounds::add);
         Stages.judge(evidence).ifPresent(grounds::add);
+        grounds.addAll(Audit.judge(evidence));
         grounds.addAll(ControlVariates.judge(evidence));
         grounds.add(FailedEvaluations.judge(evidence));
         NumericalTolerance.judge(evidence).ifPresent(grounds::add);

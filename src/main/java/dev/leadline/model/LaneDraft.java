@@ -14,6 +14,7 @@ import java.util.stream.Stream;
 /// @param nominalShare share of the draws from the inputs' own densities; empty means a tenth
 /// @param crossFitted whether coefficients of control variates come from other observations than they
 ///     correct
+/// @param audit draws from the inputs' own densities that the lane is compared with
 public record LaneDraft(
         String name,
         String points,
@@ -22,34 +23,53 @@ public record LaneDraft(
         OptionalDouble nominalShare,
         boolean selfNormalised,
         List<ControlDraft> controls,
-        boolean crossFitted) {
+        boolean crossFitted,
+        OptionalLong audit) {
     public LaneDraft {
         controls = List.copyOf(controls);
     }
 
     public static LaneDraft of(String name, String points) {
         return new LaneDraft(
-                name, points, Settings.NONE, DrawFrom.NOTHING, OptionalDouble.empty(), false, List.of(), false);
+                name,
+                points,
+                Settings.NONE,
+                DrawFrom.NOTHING,
+                OptionalDouble.empty(),
+                false,
+                List.of(),
+                false,
+                OptionalLong.empty());
     }
 
     /// The same under another name.
     public LaneDraft named(String other) {
-        return new LaneDraft(other, points, settings, drawFrom, nominalShare, selfNormalised, controls, crossFitted);
+        return new LaneDraft(
+                other, points, settings, drawFrom, nominalShare, selfNormalised, controls, crossFitted, audit);
     }
 
     /// The same with other settings of its points.
     public LaneDraft with(Settings others) {
-        return new LaneDraft(name, points, others, drawFrom, nominalShare, selfNormalised, controls, crossFitted);
+        return new LaneDraft(
+                name, points, others, drawFrom, nominalShare, selfNormalised, controls, crossFitted, audit);
     }
 
     /// The same drawn from other densities.
     public LaneDraft with(DrawFrom others) {
-        return new LaneDraft(name, points, settings, others, nominalShare, selfNormalised, controls, crossFitted);
+        return new LaneDraft(
+                name, points, settings, others, nominalShare, selfNormalised, controls, crossFitted, audit);
     }
 
     /// The same with other control variates.
     public LaneDraft with(List<ControlDraft> others) {
-        return new LaneDraft(name, points, settings, drawFrom, nominalShare, selfNormalised, others, crossFitted);
+        return new LaneDraft(
+                name, points, settings, drawFrom, nominalShare, selfNormalised, others, crossFitted, audit);
+    }
+
+    /// The same compared with so many draws from the inputs' own densities.
+    public LaneDraft audited(OptionalLong draws) {
+        return new LaneDraft(
+                name, points, settings, drawFrom, nominalShare, selfNormalised, controls, crossFitted, draws);
     }
 
     /// What a layout may be told; each layout takes some of it.

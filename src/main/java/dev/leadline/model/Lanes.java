@@ -16,6 +16,7 @@ import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalLong;
 import java.util.Set;
 import java.util.regex.Pattern;
 
@@ -158,7 +159,29 @@ final class Lanes {
                 lane.name(),
                 new Scheme(p, drawFrom, controlled, lane.crossFitted(), adapted),
                 draft.commonRandomNumbers(),
-                formulas));
+                formulas,
+                audit(lane, p, path)));
+    }
+
+    /// An audit looks for what other densities, or particles, miss; plain draws are audited by nothing better.
+    private OptionalLong audit(LaneDraft lane, Points points, String path) {
+        if (lane.audit().isEmpty()) {
+            return lane.audit();
+        }
+        long draws = lane.audit().getAsLong();
+        if (lane.drawFrom().equals(LaneDraft.DrawFrom.NOTHING) && !(points instanceof Repetitions)) {
+            findings.add(
+                    path + ".audit",
+                    "audit has nothing to check: the lane draws from the inputs' own densities",
+                    "It compares an answer by other densities with independent draws from the inputs' own.",
+                    "Leave it out, or add \"drawFrom\".");
+        } else if (draws < Lane.FEWEST_AUDITED || draws > Stop.MOST_DRAWS) {
+            findings.add(
+                    path + ".audit",
+                    "audit is %d but must be from %d to %d".formatted(draws, Lane.FEWEST_AUDITED, Stop.MOST_DRAWS),
+                    "It is the number of draws from the inputs' own densities that the lane is compared with.");
+        }
+        return lane.audit();
     }
 
     private void checkReplicates(Points points, int controls, String path) {

@@ -43,7 +43,8 @@ final class LaneReader {
                 fields.number("nominalShare"),
                 fields.flag("selfNormalised"),
                 controls(fields),
-                fields.flag("crossFitted"));
+                fields.flag("crossFitted"),
+                fields.count("audit", 1, Long.MAX_VALUE));
         fields.close(Map.of());
         return lane;
     }

@@ -40,6 +40,7 @@ final class LaneWriter {
         if (lane.crossFitted()) {
             fields.put("crossFitted", Json.of(true));
         }
+        count(fields, "audit", lane.audit());
         return fields.build();
     }
 

@@ -80,6 +80,7 @@ public final class RunJson {
                 .put(
                         "grounds",
                         Json.list(lane.grounds().stream().map(RunJson::ground).toList()));
+        trace.audit().ifPresent(audit -> json.put("audit", audit(audit)));
         trace.scheme().tuned().ifPresent(tuned -> json.put("tuning", TuningJson.of(project.question(), tuned)));
         if (trace.scheme().points() instanceof Stratified points) {
             points.found()
@@ -92,6 +93,19 @@ public final class RunJson {
                     Json.list(trace.failures().stream().map(this::failure).toList()));
         }
         return json.build();
+    }
+
+    /// Draws from the inputs' own densities, which enter no answer of the lane.
+    private static Json audit(Trace audit) {
+        List<Answer> answers = audit.last().map(Mark::answers).orElse(List.of());
+        return Json.object()
+                .put("draws", Json.of(audit.last().map(Mark::draws).orElse(0L)))
+                .put(
+                        "nonFinite",
+                        Json.of(answers.isEmpty() ? 0 : answers.getFirst().nonFinite()))
+                .put("stopReason", audit.stopReason().orElse(""))
+                .put("answers", Json.list(answers.stream().map(RunJson::answer).toList()))
+                .build();
     }
 
     /// @param draws of weights, the last component

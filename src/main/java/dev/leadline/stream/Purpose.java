@@ -14,6 +14,8 @@ public enum Purpose {
     TUNING(10),
     /// Draws that show how the draws of a pass are best shared among its cells.
     ALLOCATION(11),
+    /// Draws from the inputs' own densities that an answer by others is compared with.
+    AUDIT(12),
     /// Draws from the observations themselves, of which an interval is made.
     BOOTSTRAP(16);
 

@@ -4,15 +4,22 @@ import dev.leadline.engine.LaneRun;
 import dev.leadline.engine.Recipe;
 import dev.leadline.engine.Workers;
 import dev.leadline.ground.Grounds;
+import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
+import dev.leadline.model.Stop;
+import dev.leadline.stream.Purpose;
 import dev.leadline.study.StudyState.Activity;
 import dev.leadline.trace.Trace;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.ExecutionException;
 import java.util.function.Consumer;
+import java.util.stream.IntStream;
+import java.util.stream.Stream;
 
 /// A whole run of all lanes in the background, with live grounds. Safe for all threads.
 ///
@@ -28,6 +35,9 @@ public final class Study implements AutoCloseable {
     private final Object gate = new Object();
     private boolean paused;
     private boolean stopping;
+
+    /// Of each lane, draws that its answers are compared with; they take turns with those of the lanes.
+    private List<Optional<LaneRun>> audits = List.of();
 
     private volatile StudyState state = new StudyState(Activity.PREPARING, List.of(), List.of());
     private volatile Throwable fault;
@@ -103,6 +113,7 @@ public final class Study implements AutoCloseable {
             var runs = recipes.stream()
                     .map(recipe -> new LaneRun(recipe, plan.stop(), workers))
                     .toList();
+            audits = plan.settled().stream().map(this::audit).toList();
             watch.start();
             run(runs);
             publish(look(Activity.FINISHED, runs));
@@ -115,15 +126,25 @@ public final class Study implements AutoCloseable {
         }
     }
 
+    private Optional<LaneRun> audit(Lane lane) {
+        if (lane.audit().isEmpty()) {
+            return Optional.empty();
+        }
+        var recipe = Recipe.of(question, lane.plain(), plan.seed(), Purpose.AUDIT);
+        return Optional.of(new LaneRun(recipe, new Stop(lane.audit().getAsLong(), OptionalDouble.empty()), workers));
+    }
+
     private void run(List<LaneRun> runs) throws InterruptedException, ExecutionException {
         publish(look(Activity.RUNNING, runs));
+        List<LaneRun> all = Stream.concat(runs.stream(), audits.stream().flatMap(Optional::stream))
+                .toList();
         while (true) {
-            var next = runs.stream().filter(run -> !run.finished()).min(Comparator.comparingLong(LaneRun::draws));
+            var next = all.stream().filter(run -> !run.finished()).min(Comparator.comparingLong(LaneRun::draws));
             if (next.isEmpty()) {
                 return;
             }
             if (!mayGoOn(runs)) {
-                runs.forEach(run -> run.stop(watch.seconds()));
+                all.forEach(run -> run.stop(watch.seconds()));
                 return;
             }
             if (next.get().advance(watch.seconds())) {
@@ -157,7 +178,11 @@ public final class Study implements AutoCloseable {
     }
 
     private StudyState look(Activity activity, List<LaneRun> runs) {
-        List<Trace> traces = runs.stream().map(LaneRun::trace).toList();
+        List<Trace> traces = IntStream.range(0, runs.size())
+                .mapToObj(i -> audits.get(i)
+                        .map(audit -> runs.get(i).trace().beside(audit.trace()))
+                        .orElseGet(() -> runs.get(i).trace()))
+                .toList();
         return new StudyState(
                 activity,
                 traces.stream()

@@ -16,6 +16,8 @@ import java.util.Optional;
 ///     empty where every draw counts 1
 /// @param failures the first 20
 /// @param stopReason empty while the lane runs or pauses
+/// @param audit independent draws from the inputs' own densities, which enter no answer of the lane; empty
+///     where none are wanted
 public record Trace(
         String lane,
         Scheme scheme,
@@ -23,11 +25,24 @@ public record Trace(
         List<Accumulator> blocks,
         Optional<Extremes> extremes,
         List<Failure> failures,
-        Optional<String> stopReason) {
+        Optional<String> stopReason,
+        Optional<Trace> audit) {
     public Trace {
         marks = List.copyOf(marks);
         blocks = List.copyOf(blocks);
         failures = List.copyOf(failures);
+    }
+
+    /// Of a lane without an audit.
+    public Trace(
+            String lane,
+            Scheme scheme,
+            List<Mark> marks,
+            List<Accumulator> blocks,
+            Optional<Extremes> extremes,
+            List<Failure> failures,
+            Optional<String> stopReason) {
+        this(lane, scheme, marks, blocks, extremes, failures, stopReason, Optional.empty());
     }
 
     /// Of a lane whose draws count 1 each.
@@ -39,6 +54,11 @@ public record Trace(
             List<Failure> failures,
             Optional<String> stopReason) {
         this(lane, scheme, marks, blocks, Optional.empty(), failures, stopReason);
+    }
+
+    /// The same beside its audit.
+    public Trace beside(Trace plain) {
+        return new Trace(lane, scheme, marks, blocks, extremes, failures, stopReason, Optional.of(plain));
     }
 
     public Optional<Mark> last() {

@@ -205,4 +205,25 @@ class OtherDensitiesTest {
         }
         assertTrue(leadline("look", project, "--draw", 3).out().contains("weight"));
     }
+
+    /// P(Z > 2) = .02275013194817921 in tables.
+    @Test
+    void auditsStandBesideAnswers() throws IOException {
+        var path = project(
+                NORMAL, "\"probability\": \"x > 2\"", "\"drawFrom\": {\"x\": {\"shift\": 2}}, \"audit\": 40000");
+        var lane = run(path, "--json").json().required("lanes").get(0);
+        assertEquals(100_000, lane.required("draws").asInt());
+        var audit = lane.required("audit");
+        assertEquals(40_000, audit.required("draws").asInt());
+        assertEquals("all draws made", audit.required("stopReason").asString());
+        var answer = audit.required("answers").get(0);
+        assertEquals(.02275013, of(answer, "estimate"), 4 * Math.sqrt(.02275 * .97725 / 40_000));
+        assertEquals(of(answer, "estimate") * 40_000, answer.required("hits").asInt(), 1e-9);
+        String text = run(path).out();
+        assertTrue(
+                text.contains(
+                        "audit: 40,000 draws from the inputs' own densities, which enter no interval above: 0.02"),
+                text);
+        assertTrue(text.contains("hits in 40,000 audit draws from the inputs' own densities leave"), text);
+    }
 }

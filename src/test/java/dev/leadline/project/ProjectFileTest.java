@@ -123,7 +123,8 @@ class ProjectFileTest {
                                     new ControlDraft("v", new Mean.Exact()),
                                     new ControlDraft("v^2", new Mean.Stated(3)),
                                     new ControlDraft("x", new Mean.Quadrature())),
-                            true),
+                            true,
+                            OptionalLong.of(50_000)),
                     new LaneDraft(
                             "C",
                             "independent",
@@ -132,7 +133,8 @@ class ProjectFileTest {
                             OptionalDouble.empty(),
                             false,
                             List.of(),
-                            false)));
+                            false,
+                            OptionalLong.empty())));
 
     private static final long MUTATED_PROJECTS = 1_000;
 

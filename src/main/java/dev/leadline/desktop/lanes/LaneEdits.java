@@ -6,6 +6,7 @@ import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Other;
 import dev.leadline.model.LaneDraft.Settings;
 import dev.leadline.model.Layouts;
+import dev.leadline.scheme.Repetitions;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Optional;
@@ -36,7 +37,8 @@ final class LaneEdits {
                 l.nominalShare(),
                 l.selfNormalised(),
                 l.controls(),
-                l.crossFitted());
+                l.crossFitted(),
+                l.audit());
     }
 
     /// A count of the layout, by the word of the file.
@@ -87,6 +89,15 @@ final class LaneEdits {
                 s.replicates(), s.cube(), s.cells(), s.scrambling(), s.particles(), s.repetitions(), allocation));
     }
 
+    /// Only what may be missed is audited.
+    static LaneDraft audit(LaneDraft l, OptionalLong draws) {
+        return l.audited(isAuditable(l) ? draws : OptionalLong.empty());
+    }
+
+    static boolean isAuditable(LaneDraft l) {
+        return !l.drawFrom().equals(DrawFrom.NOTHING) || l.points().equals(Repetitions.WORD);
+    }
+
     /// What belongs to weights goes with the last other density.
     static LaneDraft drawFrom(LaneDraft l, DrawFrom drawFrom) {
         boolean weighted = !drawFrom.equals(DrawFrom.NOTHING);
@@ -99,7 +110,8 @@ final class LaneEdits {
                 weighted ? l.nominalShare() : OptionalDouble.empty(),
                 weighted && stated && l.selfNormalised(),
                 l.controls(),
-                l.crossFitted());
+                l.crossFitted(),
+                l.audit());
     }
 
     /// @param other empty for the input's own density
@@ -120,7 +132,8 @@ final class LaneEdits {
                 share,
                 l.selfNormalised(),
                 l.controls(),
-                l.crossFitted());
+                l.crossFitted(),
+                l.audit());
     }
 
     static LaneDraft selfNormalised(LaneDraft l, boolean self) {
@@ -132,7 +145,8 @@ final class LaneEdits {
                 l.nominalShare(),
                 self,
                 l.controls(),
-                l.crossFitted());
+                l.crossFitted(),
+                l.audit());
     }
 
     static LaneDraft controls(LaneDraft l, List<ControlDraft> controls) {
@@ -144,7 +158,8 @@ final class LaneEdits {
                 l.nominalShare(),
                 l.selfNormalised(),
                 controls,
-                l.crossFitted() && !controls.isEmpty());
+                l.crossFitted() && !controls.isEmpty(),
+                l.audit());
     }
 
     private static <V> SequencedMap<String, V> with(SequencedMap<String, V> map, String key, Optional<V> value) {

@@ -72,6 +72,7 @@ final class LaneForm extends VBox {
                 lane.points(),
                 model.sources(i),
                 model.isWeighted(i),
+                model.isAuditable(i),
                 model.inputs(),
                 model.drawnElsewhere(i),
                 model.drawnElsewhere(i).stream()
@@ -199,6 +200,19 @@ final class LaneForm extends VBox {
                 updates.add(() -> self.setSelected(model.lane(i).selfNormalised()));
                 line.getChildren().add(self);
             }
+        }
+        if (model.isAuditable(i)) {
+            var audit = field(
+                            "lane-audit",
+                            "draws of the audit",
+                            "Independent draws from the inputs' own densities that the answer is compared with; they"
+                                    + " enter no interval",
+                            7,
+                            text -> model.audit(i, text))
+                    .prompt("none");
+            updates.add(() -> audit.show(model.auditText(i)));
+            fault(audit, LanesViewModel.path(i) + ".audit");
+            line.getChildren().add(pair("audit draws", audit));
         }
         box.getChildren().add(line);
         if (model.sources(i) == Sources.STATED) {

@@ -234,7 +234,7 @@ public final class LanesViewModel {
         project.settle();
         List.of("replicates", "cube", "cells", "scrambling", "particles", "repetitions", "allocation")
                 .forEach(field -> project.forget(path(i) + "." + field));
-        edit(i, ".points", lane -> LaneEdits.points(lane, word));
+        edit(i, ".points", lane -> kept(LaneEdits.points(lane, word)));
     }
 
     /// @param word of a setting that is a count, as `replicates`
@@ -315,8 +315,8 @@ public final class LanesViewModel {
         edit(
                 i,
                 ".drawFrom",
-                lane -> LaneEdits.drawFrom(
-                        lane, sources == Sources.STATED ? DrawFrom.NOTHING : new DrawFrom.Adapted(sources.way)));
+                lane -> kept(LaneEdits.drawFrom(
+                        lane, sources == Sources.STATED ? DrawFrom.NOTHING : new DrawFrom.Adapted(sources.way))));
     }
 
     Sources sources(int i) {
@@ -351,7 +351,7 @@ public final class LanesViewModel {
             case TILT -> Optional.of(new Other.Tilt(NO_SHIFT));
             case ADAPT -> Optional.of(new Other.Adapt());
         };
-        edit(i, ".drawFrom." + input, lane -> LaneEdits.other(lane, input, other));
+        edit(i, ".drawFrom." + input, lane -> kept(LaneEdits.other(lane, input, other)));
     }
 
     private DensityDraft own(String input) {
@@ -415,6 +415,23 @@ public final class LanesViewModel {
 
     String nominalShareText(int i) {
         return project.fieldText(path(i) + ".nominalShare", lane(i).nominalShare());
+    }
+
+    /// Whether draws from the inputs' own densities may show what the lane misses.
+    boolean isAuditable(int i) {
+        return LaneEdits.isAuditable(lane(i));
+    }
+
+    void audit(int i, String text) {
+        typeCount(
+                path(i) + ".audit",
+                "audit of lane " + lane(i).name(),
+                text,
+                (d, draws) -> changed(d, i, lane -> LaneEdits.audit(lane, draws)));
+    }
+
+    String auditText(int i) {
+        return text(path(i) + ".audit", lane(i).audit());
     }
 
     void selfNormalised(int i, boolean self) {
@@ -488,6 +505,11 @@ public final class LanesViewModel {
                 i,
                 ".controlVariates[" + c + "]" + field,
                 lane -> LaneEdits.controls(lane, Edits.changed(lane.controls(), c, change)));
+    }
+
+    /// The audit goes with the last thing to audit.
+    private static LaneDraft kept(LaneDraft lane) {
+        return LaneEdits.audit(lane, lane.audit());
     }
 
     private void edit(int i, String field, UnaryOperator<LaneDraft> change) {

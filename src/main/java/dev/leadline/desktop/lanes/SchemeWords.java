@@ -5,6 +5,7 @@ import dev.leadline.model.DensityWords;
 import dev.leadline.model.LaneDraft;
 import dev.leadline.model.LaneDraft.DrawFrom;
 import dev.leadline.model.LaneDraft.Other;
+import java.util.Locale;
 import java.util.StringJoiner;
 
 /// How a lane samples, as written, in one line.
@@ -31,6 +32,7 @@ final class SchemeWords {
         if (controls > 0) {
             words.add(controls + (controls == 1 ? " control variate" : " control variates"));
         }
+        lane.audit().ifPresent(draws -> words.add(String.format(Locale.ROOT, "audit of %,d draws", draws)));
         return words.toString();
     }
 

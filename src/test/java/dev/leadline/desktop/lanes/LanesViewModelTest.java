@@ -126,6 +126,19 @@ class LanesViewModelTest {
         assertEquals(List.of(), problemsAt("$.lanes"));
     }
 
+    /// The audit goes with the last density to audit.
+    @Test
+    void auditsWhatIsDrawnFromElsewhere() {
+        assertFalse(lanes.isAuditable(0));
+        lanes.source(0, "x", Source.SHIFT);
+        lanes.audit(0, "50000");
+        assertEquals(OptionalLong.of(50_000), lanes.lane(0).audit());
+        lanes.audit(0, "5");
+        assertEquals(List.of("audit is 5 but must be from 1000 to 10000000000000"), problemsAt("$.lanes[0].audit"));
+        lanes.source(0, "x", Source.OWN);
+        assertEquals(lane("{\"name\": \"A\", \"points\": \"independent\"}"), lanes.lane(0));
+    }
+
     @Test
     void drawsAnInputFromElsewhere() {
         lanes.source(0, "x", Source.ANOTHER);
