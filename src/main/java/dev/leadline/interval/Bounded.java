@@ -3,6 +3,7 @@ package dev.leadline.interval;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.numeric.Shortest;
 import java.util.Optional;
+import java.util.function.DoubleUnaryOperator;
 
 /// What the kinds for observations within known bounds share.
 final class Bounded {
@@ -30,8 +31,27 @@ final class Bounded {
                 : Optional.empty();
     }
 
+    /// The limits wanted of `mean ± half`, as far as they lie within the bounds.
+    ///
+    /// @param half half the length at a level
     static Interval interval(
-            double mean, double half, double least, double most, double level, String kind, String assumption) {
-        return new Interval(mean - half, mean + half, level, kind, assumption, Optional.empty()).within(least, most);
+            double mean,
+            DoubleUnaryOperator half,
+            double least,
+            double most,
+            double level,
+            Sides sides,
+            String kind,
+            String assumption) {
+        return sides.of(
+                        level,
+                        twoSided -> new Interval(
+                                mean - half.applyAsDouble(twoSided),
+                                mean + half.applyAsDouble(twoSided),
+                                twoSided,
+                                kind,
+                                assumption,
+                                Optional.empty()))
+                .within(least, most);
     }
 }

@@ -20,20 +20,30 @@ public final class EmpiricalBernstein {
 
     private EmpiricalBernstein() {}
 
+    /// Both limits.
+    public static Interval of(Accumulator sums, int k, double least, double most, double level) {
+        return of(sums, k, least, most, level, Sides.BOTH);
+    }
+
     /// @param least bound of the observations of component k
     /// @param most bound, above `least`
-    public static Interval of(Accumulator sums, int k, double least, double most, double level) {
+    public static Interval of(Accumulator sums, int k, double least, double most, double level, Sides sides) {
         Level.check(level);
+        double range = most - least;
+        double sd = Math.sqrt(sums.variance(k)) / range;
+        // a variance that underflows is below 1e-300
+        double variance = Double.isNaN(sd) ? 0 : sd * sd;
         return Bounded.refusal(sums, k, 2, least, most)
                 .map(note -> Interval.none(level, KIND, ASSUMPTION, note))
-                .orElseGet(() -> {
-                    double range = most - least;
-                    double sd = Math.sqrt(sums.variance(k)) / range;
-                    // a variance that underflows is below 1e-300
-                    double variance = Double.isNaN(sd) ? 0 : sd * sd;
-                    double half = range * halfWidth(sums.count(), variance, level);
-                    return Bounded.interval(sums.mean(k), half, least, most, level, KIND, ASSUMPTION);
-                });
+                .orElseGet(() -> Bounded.interval(
+                        sums.mean(k),
+                        at -> range * halfWidth(sums.count(), variance, at),
+                        least,
+                        most,
+                        level,
+                        sides,
+                        KIND,
+                        ASSUMPTION));
     }
 
     /// Half the length where the bounds are 1 apart.

@@ -16,16 +16,26 @@ public final class Hoeffding {
 
     private Hoeffding() {}
 
+    /// Both limits.
+    public static Interval of(Accumulator sums, int k, double least, double most, double level) {
+        return of(sums, k, least, most, level, Sides.BOTH);
+    }
+
     /// @param least bound of the observations of component k
     /// @param most bound, above `least`
-    public static Interval of(Accumulator sums, int k, double least, double most, double level) {
+    public static Interval of(Accumulator sums, int k, double least, double most, double level, Sides sides) {
         Level.check(level);
         return Bounded.refusal(sums, k, 1, least, most)
                 .map(note -> Interval.none(level, KIND, ASSUMPTION, note))
-                .orElseGet(() -> {
-                    double half = (most - least) * halfWidth(sums.count(), level);
-                    return Bounded.interval(sums.mean(k), half, least, most, level, KIND, ASSUMPTION);
-                });
+                .orElseGet(() -> Bounded.interval(
+                        sums.mean(k),
+                        at -> (most - least) * halfWidth(sums.count(), at),
+                        least,
+                        most,
+                        level,
+                        sides,
+                        KIND,
+                        ASSUMPTION));
     }
 
     /// Half the length where the bounds are 1 apart.

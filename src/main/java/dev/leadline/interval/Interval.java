@@ -34,6 +34,11 @@ public record Interval(double low, double high, double level, String kind, Strin
         return Double.isNaN(low) && Double.isNaN(high);
     }
 
+    /// Whether a limit is missing.
+    boolean isLacking() {
+        return Double.isNaN(low) || Double.isNaN(high);
+    }
+
     /// The same limits, or the same reason for none, under the word of another kind.
     Interval as(String otherKind, String otherAssumption) {
         return new Interval(low, high, level, otherKind, otherAssumption, note);
@@ -69,8 +74,15 @@ public record Interval(double low, double high, double level, String kind, Strin
     }
 
     /// How far the value sought may lie from the estimate, as a numerical tolerance asks: half the length, and where
-    /// the interval is lopsided the distance of the farther limit. `NaN` where a limit is missing.
+    /// the interval is lopsided the distance of the farther limit; of one limit alone its distance. `NaN` where a
+    /// limit is missing.
     public double reach(double estimate) {
+        if (low == Double.NEGATIVE_INFINITY) {
+            return high - estimate;
+        }
+        if (high == Double.POSITIVE_INFINITY) {
+            return estimate - low;
+        }
         return lopsided(estimate) ? Math.max(high - estimate, estimate - low) : halfWidth();
     }
 

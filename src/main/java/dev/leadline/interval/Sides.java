@@ -1,5 +1,6 @@
 package dev.leadline.interval;
 
+import java.util.Optional;
 import java.util.function.DoubleFunction;
 
 /// Which limits of an interval are asked for.
@@ -39,7 +40,8 @@ public enum Sides {
         return 2 * level - 1;
     }
 
-    /// The limits wanted; in place of one that is not, `-∞` or `∞`.
+    /// The limits wanted; in place of one that is not, `-∞` or `∞`. Kinds whose notes speak of a side take
+    /// the sides themselves.
     ///
     /// @param kind the two-sided interval at a level
     public Interval of(double level, DoubleFunction<Interval> kind) {
@@ -49,6 +51,8 @@ public enum Sides {
         }
         double low = this == LOWER ? both.low() : Double.NEGATIVE_INFINITY;
         double high = this == UPPER ? both.high() : Double.POSITIVE_INFINITY;
-        return new Interval(low, high, level, both.kind(), both.assumption(), both.note());
+        boolean tellsTheOther = !Double.isNaN(low) && !Double.isNaN(high) && both.isLacking();
+        return new Interval(
+                low, high, level, both.kind(), both.assumption(), tellsTheOther ? Optional.empty() : both.note());
     }
 }

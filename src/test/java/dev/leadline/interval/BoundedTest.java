@@ -66,6 +66,26 @@ class BoundedTest {
         assertEquals(1 + bernstein, interval.high(), 1e-12);
     }
 
+    /// A limit alone has all that is left out: `ln(1/.05)` and `ln(2/.05)`. In place of the other stands
+    /// the bound.
+    @Test
+    void givesOneSideAlone() {
+        var values = new double[400];
+        Arrays.setAll(values, i -> i % 2);
+        var sums = Observed.sums(values);
+        var upper = Hoeffding.of(sums, 0, 0, 1, .95, Sides.UPPER);
+        assertEquals(.5 + Math.sqrt(Math.log(20) / 800), upper.high(), 1e-14);
+        assertEquals(0, upper.low());
+        assertEquals(.95, upper.level());
+        assertEquals(
+                "the lower limit is 0, which the value sought is not below",
+                upper.note().orElseThrow());
+        var lower = EmpiricalBernstein.of(sums, 0, 0, 1, .95, Sides.LOWER);
+        double log = Math.log(40);
+        assertEquals(.5 - Math.sqrt(2 * (100 / 399.0) * log / 400) - 7 * log / (3 * 399), lower.low(), 1e-14);
+        assertEquals(1, lower.high());
+    }
+
     @Test
     void equalObservationsHaveAnInterval() {
         var equal = new double[1000];

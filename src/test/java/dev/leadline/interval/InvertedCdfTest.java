@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.estimate.Quantile;
+import dev.leadline.numeric.Normal;
 import java.util.Arrays;
 import org.junit.jupiter.api.Test;
 
@@ -58,5 +59,67 @@ class InvertedCdfTest {
         }
         // a rank more or less is .04 · 2 φ(2) of the coverage
         assertEquals(.95, (double) covered / repetitions, 4 * Math.sqrt(.95 * .05 / repetitions) + .005);
+    }
+
+    /// Weighted draws, from the light side: .949 of `weighted_quantiles.py` (standard error .0015), with
+    /// estimates that spread five times less than self-normalised ones.
+    @Test
+    void coversWeightedQuantilesFromTheLightSide() {
+        var random = Observed.random(20261201);
+        double shift = 2.5;
+        double sought = Normal.upperQuantile(.001);
+        int n = 1_000;
+        int repetitions = 3_000;
+        int covered = 0;
+        double squares = 0;
+        double squaresOfOwn = 0;
+        for (int r = 0; r < repetitions; r++) {
+            double[] falling = Observed.NORMAL.draws(random, n);
+            Arrays.setAll(falling, i -> -shift - falling[i]);
+            Arrays.sort(falling);
+            Arrays.setAll(falling, i -> -falling[i]);
+            var weights = new double[n];
+            Arrays.setAll(weights, i -> Math.exp(shift * shift / 2 - shift * falling[i]));
+            double total = Arrays.stream(weights).sum();
+            double quantile = beyond(falling, weights, n * .001);
+            double own = beyond(falling, weights, total * .001);
+            squares += (quantile - sought) * (quantile - sought);
+            squaresOfOwn += (own - sought) * (own - sought);
+            var hits = new double[n];
+            Arrays.setAll(hits, i -> falling[i] > quantile ? weights[i] : 0);
+            var cdf = InvertedCdf.of(.999, Observed.sums(hits).standardError(0), n - 1, .95);
+            var interval = cdf.interval(
+                    beyond(falling, weights, n * (1 - cdf.low())), beyond(falling, weights, n * (1 - cdf.high())));
+            covered += interval.low() <= sought && sought <= interval.high() ? 1 : 0;
+        }
+        CoverageTest.gate(.9487, covered, repetitions, .0015);
+        assertTrue(squaresOfOwn > 10 * squares);
+    }
+
+    /// The least of the values of which no more than `weight` lies above.
+    private static double beyond(double[] falling, double[] weights, double weight) {
+        double above = 0;
+        int i = 0;
+        while (i < falling.length - 1 && above + weights[i] <= weight) {
+            above += weights[i];
+            i++;
+        }
+        return falling[i];
+    }
+
+    @Test
+    void givesOneSideAlone() {
+        var upper = InvertedCdf.of(.99, .01, 100, .95, Sides.UPPER);
+        assertTrue(Double.isNaN(upper.high()));
+        assertTrue(upper.note().orElseThrow().startsWith("no upper limit"));
+        var lower = InvertedCdf.of(.99, .01, 100, .95, Sides.LOWER);
+        assertEquals(.99 - .01 * Student.quantile(100, .9), lower.low(), 1e-15);
+        assertTrue(lower.note().isEmpty());
+        var interval = lower.interval(3, 7);
+        assertEquals(3, interval.low());
+        assertEquals(Double.POSITIVE_INFINITY, interval.high());
+        assertEquals(
+                Double.NEGATIVE_INFINITY,
+                InvertedCdf.of(.5, .01, 100, .95, Sides.UPPER).interval(3, 7).low());
     }
 }

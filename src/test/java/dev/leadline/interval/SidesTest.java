@@ -5,6 +5,10 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.ReferenceValues;
+import dev.leadline.stream.Address;
+import dev.leadline.stream.Purpose;
+import dev.leadline.stream.StreamKey;
+import java.util.Optional;
 import java.util.SplittableRandom;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -62,6 +66,36 @@ class SidesTest {
         assertEquals(
                 "an interval needs at least 1 draw",
                 ClopperPearson.of(0, 0, 0, .95, Sides.UPPER).note().orElseThrow());
+    }
+
+    /// Of 0 and once 1 the bootstrap has no upper limit, which the lower one need not tell.
+    @Test
+    void whatTheOtherSideLacksIsNotTold() {
+        var key = StreamKey.of(new Address(1, Purpose.BOOTSTRAP, "A", 0, "mean", 0));
+        double[] values = {0, 0, 0, 0, 0, 1};
+        var lower = Sides.LOWER.of(.95, level -> BootstrapT.of(values, level, key));
+        assertTrue(lower.low() < .2 && lower.note().isEmpty());
+        var upper = Sides.UPPER.of(.95, level -> BootstrapT.of(values, level, key));
+        assertTrue(Double.isNaN(upper.high()) && upper.note().isPresent());
+    }
+
+    @Test
+    void oneLimitReachesAsFarAsItLies() {
+        assertEquals(
+                3,
+                Sides.UPPER
+                        .of(.95, _ -> new Interval(1, 5, .9, "", "", Optional.empty()))
+                        .reach(2));
+        assertEquals(
+                1,
+                Sides.LOWER
+                        .of(.95, _ -> new Interval(1, 5, .9, "", "", Optional.empty()))
+                        .reach(2));
+        assertEquals(
+                3,
+                Sides.BOTH
+                        .of(.95, _ -> new Interval(1, 5, .9, "", "", Optional.empty()))
+                        .reach(2));
     }
 
     @ParameterizedTest

@@ -49,8 +49,8 @@ class StudentTest {
     }
 
     /// Records of Wald's interval, int-binomial-coverage and three figures enumerated apart from this code: on hits
-    /// Student's is nearly the same, and covers as badly. That is why no event has it. Probabilities are those of Commons
-    /// Statistics.
+    /// Student's is nearly the same, and covers as badly. That is why no event has it. Probabilities are those of
+    /// Commons Statistics.
     @ParameterizedTest(name = "n = {0}, p = {1}")
     @CsvSource({
         "20, 0.1, 0.8760372560005, 1e-10",
