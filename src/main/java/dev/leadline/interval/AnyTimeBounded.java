@@ -16,8 +16,10 @@ import java.util.Optional;
 ///
 /// Source: Howard, Ramdas, McAuliffe and Sekhon (2021), Annals of Statistics 49, 1055-1080, theorem 4.
 ///
-/// @param side that the sum of deviations crosses with at most half of what is left to the level
-public record AnyTimeBounded(GammaMixture side) {
+/// @param side bound of the sum of deviations, which it crosses on either side with at most half of what is
+///     left to the level
+/// @param level of confidence of both sides together
+public record AnyTimeBounded(GammaMixture side, double level) {
     /// Word of the project file and of the commands.
     public static final String KIND = "any-time-bounded";
 
@@ -28,11 +30,7 @@ public record AnyTimeBounded(GammaMixture side) {
     public static AnyTimeBounded tunedTo(double n, double least, double most, double level) {
         Level.check(level);
         double length = most - least;
-        return new AnyTimeBounded(GammaMixture.tunedTo(n * length * length / 12, length, (1 + level) / 2));
-    }
-
-    public double level() {
-        return 2 * side.level() - 1;
+        return new AnyTimeBounded(GammaMixture.tunedTo(n * length * length / 12, length, (1 + level) / 2), level);
     }
 
     /// Half the width at n observations whose standard deviation is `sd`.
@@ -53,11 +51,11 @@ public record AnyTimeBounded(GammaMixture side) {
                             Shortest.text(sums.most())));
         }
         double half = side.bound(sums.squares()) / sums.n();
-        return new Interval(sums.mean() - half, sums.mean() + half, level(), KIND, ASSUMPTION, Optional.empty())
+        return new Interval(sums.mean() - half, sums.mean() + half, level, KIND, ASSUMPTION, Optional.empty())
                 .within(sums.least(), sums.most());
     }
 
     private Interval none(String note) {
-        return Interval.none(level(), KIND, ASSUMPTION, note);
+        return Interval.none(level, KIND, ASSUMPTION, note);
     }
 }

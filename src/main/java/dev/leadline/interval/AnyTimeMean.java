@@ -39,7 +39,7 @@ public record AnyTimeMean(NormalMixture mixture) {
     }
 
     /// The positive u with `u - ln(1 + u) = loss`, by Newton's method from above; the left side is convex.
-    private static double excess(double loss) {
+    static double excess(double loss) {
         double u = loss + Math.sqrt(2 * loss) + 1;
         double step;
         do {

@@ -191,7 +191,7 @@ class AnyTimeBoundedTest {
         assertEquals(2, interval.low());
         assertTrue(interval.high() > 2.1 && interval.high() < 4, interval.toString());
         assertEquals("any-time-bounded", interval.kind());
-        assertEquals(.95, interval.level(), 1e-15);
+        assertEquals(.95, interval.level());
     }
 
     /// The unit does not matter.

@@ -90,6 +90,34 @@ class AnyTimeChanceTest {
         assertTrue(band.of(ranks.upperRank(n) - 1, n, 0).low() <= p);
     }
 
+    /// Draws that bands take to the tolerance .001 where hits come as expected, found by halving: what tuning
+    /// to the tolerance costs beside tuning to the chance.
+    @ParameterizedTest(name = "p = {0}")
+    @CsvSource({".05, .01", ".5, .12", ".005, .6", ".95, .01"})
+    void isTunedToATolerance(double p, double more) {
+        double draws = drawsTo(.001, p, AnyTimeChance.forTolerance(.001, .95));
+        double best = Double.POSITIVE_INFINITY;
+        for (double tuned = 1e4; tuned < 1e7; tuned *= 1.2) {
+            best = Math.min(best, drawsTo(.001, p, AnyTimeChance.tunedTo(tuned, .95)));
+        }
+        double times = draws / best;
+        assertTrue(times >= .99 && times <= 1 + more, () -> times + " times as many draws");
+    }
+
+    private static double drawsTo(double tolerance, double p, AnyTimeChance band) {
+        long few = 100;
+        long many = 100_000_000;
+        while (many - few > 1) {
+            long n = (few + many) / 2;
+            if (band.of(Math.round(n * p), n, 0).halfWidth() <= tolerance) {
+                many = n;
+            } else {
+                few = n;
+            }
+        }
+        return many;
+    }
+
     @Test
     void bracketsWhatFailed() {
         var band = AnyTimeChance.tunedTo(1000, .95);
