@@ -98,6 +98,19 @@ final class CellMeans implements Folding {
     }
 
     @Override
+    public void count(double[] weights, int rows) {
+        int at = cell % draws.length;
+        int until = Math.min(rows, draws[at] - seen);
+        for (int row = 0; row < rows; ) {
+            for (; row < until; row++) {
+                weights[row] *= counts[at];
+            }
+            at = (at + 1) % draws.length;
+            until = Math.min(rows, row + draws[at]);
+        }
+    }
+
+    @Override
     public double[][] counted(double[][] components, int rows) {
         int at = cell % draws.length;
         int until = Math.min(rows, draws[at] - seen);

@@ -76,6 +76,6 @@ final class Climber implements ItemWork {
         };
         sums.add(observation, 0, 1);
         var made = new Item(item.stretch(), item.firstDraw(), (int) Math.min(outcome.evaluations(), Integer.MAX_VALUE));
-        return new ItemSums(made, sums, Optional.empty(), List.of());
+        return new ItemSums(made, sums, Optional.empty(), List.of(), List.of());
     }
 }

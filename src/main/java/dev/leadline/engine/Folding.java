@@ -24,4 +24,7 @@ sealed interface Folding permits Means, CellMeans, CellSpreads {
     default double[][] counted(double[][] components, int rows) {
         return components;
     }
+
+    /// Multiplies the weights of the same draws, not added yet, by what each counts in its observation.
+    default void count(double[] weights, int rows) {}
 }

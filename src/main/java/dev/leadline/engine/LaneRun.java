@@ -1,11 +1,15 @@
 package dev.leadline.engine;
 
 import dev.leadline.estimate.Extremes;
+import dev.leadline.estimate.Outcomes;
+import dev.leadline.model.Components;
 import dev.leadline.model.Stop;
+import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.Replicated;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Failure;
 import dev.leadline.trace.Mark;
+import dev.leadline.trace.Spread;
 import dev.leadline.trace.Trace;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
@@ -16,6 +20,7 @@ import java.util.Optional;
 import java.util.Queue;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.Future;
+import java.util.stream.IntStream;
 
 /// A lane on its way: items handed to workers, their sums merged in item order, marks set, the end found. Confined to
 /// the thread that conducts the study.
@@ -34,13 +39,21 @@ public final class LaneRun {
 
     private final Tally tally;
     private final Optional<Extremes> extremes;
+    private final long mostKept;
+    private final List<Outcomes> outcomes;
     private final List<Mark> marks = new ArrayList<>();
     private final List<Failure> failures = new ArrayList<>();
     private long submitted;
     private long draws;
     private Optional<String> stopReason = Optional.empty();
+    private Optional<SecondPass> pass = Optional.empty();
 
     public LaneRun(Recipe recipe, Stop stop, Workers workers) {
+        this(recipe, stop, workers, Outcomes.MOST_KEPT);
+    }
+
+    /// @param mostKept outcomes kept one by one of each thing asked, beyond which a second pass finds what is sought
+    LaneRun(Recipe recipe, Stop stop, Workers workers, long mostKept) {
         this.recipe = recipe;
         this.stop = stop;
         this.items = recipe.items();
@@ -49,6 +62,17 @@ public final class LaneRun {
         this.extremes =
                 recipe.lane().scheme().isWeighted() ? Optional.of(new Extremes(recipe.components())) : Optional.empty();
         this.budget = items.whole(stop.draws());
+        this.mostKept = mostKept;
+        this.outcomes = outcomes(recipe);
+    }
+
+    private List<Outcomes> outcomes(Recipe of) {
+        return of.lane().scheme().points() instanceof Repetitions
+                ? List.of()
+                : IntStream.range(0, of.asks().size())
+                        .mapToObj(a -> new Outcomes(
+                                of.landmarks().get(a), of.isWeighed(Components.firstFormula(of.asks(), a)), mostKept))
+                        .toList();
     }
 
     /// Merges the next item of work.
@@ -56,6 +80,9 @@ public final class LaneRun {
     /// @param seconds computed so far
     /// @return whether there is a new mark
     public boolean advance(double seconds) throws InterruptedException, ExecutionException {
+        if (pass.isPresent()) {
+            return pass.get().advance(seconds);
+        }
         submitAhead();
         var sums = ahead.remove().get();
         if (sums.isEmpty()) {
@@ -94,13 +121,14 @@ public final class LaneRun {
 
     /// Ends with what has been merged.
     public void stop(double seconds) {
-        if (!finished()) {
+        if (stopReason.isEmpty()) {
             end("stopped by hand", seconds);
         }
+        pass = Optional.empty();
     }
 
     public boolean finished() {
-        return stopReason.isPresent();
+        return stopReason.isPresent() && pass.isEmpty();
     }
 
     public long draws() {
@@ -114,8 +142,11 @@ public final class LaneRun {
                 marks,
                 tally.blocks(),
                 extremes.map(Extremes::copy),
+                outcomes.stream()
+                        .map(seen -> new Spread(seen.landmark(), seen.histogram()))
+                        .toList(),
                 failures,
-                stopReason);
+                finished() ? stopReason : Optional.empty());
     }
 
     private void submitAhead() {
@@ -132,6 +163,9 @@ public final class LaneRun {
     private void merge(ItemSums item) {
         tally.add(item);
         extremes.ifPresent(all -> all.merge(item.extremes().orElseThrow()));
+        for (int a = 0; a < outcomes.size(); a++) {
+            outcomes.get(a).merge(item.outcomes().get(a));
+        }
         draws += item.item().draws();
         for (var failure : item.failures()) {
             if (failures.size() < ItemSums.KEPT) {
@@ -155,14 +189,66 @@ public final class LaneRun {
         stopReason = Optional.of(reason);
         ahead.forEach(item -> item.cancel(false));
         ahead.clear();
-        if (draws > 0 && tally.isWhole() && (marks.isEmpty() || marks.getLast().draws() < draws)) {
+        if (draws > 0 && tally.isWhole()) {
+            if (!marks.isEmpty() && marks.getLast().draws() == draws) {
+                marks.removeLast();
+            }
+            outcomes.forEach(Outcomes::settle);
             mark(seconds);
+            lookAgain();
         }
         return true;
     }
 
+    /// Where an answer lies between two outcomes and none is known, the same draws are made again, for these alone.
+    private void lookAgain() {
+        pass = outcomes.stream().anyMatch(Outcomes::isOpen) ? Optional.of(new SecondPass()) : Optional.empty();
+    }
+
+    /// A pass over the draws of all items that are merged, once more.
+    private final class SecondPass {
+        private final Recipe narrowed =
+                recipe.narrowed(outcomes.stream().map(Outcomes::narrowed).toList());
+        private final List<Outcomes> found = outcomes(narrowed);
+        private final Queue<Future<Optional<ItemSums>>> again = new ArrayDeque<>();
+        private long next;
+        private long merged;
+
+        boolean advance(double seconds) throws InterruptedException, ExecutionException {
+            while (again.size() < workers.ahead()) {
+                var item = items.within(next, draws);
+                if (item.isEmpty()) {
+                    break;
+                }
+                next++;
+                again.add(workers.submit(narrowed, item.get()));
+            }
+            var sums = again.remove().get();
+            if (sums.isEmpty()) {
+                pass = Optional.empty();
+                return true;
+            }
+            for (int a = 0; a < found.size(); a++) {
+                found.get(a).merge(sums.get().outcomes().get(a));
+            }
+            merged += sums.get().item().draws();
+            if (merged < draws) {
+                return false;
+            }
+            for (int a = 0; a < found.size(); a++) {
+                outcomes.get(a).refine(found.get(a));
+            }
+            marks.removeLast();
+            mark(seconds);
+            lookAgain();
+            return true;
+        }
+    }
+
     private void mark(double seconds) {
         marks.add(new Mark(
-                draws, seconds, Answers.of(recipe.question(), recipe.lane().scheme(), tally.total(), tally.blocks())));
+                draws,
+                seconds,
+                Answers.of(recipe.question(), recipe.lane().scheme(), tally.total(), tally.blocks(), outcomes)));
     }
 }

@@ -24,7 +24,7 @@ import java.util.Locale;
 ///     over them; where cells share the draws of a pass, what it counts among them; of integrals also the
 ///     volume of bounded ranges, and one over the density drawn from on unbounded ones; 0 beyond a range; 1
 ///     where nothing weighs
-/// @param outcomes one for each thing asked, before the weight
+/// @param outcomes one for each formula asked, before the weight
 public record Look(List<Double> inputs, List<Double> steps, double weight, List<Double> outcomes) {
     public Look {
         inputs = List.copyOf(inputs);

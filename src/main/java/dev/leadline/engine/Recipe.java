@@ -2,8 +2,11 @@ package dev.leadline.engine;
 
 import dev.leadline.density.Density;
 import dev.leadline.density.Inversion;
+import dev.leadline.estimate.Estimand;
+import dev.leadline.estimate.Landmark;
 import dev.leadline.formula.Program;
 import dev.leadline.model.Ask;
+import dev.leadline.model.Components;
 import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
 import dev.leadline.model.Lane;
@@ -21,6 +24,7 @@ import dev.leadline.stream.Purpose;
 import dev.leadline.stream.Stream;
 import dev.leadline.stream.StreamKey;
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -37,6 +41,7 @@ public final class Recipe {
 
     private final Question question;
     private final Lane lane;
+    private final List<Landmark> landmarks;
     private final Address address;
     private final Optional<Layout> layout;
     private final Ties ties;
@@ -45,9 +50,10 @@ public final class Recipe {
     private final List<Integer> weighing;
     private final double volume;
 
-    private Recipe(Question question, Lane lane, long seed, Purpose purpose, int replicate) {
+    private Recipe(Question question, Lane lane, List<Landmark> landmarks, long seed, Purpose purpose, int replicate) {
         this.question = question;
         this.lane = lane;
+        this.landmarks = List.copyOf(landmarks);
         this.ties = new Ties(question, proposal().keySet());
         this.address = new Address(seed, purpose, lane.address(), replicate, "", 0);
         this.layout = lane.scheme().points() instanceof LaidOut points
@@ -83,12 +89,58 @@ public final class Recipe {
 
     /// The same for draws that must not be those of a run.
     public static Recipe of(Question question, Lane lane, long seed, Purpose purpose) {
-        return new Recipe(question, Tuning.found(question, lane, seed), seed, purpose, 0);
+        Lane found = Tuning.found(question, lane, seed);
+        return new Recipe(question, found, Pilot.landmarks(question, found, seed), seed, purpose, 0);
+    }
+
+    /// The recipe of the draws that show where outcomes lie.
+    static Recipe ofPilot(Question question, Lane lane, long seed) {
+        return new Recipe(question, lane, nothingKnown(question), seed, Purpose.LANDMARK, 0);
+    }
+
+    private static List<Landmark> nothingKnown(Question question) {
+        return Collections.nCopies(question.asks().size(), Landmark.NONE);
+    }
+
+    /// The recipe of the same set-up for other draws; what was found before the run stays.
+    ///
+    /// @param replicate tells one repetition from another
+    public Recipe repeated(long seed, Purpose purpose, int replicate) {
+        return new Recipe(question, lane, landmarks, seed, purpose, replicate);
+    }
+
+    /// The recipe of a further pass over the same draws.
+    Recipe narrowed(List<Landmark> others) {
+        return new Recipe(question, lane, others, address.seed(), address.purpose(), address.replicate());
+    }
+
+    /// What pilot draws found of each thing asked.
+    public List<Landmark> landmarks() {
+        return landmarks;
+    }
+
+    /// Whether the outcome of a formula is the whole integrand, weight and all.
+    boolean isWhole(int formula) {
+        int before = 0;
+        for (Ask ask : asks()) {
+            before += ask.estimand().formulas();
+            if (formula < before) {
+                return ask.estimand() instanceof Estimand.Integral;
+            }
+        }
+        return false;
+    }
+
+    /// Whether draws differ in what the outcome of a formula counts: by a weight beside it, or by how cells share the
+    /// draws of a pass.
+    boolean isWeighed(int formula) {
+        return lane.scheme().isWeighted() && !isWhole(formula)
+                || lane.scheme().allotted().isPresent();
     }
 
     /// The recipe of a stage of tuning.
     static Recipe ofStage(Question question, Lane lane, long seed, int stage) {
-        return new Recipe(question, lane, seed, Purpose.TUNING, stage);
+        return new Recipe(question, lane, nothingKnown(question), seed, Purpose.TUNING, stage);
     }
 
     public Sampler sampler() {
@@ -133,7 +185,7 @@ public final class Recipe {
     int components() {
         return lane.scheme().points() instanceof Repetitions
                 ? Repetitions.COMPONENTS
-                : program().outputs() + (lane.scheme().isWeighted() ? 1 : 0);
+                : Components.asked(asks()) + controls().size() + (lane.scheme().isWeighted() ? 1 : 0);
     }
 
     public Question question() {

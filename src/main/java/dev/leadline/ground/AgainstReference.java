@@ -43,7 +43,14 @@ final class AgainstReference {
         return switch (answer.estimand()) {
             case Estimand.Probability _
             when answer.interval().kind().equals(ClopperPearson.KIND) -> chance(answer, reference);
-            case Estimand.Probability _, Estimand.Mean _, Estimand.Integral _ -> mean(evidence, answer, reference);
+            case Estimand.Probability _,
+                    Estimand.Mean _,
+                    Estimand.Integral _,
+                    Estimand.Ratio _,
+                    Estimand.StandardDeviation _,
+                    Estimand.Quantile _,
+                    Estimand.TailMean _,
+                    Estimand.Distribution _ -> mean(evidence, answer, reference);
         };
     }
 

@@ -3,6 +3,7 @@ package dev.leadline.ground;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Regression;
 import dev.leadline.ground.Ground.Strength;
+import dev.leadline.model.Components;
 import dev.leadline.scheme.Control;
 import java.util.ArrayList;
 import java.util.List;
@@ -35,7 +36,7 @@ final class ControlVariates {
     private ControlVariates(Evidence evidence) {
         this.evidence = evidence;
         this.controls = evidence.trace().scheme().controls();
-        this.asks = evidence.answers().size();
+        this.asks = Components.asked(evidence.question().asks());
     }
 
     static List<Ground> judge(Evidence evidence) {
@@ -57,9 +58,9 @@ final class ControlVariates {
                     "Make more draws, or keep the control variates that matter most"));
             return grounds;
         }
-        for (int k = 0; k < asks; k++) {
-            if (!sums.constant(k)) {
-                explained(new Regression(sums, k, asks, controls.size()), k, grounds);
+        for (int k = 0; k < evidence.answers().size(); k++) {
+            if (!sums.constant(evidence.component(k))) {
+                explained(new Regression(sums, evidence.component(k), asks, controls.size()), k, grounds);
             }
         }
         new Regression(sums, 0, asks, controls.size())

@@ -1,8 +1,11 @@
 package dev.leadline.ground;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Estimate;
+import dev.leadline.model.Components;
 import dev.leadline.model.Question;
 import dev.leadline.trace.Answer;
+import dev.leadline.trace.Answers;
 import dev.leadline.trace.Trace;
 import java.util.List;
 
@@ -19,6 +22,16 @@ record Evidence(Question question, Trace trace, List<Answer> answers, Accumulato
     /// Evaluations behind the answers.
     long draws() {
         return trace.last().orElseThrow().draws();
+    }
+
+    /// What some of the observations say of an answer.
+    Estimate estimate(Accumulator sums, int answer) {
+        return Answers.estimate(question, trace.scheme(), sums, answer);
+    }
+
+    /// The first component of an answer.
+    int component(int answer) {
+        return Components.first(question.asks(), answer);
     }
 
     /// Draws whose mean is an observation, those of a replicate so far where it is one.

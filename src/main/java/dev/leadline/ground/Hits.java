@@ -32,7 +32,7 @@ final class Hits {
         if (!evidence.answers().get(k).interval().kind().equals(Student.KIND)) {
             return Optional.empty();
         }
-        double mean = evidence.total().mean(k);
+        double mean = evidence.total().mean(evidence.component(k));
         if (evidence.trace().scheme().allotted().isPresent() && mean > 0 && mean < 1) {
             // Cells count alike and have different numbers of draws: hits do not follow from their share.
             return Optional.empty();
@@ -73,7 +73,7 @@ final class Hits {
 
     /// A miss needs no weight, so that only hits count.
     private static Ground weighted(Evidence evidence, Extremes draws, int k) {
-        long hits = draws.nonzero(k);
+        long hits = draws.nonzero(evidence.component(k));
         String text = evidence.of(k)
                 + "%s %s in %s weighted draws"
                         .formatted(

@@ -13,10 +13,11 @@ final class LargestShare {
     private LargestShare() {}
 
     static Optional<Ground> judge(Evidence evidence, int k) {
+        int component = evidence.component(k);
         return evidence.trace()
                 .extremes()
-                .filter(draws -> draws.nonzero(k) > 0)
-                .map(draws -> judge(evidence, k, draws.largestShare(k), OF_FEW / draws.nonzero(k)));
+                .filter(draws -> draws.nonzero(component) > 0)
+                .map(draws -> judge(evidence, k, draws.largestShare(component), OF_FEW / draws.nonzero(component)));
     }
 
     private static Ground judge(Evidence evidence, int k, double share, double ofFew) {

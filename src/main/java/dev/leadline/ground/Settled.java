@@ -1,6 +1,7 @@
 package dev.leadline.ground;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Estimate;
 import dev.leadline.ground.Ground.Strength;
 import java.util.Optional;
 
@@ -23,8 +24,10 @@ final class Settled {
         if (!(Math.min(first.count(), second.count()) >= FEWEST)) {
             return Optional.empty();
         }
-        double error = Math.sqrt(first.variance(k) / first.count() + second.variance(k) / second.count());
-        double z = (second.mean(k) - first.mean(k)) / error;
+        Estimate before = evidence.estimate(first, k);
+        Estimate after = evidence.estimate(second, k);
+        double error = StrictMath.hypot(before.standardError(), after.standardError());
+        double z = (after.value() - before.value()) / error;
         if (Double.isNaN(z) || Double.isInfinite(error)) {
             return Optional.empty();
         }

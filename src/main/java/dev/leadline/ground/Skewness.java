@@ -15,8 +15,9 @@ final class Skewness {
 
     static Optional<Ground> judge(Evidence evidence, int k) {
         var sums = evidence.total();
-        double skewness = sums.count() < 3 ? Double.NaN : sums.skewness(k);
-        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability && !isJudgedByPasses(evidence, k)) {
+        int component = evidence.component(k);
+        double skewness = sums.count() < 3 ? Double.NaN : sums.skewness(component);
+        if (!isMean(evidence.answers().get(k).estimand()) && !isJudgedByPasses(evidence, k)) {
             return Optional.empty();
         }
         if (Double.isNaN(skewness)) {
@@ -37,7 +38,7 @@ final class Skewness {
                                 observations(Math.ceil(wanted), evidence.drawsPerObservation()),
                                 Numbers.count(sums.count()));
         return Optional.of(
-                isMet(sums, k)
+                isMet(sums, component)
                         ? Ground.shown("skewness", text)
                         : Ground.doubted(
                                 "skewness",
@@ -53,9 +54,17 @@ final class Skewness {
     /// Of an event whose hits are not counted; for rare ones the rule asks for 25 of them, as [Hits] does.
     private static boolean isJudgedByPasses(Evidence evidence, int k) {
         var scheme = evidence.trace().scheme();
-        return scheme.allotted().isPresent()
+        return evidence.answers().get(k).estimand() instanceof Estimand.Probability
+                && scheme.allotted().isPresent()
                 && !scheme.isWeighted()
-                && !evidence.total().constant(k);
+                && !evidence.total().constant(evidence.component(k));
+    }
+
+    private static boolean isMean(Estimand estimand) {
+        return switch (estimand) {
+            case Estimand.Mean _, Estimand.Integral _, Estimand.Distribution _, Estimand.TailMean _ -> true;
+            case Estimand.Probability _, Estimand.Quantile _, Estimand.Ratio _, Estimand.StandardDeviation _ -> false;
+        };
     }
 
     private static String observations(double count, double draws) {

@@ -11,13 +11,14 @@ final class Spread {
 
     static Optional<Ground> judge(Evidence evidence, int k) {
         var sums = evidence.total();
-        if (evidence.answers().get(k).estimand() instanceof Estimand.Probability || sums.count() == 0) {
+        int component = evidence.component(k);
+        if (!isMean(evidence.answers().get(k).estimand()) || sums.count() == 0) {
             return Optional.empty();
         }
-        if (!sums.constant(k) && !evidence.trace().scheme().controls().isEmpty()) {
+        if (!sums.constant(component) && !evidence.trace().scheme().controls().isEmpty()) {
             return Optional.empty();
         }
-        if (!sums.constant(k)) {
+        if (!sums.constant(component)) {
             var interval = evidence.answers().get(k).interval();
             return interval.note()
                     .filter(_ -> Double.isNaN(interval.halfWidth()))
@@ -26,9 +27,20 @@ final class Spread {
         return Optional.of(Ground.doubted(
                 "spread",
                 Strength.OBJECTION,
-                evidence.of(k) + "every outcome so far is " + Numbers.value(sums.min(k))
+                evidence.of(k) + "every outcome so far is " + Numbers.value(sums.min(component))
                         + ": how far the mean may be off cannot be said yet",
                 "Look at a few draws; if the outcomes can differ, more draws are needed"));
+    }
+
+    private static boolean isMean(Estimand estimand) {
+        return switch (estimand) {
+            case Estimand.Mean _, Estimand.Integral _, Estimand.Distribution _ -> true;
+            case Estimand.Probability _,
+                    Estimand.Quantile _,
+                    Estimand.TailMean _,
+                    Estimand.Ratio _,
+                    Estimand.StandardDeviation _ -> false;
+        };
     }
 
     private static Ground unit(String text) {

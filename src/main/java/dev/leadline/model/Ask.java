@@ -1,9 +1,23 @@
 package dev.leadline.model;
 
 import dev.leadline.estimate.Estimand;
+import java.util.List;
 
 /// One thing asked of a question.
 ///
-/// @param formula its text, as written
+/// @param formulas their texts, as written; one, or as many as the estimand takes
 /// @param label what to call it; empty when not named
-public record Ask(Estimand estimand, String formula, String unit, String label) {}
+public record Ask(Estimand estimand, List<String> formulas, String unit, String label) {
+    public Ask {
+        formulas = List.copyOf(formulas);
+    }
+
+    /// The formulas in one line.
+    public String text() {
+        return String.join(
+                " / ",
+                formulas.stream()
+                        .map(formula -> formulas.size() == 1 ? formula : "(" + formula + ")")
+                        .toList());
+    }
+}

@@ -1,7 +1,6 @@
 package dev.leadline.model;
 
 import dev.leadline.formula.Working;
-import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.LaneDraft.ControlDraft;
 import dev.leadline.model.LaneDraft.Mean;
@@ -37,7 +36,7 @@ final class Controls {
         var controls = new ArrayList<Control>();
         for (int c = 0; c < lane.controls().size(); c++) {
             ControlDraft control = lane.controls().get(c);
-            known(control, working, draft.asks().size() + c, path + ".controlVariates[" + c + "].mean")
+            known(control, working, draft.formulas().size() + c, path + ".controlVariates[" + c + "].mean")
                     .ifPresent(controls::add);
         }
         return controls;
@@ -116,10 +115,9 @@ final class Controls {
 
     /// The formulas of the question, then those of the control variates; empty where one of the latter is not sound.
     Optional<Working> working(LaneDraft lane, String path) {
-        int asks = draft.asks().size();
+        int asks = draft.formulas().size();
         List<String> formulas = Stream.concat(
-                        draft.asks().stream().map(AskDraft::formula),
-                        lane.controls().stream().map(ControlDraft::formula))
+                        draft.formulas().stream(), lane.controls().stream().map(ControlDraft::formula))
                 .toList();
         return findings.made(
                 place -> place(place, asks, path),

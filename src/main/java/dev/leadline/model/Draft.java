@@ -1,5 +1,7 @@
 package dev.leadline.model;
 
+import dev.leadline.interval.Bounds;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -24,6 +26,7 @@ public record Draft(
         Optional<ReferenceDraft> reference,
         OptionalDouble confidence,
         Optional<ToleranceDraft> tolerance,
+        Optional<IntervalDraft> interval,
         Optional<StopDraft> stop,
         OptionalLong seed,
         boolean commonRandomNumbers,
@@ -36,7 +39,7 @@ public record Draft(
     private static final Pattern DENSITY =
             Pattern.compile("\\$\\.inputs\\[(\\d{1,9})]\\.(?:density|drawFrom)((?:\\.mixture\\[\\d{1,9}])*)\\.formula");
     private static final Pattern PART = Pattern.compile("\\[(\\d+)]");
-    private static final Pattern ASK = Pattern.compile("\\$\\.ask(?:\\[(\\d{1,9})])?\\.\\w+");
+    private static final Pattern ASK = Pattern.compile("\\$\\.ask(?:\\[(\\d{1,9})])?\\.\\w+(?:\\[(\\d)])?");
 
     public Draft {
         constants = List.copyOf(constants);
@@ -74,12 +77,100 @@ public record Draft(
     public record PairDraft(String one, String other, String measure, double value) {}
 
     /// @param estimand word of the file, as `probability`
-    public record AskDraft(String estimand, String formula, String unit, String label) {}
+    /// @param formulas one, two of a ratio
+    /// @param at probability that a quantile or a tail mean belongs to
+    /// @param coverage of a distribution: part of the outcomes that its coverage intervals hold
+    public record AskDraft(
+            String estimand,
+            List<String> formulas,
+            OptionalDouble at,
+            OptionalDouble coverage,
+            String unit,
+            String label) {
+        /// Words of the file for what can be asked.
+        public static final List<String> ESTIMANDS = List.of(
+                "mean",
+                "integral",
+                "probability",
+                "quantile",
+                "tailMean",
+                "ratio",
+                "standardDeviation",
+                "distribution");
+
+        public AskDraft {
+            formulas = List.copyOf(formulas);
+        }
+
+        /// Of one formula and nothing else.
+        public AskDraft(String estimand, String formula, String unit, String label) {
+            this(estimand, List.of(formula), OptionalDouble.empty(), OptionalDouble.empty(), unit, label);
+        }
+
+        /// The first formula.
+        public String formula() {
+            return formulas.getFirst();
+        }
+
+        /// What is asked as people say it, as `tail mean`.
+        public String words() {
+            return words(estimand);
+        }
+
+        public static String words(String estimand) {
+            return switch (estimand) {
+                case "tailMean" -> "tail mean";
+                case "standardDeviation" -> "standard deviation";
+                default -> estimand;
+            };
+        }
+
+        /// Another kind of answer of the same formula; what the kind needs takes a usual value.
+        public AskDraft asking(String other) {
+            List<String> needed = other.equals("ratio") ? List.of(formula(), "") : List.of(formula());
+            boolean takesAt = other.equals("quantile") || other.equals("tailMean");
+            return new AskDraft(
+                    other,
+                    other.equals(estimand) ? formulas : needed,
+                    takesAt ? OptionalDouble.of(at.orElse(.95)) : OptionalDouble.empty(),
+                    other.equals("distribution") ? coverage : OptionalDouble.empty(),
+                    unit,
+                    label);
+        }
+
+        public AskDraft withAt(OptionalDouble other) {
+            return new AskDraft(estimand, formulas, other, coverage, unit, label);
+        }
+
+        public AskDraft withCoverage(OptionalDouble other) {
+            return new AskDraft(estimand, formulas, at, other, unit, label);
+        }
+
+        public AskDraft withFormula(int index, String text) {
+            var others = new ArrayList<>(formulas);
+            others.set(index, text);
+            return new AskDraft(estimand, others, at, coverage, unit, label);
+        }
+
+        public AskDraft withUnit(String other) {
+            return new AskDraft(estimand, formulas, at, coverage, other, label);
+        }
+
+        public AskDraft withLabel(String other) {
+            return new AskDraft(estimand, formulas, at, coverage, unit, other);
+        }
+    }
 
     public record ReferenceDraft(double value, OptionalDouble error, String source) {}
 
     /// @param when `either` or `both` where absolute and relative are both given; empty means either
     public record ToleranceDraft(OptionalDouble absolute, OptionalDouble relative, Optional<String> when) {}
+
+    /// Which interval is wanted.
+    ///
+    /// @param kind its word, as `student`; empty where none is named
+    /// @param bounds least and greatest outcome there can be
+    public record IntervalDraft(Optional<String> kind, Optional<Bounds> bounds) {}
 
     public record StopDraft(String rule, OptionalLong draws, OptionalDouble seconds) {}
 
@@ -97,6 +188,7 @@ public record Draft(
                 reference,
                 confidence,
                 tolerance,
+                interval,
                 stop,
                 seed,
                 commonRandomNumbers,
@@ -120,6 +212,23 @@ public record Draft(
         return place + "." + asks.get(index).estimand();
     }
 
+    /// The JSON paths of the formulas asked, in order.
+    public List<String> formulaPaths() {
+        var paths = new ArrayList<String>();
+        for (int k = 0; k < asks.size(); k++) {
+            int formulas = asks.get(k).formulas().size();
+            for (int i = 0; i < formulas; i++) {
+                paths.add(askPath(k) + (formulas == 1 ? "" : "[" + i + "]"));
+            }
+        }
+        return paths;
+    }
+
+    /// The formulas asked, in order.
+    public List<String> formulas() {
+        return asks.stream().flatMap(ask -> ask.formulas().stream()).toList();
+    }
+
     /// The text of the formula that stands at a JSON path, so that a place in it can be shown.
     public Optional<String> formulaAt(String path) {
         Matcher step = STEP.matcher(path);
@@ -130,7 +239,10 @@ public record Draft(
         Matcher ask = ASK.matcher(path);
         if (ask.matches()) {
             int index = ask.group(1) == null ? 0 : Integer.parseInt(ask.group(1));
-            return index < asks.size() ? Optional.of(asks.get(index).formula()) : Optional.empty();
+            int formula = ask.group(2) == null ? 0 : Integer.parseInt(ask.group(2));
+            return index < asks.size() && formula < asks.get(index).formulas().size()
+                    ? Optional.of(asks.get(index).formulas().get(formula))
+                    : Optional.empty();
         }
         return densityFormulaAt(path);
     }

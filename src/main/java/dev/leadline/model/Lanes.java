@@ -24,6 +24,8 @@ import java.util.regex.Pattern;
 final class Lanes {
     private static final Pattern LANE = Pattern.compile("[\\p{L}\\p{Nd}_][\\p{L}\\p{Nd}_.-]{0,19}");
 
+    private static final Set<String> MEANS = Set.of("mean", "integral", "probability");
+
     private final Draft draft;
     private final Optional<Working> working;
     private final List<String> names;
@@ -137,6 +139,7 @@ final class Lanes {
         Optional<Working> formulas = lane.controls().isEmpty() ? Optional.empty() : controls.working(lane, path);
         List<Control> controlled =
                 formulas.map(all -> controls.of(lane, all, path)).orElse(List.of());
+        checkMeans(lane, path);
         if (lane.crossFitted() && lane.controls().isEmpty()) {
             findings.add(
                     path + ".crossFitted",
@@ -182,6 +185,38 @@ final class Lanes {
                     "It is the number of draws from the inputs' own densities that the lane is compared with.");
         }
         return lane.audit();
+    }
+
+    /// Control variates correct means; what is found before a run makes the variance of a mean small.
+    private void checkMeans(LaneDraft lane, String path) {
+        for (int k = 0; k < draft.asks().size(); k++) {
+            var ask = draft.asks().get(k);
+            boolean isMean = MEANS.contains(ask.estimand());
+            if (!isMean && !lane.controls().isEmpty()) {
+                findings.add(
+                        path + ".controlVariates",
+                        "control variates for a %s are not available".formatted(ask.words()),
+                        "They correct a mean by others that are known.",
+                        "Leave them out, or ask for a mean, an integral or a probability alone.");
+                return;
+            }
+            if (!isMean && k == 0 && isAdapted(lane)) {
+                findings.add(
+                        path + ".drawFrom",
+                        "a density that is found for a %s is not available".formatted(ask.words()),
+                        "What is found makes the first answer certain with few draws, where that is a mean, an"
+                                + " integral or a probability.",
+                        "Name a density to draw from, or ask for the probability of what lies beyond.");
+            }
+        }
+    }
+
+    private static boolean isAdapted(LaneDraft lane) {
+        return switch (lane.drawFrom()) {
+            case LaneDraft.DrawFrom.Adapted _ -> true;
+            case LaneDraft.DrawFrom.Inputs(var others) ->
+                others.values().stream().anyMatch(LaneDraft.Other.Adapt.class::isInstance);
+        };
     }
 
     private void checkReplicates(Points points, int controls, String path) {

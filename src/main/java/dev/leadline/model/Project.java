@@ -50,6 +50,8 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         Optional<Reference> reference = draft.reference().map(given -> reference(given, findings));
         double confidence = confidence(draft, findings);
         Optional<Tolerance> tolerance = draft.tolerance().map(given -> tolerance(given, findings));
+        IntervalWish interval =
+                draft.interval().map(given -> Intervals.of(given, findings)).orElse(IntervalWish.AUTO);
         Stop stop = Plans.stop(draft, findings);
         long seed = Plans.seed(draft, findings);
         Optional<Dependence> dependence =
@@ -74,7 +76,8 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
                 asks,
                 reference,
                 confidence,
-                tolerance);
+                tolerance,
+                interval);
         List<Problem> notes = new ArrayList<>(Workings.notes(draft, question.working()));
         notes.addAll(findings.notes());
         dependence.ifPresent(tied -> notes.addAll(Dependences.notes(tied, inputs)));

@@ -20,7 +20,8 @@ public record Question(
         List<Ask> asks,
         Optional<Reference> reference,
         double confidence,
-        Optional<Tolerance> tolerance) {
+        Optional<Tolerance> tolerance,
+        IntervalWish interval) {
     public Question {
         constants = List.copyOf(constants);
         inputs = List.copyOf(inputs);

@@ -9,6 +9,7 @@ import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /// The question in words; some of its parts are doors to where they are edited. Said of a draft, since it is also read
 /// while the question is written.
@@ -105,11 +106,16 @@ public record Sentence(List<Part> parts) {
         parts.add(words(
                 switch (ask.estimand()) {
                     case "probability" -> "chance that ";
-                    case "integral" -> "integral of ";
-                    case "mean" -> "mean of ";
-                    default -> ask.estimand() + " of ";
+                    case "quantile" -> part(ask.at()) + " quantile of ";
+                    case "tailMean" -> "mean beyond the " + part(ask.at()) + " quantile of ";
+                    default -> ask.words() + " of ";
                 }));
-        parts.add(new Part(shortened(ask.formula()), Optional.of(Door.FORMULA)));
+        for (int i = 0; i < ask.formulas().size(); i++) {
+            if (i > 0) {
+                parts.add(words(" to "));
+            }
+            parts.add(new Part(shortened(ask.formulas().get(i)), Optional.of(Door.FORMULA)));
+        }
         if (isIntegral(ask) && !ranges(draft).isEmpty()) {
             parts.add(words(" over "));
             parts.add(new Part(and(ranges(draft)), Optional.of(Door.INPUTS)));
@@ -119,6 +125,10 @@ public record Sentence(List<Part> parts) {
             parts.add(words(unit.startsWith("per ") ? " " : " in "));
             parts.add(new Part(unit, Optional.of(Door.UNIT)));
         }
+    }
+
+    private static String part(OptionalDouble at) {
+        return at.isPresent() ? percent(at.getAsDouble()) : "? %";
     }
 
     private static boolean isIntegral(AskDraft ask) {

@@ -1,7 +1,6 @@
 package dev.leadline.model;
 
 import dev.leadline.formula.Working;
-import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.problem.Problem;
@@ -32,8 +31,8 @@ final class Workings {
         var workings = new Workings(draft);
         workings.take(findings);
         var inputs = draft.inputs().stream().map(InputDraft::name).toList();
-        var asked = draft.asks().stream().map(AskDraft::formula).toList();
-        return findings.made(workings::place, () -> Working.of(inputs, workings.constants, draft.steps(), asked));
+        return findings.made(
+                workings::place, () -> Working.of(inputs, workings.constants, draft.steps(), draft.formulas()));
     }
 
     static List<Problem> notes(Draft draft, Working working) {
@@ -92,7 +91,7 @@ final class Workings {
             case "inputs" -> "$.inputs[" + index + "].name";
             case "constants" -> "$.constants[" + constantRows.get(index) + "].name";
             case "steps" -> "$.steps[" + index + "]";
-            default -> draft.askPath(index);
+            default -> draft.formulaPaths().get(index);
         };
     }
 }

@@ -1,6 +1,7 @@
 package dev.leadline.project;
 
 import dev.leadline.density.Mixing;
+import dev.leadline.interval.Bounds;
 import dev.leadline.model.DensityDraft;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.AskDraft;
@@ -8,6 +9,7 @@ import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
@@ -23,6 +25,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /// Takes a project's JSON apart. Here stands which fields there are and what kind of value each has; what the values
 /// may be is for [Project][dev.leadline.model.Project] to say.
@@ -45,15 +48,10 @@ final class DraftReader {
             "Give the value itself: {\"value\": 0.12, \"error\": 1e-4, \"source\": \"…\"}.";
 
     private static final Map<String, String> WHOLE_LATER =
-            Map.of("bounds", LEAVE_OUT, "logbook", "Leave it out: no run is written to a logbook.");
+            Map.of("logbook", "Leave it out: no run is written to a logbook.");
     private static final Map<String, String> STOP_LATER = each(ONLY_FIXED, "hits", "guard");
     private static final Map<String, String> REFERENCE_LATER = each(ONLY_VALUES, "formula", "quadrature");
     private static final List<String> MEASURES = List.of("spearman", "kendall", "pearson");
-    private static final List<String> ASKS = List.of("mean", "integral", "probability");
-    private static final List<String> ASKS_LATER =
-            List.of("quantile", "tailMean", "ratio", "standardDeviation", "distribution");
-    private static final Map<String, String> ASK_LATER =
-            each("Leave it out: it belongs to an answer that is not available.", "at", "coverage");
 
     private final Problems problems;
     private boolean indicesHold = true;
@@ -83,12 +81,12 @@ final class DraftReader {
                 whole.number("confidence"),
                 whole.object("tolerance", "a tolerance {\"relative\": 0.05} or {\"absolute\": 2}")
                         .map(this::tolerance),
+                interval(whole),
                 whole.object("stop", "a stop rule {\"rule\": \"fixed\", \"draws\": …}")
                         .map(this::stop),
                 whole.count("seed", 0, Long.MAX_VALUE),
                 whole.flag("commonRandomNumbers"),
                 lanes(whole));
-        onlyAuto(whole);
         whole.close(WHOLE_LATER);
         if (!indicesHold) {
             throw new Refusal(problems.found());
@@ -262,32 +260,36 @@ final class DraftReader {
     }
 
     private AskDraft ask(Fields fields) {
-        List<String> words = fields.names().stream()
-                .filter(name -> ASKS.contains(name) || ASKS_LATER.contains(name))
-                .toList();
+        List<String> words =
+                fields.names().stream().filter(AskDraft.ESTIMANDS::contains).toList();
         if (words.size() != 1) {
             problems.add(Problem.of(
                             words.isEmpty()
                                     ? "nothing is asked here"
                                     : "%s are asked in one place".formatted(String.join(" and ", words)))
-                    .because("Each answer names one of %s.".formatted(String.join(", ", ASKS)))
+                    .because("Each answer names one of %s.".formatted(String.join(", ", AskDraft.ESTIMANDS)))
                     .tryThis("Several answers from the same draws are a list: [{\"mean\": …}, {\"probability\": …}].")
                     .at(Place.of(fields.path())));
         }
-        ASKS.forEach(fields::has);
+        AskDraft.ESTIMANDS.forEach(fields::has);
         String word = words.isEmpty() ? "" : words.getFirst();
-        if (ASKS_LATER.contains(word)) {
-            fields.take(word);
-            problems.add(Fields.unavailable(Shown.quoted(word), "Ask for one of %s.".formatted(String.join(", ", ASKS)))
-                    .at(Place.of(fields.pathOf(word))));
-        }
         var ask = new AskDraft(
                 word,
-                ASKS.contains(word) ? fields.text(word, FORMULA) : "",
+                words.isEmpty() ? List.of("") : formulas(fields, word),
+                takesAt(word) ? fields.number("at") : OptionalDouble.empty(),
+                word.equals("distribution") ? fields.number("coverage") : OptionalDouble.empty(),
                 fields.text("unit", NAME),
                 fields.text("label", LINE));
-        fields.close(ASK_LATER);
+        fields.close(Map.of());
         return ask;
+    }
+
+    private static boolean takesAt(String word) {
+        return word.equals("quantile") || word.equals("tailMean");
+    }
+
+    private List<String> formulas(Fields fields, String word) {
+        return word.equals("ratio") ? fields.texts(word, 2, FORMULA) : List.of(fields.text(word, FORMULA));
     }
 
     private ReferenceDraft reference(Fields fields) {
@@ -331,14 +333,12 @@ final class DraftReader {
         return lanes;
     }
 
-    private void onlyAuto(Fields whole) {
-        String interval = whole.text("interval", NAME);
-        if (whole.has("interval") && !interval.equals("auto") && !interval.isEmpty()) {
-            problems.add(Fields.unavailable(
-                            "the interval %s".formatted(Shown.quoted(interval)),
-                            "Leave it out: exact binomial for probabilities, Student t otherwise.")
-                    .at(Place.of(whole.pathOf("interval"))));
-        }
+    private Optional<IntervalDraft> interval(Fields whole) {
+        Optional<String> kind = whole.has("interval") ? Optional.of(whole.text("interval", NAME)) : Optional.empty();
+        Optional<Bounds> bounds = whole.has("bounds")
+                ? Optional.of(whole.numbers("bounds", 2)).map(ends -> new Bounds(ends.getFirst(), ends.getLast()))
+                : Optional.empty();
+        return kind.isEmpty() && bounds.isEmpty() ? Optional.empty() : Optional.of(new IntervalDraft(kind, bounds));
     }
 
     private interface Part<T> {

@@ -46,6 +46,12 @@ final class DraftWriter {
         draft.reference().ifPresent(reference -> whole.put("reference", reference(reference)));
         number(whole, "confidence", draft.confidence());
         draft.tolerance().ifPresent(tolerance -> whole.put("tolerance", tolerance(tolerance)));
+        draft.interval().ifPresent(interval -> {
+            interval.kind().ifPresent(kind -> whole.put("interval", kind));
+            interval.bounds()
+                    .ifPresent(bounds ->
+                            whole.put("bounds", Json.list(List.of(Json.of(bounds.low()), Json.of(bounds.high())))));
+        });
         draft.stop().ifPresent(stop -> whole.put("stop", stop(stop)));
         draft.seed().ifPresent(seed -> whole.put("seed", Json.of(seed)));
         if (draft.commonRandomNumbers()) {
@@ -171,9 +177,17 @@ final class DraftWriter {
     }
 
     private static Json ask(AskDraft ask) {
-        return Json.object()
-                .put(ask.estimand(), ask.formula())
-                .putUnlessEmpty("unit", ask.unit())
+        var fields = Json.object();
+        if (ask.formulas().size() == 1) {
+            fields.put(ask.estimand(), ask.formula());
+        } else {
+            fields.put(
+                    ask.estimand(),
+                    Json.list(ask.formulas().stream().map(Json::of).toList()));
+        }
+        number(fields, "at", ask.at());
+        number(fields, "coverage", ask.coverage());
+        return fields.putUnlessEmpty("unit", ask.unit())
                 .putUnlessEmpty("label", ask.label())
                 .build();
     }

@@ -4,6 +4,7 @@ import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
@@ -81,6 +82,47 @@ final class Fields {
                     return value;
                 })
                 .orElse("");
+    }
+
+    /// So many texts in a list; empty ones where it holds something else.
+    List<String> texts(String name, int count, int most) {
+        List<Json> list = list(name, count);
+        List<String> texts = new ArrayList<>();
+        for (int i = 0; i < count; i++) {
+            if (i < list.size() && list.get(i) instanceof Json.Text(String text) && text.length() <= most) {
+                texts.add(text);
+            } else {
+                texts.add("");
+            }
+        }
+        checkElements(name, list, count, Json.Text.class, "a text of at most " + most + " characters");
+        return texts;
+    }
+
+    /// So many numbers in a list; `NaN` where it holds something else.
+    List<Double> numbers(String name, int count) {
+        List<Json> list = list(name, count);
+        List<Double> numbers = new ArrayList<>();
+        for (int i = 0; i < count; i++) {
+            numbers.add(i < list.size() && list.get(i) instanceof Json.Number number ? number.value() : Double.NaN);
+        }
+        checkElements(name, list, count, Json.Number.class, "a number");
+        return numbers;
+    }
+
+    private void checkElements(String name, List<Json> list, int count, Class<? extends Json> kind, String expected) {
+        if (list.size() < count) {
+            add(
+                    name,
+                    "%s has %d of %d elements".formatted(name, list.size(), count),
+                    "Each is %s.".formatted(expected));
+        }
+        for (int i = 0; i < list.size(); i++) {
+            if (!kind.isInstance(list.get(i))) {
+                problems.add(Problem.of("%s is %s but must be %s".formatted(name, Shown.what(list.get(i)), expected))
+                        .at(Place.of(JsonPath.element(pathOf(name), i))));
+            }
+        }
     }
 
     String requiredText(String name, int most) {

@@ -1,7 +1,9 @@
 package dev.leadline.project;
 
+import dev.leadline.estimate.Estimand;
 import dev.leadline.formula.Step;
 import dev.leadline.model.Ask;
+import dev.leadline.model.Components;
 import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
@@ -53,9 +55,7 @@ public final class Fingerprint {
         content.put(
                 "ask",
                 Json.list(IntStream.range(0, question.asks().size())
-                        .mapToObj(k -> ask(
-                                question.asks().get(k),
-                                question.working().asked().get(k).canonical()))
+                        .mapToObj(k -> ask(question, k))
                         .toList()));
         if (!project.data().isEmpty()) {
             var files = Json.object();
@@ -93,11 +93,29 @@ public final class Fingerprint {
         return Json.of(step.name() + " = " + step.formula().canonical());
     }
 
-    private static Json ask(Ask ask, String canonical) {
-        return Json.object()
-                .put(ask.estimand().word(), canonical)
-                .putUnlessEmpty("unit", ask.unit())
-                .build();
+    private static Json ask(Question question, int index) {
+        Ask ask = question.asks().get(index);
+        int first = Components.firstFormula(question.asks(), index);
+        List<Json> formulas = question
+                .working()
+                .asked()
+                .subList(first, first + ask.estimand().formulas())
+                .stream()
+                .map(formula -> Json.of(formula.canonical()))
+                .toList();
+        var fields = Json.object()
+                .put(ask.estimand().word(), formulas.size() == 1 ? formulas.getFirst() : Json.list(formulas));
+        switch (ask.estimand()) {
+            case Estimand.Quantile(double at) -> fields.put("at", Json.of(at));
+            case Estimand.TailMean(double at) -> fields.put("at", Json.of(at));
+            case Estimand.Distribution(double coverage) -> fields.put("coverage", Json.of(coverage));
+            case Estimand.Mean _,
+                    Estimand.Integral _,
+                    Estimand.Probability _,
+                    Estimand.Ratio _,
+                    Estimand.StandardDeviation _ -> {}
+        }
+        return fields.putUnlessEmpty("unit", ask.unit()).build();
     }
 
     private static String sha256(String text) {

@@ -2,6 +2,7 @@ package dev.leadline.project;
 
 import dev.leadline.engine.Look;
 import dev.leadline.model.Ask;
+import dev.leadline.model.Components;
 import dev.leadline.model.Input;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
@@ -47,8 +48,19 @@ public final class LookJson {
                         .put("ask", asks.get(k).estimand().word())
                         .putUnlessEmpty("unit", asks.get(k).unit())
                         .putUnlessEmpty("label", asks.get(k).label())
-                        .put("outcome", Json.of(outcomes.get(k).doubleValue()))
+                        .put("outcome", outcome(asks, k, outcomes))
                         .build())
                 .toList());
+    }
+
+    /// A number; a list of them where several formulas are asked of.
+    private static Json outcome(List<Ask> asks, int index, List<Double> outcomes) {
+        int first = Components.firstFormula(asks, index);
+        List<Json> values = outcomes
+                .subList(first, first + asks.get(index).formulas().size())
+                .stream()
+                .map(value -> Json.of(value.doubleValue()))
+                .toList();
+        return values.size() == 1 ? values.getFirst() : Json.list(values);
     }
 }

@@ -6,6 +6,7 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Extremes;
 import dev.leadline.ground.Ground;
 import dev.leadline.interval.ClopperPearson;
+import dev.leadline.interval.Interval;
 import dev.leadline.interval.NoHit;
 import dev.leadline.model.Input;
 import dev.leadline.model.Plan;
@@ -142,11 +143,19 @@ public final class RunJson {
                 .put("estimate", Json.orNull(answer.estimate()))
                 .put("standardError", Json.orNull(answer.standardError()))
                 .put("halfWidth", Json.orNull(interval.halfWidth()))
-                .put("interval", Json.list(List.of(Json.orNull(interval.low()), Json.orNull(interval.high()))))
+                .put("interval", limits(interval))
                 .put("confidence", Json.of(interval.level()))
                 .put("intervalKind", interval.kind())
-                .put("band", new Json.Null());
+                .put("band", answer.band().map(RunJson::limits).orElse(new Json.Null()));
         interval.note().ifPresent(note -> json.put("intervalNote", note));
+        answer.coverage()
+                .ifPresent(found -> json.put("standardUncertainty", Json.orNull(found.standardUncertainty()))
+                        .put("coverage", Json.of(found.coverage()))
+                        .put("symmetric", limits(found.symmetricLow(), found.symmetricHigh()))
+                        .put("shortest", limits(found.shortestLow(), found.shortestHigh())));
+        if (answer.provisional()) {
+            json.put("provisional", Json.of(true));
+        }
         if (answer.estimand() instanceof Estimand.Probability) {
             answer.hits().ifPresent(hits -> {
                 json.put("hits", Json.of(hits));
@@ -161,6 +170,14 @@ public final class RunJson {
                     .put("oneIn", Json.orNull(Chance.oneIn(answer.estimate())));
         }
         return json.build();
+    }
+
+    private static Json limits(Interval interval) {
+        return limits(interval.low(), interval.high());
+    }
+
+    private static Json limits(double low, double high) {
+        return Json.list(List.of(Json.orNull(low), Json.orNull(high)));
     }
 
     /// The limit that the probability is not above, with the interval's confidence.

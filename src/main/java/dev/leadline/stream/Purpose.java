@@ -17,7 +17,9 @@ public enum Purpose {
     /// Draws from the inputs' own densities that an answer by others is compared with.
     AUDIT(12),
     /// Draws from the observations themselves, of which an interval is made.
-    BOOTSTRAP(16);
+    BOOTSTRAP(16),
+    /// Draws that show where outcomes lie, before a run.
+    LANDMARK(17);
 
     private final int number;
 

@@ -90,7 +90,7 @@ final class Contender {
     }
 
     Estimate estimate(Accumulator sums) {
-        return Answers.estimate(scheme(), sums, 0, question.asks().size());
+        return Answers.estimate(question, scheme(), sums, 0);
     }
 
     /// Whether observations differ, by more than rounding, so that there is a variance to compare.

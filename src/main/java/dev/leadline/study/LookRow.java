@@ -1,6 +1,7 @@
 package dev.leadline.study;
 
 import dev.leadline.engine.Look;
+import dev.leadline.model.Components;
 import dev.leadline.model.Question;
 import dev.leadline.model.UnitWords;
 import java.math.BigDecimal;
@@ -40,8 +41,12 @@ public record LookRow(String kind, String name, String value, String remark) {
         }
         for (int k = 0; k < question.asks().size(); k++) {
             var ask = question.asks().get(k);
-            String name = ask.label().isBlank() ? ask.formula() : ask.label();
-            rows.add(new LookRow("outcome", name, text(look.outcomes().get(k)), ""));
+            int first = Components.firstFormula(question.asks(), k);
+            for (int i = 0; i < ask.formulas().size(); i++) {
+                boolean named = ask.formulas().size() == 1 && !ask.label().isBlank();
+                String name = named ? ask.label() : ask.formulas().get(i);
+                rows.add(new LookRow("outcome", name, text(look.outcomes().get(first + i)), ""));
+            }
         }
         return rows;
     }

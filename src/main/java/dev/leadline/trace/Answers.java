@@ -1,34 +1,15 @@
 package dev.leadline.trace;
 
 import dev.leadline.estimate.Accumulator;
-import dev.leadline.estimate.CrossFit;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Estimate;
-import dev.leadline.estimate.Regression;
-import dev.leadline.estimate.SelfNormalised;
-import dev.leadline.interval.ClopperPearson;
-import dev.leadline.interval.Interval;
-import dev.leadline.interval.NoHit;
-import dev.leadline.interval.SplittingSteps;
-import dev.leadline.interval.Student;
-import dev.leadline.interval.ToRounding;
-import dev.leadline.model.Ask;
-import dev.leadline.model.Input;
-import dev.leadline.model.Input.Role;
+import dev.leadline.estimate.Outcomes;
 import dev.leadline.model.Question;
-import dev.leadline.scheme.Control;
-import dev.leadline.scheme.Growing;
-import dev.leadline.scheme.Independent;
-import dev.leadline.scheme.Proposal;
-import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.Scheme;
-import dev.leadline.scheme.SplittingOutcome;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Optional;
-import java.util.OptionalLong;
 
-/// What the sums of the observations say about each thing asked.
+/// What the observations say about each thing asked.
 public final class Answers {
     private Answers() {}
 
@@ -38,169 +19,50 @@ public final class Answers {
         return answers == 1 ? question.confidence() : 1 - (1 - question.confidence()) / answers;
     }
 
+    /// Of a question of means and chances, which sums alone answer.
+    ///
     /// @param sums of every observation
     public static List<Answer> of(Question question, Scheme scheme, Accumulator sums) {
-        return of(question, scheme, sums, List.of(sums));
+        return of(question, scheme, sums, List.of(sums), List.of());
     }
 
     /// @param sums of every observation
     /// @param blocks the same, in parts that are independent of each other
-    public static List<Answer> of(Question question, Scheme scheme, Accumulator sums, List<Accumulator> blocks) {
+    /// @param outcomes of each thing asked; none for splitting
+    public static List<Answer> of(
+            Question question, Scheme scheme, Accumulator sums, List<Accumulator> blocks, List<Outcomes> outcomes) {
         double level = level(question);
         var answers = new ArrayList<Answer>();
-        for (int k = 0; k < question.asks().size(); k++) {
-            answers.add(answer(question, scheme, sums, blocks, k, level));
+        for (int index = 0; index < question.asks().size(); index++) {
+            answers.add(of(new Shown(question, scheme, sums, blocks, outcomes, index, level)));
         }
         return answers;
     }
 
-    private static Answer answer(
-            Question question, Scheme scheme, Accumulator sums, List<Accumulator> blocks, int k, double level) {
-        Ask ask = question.asks().get(k);
-        OptionalLong hits =
-                ask.estimand() instanceof Estimand.Probability ? hits(scheme, sums, k) : OptionalLong.empty();
-        if (scheme.isPlain() && hits.isPresent()) {
-            var interval = ClopperPearson.of(hits.getAsLong(), sums.count(), sums.excluded(), level);
-            return answer(ask, sums, Estimate.mean(sums, k), interval, hits);
-        }
-        if (scheme.points() instanceof Repetitions repetitions) {
-            return climbed(ask, repetitions, sums, level);
-        }
-        boolean isNoHit = ask.estimand() instanceof Estimand.Probability && scheme.isWeighted() && isZero(sums, k);
-        if (isNoHit) {
-            return answer(ask, sums, new Estimate(0, Double.NaN, sums.count() - 1), noHit(scheme, sums, level));
-        }
-        if (mayBePerfect(question, scheme, sums, k) && ToRounding.isMet(sums.min(k), sums.max(k))) {
-            double value = sums.mean(k);
-            return answer(
-                    ask,
-                    sums,
-                    new Estimate(value, ToRounding.standardError(value), sums.count() - 1),
-                    ToRounding.of(value, sums.count(), level));
-        }
-        int asks = question.asks().size();
-        Optional<String> hindrance =
-                scheme.controls().isEmpty() ? Optional.empty() : hindrance(scheme, sums, blocks, k, asks);
-        if (hindrance.isPresent()) {
-            var none = new Estimate(Double.NaN, Double.NaN, 0);
-            return answer(ask, sums, none, Student.none(level, hindrance.get()), hits);
-        }
-        Estimate estimate = scheme.crossFitted()
-                ? new CrossFit(blocks, k, asks, scheme.controls().size()).estimate(errors(scheme))
-                : estimate(scheme, sums, k, asks);
-        var interval = !scheme.controls().isEmpty() && estimate.standardError() == 0 && !sums.constant(k)
-                ? Student.none(
-                        level,
-                        "the control variates explain every outcome seen so far: no spread to build an interval from")
-                : Student.of(estimate, level);
-        return answer(ask, sums, estimate, bounded(ask, interval), hits);
+    private static Answer of(Shown shown) {
+        return switch (shown.ask().estimand()) {
+            case Estimand.Mean _, Estimand.Integral _, Estimand.Probability _ -> MeanAnswers.of(shown);
+            case Estimand.Ratio _ -> MomentAnswers.ratio(shown);
+            case Estimand.StandardDeviation _ -> MomentAnswers.standardDeviation(shown);
+            case Estimand.Quantile(double at) -> OrderAnswers.quantile(shown, at);
+            case Estimand.TailMean(double at) -> OrderAnswers.tailMean(shown, at);
+            case Estimand.Distribution(double coverage) -> OrderAnswers.distribution(shown, coverage);
+        };
     }
 
-    private static boolean isZero(Accumulator sums, int k) {
-        return sums.count() > 0 && sums.min(k) == 0 && sums.max(k) == 0;
-    }
-
-    private static Interval noHit(Scheme scheme, Accumulator sums, double level) {
-        long draws = scheme.points() instanceof Growing ? sums.count() * scheme.turns() : sums.count();
-        return NoHit.of(draws, scheme.nominalShare(), sums.excluded(), level);
-    }
-
-    /// Whether equal values say that the density drawn from is perfect: they do where the weights are not all equal.
-    private static boolean mayBePerfect(Question question, Scheme scheme, Accumulator sums, int k) {
-        boolean isWeighed = question.asks().get(k).estimand() instanceof Estimand.Integral
-                && question.inputs().stream().map(Input::role).anyMatch(Role.UnboundedRange.class::isInstance);
-        return sums.count() > 1
-                && (isWeighed && scheme.controls().isEmpty()
-                        || scheme.isWeighted()
-                                && scheme.drawFrom()
-                                        .filter(Proposal::selfNormalised)
-                                        .isEmpty()
-                                && !ToRounding.isMet(sums.min(sums.components() - 1), sums.max(sums.components() - 1)));
-    }
-
-    /// Of single draws that count 1 each.
-    private static OptionalLong hits(Scheme scheme, Accumulator sums, int k) {
-        return scheme.points() instanceof Independent && !scheme.isWeighted() ? sums.hits(k) : OptionalLong.empty();
-    }
-
-    /// Why the coefficients of the control variates cannot be fitted yet, and what number of observations
-    /// would do.
-    private static Optional<String> hindrance(
-            Scheme scheme, Accumulator sums, List<Accumulator> blocks, int k, int asks) {
-        int controls = scheme.controls().size();
-        long wanted = Regression.fewest(controls);
-        String needed = controls == 1
-                ? "1 control variate needs at least %d observations".formatted(wanted)
-                : "%d control variates need at least %d observations".formatted(controls, wanted);
-        if (sums.count() < wanted) {
-            return Optional.of("%s, 10 for each; so far there %s"
-                    .formatted(needed, sums.count() == 1 ? "is 1" : "are " + sums.count()));
-        }
-        long others = scheme.crossFitted() ? new CrossFit(blocks, k, asks, controls).fewest() : wanted;
-        return others >= wanted
-                ? Optional.empty()
-                : Optional.of("%s outside every part of the draws that is corrected; so far there are %d of %d"
-                        .formatted(needed, others, sums.count()));
-    }
-
-    private static double[] errors(Scheme scheme) {
-        return scheme.controls().stream().mapToDouble(Control::error).toArray();
-    }
-
-    /// The estimate alone, before its interval.
+    /// An answer as far as sums alone say it, so that schemes can be compared: of a quantile the share beyond the level
+    /// near it, with the standard error as it would be at the quantile.
     ///
-    /// @param asks components before those of the control variates
-    public static Estimate estimate(Scheme scheme, Accumulator sums, int k, int asks) {
-        if (scheme.points() instanceof Repetitions repetitions) {
-            var steps = steps(repetitions, sums);
-            return new Estimate(steps.estimate(), steps.error(), sums.count() - 1);
-        }
-        if (scheme.drawFrom().filter(Proposal::selfNormalised).isPresent()) {
-            return SelfNormalised.of(sums, k, sums.components() - 1);
-        }
-        return scheme.controls().isEmpty()
-                ? Estimate.mean(sums, k)
-                : new Regression(sums, k, asks, scheme.controls().size()).estimate(errors(scheme));
-    }
-
-    /// Of splitting: no answer once a repetition has given up, for those that did not are the lucky ones.
-    private static Answer climbed(Ask ask, Repetitions repetitions, Accumulator sums, double level) {
-        int end = sums.count() == 0 ? 0 : (int) sums.max(Repetitions.COMPONENTS - 1);
-        if (end > 0) {
-            String why = SplittingOutcome.End.values()[end].words();
-            var none = new Interval(
-                    Double.NaN, Double.NaN, level, SplittingSteps.KIND, "A repetition gave up.", Optional.of(why));
-            return answer(
-                    ask, sums, new Estimate(Double.NaN, Double.NaN, sums.count() - 1), none, OptionalLong.empty());
-        }
-        var steps = steps(repetitions, sums);
-        var estimate = new Estimate(steps.estimate(), steps.error(), sums.count() - 1);
-        return answer(ask, sums, estimate, steps.interval(level), OptionalLong.empty());
-    }
-
-    private static SplittingSteps steps(Repetitions repetitions, Accumulator sums) {
-        return SplittingSteps.of(sums, 0, repetitions.splitting().particles());
-    }
-
-    /// A chance is neither below 0 nor above 1.
-    private static Interval bounded(Ask ask, Interval interval) {
-        return ask.estimand() instanceof Estimand.Probability ? interval.within(0, 1) : interval;
-    }
-
-    private static Answer answer(Ask ask, Accumulator sums, Estimate estimate, Interval interval) {
-        return answer(ask, sums, estimate, interval, OptionalLong.empty());
-    }
-
-    private static Answer answer(Ask ask, Accumulator sums, Estimate estimate, Interval interval, OptionalLong hits) {
-        return new Answer(
-                ask.estimand(),
-                ask.unit(),
-                ask.label(),
-                estimate.value(),
-                estimate.standardError() == 0 ? Double.NaN : estimate.error(),
-                interval,
-                hits,
-                sums.count(),
-                sums.excluded());
+    /// @param index of the thing asked
+    public static Estimate estimate(Question question, Scheme scheme, Accumulator sums, int index) {
+        var shown = new Shown(question, scheme, sums, List.of(sums), List.of(), index, level(question));
+        return switch (shown.ask().estimand()) {
+            case Estimand.Mean _, Estimand.Integral _, Estimand.Probability _ -> MeanAnswers.estimate(shown);
+            case Estimand.Ratio _ -> MomentAnswers.ratioOfMeans(shown).estimate();
+            case Estimand.StandardDeviation _ -> MomentAnswers.deviation(shown);
+            case Estimand.Quantile(double at) -> OrderAnswers.share(shown, at);
+            case Estimand.TailMean(double at) -> OrderAnswers.beyond(shown, at);
+            case Estimand.Distribution _ -> MeanAnswers.estimate(shown);
+        };
     }
 }

@@ -14,6 +14,7 @@ import java.util.Optional;
 /// @param blocks sums of consecutive blocks of draws, at most 64 (see [Blocks])
 /// @param extremes of the draws one by one: outcomes by their weights, control variates likewise, and the weights;
 ///     empty where every draw counts 1
+/// @param outcomes how they lie, of each thing asked; empty for splitting
 /// @param failures the first 20
 /// @param stopReason empty while the lane runs or pauses
 /// @param audit independent draws from the inputs' own densities, which enter no answer of the lane; empty
@@ -24,10 +25,12 @@ public record Trace(
         List<Mark> marks,
         List<Accumulator> blocks,
         Optional<Extremes> extremes,
+        List<Spread> outcomes,
         List<Failure> failures,
         Optional<String> stopReason,
         Optional<Trace> audit) {
     public Trace {
+        outcomes = List.copyOf(outcomes);
         marks = List.copyOf(marks);
         blocks = List.copyOf(blocks);
         failures = List.copyOf(failures);
@@ -53,7 +56,7 @@ public record Trace(
             List<Accumulator> blocks,
             List<Failure> failures,
             Optional<String> stopReason) {
-        this(lane, scheme, marks, blocks, Optional.empty(), failures, stopReason);
+        this(lane, scheme, marks, blocks, Optional.empty(), List.of(), failures, stopReason);
     }
 
     /// The same beside its audit.

@@ -24,6 +24,7 @@ class WeightsTest {
                 List.of(),
                 Optional.of(extremes),
                 List.of(),
+                List.of(),
                 Optional.empty());
     }
 

@@ -8,6 +8,7 @@ import dev.leadline.model.Ask;
 import dev.leadline.model.Dependence;
 import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
+import dev.leadline.model.IntervalWish;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
@@ -99,8 +100,20 @@ public final class Questions {
                 inputs.stream().map(Input::name).toList(),
                 new LinkedHashMap<>(),
                 steps,
-                asks.stream().map(Ask::formula).toList());
-        return new Question("", "", false, List.of(), inputs, dependence, working, asks, reference, .95, tolerance);
+                asks.stream().flatMap(ask -> ask.formulas().stream()).toList());
+        return new Question(
+                "",
+                "",
+                false,
+                List.of(),
+                inputs,
+                dependence,
+                working,
+                asks,
+                reference,
+                .95,
+                tolerance,
+                IntervalWish.AUTO);
     }
 
     public static Lane lane(String name) {
@@ -116,8 +129,8 @@ public final class Questions {
         return this;
     }
 
-    private Questions ask(Estimand estimand, String formula) {
-        asks.add(new Ask(estimand, formula, "", ""));
+    public Questions ask(Estimand estimand, String... formulas) {
+        asks.add(new Ask(estimand, List.of(formulas), "", ""));
         return this;
     }
 

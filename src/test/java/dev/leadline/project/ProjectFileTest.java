@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.interval.Bounds;
 import dev.leadline.model.DensityDraft;
 import dev.leadline.model.DensityDraft.Column;
 import dev.leadline.model.DensityDraft.Data;
@@ -21,6 +22,7 @@ import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.model.Draft.PairDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
@@ -96,10 +98,17 @@ class ProjectFileTest {
                     true,
                     List.of(new PairDraft("v", "t", "spearman", .4), new PairDraft("t", "m", "pearson", -.1)))),
             List.of("q = 0.5*v^2   # Pa"),
-            List.of(new AskDraft("integral", "q*x", "m3", "volume"), new AskDraft("mean", "q", "", "")),
+            List.of(
+                    new AskDraft("integral", "q*x", "m3", "volume"),
+                    new AskDraft("mean", "q", "", ""),
+                    new AskDraft("quantile", List.of("q"), OptionalDouble.of(.99), OptionalDouble.empty(), "", ""),
+                    new AskDraft("ratio", List.of("q", "v"), OptionalDouble.empty(), OptionalDouble.empty(), "", "of"),
+                    new AskDraft(
+                            "distribution", List.of("q"), OptionalDouble.empty(), OptionalDouble.of(.9), "Pa", "")),
             Optional.of(new ReferenceDraft(1.2568e-5, OptionalDouble.of(4e-9), "closed form")),
             OptionalDouble.of(.99),
             Optional.of(new ToleranceDraft(OptionalDouble.of(25), OptionalDouble.of(.1), Optional.of("both"))),
+            Optional.of(new IntervalDraft(Optional.of("hoeffding"), Optional.of(new Bounds(-1, 2)))),
             Optional.of(new StopDraft("fixed", OptionalLong.of(200_000_000), OptionalDouble.of(.5))),
             OptionalLong.of(Long.MAX_VALUE),
             true,
@@ -196,6 +205,7 @@ class ProjectFileTest {
                 List.of(new AskDraft("mean", "", "", "")),
                 Optional.empty(),
                 OptionalDouble.empty(),
+                Optional.empty(),
                 Optional.empty(),
                 Optional.empty(),
                 OptionalLong.empty(),

@@ -13,7 +13,19 @@ class AnswerTextTest {
     private static Answer answer(
             Estimand estimand, String unit, double value, double low, double high, OptionalLong hits, long nonFinite) {
         var interval = new Interval(low, high, .95, "student", "", Optional.empty());
-        return new Answer(estimand, unit, "", value, (high - low) / 4, interval, hits, 1_000_000, nonFinite);
+        return new Answer(
+                estimand,
+                unit,
+                "",
+                value,
+                (high - low) / 4,
+                interval,
+                Optional.empty(),
+                hits,
+                1_000_000,
+                nonFinite,
+                Optional.empty(),
+                false);
     }
 
     @Test

@@ -59,20 +59,20 @@ public final class FormulasViewModel {
     }
 
     void typeFormula(int i, String text) {
-        editAsk(i, ".formula", a -> new AskDraft(a.estimand(), text, a.unit(), a.label()));
+        editAsk(i, ".formula", a -> a.withFormula(0, text));
     }
 
     void kind(int i, String estimand) {
         project.settle();
-        editAsk(i, ".estimand", a -> new AskDraft(estimand, a.formula(), a.unit(), a.label()));
+        editAsk(i, ".estimand", a -> a.asking(estimand));
     }
 
     void unit(int i, String unit) {
-        editAsk(i, ".unit", a -> new AskDraft(a.estimand(), a.formula(), unit, a.label()));
+        editAsk(i, ".unit", a -> a.withUnit(unit));
     }
 
     void label(int i, String label) {
-        editAsk(i, ".label", a -> new AskDraft(a.estimand(), a.formula(), a.unit(), label));
+        editAsk(i, ".label", a -> a.withLabel(label));
     }
 
     void addAsk() {
@@ -133,7 +133,7 @@ public final class FormulasViewModel {
         Draft d = project.draft().get();
         var known = InputsViewModel.known(d);
         var unknown = new LinkedHashSet<String>();
-        Stream.concat(d.steps().stream(), d.asks().stream().map(AskDraft::formula))
+        Stream.concat(d.steps().stream(), d.formulas().stream())
                 .flatMap(text -> Colouring.names(text).stream())
                 .filter(name -> !known.contains(name))
                 .forEach(unknown::add);

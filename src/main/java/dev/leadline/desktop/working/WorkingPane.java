@@ -189,7 +189,7 @@ public final class WorkingPane extends BorderPane {
     /// Problems that no field and no formula shows; none while nothing was written yet.
     private List<Problem> unplaced() {
         var d = project.draft().get();
-        if (d.steps().isEmpty() && d.asks().stream().allMatch(a -> a.formula().isBlank())) {
+        if (d.steps().isEmpty() && d.formulas().stream().allMatch(String::isBlank)) {
             return List.of();
         }
         return project.problems().get().stream()

@@ -1,0 +1,186 @@
+package dev.leadline.estimate;
+
+import java.util.Arrays;
+import java.util.List;
+
+/// What pilot draws found of an outcome before a run, and the run then takes as given: where its middle lies, near what
+/// the quantile is, and between what values outcomes are to be kept one by one. Being the same for every observation it
+/// leaves them independent, and no answer is biased by it.
+///
+/// @param draws pilot draws behind it
+/// @param from,to least and greatest outcome of the pilot draws; `NaN` where none was finite
+/// @param centre the mean of the pilot draws
+/// @param level near the quantile that is asked for; `NaN` where none is
+/// @param windows where outcomes are kept, from low to high; none where only moments count
+public record Landmark(int draws, double from, double to, double centre, double level, List<Window> windows) {
+    /// Standard errors of the pilot's shares, on either side of what is sought, that a window reaches.
+    private static final double REACH = 8;
+
+    /// Of a thing asked of which nothing need be known beforehand.
+    public static final Landmark NONE = new Landmark(0, Double.NaN, Double.NaN, 0, Double.NaN, List.of());
+
+    public Landmark {
+        windows = List.copyOf(windows);
+    }
+
+    /// Outcomes that are kept: `low <= x <= high`.
+    ///
+    /// @param binsFrom,binsTo finite numbers between which kept values are sorted into bins of one width
+    public record Window(double low, double high, double binsFrom, double binsTo) {}
+
+    /// The same with other windows.
+    Landmark with(List<Window> others) {
+        return new Landmark(draws, from, to, centre, level, others);
+    }
+
+    /// So many pilot draws show what the estimand needs: 200 beyond a quantile, as far as a million draws have them.
+    public static int pilotDraws(Estimand estimand) {
+        return switch (estimand) {
+            case Estimand.Quantile(double at) -> beyond(at);
+            case Estimand.TailMean(double at) -> beyond(at);
+            case Estimand.Distribution _ -> LARGEST / 64;
+            case Estimand.Mean _,
+                    Estimand.Integral _,
+                    Estimand.Probability _,
+                    Estimand.Ratio _,
+                    Estimand.StandardDeviation _ -> FEWEST;
+        };
+    }
+
+    private static final int FEWEST = 4096;
+    private static final int LARGEST = 1 << 20;
+    private static final double BEYOND = 200;
+
+    /// With fewer pilot draws beyond it, the end of a window is no number.
+    private static final double BEYOND_END = 10;
+
+    private static int beyond(double at) {
+        return (int) Math.clamp(Math.ceil(BEYOND / Math.min(at, 1 - at)), FEWEST, LARGEST);
+    }
+
+    /// @param outcomes of pilot draws; those that are not finite count nothing
+    /// @param weights of the same draws
+    public static Landmark of(Estimand estimand, double[] outcomes, double[] weights) {
+        var sorted = Weighed.of(outcomes, weights);
+        if (sorted.size() == 0) {
+            return new Landmark(outcomes.length, Double.NaN, Double.NaN, 0, 0, everything(estimand, 0, 0));
+        }
+        double from = sorted.value(0);
+        double to = sorted.value(sorted.size() - 1);
+        double centre = sorted.mean();
+        return switch (estimand) {
+            case Estimand.Quantile(double at) -> near(outcomes.length, sorted, from, to, centre, at);
+            case Estimand.TailMean(double at) -> near(outcomes.length, sorted, from, to, centre, at);
+            case Estimand.Distribution(double coverage) -> {
+                double low = sorted.reach(1 - coverage, REACH);
+                double high = sorted.reach(coverage, -REACH);
+                yield new Landmark(
+                        outcomes.length,
+                        from,
+                        to,
+                        centre,
+                        Double.NaN,
+                        low >= high
+                                ? everything(estimand, from, to)
+                                : List.of(
+                                        new Window(Double.NEGATIVE_INFINITY, low, from, low),
+                                        new Window(high, Double.POSITIVE_INFINITY, high, to)));
+            }
+            case Estimand.Mean _,
+                    Estimand.Integral _,
+                    Estimand.Probability _,
+                    Estimand.Ratio _,
+                    Estimand.StandardDeviation _ ->
+                new Landmark(outcomes.length, from, to, centre, Double.NaN, List.of());
+        };
+    }
+
+    private static List<Window> everything(Estimand estimand, double from, double to) {
+        return switch (estimand) {
+            case Estimand.Quantile _, Estimand.TailMean _, Estimand.Distribution _ ->
+                List.of(new Window(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, from, to));
+            case Estimand.Mean _,
+                    Estimand.Integral _,
+                    Estimand.Probability _,
+                    Estimand.Ratio _,
+                    Estimand.StandardDeviation _ -> List.of();
+        };
+    }
+
+    private static Landmark near(int draws, Weighed sorted, double from, double to, double centre, double at) {
+        double low = sorted.reach(at, -REACH);
+        double high = sorted.reach(at, REACH);
+        return new Landmark(
+                draws,
+                from,
+                to,
+                centre,
+                sorted.reach(at, 0),
+                List.of(new Window(low, high, Math.max(low, from), Math.min(high, to))));
+    }
+
+    /// Pilot outcomes in rising order with their weights.
+    private record Weighed(double[] values, double[] weights, double[] above, int draws) {
+        static Weighed of(double[] outcomes, double[] weights) {
+            var order = new Integer[outcomes.length];
+            Arrays.setAll(order, i -> i);
+            Integer[] finite = Arrays.stream(order)
+                    .filter(i -> Double.isFinite(outcomes[i]) && weights[i] > 0)
+                    .sorted((i, j) -> Double.compare(outcomes[i], outcomes[j]))
+                    .toArray(Integer[]::new);
+            double[] values = new double[finite.length];
+            double[] sizes = new double[finite.length];
+            Arrays.setAll(values, i -> outcomes[finite[i]]);
+            Arrays.setAll(sizes, i -> weights[finite[i]]);
+            double[] above = new double[finite.length];
+            double sum = 0;
+            for (int i = finite.length - 1; i >= 0; i--) {
+                above[i] = sum;
+                sum += sizes[i];
+            }
+            for (int i = 0; i < above.length; i++) {
+                above[i] /= sum;
+                sizes[i] /= sum;
+            }
+            return new Weighed(values, sizes, above, outcomes.length);
+        }
+
+        int size() {
+            return values.length;
+        }
+
+        double value(int i) {
+            return values[i];
+        }
+
+        double mean() {
+            double mean = 0;
+            for (int i = 0; i < values.length; i++) {
+                mean = Math.fma(weights[i], values[i], mean);
+            }
+            return mean;
+        }
+
+        /// Where the share of the outcomes below is `at`, moved by so many of its standard errors; infinite where
+        /// the pilot draws do not reach so far.
+        double reach(double at, double errors) {
+            double squares = 0;
+            boolean upper = at >= 0.5;
+            for (int i = 0; i < values.length; i++) {
+                boolean beyond = upper ? above[i] + weights[i] <= 1 - at : 1 - above[i] <= at;
+                squares += beyond ? weights[i] * weights[i] : 0;
+            }
+            double tail = Math.min(at, 1 - at);
+            double error = Math.sqrt(Math.max(squares, tail * (1 - tail) / draws));
+            double wanted = at + errors * error;
+            if (errors != 0 && Math.min(wanted, 1 - wanted) * draws < BEYOND_END) {
+                return wanted < 0.5 ? Double.NEGATIVE_INFINITY : Double.POSITIVE_INFINITY;
+            }
+            int i = 0;
+            while (i < values.length - 1 && 1 - above[i] < wanted) {
+                i++;
+            }
+            return values[i];
+        }
+    }
+}
