@@ -41,6 +41,7 @@ final class CoverageIntervals {
         var low = outcomes.ranked(rank);
         var high = outcomes.ranked(rank + span);
         double[] shortest = outcomes.ends()
+                .filter(ends -> ends.getFirst().length > 0 && ends.getLast().length > 0)
                 .map(ends -> shortest(ends, n, span))
                 .orElseGet(() -> byBins(n, span, low.value(), high.value()));
         return new Found(n, low, high, shortest[0], shortest[1]);

@@ -43,7 +43,7 @@ public record Combination(String points, String drawFrom, String controls, Strin
             ", \"controlVariates\": [{\"formula\": \"x\", \"mean\": \"exact\"}, {\"formula\": \"y\", \"mean\": 0}]");
 
     /// What is asked, and the exact value: e - 1 of the first two; of the chance the integral of Φ(x - 1) over
-    /// (0, 1), which is φ(0) + Φ(-1) - φ(1).
+    /// (0, 1), which is φ(0) + Φ(-1) - φ(1); quantile and tail mean by mpmath from the integral of Φ(t - x).
     private record Asked(String ask, double value) {}
 
     private static final SequencedMap<String, Asked> ESTIMANDS = estimands();
@@ -53,13 +53,11 @@ public record Combination(String points, String drawFrom, String controls, Strin
         asked.put("mean", new Asked("{\"mean\": \"exp(x)*(1 + y/4)\"}", Math.E - 1));
         asked.put("integral", new Asked("{\"integral\": \"exp(x)*(1 + y/4)\"}", Math.E - 1));
         asked.put("probability", new Asked("{\"probability\": \"x + y > 1\"}", .3156268094));
-        for (String other : List.of("standardDeviation", "distribution")) {
-            asked.put(other, new Asked("{\"%s\": \"x + y\"}".formatted(other), Double.NaN));
-        }
-        for (String other : List.of("quantile", "tailMean")) {
-            asked.put(other, new Asked("{\"%s\": \"x + y\", \"at\": 0.9}".formatted(other), Double.NaN));
-        }
-        asked.put("ratio", new Asked("{\"ratio\": [\"x\", \"y\"]}", Double.NaN));
+        asked.put("standardDeviation", new Asked("{\"standardDeviation\": \"x + y\"}", Math.sqrt(13 / 12.)));
+        asked.put("distribution", new Asked("{\"distribution\": \"x + y\"}", .5));
+        asked.put("quantile", new Asked("{\"quantile\": \"x + y\", \"at\": 0.9}", 1.8344230807478381));
+        asked.put("tailMean", new Asked("{\"tailMean\": \"x + y\", \"at\": 0.9}", 2.3262628977783059));
+        asked.put("ratio", new Asked("{\"ratio\": [\"exp(x)*(1 + y/4)\", \"1 + y/4\"]}", Math.E - 1));
         return asked;
     }
 
