@@ -16,6 +16,7 @@ import java.util.stream.IntStream;
 /// Makes the draws of an item of work and accumulates them. Scratch of one worker, confined to it; what it returns
 /// is a pure function of the recipe and the item.
 public final class Sampler implements ItemWork {
+    private final Recipe recipe;
     private final Evaluation evaluation;
     private final Observing observing;
     private final double[][] components;
@@ -24,20 +25,28 @@ public final class Sampler implements ItemWork {
     private final Accumulator sums;
     private final Optional<Extremes> extremes;
     private final List<Catch> caught;
+    private final double[] sizes;
 
     Sampler(Recipe recipe) {
+        this(recipe, Folding.of(recipe));
+    }
+
+    /// @param folding what becomes of the draws
+    Sampler(Recipe recipe, Folding folding) {
+        this.recipe = recipe;
         this.evaluation = new Evaluation(recipe);
         this.observing = new Observing(recipe, evaluation);
         this.components = observing.components();
         this.formulas = IntStream.range(0, recipe.asks().size())
                 .map(a -> Components.firstFormula(recipe.asks(), a))
                 .toArray();
-        this.folding = Folding.of(recipe);
+        this.folding = folding;
         this.sums = new Accumulator(components.length);
         this.extremes = evaluation.isWeighted() ? Optional.of(new Extremes(components.length)) : Optional.empty();
         this.caught = IntStream.range(0, formulas.length)
                 .mapToObj(a -> new Catch(recipe.landmarks().get(a), recipe.isWeighed(formulas[a]), Program.BLOCK))
                 .toList();
+        this.sizes = new double[Program.BLOCK];
     }
 
     @Override
@@ -54,11 +63,9 @@ public final class Sampler implements ItemWork {
             }
             int rows = Math.min(Program.BLOCK, item.draws() - from);
             evaluation.next(rows);
-            for (int a = 0; a < formulas.length; a++) {
-                caught.get(a).add(evaluation.outcomes()[formulas[a]], evaluation.weights(), rows, from, item.draws());
-            }
+            take(rows, from, item);
             observing.observe(rows);
-            extremes.ifPresent(seen -> seen.add(components, rows));
+            extremes.ifPresent(seen -> seen.add(folding.counted(components, rows), rows));
             if (!folding.addTo(sums, components, rows)) {
                 keepFailures(item.firstDraw() + from, rows, failures);
             }
@@ -69,6 +76,25 @@ public final class Sampler implements ItemWork {
                 extremes.map(Extremes::copy),
                 caught.stream().map(Catch::copy).toList(),
                 List.copyOf(failures)));
+    }
+
+    private void take(int rows, int from, Item item) {
+        for (int a = 0; a < formulas.length; a++) {
+            if (recipe.isWeighed(formulas[a])) {
+                size(formulas[a], rows);
+            }
+            caught.get(a).add(evaluation.outcomes()[formulas[a]], sizes, rows, from, item.draws());
+        }
+    }
+
+    /// What each draw counts for the outcome of a formula.
+    private void size(int formula, int rows) {
+        if (evaluation.isWeighted() && !recipe.isWhole(formula)) {
+            System.arraycopy(evaluation.weights(), 0, sizes, 0, rows);
+        } else {
+            Arrays.fill(sizes, 0, rows, 1);
+        }
+        folding.count(sizes, rows);
     }
 
     private void keepFailures(long firstDraw, int rows, List<Failure> failures) {

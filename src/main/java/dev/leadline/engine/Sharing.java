@@ -2,6 +2,7 @@ package dev.leadline.engine;
 
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Regression;
+import dev.leadline.model.Components;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
 import dev.leadline.scheme.Allocation;
@@ -57,7 +58,7 @@ record Sharing(Question question, Lane lane, Stratified points, long seed) {
         double[] coefficients = new double[sums.components()];
         coefficients[0] = 1;
         int controls = lane.scheme().controls().size();
-        int first = question.asks().size();
+        int first = Components.asked(question.asks());
         double[] explained =
                 controls == 0 ? new double[0] : new Regression(spreads.within(), 0, first, controls).coefficients();
         for (int c = 0; c < controls; c++) {

@@ -14,14 +14,4 @@ public record Coverage(
         double symmetricLow,
         double symmetricHigh,
         double shortestLow,
-        double shortestHigh) {
-    /// Of so many outcomes, those by which the ends of an interval lie apart in rank: JCGM 101:2008, 7.7.2.
-    static long span(long n, double coverage) {
-        return Math.clamp((long) Math.floor(coverage * n + 0.5), 1, Math.max(1, n - 1));
-    }
-
-    /// Rank of the lower end of the interval that leaves out as many below as above.
-    static long symmetricRank(long n, long span) {
-        return Math.max(1, (n - span + 1) / 2);
-    }
-}
+        double shortestHigh) {}

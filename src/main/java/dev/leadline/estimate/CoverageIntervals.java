@@ -2,6 +2,7 @@ package dev.leadline.estimate;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.function.LongUnaryOperator;
 
 /// The coverage intervals of outcomes, of which only the ends are kept. Confined to the thread that merges items.
 ///
@@ -13,9 +14,12 @@ final class CoverageIntervals {
 
     private final Outcomes outcomes;
     private final double coverage;
+    private final LongUnaryOperator reach;
     private Optional<Found> found = Optional.empty();
 
-    CoverageIntervals(Outcomes outcomes, double coverage) {
+    /// @param reach ranks from one end to the other, of so many outcomes
+    CoverageIntervals(Outcomes outcomes, double coverage, LongUnaryOperator reach) {
+        this.reach = reach;
         this.outcomes = outcomes;
         this.coverage = coverage;
     }
@@ -36,8 +40,8 @@ final class CoverageIntervals {
 
     private Found ranked() {
         long n = outcomes.draws();
-        long span = Coverage.span(n, coverage);
-        long rank = Coverage.symmetricRank(n, span);
+        long span = reach.applyAsLong(n);
+        long rank = (n - span + 1) / 2;
         var low = outcomes.ranked(rank);
         var high = outcomes.ranked(rank + span);
         double[] shortest = outcomes.ends()

@@ -6,11 +6,12 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.LongUnaryOperator;
 
 /// The outcomes of one thing asked, of all items merged so far: what a quantile, a tail mean or a distribution is read
 /// from. Confined to the thread that merges items.
 ///
-/// Its memory does not grow beyond a cap: see [Ranks].
+/// Its memory does not grow beyond a cap: see [InOrder].
 public final class Outcomes {
     /// Outcomes kept one by one, of each window: 32 MB.
     public static final long MOST_KEPT = 4_000_000;
@@ -18,7 +19,7 @@ public final class Outcomes {
     private final Landmark landmark;
     private final boolean weighted;
     /// Of each window; then those of further passes over the same draws.
-    private final List<Ranks> ranks;
+    private final List<InOrder> ranks;
 
     private final Histogram histogram;
     private final List<Place> open = new ArrayList<>();
@@ -32,7 +33,7 @@ public final class Outcomes {
         this.landmark = landmark;
         this.weighted = weighted;
         this.ranks = new ArrayList<>(landmark.windows().stream()
-                .map(window -> new Ranks(window, weighted, most))
+                .map(window -> new InOrder(window, weighted, most))
                 .toList());
         this.histogram = new Histogram(landmark.from(), landmark.to());
     }
@@ -99,7 +100,7 @@ public final class Outcomes {
 
     private Place place(long rank) {
         Place place = Place.ANYWHERE;
-        for (Ranks within : ranks) {
+        for (InOrder within : ranks) {
             place = place.and(within.at(rank));
         }
         return place;
@@ -125,7 +126,7 @@ public final class Outcomes {
 
     private Place place(double at, double total) {
         Place place = Place.ANYWHERE;
-        for (Ranks within : ranks) {
+        for (InOrder within : ranks) {
             place = place.and(at >= 0.5 ? within.withAbove(Quantile.above(at) * total) : within.withUpTo(at * total));
         }
         return place;
@@ -138,7 +139,7 @@ public final class Outcomes {
 
     /// Outcomes in the lowest and in the highest window, each in order, where all are kept and count 1 each.
     public Optional<List<double[]>> ends() {
-        var sorted = ranks.stream().map(Ranks::sorted).toList();
+        var sorted = ranks.stream().map(InOrder::sorted).toList();
         return sorted.stream().allMatch(Optional::isPresent)
                 ? Optional.of(sorted.stream().map(Optional::orElseThrow).toList())
                 : Optional.empty();
@@ -179,8 +180,11 @@ public final class Outcomes {
     /// The distribution's coverage intervals: its ends are places as others are.
     ///
     /// @param standardUncertainty goes with them
-    public Coverage coverage(double part, double standardUncertainty) {
-        var found = coverage.computeIfAbsent(part, _ -> new CoverageIntervals(this, part))
+    ///
+    /// @param part of the outcomes that the intervals hold
+    /// @param reach ranks from one end of them to the other, of so many outcomes
+    public Coverage coverage(double part, LongUnaryOperator reach, double standardUncertainty) {
+        var found = coverage.computeIfAbsent(part, _ -> new CoverageIntervals(this, part, reach))
                 .find();
         return new Coverage(
                 part,

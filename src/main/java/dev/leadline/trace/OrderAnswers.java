@@ -5,9 +5,12 @@ import dev.leadline.estimate.Outcomes;
 import dev.leadline.estimate.Outcomes.Place;
 import dev.leadline.estimate.Quantile;
 import dev.leadline.estimate.SelfNormalised;
+import dev.leadline.interval.CoverageInterval;
 import dev.leadline.interval.Delta;
 import dev.leadline.interval.Interval;
 import dev.leadline.interval.InvertedCdf;
+import dev.leadline.interval.Ranks;
+import dev.leadline.interval.Sides;
 import dev.leadline.interval.Student;
 import java.util.Optional;
 
@@ -17,11 +20,19 @@ final class OrderAnswers {
 
     static Answer quantile(Shown shown, double at) {
         if (shown.outcomes().isEmpty() || shown.outcomes().get().draws() == 0) {
-            return none(shown, InvertedCdf.KIND);
+            return none(shown, Ranks.KIND);
         }
         var outcomes = shown.outcomes().get();
         Place place = outcomes.quantile(at, total(shown, outcomes));
-        return inverted(shown, at, outcomes, place);
+        return shown.scheme().isPlain() ? ranked(shown, at, outcomes, place) : inverted(shown, at, outcomes, place);
+    }
+
+    /// Of independent draws that count 1 each: by ranks, exact whatever the outcomes are.
+    private static Answer ranked(Shown shown, double at, Outcomes outcomes, Place place) {
+        var ranks = Ranks.of(outcomes.draws(), at, shown.level(), Sides.BOTH);
+        Place low = ranks.hasLow() ? outcomes.ranked(ranks.low()) : NOWHERE;
+        Place high = ranks.hasHigh() ? outcomes.ranked(ranks.high()) : NOWHERE;
+        return answer(shown, place, Double.NaN, ranks.interval(low.value(), high.value()), low, high);
     }
 
     private static final Place NOWHERE = new Place(Double.NaN, Double.NaN);
@@ -81,10 +92,11 @@ final class OrderAnswers {
         var estimate = new Estimate(centre + off.value(), off.standardError(), off.degrees());
         var answer = answer(shown, estimate, Student.of(estimate, shown.level()), false);
         return shown.outcomes()
-                .filter(seen -> seen.draws() > 1)
+                .filter(seen -> CoverageInterval.symmetricRank(seen.draws(), coverage) > 0)
                 .map(seen -> {
-                    var whole = answer.with(seen.coverage(
-                            coverage, MomentAnswers.deviation(shown).value()));
+                    double deviation = MomentAnswers.deviation(shown).value();
+                    var whole =
+                            answer.with(seen.coverage(coverage, n -> CoverageInterval.reach(n, coverage), deviation));
                     return seen.isOpen() ? whole.untilKnown() : whole;
                 })
                 .orElse(answer);

@@ -15,7 +15,7 @@ import java.util.stream.IntStream;
 /// They are sorted into bins as they come, so that any rank is found without sorting all. Where more would have to be
 /// kept than may be, only the bins are counted: a rank is then known to lie between two outcomes, and a second pass
 /// over the same draws with that for a window finds it.
-final class Ranks {
+final class InOrder {
     private static final int BINS = 1024;
 
     private final Window window;
@@ -40,7 +40,7 @@ final class Ranks {
     private double excess;
 
     /// @param most values to keep
-    Ranks(Window window, boolean weighted, long most) {
+    InOrder(Window window, boolean weighted, long most) {
         this.window = window;
         this.weighted = weighted;
         this.most = most;
