@@ -43,9 +43,10 @@ public record Trace(
             List<Mark> marks,
             List<Accumulator> blocks,
             Optional<Extremes> extremes,
+            List<Spread> outcomes,
             List<Failure> failures,
             Optional<String> stopReason) {
-        this(lane, scheme, marks, blocks, extremes, failures, stopReason, Optional.empty());
+        this(lane, scheme, marks, blocks, extremes, outcomes, failures, stopReason, Optional.empty());
     }
 
     /// Of a lane whose draws count 1 each.
@@ -61,7 +62,8 @@ public record Trace(
 
     /// The same beside its audit.
     public Trace beside(Trace plain) {
-        return new Trace(lane, scheme, marks, blocks, extremes, failures, stopReason, Optional.of(plain));
+        return new Trace(
+                lane, scheme, marks, blocks, extremes, outcomes, failures, stopReason, Optional.of(plain));
     }
 
     public Optional<Mark> last() {
