@@ -1,6 +1,5 @@
 package dev.leadline.chart;
 
-import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Reference;
@@ -49,7 +48,7 @@ public record Settling(
         boolean first = answer == 0;
         return new Settling(
                 question.title(),
-                ask.label().isBlank() ? AskDraft.words(ask.estimand().word()) + " of " + ask.text() : ask.label(),
+                ask.name(),
                 ask.unit(),
                 Answers.level(question),
                 plan.seed(),

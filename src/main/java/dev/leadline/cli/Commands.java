@@ -30,10 +30,10 @@ public final class Commands {
     public static final int OUR_FAULT = 3;
 
     /// Commands of the programme that this version lacks.
-    private static final Set<String> LATER = Set.of("rehearse", "plan", "report", "replay");
+    private static final Set<String> LATER = Set.of("plan", "report", "replay");
 
     /// Options of its commands that this version lacks.
-    private static final Set<String> OPTIONS_LATER = Set.of("--record", "--report", "--repetitions");
+    private static final Set<String> OPTIONS_LATER = Set.of("--record", "--report");
 
     private final Console console;
     private final ToIntFunction<Optional<Path>> window;
@@ -48,6 +48,7 @@ public final class Commands {
                 new LookCommand(),
                 new CompareCommand(),
                 new SuggestCommand(),
+                new RehearseCommand(),
                 new FigureCommand(),
                 new FamiliesCommand(),
                 new OpenCommand(window));

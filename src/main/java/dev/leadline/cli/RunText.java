@@ -23,8 +23,6 @@ import java.util.Locale;
 /// A finished run for people.
 final class RunText {
 
-    private static final int WIDTH = 100;
-
     private static final String SAMPLING_ERROR_ONLY = "The interval covers sampling error only; it says nothing about"
             + " whether densities and formula are right.";
 
@@ -177,19 +175,8 @@ final class RunText {
         return capital.endsWith(".") ? capital : capital + ".";
     }
 
-    /// Words in lines of a hundred columns, the first behind `head`, the others below it.
     private void wrapped(String head, String words) {
-        String before = head;
-        var line = new StringBuilder();
-        for (String word : words.strip().split("\\s+")) {
-            if (!line.isEmpty() && before.length() + line.length() + 1 + word.length() > WIDTH) {
-                line(before + line);
-                before = " ".repeat(head.length());
-                line.setLength(0);
-            }
-            line.append(line.isEmpty() ? "" : " ").append(word);
-        }
-        line(before + line);
+        Wrapped.lines(head, words).forEach(this::line);
     }
 
     private void line(String line) {

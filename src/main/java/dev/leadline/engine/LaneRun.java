@@ -20,6 +20,7 @@ import java.util.Optional;
 import java.util.Queue;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.Future;
+import java.util.function.BooleanSupplier;
 import java.util.stream.IntStream;
 
 /// A lane on its way: items handed to workers, their sums merged in item order, marks set, the end found. Confined to
@@ -34,7 +35,8 @@ public final class LaneRun {
     private final Stop stop;
     private final long budget;
     private final Items items;
-    private final Workers workers;
+    private final Crew crew;
+    private final boolean watched;
     private final Queue<Future<Optional<ItemSums>>> ahead = new ArrayDeque<>();
 
     private final Tally tally;
@@ -48,22 +50,42 @@ public final class LaneRun {
     private Optional<String> stopReason = Optional.empty();
     private Optional<SecondPass> pass = Optional.empty();
 
-    public LaneRun(Recipe recipe, Stop stop, Workers workers) {
-        this(recipe, stop, workers, Outcomes.MOST_KEPT);
+    public LaneRun(Recipe recipe, Stop stop, Crew crew) {
+        this(recipe, stop, crew, Outcomes.MOST_KEPT);
     }
 
     /// @param mostKept outcomes kept one by one of each thing asked, beyond which a second pass finds what is sought
-    LaneRun(Recipe recipe, Stop stop, Workers workers, long mostKept) {
+    LaneRun(Recipe recipe, Stop stop, Crew crew, long mostKept) {
+        this(recipe, stop, crew, mostKept, true);
+    }
+
+    private LaneRun(Recipe recipe, Stop stop, Crew crew, long mostKept, boolean watched) {
         this.recipe = recipe;
         this.stop = stop;
         this.items = recipe.items();
-        this.workers = workers;
+        this.crew = crew;
+        this.watched = watched;
         this.tally = Tally.of(items, recipe.components());
         this.extremes =
                 recipe.lane().scheme().isWeighted() ? Optional.of(new Extremes(recipe.components())) : Optional.empty();
         this.budget = items.whole(stop.draws());
         this.mostKept = mostKept;
         this.outcomes = outcomes(recipe);
+    }
+
+    /// A run from its first draw to its end, on this thread; nobody looks at it before, and it has one mark.
+    ///
+    /// @return empty where cancelled
+    public static Optional<Trace> alone(Recipe recipe, Stop stop, BooleanSupplier cancelled) {
+        var run = new LaneRun(recipe, stop, new Alone(cancelled), Outcomes.MOST_KEPT, false);
+        try {
+            while (!run.finished() && !cancelled.getAsBoolean()) {
+                run.advance(0);
+            }
+        } catch (ExecutionException | InterruptedException e) {
+            throw new IllegalStateException("what one thread computes by itself neither waits nor fails later", e);
+        }
+        return cancelled.getAsBoolean() ? Optional.empty() : Optional.of(run.trace());
     }
 
     private List<Outcomes> outcomes(Recipe of) {
@@ -98,7 +120,7 @@ public final class LaneRun {
         if (stop.seconds().isPresent() && seconds >= stop.seconds().getAsDouble()) {
             return end("time used up", seconds);
         }
-        if (!tally.isWhole()) {
+        if (!watched || !tally.isWhole()) {
             return false;
         }
         if (marks.isEmpty() || draws >= NEXT_MARK * marks.getLast().draws()) {
@@ -150,13 +172,13 @@ public final class LaneRun {
     }
 
     private void submitAhead() {
-        while (ahead.size() < workers.ahead()) {
+        while (ahead.size() < crew.ahead()) {
             var item = items.within(submitted, budget);
             if (item.isEmpty()) {
                 return;
             }
             submitted++;
-            ahead.add(workers.submit(recipe, item.get()));
+            ahead.add(crew.submit(recipe, item.get()));
         }
     }
 
@@ -215,13 +237,13 @@ public final class LaneRun {
         private long merged;
 
         boolean advance(double seconds) throws InterruptedException, ExecutionException {
-            while (again.size() < workers.ahead()) {
+            while (again.size() < crew.ahead()) {
                 var item = items.within(next, draws);
                 if (item.isEmpty()) {
                     break;
                 }
                 next++;
-                again.add(workers.submit(narrowed, item.get()));
+                again.add(crew.submit(narrowed, item.get()));
             }
             var sums = again.remove().get();
             if (sums.isEmpty()) {

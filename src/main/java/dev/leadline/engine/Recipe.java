@@ -56,9 +56,7 @@ public final class Recipe {
         this.landmarks = List.copyOf(landmarks);
         this.ties = new Ties(question, proposal().keySet());
         this.address = new Address(seed, purpose, lane.address(), replicate, "", 0);
-        this.layout = lane.scheme().points() instanceof LaidOut points
-                ? Optional.of(points.layout(address, coordinates()))
-                : Optional.empty();
+        this.layout = layout(lane, address, coordinates());
         this.inversions =
                 Inversion.of(question.inputs().stream().map(Input::drawn).toList());
         this.proposed = new TreeMap<>();
@@ -77,6 +75,26 @@ public final class Recipe {
         }
         this.weighing = List.copyOf(unbounded);
         this.volume = product;
+    }
+
+    /// What another one has, for other draws.
+    private Recipe(Recipe other, Address address, List<Landmark> landmarks) {
+        this.question = other.question;
+        this.lane = other.lane;
+        this.landmarks = List.copyOf(landmarks);
+        this.ties = other.ties;
+        this.address = address;
+        this.layout = layout(lane, address, coordinates());
+        this.inversions = other.inversions;
+        this.proposed = other.proposed;
+        this.weighing = other.weighing;
+        this.volume = other.volume;
+    }
+
+    private static Optional<Layout> layout(Lane lane, Address address, List<String> coordinates) {
+        return lane.scheme().points() instanceof LaidOut points
+                ? Optional.of(points.layout(address, coordinates))
+                : Optional.empty();
     }
 
     /// Builds the inversion tables that are not in the cache yet, side by side, and finds the density to draw from
@@ -106,12 +124,12 @@ public final class Recipe {
     ///
     /// @param replicate tells one repetition from another
     public Recipe repeated(long seed, Purpose purpose, int replicate) {
-        return new Recipe(question, lane, landmarks, seed, purpose, replicate);
+        return new Recipe(this, new Address(seed, purpose, lane.address(), replicate, "", 0), landmarks);
     }
 
     /// The recipe of a further pass over the same draws.
     Recipe narrowed(List<Landmark> others) {
-        return new Recipe(question, lane, others, address.seed(), address.purpose(), address.replicate());
+        return new Recipe(this, address, others);
     }
 
     /// What pilot draws found of each thing asked.
@@ -201,7 +219,7 @@ public final class Recipe {
         return StreamKey.of(address.forInput(SPLITTING)).stream(repetition);
     }
 
-    Lane lane() {
+    public Lane lane() {
         return lane;
     }
 

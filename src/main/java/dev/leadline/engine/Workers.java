@@ -8,7 +8,7 @@ import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
 
 /// Threads that compute items of work. Safe for all threads.
-public final class Workers implements AutoCloseable {
+public final class Workers implements Crew, AutoCloseable {
     private final int threads;
     private final ExecutorService pool;
     private final ThreadLocal<Map<Recipe, ItemWork>> samplers = ThreadLocal.withInitial(IdentityHashMap::new);
@@ -21,13 +21,13 @@ public final class Workers implements AutoCloseable {
                 Thread.ofPlatform().daemon().name("leadline-worker-", 1).factory());
     }
 
-    /// How many items to have under way at once, so that no worker waits for the one that merges.
-    int ahead() {
+    @Override
+    public int ahead() {
         return 2 * threads + 1;
     }
 
-    /// @return empty where cancelled before its end
-    Future<Optional<ItemSums>> submit(Recipe recipe, Item item) {
+    @Override
+    public Future<Optional<ItemSums>> submit(Recipe recipe, Item item) {
         return pool.submit(
                 () -> samplers.get().computeIfAbsent(recipe, Recipe::work).compute(item, () -> cancelled));
     }

@@ -1,6 +1,7 @@
 package dev.leadline.model;
 
 import dev.leadline.estimate.Estimand;
+import dev.leadline.model.Draft.AskDraft;
 import java.util.List;
 
 /// One thing asked of a question.
@@ -10,6 +11,11 @@ import java.util.List;
 public record Ask(Estimand estimand, List<String> formulas, String unit, String label) {
     public Ask {
         formulas = List.copyOf(formulas);
+    }
+
+    /// What to call it: its label, else as `mean of exp(u)`.
+    public String name() {
+        return label.isBlank() ? AskDraft.words(estimand.word()) + " of " + text() : label;
     }
 
     /// The formulas in one line.

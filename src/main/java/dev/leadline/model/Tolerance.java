@@ -33,4 +33,12 @@ public record Tolerance(OptionalDouble absolute, OptionalDouble relative, boolea
     public boolean met(double estimate, double reach) {
         return reach <= allowed(estimate);
     }
+
+    /// Whether an estimate is as near to the true value as the tolerance asks.
+    public boolean isNear(double estimate, double value) {
+        double off = Math.abs(estimate - value);
+        boolean absolutely = absolute.isPresent() && off <= absolute.getAsDouble();
+        boolean relatively = relative.isPresent() && off <= relative.getAsDouble() * Math.abs(value);
+        return both ? absolutely && relatively : absolutely || relatively;
+    }
 }

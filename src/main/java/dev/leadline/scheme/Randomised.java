@@ -6,6 +6,7 @@ import dev.leadline.stream.StreamKey;
 import java.util.List;
 
 /// Layouts of replicates, coordinate by coordinate: each has random numbers of its own for every coordinate.
+/// Repetitions of a lane have replicates of their own.
 final class Randomised {
     private Randomised() {}
 
@@ -18,7 +19,8 @@ final class Randomised {
     static Layout layout(Address lane, List<String> coordinates, int replicates, Replicate replicate) {
         Coordinate[][] all = new Coordinate[replicates][coordinates.size()];
         for (int r = 0; r < replicates; r++) {
-            var address = new Address(lane.seed(), lane.purpose(), lane.lane(), r, "", 0);
+            int own = Math.addExact(Math.multiplyExact(lane.replicate(), replicates), r);
+            var address = new Address(lane.seed(), lane.purpose(), lane.lane(), own, "", 0);
             for (int j = 0; j < coordinates.size(); j++) {
                 var key = StreamKey.of(address.forInput(coordinates.get(j)));
                 all[r][j] = replicate.of(j, key.stream(0));

@@ -6,7 +6,7 @@ import java.util.Objects;
 ///
 /// @param seed of the run, 0 or more
 /// @param lane name of the lane, or [#SHARED] where lanes use common random numbers
-/// @param replicate 0 where points are not replicated
+/// @param replicate of the points; of repetitions one tells it from another; 0 where there is only one
 /// @param input name of the input the numbers are for
 /// @param item index of the item of work
 public record Address(long seed, Purpose purpose, String lane, int replicate, String input, long item) {

@@ -19,7 +19,9 @@ public enum Purpose {
     /// Draws from the observations themselves, of which an interval is made.
     BOOTSTRAP(16),
     /// Draws that show where outcomes lie, before a run.
-    LANDMARK(17);
+    LANDMARK(17),
+    /// Draws of repetitions, which show whether intervals hold.
+    REHEARSAL(20);
 
     private final int number;
 

@@ -1,0 +1,13 @@
+package dev.leadline.engine;
+
+import java.util.Optional;
+import java.util.concurrent.Future;
+
+/// Who computes the items of work of a run.
+public interface Crew {
+    /// How many items to have under way at once, so that nobody waits for the one that merges.
+    int ahead();
+
+    /// @return empty where cancelled before its end
+    Future<Optional<ItemSums>> submit(Recipe recipe, Item item);
+}
