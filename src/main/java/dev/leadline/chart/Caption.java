@@ -4,6 +4,7 @@ import dev.leadline.interval.Interval;
 import dev.leadline.model.Sentence;
 import dev.leadline.model.Tolerance;
 import dev.leadline.numeric.Rounding;
+import dev.leadline.study.RehearsalText;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -64,6 +65,23 @@ public final class Caption {
                 .forEach(lane ->
                         sentences.add("Lane %s (%s): %s.".formatted(lane.lane(), lane.scheme(), effective(lane))));
         sentences.add("Seed " + weights.seed() + ".");
+        return String.join(" ", sentences);
+    }
+
+    public static String of(Repeated repeated) {
+        var rehearsal = repeated.rehearsal();
+        var answer = repeated.answer();
+        var sentences = new ArrayList<String>();
+        sentences.add("Intervals of %s repetitions of lane %s (%s), of %s draws each, for %s, ordered by their middles."
+                .formatted(
+                        Typeset.count(rehearsal.repetitions()),
+                        rehearsal.lane(),
+                        rehearsal.scheme(),
+                        Typeset.count(Math.round(rehearsal.meanDraws())),
+                        answer.ask().name()));
+        sentences.add(RehearsalText.counts(answer));
+        sentences.add(RehearsalText.meaning(rehearsal, answer));
+        sentences.add("Dash-dotted: " + RehearsalText.sought(answer));
         return String.join(" ", sentences);
     }
 

@@ -18,6 +18,9 @@ final class Legend {
         /// The line and marker of a lane, without a band.
         record Trail(LaneLook look) implements Of {}
 
+        /// An interval on its own, with a mark at its end or without.
+        record Upright(LaneLook look, boolean marked) implements Of {}
+
         record ReferenceLine() implements Of {}
 
         record Strip() implements Of {}
@@ -33,7 +36,7 @@ final class Legend {
         int sample() {
             return switch (of) {
                 case Of.Remark _ -> 0;
-                case Of.Lane _, Of.Trail _, Of.ReferenceLine _, Of.Strip _, Of.Below _ -> SAMPLE + GAP;
+                case Of.Lane _, Of.Trail _, Of.Upright _, Of.ReferenceLine _, Of.Strip _, Of.Below _ -> SAMPLE + GAP;
             };
         }
     }

@@ -30,7 +30,7 @@ import org.jfree.chart.ui.RectangleInsets;
 ///
 /// Confined to one thread at a time, because the axes of the charting library are; nothing in it changes after it was
 /// made.
-public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture, WeightsPicture {
+public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture, WeightsPicture, RepeatedPicture {
     /// Smallest size in which every label still has room.
     public static final int LEAST_WIDTH = 240;
 
@@ -109,6 +109,7 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture,
     public static Picture of(Subject subject, View view, Theme theme, int width, int height) {
         return switch (subject) {
             case Settling settling -> new SettlingPicture(settling, view, theme, width, height);
+            case Repeated repeated -> new RepeatedPicture(repeated, view, theme, width, height);
             case Weights weights -> new WeightsPicture(weights, view, theme, width, height);
             case ErrorDecay decay -> new ErrorDecayPicture(decay, view, theme, width, height);
         };
@@ -420,6 +421,15 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture,
                 g.setStroke(look.line());
                 g.draw(new Line2D.Double(from, middle, to, middle));
                 marker(g, look, (from + to) / 2, middle);
+            }
+            case Legend.Of.Upright(var look, boolean marked) -> {
+                double x = (from + to) / 2;
+                g.setColor(theme.of(look));
+                g.setStroke(new BasicStroke(2));
+                g.draw(new Line2D.Double(x, middle - 6, x, middle + 6));
+                if (marked) {
+                    marker(g, look, x, middle - 4);
+                }
             }
             case Legend.Of.Below _ -> {
                 g.setColor(theme.strip());

@@ -47,6 +47,20 @@ final class ReadingText {
                         .formatted(rank, mean, rank, share);
     }
 
+    /// As `repetition 12 of 2,000 in this order: 1.21 ± 0.35, misses`.
+    static String ofRepetition(Repeated.Placed one, String unit) {
+        var p = one.point();
+        double half = (p.high() - p.low()) / 2;
+        var text = Rounding.of(p.estimate(), half);
+        return "%s%s, interval %s to %s, %s"
+                .formatted(
+                        text.value(),
+                        UnitWords.after(unit),
+                        text.down(p.low()),
+                        text.up(p.high()),
+                        one.missed() ? "misses the value" : "holds the value");
+    }
+
     private static String after(Point p) {
         return " after " + Typeset.count(p.draws()) + " draws";
     }
