@@ -30,7 +30,7 @@ public final class Commands {
     public static final int OUR_FAULT = 3;
 
     /// Commands of the programme that this version lacks.
-    private static final Set<String> LATER = Set.of("plan", "report", "replay");
+    private static final Set<String> LATER = Set.of("report", "replay");
 
     /// Options of its commands that this version lacks.
     private static final Set<String> OPTIONS_LATER = Set.of("--record", "--report");
@@ -49,6 +49,7 @@ public final class Commands {
                 new CompareCommand(),
                 new SuggestCommand(),
                 new RehearseCommand(),
+                new PlanCommand(),
                 new FigureCommand(),
                 new FamiliesCommand(),
                 new OpenCommand(window));

@@ -27,4 +27,21 @@ public record Question(
         inputs = List.copyOf(inputs);
         asks = List.copyOf(asks);
     }
+
+    /// The same question to another tolerance.
+    public Question to(Tolerance other) {
+        return new Question(
+                title,
+                notes,
+                safety,
+                constants,
+                inputs,
+                dependence,
+                working,
+                asks,
+                reference,
+                confidence,
+                Optional.of(other),
+                interval);
+    }
 }

@@ -1,11 +1,17 @@
 package dev.leadline.study;
 
+import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Logarithm;
+import dev.leadline.interval.AnyTimeMean;
+import dev.leadline.interval.DrawsNeeded;
+import dev.leadline.interval.Guard;
+import dev.leadline.interval.HitsRule;
 import dev.leadline.interval.Ratio;
 import dev.leadline.interval.Student;
 import dev.leadline.model.Question;
 import dev.leadline.model.Tolerance;
 import dev.leadline.scheme.Replicated;
+import dev.leadline.trace.Answer;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Mark;
 import java.util.List;
@@ -33,12 +39,20 @@ public record Need(String lane, Ratio draws, Optional<Ratio> seconds, String bas
     ///
     /// @param perDraw seconds of a draw
     static Optional<Need> of(Question question, Contender lane, Optional<Logarithm> perDraw) {
+        return found(question, lane).map(found -> of(question, lane, found, perDraw));
+    }
+
+    /// The logarithm of the draws, whose error says how well they are known.
+    static Optional<Logarithm> logarithm(Question question, Contender lane) {
+        return found(question, lane).map(Found::draws);
+    }
+
+    private static Optional<Found> found(Question question, Contender lane) {
         return question.tolerance()
                 .filter(_ -> lane.spreads())
                 .flatMap(tolerance -> lane.scheme().points() instanceof Replicated
                         ? rounds(question, tolerance, lane)
-                        : growing(question, tolerance, lane))
-                .map(found -> of(question, lane, found, perDraw));
+                        : spread(question, tolerance, lane).map(spread -> growing(question, spread)));
     }
 
     private static Need of(Question question, Contender lane, Found found, Optional<Logarithm> perDraw) {
@@ -55,15 +69,87 @@ public record Need(String lane, Ratio draws, Optional<Ratio> seconds, String bas
                 found.basis());
     }
 
-    /// `(z s / h)²` with the half-width h that the tolerance allows; the limits count that s and h are estimated.
-    private static Optional<Found> growing(Question question, Tolerance tolerance, Contender lane) {
+    /// The same where one looks until the any-time band is within the tolerance, or until there are hits enough.
+    ///
+    /// @param rule where hits are waited for
+    static Optional<Need> anyTime(
+            Question question, Contender lane, Optional<HitsRule> rule, Optional<Logarithm> perDraw) {
+        if (rule.isPresent()) {
+            return Optional.of(timed(
+                    question,
+                    lane,
+                    DrawsNeeded.of(rule.get(), lane.hits(), Math.round(lane.draws()), question.confidence()),
+                    perDraw,
+                    String.format(
+                            Locale.ROOT,
+                            "as far as the hit number %,d",
+                            rule.get().hits())));
+        }
+        boolean isOfSums = !(question.asks().getFirst().estimand() instanceof Estimand.Quantile);
+        return question.tolerance()
+                .filter(_ -> lane.grows() && lane.spreads() && isOfSums)
+                .flatMap(tolerance -> spread(question, tolerance, lane))
+                .map(spread -> {
+                    double each = lane.scheme().drawsPerObservation();
+                    var band = AnyTimeMean.tunedTo(
+                            each == 1 ? AnyTimeMean.DRAWS : AnyTimeMean.OBSERVATIONS, Answers.level(question));
+                    var needed = DrawsNeeded.of(
+                                    n -> band.unit(n / each) / Math.sqrt(each),
+                                    Ratio.of(spread, question.confidence()),
+                                    1)
+                            .atLeast(Guard.OF_DRAWS.draws());
+                    return timed(
+                            question,
+                            lane,
+                            needed,
+                            perDraw,
+                            String.format(
+                                    Locale.ROOT,
+                                    "the band is %.2f times as wide there as the interval for a fixed number",
+                                    band.overFixed(needed.value() / each)));
+                });
+    }
+
+    private static Need timed(
+            Question question, Contender lane, DrawsNeeded needed, Optional<Logarithm> perDraw, String basis) {
+        var draws = new Ratio(needed.low(), needed.value(), needed.high());
+        return new Need(
+                lane.lane().name(),
+                draws,
+                perDraw.map(log -> draws.times(Ratio.of(log, question.confidence()))),
+                basis);
+    }
+
+    /// The standard deviation of a draw over the half-width that the tolerance allows; the limits count that both are
+    /// estimated.
+    private static Optional<Logarithm> spread(Question question, Tolerance tolerance, Contender lane) {
+        return question.asks().getFirst().estimand() instanceof Estimand.Quantile
+                ? ofQuantile(question, tolerance, lane)
+                : lane.jackknife(sums -> lane.logOfVariance(sums) / 2
+                        - StrictMath.log(tolerance.allowed(lane.estimate(sums).value())));
+    }
+
+    /// From the width of the interval, which spans so many outcomes in their order that are spread alike there: a sum
+    /// of
+    /// as many gaps, each with a standard deviation of its size.
+    private static Optional<Logarithm> ofQuantile(Question question, Tolerance tolerance, Contender lane) {
+        Answer answer = lane.trace().last().orElseThrow().answers().getFirst();
+        double q = ((Estimand.Quantile) answer.estimand()).at();
+        double z = Student.quantile(MANY, answer.interval().level());
+        double outcomes = 2 * z * q * (1 - q) / lane.estimate().standardError();
+        double half = answer.interval().halfWidth();
+        double allowed = tolerance.allowed(answer.estimate());
+        return half > 0 && allowed > 0 && outcomes > 1
+                ? Optional.of(new Logarithm(
+                        StrictMath.log(half / z * Math.sqrt(lane.draws()) / allowed), 1 / outcomes, outcomes))
+                : Optional.empty();
+    }
+
+    /// `(z s / h)²` with the half-width h that the tolerance allows.
+    private static Found growing(Question question, Logarithm spread) {
         double z = Student.quantile(MANY, Answers.level(question));
-        return lane.jackknife(sums -> lane.logOfVariance(sums)
-                        - 2
-                                * StrictMath.log(
-                                        tolerance.allowed(lane.estimate(sums).value())))
-                .map(log -> new Found(
-                        log.moved(2 * StrictMath.log(z)), Math::ceil, "error falls with the root of the draws"));
+        return new Found(
+                spread.times(2).moved(2 * StrictMath.log(z)), Math::ceil, "error falls with the root of the draws");
     }
 
     /// Where the straight line through the logarithms of error and draws, fitted to the latest rounds, comes to the
