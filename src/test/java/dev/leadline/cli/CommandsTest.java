@@ -22,16 +22,16 @@ import org.junit.jupiter.params.provider.ValueSource;
 class CommandsTest {
 
     private static final String UNIFORM = """
-            {
-              "leadline": 1,
-              "title": "A point of the unit interval",
-              "inputs": [{"name": "x", "unit": "m", "density": {"family": "uniform", "from": 0, "to": 1}}],
-              "steps": ["y = x^2   # m2"],
-              "ask": {"mean": "y", "unit": "m2"},
-              "stop": {"rule": "fixed", "draws": 2000},
-              "seed": 1
-            }
-            """;
+        {
+          "leadline": 1,
+          "title": "A point of the unit interval",
+          "inputs": [{"name": "x", "unit": "m", "density": {"family": "uniform", "from": 0, "to": 1}}],
+          "steps": ["y = x^2   # m2"],
+          "ask": {"mean": "y", "unit": "m2"},
+          "stop": {"rule": "fixed", "draws": 2000},
+          "seed": 1
+        }
+        """;
 
     @TempDir
     Path folder;
@@ -141,9 +141,9 @@ class CommandsTest {
         Path wrong = Files.writeString(folder.resolve("wrong.leadline"), UNIFORM.replace("x^2", "2*xx^2"));
         assertTrue(
                 leadline("check", wrong).err().contains("""
-                y = 2*xx^2   # m2
-                      ^^
-                """.indent(4)),
+                    y = 2*xx^2   # m2
+                          ^^
+                    """.indent(4)),
                 leadline("check", wrong).err());
     }
 
@@ -182,12 +182,13 @@ class CommandsTest {
                 List.of("figure", "PROJECT", "-o", "nowhere/figure.png"),
                 List.of("figure", "PROJECT", "-o", "figure.png", "--width", "1"),
                 List.of("figure", "PROJECT", "-o", "figure.png", "--view", "decay"),
-                List.of("rehearse", "PROJECT"),
+                List.of("rehearse", "PROJECT", "--draws", "10,"),
+                List.of("rehearse", "PROJECT", "--mcse", "0"),
                 List.of("compare", "PROJECT"),
                 List.of("compare", "PROJECT", "A", "B"),
                 List.of("compare", "PROJECT", "A", "A"),
                 List.of("compare", "PROJECT", "--equal", "money"),
-                List.of("plan", "PROJECT"),
+                List.of("plan", "PROJECT", "--relative", "-1"),
                 List.of("suggest", "PROJECT", "--draws", "10"),
                 List.of("report", "PROJECT"),
                 List.of("replay", "PROJECT"),
@@ -213,7 +214,7 @@ class CommandsTest {
 
     @Test
     void namesWhatIsNotAvailable() {
-        assertTrue(leadline("rehearse", project).err().contains("The command rehearse is not available"));
+        assertTrue(leadline("report", project).err().contains("The command report is not available"));
         assertTrue(leadline("run", project, "--record", "r").err().contains("--record is not available"));
         assertTrue(leadline("run", project, "--drawz", "9").err().contains("Was --draws meant?"));
     }
