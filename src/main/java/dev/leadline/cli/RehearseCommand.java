@@ -121,7 +121,7 @@ final class RehearseCommand implements Command {
                 "N",
                 Long.class,
                 Arguments.whole(2, RehearsalPlan.MOST_REPETITIONS),
-                "Repeat N times (left out: 1,900 at 95 %, which shows the rate with a standard error of 0.5 %).");
+                "Repeat N times (left out: 1,900 at 95 %%, which shows the rate with a standard error of 0.5 %%).");
     }
 
     private static RehearsalPlan plan(Question question, Plan whole, ParseResult arguments) {

@@ -104,7 +104,10 @@ public record LanePlan(
                     lane.draws());
         }
         if (first.hits().orElse(1) == 0) {
-            return String.format(Locale.ROOT, "no hit in %,.0f draws", lane.draws());
+            return String.format(
+                    Locale.ROOT,
+                    "no hit in %,.0f draws; a longer pilot would tell, or a lane that draws it more often",
+                    lane.draws());
         }
         if (first.interval().note().isPresent()) {
             return first.interval().note().get();
