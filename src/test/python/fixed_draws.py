@@ -1,4 +1,5 @@
-# Makes wilson.csv and ranks.csv of src/test/resources/interval, the references of WilsonTest and RanksTest:
+# Makes wilson.csv, hall.csv and ranks.csv of src/test/resources/interval, the references of WilsonTest,
+# SkewnessCorrectedTest and RanksTest:
 #   /usr/bin/python3 fixed_draws.py
 # Wilson's limits are the roots of (k/n - p)^2 = z^2 p (1-p)/n, at 50 digits. Ranks come from binomial tails by
 # quadrature of the beta density with mpmath's gamma function, at 40 digits; up to n = 1e6 SciPy has to agree.
@@ -95,6 +96,25 @@ with open(os.path.join(OUT, "wilson.csv"), "w") as out:
         for level in (0.5, 0.95, 0.99, 1 - 1e-9):
             low, high = wilson(k, n, mpf(level))
             print("%d,%d,%r,%s,%s" % (k, n, level, mp.nstr(low, 20), mp.nstr(high, 20)), file=out)
+
+with open(os.path.join(OUT, "hall.csv"), "w") as out:
+    print(HEAD % (mpmath.__version__, mp.dps), file=out)
+    print("level,low,high", file=out)
+    # the data of record diag-johnson-t; limits are the roots of Hall's cubic at t and -t
+    data = [mpf(x) for x in "0.12 0.35 0.08 1.9 0.44 0.02 3.7 0.61 0.27 0.95 0.15 1.1".split()]
+    n = len(data)
+    mean = sum(data) / n
+    s = sqrt(sum((x - mean) ** 2 for x in data) / (n - 1))
+    g = sum((x - mean) ** 3 for x in data) / n / s**3
+    for level in (0.5, 0.95, 0.99):
+        within = lambda t: 1 - mp.betainc(mpf(n - 1) / 2, 0.5, 0, (n - 1) / (n - 1 + t * t), regularized=True)
+        t = mp.findroot(lambda t: within(t) - mpf(level), (mpf("0.1"), mpf(20)), solver="illinois", tol=1e-60)
+        limits = []
+        for at in (t, -t):
+            cubic = [g * g / (27 * n), g / (3 * sqrt(n)), mpf(1), g / (6 * sqrt(n)) - at]
+            (root,) = [r.real for r in mp.polyroots(cubic, maxsteps=200, extraprec=200) if abs(r.imag) < mpf(10) ** -20]
+            limits.append(mean - s / sqrt(n) * root)
+        print("%r,%s,%s" % (level, mp.nstr(limits[0], 20), mp.nstr(limits[1], 20)), file=out)
 
 mp.dps = 40
 with open(os.path.join(OUT, "ranks.csv"), "w") as out:

@@ -73,6 +73,25 @@ class LogDeviationTest {
         assertEquals(plain.variance(), weighted.variance(), 1e-13 * plain.variance());
     }
 
+    /// Of weighted draws, too, it does not matter where c lies.
+    @Test
+    void weightedOnesDoNotDependOnTheirCentre() {
+        var random = random();
+        double[] h = random.doubles(300).toArray();
+        double[] w = random.doubles(300).toArray();
+        Logarithm[] logs = new Logarithm[2];
+        for (int k = 0; k < 2; k++) {
+            double c = k == 0 ? .5 : -3;
+            double[] first = new double[300];
+            double[] second = new double[300];
+            Arrays.setAll(first, i -> w[i] * (h[i] - c));
+            Arrays.setAll(second, i -> w[i] * (h[i] - c) * (h[i] - c));
+            logs[k] = LogDeviation.of(sums(first, second, w), 0, 1, 2);
+        }
+        assertEquals(logs[0].value(), logs[1].value(), 1e-12);
+        assertEquals(1, logs[1].variance() / logs[0].variance(), 1e-10);
+    }
+
     /// Antithetic pairs of a uniform outcome, folded to their means: its standard deviation is `1/√12`. And
     /// exponential draws weighted to an exponential density of mean .8, whose standard deviation is .8.
     /// Values lie about them as their variances say.

@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import dev.leadline.ReferenceValues;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvFileSource;
 import org.junit.jupiter.params.provider.ValueSource;
 
 class SkewnessCorrectedTest {
@@ -24,6 +25,16 @@ class SkewnessCorrectedTest {
                 assertEquals(t, back, 1e-11 * (1 + Math.abs(g / root)) * (1 + t * t));
             }
         }
+    }
+
+    /// Made by `fixed_draws.py` with 50 digits: the data of record diag-johnson-t, roots of the cubic.
+    @ParameterizedTest
+    @CsvFileSource(resources = "/interval/hall.csv", numLinesToSkip = 2)
+    void agreesWithFiftyDigits(double level, double low, double high) {
+        double[] data = ReferenceValues.numbers(ReferenceValues.record(JOHNSON).required("data"));
+        var interval = SkewnessCorrected.of(Observed.sums(data), 0, level);
+        assertEquals(low, interval.low(), 1e-14);
+        assertEquals(high, interval.high(), 1e-14 * high);
     }
 
     @Test
