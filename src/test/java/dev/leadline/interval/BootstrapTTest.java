@@ -84,6 +84,26 @@ class BootstrapTTest {
         assertEquals("bootstrap-t", interval.kind());
     }
 
+    /// Of B samples the quantile p is the one of rank `(B + 1) p`: of 1,999 the 50th and the 1,950th at 95
+    /// %, of 19,999 the 20th and the 19,980th at 99.8 %.
+    @Test
+    void limitsAreRatiosOfExactRanks() {
+        double[] values = Observed.EXPONENTIAL.draws(Observed.random(9), 25);
+        var sums = Observed.sums(values);
+        var resampling = new Resampling(values, sums.mean(0), key(5));
+        double[] ratios = IntStream.range(0, 19_999)
+                .mapToDouble(i -> resampling.sample(i).ratio())
+                .toArray();
+        double[] few = Arrays.stream(ratios).limit(1_999).sorted().toArray();
+        double[] many = Arrays.stream(ratios).sorted().toArray();
+        var usual = BootstrapT.of(values, .95, key(5));
+        assertEquals(sums.mean(0) - few[1949] * sums.standardError(0), usual.low());
+        assertEquals(sums.mean(0) - few[49] * sums.standardError(0), usual.high());
+        var strict = BootstrapT.of(values, .998, key(5));
+        assertEquals(sums.mean(0) - many[19_979] * sums.standardError(0), strict.low());
+        assertEquals(sums.mean(0) - many[19] * sums.standardError(0), strict.high());
+    }
+
     private static double at(double[] sorted, double q) {
         return sorted[(int) (q * sorted.length)];
     }
