@@ -190,6 +190,10 @@ final class RepeatedPicture extends Picture {
                         Interval.percent(answer.level()));
         return answer.unbounded() == 0
                 ? List.of(rate)
-                : List.of(rate, Typeset.count(answer.unbounded()) + " repetitions have no interval");
+                : List.of(
+                        rate,
+                        answer.unbounded() == 1
+                                ? "1 repetition has no interval"
+                                : Typeset.count(answer.unbounded()) + " repetitions have no interval");
     }
 }

@@ -46,7 +46,8 @@ public final class RehearsalText {
     public static String counts(Rehearsed answer) {
         String missing = answer.unbounded() == 0
                 ? ""
-                : String.format(Locale.ROOT, "; %,d have no interval and are not counted", answer.unbounded());
+                : String.format(
+                        Locale.ROOT, "; without an interval, and not counted: %,d repetitions", answer.unbounded());
         return String.format(
                 Locale.ROOT,
                 "%,d of %,d intervals hold the value, %s; %,d lie below it, %,d above%s.",
