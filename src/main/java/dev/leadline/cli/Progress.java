@@ -3,6 +3,7 @@ package dev.leadline.cli;
 import dev.leadline.model.Stop;
 import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
+import dev.leadline.study.Left;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Mark;
 import dev.leadline.trace.Trace;
@@ -72,8 +73,17 @@ final class Progress implements Consumer<StudyState>, AutoCloseable {
                 .last()
                 .map(mark -> AnswerText.value(mark.answers().getFirst()))
                 .orElse("");
-        String left = done > 0 ? String.format(Locale.ROOT, "%.0f s left", elapsed * (1 - done) / done) : "";
+        String left =
+                Left.seconds(state.lanes(), stop, elapsed).map(Progress::words).orElse("");
         return String.format(Locale.ROOT, "  %3.0f %%   %,d draws   %s   %s", 100 * done, draws, value, left);
+    }
+
+    /// As `40 s left` or `40 s left (25 to 70)`.
+    private static String words(Left left) {
+        String about = String.format(Locale.ROOT, "%.0f s left", left.value());
+        return Math.rint(left.low()) == Math.rint(left.high()) || Double.isInfinite(left.high())
+                ? about
+                : String.format(Locale.ROOT, "%s (%.0f to %.0f)", about, left.low(), left.high());
     }
 
     private static double done(LaneState lane, Stop stop) {
@@ -81,8 +91,9 @@ final class Progress implements Consumer<StudyState>, AutoCloseable {
         if (trace.finished()) {
             return 1;
         }
+        double made = trace.last().map(Mark::draws).orElse(0L);
         double draws =
-                trace.last().map(mark -> (double) mark.draws() / stop.draws()).orElse(0.0);
+                made == 0 ? 0 : made / (made + lane.left().map(Left::value).orElse(Math.max(0, stop.draws() - made)));
         double seconds = trace.last()
                 .map(mark -> stop.seconds().isPresent()
                         ? mark.seconds() / stop.seconds().getAsDouble()

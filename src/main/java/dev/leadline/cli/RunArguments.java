@@ -3,6 +3,7 @@ package dev.leadline.cli;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Stop;
+import dev.leadline.model.StopRule;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
@@ -26,14 +27,16 @@ final class RunArguments {
     }
 
     static void addAllButLaneTo(CommandSpec spec) {
-        spec.addOption(draws("Make N draws in each lane, also written 1e6, down to whole observations or rounds;"
-                + " without --seconds no time limit applies."));
+        spec.addOption(
+                draws("Make exactly N draws in each lane, also written 1e6, down to whole observations or rounds,"
+                        + " whatever the project's stop rule; without --seconds no time limit applies."));
         spec.addOption(Arguments.option(
                 "--seconds",
                 "S",
                 Double.class,
                 Arguments.positive(),
-                "Stop after S seconds of computing; without --draws as many draws as that gives."));
+                "Stop after S seconds of computing, or sooner by the project's rule; a fixed number of draws without"
+                        + " --draws is then as many as that gives."));
         spec.addOption(seed());
         spec.addOption(threads());
     }
@@ -81,8 +84,13 @@ final class RunArguments {
                 .checked();
     }
 
+    /// A number of draws takes the place of the rule; a time lies beside it.
     private static Stop stop(Stop stop, OptionalLong draws, OptionalDouble seconds) {
-        return draws.isEmpty() && seconds.isEmpty() ? stop : new Stop(draws.orElse(Stop.MOST_DRAWS), seconds);
+        if (draws.isPresent()) {
+            return new Stop(draws.getAsLong(), seconds);
+        }
+        boolean isPatient = stop.rule() instanceof StopRule.Fixed;
+        return seconds.isEmpty() ? stop : new Stop(stop.rule(), isPatient ? Stop.MOST_DRAWS : stop.draws(), seconds);
     }
 
     private static List<Lane> lanes(List<Lane> lanes, String name) {

@@ -71,8 +71,7 @@ final class RunCommand implements Command {
                         .map(tolerance -> lane.trace()
                                 .last()
                                 .map(mark -> mark.answers().getFirst())
-                                .filter(answer -> tolerance.met(
-                                        answer.estimate(), answer.interval().reach(answer.estimate())))
+                                .filter(answer -> lane.trace().course().isMet(tolerance, answer))
                                 .isPresent())
                         .orElse(true);
     }

@@ -7,6 +7,7 @@ import dev.leadline.ground.Ground;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Project;
 import dev.leadline.model.Sentence;
+import dev.leadline.numeric.Significant;
 import dev.leadline.study.AnswerText;
 import dev.leadline.study.Comparison;
 import dev.leadline.study.LaneState;
@@ -14,6 +15,7 @@ import dev.leadline.study.Need;
 import dev.leadline.study.RatioText;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Answer;
+import dev.leadline.trace.FirstStage;
 import dev.leadline.trace.Mark;
 import dev.leadline.trace.Trace;
 import java.util.ArrayList;
@@ -78,6 +80,7 @@ final class RunText {
         together(answers);
         line("  " + facts(lane, answers));
         lane.trace().audit().flatMap(Trace::last).ifPresent(this::audit);
+        lane.trace().course().firstStage().ifPresent(stage -> wrapped("  ", firstStage(stage)));
         line("");
         lane.grounds().forEach(this::ground);
     }
@@ -118,6 +121,7 @@ final class RunText {
         line("  " + label + console.bold(AnswerText.value(answer)) + chance(answer));
         line("  " + AnswerText.interval(answer));
         answer.interval().note().ifPresent(note -> wrapped("  ", note));
+        answer.band().ifPresent(band -> wrapped("  ", AnswerText.band(answer, band)));
         if (answer.nonFinite() > 0) {
             line("  over finite evaluations only");
         }
@@ -140,6 +144,22 @@ final class RunText {
         double beta = answer.estimand() instanceof Estimand.Probability ? Chance.beta(answer.estimate()) : Double.NaN;
         return AnswerText.oneIn(answer).map("   "::concat).orElse("")
                 + (Double.isNaN(beta) ? "" : String.format(Locale.ROOT, "   β %.2f", beta));
+    }
+
+    private static String firstStage(FirstStage stage) {
+        String kurtosis = stage.largestKurtosis().isPresent()
+                ? ", kurtosis %s where at most %s is allowed for"
+                        .formatted(
+                                Significant.text(stage.kurtosis(), 3),
+                                Significant.text(stage.largestKurtosis().getAsDouble(), 3))
+                : "";
+        return String.format(
+                Locale.ROOT,
+                "first stage of %,d draws, %s the answer: standard deviation %s%s",
+                stage.draws(),
+                stage.inAnswer() ? "which enter" : "which do not enter",
+                Significant.text(stage.standardDeviation(), 3),
+                kurtosis);
     }
 
     private String facts(LaneState lane, List<Answer> answers) {

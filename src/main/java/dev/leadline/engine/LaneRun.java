@@ -1,5 +1,6 @@
 package dev.leadline.engine;
 
+import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Extremes;
 import dev.leadline.estimate.Outcomes;
 import dev.leadline.model.Components;
@@ -7,6 +8,7 @@ import dev.leadline.model.Stop;
 import dev.leadline.scheme.Repetitions;
 import dev.leadline.scheme.Replicated;
 import dev.leadline.trace.Answers;
+import dev.leadline.trace.Bands;
 import dev.leadline.trace.Failure;
 import dev.leadline.trace.Mark;
 import dev.leadline.trace.Spread;
@@ -33,6 +35,7 @@ public final class LaneRun {
 
     private final Recipe recipe;
     private final Stop stop;
+    private final Stopping stopping;
     private final long budget;
     private final Items items;
     private final Crew crew;
@@ -48,6 +51,8 @@ public final class LaneRun {
     private long submitted;
     private long draws;
     private Optional<String> stopReason = Optional.empty();
+    private final Bands bands;
+    private Optional<Stage> stage;
     private Optional<SecondPass> pass = Optional.empty();
 
     public LaneRun(Recipe recipe, Stop stop, Crew crew) {
@@ -71,6 +76,10 @@ public final class LaneRun {
         this.budget = items.whole(stop.draws());
         this.mostKept = mostKept;
         this.outcomes = outcomes(recipe);
+        this.bands = new Bands(
+                recipe.question(), recipe.lane().scheme(), stop.draws() < Stop.MOST_DRAWS ? budget : Stop.MOST_DRAWS);
+        this.stopping = Stopping.of(recipe, stop);
+        this.stage = stopping.firstStage() > 0 ? Optional.of(new Stage()) : Optional.empty();
     }
 
     /// A run from its first draw to its end, on this thread; nobody looks at it before, and it has one mark.
@@ -105,29 +114,70 @@ public final class LaneRun {
         if (pass.isPresent()) {
             return pass.get().advance(seconds);
         }
+        if (stage.isPresent()) {
+            return stage.get().advance(seconds);
+        }
         submitAhead();
         var sums = ahead.remove().get();
         if (sums.isEmpty()) {
             return end("stopped by hand", seconds);
         }
-        merge(sums.get());
-        if (draws >= budget) {
-            return end(allMade(), seconds);
+        merge(cut(sums.get()));
+        Optional<String> enough = stopping.merged(tally.total(), draws);
+        if (enough.isPresent()) {
+            return end(enough.get(), seconds);
         }
-        if (ahead.isEmpty() && items.within(submitted, budget).isEmpty()) {
-            return end("all repetitions made", seconds);
+        if (draws >= last()) {
+            return endUnlessEnough(stopping.allMade(allMade()), seconds);
         }
-        if (stop.seconds().isPresent() && seconds >= stop.seconds().getAsDouble()) {
-            return end("time used up", seconds);
+        if (ahead.isEmpty() && items.within(submitted, last()).isEmpty()) {
+            return endUnlessEnough(stopping.allMade("all repetitions made"), seconds);
         }
-        if (!watched || !tally.isWhole()) {
+        if (isTimeUp(seconds)) {
+            return endUnlessEnough("time used up", seconds);
+        }
+        if (!watched && !stopping.looks() || !tally.isWhole()) {
             return false;
         }
-        if (marks.isEmpty() || draws >= NEXT_MARK * marks.getLast().draws()) {
+        var total = tally.total();
+        if (marks.isEmpty() || draws >= NEXT_MARK * marks.getLast().draws() || bands.isDue(total.count())) {
             mark(seconds);
+            stopping.enough(marks.getLast(), total).ifPresent(reason -> end(reason, seconds));
             return true;
         }
         return false;
+    }
+
+    /// Draws to make in all, as far as that is known.
+    private long last() {
+        return stopping.draws(budget);
+    }
+
+    private boolean isTimeUp(double seconds) {
+        return stop.seconds().isPresent() && seconds >= stop.seconds().getAsDouble();
+    }
+
+    /// As much of an item as belongs to the run: the rule may end within it.
+    private ItemSums cut(ItemSums made) {
+        long left = last() - draws;
+        ItemSums item = last() < budget && made.item().draws() > left
+                ? again(made.item().first(left))
+                : made;
+        int belongs = stopping.within(item);
+        return belongs < item.item().draws() ? again(item.item().first(belongs)) : item;
+    }
+
+    private ItemSums again(Item item) {
+        return recipe.work().compute(item, () -> false).orElseThrow();
+    }
+
+    /// Ends because no more may be made; the last mark may still be enough.
+    private boolean endUnlessEnough(String reason, double seconds) {
+        if (!tally.isWhole()) {
+            return end(reason, seconds);
+        }
+        mark(seconds);
+        return end(stopping.enough(marks.getLast(), tally.total()).orElse(reason), seconds);
     }
 
     private String allMade() {
@@ -168,12 +218,14 @@ public final class LaneRun {
                         .map(seen -> new Spread(seen.landmark(), seen.histogram()))
                         .toList(),
                 failures,
-                finished() ? stopReason : Optional.empty());
+                stopping.course(),
+                finished() ? stopReason : Optional.empty(),
+                Optional.empty());
     }
 
     private void submitAhead() {
         while (ahead.size() < crew.ahead()) {
-            var item = items.within(submitted, budget);
+            var item = items.within(submitted, last());
             if (item.isEmpty()) {
                 return;
             }
@@ -184,6 +236,7 @@ public final class LaneRun {
 
     private void merge(ItemSums item) {
         tally.add(item);
+        bands.add(item.sums());
         extremes.ifPresent(all -> all.merge(item.extremes().orElseThrow()));
         for (int a = 0; a < outcomes.size(); a++) {
             outcomes.get(a).merge(item.outcomes().get(a));
@@ -212,9 +265,6 @@ public final class LaneRun {
         ahead.forEach(item -> item.cancel(false));
         ahead.clear();
         if (draws > 0 && tally.isWhole()) {
-            if (!marks.isEmpty() && marks.getLast().draws() == draws) {
-                marks.removeLast();
-            }
             outcomes.forEach(Outcomes::settle);
             mark(seconds);
             lookAgain();
@@ -260,17 +310,58 @@ public final class LaneRun {
             for (int a = 0; a < found.size(); a++) {
                 outcomes.get(a).refine(found.get(a));
             }
-            marks.removeLast();
             mark(seconds);
             lookAgain();
             return true;
         }
     }
 
+    /// The first stage of a rule that has one, from draws of its own.
+    private final class Stage {
+        private final Recipe own = recipe.firstStage();
+        private final long size = items.whole(stopping.firstStage());
+        private final Accumulator sums = new Accumulator(recipe.components());
+        private final Queue<Future<Optional<ItemSums>>> under = new ArrayDeque<>();
+        private long next;
+        private long made;
+
+        boolean advance(double seconds) throws InterruptedException, ExecutionException {
+            while (under.size() < crew.ahead()) {
+                var item = items.within(next, size);
+                if (item.isEmpty()) {
+                    break;
+                }
+                next++;
+                under.add(crew.submit(own, item.get()));
+            }
+            var item = under.remove().get();
+            if (item.isEmpty()) {
+                return end("stopped by hand", seconds);
+            }
+            sums.merge(item.get().sums());
+            made += item.get().item().draws();
+            if (made >= size) {
+                stopping.staged(sums, made);
+                stage = Optional.empty();
+                return true;
+            }
+            return isTimeUp(seconds) && end("time used up by the first stage", seconds);
+        }
+    }
+
+    /// Sets a mark, in the place of one after as many draws.
     private void mark(double seconds) {
-        marks.add(new Mark(
-                draws,
-                seconds,
-                Answers.of(recipe.question(), recipe.lane().scheme(), tally.total(), tally.blocks(), outcomes)));
+        if (!marks.isEmpty() && marks.getLast().draws() == draws) {
+            marks.removeLast();
+        }
+        var total = tally.total();
+        var blocks = tally.blocks();
+        var answers = bands.around(
+                Answers.of(recipe.question(), recipe.lane().scheme(), total, blocks, outcomes),
+                total,
+                blocks,
+                outcomes,
+                draws);
+        marks.add(new Mark(draws, seconds, stopReason.isPresent() ? stopping.ended(answers) : answers));
     }
 }

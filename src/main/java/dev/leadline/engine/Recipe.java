@@ -127,6 +127,11 @@ public final class Recipe {
         return new Recipe(this, new Address(seed, purpose, lane.address(), replicate, "", 0), landmarks);
     }
 
+    /// The recipe of the draws that say how many others are to be made.
+    Recipe firstStage() {
+        return repeated(address.seed(), Purpose.FIRST_STAGE, address.replicate());
+    }
+
     /// The recipe of a further pass over the same draws.
     Recipe narrowed(List<Landmark> others) {
         return new Recipe(this, address, others);

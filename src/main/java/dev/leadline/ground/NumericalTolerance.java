@@ -1,17 +1,28 @@
 package dev.leadline.ground;
 
 import dev.leadline.ground.Ground.Strength;
+import dev.leadline.trace.Course.Judged;
 import java.util.Optional;
 
-/// Whether the half-width of the first answer, or its farther limit where one is much farther than the other, is within
-/// the numerical tolerance.
+/// Whether the first answer is within the numerical tolerance: by its interval where the number of draws was
+/// fixed beforehand, by its any-time band where the lane was stopped for what it showed.
 final class NumericalTolerance {
     private NumericalTolerance() {}
 
     static Optional<Ground> judge(Evidence evidence) {
         return evidence.question().tolerance().map(tolerance -> {
             var answer = evidence.answers().getFirst();
-            double reach = answer.interval().reach(answer.estimate());
+            var course = evidence.trace().course();
+            if (course.judged() == Judged.PROMISE) {
+                return Ground.shown(
+                        "tolerance",
+                        evidence.of(0)
+                                + "the stop rule \"%s\" was satisfied, which promises the numerical tolerance with %s"
+                                        .formatted(
+                                                course.rule(), answer.interval().percent()));
+            }
+            boolean isBand = course.judged() == Judged.BAND;
+            double reach = course.reach(answer);
             double allowed = tolerance.allowed(answer.estimate());
             if (Double.isNaN(reach) || allowed == 0) {
                 return Ground.doubted(
@@ -23,9 +34,11 @@ final class NumericalTolerance {
             String text = evidence.of(0)
                     + "%s %s, numerical tolerance %s"
                             .formatted(
-                                    answer.interval().lopsided(answer.estimate())
-                                            ? "distance of the farther limit"
-                                            : "half-width",
+                                    isBand
+                                            ? "the any-time band reaches"
+                                            : answer.interval().lopsided(answer.estimate())
+                                                    ? "distance of the farther limit"
+                                                    : "half-width",
                                     Numbers.value(reach),
                                     Numbers.value(allowed));
             if (reach <= allowed) {

@@ -35,4 +35,9 @@ public record FixedWidth(double level) {
     public Interval of(Estimate estimate, long n) {
         return Around.of(estimate, n, quantile(), level, KIND, ASSUMPTION);
     }
+
+    /// The interval that a lane was stopped for, whatever it is made of.
+    public static Interval looked(Interval plain) {
+        return new Interval(plain.low(), plain.high(), plain.level(), KIND, ASSUMPTION, plain.note());
+    }
 }

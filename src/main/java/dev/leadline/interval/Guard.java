@@ -14,14 +14,15 @@ import java.util.OptionalLong;
 ///
 /// @param draws at least
 /// @param observations at least
-public record Guard(long draws, long observations) {
+/// @param rarer so many of hits or of misses, whichever are rarer, at least
+public record Guard(long draws, long observations, long rarer) {
     /// Where each draw is an observation.
-    public static final Guard OF_DRAWS = new Guard(1000, 1000);
+    public static final Guard OF_DRAWS = new Guard(1000, 1000, Guard.RARER);
 
     /// Where an observation is a pass, a pair or a Latin hypercube.
-    public static final Guard OF_OBSERVATIONS = new Guard(1000, 30);
+    public static final Guard OF_OBSERVATIONS = new Guard(1000, 30, Guard.RARER);
 
-    /// Of hits, or of misses where they are rarer.
+    /// Of hits, or of misses where they are rarer, unless a project says another number.
     public static final long RARER = 25;
 
     private static final double COCHRAN = 25;
@@ -55,11 +56,11 @@ public record Guard(long draws, long observations) {
         }
         if (hits.isPresent()) {
             long hit = hits.getAsLong();
-            long rarer = Math.min(hit, observed - hit);
-            String name = hit == rarer ? "hits" : "misses";
-            return rarer >= RARER
+            long seen = Math.min(hit, observed - hit);
+            String name = hit == seen ? "hits" : "misses";
+            return seen >= rarer
                     ? Optional.empty()
-                    : Optional.of(text("%,d " + name + " of at least %,d", rarer, RARER));
+                    : Optional.of(text("%,d " + name + " of at least %,d", seen, rarer));
         }
         if (constant) {
             return Optional.of("every value seen so far is equal");

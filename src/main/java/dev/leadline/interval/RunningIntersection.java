@@ -11,8 +11,13 @@ import java.util.Set;
 public record RunningIntersection(Interval interval) {
     private static final Set<String> EXACT = Set.of(AnyTimeChance.KIND, AnyTimeBounded.KIND, AnyTimeQuantile.KIND);
 
+    /// Whether a band holds at all n, not in the limit alone.
+    public static boolean isExact(Interval band) {
+        return EXACT.contains(band.kind());
+    }
+
     public RunningIntersection {
-        if (!EXACT.contains(interval.kind())) {
+        if (!isExact(interval)) {
             throw new IllegalArgumentException(interval.kind() + " is not exact");
         }
     }

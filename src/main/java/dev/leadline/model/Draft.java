@@ -172,7 +172,74 @@ public record Draft(
     /// @param bounds least and greatest outcome there can be
     public record IntervalDraft(Optional<String> kind, Optional<Bounds> bounds) {}
 
-    public record StopDraft(String rule, OptionalLong draws, OptionalDouble seconds) {}
+    /// When to stop.
+    ///
+    /// @param rule its word, as `any-time`; empty where none is named
+    /// @param hits to stop at, of the hits rule
+    /// @param first observations of the first stage, of the rules that have one
+    /// @param inflation of the standard deviation that the first stage of `two-stage` finds
+    /// @param digits of the standard uncertainty that count, of `jcgm-101`
+    public record StopDraft(
+            String rule,
+            OptionalLong draws,
+            OptionalDouble seconds,
+            OptionalLong hits,
+            Optional<GuardDraft> guard,
+            OptionalLong first,
+            OptionalDouble inflation,
+            OptionalLong digits) {
+        /// With a budget and nothing else.
+        public StopDraft(String rule, OptionalLong draws, OptionalDouble seconds) {
+            this(
+                    rule,
+                    draws,
+                    seconds,
+                    OptionalLong.empty(),
+                    Optional.empty(),
+                    OptionalLong.empty(),
+                    OptionalDouble.empty(),
+                    OptionalLong.empty());
+        }
+
+        /// Another rule with the same budget; what belongs to the rule it takes the place of is left out.
+        public StopDraft withRule(String other) {
+            return other.equals(rule) ? this : new StopDraft(other, draws, seconds);
+        }
+
+        public StopDraft withDraws(OptionalLong other) {
+            return new StopDraft(rule, other, seconds, hits, guard, first, inflation, digits);
+        }
+
+        public StopDraft withSeconds(OptionalDouble other) {
+            return new StopDraft(rule, draws, other, hits, guard, first, inflation, digits);
+        }
+
+        public StopDraft withHits(OptionalLong other) {
+            return new StopDraft(rule, draws, seconds, other, guard, first, inflation, digits);
+        }
+
+        public StopDraft withGuard(Optional<GuardDraft> other) {
+            return new StopDraft(rule, draws, seconds, hits, other, first, inflation, digits);
+        }
+
+        public StopDraft withFirst(OptionalLong other) {
+            return new StopDraft(rule, draws, seconds, hits, guard, other, inflation, digits);
+        }
+
+        public StopDraft withInflation(OptionalDouble other) {
+            return new StopDraft(rule, draws, seconds, hits, guard, first, other, digits);
+        }
+
+        public StopDraft withDigits(OptionalLong other) {
+            return new StopDraft(rule, draws, seconds, hits, guard, first, inflation, other);
+        }
+    }
+
+    /// From where on a rule may look.
+    ///
+    /// @param draws at least
+    /// @param hits at least, or misses where those are rarer
+    public record GuardDraft(OptionalLong draws, OptionalLong hits) {}
 
     /// The same with other lanes.
     Draft with(List<LaneDraft> others) {

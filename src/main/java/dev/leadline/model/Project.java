@@ -52,13 +52,14 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         Optional<Tolerance> tolerance = draft.tolerance().map(given -> tolerance(given, findings));
         IntervalWish interval =
                 draft.interval().map(given -> Intervals.of(given, findings)).orElse(IntervalWish.AUTO);
-        Stop stop = Plans.stop(draft, findings);
+        Stop stop = Stops.of(draft, findings);
         long seed = Plans.seed(draft, findings);
         Optional<Dependence> dependence =
                 draft.dependence().flatMap(given -> Dependences.of(given, draft.inputs(), inputs, findings));
         Optional<Working> sound =
                 working.filter(_ -> inputs.size() == draft.inputs().size());
         List<Lane> lanes = Lanes.of(draft, inputs, sound, dependence, noting(files, read), findings);
+        Stops.check(draft, asks, lanes, findings);
         findings.made(
                 _ -> draft.stop()
                         .flatMap(given -> given.draws().isPresent() ? Optional.of("$.stop.draws") : Optional.empty())
@@ -98,6 +99,16 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
                 findings);
         findings.refuseIfAny();
         return made.getFirst();
+    }
+
+    /// Words of the stop rules, in the order in which they are offered.
+    public static List<String> stopRules() {
+        return Stops.words();
+    }
+
+    /// The stop rule that a draft names, or the usual one.
+    public static String stopRule(Draft draft) {
+        return Stops.word(draft);
     }
 
     /// Words of the layouts of points, in the order in which they are offered.

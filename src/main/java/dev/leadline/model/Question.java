@@ -44,4 +44,9 @@ public record Question(
                 Optional.of(other),
                 interval);
     }
+
+    /// Of each interval and band, so that those of K answers hold together: `1 - (1 - confidence) / K` (Bonferroni).
+    public double level() {
+        return asks.size() == 1 ? confidence : 1 - (1 - confidence) / asks.size();
+    }
 }

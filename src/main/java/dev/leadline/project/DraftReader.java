@@ -8,6 +8,7 @@ import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
+import dev.leadline.model.Draft.GuardDraft;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.model.Draft.PairDraft;
@@ -43,13 +44,11 @@ final class DraftReader {
     private static final String LEAVE_OUT = "Leave it out.";
     private static final String IN_A_LANE =
             "A lane says what its inputs are drawn from: {\"name\": \"B\", \"drawFrom\": {\"v\": …}}.";
-    private static final String ONLY_FIXED = "Leave it out: {\"rule\": \"fixed\"} takes draws and seconds.";
     private static final String ONLY_VALUES =
             "Give the value itself: {\"value\": 0.12, \"error\": 1e-4, \"source\": \"…\"}.";
 
     private static final Map<String, String> WHOLE_LATER =
             Map.of("logbook", "Leave it out: no run is written to a logbook.");
-    private static final Map<String, String> STOP_LATER = each(ONLY_FIXED, "hits", "guard");
     private static final Map<String, String> REFERENCE_LATER = each(ONLY_VALUES, "formula", "quadrature");
     private static final List<String> MEASURES = List.of("spearman", "kendall", "pearson");
 
@@ -311,11 +310,22 @@ final class DraftReader {
 
     private StopDraft stop(Fields fields) {
         var stop = new StopDraft(
-                fields.has("rule") ? fields.requiredText("rule", NAME) : Stop.FIXED,
+                fields.has("rule") ? fields.requiredText("rule", NAME) : "",
                 fields.count("draws", 1, Stop.MOST_DRAWS),
-                fields.number("seconds"));
-        fields.close(STOP_LATER);
+                fields.number("seconds"),
+                fields.count("hits", 2, Stop.MOST_DRAWS),
+                fields.object("guard", "a guard {\"draws\": …, \"hits\": …}").map(DraftReader::guard),
+                fields.count("first", 2, Stop.MOST_DRAWS),
+                fields.number("inflation"),
+                fields.count("digits", 1, 2));
+        fields.close(Map.of());
         return stop;
+    }
+
+    private static GuardDraft guard(Fields fields) {
+        var guard = new GuardDraft(fields.count("draws", 2, Stop.MOST_DRAWS), fields.count("hits", 1, Stop.MOST_DRAWS));
+        fields.close(Map.of());
+        return guard;
     }
 
     private List<LaneDraft> lanes(Fields whole) {

@@ -20,6 +20,7 @@ import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.OptionalLong;
 import java.util.function.Function;
 
 /// A draft as JSON, its fields in the order of the format. What is empty is left out, and so is a number that is not
@@ -208,9 +209,19 @@ final class DraftWriter {
     }
 
     private static Json stop(StopDraft stop) {
-        var fields = Json.object().put("rule", stop.rule());
-        stop.draws().ifPresent(draws -> fields.put("draws", Json.of(draws)));
+        var fields = Json.object().putUnlessEmpty("rule", stop.rule());
+        count(fields, "draws", stop.draws());
         number(fields, "seconds", stop.seconds());
+        count(fields, "hits", stop.hits());
+        stop.guard().ifPresent(guard -> {
+            var least = Json.object();
+            count(least, "draws", guard.draws());
+            count(least, "hits", guard.hits());
+            fields.put("guard", least.build());
+        });
+        count(fields, "first", stop.first());
+        number(fields, "inflation", stop.inflation());
+        count(fields, "digits", stop.digits());
         return fields.build();
     }
 
@@ -218,6 +229,10 @@ final class DraftWriter {
         if (!parts.isEmpty()) {
             fields.put(name, Json.list(parts.stream().map(json).toList()));
         }
+    }
+
+    private static void count(Json.Builder fields, String name, OptionalLong value) {
+        value.ifPresent(count -> fields.put(name, Json.of(count)));
     }
 
     private static void number(Json.Builder fields, String name, OptionalDouble value) {

@@ -19,6 +19,7 @@ import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState;
 import dev.leadline.trace.Answer;
 import dev.leadline.trace.Failure;
+import dev.leadline.trace.FirstStage;
 import dev.leadline.trace.Mark;
 import dev.leadline.trace.Trace;
 import java.util.List;
@@ -76,12 +77,14 @@ public final class RunJson {
                         "nonFinite",
                         Json.of(answers.isEmpty() ? 0 : answers.getFirst().nonFinite()))
                 .put("seconds", Json.of(microseconds(last.map(Mark::seconds).orElse(0.0))))
+                .put("stopRule", trace.course().rule())
                 .put("stopReason", trace.stopReason().orElse(""))
                 .put("answers", Json.list(answers.stream().map(RunJson::answer).toList()))
                 .put(
                         "grounds",
                         Json.list(lane.grounds().stream().map(RunJson::ground).toList()));
         trace.audit().ifPresent(audit -> json.put("audit", audit(audit)));
+        trace.course().firstStage().ifPresent(stage -> json.put("firstStage", firstStage(stage)));
         trace.scheme().tuned().ifPresent(tuned -> json.put("tuning", TuningJson.of(project.question(), tuned)));
         if (trace.scheme().points() instanceof Stratified points) {
             points.found()
@@ -106,6 +109,20 @@ public final class RunJson {
                         Json.of(answers.isEmpty() ? 0 : answers.getFirst().nonFinite()))
                 .put("stopReason", audit.stopReason().orElse(""))
                 .put("answers", Json.list(answers.stream().map(RunJson::answer).toList()))
+                .build();
+    }
+
+    private static Json firstStage(FirstStage stage) {
+        var json = Json.object()
+                .put("draws", Json.of(stage.draws()))
+                .put("observations", Json.of(stage.observations()))
+                .put("inAnswer", Json.of(stage.inAnswer()))
+                .put("standardDeviation", Json.orNull(stage.standardDeviation()))
+                .put("kurtosis", Json.orNull(stage.kurtosis()));
+        stage.largestKurtosis().ifPresent(most -> json.put("largestKurtosis", Json.orNull(most)));
+        return json.put(
+                        "wanted",
+                        stage.wanted().isPresent() ? Json.of(stage.wanted().getAsLong()) : new Json.Null())
                 .build();
     }
 
@@ -148,6 +165,10 @@ public final class RunJson {
                 .put("intervalKind", interval.kind())
                 .put("band", answer.band().map(RunJson::limits).orElse(new Json.Null()));
         interval.note().ifPresent(note -> json.put("intervalNote", note));
+        answer.band().ifPresent(band -> {
+            json.put("bandKind", band.kind());
+            band.note().ifPresent(note -> json.put("bandNote", note));
+        });
         answer.coverage()
                 .ifPresent(found -> json.put("standardUncertainty", Json.orNull(found.standardUncertainty()))
                         .put("coverage", Json.of(found.coverage()))

@@ -21,7 +21,9 @@ public enum Purpose {
     /// Draws that show where outcomes lie, before a run.
     LANDMARK(17),
     /// Draws of repetitions, which show whether intervals hold.
-    REHEARSAL(20);
+    REHEARSAL(20),
+    /// Draws that say how many draws a run is to have.
+    FIRST_STAGE(21);
 
     private final int number;
 

@@ -2,6 +2,7 @@ package dev.leadline.study;
 
 import dev.leadline.estimate.Chance;
 import dev.leadline.estimate.Estimand;
+import dev.leadline.interval.Interval;
 import dev.leadline.model.UnitWords;
 import dev.leadline.numeric.Rounding;
 import dev.leadline.trace.Answer;
@@ -69,6 +70,26 @@ public final class AnswerText {
                                 rounding.down(interval.low()),
                                 rounding.up(interval.high()),
                                 interval.kind());
+    }
+
+    /// As `band 1.20e-5 to 1.32e-5: it holds with 95 % however often one looks`.
+    public static String band(Answer answer, Interval band) {
+        if (Double.isNaN(band.low()) && Double.isNaN(band.high())) {
+            return "no any-time band yet" + band.note().map(note -> ": " + note).orElse("");
+        }
+        Rounding rounding = Rounding.of(answer.estimate(), width(answer.estimate(), band));
+        String limits = Double.isNaN(band.high())
+                ? "from " + rounding.down(band.low())
+                : Double.isNaN(band.low())
+                        ? "up to " + rounding.up(band.high())
+                        : rounding.down(band.low()) + " to " + rounding.up(band.high());
+        return "any-time band %s: it holds with %s however often one looks".formatted(limits, band.percent());
+    }
+
+    private static double width(double estimate, Interval band) {
+        return Double.isNaN(band.low())
+                ? Math.abs(band.high() - estimate)
+                : Double.isNaN(band.high()) ? Math.abs(estimate - band.low()) : band.halfWidth();
     }
 
     /// A chance below one half as people say it, as `1 in 79,600`; three digits, since the interval stands beside it.

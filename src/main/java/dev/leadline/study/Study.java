@@ -186,7 +186,8 @@ public final class Study implements AutoCloseable {
         return new StudyState(
                 activity,
                 traces.stream()
-                        .map(trace -> new LaneState(trace, Grounds.of(question, trace)))
+                        .map(trace -> new LaneState(
+                                trace, Grounds.of(question, trace), Left.draws(question, plan.stop(), trace)))
                         .toList(),
                 Comparison.ofFirst(question, plan.settled(), traces));
     }

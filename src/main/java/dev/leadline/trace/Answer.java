@@ -99,6 +99,12 @@ public record Answer(
                 provisional);
     }
 
+    /// What a stop rule of its own makes of it.
+    public Answer ended(double value, double error, Interval own) {
+        return new Answer(
+                estimand, unit, label, value, error, own, band, hits, observations, nonFinite, coverage, provisional);
+    }
+
     Answer untilKnown() {
         return new Answer(
                 estimand,

@@ -15,8 +15,7 @@ public final class Answers {
 
     /// Of each interval, so that K answers hold together: `1 - (1 - confidence) / K` (Bonferroni).
     public static double level(Question question) {
-        int answers = question.asks().size();
-        return answers == 1 ? question.confidence() : 1 - (1 - question.confidence()) / answers;
+        return question.level();
     }
 
     /// Of a question of means and chances, which sums alone answer.
@@ -39,7 +38,7 @@ public final class Answers {
         return answers;
     }
 
-    private static Answer of(Shown shown) {
+    static Answer of(Shown shown) {
         return switch (shown.ask().estimand()) {
             case Estimand.Mean _, Estimand.Integral _, Estimand.Probability _ -> MeanAnswers.of(shown);
             case Estimand.Ratio _ -> MomentAnswers.ratio(shown);

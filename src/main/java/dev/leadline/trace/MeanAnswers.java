@@ -61,14 +61,7 @@ final class MeanAnswers {
             var none = new Estimate(Double.NaN, Double.NaN, 0);
             return answer(ask, sums, none, Student.none(level, hindrance.get()), hits);
         }
-        Estimate estimate = scheme.crossFitted()
-                ? new CrossFit(
-                                shown.blocks(),
-                                k,
-                                shown.controls(),
-                                scheme.controls().size())
-                        .estimate(errors(scheme))
-                : estimate(shown);
+        Estimate estimate = corrected(shown);
         var interval = !scheme.controls().isEmpty() && estimate.standardError() == 0 && !sums.constant(k)
                 ? Student.none(
                         level,
@@ -133,7 +126,26 @@ final class MeanAnswers {
         return scheme.controls().stream().mapToDouble(Control::error).toArray();
     }
 
-    /// The estimate alone, before its interval.
+    private static Estimate corrected(Shown shown) {
+        Scheme scheme = shown.scheme();
+        return scheme.crossFitted()
+                ? new CrossFit(
+                                shown.blocks(),
+                                shown.first(),
+                                shown.controls(),
+                                scheme.controls().size())
+                        .estimate(errors(scheme))
+                : estimate(shown);
+    }
+
+    /// The estimate as it is answered; `NaN` where control variates hinder it.
+    static Estimate answered(Shown shown) {
+        return shown.scheme().controls().isEmpty() || hindrance(shown).isEmpty()
+                ? corrected(shown)
+                : new Estimate(Double.NaN, Double.NaN, 0);
+    }
+
+    /// The estimate alone, before its interval, from sums alone.
     static Estimate estimate(Shown shown) {
         Scheme scheme = shown.scheme();
         Accumulator sums = shown.sums();

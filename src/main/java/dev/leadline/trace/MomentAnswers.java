@@ -32,7 +32,7 @@ final class MomentAnswers {
                 deviation, deviation * logarithm.standardError(), shown.sums().count() - 1);
     }
 
-    private static Logarithm logarithm(Shown shown) {
+    static Logarithm logarithm(Shown shown) {
         int first = shown.first();
         return shown.isSelfNormalised()
                 ? LogDeviation.of(shown.sums(), first, first + 1, shown.weight())

@@ -87,9 +87,7 @@ final class OrderAnswers {
     }
 
     static Answer distribution(Shown shown, double coverage) {
-        Estimate off = mean(shown, shown.first());
-        double centre = shown.outcomes().map(seen -> seen.landmark().centre()).orElse(0.0);
-        var estimate = new Estimate(centre + off.value(), off.standardError(), off.degrees());
+        var estimate = centred(shown);
         var answer = answer(shown, estimate, Student.of(estimate, shown.level()), false);
         return shown.outcomes()
                 .filter(seen -> CoverageInterval.symmetricRank(seen.draws(), coverage) > 0)
@@ -102,8 +100,15 @@ final class OrderAnswers {
                 .orElse(answer);
     }
 
+    /// The mean of a distribution.
+    static Estimate centred(Shown shown) {
+        Estimate off = mean(shown, shown.first());
+        double centre = shown.outcomes().map(seen -> seen.landmark().centre()).orElse(0.0);
+        return new Estimate(centre + off.value(), off.standardError(), off.degrees());
+    }
+
     /// What all outcomes weigh.
-    private static double total(Shown shown, Outcomes outcomes) {
+    static double total(Shown shown, Outcomes outcomes) {
         return shown.isSelfNormalised() ? outcomes.weight() : outcomes.draws();
     }
 

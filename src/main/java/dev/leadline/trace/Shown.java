@@ -51,4 +51,9 @@ record Shown(
     Optional<Outcomes> outcomes() {
         return index < all.size() ? Optional.of(all.get(index)) : Optional.empty();
     }
+
+    /// The same for an interval of another level.
+    Shown at(double other) {
+        return new Shown(question, scheme, sums, blocks, all, index, other);
+    }
 }

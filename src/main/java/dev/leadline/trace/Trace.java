@@ -16,7 +16,8 @@ import java.util.Optional;
 ///     empty where every draw counts 1
 /// @param outcomes how they lie, of each thing asked; empty for splitting
 /// @param failures the first 20
-/// @param stopReason empty while the lane runs or pauses
+/// @param course how the lane comes to its end
+/// @param stopReason in words; empty while the lane runs or pauses
 /// @param audit independent draws from the inputs' own densities, which enter no answer of the lane; empty
 ///     where none are wanted
 public record Trace(
@@ -27,6 +28,7 @@ public record Trace(
         Optional<Extremes> extremes,
         List<Spread> outcomes,
         List<Failure> failures,
+        Course course,
         Optional<String> stopReason,
         Optional<Trace> audit) {
     public Trace {
@@ -36,7 +38,7 @@ public record Trace(
         failures = List.copyOf(failures);
     }
 
-    /// Of a lane without an audit.
+    /// Of a number of draws fixed beforehand, without an audit.
     public Trace(
             String lane,
             Scheme scheme,
@@ -46,7 +48,7 @@ public record Trace(
             List<Spread> outcomes,
             List<Failure> failures,
             Optional<String> stopReason) {
-        this(lane, scheme, marks, blocks, extremes, outcomes, failures, stopReason, Optional.empty());
+        this(lane, scheme, marks, blocks, extremes, outcomes, failures, Course.FIXED, stopReason, Optional.empty());
     }
 
     /// Of a lane whose draws count 1 each.
@@ -63,7 +65,7 @@ public record Trace(
     /// The same beside its audit.
     public Trace beside(Trace plain) {
         return new Trace(
-                lane, scheme, marks, blocks, extremes, outcomes, failures, stopReason, Optional.of(plain));
+                lane, scheme, marks, blocks, extremes, outcomes, failures, course, stopReason, Optional.of(plain));
     }
 
     public Optional<Mark> last() {

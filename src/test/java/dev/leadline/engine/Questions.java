@@ -95,6 +95,11 @@ public final class Questions {
         return this;
     }
 
+    public Questions relativeTolerance(double relative) {
+        tolerance = Optional.of(new Tolerance(OptionalDouble.empty(), OptionalDouble.of(relative), false));
+        return this;
+    }
+
     public Question build() {
         var working = Working.of(
                 inputs.stream().map(Input::name).toList(),

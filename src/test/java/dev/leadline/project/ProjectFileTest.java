@@ -21,6 +21,7 @@ import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.From;
+import dev.leadline.model.Draft.GuardDraft;
 import dev.leadline.model.Draft.InputDraft;
 import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.model.Draft.PairDraft;
@@ -109,7 +110,15 @@ class ProjectFileTest {
             OptionalDouble.of(.99),
             Optional.of(new ToleranceDraft(OptionalDouble.of(25), OptionalDouble.of(.1), Optional.of("both"))),
             Optional.of(new IntervalDraft(Optional.of("hoeffding"), Optional.of(new Bounds(-1, 2)))),
-            Optional.of(new StopDraft("fixed", OptionalLong.of(200_000_000), OptionalDouble.of(.5))),
+            Optional.of(new StopDraft(
+                    "any-time",
+                    OptionalLong.of(200_000_000),
+                    OptionalDouble.of(.5),
+                    OptionalLong.of(385),
+                    Optional.of(new GuardDraft(OptionalLong.of(2000), OptionalLong.of(30))),
+                    OptionalLong.of(5000),
+                    OptionalDouble.of(1.1),
+                    OptionalLong.of(1))),
             OptionalLong.of(Long.MAX_VALUE),
             true,
             List.of(
@@ -336,7 +345,7 @@ class ProjectFileTest {
                  {"name": "y", "density": {"family": "normal", "mean": 0, "sd": 1}}],
                  "dependence": {"pairs": [{"of": ["x", "y"], "spearman": 0.4}]}, "ask": {"mean": "x*y"}, "stop": {"draws": 5000}}
                 """);
-        assertEquals("fixed", draft.stop().orElseThrow().rule());
+        assertEquals("fixed", Project.stopRule(draft));
         assertEquals("gaussian", draft.dependence().orElseThrow().copula());
         assertEquals(5000, Project.of(draft).plan().stop().draws());
     }

@@ -6,7 +6,6 @@ import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.model.Sentence;
-import dev.leadline.model.Stop;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.Optional;
@@ -17,7 +16,7 @@ import java.util.OptionalLong;
 public final class DemandsViewModel {
     private static final ToleranceDraft NO_TOLERANCE =
             new ToleranceDraft(OptionalDouble.empty(), OptionalDouble.empty(), Optional.empty());
-    private static final StopDraft FIXED = new StopDraft(Stop.FIXED, OptionalLong.empty(), OptionalDouble.empty());
+    private static final StopDraft NOTHING = new StopDraft("", OptionalLong.empty(), OptionalDouble.empty());
 
     private final ProjectViewModel project;
 
@@ -105,9 +104,9 @@ public final class DemandsViewModel {
 
     void draws(String text) {
         project.typeOptionalNumber("$.stop.draws", "number of draws", text, (d, value) -> {
-            var s = d.stop().orElse(FIXED);
+            var s = d.stop().orElse(NOTHING);
             var draws = value.isPresent() ? OptionalLong.of(Math.round(value.getAsDouble())) : OptionalLong.empty();
-            return Edits.stop(d, kept(new StopDraft(s.rule(), draws, s.seconds())));
+            return Edits.stop(d, kept(s.withDraws(draws)));
         });
     }
 
@@ -119,8 +118,8 @@ public final class DemandsViewModel {
 
     void seconds(String text) {
         project.typeOptionalNumber("$.stop.seconds", "seconds of computing", text, (d, value) -> {
-            var s = d.stop().orElse(FIXED);
-            return Edits.stop(d, kept(new StopDraft(s.rule(), s.draws(), value)));
+            var s = d.stop().orElse(NOTHING);
+            return Edits.stop(d, kept(s.withSeconds(value)));
         });
     }
 
@@ -130,7 +129,7 @@ public final class DemandsViewModel {
     }
 
     private static Optional<StopDraft> kept(StopDraft s) {
-        return s.draws().isEmpty() && s.seconds().isEmpty() ? Optional.empty() : Optional.of(s);
+        return s.equals(NOTHING) ? Optional.empty() : Optional.of(s);
     }
 
     void reference(String text) {
