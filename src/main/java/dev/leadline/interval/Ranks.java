@@ -14,22 +14,26 @@ import java.util.function.LongPredicate;
 /// smallest u with `P(B >= u)` at most that, with B binomial (n, q). A tail that is larger by less than a
 /// relative 1e-12 counts as equal.
 ///
-/// Error: none in the ranks, to 1e13 draws; 1e-12 in the coverage (`RanksTest`). Cost: .1 ms.
+/// Error: none in the ranks, to 1e13 draws; 1e-12 in the coverage (`RanksTest`). Cost: .1 ms, less than a microsecond
+/// for many draws.
 ///
 /// Source: David and Nagaraja (2003), Order Statistics, section 7.1.
 ///
 /// @param level of confidence
 /// @param low rank of the lower limit, from 1 on; 0 where there is none, or none is wanted
 /// @param high rank of the upper limit, to n; n + 1 where there is none, or none is wanted
-/// @param below probability that the quantile lies below the lower limit, at most; 0 without one
-/// @param above probability that it lies above the upper limit, at most; 0 without one
-public record Ranks(long n, double q, double level, Sides sides, long low, long high, double below, double above) {
+public record Ranks(long n, double q, double level, Sides sides, long low, long high) {
     /// Word of the project file and of the commands.
     public static final String KIND = "order-statistics";
 
     private static final String ASSUMPTION = "The draws are independent; nothing else is taken for granted.";
 
     private static final double ROUNDING = 1 + 1e-12;
+
+    /// From this variance on a guess is as good as the tails themselves, unless it is so near to a whole number.
+    private static final double MANY = 1e5;
+
+    private static final double MARGIN = 0.02;
 
     /// Draws beyond these are not counted.
     private static final long MOST = 1L << 53;
@@ -40,8 +44,7 @@ public record Ranks(long n, double q, double level, Sides sides, long low, long 
         double tail = tail(q, level, sides);
         long low = sides == Sides.UPPER ? 0 : lower(n, q, tail);
         long high = sides == Sides.LOWER ? n + 1 : upper(n, q, tail);
-        return new Ranks(
-                n, q, level, sides, low, high, BinomialTail.atMost(low - 1, n, q), BinomialTail.atLeast(high, n, q));
+        return new Ranks(n, q, level, sides, low, high);
     }
 
     private static double tail(double q, double level, Sides sides) {
@@ -52,17 +55,37 @@ public record Ranks(long n, double q, double level, Sides sides, long low, long 
     }
 
     private static long lower(long n, double q, double tail) {
-        double guess = n * q - spread(n, q, tail);
-        return last(n, (long) guess, k -> BinomialTail.atMost(k, n, q) <= tail * ROUNDING) + 1;
+        return last(n, q, tail, k -> BinomialTail.atMost(k, n, q) <= tail * ROUNDING) + 1;
     }
 
     private static long upper(long n, double q, double tail) {
-        double guess = n * (1 - q) - spread(n, q, tail);
-        return n - last(n, (long) guess, k -> BinomialTail.atLeast(n - k, n, q) <= tail * ROUNDING);
+        return n - last(n, 1 - q, tail, k -> BinomialTail.atLeast(n - k, n, q) <= tail * ROUNDING);
     }
 
-    private static double spread(long n, double q, double tail) {
-        return Normal.upperQuantile(tail) * Math.sqrt(n * q * (1 - q));
+    /// The last k at which `P(B <= k)` is at most `tail`.
+    ///
+    /// @param holds whether it is, exactly
+    private static long last(long n, double q, double tail, LongPredicate holds) {
+        double guess = guess(n, q, tail);
+        double part = guess - Math.floor(guess);
+        boolean certain = n * q * (1 - q) >= MANY && part > MARGIN && part < 1 - MARGIN;
+        return certain ? (long) guess : last(n, (long) guess, holds);
+    }
+
+    /// Where `P(B <= k)` would be `tail` if k were no whole number: the expansion of Cornish and Fisher to the
+    /// second order, with the correction for whole numbers. From a variance of [#MANY] on it is off by less
+    /// than .001 for tails from 1e-4 to .05 (`RanksTest`).
+    private static double guess(long n, double q, double tail) {
+        double z = -Normal.upperQuantile(tail);
+        double spread = Math.sqrt(n * q * (1 - q));
+        double square = z * z;
+        double skewness = 1 - 2 * q;
+        return n * q
+                - 0.5
+                + spread * z
+                + skewness * (square - 1) / 6
+                + ((1 - 6 * q * (1 - q)) * z * (square - 3) / 24 - skewness * skewness * z * (2 * square - 5) / 36)
+                        / spread;
     }
 
     /// The last k from 0 to n - 1 at which `holds` is true, which it stays no longer; -1 where it nowhere
@@ -97,7 +120,7 @@ public record Ranks(long n, double q, double level, Sides sides, long low, long 
     /// Probability that the quantile of a continuous density lies between the limits; of any other at least
     /// that.
     public double coverage() {
-        return 1 - below - above;
+        return 1 - BinomialTail.atMost(low - 1, n, q) - BinomialTail.atLeast(high, n, q);
     }
 
     /// The least number of draws of which the `fromTop`-th largest is an upper limit.

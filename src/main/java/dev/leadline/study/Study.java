@@ -25,11 +25,16 @@ import java.util.stream.Stream;
 ///
 /// One conducting thread hands out items and merges them; lanes take turns, the one with the fewest draws first.
 public final class Study implements AutoCloseable {
+    /// Nanoseconds at least from one look at a running study to the next: nobody reads faster, and grounds take time.
+    /// Marks stand where they stand, looked at or not.
+    private static final long BETWEEN_LOOKS = 30_000_000;
+
     private final Question question;
     private final Plan plan;
     private final Workers workers;
     private final Consumer<StudyState> listener;
     private final CountDownLatch ended = new CountDownLatch(1);
+    private long looked;
     private final StopWatch watch = new StopWatch();
 
     private final Object gate = new Object();
@@ -147,7 +152,7 @@ public final class Study implements AutoCloseable {
                 all.forEach(run -> run.stop(watch.seconds()));
                 return;
             }
-            if (next.get().advance(watch.seconds())) {
+            if (next.get().advance(watch.seconds()) && System.nanoTime() - looked >= BETWEEN_LOOKS) {
                 publish(look(Activity.RUNNING, runs));
             }
         }
@@ -198,6 +203,7 @@ public final class Study implements AutoCloseable {
     }
 
     private void publish(StudyState newer) {
+        looked = System.nanoTime();
         state = newer;
         listener.accept(newer);
     }

@@ -118,6 +118,25 @@ class RanksTest {
 
     /// Record int-wilks: the largest of n as a limit, and both the least and the largest, which have the
     /// size of the second largest. The five sizes at 95 %/95 % are common practice.
+    /// Where ranks come from an expansion, the exact tails say the same.
+    @Test
+    void manyDrawsHaveTheRanksThatTheTailsSay() {
+        var random = new Random(20261201);
+        for (int i = 0; i < 400; i++) {
+            double q = Math.pow(10, -4 * random.nextDouble());
+            q = i % 2 == 0 ? Math.min(q, .5) : 1 - Math.min(q, .5);
+            long n = (long) (Math.pow(10, 5 + 7 * random.nextDouble()) / (q * (1 - q)));
+            double level = 1 - Math.pow(10, -1 - 3 * random.nextDouble());
+            double tail = (1 - level) / 2;
+            var ranks = Ranks.of(n, q, level, Sides.BOTH);
+            String at = n + " draws, quantile " + q + ", level " + level;
+            assertTrue(BinomialTail.atMost(ranks.low() - 1, n, q) <= tail * (1 + 1e-11), at);
+            assertTrue(BinomialTail.atMost(ranks.low(), n, q) > tail, at);
+            assertTrue(BinomialTail.atLeast(ranks.high(), n, q) <= tail * (1 + 1e-11), at);
+            assertTrue(BinomialTail.atLeast(ranks.high() - 1, n, q) > tail, at);
+        }
+    }
+
     @Test
     void sizesAreWilks() {
         assertEquals(expected("one_sided_95_95"), Ranks.drawsForUpper(.95, .95, 1));
