@@ -1,6 +1,6 @@
 package dev.leadline.chart;
 
-import dev.leadline.estimate.Extremes;
+import dev.leadline.estimate.Outermost;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.trace.Trace;
@@ -30,23 +30,25 @@ public record Weights(String title, long seed, List<Weighed> lanes) implements S
         }
 
         static Weighed of(Trace trace) {
-            Optional<Extremes> extremes = trace.extremes().filter(e -> e.draws() > 0);
-            return extremes.map(e -> of(trace, e))
+            return Optional.of(trace)
+                    .filter(lane -> lane.scheme().isWeighted())
+                    .flatMap(Trace::outermost)
+                    .filter(seen -> seen.draws() > 0)
+                    .map(seen -> of(trace, seen))
                     .orElse(new Weighed(trace.lane(), trace.scheme().inWords(), List.of(), 0, Double.NaN));
         }
 
-        private static Weighed of(Trace trace, Extremes extremes) {
-            int weights = extremes.components() - 1;
-            double[] greatest = extremes.greatest(weights);
+        private static Weighed of(Trace trace, Outermost seen) {
+            var weights = seen.weights();
+            double[] greatest = weights.greatest();
             List<Point> points = new ArrayList<>();
             if (greatest.length > 0) {
-                double mean = greatest[0] / extremes.largestShare(weights) / extremes.draws();
-                for (int i = 0; i < greatest.length; i++) {
+                double mean = weights.size() / seen.draws();
+                for (int i = 0; i < greatest.length && greatest[i] > 0; i++) {
                     points.add(new Point(i + 1, greatest[i] / mean, Double.NaN, Double.NaN));
                 }
             }
-            return new Weighed(
-                    trace.lane(), trace.scheme().inWords(), points, extremes.draws(), extremes.effective(weights));
+            return new Weighed(trace.lane(), trace.scheme().inWords(), points, seen.draws(), weights.effective());
         }
 
         /// Part of all weight that the largest ones up to a rank have.
@@ -60,7 +62,9 @@ public record Weights(String title, long seed, List<Weighed> lanes) implements S
 
     /// Whether there is something to see.
     public static boolean isSeen(List<Trace> traces) {
-        return traces.stream().anyMatch(trace -> trace.extremes().isPresent());
+        return traces.stream()
+                .anyMatch(trace ->
+                        trace.scheme().isWeighted() && trace.outermost().isPresent());
     }
 
     public static Weights of(Question question, Plan plan, List<Trace> traces) {

@@ -1,5 +1,6 @@
 package dev.leadline.engine;
 
+import dev.leadline.estimate.Extremes.Floor;
 import java.util.Optional;
 import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.Future;
@@ -22,11 +23,11 @@ final class Alone implements Crew {
     }
 
     @Override
-    public Future<Optional<ItemSums>> submit(Recipe of, Item item) {
+    public Future<Optional<ItemSums>> submit(Recipe of, Item item, Floor floor) {
         if (recipe != of) {
             recipe = of;
             work = of.work();
         }
-        return CompletableFuture.completedFuture(work.compute(item, cancelled));
+        return CompletableFuture.completedFuture(work.compute(item, floor, cancelled));
     }
 }

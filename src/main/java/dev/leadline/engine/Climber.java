@@ -1,6 +1,7 @@
 package dev.leadline.engine;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Extremes.Floor;
 import dev.leadline.formula.Program;
 import dev.leadline.numeric.Normal;
 import dev.leadline.scheme.Repetitions;
@@ -45,7 +46,7 @@ final class Climber implements ItemWork {
     }
 
     @Override
-    public Optional<ItemSums> compute(Item item, BooleanSupplier cancelled) {
+    public Optional<ItemSums> compute(Item item, Floor floor, BooleanSupplier cancelled) {
         Stream numbers = recipe.numbers(item.stretch().item());
         return repetitions
                 .splitting()

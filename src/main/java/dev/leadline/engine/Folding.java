@@ -13,6 +13,11 @@ sealed interface Folding permits Means, CellMeans, CellSpreads {
                         scheme.points() instanceof Growing ? scheme.drawsPerObservation() : 1, recipe.components()));
     }
 
+    /// Whether each draw is an observation.
+    default boolean isPlain() {
+        return false;
+    }
+
     /// Goes to the first draw of an item.
     void open();
 

@@ -9,7 +9,7 @@ import java.util.Optional;
 
 /// What an item of work came to.
 ///
-/// @param extremes of the draws, where they are weighted
+/// @param extremes of the draws one by one; none of splitting, nor where all that is asked is 0 or 1
 /// @param outcomes of each thing asked; none of splitting
 /// @param failures the first [#KEPT] draws whose evaluation was not finite
 public record ItemSums(

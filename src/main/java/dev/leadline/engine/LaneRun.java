@@ -1,7 +1,9 @@
 package dev.leadline.engine;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Extremes;
+import dev.leadline.estimate.Extremes.Floor;
 import dev.leadline.estimate.Outcomes;
 import dev.leadline.model.Components;
 import dev.leadline.model.Stop;
@@ -71,8 +73,7 @@ public final class LaneRun {
         this.crew = crew;
         this.watched = watched;
         this.tally = Tally.of(items, recipe.components());
-        this.extremes =
-                recipe.lane().scheme().isWeighted() ? Optional.of(new Extremes(recipe.components())) : Optional.empty();
+        this.extremes = watched ? recipe.extremes() : Optional.empty();
         this.budget = items.whole(stop.draws());
         this.mostKept = mostKept;
         this.outcomes = outcomes(recipe);
@@ -168,7 +169,7 @@ public final class LaneRun {
     }
 
     private ItemSums again(Item item) {
-        return recipe.work().compute(item, () -> false).orElseThrow();
+        return recipe.work().compute(item, floor(), () -> false).orElseThrow();
     }
 
     /// Ends because no more may be made; the last mark may still be enough.
@@ -213,14 +214,29 @@ public final class LaneRun {
                 recipe.lane().scheme(),
                 marks,
                 tally.blocks(),
-                extremes.map(Extremes::copy),
-                outcomes.stream()
-                        .map(seen -> new Spread(seen.landmark(), seen.histogram()))
-                        .toList(),
+                extremes.map(Extremes::outermost),
+                IntStream.range(0, outcomes.size()).mapToObj(this::spread).toList(),
                 failures,
                 stopping.course(),
                 finished() ? stopReason : Optional.empty(),
                 Optional.empty());
+    }
+
+    private Spread spread(int ask) {
+        var seen = outcomes.get(ask);
+        return new Spread(
+                seen.landmark(),
+                seen.histogram(),
+                switch (recipe.asks().get(ask).estimand()) {
+                    case Estimand.Quantile(double at) -> seen.jump(at);
+                    case Estimand.TailMean(double at) -> seen.jump(at);
+                    case Estimand.Mean _,
+                            Estimand.Integral _,
+                            Estimand.Probability _,
+                            Estimand.Ratio _,
+                            Estimand.StandardDeviation _,
+                            Estimand.Distribution _ -> Optional.empty();
+                });
     }
 
     private void submitAhead() {
@@ -230,8 +246,13 @@ public final class LaneRun {
                 return;
             }
             submitted++;
-            ahead.add(crew.submit(recipe, item.get()));
+            ahead.add(crew.submit(recipe, item.get(), floor()));
         }
+    }
+
+    /// Which values of later draws can be among the outermost of all.
+    private Floor floor() {
+        return extremes.map(Extremes::floor).orElse(Floor.CLOSED);
     }
 
     private void merge(ItemSums item) {
@@ -266,6 +287,7 @@ public final class LaneRun {
         ahead.clear();
         if (draws > 0 && tally.isWhole()) {
             outcomes.forEach(Outcomes::settle);
+            extremes.ifPresent(Extremes::look);
             mark(seconds);
             lookAgain();
         }
@@ -293,7 +315,7 @@ public final class LaneRun {
                     break;
                 }
                 next++;
-                again.add(crew.submit(narrowed, item.get()));
+                again.add(crew.submit(narrowed, item.get(), Floor.CLOSED));
             }
             var sums = again.remove().get();
             if (sums.isEmpty()) {
@@ -332,7 +354,7 @@ public final class LaneRun {
                     break;
                 }
                 next++;
-                under.add(crew.submit(own, item.get()));
+                under.add(crew.submit(own, item.get(), Floor.CLOSED));
             }
             var item = under.remove().get();
             if (item.isEmpty()) {
@@ -351,6 +373,7 @@ public final class LaneRun {
 
     /// Sets a mark, in the place of one after as many draws.
     private void mark(double seconds) {
+        extremes.ifPresent(Extremes::follow);
         if (!marks.isEmpty() && marks.getLast().draws() == draws) {
             marks.removeLast();
         }

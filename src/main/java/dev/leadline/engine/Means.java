@@ -17,6 +17,11 @@ final class Means implements Folding {
     }
 
     @Override
+    public boolean isPlain() {
+        return draws == 1;
+    }
+
+    @Override
     public void open() {
         seen = 0;
     }

@@ -3,6 +3,7 @@ package dev.leadline.engine;
 import dev.leadline.density.Density;
 import dev.leadline.density.Inversion;
 import dev.leadline.estimate.Estimand;
+import dev.leadline.estimate.Extremes;
 import dev.leadline.estimate.Landmark;
 import dev.leadline.formula.Program;
 import dev.leadline.model.Ask;
@@ -209,6 +210,29 @@ public final class Recipe {
         return lane.scheme().points() instanceof Repetitions
                 ? Repetitions.COMPONENTS
                 : Components.asked(asks()) + controls().size() + (lane.scheme().isWeighted() ? 1 : 0);
+    }
+
+    /// Empty ones of the components whose tails say something: not of events that count 1, nor of control variates.
+    Optional<Extremes> extremes() {
+        if (lane.scheme().points() instanceof Repetitions) {
+            return Optional.empty();
+        }
+        boolean isWeighted = lane.scheme().isWeighted();
+        boolean[] watched = new boolean[components()];
+        for (int k = 0; k < Components.asked(asks()); k++) {
+            watched[k] = isWeighted || Components.hasTail(asks(), k);
+        }
+        watched[watched.length - 1] |= isWeighted;
+        return anyOf(watched) ? Optional.of(new Extremes(watched, isWeighted)) : Optional.empty();
+    }
+
+    private static boolean anyOf(boolean[] flags) {
+        for (boolean flag : flags) {
+            if (flag) {
+                return true;
+            }
+        }
+        return false;
     }
 
     public Question question() {

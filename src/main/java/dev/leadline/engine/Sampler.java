@@ -3,6 +3,7 @@ package dev.leadline.engine;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Catch;
 import dev.leadline.estimate.Extremes;
+import dev.leadline.estimate.Extremes.Floor;
 import dev.leadline.formula.Program;
 import dev.leadline.model.Components;
 import dev.leadline.trace.Failure;
@@ -14,7 +15,7 @@ import java.util.function.BooleanSupplier;
 import java.util.stream.IntStream;
 
 /// Makes the draws of an item of work and accumulates them. Scratch of one worker, confined to it; what it returns
-/// is a pure function of the recipe and the item.
+/// is a pure function of the recipe, the item and the floor.
 public final class Sampler implements ItemWork {
     private final Recipe recipe;
     private final Evaluation evaluation;
@@ -42,7 +43,7 @@ public final class Sampler implements ItemWork {
                 .toArray();
         this.folding = folding;
         this.sums = new Accumulator(components.length);
-        this.extremes = evaluation.isWeighted() ? Optional.of(new Extremes(components.length)) : Optional.empty();
+        this.extremes = recipe.extremes();
         this.caught = IntStream.range(0, formulas.length)
                 .mapToObj(a -> new Catch(recipe.landmarks().get(a), recipe.isWeighed(formulas[a]), Program.BLOCK))
                 .toList();
@@ -50,11 +51,11 @@ public final class Sampler implements ItemWork {
     }
 
     @Override
-    public Optional<ItemSums> compute(Item item, BooleanSupplier cancelled) {
+    public Optional<ItemSums> compute(Item item, Floor floor, BooleanSupplier cancelled) {
         evaluation.open(item.stretch());
         folding.open();
         sums.clear();
-        extremes.ifPresent(Extremes::clear);
+        extremes.ifPresent(seen -> seen.clear(floor));
         caught.forEach(Catch::clear);
         var failures = new ArrayList<Failure>();
         for (int from = 0; from < item.draws(); from += Program.BLOCK) {
@@ -65,9 +66,14 @@ public final class Sampler implements ItemWork {
             evaluation.next(rows);
             take(rows, from, item);
             observing.observe(rows);
-            extremes.ifPresent(seen -> seen.add(folding.counted(components, rows), rows));
+            if (extremes.isPresent() && !folding.isPlain()) {
+                extremes.get().add(folding.counted(components, rows), rows);
+            }
             if (!folding.addTo(sums, components, rows)) {
                 keepFailures(item.firstDraw() + from, rows, failures);
+            }
+            if (extremes.isPresent() && folding.isPlain()) {
+                extremes.get().add(components, rows, sums);
             }
         }
         return Optional.of(new ItemSums(

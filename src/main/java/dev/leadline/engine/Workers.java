@@ -1,5 +1,6 @@
 package dev.leadline.engine;
 
+import dev.leadline.estimate.Extremes.Floor;
 import java.util.IdentityHashMap;
 import java.util.Map;
 import java.util.Optional;
@@ -27,9 +28,9 @@ public final class Workers implements Crew, AutoCloseable {
     }
 
     @Override
-    public Future<Optional<ItemSums>> submit(Recipe recipe, Item item) {
+    public Future<Optional<ItemSums>> submit(Recipe recipe, Item item, Floor floor) {
         return pool.submit(
-                () -> samplers.get().computeIfAbsent(recipe, Recipe::work).compute(item, () -> cancelled));
+                () -> samplers.get().computeIfAbsent(recipe, Recipe::work).compute(item, floor, () -> cancelled));
     }
 
     /// Lets workers drop what they are at, between two blocks of draws.

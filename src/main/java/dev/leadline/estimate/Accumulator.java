@@ -69,6 +69,11 @@ public final class Accumulator {
         }
     }
 
+    /// What the last block came to; only where something was added.
+    Sums last() {
+        return block.sums();
+    }
+
     private int keepFinite(double[][] values, int from, int to) {
         if (kept == null) {
             kept = new double[components][Block.SIZE];

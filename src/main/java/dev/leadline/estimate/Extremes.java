@@ -1,16 +1,26 @@
 package dev.leadline.estimate;
 
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.List;
 
-/// The outermost values of each component of weighted draws, and the sums that say how much of all they make.
-/// Confined to one worker; its memory does not grow with the draws.
+/// The outermost values of components of draws, and the sums that say how much of all they make. Confined
+/// to one worker; its memory does not grow with the draws.
 ///
-/// Draws one by one, where an [Accumulator] sees observations of several. Which values are kept does not depend on
-/// how draws are divided over calls; the sums do, so that the order of merging must be fixed.
+/// Draws one by one, where an [Accumulator] may see observations of several. Which values are kept depends
+/// neither on how draws are divided over calls nor on the [Floor] of a part, where it is that of values
+/// before it; the sums do depend on the division, so that the order of merging must be fixed.
+///
+/// Cost: nothing to speak of for a block of draws in which none is outermost and all have one sign.
 public final class Extremes {
-    /// Largest and smallest values kept of each component.
-    public static final int KEPT = 1024;
+    /// Greatest and smallest values kept of each component: the tail of 1.8 million draws, and the cut-off.
+    public static final int KEPT = 4096;
 
+    /// Tails are looked at again after so many times the draws.
+    private static final double OFTEN = 1.5;
+
+    private final boolean[] watched;
+    private final boolean weighted;
     private final Side[] upper;
     private final Side[] lower;
     private final double[] size;
@@ -19,7 +29,26 @@ public final class Extremes {
     private final long[] nonzero;
     private long draws;
 
+    private final Outermost.Component[] seen;
+    private long looked;
+
+    /// Of every component, the last of which is the weight.
     public Extremes(int components) {
+        this(all(components), true);
+    }
+
+    private static boolean[] all(int components) {
+        boolean[] all = new boolean[components];
+        Arrays.fill(all, true);
+        return all;
+    }
+
+    /// @param watched which components to look at
+    /// @param weighted whether the last component is the weight, that the others are multiplied by
+    public Extremes(boolean[] watched, boolean weighted) {
+        this.watched = watched.clone();
+        this.weighted = weighted;
+        int components = watched.length;
         upper = new Side[components];
         lower = new Side[components];
         Arrays.setAll(upper, _ -> new Side());
@@ -28,6 +57,35 @@ public final class Extremes {
         squares = new double[components];
         ownSquares = new double[components];
         nonzero = new long[components];
+        seen = new Outermost.Component[components];
+        Arrays.fill(seen, Outermost.UNSEEN);
+    }
+
+    /// Values that cannot be among the outermost: up to `above`, and with the other sign up to `below`.
+    ///
+    /// @param above of each component; none where every value counts, or none does
+    public record Floor(double[] above, double[] below, double other) {
+        /// Every value may be outermost.
+        public static final Floor OPEN = new Floor(new double[0], new double[0], Double.NEGATIVE_INFINITY);
+
+        /// No value is kept, only sums are.
+        public static final Floor CLOSED = new Floor(new double[0], new double[0], Double.POSITIVE_INFINITY);
+
+        private double above(int k) {
+            return k < above.length ? above[k] : other;
+        }
+
+        private double below(int k) {
+            return k < below.length ? below[k] : other;
+        }
+    }
+
+    /// The floor of values that come later: so many are above it that none below can be outermost.
+    public Floor floor() {
+        return new Floor(
+                Arrays.stream(upper).mapToDouble(side -> side.threshold).toArray(),
+                Arrays.stream(lower).mapToDouble(side -> side.threshold).toArray(),
+                Double.NEGATIVE_INFINITY);
     }
 
     /// Adds the first `rows` draws; values that are not finite count nothing.
@@ -36,57 +94,105 @@ public final class Extremes {
     public void add(double[][] values, int rows) {
         draws += rows;
         for (int k = 0; k < upper.length; k++) {
-            add(k, values[k], rows);
-            ownSquares[k] += ownSquares(values[k], values[upper.length - 1], rows);
+            if (watched[k]) {
+                add(k, values[k], rows);
+                addOwnSquares(k, values, rows);
+            }
+        }
+    }
+
+    /// The same where an accumulator took in the same draws just before, whose sums need not be made again.
+    public void add(double[][] values, int rows, Accumulator same) {
+        Sums block = same.last();
+        if (block.count != rows) {
+            add(values, rows);
+            return;
+        }
+        draws += rows;
+        for (int k = 0; k < upper.length; k++) {
+            if (watched[k]) {
+                double mean = block.mean[k];
+                squares[k] += block.products[Sums.at(k, k)] + rows * mean * mean;
+                addSizes(k, values[k], rows, rows * mean, block.min[k], block.max[k]);
+                addOwnSquares(k, values, rows);
+            }
         }
     }
 
     /// `weight outcome²`, of outcomes by their weights.
-    private static double ownSquares(double[] values, double[] weights, int rows) {
+    private void addOwnSquares(int k, double[][] values, int rows) {
+        if (!weighted) {
+            return;
+        }
+        double[] weights = values[values.length - 1];
         double sum = 0;
         for (int i = 0; i < rows; i++) {
-            double square = values[i] * (values[i] / weights[i]);
+            double square = values[k][i] * (values[k][i] / weights[i]);
             sum += Double.isFinite(square) ? square : 0;
         }
-        return sum;
+        ownSquares[k] += sum;
+    }
+
+    private void addSizes(int k, double[] values, int rows, double sum, double least, double greatest) {
+        boolean isOneSided = least > 0 || greatest < 0;
+        size[k] += isOneSided ? Math.abs(sum) : sizes(values, rows);
+        nonzero[k] += isOneSided ? rows : rows - zeros(values, rows);
+        upper[k].addAbove(values, rows, greatest);
+        lower[k].addBelow(values, rows, least);
     }
 
     private void add(int k, double[] values, int rows) {
+        double least = Double.POSITIVE_INFINITY;
+        double greatest = Double.NEGATIVE_INFINITY;
         double sum = 0;
         double sumOfSquares = 0;
-        long count = 0;
         for (int i = 0; i < rows; i++) {
             double x = values[i];
-            sum += Math.abs(x);
+            least = x < least ? x : least;
+            greatest = x > greatest ? x : greatest;
+            sum += x;
             sumOfSquares = Math.fma(x, x, sumOfSquares);
-            count += x == 0 ? 0 : 1;
         }
         if (!Double.isFinite(sum)) {
-            double[] finite = finite(values, rows);
+            double[] finite =
+                    Arrays.stream(values, 0, rows).filter(Double::isFinite).toArray();
             if (finite.length < rows) {
                 add(k, finite, finite.length);
                 return;
             }
         }
-        size[k] += sum;
         squares[k] += sumOfSquares;
-        nonzero[k] += count;
-        Side above = upper[k];
-        Side below = lower[k];
-        for (int i = 0; i < rows; i++) {
-            if (values[i] > above.threshold) {
-                above.add(values[i]);
-            }
-            if (-values[i] > below.threshold) {
-                below.add(-values[i]);
-            }
+        addSizes(k, values, rows, sum, least, greatest);
+    }
+
+    /// Side by side, since one sum would wait for itself.
+    private static double sizes(double[] x, int rows) {
+        double a = 0;
+        double b = 0;
+        double c = 0;
+        double d = 0;
+        int i = 0;
+        for (; i + 3 < rows; i += 4) {
+            a += Math.abs(x[i]);
+            b += Math.abs(x[i + 1]);
+            c += Math.abs(x[i + 2]);
+            d += Math.abs(x[i + 3]);
         }
+        for (; i < rows; i++) {
+            a += Math.abs(x[i]);
+        }
+        return (a + b) + (c + d);
     }
 
-    private static double[] finite(double[] values, int rows) {
-        return Arrays.stream(values, 0, rows).filter(Double::isFinite).toArray();
+    private static int zeros(double[] x, int rows) {
+        int zeros = 0;
+        for (int i = 0; i < rows; i++) {
+            zeros += x[i] == 0 ? 1 : 0;
+        }
+        return zeros;
     }
 
+    /// Adds what `later` has seen, as if its draws had come after those seen here; `later` stays as it is.
     public void merge(Extremes later) {
         draws += later.draws;
         for (int k = 0; k < upper.length; k++) {
@@ -100,16 +206,18 @@ public final class Extremes {
     }
 
     public Extremes copy() {
-        var copy = new Extremes(upper.length);
+        var copy = new Extremes(watched, weighted);
         copy.merge(this);
         return copy;
     }
 
-    public void clear() {
+    /// Forgets everything; what comes next is up to `floor` not outermost.
+    public void clear(Floor floor) {
         draws = 0;
+        looked = 0;
         for (int k = 0; k < upper.length; k++) {
-            upper[k].clear();
-            lower[k].clear();
+            upper[k].clear(floor.above(k));
+            lower[k].clear(floor.below(k));
             size[k] = 0;
             squares[k] = 0;
             ownSquares[k] = 0;
@@ -117,56 +225,98 @@ public final class Extremes {
         }
     }
 
-    public int components() {
-        return upper.length;
+    /// Looks at the tails, where there are half as many draws again as the last time.
+    public void follow() {
+        if (draws >= OFTEN * looked) {
+            look();
+        }
     }
 
-    /// Draws seen.
-    public long draws() {
-        return draws;
+    /// Looks at the tails.
+    public void look() {
+        if (looked == draws) {
+            return;
+        }
+        looked = draws;
+        for (int k = 0; k < upper.length; k++) {
+            if (watched[k]) {
+                double[] greatest = k == upper.length - 1 ? upper[k].falling() : new double[0];
+                seen[k] = new Outermost.Component(0, 0, 0, 0, 0, greatest, upper[k].tail(draws), lower[k].tail(draws));
+            }
+        }
     }
 
-    /// Draws whose value is neither 0 nor not finite.
-    public long nonzero(int k) {
-        return nonzero[k];
+    /// What is known now; of the tails, when they were looked at last.
+    public Outermost outermost() {
+        List<Outermost.Component> components = new ArrayList<>();
+        for (int k = 0; k < upper.length; k++) {
+            components.add(
+                    watched[k]
+                            ? new Outermost.Component(
+                                    nonzero[k],
+                                    size[k],
+                                    squares[k],
+                                    ownSquares[k],
+                                    Math.max(upper[k].max, lower[k].max),
+                                    seen[k].greatest(),
+                                    seen[k].above(),
+                                    seen[k].below())
+                            : Outermost.UNSEEN);
+        }
+        return new Outermost(draws, components);
     }
 
-    /// The greatest values above 0, at most [#KEPT], the greatest first.
-    public double[] greatest(int k) {
-        return upper[k].falling();
-    }
-
-    /// The sizes of the smallest values below 0, at most [#KEPT], the greatest first.
-    public double[] greatestBelow(int k) {
-        return lower[k].falling();
-    }
-
-    /// The share of the sum of all sizes that the greatest one has; `NaN` where all are 0.
-    public double largestShare(int k) {
-        return Math.max(upper[k].max, lower[k].max) / size[k];
-    }
-
-    /// How many equal values would estimate their mean as well: the square of the sum of sizes over that of squares.
-    public double effective(int k) {
-        return size[k] * (size[k] / squares[k]);
-    }
-
-    /// The mean square that an outcome has where nothing is weighted, as far as these draws tell. The last
-    /// component are the weights.
-    public double ownSquare(int k) {
-        return ownSquares[k] / size[size.length - 1];
-    }
-
-    /// The greatest of many values, at most [#KEPT].
+    /// The greatest of many values, at most [#KEPT] when they are read.
     private static final class Side {
         private double[] values = new double[16];
         private int count;
-        private double max;
+        private double max = Double.NEGATIVE_INFINITY;
 
         /// Nothing up to it is among them.
-        private double threshold;
+        private double threshold = Double.NEGATIVE_INFINITY;
 
-        void add(double x) {
+        /// Four at a time: where few are above the threshold, the loop goes as fast as it reads.
+        void addAbove(double[] x, int rows, double greatest) {
+            double t = threshold;
+            if (!(greatest > t)) {
+                return;
+            }
+            int i = 0;
+            for (; i + 3 < rows; i += 4) {
+                if (x[i] > t || x[i + 1] > t || x[i + 2] > t || x[i + 3] > t) {
+                    add(x[i]);
+                    add(x[i + 1]);
+                    add(x[i + 2]);
+                    add(x[i + 3]);
+                    t = threshold;
+                }
+            }
+            for (; i < rows; i++) {
+                add(x[i]);
+            }
+        }
+
+        void addBelow(double[] x, int rows, double least) {
+            double t = -threshold;
+            if (!(least < t)) {
+                return;
+            }
+            int i = 0;
+            for (; i + 3 < rows; i += 4) {
+                if (x[i] < t || x[i + 1] < t || x[i + 2] < t || x[i + 3] < t) {
+                    add(-x[i]);
+                    add(-x[i + 1]);
+                    add(-x[i + 2]);
+                    add(-x[i + 3]);
+                    t = -threshold;
+                }
+            }
+            for (; i < rows; i++) {
+                add(-x[i]);
+            }
+        }
+
+        private void add(double x) {
             if (!(x > threshold)) {
                 return;
             }
@@ -180,18 +330,44 @@ public final class Extremes {
         private void grow() {
             if (count < 2 * KEPT) {
                 values = Arrays.copyOf(values, 2 * count);
-            } else {
-                keep();
+                return;
             }
+            toFront(values, count, KEPT);
+            count = KEPT;
+            threshold = Arrays.stream(values, 0, KEPT).min().orElseThrow();
         }
 
-        /// Throws away what is not among the greatest.
-        private void keep() {
-            if (count > KEPT) {
-                Arrays.sort(values, 0, count);
-                System.arraycopy(values, count - KEPT, values, 0, KEPT);
-                count = KEPT;
-                threshold = values[0];
+        /// Hoare's partitions, until the greatest stand in front.
+        private static void toFront(double[] x, int count, int greatest) {
+            int low = 0;
+            int high = count - 1;
+            while (low < high) {
+                double a = x[low];
+                double b = x[(low + high) / 2];
+                double c = x[high];
+                double middle = Math.max(Math.min(a, b), Math.min(Math.max(a, b), c));
+                int i = low;
+                int j = high;
+                while (i <= j) {
+                    while (x[i] > middle) {
+                        i++;
+                    }
+                    while (x[j] < middle) {
+                        j--;
+                    }
+                    if (i <= j) {
+                        double swapped = x[i];
+                        x[i++] = x[j];
+                        x[j--] = swapped;
+                    }
+                }
+                if (greatest - 1 <= j) {
+                    high = j;
+                } else if (greatest - 1 >= i) {
+                    low = i;
+                } else {
+                    return;
+                }
             }
         }
 
@@ -201,19 +377,28 @@ public final class Extremes {
             }
         }
 
+        TailIndex tail(long draws) {
+            return TailIndex.of(falling(TailIndex.length(draws) + 1), draws);
+        }
+
         double[] falling() {
-            double[] sorted = Arrays.copyOf(values, count);
-            Arrays.sort(sorted);
-            int n = Math.min(count, KEPT);
+            return falling(KEPT);
+        }
+
+        private double[] falling(int most) {
+            double[] greatest = Arrays.copyOf(values, count);
+            int n = Math.min(count, Math.min(most, KEPT));
+            toFront(greatest, count, n);
+            Arrays.sort(greatest, 0, n);
             double[] falling = new double[n];
-            Arrays.setAll(falling, i -> sorted[sorted.length - 1 - i]);
+            Arrays.setAll(falling, i -> greatest[n - 1 - i]);
             return falling;
         }
 
-        void clear() {
+        void clear(double floor) {
             count = 0;
-            max = 0;
-            threshold = 0;
+            max = Double.NEGATIVE_INFINITY;
+            threshold = floor;
         }
     }
 }

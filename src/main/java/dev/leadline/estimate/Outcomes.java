@@ -2,11 +2,13 @@ package dev.leadline.estimate;
 
 import dev.leadline.estimate.Landmark.Window;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.function.LongUnaryOperator;
+import java.util.stream.IntStream;
 
 /// The outcomes of one thing asked, of all items merged so far: what a quantile, a tail mean or a distribution is read
 /// from. Confined to the thread that merges items.
@@ -15,6 +17,9 @@ import java.util.function.LongUnaryOperator;
 public final class Outcomes {
     /// Outcomes kept one by one, of each window: 32 MB.
     public static final long MOST_KEPT = 4_000_000;
+
+    private static final int PLACES = 9;
+    private static final double OFTEN = 1.5;
 
     private final Landmark landmark;
     private final boolean weighted;
@@ -26,6 +31,8 @@ public final class Outcomes {
     private final Map<Double, CoverageIntervals> coverage = new HashMap<>();
     private long draws;
     private double weight;
+    private long looked;
+    private Optional<Jump> jump = Optional.empty();
 
     /// @param weighted whether draws have weights of their own
     /// @param most outcomes to keep of each window
@@ -132,6 +139,40 @@ public final class Outcomes {
         return place;
     }
 
+    /// Few values near a quantile, of which each is many outcomes: its level lies at a jump of the distribution
+    /// function, as far as two standard errors tell.
+    public record Jump(double low, double high) {}
+
+    /// Of draws that count 1 each. Looked for where there are half as many draws again as the last time, and at the
+    /// end.
+    public Optional<Jump> jump(double at) {
+        if (!weighted && draws >= OFTEN * looked) {
+            looked = draws;
+            jump = findJump(at);
+        }
+        return jump;
+    }
+
+    /// A value that holds a third of the ranks about the quantile, but not all of them.
+    private Optional<Jump> findJump(double at) {
+        long rank = Quantile.rank(draws, at);
+        double reach = 2 * Math.sqrt(draws * at * (1 - at));
+        if (reach < PLACES || rank - reach < 1 || rank + reach > draws) {
+            return Optional.empty();
+        }
+        double[] places = new double[PLACES];
+        Arrays.setAll(places, i -> known(Math.round(rank + reach * (2.0 * i / (PLACES - 1) - 1))));
+        boolean isHeld = IntStream.range(2, PLACES).anyMatch(i -> places[i] == places[i - 2]);
+        return isHeld && places[0] < places[PLACES - 1]
+                ? Optional.of(new Jump(places[0], places[PLACES - 1]))
+                : Optional.empty();
+    }
+
+    private double known(long rank) {
+        Place place = place(rank);
+        return place.isFound() ? place.value() : Double.NaN;
+    }
+
     /// By how much outcomes exceed `x`, summed by their weights; `NaN` where `x` is not near the quantile.
     public double excessOver(double x) {
         return ranks.getFirst().excessOver(x);
@@ -174,6 +215,7 @@ public final class Outcomes {
     /// Forgets which places were asked for, and what may be out of date.
     public void settle() {
         open.clear();
+        looked = 0;
         coverage.forEach((_, intervals) -> intervals.forget());
     }
 

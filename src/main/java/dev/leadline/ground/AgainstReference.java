@@ -43,12 +43,12 @@ final class AgainstReference {
         return switch (answer.estimand()) {
             case Estimand.Probability _
             when answer.interval().kind().equals(ClopperPearson.KIND) -> chance(answer, reference);
+            case Estimand.Quantile _ -> QuantileReference.judge(answer, reference.value(), reference.error());
             case Estimand.Probability _,
                     Estimand.Mean _,
                     Estimand.Integral _,
                     Estimand.Ratio _,
                     Estimand.StandardDeviation _,
-                    Estimand.Quantile _,
                     Estimand.TailMean _,
                     Estimand.Distribution _ -> mean(evidence, answer, reference);
         };

@@ -131,9 +131,10 @@ final class Audit {
     private static double foretold(Evidence evidence, Answer lane, int k) {
         boolean isMean = lane.estimand() instanceof Estimand.Mean || lane.estimand() instanceof Estimand.Integral;
         return evidence.trace()
-                .extremes()
+                .outermost()
                 .filter(_ -> isMean)
-                .map(draws -> Math.sqrt(Math.max(0, draws.ownSquare(k) - lane.estimate() * lane.estimate())))
+                .map(draws -> Math.sqrt(
+                        Math.max(0, draws.ownSquare(evidence.component(k)) - lane.estimate() * lane.estimate())))
                 .orElse(0.0);
     }
 

@@ -2,12 +2,15 @@ package dev.leadline.ground;
 
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Estimate;
+import dev.leadline.estimate.Outermost;
 import dev.leadline.model.Components;
 import dev.leadline.model.Question;
+import dev.leadline.scheme.Proposal;
 import dev.leadline.trace.Answer;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Trace;
 import java.util.List;
+import java.util.stream.IntStream;
 
 /// What grounds are judged by: a question, what a lane has shown of it, and the sums that follow.
 ///
@@ -32,6 +35,22 @@ record Evidence(Question question, Trace trace, List<Answer> answers, Accumulato
     /// The first component of an answer.
     int component(int answer) {
         return Components.first(question.asks(), answer);
+    }
+
+    /// The components of an answer whose tails its error follows from; none where they were not looked at.
+    List<Outermost.Component> outermost(int answer) {
+        return trace.outermost()
+                .map(seen -> IntStream.range(
+                                0, Components.of(answers.get(answer).estimand()))
+                        .mapToObj(c -> seen.of(component(answer) + c))
+                        .filter(Outermost.Component::isSeen)
+                        .toList())
+                .orElse(List.of());
+    }
+
+    /// Whether weights are divided by their sum, so that they enter the answers by themselves.
+    boolean isSelfNormalised() {
+        return trace.scheme().drawFrom().filter(Proposal::selfNormalised).isPresent();
     }
 
     /// Draws whose mean is an observation, those of a replicate so far where it is one.

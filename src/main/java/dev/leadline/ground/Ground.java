@@ -1,5 +1,6 @@
 package dev.leadline.ground;
 
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 
@@ -9,7 +10,18 @@ import java.util.Optional;
 /// @param strength of a doubt; empty otherwise
 /// @param text one sentence of evidence with its number, no full stop
 /// @param remedy what could be done about it
-public record Ground(String code, Status status, Optional<Strength> strength, String text, Optional<String> remedy) {
+/// @param actions the same as far as the program can help with it, the best first
+public record Ground(
+        String code,
+        Status status,
+        Optional<Strength> strength,
+        String text,
+        Optional<String> remedy,
+        List<Action> actions) {
+    public Ground {
+        actions = List.copyOf(actions);
+    }
+
     public enum Status {
         SHOWN("shown"),
         DOUBTED("doubted"),
@@ -44,15 +56,17 @@ public record Ground(String code, Status status, Optional<Strength> strength, St
     }
 
     static Ground shown(String code, String text) {
-        return new Ground(code, Status.SHOWN, Optional.empty(), sentence(text), Optional.empty());
+        return new Ground(code, Status.SHOWN, Optional.empty(), sentence(text), Optional.empty(), List.of());
     }
 
-    static Ground doubted(String code, Strength strength, String text, String remedy) {
-        return new Ground(code, Status.DOUBTED, Optional.of(strength), sentence(text), Optional.of(remedy));
+    static Ground doubted(String code, Strength strength, String text, String remedy, Action... actions) {
+        return new Ground(
+                code, Status.DOUBTED, Optional.of(strength), sentence(text), Optional.of(remedy), List.of(actions));
     }
 
-    static Ground notDone(String code, String text, String remedy) {
-        return new Ground(code, Status.NOT_DONE, Optional.empty(), sentence(text), Optional.of(remedy));
+    static Ground notDone(String code, String text, String remedy, Action... actions) {
+        return new Ground(
+                code, Status.NOT_DONE, Optional.empty(), sentence(text), Optional.of(remedy), List.of(actions));
     }
 
     private static String sentence(String text) {

@@ -1,6 +1,5 @@
 package dev.leadline.ground;
 
-import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.ToRounding;
 import dev.leadline.model.Question;
@@ -8,6 +7,7 @@ import dev.leadline.trace.Trace;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
 
 /// The reasons for and against signing what a lane has shown.
 public final class Grounds {
@@ -15,6 +15,11 @@ public final class Grounds {
 
     /// Doubts first, strongest first, then what was shown, then what was not done; none before the first mark.
     public static List<Ground> of(Question question, Trace trace) {
+        return of(question, trace, Optional.empty());
+    }
+
+    /// @param rehearsed what a rehearsal of this set-up came to, where one was made
+    public static List<Ground> of(Question question, Trace trace, Optional<Rehearsed> rehearsed) {
         if (trace.last().isEmpty()) {
             return List.of();
         }
@@ -30,8 +35,16 @@ public final class Grounds {
             Spread.judge(evidence, k).ifPresent(grounds::add);
             Settled.judge(evidence, k).ifPresent(grounds::add);
             Skewness.judge(evidence, k).ifPresent(grounds::add);
+            Tail.judge(evidence, k).ifPresent(grounds::add);
+            VarianceOfVariance.judge(evidence, k).ifPresent(grounds::add);
             LargestShare.judge(evidence, k).ifPresent(grounds::add);
+            EffectiveSize.judge(evidence, k).ifPresent(grounds::add);
+            ErrorDecay.judge(evidence, k).ifPresent(grounds::add);
+            Resolution.judge(evidence, k).ifPresent(grounds::add);
+            AtomAtQuantile.judge(evidence, k).ifPresent(grounds::add);
+            NoInterval.judge(evidence, k).ifPresent(grounds::add);
         }
+        Tail.judgeWeights(evidence).ifPresent(grounds::add);
         MeanWeight.judge(evidence).ifPresent(grounds::add);
         Mixing.judge(evidence).ifPresent(grounds::add);
         Stages.judge(evidence).ifPresent(grounds::add);
@@ -40,16 +53,9 @@ public final class Grounds {
         grounds.add(FailedEvaluations.judge(evidence));
         NumericalTolerance.judge(evidence).ifPresent(grounds::add);
         grounds.add(AgainstReference.judge(evidence));
-        if (question.asks().stream().anyMatch(ask -> !(ask.estimand() instanceof Estimand.Probability))) {
-            grounds.add(Ground.notDone(
-                    "tail",
-                    "Whether rare, large outcomes make the variance infinite was not examined",
-                    "Look at the largest outcomes by hand before signing a mean"));
-        }
-        grounds.add(Ground.notDone(
-                "rehearsal",
-                "Whether this interval holds for this question was not rehearsed",
-                "Repeat the run with other seeds and compare the intervals"));
+        HiddenRegion.judge(evidence).ifPresent(grounds::add);
+        grounds.add(Rehearsal.judge(rehearsed));
+        grounds.add(EarlierRuns.judge());
         grounds.sort(Comparator.comparing(Ground::status, Comparator.comparingInt(Grounds::rank))
                 .thenComparing(
                         ground -> ground.strength().map(Strength::ordinal).orElse(0), Comparator.reverseOrder()));

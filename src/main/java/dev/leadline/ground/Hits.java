@@ -1,7 +1,7 @@
 package dev.leadline.ground;
 
 import dev.leadline.estimate.Estimand;
-import dev.leadline.estimate.Extremes;
+import dev.leadline.estimate.Outermost;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.Student;
 import java.util.Arrays;
@@ -19,7 +19,8 @@ final class Hits {
         if (answer.hits().isEmpty() || answer.observations() == 0) {
             return answer.estimand() instanceof Estimand.Probability && answer.observations() > 0
                     ? evidence.trace()
-                            .extremes()
+                            .outermost()
+                            .filter(_ -> evidence.trace().scheme().isWeighted())
                             .map(draws -> weighted(evidence, draws, k))
                             .or(() -> folded(evidence, k))
                     : Optional.empty();
@@ -72,8 +73,8 @@ final class Hits {
     }
 
     /// A miss needs no weight, so that only hits count.
-    private static Ground weighted(Evidence evidence, Extremes draws, int k) {
-        long hits = draws.nonzero(evidence.component(k));
+    private static Ground weighted(Evidence evidence, Outermost draws, int k) {
+        long hits = draws.of(evidence.component(k)).nonzero();
         String text = evidence.of(k)
                 + "%s %s in %s weighted draws"
                         .formatted(

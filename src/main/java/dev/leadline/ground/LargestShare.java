@@ -1,9 +1,11 @@
 package dev.leadline.ground;
 
+import dev.leadline.estimate.Outermost;
 import dev.leadline.ground.Ground.Strength;
+import java.util.Comparator;
 import java.util.Optional;
 
-/// Whether a single weighted draw makes up much of the sum that an answer is.
+/// Whether a single draw makes up much of the sum that an answer is.
 final class LargestShare {
     private static final double MUCH = 0.1;
 
@@ -13,23 +15,26 @@ final class LargestShare {
     private LargestShare() {}
 
     static Optional<Ground> judge(Evidence evidence, int k) {
-        int component = evidence.component(k);
-        return evidence.trace()
-                .extremes()
-                .filter(draws -> draws.nonzero(component) > 0)
-                .map(draws -> judge(evidence, k, draws.largestShare(component), OF_FEW / draws.nonzero(component)));
+        return evidence.outermost(k).stream()
+                .max(Comparator.comparingDouble(Outermost.Component::largestShare))
+                .map(draws -> judge(evidence, k, draws));
     }
 
-    private static Ground judge(Evidence evidence, int k, double share, double ofFew) {
+    private static Ground judge(Evidence evidence, int k, Outermost.Component draws) {
+        double share = draws.largestShare();
         String text = evidence.of(k)
                 + "the draw that counts most makes up %s %% of the sum".formatted(Numbers.value(100 * share));
-        return share <= Math.max(MUCH, ofFew)
-                ? Ground.shown("largest-share", text)
+        return share <= Math.max(MUCH, OF_FEW / draws.nonzero())
+                ? Ground.shown(
+                        "largest-share",
+                        text + "; all do the work of about %s equal ones".formatted(Numbers.about(draws.effective())))
                 : Ground.doubted(
                         "largest-share",
                         Strength.CAUTION,
                         text,
-                        "Look at that draw; draw such values more often, by a wider density or a greater share of the"
-                                + " inputs' own");
+                        "Draw such values more often, in a lane of its own or by a wider density; more draws make the"
+                                + " share smaller",
+                        new Action.DrawWider(),
+                        Action.MoreDraws.some());
     }
 }

@@ -21,7 +21,7 @@ final class MeanWeight {
     private MeanWeight() {}
 
     static Optional<Ground> judge(Evidence evidence) {
-        if (evidence.trace().extremes().isEmpty() || evidence.total().count() < 2) {
+        if (!evidence.trace().scheme().isWeighted() || evidence.total().count() < 2) {
             return Optional.empty();
         }
         var sums = evidence.total();

@@ -30,6 +30,11 @@ final class Numbers {
         return text.equals("-0.0") ? "0.0" : text;
     }
 
+    /// A tail index, or a power: two decimals.
+    static String hundredths(double value) {
+        return String.format(Locale.ROOT, "%.2f", value);
+    }
+
     /// A value to three significant digits: `0.00300`, `9.99e-6`, `1,420`.
     static String value(double value) {
         if (Math.abs(value) >= 1000 && Math.abs(value) < LARGEST_WRITTEN_OUT) {

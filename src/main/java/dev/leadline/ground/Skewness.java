@@ -3,7 +3,12 @@ package dev.leadline.ground;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
+import dev.leadline.interval.EmpiricalBernstein;
+import dev.leadline.interval.Hoeffding;
+import dev.leadline.interval.SkewnessCorrected;
+import dev.leadline.trace.Answer;
 import java.util.Optional;
+import java.util.Set;
 
 /// Whether there are enough observations for a Student interval in spite of lopsided outcomes: n of at least 25 times
 /// the squared skewness (Cochran's rule; common practice). A skewness within two standard errors of 0, as those of
@@ -11,13 +16,17 @@ import java.util.Optional;
 final class Skewness {
     private static final double PER_SQUARE = 25;
 
+    /// Kinds of intervals that allow for lopsided outcomes.
+    private static final Set<String> SHAPELESS =
+            Set.of(SkewnessCorrected.KIND, Hoeffding.KIND, EmpiricalBernstein.KIND);
+
     private Skewness() {}
 
     static Optional<Ground> judge(Evidence evidence, int k) {
         var sums = evidence.total();
-        int component = evidence.component(k);
+        int component = component(evidence, k);
         double skewness = sums.count() < 3 ? Double.NaN : sums.skewness(component);
-        if (!isMean(evidence.answers().get(k).estimand()) && !isJudgedByPasses(evidence, k)) {
+        if (!isOfMeans(evidence.answers().get(k)) && !isJudgedByPasses(evidence, k)) {
             return Optional.empty();
         }
         if (Double.isNaN(skewness)) {
@@ -60,10 +69,37 @@ final class Skewness {
                 && !evidence.total().constant(evidence.component(k));
     }
 
-    private static boolean isMean(Estimand estimand) {
-        return switch (estimand) {
-            case Estimand.Mean _, Estimand.Integral _, Estimand.Distribution _, Estimand.TailMean _ -> true;
-            case Estimand.Probability _, Estimand.Quantile _, Estimand.Ratio _, Estimand.StandardDeviation _ -> false;
+    /// Whether the interval takes means for nearly normal.
+    private static boolean isOfMeans(Answer answer) {
+        return !SHAPELESS.contains(answer.interval().kind())
+                && switch (answer.estimand()) {
+                    case Estimand.Mean _,
+                            Estimand.Integral _,
+                            Estimand.Distribution _,
+                            Estimand.TailMean _,
+                            Estimand.Ratio _,
+                            Estimand.StandardDeviation _ -> true;
+                    case Estimand.Probability _, Estimand.Quantile _ -> false;
+                };
+    }
+
+    /// The component that is judged: of a standard deviation the squares, of a ratio the more lopsided of both.
+    private static int component(Evidence evidence, int k) {
+        int first = evidence.component(k);
+        return switch (evidence.answers().get(k).estimand()) {
+            case Estimand.StandardDeviation _ -> first + 1;
+            case Estimand.Ratio _ ->
+                Math.abs(evidence.total().skewness(first + 1))
+                                        > Math.abs(evidence.total().skewness(first))
+                                || evidence.total().constant(first)
+                        ? first + 1
+                        : first;
+            case Estimand.Mean _,
+                    Estimand.Integral _,
+                    Estimand.Probability _,
+                    Estimand.Quantile _,
+                    Estimand.TailMean _,
+                    Estimand.Distribution _ -> first;
         };
     }
 

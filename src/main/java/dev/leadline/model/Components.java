@@ -27,6 +27,25 @@ public final class Components {
         };
     }
 
+    /// Whether a component may take other values than 0 and 1 and the error of the answer follows from its spread. Of a
+    /// standard deviation that is the square.
+    public static boolean hasTail(List<Ask> asks, int component) {
+        int first = 0;
+        for (Ask ask : asks) {
+            int within = component - first;
+            if (within < of(ask.estimand())) {
+                return switch (ask.estimand()) {
+                    case Estimand.Mean _, Estimand.Integral _, Estimand.Ratio _ -> true;
+                    case Estimand.Probability _, Estimand.Quantile _ -> false;
+                    case Estimand.TailMean _, Estimand.Distribution _ -> within == 0;
+                    case Estimand.StandardDeviation _ -> within == 1;
+                };
+            }
+            first += of(ask.estimand());
+        }
+        return false;
+    }
+
     /// The first component of the thing asked at `index`.
     public static int first(List<Ask> asks, int index) {
         return asks.stream()

@@ -3,11 +3,12 @@ package dev.leadline.project;
 import dev.leadline.engine.Achieved;
 import dev.leadline.estimate.Chance;
 import dev.leadline.estimate.Estimand;
-import dev.leadline.estimate.Extremes;
+import dev.leadline.estimate.Outermost;
 import dev.leadline.ground.Ground;
 import dev.leadline.interval.ClopperPearson;
 import dev.leadline.interval.Interval;
 import dev.leadline.interval.NoHit;
+import dev.leadline.model.Components;
 import dev.leadline.model.Input;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Project;
@@ -90,7 +91,9 @@ public final class RunJson {
             points.found()
                     .ifPresent(found -> json.put("allocation", AllocationJson.of(project.question(), points, found)));
         }
-        trace.extremes().filter(_ -> last.isPresent()).ifPresent(draws -> json.put("weights", weights(trace, draws)));
+        trace.outermost()
+                .filter(_ -> last.isPresent() && trace.scheme().isWeighted())
+                .ifPresent(draws -> json.put("weights", weights(trace, draws)));
         if (!trace.failures().isEmpty()) {
             json.put(
                     "failures",
@@ -127,23 +130,24 @@ public final class RunJson {
     }
 
     /// @param draws of weights, the last component
-    private static Json weights(Trace trace, Extremes draws) {
-        int w = draws.components() - 1;
-        double[] greatest = draws.greatest(w);
+    private Json weights(Trace trace, Outermost draws) {
+        int w = draws.components().size() - 1;
+        double[] greatest = draws.weights().greatest();
         var total = trace.total();
         return Json.object()
                 .put("mean", Json.orNull(total.mean(w)))
                 .put("standardError", Json.orNull(total.standardError(w)))
                 .put("greatest", Json.orNull(greatest.length == 0 ? Double.NaN : greatest[0]))
-                .put("effectiveDraws", Json.orNull(draws.effective(w)))
+                .put("effectiveDraws", Json.orNull(draws.weights().effective()))
                 .put("largestShares", largestShares(trace, draws))
                 .build();
     }
 
     /// Of each answer: what part of the sum its largest draw has.
-    private static Json largestShares(Trace trace, Extremes draws) {
+    private Json largestShares(Trace trace, Outermost draws) {
         return Json.list(IntStream.range(0, trace.last().orElseThrow().answers().size())
-                .mapToObj(k -> Json.orNull(draws.largestShare(k)))
+                .map(k -> Components.first(project.question().asks(), k))
+                .mapToObj(k -> Json.orNull(draws.of(k).largestShare()))
                 .toList());
     }
 

@@ -192,7 +192,9 @@ public final class Study implements AutoCloseable {
                 activity,
                 traces.stream()
                         .map(trace -> new LaneState(
-                                trace, Grounds.of(question, trace), Left.draws(question, plan.stop(), trace)))
+                                trace,
+                                () -> Grounds.of(question, trace),
+                                () -> Left.draws(question, plan.stop(), trace)))
                         .toList(),
                 Comparison.ofFirst(question, plan.settled(), traces));
     }

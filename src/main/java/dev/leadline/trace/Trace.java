@@ -1,7 +1,7 @@
 package dev.leadline.trace;
 
 import dev.leadline.estimate.Accumulator;
-import dev.leadline.estimate.Extremes;
+import dev.leadline.estimate.Outermost;
 import dev.leadline.scheme.Scheme;
 import java.util.List;
 import java.util.Optional;
@@ -12,8 +12,8 @@ import java.util.Optional;
 /// @param scheme as it was run
 /// @param marks oldest first; empty before the first item is in
 /// @param blocks sums of consecutive blocks of draws, at most 64 (see [Blocks])
-/// @param extremes of the draws one by one: outcomes by their weights, control variates likewise, and the weights;
-///     empty where every draw counts 1
+/// @param outermost of the draws one by one, by their weights; empty of splitting, and where all outcomes are
+///     events that count 1
 /// @param outcomes how they lie, of each thing asked; empty for splitting
 /// @param failures the first 20
 /// @param course how the lane comes to its end
@@ -25,7 +25,7 @@ public record Trace(
         Scheme scheme,
         List<Mark> marks,
         List<Accumulator> blocks,
-        Optional<Extremes> extremes,
+        Optional<Outermost> outermost,
         List<Spread> outcomes,
         List<Failure> failures,
         Course course,
@@ -44,11 +44,11 @@ public record Trace(
             Scheme scheme,
             List<Mark> marks,
             List<Accumulator> blocks,
-            Optional<Extremes> extremes,
+            Optional<Outermost> outermost,
             List<Spread> outcomes,
             List<Failure> failures,
             Optional<String> stopReason) {
-        this(lane, scheme, marks, blocks, extremes, outcomes, failures, Course.FIXED, stopReason, Optional.empty());
+        this(lane, scheme, marks, blocks, outermost, outcomes, failures, Course.FIXED, stopReason, Optional.empty());
     }
 
     /// Of a lane whose draws count 1 each.
@@ -65,7 +65,7 @@ public record Trace(
     /// The same beside its audit.
     public Trace beside(Trace plain) {
         return new Trace(
-                lane, scheme, marks, blocks, extremes, outcomes, failures, course, stopReason, Optional.of(plain));
+                lane, scheme, marks, blocks, outermost, outcomes, failures, course, stopReason, Optional.of(plain));
     }
 
     public Optional<Mark> last() {

@@ -4,12 +4,17 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.density.Normal;
 import dev.leadline.estimate.Extremes;
 import dev.leadline.scheme.Independent;
+import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Scheme;
+import dev.leadline.scheme.Share;
 import dev.leadline.trace.Trace;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.TreeMap;
 import org.junit.jupiter.api.Test;
 
 class WeightsTest {
@@ -17,12 +22,14 @@ class WeightsTest {
     private static Trace weighed() {
         var extremes = new Extremes(2);
         extremes.add(new double[][] {{1, 0, 0, 0}, {1, 4, 1, 2}}, 4);
+        extremes.look();
+        var other = new Proposal(new TreeMap<>(Map.of(0, new Normal(0, 2))), Share.NONE, false, List.of());
         return new Trace(
                 "B",
-                Scheme.of(new Independent()),
+                new Scheme(new Independent(), Optional.of(other), List.of()),
                 List.of(),
                 List.of(),
-                Optional.of(extremes),
+                Optional.of(extremes.outermost()),
                 List.of(),
                 List.of(),
                 Optional.empty());

@@ -14,6 +14,7 @@ import dev.leadline.density.Shifted;
 import dev.leadline.density.Student;
 import dev.leadline.density.Uniform;
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Extremes.Floor;
 import dev.leadline.interval.Interval;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
@@ -163,12 +164,13 @@ class WeightsTest {
         for (Share share : new Share[] {new Share(1, 100), TENTH, new Share(1, 2)}) {
             var sampler = Recipe.of(question, Lanes.drawing(Map.of(0, new Normal(30, .5)), share), 3)
                     .sampler();
-            var extremes = sampler.compute(new GrowingItems(share.of()).at(90), () -> false)
+            var extremes = sampler.compute(new GrowingItems(share.of()).at(90), Floor.OPEN, () -> false)
                     .orElseThrow()
                     .extremes()
                     .orElseThrow();
             double limit = 1 / share.value();
-            assertEquals(limit, extremes.greatest(1)[0], 1e-12 * limit);
+            extremes.look();
+            assertEquals(limit, extremes.outermost().weights().greatest()[0], 1e-12 * limit);
         }
     }
 
