@@ -17,7 +17,7 @@ public final class Extremes {
     public static final int KEPT = 4096;
 
     /// Tails are looked at again after so many times the draws.
-    private static final double OFTEN = 1.5;
+    private static final double OFTEN = 2;
 
     private final boolean[] watched;
     private final boolean weighted;
@@ -225,7 +225,7 @@ public final class Extremes {
         }
     }
 
-    /// Looks at the tails, where there are half as many draws again as the last time.
+    /// Looks at the tails, where there are twice the draws of the last time.
     public void follow() {
         if (draws >= OFTEN * looked) {
             look();

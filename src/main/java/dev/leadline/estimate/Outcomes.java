@@ -19,7 +19,7 @@ public final class Outcomes {
     public static final long MOST_KEPT = 4_000_000;
 
     private static final int PLACES = 9;
-    private static final double OFTEN = 1.5;
+    private static final double OFTEN = 2;
 
     private final Landmark landmark;
     private final boolean weighted;
@@ -143,7 +143,7 @@ public final class Outcomes {
     /// function, as far as two standard errors tell.
     public record Jump(double low, double high) {}
 
-    /// Of draws that count 1 each. Looked for where there are half as many draws again as the last time, and at the
+    /// Of draws that count 1 each. Looked for where there are twice the draws of the last time, and at the
     /// end.
     public Optional<Jump> jump(double at) {
         if (!weighted && draws >= OFTEN * looked) {
