@@ -146,7 +146,7 @@ public final class Outcomes {
     /// Of draws that count 1 each. Looked for where there are twice the draws of the last time, and at the
     /// end.
     public Optional<Jump> jump(double at) {
-        if (!weighted && draws >= OFTEN * looked) {
+        if (!weighted && draws > 0 && draws >= OFTEN * looked) {
             looked = draws;
             jump = findJump(at);
         }
