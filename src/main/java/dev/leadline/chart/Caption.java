@@ -72,12 +72,12 @@ public final class Caption {
         var rehearsal = repeated.rehearsal();
         var answer = repeated.answer();
         var sentences = new ArrayList<String>();
-        sentences.add("Intervals of %s repetitions of lane %s (%s), of %s draws each, for %s, ordered by their middles."
+        sentences.add("Intervals of %s repetitions of lane %s (%s), of %s each, for %s, ordered by their middles."
                 .formatted(
                         Typeset.count(rehearsal.repetitions()),
                         rehearsal.lane(),
                         rehearsal.scheme(),
-                        Typeset.count(Math.round(rehearsal.meanDraws())),
+                        RehearsalText.draws(rehearsal),
                         answer.ask().name()));
         sentences.add(RehearsalText.counts(answer));
         sentences.add(RehearsalText.meaning(rehearsal, answer));

@@ -182,11 +182,11 @@ final class RepeatedPicture extends Picture {
         if (placed.isEmpty()) {
             return List.of("no interval yet");
         }
-        String rate = "%s of %s intervals of %,.0f draws hold the value; stated: %s"
+        String rate = "%s of %s intervals of %s hold the value; stated: %s"
                 .formatted(
                         RehearsalText.rate(answer),
                         Typeset.count(answer.bounded()),
-                        repeated.rehearsal().meanDraws(),
+                        RehearsalText.draws(repeated.rehearsal()),
                         Interval.percent(answer.level()));
         return answer.unbounded() == 0
                 ? List.of(rate)

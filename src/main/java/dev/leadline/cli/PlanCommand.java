@@ -14,6 +14,7 @@ import dev.leadline.trace.Answers;
 import java.io.PrintWriter;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.ParseResult;
 
@@ -104,12 +105,17 @@ final class PlanCommand implements Command {
 
     private static void print(Console console, PrintWriter out, LanePlan lane) {
         out.println(console.bold("Lane %s (%s)".formatted(lane.lane(), lane.scheme())));
-        lane.fixed().ifPresent(need -> wrapped(out, "A number fixed beforehand", need));
-        lane.anyTime()
-                .ifPresent(need -> wrapped(
-                        out,
-                        lane.hits().isPresent() ? "Looked at until hits are enough" : "Looked at as one likes",
-                        need));
+        lane.fixed().ifPresent(need -> wrapped(out, "A number fixed beforehand" + ruling(lane, lane.fixed()), need));
+        String looking = lane.hits().isPresent() ? "Looked at until hits are enough" : "Looked at as one likes";
+        lane.anyTime().ifPresent(need -> wrapped(out, looking + ruling(lane, lane.anyTime()), need));
+        if (lane.fixed().isPresent()
+                && ruling(lane, lane.fixed()).isEmpty()
+                && ruling(lane, lane.anyTime()).isEmpty()) {
+            lane.inForce()
+                    .ifPresentOrElse(
+                            need -> wrapped(out, "By the project's rule, " + lane.rule(), need),
+                            () -> out.println("  By the project's rule, %s: cannot be told.".formatted(lane.rule())));
+        }
         lane.lack()
                 .ifPresent(lack ->
                         Wrapped.lines("  ", "Cannot tell yet: " + lack + ".").forEach(out::println));
@@ -119,12 +125,19 @@ final class PlanCommand implements Command {
         lane.notes().forEach(note -> Wrapped.lines("  ", note).forEach(out::println));
     }
 
+    private static String ruling(LanePlan lane, Optional<Need> need) {
+        return lane.inForce().equals(need) ? ", the project's rule" : "";
+    }
+
     private static void wrapped(PrintWriter out, String when, Need need) {
-        String seconds = need.seconds()
+        Wrapped.lines("  ", "%s (%s): %s draws%s.".formatted(when, need.basis(), draws(need), seconds(need)))
+                .forEach(out::println);
+    }
+
+    private static String seconds(Need need) {
+        return need.seconds()
                 .map(passed -> "; %s s on one thread".formatted(RatioText.of(passed)))
                 .orElse("");
-        Wrapped.lines("  ", "%s (%s): %s draws%s.".formatted(when, need.basis(), draws(need), seconds))
-                .forEach(out::println);
     }
 
     private static String draws(Need need) {

@@ -145,11 +145,11 @@ final class RehearseCommand implements Command {
             console.out()
                     .println(console.bold(String.format(
                             Locale.ROOT,
-                            "Lane %s (%s), %,d repetitions of %,.0f draws",
+                            "Lane %s (%s), %,d repetitions of %s",
                             rehearsal.lane(),
                             rehearsal.scheme(),
                             rehearsal.repetitions(),
-                            rehearsal.meanDraws())));
+                            RehearsalText.draws(rehearsal))));
             for (Rehearsed answer : rehearsal.answers()) {
                 if (rehearsal.answers().size() > 1) {
                     console.out().println("  " + answer.ask().name() + ":");

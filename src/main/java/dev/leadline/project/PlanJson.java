@@ -10,8 +10,8 @@ import dev.leadline.study.Planning;
 import java.util.Optional;
 import java.util.OptionalLong;
 
-/// How many draws each lane needs, as the command `plan` prints it. `draws` and `seconds` are those of a
-/// number fixed beforehand; nothing but the seconds depends on a clock.
+/// How many draws each lane needs, as the command `plan` prints it. `draws` and `seconds` are those of the rule in
+/// force; nothing but the seconds depends on a clock.
 public final class PlanJson {
     private PlanJson() {}
 
@@ -36,11 +36,11 @@ public final class PlanJson {
                 .put("lane", lane.lane())
                 .put("scheme", lane.scheme())
                 .put("seen", Json.of(lane.seen()))
-                .put("draws", ComparisonJson.ratio(lane.fixed().map(Need::draws)))
-                .put("seconds", seconds(lane.fixed()))
-                .put("secondsInterval", ComparisonJson.ratio(lane.fixed().flatMap(Need::seconds)))
-                .put("basis", basis(lane.fixed()))
-                .put("anyTime", lane.anyTime().map(PlanJson::anyTime).orElse(new Json.Null()))
+                .put("rule", lane.rule())
+                .put("draws", ComparisonJson.ratio(lane.inForce().map(Need::draws)))
+                .put("seconds", seconds(lane.inForce()))
+                .put("fixed", lane.fixed().map(PlanJson::need).orElse(new Json.Null()))
+                .put("anyTime", lane.anyTime().map(PlanJson::need).orElse(new Json.Null()))
                 .put("hits", whole(lane.hits()))
                 .put("drawsForLimits", whole(lane.limits()))
                 .put("cannotTell", lane.lack().map(Json::of).orElse(new Json.Null()))
@@ -48,7 +48,7 @@ public final class PlanJson {
                 .build();
     }
 
-    private static Json anyTime(Need need) {
+    private static Json need(Need need) {
         return Json.object()
                 .put("draws", ComparisonJson.ratio(Optional.of(need.draws())))
                 .put("seconds", seconds(Optional.of(need)))
@@ -59,10 +59,6 @@ public final class PlanJson {
 
     private static Json seconds(Optional<Need> need) {
         return need.flatMap(Need::seconds).map(Ratio::value).map(Json::of).orElse(new Json.Null());
-    }
-
-    private static Json basis(Optional<Need> need) {
-        return need.map(Need::basis).map(Json::of).orElse(new Json.Null());
     }
 
     private static Json whole(OptionalLong number) {

@@ -44,8 +44,9 @@ public final class RehearsalJson {
                 .put("draws", Json.of(rehearsal.draws()))
                 .put("meanDraws", Json.of(rehearsal.meanDraws()))
                 .put("repetitions", Json.of(rehearsal.repetitions()));
-        rehearsal.met().ifPresent(met -> json.put("met", Json.of(met)));
-        rehearsal.near().ifPresent(near -> json.put("withinTolerance", Json.of(near)));
+        rehearsal
+                .near()
+                .ifPresent(near -> json.put("met", Json.of(rehearsal.met())).put("withinTolerance", Json.of(near)));
         rehearsal.heldTogether().ifPresent(held -> json.put("heldTogether", Json.of(held)));
         return json.put(
                         "answers",

@@ -5,10 +5,11 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Logarithm;
 import dev.leadline.interval.HitsRule;
 import dev.leadline.interval.Ranks;
+import dev.leadline.interval.TwoStage;
 import dev.leadline.model.Ask;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
-import dev.leadline.model.Tolerance;
+import dev.leadline.model.StopRule;
 import dev.leadline.scheme.LatinHypercube;
 import dev.leadline.scheme.Replicated;
 import dev.leadline.trace.Answer;
@@ -24,6 +25,8 @@ import java.util.OptionalLong;
 ///
 /// @param scheme in words
 /// @param seen draws that it is judged by
+/// @param rule word of the stop rule in force
+/// @param inForce under that rule; empty where it cannot be told
 /// @param fixed where their number is chosen beforehand; empty where it cannot be told yet
 /// @param anyTime where one looks until the any-time band is within the tolerance; of a probability with a
 ///     relative tolerance among independent draws, until there are hits enough
@@ -36,12 +39,16 @@ public record LanePlan(
         String lane,
         String scheme,
         long seen,
+        String rule,
+        Optional<Need> inForce,
         Optional<Need> fixed,
         Optional<Need> anyTime,
         OptionalLong hits,
         OptionalLong limits,
         Optional<String> lack,
         List<String> notes) {
+    private static final StopRule ANY_TIME = new StopRule.AnyTime(OptionalLong.empty(), OptionalLong.empty());
+
     public LanePlan {
         notes = List.copyOf(notes);
     }
@@ -49,18 +56,21 @@ public record LanePlan(
     /// @param lane as it was run
     /// @param trace one with a mark
     /// @param timing of its draws, the first of the two that were timed
-    public static LanePlan of(Question question, Lane lane, Trace trace, Optional<Timing> timing) {
+    /// @param stop rule of the plan
+    public static LanePlan of(Question question, Lane lane, Trace trace, Optional<Timing> timing, StopRule stop) {
         var contender = new Contender(question, lane, trace);
         var perDraw = timing.map(Timing::first);
         Optional<Logarithm> uncertain =
                 Need.logarithm(question, contender).filter(log -> log.standardError() > Comparison.MOST_ERROR);
         Optional<Need> fixed = uncertain.isPresent() ? Optional.empty() : Need.of(question, contender, perDraw);
-        Optional<HitsRule> rule = hitsRule(question, contender);
+        Optional<HitsRule> rule = hitsRule(question, contender, ANY_TIME);
         Optional<Need> anyTime = fixed.isEmpty() ? Optional.empty() : Need.anyTime(question, contender, rule, perDraw);
         return new LanePlan(
                 lane.name(),
                 trace.scheme().inWords(),
                 trace.last().orElseThrow().draws(),
+                stop.within(question, contender.scheme()).word(),
+                inForce(question, contender, stop, fixed, anyTime, perDraw),
                 fixed,
                 anyTime,
                 rule.map(HitsRule::hits).map(OptionalLong::of).orElse(OptionalLong.empty()),
@@ -69,14 +79,28 @@ public record LanePlan(
                 notes(contender));
     }
 
-    /// The rule that waits for hits, where it takes the place of the band.
-    private static Optional<HitsRule> hitsRule(Question question, Contender lane) {
-        boolean applies = question.asks().getFirst().estimand() instanceof Estimand.Probability
-                && lane.scheme().isPlain();
-        return question.tolerance()
-                .filter(tolerance -> applies && tolerance.absolute().isEmpty())
-                .map(Tolerance::relative)
-                .flatMap(relative -> HitsRule.of(relative.getAsDouble(), Answers.level(question)));
+    /// The rule that waits for hits, where the rule comes to that.
+    private static Optional<HitsRule> hitsRule(Question question, Contender lane, StopRule rule) {
+        return rule.within(question, lane.scheme()) instanceof StopRule.Hits(long hits)
+                ? Optional.of(new HitsRule(hits, question.level()))
+                : Optional.empty();
+    }
+
+    private static Optional<Need> inForce(
+            Question question,
+            Contender lane,
+            StopRule stop,
+            Optional<Need> fixed,
+            Optional<Need> anyTime,
+            Optional<Logarithm> perDraw) {
+        return fixed.flatMap(_ -> switch (stop.within(question, lane.scheme())) {
+            case StopRule.Fixed _, StopRule.AsymptoticWidth _, StopRule.Stein _ -> fixed;
+            case StopRule.AnyTime _ -> anyTime;
+            case StopRule.Hits _ -> Need.anyTime(question, lane, hitsRule(question, lane, stop), perDraw);
+            case StopRule.TwoStage(long first, double inflation) ->
+                Need.twoStage(question, lane, new TwoStage(question.level(), first, inflation), perDraw);
+            case StopRule.Jcgm101 _ -> Optional.empty();
+        });
     }
 
     /// Of independent draws, which count by their ranks.

@@ -8,6 +8,7 @@ import dev.leadline.interval.Guard;
 import dev.leadline.interval.HitsRule;
 import dev.leadline.interval.Ratio;
 import dev.leadline.interval.Student;
+import dev.leadline.interval.TwoStage;
 import dev.leadline.model.Question;
 import dev.leadline.model.Tolerance;
 import dev.leadline.scheme.Replicated;
@@ -108,6 +109,32 @@ public record Need(String lane, Ratio draws, Optional<Ratio> seconds, String bas
                                     "the band is %.2f times as wide there as the interval for a fixed number",
                                     band.overFixed(needed.value() / each)));
                 });
+    }
+
+    /// The same of two stages, the first of which enters no mean.
+    static Optional<Need> twoStage(Question question, Contender lane, TwoStage rule, Optional<Logarithm> perDraw) {
+        return question.tolerance()
+                .filter(_ -> lane.grows() && lane.spreads())
+                .flatMap(tolerance -> spread(question, tolerance, lane))
+                .map(spread -> {
+                    double each = lane.scheme().drawsPerObservation();
+                    var deviation = Ratio.of(spread.moved(-StrictMath.log(each) / 2), question.confidence());
+                    return timed(
+                            question,
+                            lane,
+                            new DrawsNeeded(
+                                    each * observations(rule, deviation.low()),
+                                    each * observations(rule, deviation.value()),
+                                    each * observations(rule, deviation.high())),
+                            perDraw,
+                            String.format(Locale.ROOT, "with %,d observations of a first stage", rule.first()));
+                });
+    }
+
+    private static double observations(TwoStage rule, double deviation) {
+        return rule.second(deviation, 1)
+                .map(second -> (double) rule.first() + second)
+                .orElse(Double.POSITIVE_INFINITY);
     }
 
     private static Need timed(

@@ -60,7 +60,12 @@ public record Planning(long draws, List<LanePlan> lanes) {
         List<LanePlan> lanes = new ArrayList<>();
         for (int i = 0; i < recipes.size(); i++) {
             var timing = Timing.of(recipes.get(i), draws, recipes.get((i + 1) % recipes.size()), draws, PIECE);
-            lanes.add(LanePlan.of(question, recipes.get(i).lane(), traces.get(i), Optional.of(timing)));
+            lanes.add(LanePlan.of(
+                    question,
+                    recipes.get(i).lane(),
+                    traces.get(i),
+                    Optional.of(timing),
+                    plan.stop().rule()));
         }
         return new Planning(draws, lanes);
     }

@@ -62,7 +62,7 @@ public record RehearsalPlan(Lane lane, List<Stop> stops, int repetitions, long s
         plan.checked();
         return new RehearsalPlan(
                 plan.lanes().getFirst(),
-                List.of(stop.seconds().isPresent() ? fixed(stop.draws()) : stop),
+                List.of(new Stop(stop.rule(), stop.draws(), OptionalDouble.empty())),
                 repetitions,
                 plan.seed(),
                 stop.seconds().isPresent()

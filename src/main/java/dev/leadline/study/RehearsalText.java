@@ -62,7 +62,7 @@ public final class RehearsalText {
     /// What the rate means.
     public static String meaning(Rehearsal rehearsal, Rehearsed answer) {
         String stated = Interval.percent(answer.level());
-        String draws = String.format(Locale.ROOT, "%,.0f draws", rehearsal.meanDraws());
+        String draws = draws(rehearsal);
         return switch (answer.verdict()) {
             case HOLDS ->
                 String.format(
@@ -80,6 +80,14 @@ public final class RehearsalText {
                         .formatted(draws, answer.kind(), stated);
             case NOTHING -> "At %s no repetition has an interval: nothing can be said.".formatted(draws);
         };
+    }
+
+    /// As `100 draws`, or `12,400 draws on average`.
+    public static String draws(Rehearsal rehearsal) {
+        return String.format(
+                Locale.ROOT,
+                rehearsal.meanDraws() == rehearsal.draws() ? "%,.0f draws" : "%,.0f draws on average",
+                rehearsal.meanDraws());
     }
 
     private static String side(Rehearsed answer) {
@@ -137,13 +145,13 @@ public final class RehearsalText {
     public static List<String> further(Rehearsal rehearsal, double confidence) {
         List<String> sentences = new ArrayList<>();
         rehearsal
-                .met()
-                .ifPresent(met -> sentences.add(String.format(
+                .near()
+                .ifPresent(near -> sentences.add(String.format(
                         Locale.ROOT,
                         "%,d of %,d repetitions meet the tolerance; %,d estimates are within it of the value.",
-                        met,
+                        rehearsal.met(),
                         rehearsal.repetitions(),
-                        rehearsal.near().orElseThrow())));
+                        near)));
         rehearsal
                 .heldTogether()
                 .ifPresent(held -> sentences.add(String.format(

@@ -71,7 +71,7 @@ public final class Rehearsing implements AutoCloseable {
     private volatile Throwable fault;
 
     /// What one repetition came to.
-    private record Made(long draws, List<Repetition> answers) {}
+    private record Made(long draws, boolean met, List<Repetition> answers) {}
 
     private record SetUp(Stop stop, Recipe recipe) {}
 
@@ -190,10 +190,22 @@ public final class Rehearsing implements AutoCloseable {
     private Optional<Made> repetition(SetUp setUp, int r) {
         var repeated = setUp.recipe().repeated(plan.seed(), Purpose.REHEARSAL, r);
         return LaneRun.alone(repeated, setUp.stop(), () -> cancelled)
-                .flatMap(Trace::last)
-                .map(mark -> new Made(
-                        mark.draws(),
-                        mark.answers().stream().map(Repetition::of).toList()));
+                .filter(trace -> trace.last().isPresent())
+                .map(this::made);
+    }
+
+    private Made made(Trace trace) {
+        Mark mark = trace.last().orElseThrow();
+        boolean met = question.tolerance()
+                .filter(tolerance ->
+                        trace.course().isMet(tolerance, mark.answers().getFirst()))
+                .isPresent();
+        return new Made(
+                mark.draws(),
+                met,
+                mark.answers().stream()
+                        .map(answer -> Repetition.of(answer, trace.course().judged()))
+                        .toList());
     }
 
     /// @param all rehearsals so far, to which this one is added
@@ -262,6 +274,7 @@ public final class Rehearsing implements AutoCloseable {
                 made.stream().mapToLong(Made::draws).average().orElseThrow(),
                 plan.repetitions(),
                 question.tolerance(),
+                (int) made.stream().filter(Made::met).count(),
                 answers));
         return with;
     }

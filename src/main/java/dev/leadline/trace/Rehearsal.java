@@ -10,10 +10,11 @@ import java.util.stream.IntStream;
 ///
 /// @param lane its name
 /// @param scheme in words
-/// @param draws asked of each repetition
+/// @param draws asked of each repetition; where a rule ends it sooner, the most there may be
 /// @param meanDraws made by the repetitions on average
 /// @param wanted repetitions asked for; fewer are there while it goes on, and where it was cancelled
 /// @param tolerance on the first answer
+/// @param met repetitions that meet it, by the rule they stop by
 /// @param answers one for each thing asked, in order
 public record Rehearsal(
         String lane,
@@ -22,6 +23,7 @@ public record Rehearsal(
         double meanDraws,
         int wanted,
         Optional<Tolerance> tolerance,
+        int met,
         List<Rehearsed> answers) {
     public Rehearsal {
         answers = List.copyOf(answers);
@@ -41,15 +43,6 @@ public record Rehearsal(
                                 .allMatch(answer ->
                                         answer.holds(answer.repetitions().get(r))))
                         .count());
-    }
-
-    /// Repetitions in which the interval of the first answer meets the tolerance; empty without one.
-    public OptionalInt met() {
-        return tolerance
-                .map(asked -> OptionalInt.of((int) first().repetitions().stream()
-                        .filter(one -> asked.met(one.estimate(), one.interval().reach(one.estimate())))
-                        .count()))
-                .orElse(OptionalInt.empty());
     }
 
     /// Repetitions whose first estimate is within the tolerance of the value; empty without one.

@@ -1,14 +1,17 @@
 package dev.leadline.trace;
 
 import dev.leadline.interval.Interval;
+import dev.leadline.trace.Course.Judged;
 
 /// What one answer came to in one repetition of a set-up.
 ///
 /// @param estimate `NaN` where there is none
 /// @param standardError `NaN` where none can be said
 public record Repetition(double estimate, double standardError, Interval interval) {
-    public static Repetition of(Answer answer) {
-        return new Repetition(answer.estimate(), answer.standardError(), answer.interval());
+    /// With what the answer is signed by: of a run that was stopped for what its band showed, the band.
+    public static Repetition of(Answer answer, Judged judged) {
+        var interval = judged == Judged.BAND ? answer.band().orElse(answer.interval()) : answer.interval();
+        return new Repetition(answer.estimate(), answer.standardError(), interval);
     }
 
     /// Whether it has a limit at all.

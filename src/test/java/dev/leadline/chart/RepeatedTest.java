@@ -29,7 +29,7 @@ class RepeatedTest {
                 repetitions);
         return new Repeated(
                 "Invented",
-                new Rehearsal("B", "antithetic", 100, 100, repetitions.size(), Optional.empty(), List.of(answer)),
+                new Rehearsal("B", "antithetic", 100, 100, repetitions.size(), Optional.empty(), 0, List.of(answer)),
                 answer);
     }
 

@@ -151,7 +151,7 @@ class RehearseTest {
         var text = leadline("plan", project, "--lane", "A", "--draws", "20000", "--absolute", "0.5");
         assertEquals(0, text.exitCode(), text.err());
         assertTrue(
-                text.out().contains("A number fixed beforehand (error falls with the root of the draws): "),
+                text.out().contains("A number fixed beforehand, the project's rule (error falls with the root of the"),
                 text.out());
         assertTrue(text.out().contains("Looked at as one likes (the band is "), text.out());
     }

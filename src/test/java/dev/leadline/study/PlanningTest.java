@@ -15,6 +15,7 @@ import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Stop;
+import dev.leadline.model.StopRule;
 import dev.leadline.model.Tolerance;
 import dev.leadline.problem.Refusal;
 import dev.leadline.scheme.Antithetic;
@@ -23,6 +24,7 @@ import dev.leadline.scheme.Scheme;
 import dev.leadline.scheme.ScrambledSobol;
 import dev.leadline.scheme.Scrambling;
 import dev.leadline.stream.Purpose;
+import dev.leadline.trace.Trace;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -58,13 +60,18 @@ class PlanningTest {
 
     private static LanePlan planned(Question question, Points points, long draws, long seed) {
         var lane = Lane.of("A", Scheme.of(points)).within(draws);
+        return LanePlan.of(question, lane, run(question, points, draws, seed), Optional.empty(), new StopRule.Fixed());
+    }
+
+    private static Trace run(Question question, Points points, long draws, long seed) {
+        var lane = Lane.of("A", Scheme.of(points)).within(draws);
         var recipe = Recipe.of(question, lane, seed, Purpose.PILOT);
         try (var workers = new Workers(1)) {
             var run = new LaneRun(recipe, new Stop(draws, OptionalDouble.empty()), workers);
             while (!run.finished()) {
                 run.advance(0);
             }
-            return LanePlan.of(question, lane, run.trace(), Optional.empty());
+            return run.trace();
         } catch (InterruptedException | ExecutionException e) {
             throw new IllegalStateException(e);
         }
@@ -175,6 +182,28 @@ class PlanningTest {
         assertTrue(few.fixed().isEmpty() && few.lack().isPresent(), "no upper limit yet");
     }
 
+    /// Of two stages with 10,000 draws first, inflated by 1.2: 122,217 more for a standard deviation of 100 tolerances
+    /// at 95 % (Hickernell and others 2013).
+    @Test
+    void theRuleInForceIsPlanned() {
+        double sd = Math.sqrt(VARIANCE);
+        var question = growth(absolute(sd / 100));
+        var pilot = run(question, Questions.lane("A").scheme().points(), 65_536, 1);
+        var staged = plan(question, pilot, new StopRule.TwoStage(10_000, 1.2));
+        assertEquals("two-stage", staged.rule());
+        assertEquals(132_217, staged.inForce().orElseThrow().draws().value(), .02 * 132_217);
+        var watched = plan(question, pilot, new StopRule.AnyTime(OptionalLong.empty(), OptionalLong.empty()));
+        assertEquals(watched.anyTime(), watched.inForce());
+        assertEquals(
+                Optional.empty(), plan(question, pilot, new StopRule.Jcgm101(2)).inForce());
+        var fixed = plan(question, pilot, new StopRule.Fixed());
+        assertEquals(fixed.fixed(), fixed.inForce());
+    }
+
+    private static LanePlan plan(Question question, Trace trace, StopRule rule) {
+        return LanePlan.of(question, Questions.lane("A"), trace, Optional.empty(), rule);
+    }
+
     @Test
     void replicatedPointsGoByPowersOfTwo() {
         var plan = planned(growth(absolute(1e-7)), new ScrambledSobol(16, Scrambling.NESTED), 16 * 1024, 1);
@@ -219,7 +248,7 @@ class PlanningTest {
         assertEquals(planned(question, 4096, 1).fixed().orElseThrow().draws(), ofFirst(planning));
         try (var study = Study.start(question, plan, 2, _ -> {})) {
             var trace = study.await().lanes().getFirst().trace();
-            var run = LanePlan.of(question, plan.settled().getFirst(), trace, Optional.empty());
+            var run = LanePlan.of(question, plan.settled().getFirst(), trace, Optional.empty(), new StopRule.Fixed());
             assertTrue(!run.fixed().orElseThrow().draws().equals(ofFirst(planning)), "other draws");
             assertEquals(
                     1,

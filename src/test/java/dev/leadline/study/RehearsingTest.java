@@ -7,10 +7,13 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import dev.leadline.density.Catalogue;
 import dev.leadline.engine.Questions;
 import dev.leadline.estimate.Estimand;
+import dev.leadline.interval.AnyTimeMean;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Stop;
+import dev.leadline.model.StopRule;
+import dev.leadline.model.Tolerance;
 import dev.leadline.problem.Refusal;
 import dev.leadline.scheme.Points;
 import dev.leadline.scheme.Scheme;
@@ -23,6 +26,7 @@ import dev.leadline.trace.Repetition;
 import java.util.List;
 import java.util.Map;
 import java.util.OptionalDouble;
+import java.util.OptionalLong;
 import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.atomic.AtomicReference;
 import org.junit.jupiter.api.Test;
@@ -186,6 +190,44 @@ class RehearsingTest {
         }
         int together = rehearsal.heldTogether().orElseThrow();
         assertTrue(together >= 300 * (.95 - 4 * Rehearsed.mcse(.95, 300)), () -> "held together " + together);
+    }
+
+    /// Stopped at the tenth hit, the exact interval of its draw holds a chance of .01 in .950 of the runs and the
+    /// estimate is without bias, by an independent experiment through items of work.
+    @Test
+    void theRuleOfTheProjectEndsEachRepetition() throws InterruptedException {
+        var rare = new Questions()
+                .uniform("u", 0, 1)
+                .probability("u < .01")
+                .reference(.01)
+                .build();
+        int repetitions = 2000;
+        var stop = new Stop(new StopRule.Hits(10), 1_000_000, OptionalDouble.of(60));
+        var plan = RehearsalPlan.of(new Plan(stop, SEED, List.of(Questions.lane("A"))), List.of(), repetitions);
+        assertTrue(plan.note().isPresent(), "no time limit");
+        var rehearsal = rehearsed(rare, plan, 2).getFirst();
+        var answer = rehearsal.answers().getFirst();
+        assertEquals(.95, answer.rate(), 4 * Rehearsed.mcse(.95, repetitions));
+        assertEquals(0, answer.bias(), 4 * answer.biasMcse());
+        // the wait for ten hits is 1,000 draws on average, with a standard deviation of 315
+        assertEquals(1000, rehearsal.meanDraws(), 4 * 315 / Math.sqrt(repetitions));
+    }
+
+    /// The any-time band is what such a run is signed by: it holds at least as often as it says.
+    @Test
+    void aRunThatIsWatchedIsJudgedByItsBand() throws InterruptedException {
+        var question = growth().to(new Tolerance(OptionalDouble.of(.03), OptionalDouble.empty(), false));
+        int repetitions = 300;
+        var stop = new Stop(
+                new StopRule.AnyTime(OptionalLong.empty(), OptionalLong.empty()), 1_000_000, OptionalDouble.empty());
+        var plan = RehearsalPlan.of(new Plan(stop, SEED, List.of(Questions.lane("A"))), List.of(), repetitions);
+        var rehearsal = rehearsed(question, plan, 2).getFirst();
+        var answer = rehearsal.answers().getFirst();
+        assertEquals(AnyTimeMean.KIND, answer.kind());
+        assertEquals(repetitions, rehearsal.met());
+        assertTrue(answer.rate() >= .95 - 4 * Rehearsed.mcse(.95, repetitions), answer::toString);
+        assertTrue(rehearsal.meanDraws() > 1000 && rehearsal.meanDraws() < 10_000, () -> "" + rehearsal.meanDraws());
+        assertTrue(answer.meanHalfWidth() <= .03);
     }
 
     @Test

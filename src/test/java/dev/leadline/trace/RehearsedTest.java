@@ -119,12 +119,11 @@ class RehearsedTest {
         var one = judged(2, 0, repetition(2.2, .1, 1.9, 2.5), repetition(3, .1, 2.9, 3.1), repetition(2, .1, 1, 3));
         var other = judged(5, 0, repetition(5, .1, 4, 6), repetition(5, .1, 4, 6), repetition(7, .1, 6, 8));
         var tolerance = new Tolerance(OptionalDouble.of(.35), OptionalDouble.empty(), false);
-        var both = new Rehearsal("A", "independent", 10, 10, 3, Optional.of(tolerance), List.of(one, other));
-        assertEquals(OptionalInt.of(2), both.met());
+        var both = new Rehearsal("A", "independent", 10, 10, 3, Optional.of(tolerance), 2, List.of(one, other));
         assertEquals(OptionalInt.of(2), both.near());
         assertEquals(OptionalInt.of(1), both.heldTogether());
-        var alone = new Rehearsal("A", "independent", 10, 10, 3, Optional.empty(), List.of(one));
-        assertEquals(OptionalInt.empty(), alone.met());
+        var alone = new Rehearsal("A", "independent", 10, 10, 3, Optional.empty(), 0, List.of(one));
+        assertEquals(OptionalInt.empty(), alone.near());
         assertEquals(OptionalInt.empty(), alone.heldTogether());
     }
 }
