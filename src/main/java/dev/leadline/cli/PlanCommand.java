@@ -126,7 +126,7 @@ final class PlanCommand implements Command {
     }
 
     private static String ruling(LanePlan lane, Optional<Need> need) {
-        return lane.inForce().equals(need) ? ", the project's rule" : "";
+        return need.isPresent() && lane.inForce().equals(need) ? ", the project's rule" : "";
     }
 
     private static void wrapped(PrintWriter out, String when, Need need) {
