@@ -12,7 +12,7 @@ import java.util.OptionalDouble;
 
 /// Makes what is asked, and the formulas behind it, of their drafts.
 final class Asks {
-    private static final double USUAL_COVERAGE = .95;
+    static final double USUAL_COVERAGE = .95;
 
     private final Draft draft;
     private final Findings findings;
@@ -121,7 +121,8 @@ final class Asks {
                         draft.askPath(k),
                         "a probability is asked of a formula that is no event",
                         "An event is a comparison or made of comparisons: it is true or not.",
-                        "Compare with a limit, as in \"load > 480\"; a part of a formula counts as 1 or 0 in [brackets].");
+                        "Compare with a limit, as in \"load > 480\"; a part of a formula counts as 1 or 0 in"
+                                + " [brackets].");
             }
             formula += draft.asks().get(k).formulas().size();
         }

@@ -25,6 +25,8 @@ public record Sentence(List<Part> parts) {
     /// What a part says.
     public enum Door {
         FORMULA,
+        /// The probability that it is about.
+        LEVEL,
         UNIT,
         INPUTS,
         DEMANDS,
@@ -47,14 +49,14 @@ public record Sentence(List<Part> parts) {
         if (random > 0 || !integral) {
             parts.add(words(", with "));
             String inputs = random == 0 ? "no inputs yet" : random == 1 ? "1 input" : random + " inputs";
-            parts.add(new Part(inputs, Optional.of(Door.INPUTS)));
+            parts.add(door(inputs, Door.INPUTS));
         }
         tolerance(draft).ifPresent(tolerance -> {
             parts.add(words(", to "));
-            parts.add(new Part(tolerance, Optional.of(Door.DEMANDS)));
+            parts.add(door(tolerance, Door.DEMANDS));
         });
         parts.add(words(draft.tolerance().isPresent() ? " at " : ", at "));
-        parts.add(new Part(confidence(draft), Optional.of(Door.DEMANDS)));
+        parts.add(door(confidence(draft), Door.DEMANDS));
         parts.add(words("."));
         return new Sentence(parts);
     }
@@ -63,7 +65,7 @@ public record Sentence(List<Part> parts) {
     public Sentence by(String lane) {
         var by = new ArrayList<>(parts.subList(0, parts.size() - 1));
         by.add(words(", by "));
-        by.add(new Part("lane " + lane, Optional.of(Door.LANE)));
+        by.add(door("lane " + lane, Door.LANE));
         by.add(words("."));
         return new Sentence(by);
     }
@@ -103,27 +105,38 @@ public record Sentence(List<Part> parts) {
     }
 
     private static void ask(Draft draft, AskDraft ask, List<Part> parts) {
-        parts.add(words(
-                switch (ask.estimand()) {
-                    case "probability" -> "chance that ";
-                    case "quantile" -> part(ask.at()) + " quantile of ";
-                    case "tailMean" -> "mean beyond the " + part(ask.at()) + " quantile of ";
-                    default -> ask.words() + " of ";
-                }));
+        switch (ask.estimand()) {
+            case "probability" -> parts.add(words("chance that "));
+            case "quantile" -> {
+                parts.add(door(part(ask.at()), Door.LEVEL));
+                parts.add(words(" quantile of "));
+            }
+            case "tailMean" -> {
+                parts.add(words("mean beyond the "));
+                parts.add(door(part(ask.at()), Door.LEVEL));
+                parts.add(words(" quantile of "));
+            }
+            default -> parts.add(words(ask.words() + " of "));
+        }
         for (int i = 0; i < ask.formulas().size(); i++) {
             if (i > 0) {
                 parts.add(words(" to "));
             }
-            parts.add(new Part(shortened(ask.formulas().get(i)), Optional.of(Door.FORMULA)));
+            parts.add(door(shortened(ask.formulas().get(i)), Door.FORMULA));
         }
         if (isIntegral(ask) && !ranges(draft).isEmpty()) {
             parts.add(words(" over "));
-            parts.add(new Part(and(ranges(draft)), Optional.of(Door.INPUTS)));
+            parts.add(door(and(ranges(draft)), Door.INPUTS));
         }
         String unit = UnitWords.after(ask.unit()).strip();
         if (!unit.isEmpty()) {
             parts.add(words(unit.startsWith("per ") ? " " : " in "));
-            parts.add(new Part(unit, Optional.of(Door.UNIT)));
+            parts.add(door(unit, Door.UNIT));
+        }
+        if (ask.estimand().equals("distribution")) {
+            parts.add(words(" and where "));
+            parts.add(door(percent(ask.coverage().orElse(Asks.USUAL_COVERAGE)), Door.LEVEL));
+            parts.add(words(" of it lies"));
         }
     }
 
@@ -157,6 +170,10 @@ public record Sentence(List<Part> parts) {
             return "a formula still to be written";
         }
         return line.length() <= LONGEST_FORMULA ? line : line.substring(0, LONGEST_FORMULA - 1) + "…";
+    }
+
+    private static Part door(String text, Door to) {
+        return new Part(text, Optional.of(to));
     }
 
     private static Part words(String text) {

@@ -142,6 +142,7 @@ public final class Workbench extends BorderPane {
     private void openDoor(Sentence.Door door) {
         switch (door) {
             case FORMULA -> working.focusFormula();
+            case LEVEL -> working.focusLevel();
             case UNIT -> working.focusUnit();
             case INPUTS -> working.focusInputs();
             case DEMANDS -> working.focusTolerance();

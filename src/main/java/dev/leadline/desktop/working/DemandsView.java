@@ -1,12 +1,14 @@
 package dev.leadline.desktop.working;
 
 import dev.leadline.desktop.style.Styles;
+import dev.leadline.interval.IntervalKind;
 import java.util.ArrayList;
 import java.util.function.Consumer;
 import java.util.function.Supplier;
 import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.CheckBox;
+import javafx.scene.control.ComboBox;
 import javafx.scene.control.Label;
 import javafx.scene.control.Tooltip;
 import javafx.scene.layout.FlowPane;
@@ -21,18 +23,23 @@ final class DemandsView {
     private final Field absolute;
     private final CheckBox both = new CheckBox("both must be met");
     private final Field confidence;
+    private final ComboBox<IntervalKind> interval = new ComboBox<>();
+    private final Field least;
+    private final Field most;
     private final Field draws;
     private final Field seconds;
     private final Field reference;
     private final Field error;
     private final Field source;
     private final Messages toleranceMessages = new Messages();
+    private final Messages intervalMessages = new Messages();
     private final Messages stopMessages = new Messages();
     private final Messages referenceMessages = new Messages();
     private final Fold toleranceFold;
     private final Fold stopFold;
     private final Fold referenceFold;
     private final VBox folds;
+    private boolean showing;
 
     DemandsView(DemandsViewModel model) {
         this.model = model;
@@ -40,6 +47,22 @@ final class DemandsView {
         absolute = field("absolute", "absolute tolerance", "Half-width, in the unit of the answer", 7, model::absolute);
         confidence = field("confidence", "confidence", "Level of the interval, in per cent", 5, model::confidence)
                 .prompt("95");
+        least = field("least", "least outcome", "The least outcome there can be", 6, _ -> bounds());
+        most = field("most", "greatest outcome", "The greatest outcome there can be", 6, _ -> bounds());
+        interval.getItems().setAll(IntervalKind.values());
+        interval.setConverter(new IntervalWords());
+        interval.setId("interval");
+        interval.setAccessibleText("kind of interval");
+        var use = new Tooltip();
+        use.setWrapText(true);
+        use.setMaxWidth(320);
+        interval.setTooltip(use);
+        interval.setOnAction(_ -> {
+            if (!showing && interval.getValue() != null) {
+                model.interval(interval.getValue());
+            }
+        });
+        interval.valueProperty().addListener((_, _, kind) -> use.setText(kind == null ? "" : IntervalWords.use(kind)));
         draws = field("draws", "draws at most", "Evaluations at most, as 1e6", 9, model::draws)
                 .prompt("1000000");
         seconds = field("seconds", "seconds at most", "Seconds of computing at most", 5, model::seconds)
@@ -59,6 +82,9 @@ final class DemandsView {
                         6,
                         flow(pair("\u00b1", relative, "%"), pair("\u00b1", absolute, "absolute"), both),
                         flow(pair("at", confidence, "% confidence")),
+                        flow(pair("by", interval, "")),
+                        flow(pair("outcomes between", least, ""), pair("and", most, "")),
+                        intervalMessages,
                         toleranceMessages));
         stopFold = new Fold(
                 "fold-stop",
@@ -71,6 +97,10 @@ final class DemandsView {
                 "A value to compare the answer with",
                 new VBox(6, flow(pair("", reference, ""), pair("\u00b1", error, "")), source, referenceMessages));
         folds = new VBox(toleranceFold, stopFold, referenceFold);
+    }
+
+    private void bounds() {
+        model.bounds(least.getText(), most.getText());
     }
 
     Node folds() {
@@ -86,6 +116,11 @@ final class DemandsView {
         show(relative, model::relativeText, "$.tolerance.relative");
         show(absolute, model::absoluteText, "$.tolerance.absolute");
         show(confidence, model::confidenceText, "$.confidence");
+        showing = true;
+        interval.setValue(model.interval());
+        showing = false;
+        least.show(model.leastText());
+        most.show(model.mostText());
         show(draws, model::drawsText, "$.stop.draws");
         show(seconds, model::secondsText, "$.stop.seconds");
         show(reference, model::referenceText, "$.reference.value");
@@ -100,12 +135,18 @@ final class DemandsView {
         var tolerance = new ArrayList<>(project.problemsAt("$.tolerance"));
         tolerance.addAll(project.problemsAt("$.confidence"));
         toleranceMessages.show(tolerance);
+        var wished = new ArrayList<>(project.problemsAt("$.interval"));
+        wished.addAll(project.problemsAt("$.bounds"));
+        intervalMessages.show(wished);
+        boolean unbounded = !project.problemsAt("$.bounds").isEmpty();
+        least.showFault(unbounded);
+        most.showFault(unbounded);
         stopMessages.show(project.problemsAt("$.stop"));
         referenceMessages.show(project.problemsAt("$.reference"));
         toleranceFold.summary(model.toleranceSummary());
         stopFold.summary("after " + DemandsViewModel.stopWords(project.draft().get()));
         referenceFold.summary(model.referenceSummary());
-        openWhereFaulty(toleranceFold, !tolerance.isEmpty());
+        openWhereFaulty(toleranceFold, !tolerance.isEmpty() || !wished.isEmpty());
         openWhereFaulty(stopFold, !project.problemsAt("$.stop").isEmpty());
         openWhereFaulty(referenceFold, !project.problemsAt("$.reference").isEmpty());
     }
@@ -134,7 +175,7 @@ final class DemandsView {
         return flow;
     }
 
-    private static HBox pair(String before, Field field, String after) {
+    private static HBox pair(String before, Node field, String after) {
         var box = new HBox(5, label(before), field, label(after));
         box.setAlignment(Pos.CENTER_LEFT);
         return box;

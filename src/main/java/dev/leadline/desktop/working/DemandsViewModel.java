@@ -1,11 +1,15 @@
 package dev.leadline.desktop.working;
 
 import dev.leadline.desktop.style.Figures;
+import dev.leadline.interval.Bounds;
+import dev.leadline.interval.IntervalKind;
 import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.model.Sentence;
+import dev.leadline.problem.Problem;
 import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.Optional;
@@ -17,6 +21,11 @@ public final class DemandsViewModel {
     private static final ToleranceDraft NO_TOLERANCE =
             new ToleranceDraft(OptionalDouble.empty(), OptionalDouble.empty(), Optional.empty());
     private static final StopDraft NOTHING = new StopDraft("", OptionalLong.empty(), OptionalDouble.empty());
+
+    private static final String BOUNDS = "$.bounds";
+
+    /// Between the texts of two fields; in neither.
+    private static final String APART = "\t";
 
     private final ProjectViewModel project;
 
@@ -100,6 +109,67 @@ public final class DemandsViewModel {
 
     String confidenceText() {
         return project.fieldText("$.confidence", inPercent(draft().confidence()));
+    }
+
+    /// Which interval is wanted; the usual one need not be named.
+    void interval(IntervalKind kind) {
+        project.edit("$.interval", d -> {
+            var bounds = d.interval().flatMap(IntervalDraft::bounds);
+            var word = kind == IntervalKind.AUTO ? Optional.<String>empty() : Optional.of(kind.word());
+            return Edits.interval(d, kept(new IntervalDraft(word, bounds)));
+        });
+    }
+
+    IntervalKind interval() {
+        return draft().interval()
+                .flatMap(IntervalDraft::kind)
+                .flatMap(IntervalKind::of)
+                .orElse(IntervalKind.AUTO);
+    }
+
+    /// The least and the greatest outcome there can be: both or none.
+    void bounds(String low, String high) {
+        project.forget(BOUNDS);
+        var least = NumberText.read(low);
+        var most = NumberText.read(high);
+        boolean both = least.isPresent() && most.isPresent();
+        if (both || low.isBlank() && high.isBlank()) {
+            var bounds =
+                    both ? Optional.of(new Bounds(least.getAsDouble(), most.getAsDouble())) : Optional.<Bounds>empty();
+            project.edit(BOUNDS, d -> {
+                var kind = d.interval().flatMap(IntervalDraft::kind);
+                return Edits.interval(d, kept(new IntervalDraft(kind, bounds)));
+            });
+        } else {
+            String faulty = !low.isBlank() && least.isEmpty() ? low : high;
+            var problem = faulty.isBlank() || low.isBlank() && most.isPresent()
+                    ? Problem.of("one of the two bounds is missing")
+                            .because("Every outcome lies between the least and the greatest.")
+                            .tryThis("Write both, or neither.")
+                    : NumberText.problem("bound", faulty);
+            project.unread(BOUNDS, BOUNDS, low + APART + high, problem);
+        }
+    }
+
+    String leastText() {
+        return boundTexts()[0];
+    }
+
+    String mostText() {
+        return boundTexts()[1];
+    }
+
+    private String[] boundTexts() {
+        return project.unreadText(BOUNDS)
+                .map(text -> text.split(APART, -1))
+                .orElseGet(() -> draft().interval()
+                        .flatMap(IntervalDraft::bounds)
+                        .map(b -> new String[] {NumberText.show(b.low()), NumberText.show(b.high())})
+                        .orElse(new String[] {"", ""}));
+    }
+
+    private static Optional<IntervalDraft> kept(IntervalDraft i) {
+        return i.kind().isEmpty() && i.bounds().isEmpty() ? Optional.empty() : Optional.of(i);
     }
 
     void draws(String text) {

@@ -5,6 +5,7 @@ import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.ConstantDraft;
 import dev.leadline.model.Draft.DependenceDraft;
 import dev.leadline.model.Draft.InputDraft;
+import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
@@ -102,6 +103,7 @@ public final class Edits {
             Optional<ReferenceDraft> reference,
             OptionalDouble confidence,
             Optional<ToleranceDraft> tolerance,
+            Optional<IntervalDraft> interval,
             Optional<StopDraft> stop,
             OptionalLong seed) {
         return new Draft(
@@ -116,7 +118,7 @@ public final class Edits {
                 reference,
                 confidence,
                 tolerance,
-                d.interval(),
+                interval,
                 stop,
                 seed,
                 d.commonRandomNumbers(),
@@ -189,23 +191,27 @@ public final class Edits {
     }
 
     static Draft reference(Draft d, Optional<ReferenceDraft> reference) {
-        return demands(d, reference, d.confidence(), d.tolerance(), d.stop(), d.seed());
+        return demands(d, reference, d.confidence(), d.tolerance(), d.interval(), d.stop(), d.seed());
     }
 
     static Draft confidence(Draft d, OptionalDouble confidence) {
-        return demands(d, d.reference(), confidence, d.tolerance(), d.stop(), d.seed());
+        return demands(d, d.reference(), confidence, d.tolerance(), d.interval(), d.stop(), d.seed());
     }
 
     static Draft tolerance(Draft d, Optional<ToleranceDraft> tolerance) {
-        return demands(d, d.reference(), d.confidence(), tolerance, d.stop(), d.seed());
+        return demands(d, d.reference(), d.confidence(), tolerance, d.interval(), d.stop(), d.seed());
+    }
+
+    static Draft interval(Draft d, Optional<IntervalDraft> interval) {
+        return demands(d, d.reference(), d.confidence(), d.tolerance(), interval, d.stop(), d.seed());
     }
 
     static Draft stop(Draft d, Optional<StopDraft> stop) {
-        return demands(d, d.reference(), d.confidence(), d.tolerance(), stop, d.seed());
+        return demands(d, d.reference(), d.confidence(), d.tolerance(), d.interval(), stop, d.seed());
     }
 
     public static Draft seed(Draft d, OptionalLong seed) {
-        return demands(d, d.reference(), d.confidence(), d.tolerance(), d.stop(), seed);
+        return demands(d, d.reference(), d.confidence(), d.tolerance(), d.interval(), d.stop(), seed);
     }
 
     public static <T> List<T> changed(List<T> list, int index, UnaryOperator<T> change) {

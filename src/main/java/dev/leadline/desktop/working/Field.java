@@ -2,6 +2,9 @@ package dev.leadline.desktop.working;
 
 import dev.leadline.desktop.style.Styles;
 import java.util.function.Consumer;
+import javafx.beans.binding.Bindings;
+import javafx.beans.property.SimpleStringProperty;
+import javafx.beans.property.StringProperty;
 import javafx.css.PseudoClass;
 import javafx.scene.control.TextField;
 import javafx.scene.control.Tooltip;
@@ -14,6 +17,7 @@ public final class Field extends TextField {
     private static final int COLUMNS_SEEN = 12;
 
     private final Consumer<String> typed;
+    private final StringProperty tip = new SimpleStringProperty();
     private boolean showing;
 
     /// @param name accessible name
@@ -21,9 +25,14 @@ public final class Field extends TextField {
     /// @param columns width in digits
     public Field(String name, String tip, int columns, Consumer<String> typed, Runnable left) {
         this.typed = typed;
+        this.tip.set(tip);
         setAccessibleText(name);
         var tooltip = new Tooltip();
-        tooltip.textProperty().bind(textProperty().map(text -> text.length() > COLUMNS_SEEN ? text + "\n" + tip : tip));
+        tooltip.textProperty()
+                .bind(Bindings.createStringBinding(
+                        () -> getText().length() > COLUMNS_SEEN ? getText() + "\n" + this.tip.get() : this.tip.get(),
+                        textProperty(),
+                        this.tip));
         setTooltip(tooltip);
         setPrefColumnCount(columns);
         setMinWidth(USE_PREF_SIZE);
@@ -43,6 +52,11 @@ public final class Field extends TextField {
     public Field prompt(String prompt) {
         setPromptText(prompt);
         return this;
+    }
+
+    /// Another word on what belongs here.
+    public void tip(String text) {
+        tip.set(text);
     }
 
     /// Takes what room there is.

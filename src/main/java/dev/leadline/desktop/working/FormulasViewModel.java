@@ -8,6 +8,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.SequencedSet;
 import java.util.function.UnaryOperator;
 import java.util.regex.Pattern;
@@ -21,6 +22,8 @@ import javafx.beans.property.ReadOnlyStringWrapper;
 public final class FormulasViewModel {
     private static final Pattern NAMED =
             Pattern.compile("\\s*([\\p{L}_][\\p{L}\\p{M}\\p{N}_]*)\\s*=(?!=).*", Pattern.DOTALL);
+
+    private static final double USUAL_COVERAGE = .95;
 
     private final ProjectViewModel project;
     private final InputsViewModel inputs;
@@ -58,12 +61,14 @@ public final class FormulasViewModel {
         project.edit("$.steps(" + lines.size() + ")", d -> Edits.steps(d, lines));
     }
 
-    void typeFormula(int i, String text) {
-        editAsk(i, ".formula", a -> a.withFormula(0, text));
+    /// @param formula which of those of the ask, from 0
+    void typeFormula(int i, int formula, String text) {
+        editAsk(i, ".formula[" + formula + "]", a -> a.withFormula(formula, text));
     }
 
     void kind(int i, String estimand) {
         project.settle();
+        project.forget("$.ask");
         editAsk(i, ".estimand", a -> a.asking(estimand));
     }
 
@@ -75,13 +80,55 @@ public final class FormulasViewModel {
         editAsk(i, ".label", a -> a.withLabel(label));
     }
 
+    /// The probability that an answer belongs to, or the part of the outcomes that its intervals hold, in per cent.
+    void part(int i, String text) {
+        boolean covers = covers(i);
+        project.typeOptionalNumber(
+                partPath(i),
+                covers ? "coverage" : "probability",
+                text,
+                (d, value) -> Edits.asks(
+                        d,
+                        Edits.changed(
+                                d.asks(),
+                                i,
+                                a -> covers
+                                        ? a.withCoverage(DemandsViewModel.ofPercent(value))
+                                        : a.withAt(DemandsViewModel.ofPercent(value)))));
+    }
+
+    String partText(int i) {
+        var ask = asks().get(i);
+        var part = covers(i) ? OptionalDouble.of(ask.coverage().orElse(USUAL_COVERAGE)) : ask.at();
+        return project.fieldText(partPath(i), DemandsViewModel.inPercent(part));
+    }
+
+    /// What is wrong with it.
+    List<Problem> partProblems(int i) {
+        return project.problemsAt(partPath(i));
+    }
+
+    private boolean covers(int i) {
+        return asks().get(i).estimand().equals("distribution");
+    }
+
+    private String partPath(int i) {
+        return askPath(i) + (covers(i) ? ".coverage" : ".at");
+    }
+
+    private String askPath(int i) {
+        return asks().size() == 1 ? "$.ask" : "$.ask[" + i + "]";
+    }
+
     void addAsk() {
         project.settle();
+        project.forget("$.ask");
         project.edit("$.ask", d -> Edits.asks(d, Edits.with(d.asks(), new AskDraft("mean", "", "", ""))));
     }
 
     void removeAsk(int i) {
         project.settle();
+        project.forget("$.ask");
         project.edit("$.ask", d -> Edits.asks(d, Edits.without(d.asks(), i)));
     }
 
@@ -104,17 +151,26 @@ public final class FormulasViewModel {
         return faults;
     }
 
-    /// What is wrong in the formula asked at `i`, and in what belongs to it.
-    List<Fault> askFaults(int i) {
-        String place = asks().size() == 1 ? "$.ask" : "$.ask[" + i + "]";
+    /// What is wrong in one of the formulas asked at `i`; in the first, also what belongs to the whole of it.
+    List<Fault> askFaults(int i, int formula) {
+        String place = askPath(i);
+        var ask = asks().get(i);
         return Stream.concat(
-                        project.problemsAt(place).stream(),
+                        project.problemsAt(place).stream()
+                                .filter(p -> formulaOf(p) == formula)
+                                .filter(p -> !p.place().path().equals(partPath(i))),
                         project.problemsAt("$.ask").stream()
                                 .filter(p -> i == 0
+                                        && formula == 0
                                         && asks().size() > 1
                                         && p.place().path().equals("$.ask")))
-                .map(p -> fault(0, asks().get(i).formula(), p))
+                .map(p -> fault(0, ask.formulas().get(formula), p))
                 .toList();
+    }
+
+    /// Which formula of an ask a problem is about.
+    private static int formulaOf(Problem p) {
+        return p.place().path().endsWith(".ratio[1]") ? 1 : 0;
     }
 
     public static Fault fault(int line, String text, Problem p) {

@@ -120,6 +120,11 @@ public final class WorkingPane extends BorderPane {
         asks.getFirst().focusFormula();
     }
 
+    public void focusLevel() {
+        reveal(askRows);
+        asks.stream().filter(AskRow::hasLevel).findFirst().ifPresent(AskRow::focusLevel);
+    }
+
     public void focusUnit() {
         reveal(askRows);
         asks.getFirst().focusUnit();
@@ -198,7 +203,9 @@ public final class WorkingPane extends BorderPane {
                         && !formulas.unknownNames().isEmpty()))
                 .filter(p -> !FormulasViewModel.isInFormulas(p.place())
                         && !p.place().path().matches("\\$\\.(inputs|constants)\\[.*")
-                        && !p.place().path().matches("\\$\\.(tolerance|confidence|stop|reference|dependence).*"))
+                        && !p.place()
+                                .path()
+                                .matches("\\$\\.(tolerance|confidence|interval|bounds|stop|reference|dependence).*"))
                 .toList();
     }
 

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
+import dev.leadline.interval.IntervalKind;
 import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.From;
@@ -71,8 +72,8 @@ class ProjectViewModelTest {
 
     @Test
     void anOlderCheckDoesNotOverwriteANewerOne() {
-        formulas.typeFormula(0, "twice +");
-        formulas.typeFormula(0, "twice");
+        formulas.typeFormula(0, 0, "twice +");
+        formulas.typeFormula(0, 0, "twice");
         assertEquals(2, background.waiting());
         background.finishNext();
         assertEquals(List.of(), project.problems().get());
@@ -83,7 +84,7 @@ class ProjectViewModelTest {
     @Test
     void aPastedFormulaMakesARowOfEachUnknownName() {
         formulas.typeSteps("q = 0.5*rho*v^2\nload = q*area*pi");
-        formulas.typeFormula(0, "max(load, x)");
+        formulas.typeFormula(0, 0, "max(load, x)");
         formulas.makeInputsOfUnknownNames();
         assertEquals(
                 List.of("x", "rho", "v", "area"),
@@ -118,11 +119,68 @@ class ProjectViewModelTest {
 
     @Test
     void aWrongFormulaIsToldWithItsPlace() {
-        formulas.typeFormula(0, "twice + foo");
+        formulas.typeFormula(0, 0, "twice + foo");
         background.finishAll();
-        var fault = formulas.askFaults(0).getFirst();
+        var fault = formulas.askFaults(0, 0).getFirst();
         assertEquals(8, fault.from());
         assertEquals(11, fault.to());
+    }
+
+    @Test
+    void aFaultStandsAtItsFormulaOfARatio() {
+        formulas.kind(0, "ratio");
+        formulas.typeFormula(0, 1, "x + foo");
+        background.finishAll();
+        assertEquals(List.of(), formulas.askFaults(0, 0));
+        assertEquals(4, formulas.askFaults(0, 1).getFirst().from());
+        formulas.typeFormula(0, 1, "x");
+        background.finishAll();
+        assertInstanceOf(ProjectViewModel.Check.Sound.class, project.check().get());
+    }
+
+    @Test
+    void probabilitiesOfQuantilesAreTypedInPerCent() {
+        formulas.kind(0, "quantile");
+        assertEquals("95", formulas.partText(0));
+        formulas.part(0, "99.9");
+        assertEquals(
+                OptionalDouble.of(.999), project.draft().get().asks().getFirst().at());
+        formulas.part(0, "100");
+        background.finishAll();
+        assertEquals(
+                "at is 1 but must be between 0 and 1",
+                formulas.partProblems(0).getFirst().primary());
+        assertEquals(List.of(), formulas.askFaults(0, 0));
+        formulas.part(0, "many");
+        assertEquals("many", formulas.partText(0));
+        formulas.kind(0, "distribution");
+        background.finishAll();
+        assertEquals("95", formulas.partText(0));
+        assertEquals(List.of(), project.problems().get());
+        formulas.part(0, "90");
+        assertEquals(
+                OptionalDouble.of(.9), project.draft().get().asks().getFirst().coverage());
+    }
+
+    @Test
+    void boundsComeInPairs() {
+        demands.interval(IntervalKind.HOEFFDING);
+        background.finishAll();
+        assertEquals("$.interval", project.problems().get().getFirst().place().path());
+        demands.bounds("0", "");
+        assertEquals(
+                "one of the two bounds is missing",
+                project.problemsAt("$.bounds").getFirst().primary());
+        assertEquals("0", demands.leastText());
+        demands.bounds("0", "x");
+        assertTrue(project.problemsAt("$.bounds").getFirst().primary().contains("x"));
+        demands.bounds("0", "2");
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+        assertEquals("2", demands.mostText());
+        demands.interval(IntervalKind.AUTO);
+        demands.bounds("", "");
+        assertTrue(project.draft().get().interval().isEmpty());
     }
 
     @Test
