@@ -119,9 +119,13 @@ final class RunText {
     private void answer(Answer answer) {
         String label = project.question().asks().size() == 1 || answer.label().isEmpty() ? "" : answer.label() + ": ";
         line("  " + label + console.bold(AnswerText.value(answer)) + chance(answer));
+        AnswerText.coverage(answer).ifPresent(coverage -> line("  " + coverage));
         line("  " + AnswerText.interval(answer));
         answer.interval().note().ifPresent(note -> wrapped("  ", note));
-        answer.band().ifPresent(band -> wrapped("  ", AnswerText.band(answer, band)));
+answer.band().ifPresent(band -> wrapped("  ", AnswerText.band(answer, band)));
+        if (answer.provisional()) {
+            line("  provisional: outcomes near it are counted, their exact places are found at the end");
+        }
         if (answer.nonFinite() > 0) {
             line("  over finite evaluations only");
         }

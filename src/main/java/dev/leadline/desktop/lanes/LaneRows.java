@@ -7,7 +7,7 @@ import dev.leadline.desktop.style.Figures;
 import dev.leadline.model.LaneDraft;
 import dev.leadline.model.Tolerance;
 import dev.leadline.model.UnitWords;
-import dev.leadline.numeric.Rounding;
+import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
 import dev.leadline.study.StudyState.Activity;
 import dev.leadline.trace.Answer;
@@ -92,29 +92,20 @@ final class LaneRows {
     private static Row row(
             int i, LaneDraft draft, LaneLook look, State.Shown shown, LaneState lane, Answer a, int k, int answers) {
         boolean first = k == 0;
-        double half = a.interval().halfWidth();
-        boolean whole = Double.isFinite(a.estimate()) && half > 0 && Double.isFinite(half);
-        var text = Rounding.of(a.estimate(), whole ? half : Double.NaN);
         String name = answers == 1 ? "" : a.label().isBlank() ? "answer " + (k + 1) : a.label();
         String unit = answers == 1 ? "" : UnitWords.after(a.unit()).strip();
+        var cells = AnswerText.cells(a);
         return new Row(
                 i,
                 first ? draft.name() : "",
                 look,
                 first ? SchemeWords.of(draft) : "",
                 name,
-                (whole ? text.value() : alone(a)) + (unit.isEmpty() ? "" : " " + unit),
-                whole ? uncertainty(a, text) : "",
+                cells.value() + (unit.isEmpty() ? "" : " " + unit),
+                cells.plusMinus() + (a.provisional() ? ", provisional" : ""),
                 first ? Figures.count(lane.trace().last().orElseThrow().draws()) : "",
                 first ? left(shown, lane, a) : "",
                 first ? why(draft, shown, lane) : "");
-    }
-
-    /// The half-width; both limits where one lies much farther off than the other.
-    private static String uncertainty(Answer a, Rounding text) {
-        return a.interval().lopsided(a.estimate())
-                ? text.down(a.interval().low()) + " to " + text.up(a.interval().high())
-                : text.uncertainty().orElse("");
     }
 
     /// What the head of the column of values says.
@@ -128,10 +119,6 @@ final class LaneRows {
         return asks.size() > 1 || unit.isEmpty()
                 ? "value"
                 : unit.startsWith("per ") ? "value " + unit : "value, " + unit;
-    }
-
-    private static String alone(Answer a) {
-        return Double.isFinite(a.estimate()) ? Figures.number(a.estimate()) : "none yet";
     }
 
     private static String left(State.Shown shown, LaneState lane, Answer a) {

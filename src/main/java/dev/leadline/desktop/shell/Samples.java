@@ -25,7 +25,7 @@ final class Samples {
         TITLES.put("berth-delay", "Berth delay: a heavy tail, and inputs from data");
         TITLES.put("dredging-volume", "Dredging volume: an integral over an area");
         TITLES.put("tide-gauge", "Tide gauge: a correction and its uncertainty");
-        TITLES.put("ferry-fuel", "Ferry fuel: inputs that go together");
+        TITLES.put("ferry-fuel", "Ferry fuel: a quantile, inputs that go together");
         TITLES.put("spare-parts", "Spare parts: whole numbers");
         TITLES.put("quay-lighting", "Quay lighting: a smooth integral");
     }
