@@ -4,6 +4,7 @@ import dev.leadline.interval.Interval;
 import dev.leadline.model.Sentence;
 import dev.leadline.model.Tolerance;
 import dev.leadline.numeric.Rounding;
+import dev.leadline.study.AnswerText;
 import dev.leadline.study.RehearsalText;
 import java.util.ArrayList;
 import java.util.List;
@@ -18,6 +19,9 @@ public final class Caption {
         var sentences = new ArrayList<String>();
         sentences.add("Running estimate of " + settling.quantity() + " against the number of draws.");
         settling.lanes().forEach(lane -> sentences.add(of(lane, settling)));
+        if (settling.lanes().stream().anyMatch(Series::banded)) {
+            sentences.add("Outer band, dotted: any-time band, which holds at every look.");
+        }
         settling.reference().ifPresent(reference -> {
             String error = reference.error() > 0 ? " ± " + Typeset.number(reference.error(), 2) : "";
             sentences.add("Dash-dotted: reference value "
@@ -55,6 +59,29 @@ public final class Caption {
                         + Typeset.quantity(Typeset.number(width, 3), decay.unit()) + "."));
         sentences.add("Seed " + decay.seed() + ".");
         sentences.add("The intervals cover sampling error only.");
+        return String.join(" ", sentences);
+    }
+
+    public static String of(Outcomes outcomes) {
+        var sentences = new ArrayList<String>();
+        sentences.add("How the outcomes of %s lie.".formatted(outcomes.formula().strip()));
+        for (var lane : outcomes.lanes()) {
+            sentences.add("Lane %s (%s): %s."
+                    .formatted(
+                            lane.lane(),
+                            lane.scheme(),
+                            lane.answer().map(AnswerText::value).orElse("no draws yet")));
+            lane.answer().flatMap(AnswerText::coverage).ifPresent(text -> sentences.add(text + "."));
+        }
+        if (Outcomes.isOnScale(outcomes.estimand())) {
+            sentences.add("Upright lines: the answer of each lane, with its interval.");
+        }
+        if (outcomes.covered().isPresent()) {
+            sentences.add(
+                    "Brackets: where the outcomes lie, symmetric solid, shortest dashed; they are no intervals of the"
+                            + " mean.");
+        }
+        sentences.add("Seed " + outcomes.seed() + ".");
         return String.join(" ", sentences);
     }
 
@@ -130,6 +157,9 @@ public final class Caption {
         text.append(", after ").append(Typeset.count(point.draws())).append(" draws");
         if (lane.withoutHit()) {
             text.append(" without a hit");
+        }
+        if (lane.provisional()) {
+            text.append(", provisional");
         }
         if (lane.nonFinite() > 0) {
             text.append(", over finite evaluations only (")

@@ -14,7 +14,8 @@ import java.util.stream.DoubleStream;
 /// in which the interval was at most five times as long as it is now. So the latest interval takes about a fifth of
 /// the height, whatever the first ones were and however fast the scheme settles: wild early intervals leave the
 /// picture above and below instead of flattening it, while a jump of the estimate in the later part stays in sight.
-/// The strip of the tolerance and the reference value are taken in where that does not more than double the height;
+/// The strip of the tolerance, the latest any-time band and the reference value are taken in where that does not more
+/// than double the height;
 /// a reference value farther away is named in the key instead. The range is then widened to half steps of the axis,
 /// so that it does not tremble with every new mark, but not far below 0 where nothing is negative.
 final class Framing {
@@ -90,6 +91,11 @@ final class Framing {
     private static List<Range> wishes(Settling settling, Optional<List<Double>> reference) {
         var wishes = new ArrayList<Range>();
         settling.strip().ifPresent(wishes::add);
+        hull(settling.lanes().stream()
+                        .flatMap(lane -> lane.last().stream())
+                        .flatMapToDouble(point -> DoubleStream.of(point.bandLow(), point.bandHigh())))
+                .filter(_ -> settling.lanes().stream().anyMatch(Series::banded))
+                .ifPresent(wishes::add);
         reference.flatMap(r -> hull(r.stream().mapToDouble(v -> v))).ifPresent(wishes::add);
         return wishes;
     }

@@ -21,6 +21,18 @@ final class Legend {
         /// An interval on its own, with a mark at its end or without.
         record Upright(LaneLook look, boolean marked) implements Of {}
 
+        /// The any-time band outside an interval.
+        record Band(LaneLook look) implements Of {}
+
+        /// How outcomes lie.
+        record Spread(LaneLook look) implements Of {}
+
+        /// Where an answer lies among outcomes, with its interval.
+        record Place(LaneLook look) implements Of {}
+
+        /// A coverage interval of outcomes.
+        record Bracket(boolean shortest) implements Of {}
+
         record ReferenceLine() implements Of {}
 
         record Strip() implements Of {}
@@ -36,7 +48,16 @@ final class Legend {
         int sample() {
             return switch (of) {
                 case Of.Remark _ -> 0;
-                case Of.Lane _, Of.Trail _, Of.Upright _, Of.ReferenceLine _, Of.Strip _, Of.Below _ -> SAMPLE + GAP;
+                case Of.Lane _,
+                        Of.Trail _,
+                        Of.Upright _,
+                        Of.Band _,
+                        Of.Spread _,
+                        Of.Place _,
+                        Of.Bracket _,
+                        Of.ReferenceLine _,
+                        Of.Strip _,
+                        Of.Below _ -> SAMPLE + GAP;
             };
         }
     }

@@ -2,6 +2,7 @@ package dev.leadline.chart;
 
 import java.awt.AlphaComposite;
 import java.awt.BasicStroke;
+import java.awt.Color;
 import java.awt.Font;
 import java.awt.Graphics2D;
 import java.awt.RenderingHints;
@@ -30,7 +31,8 @@ import org.jfree.chart.ui.RectangleInsets;
 ///
 /// Confined to one thread at a time, because the axes of the charting library are; nothing in it changes after it was
 /// made.
-public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture, WeightsPicture, RepeatedPicture {
+public abstract sealed class Picture
+        permits SettlingPicture, ErrorDecayPicture, OutcomesPicture, WeightsPicture, RepeatedPicture {
     /// Smallest size in which every label still has room.
     public static final int LEAST_WIDTH = 240;
 
@@ -110,6 +112,7 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture,
         return switch (subject) {
             case Settling settling -> new SettlingPicture(settling, view, theme, width, height);
             case Repeated repeated -> new RepeatedPicture(repeated, view, theme, width, height);
+            case Outcomes outcomes -> new OutcomesPicture(outcomes, view, theme, width, height);
             case Weights weights -> new WeightsPicture(weights, view, theme, width, height);
             case ErrorDecay decay -> new ErrorDecayPicture(decay, view, theme, width, height);
         };
@@ -314,6 +317,25 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture,
         return space;
     }
 
+    /// Of the coverage intervals of outcomes.
+    static BasicStroke bracketStroke(boolean shortest) {
+        return shortest
+                ? new BasicStroke(2, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND, 1, new float[] {5, 3}, 0)
+                : new BasicStroke(2);
+    }
+
+    final int fontSize() {
+        return font.getSize();
+    }
+
+    static BasicStroke outerStroke() {
+        return new BasicStroke(1, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND, 1, new float[] {1.5f, 2.5f}, 0);
+    }
+
+    static Color faint(Color c) {
+        return new Color(c.getRed(), c.getGreen(), c.getBlue(), 170);
+    }
+
     static BasicStroke dashDot() {
         return new BasicStroke(1.4f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND, 1, DASH_DOT, 0);
     }
@@ -347,6 +369,13 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture,
             g.draw(trail(of));
         }
 
+        /// Fine dots, lighter than the edge of the interval inside.
+        void outerEdge(Graphics2D g, ToDoubleFunction<Point> of) {
+            g.setColor(faint(theme.of(look)));
+            g.setStroke(outerStroke());
+            g.draw(trail(of));
+        }
+
         void line(Graphics2D g, ToDoubleFunction<Point> of) {
             g.setColor(theme.of(look));
             g.setStroke(look.line());
@@ -373,7 +402,7 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture,
         }
     }
 
-    private void marker(Graphics2D g, LaneLook look, double x, double y) {
+    final void marker(Graphics2D g, LaneLook look, double x, double y) {
         var shape = AffineTransform.getTranslateInstance(x, y).createTransformedShape(look.marker(MARKER));
         g.setColor(theme.ground());
         g.setStroke(new BasicStroke(2.4f));
@@ -430,6 +459,38 @@ public abstract sealed class Picture permits SettlingPicture, ErrorDecayPicture,
                 if (marked) {
                     marker(g, look, x, middle - 4);
                 }
+            }
+            case Legend.Of.Spread(var look) -> {
+                g.setColor(theme.band(look, 1));
+                g.fill(box);
+                g.setColor(theme.of(look));
+                g.setStroke(look.edge());
+                g.draw(box);
+            }
+            case Legend.Of.Band(var look) -> {
+                g.setColor(theme.band(look, .5));
+                g.fill(box);
+                g.setColor(faint(theme.of(look)));
+                g.setStroke(outerStroke());
+                g.draw(new Line2D.Double(from, middle - 6, to, middle - 6));
+                g.draw(new Line2D.Double(from, middle + 6, to, middle + 6));
+            }
+            case Legend.Of.Place(var look) -> {
+                double x = (from + to) / 2;
+                g.setColor(theme.band(look, 2));
+                g.fill(new Rectangle2D.Double(x - 7, middle - 7, 14, 14));
+                g.setColor(theme.of(look));
+                g.setStroke(look.line());
+                g.draw(new Line2D.Double(x, middle - 7, x, middle + 7));
+                marker(g, look, x, middle);
+            }
+            case Legend.Of.Bracket(boolean shortest) -> {
+                g.setColor(theme.coverage());
+                g.setStroke(bracketStroke(shortest));
+                g.draw(new Line2D.Double(from, middle, to, middle));
+                g.setStroke(new BasicStroke(2));
+                g.draw(new Line2D.Double(from, middle - 5, from, middle + 5));
+                g.draw(new Line2D.Double(to, middle - 5, to, middle + 5));
             }
             case Legend.Of.Below _ -> {
                 g.setColor(theme.strip());

@@ -20,6 +20,12 @@ public enum PictureKind {
             return ErrorDecay.of(question, plan, traces);
         }
     },
+    OUTCOMES("Outcomes", "outcomes", "how the outcomes lie, and where the answer and its intervals lie among them") {
+        @Override
+        public Subject of(Question question, Plan plan, List<Trace> traces) {
+            return Outcomes.of(question, plan, traces);
+        }
+    },
     WEIGHTS("Weights", "weights", "the largest weights of draws from other densities") {
         @Override
         public Subject of(Question question, Plan plan, List<Trace> traces) {

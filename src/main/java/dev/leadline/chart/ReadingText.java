@@ -23,10 +23,13 @@ final class ReadingText {
             return Significant.text(p.estimate(), DIGITS) + in + after;
         }
         var text = Rounding.of(p.estimate(), half);
+        String band = Double.isFinite(p.bandHigh() - p.bandLow())
+                ? ", any-time band " + text.down(p.bandLow()) + " to " + text.up(p.bandHigh())
+                : "";
         if (Interval.lopsided(p.estimate(), p.low(), p.high())) {
-            return text.value() + in + ", between " + text.down(p.low()) + " and " + text.up(p.high()) + after;
+            return text.value() + in + ", between " + text.down(p.low()) + " and " + text.up(p.high()) + band + after;
         }
-        return text.value() + " ± " + text.uncertainty().orElse("") + in + after;
+        return text.value() + " ± " + text.uncertainty().orElse("") + in + band + after;
     }
 
     /// As `± .7e-5 per year after 1,120,000 draws`.
@@ -59,6 +62,20 @@ final class ReadingText {
                         text.down(p.low()),
                         text.up(p.high()),
                         one.missed() ? "misses the value" : "holds the value");
+    }
+
+    /// As `2.3 % of the outcomes from 3.1 to 3.2 mm, 45 % up to there`.
+    static String ofOutcomes(Outcomes.Lying lane, int at, String unit) {
+        var bar = lane.bars().get(at);
+        String place = lane.discrete()
+                ? "are " + Significant.text(bar.from(), DIGITS)
+                : "from " + Significant.text(bar.from(), 4) + " to " + Significant.text(bar.to(), 4);
+        return "%s %% of the outcomes %s%s, %s %% up to there"
+                .formatted(
+                        Significant.text(100 * bar.chance(), 3),
+                        place,
+                        UnitWords.after(unit),
+                        Significant.text(100 * lane.upTo(at), 4));
     }
 
     private static String after(Point p) {

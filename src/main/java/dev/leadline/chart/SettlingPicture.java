@@ -41,6 +41,13 @@ final class SettlingPicture extends Picture {
         if (!entries.isEmpty()) {
             entries.add(new Legend.Entry(new Legend.Of.Remark(), Interval.percent(settling.level()) + " intervals"));
         }
+        for (int i = 0; i < settling.lanes().size(); i++) {
+            if (settling.lanes().get(i).banded()) {
+                entries.add(new Legend.Entry(
+                        new Legend.Of.Band(LaneLook.values()[i]), "any-time band: holds at every look"));
+                break;
+            }
+        }
         settling.reference()
                 .ifPresent(reference -> entries.add(new Legend.Entry(
                         new Legend.Of.ReferenceLine(),
@@ -108,6 +115,10 @@ final class SettlingPicture extends Picture {
         });
         drawReference(g);
         lanes.forEach(lane -> {
+            lane.outerEdge(g, Point::bandLow);
+            lane.outerEdge(g, Point::bandHigh);
+        });
+        lanes.forEach(lane -> {
             lane.edge(g, Point::low);
             lane.edge(g, Point::high);
         });
@@ -138,6 +149,9 @@ final class SettlingPicture extends Picture {
         }
         for (var lane : settling.lanes()) {
             remark(lane).ifPresent(remarks::add);
+            if (lane.provisional()) {
+                remarks.add("lane " + lane.lane() + ": provisional, exact places are found at the end");
+            }
             if (lane.nonFinite() > 0) {
                 remarks.add("lane " + lane.lane() + ": over finite evaluations only, " + Typeset.count(lane.nonFinite())
                         + " left out");

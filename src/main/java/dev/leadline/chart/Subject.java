@@ -1,7 +1,7 @@
 package dev.leadline.chart;
 
 /// What a picture shows of a run: plain data, immutable.
-public sealed interface Subject permits Settling, ErrorDecay, Weights, Repeated {
+public sealed interface Subject permits Settling, ErrorDecay, Outcomes, Weights, Repeated {
     /// Of the question.
     String title();
 

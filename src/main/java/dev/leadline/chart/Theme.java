@@ -11,6 +11,7 @@ import java.util.List;
 /// @param ink for names and figures
 /// @param quiet for labels along the axes
 /// @param grid for lines that only guide the eye
+/// @param coverage coverage intervals of outcomes, which are no intervals of an estimate
 /// @param strip fill of the strip of the numerical tolerance
 /// @param lanes one for each [LaneLook]
 /// @param fill opacity of an interval's band, from 0 to 1
@@ -21,6 +22,7 @@ public record Theme(
         Color grid,
         Color axis,
         Color reference,
+        Color coverage,
         Color strip,
         Color stripEdge,
         List<Color> lanes,
@@ -34,6 +36,7 @@ public record Theme(
             new Color(0xE9EDEF),
             new Color(0x8C9AA2),
             new Color(0x465769),
+            new Color(0x96226B),
             new Color(0xFBF5E1),
             new Color(0x846818),
             List.of(new Color(0x0F6E75), new Color(0xB04A10), new Color(0x6A3FA0), new Color(0x546A10)),
@@ -46,6 +49,7 @@ public record Theme(
             new Color(0x273037),
             new Color(0x5F6E77),
             new Color(0xB3C3D1),
+            new Color(0xEC8FC4),
             new Color(0x2E2A1B),
             new Color(0xB99A45),
             List.of(new Color(0x4DB8BF), new Color(0xF0935A), new Color(0xBFA2EE), new Color(0xABC656)),

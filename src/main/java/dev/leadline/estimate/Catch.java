@@ -29,7 +29,7 @@ public final class Catch {
                 .toList();
         this.finite = new double[block];
         this.sizes = new double[weighted ? block : 0];
-        this.histogram = new Histogram(landmark.from(), landmark.to());
+        this.histogram = new Histogram(landmark.sight().low(), landmark.sight().high());
     }
 
     private Catch(Catch other) {
@@ -101,7 +101,7 @@ public final class Catch {
 
     public void clear() {
         caught.forEach(Caught::clear);
-        histogram = new Histogram(landmark.from(), landmark.to());
+        histogram = new Histogram(landmark.sight().low(), landmark.sight().high());
         draws = 0;
         weight = 0;
     }

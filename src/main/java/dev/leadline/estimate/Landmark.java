@@ -12,15 +12,51 @@ import java.util.List;
 /// @param centre the mean of the pilot draws
 /// @param level near the quantile that is asked for; `NaN` where none is
 /// @param windows where outcomes are kept, from low to high; none where only moments count
-public record Landmark(int draws, double from, double to, double centre, double level, List<Window> windows) {
+/// @param sight where a picture shows outcomes: most of them, and well beyond a quantile that is asked for
+public record Landmark(
+        int draws, double from, double to, double centre, double level, List<Window> windows, Sight sight) {
     /// Standard errors of the pilot's shares, on either side of what is sought, that a window reaches.
     private static final double REACH = 8;
 
     /// Of a thing asked of which nothing need be known beforehand.
-    public static final Landmark NONE = new Landmark(0, Double.NaN, Double.NaN, 0, Double.NaN, List.of());
+    public static final Landmark NONE =
+            new Landmark(0, Double.NaN, Double.NaN, 0, Double.NaN, List.of(), new Sight(Double.NaN, Double.NaN));
 
     public Landmark {
         windows = List.copyOf(windows);
+    }
+
+    /// A stretch of outcomes.
+    ///
+    /// @param low `NaN` where there are none
+    public record Sight(double low, double high) {
+        /// Share of the outcomes on either side that may lie outside.
+        private static final double RARE = .002;
+
+        /// Of the length of the rest: a side no longer than this is shown to its end.
+        private static final double SHORT = .75;
+
+        /// Of the part beyond a quantile that is asked for, what may lie outside.
+        private static final double BEYOND = .1;
+
+        private static Sight of(Weighed sorted, Estimand estimand) {
+            double rare = switch (estimand) {
+                case Estimand.Quantile(double at) -> Math.min(RARE, BEYOND * Math.min(at, 1 - at));
+                case Estimand.TailMean(double at) -> Math.min(RARE, BEYOND * (1 - at));
+                case Estimand.Distribution(double coverage) -> Math.min(RARE, BEYOND * (1 - coverage));
+                case Estimand.Mean _,
+                        Estimand.Integral _,
+                        Estimand.Probability _,
+                        Estimand.Ratio _,
+                        Estimand.StandardDeviation _ -> RARE;
+            };
+            double from = sorted.value(0);
+            double to = sorted.value(sorted.size() - 1);
+            double low = sorted.reach(rare, 0);
+            double high = sorted.reach(1 - rare, 0);
+            double near = high > low ? SHORT * (high - low) : Double.POSITIVE_INFINITY;
+            return new Sight(from >= low - near ? from : low, to <= high + near ? to : high);
+        }
     }
 
     /// Outcomes that are kept: `low <= x <= high`.
@@ -30,7 +66,7 @@ public record Landmark(int draws, double from, double to, double centre, double 
 
     /// The same with other windows.
     Landmark with(List<Window> others) {
-        return new Landmark(draws, from, to, centre, level, others);
+        return new Landmark(draws, from, to, centre, level, others, sight);
     }
 
     /// So many pilot draws show what the estimand needs: 200 beyond a quantile, as far as a million draws have them.
@@ -63,14 +99,22 @@ public record Landmark(int draws, double from, double to, double centre, double 
     public static Landmark of(Estimand estimand, double[] outcomes, double[] weights) {
         var sorted = Weighed.of(outcomes, weights);
         if (sorted.size() == 0) {
-            return new Landmark(outcomes.length, Double.NaN, Double.NaN, 0, 0, everything(estimand, 0, 0));
+            return new Landmark(
+                    outcomes.length,
+                    Double.NaN,
+                    Double.NaN,
+                    0,
+                    0,
+                    everything(estimand, 0, 0),
+                    new Sight(Double.NaN, Double.NaN));
         }
         double from = sorted.value(0);
         double to = sorted.value(sorted.size() - 1);
         double centre = sorted.mean();
+        var sight = Sight.of(sorted, estimand);
         return switch (estimand) {
-            case Estimand.Quantile(double at) -> near(outcomes.length, sorted, from, to, centre, at);
-            case Estimand.TailMean(double at) -> near(outcomes.length, sorted, from, to, centre, at);
+            case Estimand.Quantile(double at) -> near(outcomes.length, sorted, from, to, centre, at, sight);
+            case Estimand.TailMean(double at) -> near(outcomes.length, sorted, from, to, centre, at, sight);
             case Estimand.Distribution(double coverage) -> {
                 double low = sorted.reach(1 - coverage, REACH);
                 double high = sorted.reach(coverage, -REACH);
@@ -84,14 +128,15 @@ public record Landmark(int draws, double from, double to, double centre, double 
                                 ? everything(estimand, from, to)
                                 : List.of(
                                         new Window(Double.NEGATIVE_INFINITY, low, from, low),
-                                        new Window(high, Double.POSITIVE_INFINITY, high, to)));
+                                        new Window(high, Double.POSITIVE_INFINITY, high, to)),
+                        sight);
             }
             case Estimand.Mean _,
                     Estimand.Integral _,
                     Estimand.Probability _,
                     Estimand.Ratio _,
                     Estimand.StandardDeviation _ ->
-                new Landmark(outcomes.length, from, to, centre, Double.NaN, List.of());
+                new Landmark(outcomes.length, from, to, centre, Double.NaN, List.of(), sight);
         };
     }
 
@@ -107,7 +152,8 @@ public record Landmark(int draws, double from, double to, double centre, double 
         };
     }
 
-    private static Landmark near(int draws, Weighed sorted, double from, double to, double centre, double at) {
+    private static Landmark near(
+            int draws, Weighed sorted, double from, double to, double centre, double at, Sight sight) {
         double low = sorted.reach(at, -REACH);
         double high = sorted.reach(at, REACH);
         return new Landmark(
@@ -116,7 +162,8 @@ public record Landmark(int draws, double from, double to, double centre, double 
                 to,
                 centre,
                 sorted.reach(at, 0),
-                List.of(new Window(low, high, Math.max(low, from), Math.min(high, to))));
+                List.of(new Window(low, high, Math.max(low, from), Math.min(high, to))),
+                sight);
     }
 
     /// Pilot outcomes in rising order with their weights.

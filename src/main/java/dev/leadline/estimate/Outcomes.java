@@ -42,7 +42,7 @@ public final class Outcomes {
         this.ranks = new ArrayList<>(landmark.windows().stream()
                 .map(window -> new InOrder(window, weighted, most))
                 .toList());
-        this.histogram = new Histogram(landmark.from(), landmark.to());
+        this.histogram = new Histogram(landmark.sight().low(), landmark.sight().high());
     }
 
     public void merge(Catch item) {

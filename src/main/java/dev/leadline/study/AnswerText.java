@@ -40,7 +40,8 @@ public final class AnswerText {
         boolean covers = answer.coverage().isPresent();
         facts.add((isBounded(answer) && !covers ? answer.interval().percent() + ", " : "") + "lane " + lane);
         if (covers && isBounded(answer)) {
-            facts.add("the mean is " + mean(answer) + " with " + answer.interval().percent() + " confidence");
+            facts.add(
+                    "the mean is " + mean(answer) + " with " + answer.interval().percent() + " confidence");
         }
         if (answer.hits().orElse(1) == 0) {
             facts.add("no hit in " + draws(answer));
@@ -60,9 +61,10 @@ public final class AnswerText {
         return core(answer) + facts;
     }
 
-    /// As `1.257e-5 ± 0.030e-5 per year`; both limits where the interval is lopsided, one where no more can be said; of
-    /// a distribution its standard uncertainty and where the outcomes lie, as `3.2 mm, u = 2.0 mm, 95 % of outcomes in
-    /// [-0.9, 6.4] mm`; of a quantile whose limits are the value itself `16 (the interval contains only 16)`.
+    /// As `1.257e-5 ± 0.030e-5 per year`; both limits where the interval is lopsided, one where no more can be
+    /// said. Of a distribution its standard uncertainty and where the outcomes lie, as `3.2 mm, u = 2.0 mm,
+    /// 95 % of outcomes in [-0.9, 6.4] mm`; of a quantile whose limits are the value itself
+    /// `16 (the interval contains only 16)`.
     public static String value(Answer answer) {
         return isOneValue(answer)
                 ? core(answer) + " (" + ONLY + Significant.text(answer.estimate(), ALL_DIGITS) + ")"
@@ -100,8 +102,8 @@ public final class AnswerText {
                 : rounding.value() + ", between " + low + " and " + rounding.up(interval.high()) + unit;
     }
 
-    /// Its limits are outcomes: where they are whole numbers they are written so, and where they do not exist that is
-    /// said.
+    /// Its limits are outcomes: where they are whole numbers they are written so, and where they do not exist
+    /// that is said.
     private static String quantile(Answer answer) {
         String unit = UnitWords.after(answer.unit());
         var interval = answer.interval();
@@ -135,8 +137,8 @@ public final class AnswerText {
                 + limits(rounding, coverage.symmetricLow(), coverage.symmetricHigh()) + unit;
     }
 
-    /// Of a distribution both coverage intervals, as `95 % of outcomes: [-0.9, 6.4] with half of the rest on either
-    /// side, [-0.8, 6.5] the shortest`; they are no intervals of the mean.
+    /// Of a distribution both coverage intervals, as `95 % of outcomes: [-0.9, 6.4] with half of the rest on
+    /// either side, [-0.8, 6.5] the shortest`; they are no intervals of the mean.
     public static Optional<String> coverage(Answer answer) {
         return answer.coverage()
                 .filter(found -> found.standardUncertainty() > 0)
@@ -283,9 +285,8 @@ public final class AnswerText {
     /// Digits follow half the length of the interval; where a limit is missing, how far off the other is.
     private static Rounding rounding(Answer answer) {
         var interval = answer.interval();
-        double one = Double.isNaN(interval.low())
-                ? interval.high() - answer.estimate()
-                : answer.estimate() - interval.low();
+        double one =
+                Double.isNaN(interval.low()) ? interval.high() - answer.estimate() : answer.estimate() - interval.low();
         double half = interval.halfWidth();
         return Rounding.of(answer.estimate(), Double.isNaN(half) && one > 0 ? one : half);
     }
