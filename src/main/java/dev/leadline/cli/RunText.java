@@ -122,7 +122,7 @@ final class RunText {
         AnswerText.coverage(answer).ifPresent(coverage -> line("  " + coverage));
         line("  " + AnswerText.interval(answer));
         answer.interval().note().ifPresent(note -> wrapped("  ", note));
-answer.band().ifPresent(band -> wrapped("  ", AnswerText.band(answer, band)));
+        answer.band().ifPresent(band -> wrapped("  ", AnswerText.band(answer, band)));
         if (answer.provisional()) {
             line("  provisional: outcomes near it are counted, their exact places are found at the end");
         }

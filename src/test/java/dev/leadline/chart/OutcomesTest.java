@@ -113,7 +113,7 @@ class OutcomesTest {
                 run.lane().above() > 5e-4 && run.lane().above() < .01,
                 "above " + run.lane().above());
         String remark = picture(run.outcomes()).remarks().getFirst();
-        assertTrue(remark.contains("% right of the picture"), remark);
+        assertTrue(remark.contains("% right of "), remark);
     }
 
     /// 95 % of a uniform density lie in any interval of length .95; the interval of its mean is short beside that.
