@@ -24,8 +24,13 @@ public final class Caption {
         }
         settling.reference().ifPresent(reference -> {
             String error = reference.error() > 0 ? " ± " + Typeset.number(reference.error(), 2) : "";
+            String how = switch (reference.kind()) {
+                case STATED -> "";
+                case CLOSED_FORM -> " in closed form";
+                case QUADRATURE -> " by quadrature, its error a bound";
+            };
             sentences.add("Dash-dotted: reference value "
-                    + Typeset.quantity(Typeset.number(reference.value(), 8) + error, settling.unit()) + ".");
+                    + Typeset.quantity(Typeset.number(reference.value(), 8) + error, settling.unit()) + how + ".");
         });
         settling.strip()
                 .flatMap(_ -> settling.tolerance())

@@ -1,6 +1,6 @@
 package dev.leadline.chart;
 
-import dev.leadline.model.Reference;
+import dev.leadline.reference.ReferenceValue.Known;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -72,7 +72,7 @@ final class Framing {
 
     /// Before the first draw: a tenth of the reference value to each side, or more, so that its error is a strip in the
     /// picture and does not fill it.
-    private static Optional<Range> about(Reference reference) {
+    private static Optional<Range> about(Known reference) {
         double around = Math.max(.1 * Math.abs(reference.value()), 5 * reference.error());
         return hull(DoubleStream.of(reference.value() - around, reference.value() + around));
     }

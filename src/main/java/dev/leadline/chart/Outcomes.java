@@ -5,7 +5,7 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Histogram;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
-import dev.leadline.model.Reference;
+import dev.leadline.reference.ReferenceValue.Known;
 import dev.leadline.trace.Answer;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Mark;
@@ -34,7 +34,7 @@ public record Outcomes(
         double level,
         long seed,
         Estimand estimand,
-        Optional<Reference> reference,
+        Optional<Known> reference,
         List<Lying> lanes)
         implements Subject {
     /// With fewer draws nothing is said of whether outcomes are discrete.
@@ -88,7 +88,7 @@ public record Outcomes(
                 Answers.level(question),
                 plan.seed(),
                 ask.estimand(),
-                onScale ? question.reference() : Optional.empty(),
+                onScale ? Settling.reference(question, traces) : Optional.empty(),
                 traces.stream().map(trace -> of(trace, ask.estimand())).toList());
     }
 

@@ -2,8 +2,9 @@ package dev.leadline.chart;
 
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
-import dev.leadline.model.Reference;
 import dev.leadline.model.Tolerance;
+import dev.leadline.reference.ReferenceValue;
+import dev.leadline.reference.ReferenceValue.Known;
 import dev.leadline.trace.Answers;
 import dev.leadline.trace.Trace;
 import java.util.Comparator;
@@ -25,7 +26,7 @@ public record Settling(
         String unit,
         double level,
         long seed,
-        Optional<Reference> reference,
+        Optional<Known> reference,
         Optional<Tolerance> tolerance,
         List<Series> lanes)
         implements Subject {
@@ -52,9 +53,18 @@ public record Settling(
                 ask.unit(),
                 Answers.level(question),
                 plan.seed(),
-                first ? question.reference() : Optional.empty(),
+                first ? reference(question, traces) : Optional.empty(),
                 first ? question.tolerance() : Optional.empty(),
                 traces.stream().map(trace -> Series.of(trace, answer)).toList());
+    }
+
+    /// What a run knows of it, or what is known before.
+    static Optional<Known> reference(Question question, List<Trace> traces) {
+        return traces.stream()
+                .findFirst()
+                .flatMap(Trace::reference)
+                .or(() -> ReferenceValue.of(question))
+                .flatMap(ReferenceValue::known);
     }
 
     /// The strip of the numerical tolerance: latest estimate ± the half-width that the tolerance allows there, of

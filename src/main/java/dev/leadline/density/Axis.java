@@ -3,9 +3,11 @@ package dev.leadline.density;
 import dev.leadline.numeric.Exp;
 import dev.leadline.numeric.GaussKronrod;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeSet;
 
 /// One variable of an [Expectation]: the points that it is looked at, with their probabilities.
 sealed interface Axis {
@@ -15,12 +17,12 @@ sealed interface Axis {
     /// Beyond it no value is drawn: `e^-36.7 / 2` is less than the smallest probability.
     double DRAWN = 36.7;
 
-    /// @param inputs of the whole integrand: of one, more points are looked at from the start
-    static Axis of(Density density, int inputs) {
+    /// @param lines continuous variables of the whole integrand: of one, more points are looked at from the start
+    static Axis of(Density density, int lines) {
         if (density.isDiscrete()) {
             return new Steps(density, Atoms.all(density, MOST_VALUES).orElse(new double[0]));
         }
-        return new Line(density, inputs);
+        return new Line(density, lines);
     }
 
     /// Points at least.
@@ -60,8 +62,10 @@ sealed interface Axis {
         static final int POINTS = GaussKronrod.POINTS + 2;
 
         private final Density density;
+        private final int lines;
         private final double[] edges;
         private final Map<Panel, Nodes> nodes = new HashMap<>();
+        private Grid grid;
 
         private record Panel(double from, double to) {}
 
@@ -82,19 +86,20 @@ sealed interface Axis {
             }
         }
 
-        private Line(Density density, int inputs) {
+        private Line(Density density, int lines) {
             this.density = density;
+            this.lines = Math.min(lines, EDGES.length);
             var edges = new ArrayList<Double>();
-            side(density.support().low(), inputs).forEach(s -> edges.addFirst(-s));
-            side(density.support().high(), inputs).stream().skip(1).forEach(edges::add);
+            side(density.support().low()).forEach(s -> edges.addFirst(-s));
+            side(density.support().high()).stream().skip(1).forEach(edges::add);
             this.edges = edges.stream().mapToDouble(Double::doubleValue).toArray();
         }
 
-        private static List<Double> side(double end, int inputs) {
+        private List<Double> side(double end) {
             var edges = new ArrayList<Double>();
-            boolean isLong = inputs < 3 && (Double.isInfinite(end) || end == 0);
+            boolean isLong = lines < EDGES.length && (Double.isInfinite(end) || end == 0);
             double[] last = isLong ? LONG : SHORT;
-            for (double s : EDGES[inputs - 1]) {
+            for (double s : EDGES[lines - 1]) {
                 if (s < last[0]) {
                     edges.add(s);
                 }
@@ -126,7 +131,6 @@ sealed interface Axis {
             int n = POINTS;
             var made = new Nodes(from, to, new double[n], new double[n], new double[n], new double[n], new boolean[n]);
             double half = 0.5 * (to - from);
-            var support = density.support();
             for (int i = 0; i < n; i++) {
                 boolean isNode = i < GaussKronrod.POINTS;
                 double s = isNode
@@ -138,9 +142,51 @@ sealed interface Axis {
                 made.chance[i] = p;
                 made.kronrod[i] = isNode ? half * GaussKronrod.kronrod(i) * p : 0;
                 made.gauss[i] = isNode ? half * GaussKronrod.gauss(i) * p : 0;
-                made.inside[i] = Math.abs(s) < DRAWN && x > support.low() && x < support.high();
+                made.inside[i] = isInside(s, x);
             }
             return made;
+        }
+
+        /// The value at a coordinate.
+        double at(double s) {
+            double p = 0.5 * Exp.exp(-Math.abs(s));
+            return s < 0 ? density.quantile(p) : density.upperQuantile(p);
+        }
+
+        /// Whether a value may be drawn and is no end of the support.
+        boolean isInside(double s, double x) {
+            var support = density.support();
+            return Math.abs(s) < DRAWN && x > support.low() && x < support.high();
+        }
+
+        /// Where an event is looked at.
+        ///
+        /// @param places rising: nodes and ends of the first panels, or of their halves
+        record Grid(double[] places, double[] values) {}
+
+        Grid grid() {
+            if (grid == null) {
+                double[] places = places();
+                grid = new Grid(places, Arrays.stream(places).map(this::at).toArray());
+            }
+            return grid;
+        }
+
+        private double[] places() {
+            var places = new TreeSet<Double>();
+            for (int i = 1; i < edges.length; i++) {
+                int parts = lines < EDGES.length ? 2 : 1;
+                double half = 0.5 * (edges[i] - edges[i - 1]) / parts;
+                for (int part = 0; part < parts; part++) {
+                    double from = edges[i - 1] + 2 * half * part;
+                    places.add(from);
+                    for (int k = 0; k < GaussKronrod.POINTS; k++) {
+                        places.add(from + half * (1 + GaussKronrod.node(k)));
+                    }
+                }
+            }
+            places.add(edges[edges.length - 1]);
+            return places.stream().mapToDouble(Double::doubleValue).toArray();
         }
     }
 }

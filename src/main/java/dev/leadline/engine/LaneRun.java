@@ -219,6 +219,7 @@ public final class LaneRun {
                 failures,
                 stopping.course(),
                 finished() ? stopReason : Optional.empty(),
+                Optional.empty(),
                 Optional.empty());
     }
 

@@ -89,6 +89,11 @@ public final class Program {
         return outputs;
     }
 
+    /// Steps that an evaluation takes.
+    public int length() {
+        return instructions.length;
+    }
+
     /// Whether any output depends on the input at `index`; a column that is not used may be `null`.
     public boolean uses(int index) {
         return used.get(index);

@@ -4,11 +4,16 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.ClopperPearson;
 import dev.leadline.interval.Student;
-import dev.leadline.model.Reference;
 import dev.leadline.numeric.Rounding;
+import dev.leadline.reference.ReferenceValue;
+import dev.leadline.reference.ReferenceValue.Known;
 import dev.leadline.trace.Answer;
 
 /// Whether the first answer agrees with the reference value, where chance is no explanation.
+///
+/// What the reference may be off is allowed for: a standard uncertainty as one more standard error, a bound by taking
+/// it
+/// off the distance.
 ///
 /// A chance is judged by the exact interval of its hits. A mean, or an integral, by its distance in standard errors:
 /// beyond four it is doubted. It is an objection only where the draws are many for the skewness of their outcomes, or
@@ -18,6 +23,9 @@ final class AgainstReference {
     private static final double LIMIT = 4;
 
     private static final double OF_FEW = 10;
+
+    /// Error of a reference, in standard errors of the answer, that is told.
+    private static final double NOTABLE = 0.05;
 
     private static final long MANY = 500;
 
@@ -32,13 +40,27 @@ final class AgainstReference {
     private AgainstReference() {}
 
     static Ground judge(Evidence evidence) {
-        if (evidence.question().reference().isEmpty()) {
-            return Ground.notDone(
-                    "reference",
-                    "There is no reference value to compare with",
-                    "Add a value from a closed form, a finer method or an earlier study");
-        }
-        var reference = evidence.question().reference().get();
+        return evidence.trace()
+                .reference()
+                .or(() -> ReferenceValue.of(evidence.question()))
+                .map(reference -> switch (reference) {
+                    case Known known -> judge(evidence, known);
+                    case ReferenceValue.Sought _ ->
+                        Ground.notDone(
+                                "reference", "The reference value is being computed by quadrature", "Wait for it");
+                    case ReferenceValue.Unknown(var reason) ->
+                        Ground.notDone(
+                                "reference",
+                                "Quadrature found no reference value: " + reason,
+                                "Give a value from a closed form, a finer method or an earlier study");
+                })
+                .orElseGet(() -> Ground.notDone(
+                        "reference",
+                        "There is no reference value to compare with",
+                        "Add a value from a closed form, a finer method or an earlier study, or have it integrated"));
+    }
+
+    private static Ground judge(Evidence evidence, Known reference) {
         var answer = evidence.answers().getFirst();
         return switch (answer.estimand()) {
             case Estimand.Probability _
@@ -54,14 +76,14 @@ final class AgainstReference {
         };
     }
 
-    private static Ground chance(Answer answer, Reference reference) {
+    private static Ground chance(Answer answer, Known reference) {
         long hits = answer.hits().orElseThrow();
         long n = answer.observations();
         var left = ClopperPearson.of(hits, n, answer.nonFinite(), 1 - BEYOND_LIMIT);
         if (Double.isNaN(left.halfWidth())) {
             return notYet();
         }
-        double reach = LIMIT * reference.error();
+        double reach = isBound(reference) ? reference.error() : LIMIT * reference.error();
         var rounding = Rounding.of(answer.estimate(), left.halfWidth());
         boolean above = reference.value() - reach > left.high();
         boolean below = reference.value() + reach < left.low();
@@ -79,14 +101,18 @@ final class AgainstReference {
                 : Ground.shown("reference", text);
     }
 
-    private static Ground mean(Evidence evidence, Answer answer, Reference reference) {
-        double error = StrictMath.hypot(answer.standardError(), reference.error());
-        double z = (answer.estimate() - reference.value()) / error;
+    private static Ground mean(Evidence evidence, Answer answer, Known reference) {
+        double error = isBound(reference)
+                ? answer.standardError()
+                : StrictMath.hypot(answer.standardError(), reference.error());
+        double apart = answer.estimate() - reference.value();
+        double distance = isBound(reference) ? Math.max(Math.abs(apart) - reference.error(), 0) : Math.abs(apart);
+        double z = Math.copySign(distance / error, apart);
         if (Double.isNaN(z) || Double.isInfinite(error)) {
             return notYet();
         }
-        String text = "%s standard errors %s the reference value"
-                .formatted(Numbers.ratio(Math.abs(z)), z < 0 ? "below" : "above");
+        String text = "%s standard errors %s the reference value%s"
+                .formatted(Numbers.ratio(Math.abs(z)), apart < 0 ? "below" : "above", how(reference, answer));
         long n = evidence.total().count();
         if (Math.abs(z) <= Math.max(LIMIT, Student.quantile(n - 1, 1 - BEYOND_LIMIT))) {
             return Ground.shown("reference", text);
@@ -99,6 +125,25 @@ final class AgainstReference {
                         Strength.CAUTION,
                         text + "; with so few observations chance may do that",
                         "Make more draws; if it stays, check formula, densities and units");
+    }
+
+    /// Whether the error is a bound, which chance does not exceed.
+    private static boolean isBound(Known reference) {
+        return switch (reference.kind()) {
+            case STATED -> false;
+            case CLOSED_FORM, QUADRATURE -> true;
+        };
+    }
+
+    private static String how(Known reference, Answer answer) {
+        String how = switch (reference.kind()) {
+            case STATED -> "";
+            case CLOSED_FORM -> " in closed form";
+            case QUADRATURE -> " by quadrature";
+        };
+        return isBound(reference) && reference.error() > NOTABLE * answer.standardError()
+                ? "%s, beyond its own error of %s at most".formatted(how, Numbers.value(reference.error()))
+                : how;
     }
 
     private static Ground notYet() {

@@ -161,7 +161,15 @@ public record Draft(
         }
     }
 
-    public record ReferenceDraft(double value, OptionalDouble error, String source) {}
+    /// What the first answer is compared with.
+    public sealed interface ReferenceDraft {
+        record Value(double value, OptionalDouble error, String source) implements ReferenceDraft {}
+
+        /// A closed form over constants.
+        record Formula(String formula) implements ReferenceDraft {}
+
+        record Quadrature() implements ReferenceDraft {}
+    }
 
     /// @param when `either` or `both` where absolute and relative are both given; empty means either
     public record ToleranceDraft(OptionalDouble absolute, OptionalDouble relative, Optional<String> when) {}
@@ -302,6 +310,10 @@ public record Draft(
         if (step.matches()) {
             int index = Integer.parseInt(step.group(1));
             return index < steps.size() ? Optional.of(steps.get(index)) : Optional.empty();
+        }
+        if (path.equals("$.reference.formula")) {
+            return reference.flatMap(
+                    r -> r instanceof ReferenceDraft.Formula(var formula) ? Optional.of(formula) : Optional.empty());
         }
         Matcher ask = ASK.matcher(path);
         if (ask.matches()) {

@@ -19,6 +19,11 @@ final class Findings {
         problems.add(problem.at(Place.of(path)));
     }
 
+    /// One that knows its place.
+    void add(Problem problem) {
+        problems.add(problem);
+    }
+
     /// What is no fault but may surprise.
     void note(String path, Problem note) {
         notes.add(note.at(Place.of(path)));

@@ -2,7 +2,6 @@ package dev.leadline.model;
 
 import dev.leadline.density.Density;
 import dev.leadline.formula.Working;
-import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Problem;
@@ -47,7 +46,8 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         List<Ask> asks = Asks.of(draft, findings);
         Optional<Working> working = Workings.of(draft, findings);
         working.ifPresent(formulas -> Asks.checkEvents(draft, formulas, findings));
-        Optional<Reference> reference = draft.reference().map(given -> reference(given, findings));
+        var references = new References(draft, findings);
+        Optional<Reference> reference = references.of();
         double confidence = confidence(draft, findings);
         Optional<Tolerance> tolerance = draft.tolerance().map(given -> tolerance(given, findings));
         IntervalWish interval =
@@ -58,6 +58,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
                 draft.dependence().flatMap(given -> Dependences.of(given, draft.inputs(), inputs, findings));
         Optional<Working> sound =
                 working.filter(_ -> inputs.size() == draft.inputs().size());
+        sound.ifPresent(formulas -> references.check(formulas, inputs, dependence, asks));
         List<Lane> lanes = Lanes.of(draft, inputs, sound, dependence, noting(files, read), findings);
         Stops.check(draft, asks, lanes, findings);
         findings.made(
@@ -168,23 +169,6 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         return draft.constants().stream()
                 .map(c -> new Constant(Workings.composed(c.name()), c.value(), c.unit(), c.label(), c.source()))
                 .toList();
-    }
-
-    private static Reference reference(ReferenceDraft draft, Findings findings) {
-        double error = draft.error().orElse(0);
-        if (!Double.isFinite(draft.value())) {
-            findings.add(
-                    "$.reference.value",
-                    "value is %s but must be finite".formatted(draft.value()),
-                    "The answer is compared with it.");
-        }
-        if (!(error >= 0 && Double.isFinite(error))) {
-            findings.add(
-                    "$.reference.error",
-                    "error is %s but must be 0 or more".formatted(Shortest.text(error)),
-                    "It is the standard uncertainty of the reference value.");
-        }
-        return new Reference(draft.value(), error, draft.source());
     }
 
     private static double confidence(Draft draft, Findings findings) {

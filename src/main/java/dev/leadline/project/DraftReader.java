@@ -21,7 +21,6 @@ import dev.leadline.problem.Place;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -44,12 +43,10 @@ final class DraftReader {
     private static final String LEAVE_OUT = "Leave it out.";
     private static final String IN_A_LANE =
             "A lane says what its inputs are drawn from: {\"name\": \"B\", \"drawFrom\": {\"v\": …}}.";
-    private static final String ONLY_VALUES =
-            "Give the value itself: {\"value\": 0.12, \"error\": 1e-4, \"source\": \"…\"}.";
 
     private static final Map<String, String> WHOLE_LATER =
             Map.of("logbook", "Leave it out: no run is written to a logbook.");
-    private static final Map<String, String> REFERENCE_LATER = each(ONLY_VALUES, "formula", "quadrature");
+    private static final List<String> REFERENCES = List.of("value", "formula", "quadrature");
     private static final List<String> MEASURES = List.of("spearman", "kendall", "pearson");
 
     private final Problems problems;
@@ -292,13 +289,39 @@ final class DraftReader {
     }
 
     private ReferenceDraft reference(Fields fields) {
-        boolean later = fields.names().stream().anyMatch(REFERENCE_LATER::containsKey);
-        var reference = new ReferenceDraft(
-                later ? fields.number("value").orElse(Double.NaN) : fields.requiredNumber("value"),
-                fields.number("error"),
-                fields.text("source", LINE));
-        fields.close(REFERENCE_LATER);
+        List<String> words =
+                fields.names().stream().filter(REFERENCES::contains).toList();
+        if (words.size() > 1) {
+            problems.add(Problem.of("%s stand in one reference".formatted(String.join(" and ", words)))
+                    .because("The answer is compared with one value.")
+                    .tryThis("Keep one of them.")
+                    .at(Place.of(fields.path())));
+        }
+        REFERENCES.forEach(fields::has);
+        var reference = switch (words.isEmpty() ? "value" : words.getFirst()) {
+            case "formula" -> new ReferenceDraft.Formula(fields.text("formula", FORMULA));
+            case "quadrature" -> quadrature(fields);
+            default ->
+                new ReferenceDraft.Value(
+                        fields.requiredNumber("value"), fields.number("error"), fields.text("source", LINE));
+        };
+        fields.close(Map.of());
         return reference;
+    }
+
+    private ReferenceDraft quadrature(Fields fields) {
+        boolean isFalse = fields.take("quadrature")
+                .filter(json -> json instanceof Json.Flag(boolean asked) && !asked)
+                .isPresent();
+        if (isFalse) {
+            problems.add(Problem.of("quadrature is false but must be true")
+                    .because("A reference is a value, a formula, or found by quadrature.")
+                    .tryThis("Leave the reference out where there is none.")
+                    .at(Place.of(fields.pathOf("quadrature"))));
+        } else {
+            fields.flag("quadrature");
+        }
+        return new ReferenceDraft.Quadrature();
     }
 
     private ToleranceDraft tolerance(Fields fields) {
@@ -363,11 +386,5 @@ final class DraftReader {
                     .ifPresentOrElse(fields -> parts.add(part.of(fields)), () -> indicesHold = false);
         }
         return parts;
-    }
-
-    private static Map<String, String> each(String instead, String... names) {
-        Map<String, String> all = new LinkedHashMap<>();
-        List.of(names).forEach(name -> all.put(name, instead));
-        return all;
     }
 }

@@ -195,9 +195,17 @@ final class DraftWriter {
 
     private static Json reference(ReferenceDraft reference) {
         var fields = Json.object();
-        number(fields, "value", reference.value());
-        number(fields, "error", reference.error());
-        return fields.putUnlessEmpty("source", reference.source()).build();
+        return switch (reference) {
+            case ReferenceDraft.Value(double value, var error, var source) -> {
+                number(fields, "value", value);
+                number(fields, "error", error);
+                yield fields.putUnlessEmpty("source", source).build();
+            }
+            case ReferenceDraft.Formula(var formula) ->
+                fields.put("formula", formula).build();
+            case ReferenceDraft.Quadrature _ ->
+                fields.put("quadrature", Json.of(true)).build();
+        };
     }
 
     private static Json tolerance(ToleranceDraft tolerance) {

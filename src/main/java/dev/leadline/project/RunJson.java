@@ -12,8 +12,8 @@ import dev.leadline.model.Components;
 import dev.leadline.model.Input;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Project;
-import dev.leadline.model.Reference;
 import dev.leadline.model.Sentence;
+import dev.leadline.reference.ReferenceValue;
 import dev.leadline.scheme.Stratified;
 import dev.leadline.study.Comparison;
 import dev.leadline.study.LaneState;
@@ -53,7 +53,7 @@ public final class RunJson {
                 .put("fingerprint", Fingerprint.of(project))
                 .put("dependence", DependenceJson.of(question, achieved))
                 .put("lanes", Json.list(state.lanes().stream().map(run::lane).toList()))
-                .put("reference", question.reference().map(RunJson::reference).orElse(new Json.Null()))
+                .put("reference", reference(state))
                 .put("comparison", comparisons.isEmpty() ? new Json.Null() : ComparisonJson.of(comparisons.getFirst()));
         if (comparisons.size() > 1) {
             json.put(
@@ -236,11 +236,36 @@ public final class RunJson {
                 .build();
     }
 
-    private static Json reference(Reference reference) {
+    private static Json reference(StudyState state) {
+        return state.lanes().stream()
+                .findFirst()
+                .flatMap(lane -> lane.trace().reference())
+                .map(RunJson::reference)
+                .orElse(new Json.Null());
+    }
+
+    private static Json reference(ReferenceValue reference) {
+        return switch (reference) {
+            case ReferenceValue.Known known -> {
+                var json = Json.object()
+                        .put("value", Json.of(known.value()))
+                        .put("error", Json.of(known.error()))
+                        .put("source", known.source())
+                        .put("kind", known.kind().word());
+                known.evaluations().ifPresent(evaluations -> json.put("evaluations", Json.of(evaluations)));
+                yield json.build();
+            }
+            case ReferenceValue.Sought _ -> without("it was not found yet");
+            case ReferenceValue.Unknown(var reason) -> without(reason);
+        };
+    }
+
+    private static Json without(String reason) {
         return Json.object()
-                .put("value", Json.of(reference.value()))
-                .put("error", Json.of(reference.error()))
-                .put("source", reference.source())
+                .put("value", new Json.Null())
+                .put("error", new Json.Null())
+                .put("source", ReferenceValue.Kind.QUADRATURE.word())
+                .put("note", reason)
                 .build();
     }
 }

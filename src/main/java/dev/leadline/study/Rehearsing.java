@@ -10,6 +10,9 @@ import dev.leadline.model.Question;
 import dev.leadline.model.Stop;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
+import dev.leadline.reference.Quadrature;
+import dev.leadline.reference.ReferenceValue;
+import dev.leadline.reference.ReferenceValue.Known;
 import dev.leadline.scheme.Repetitions;
 import dev.leadline.stream.Purpose;
 import dev.leadline.study.RehearsalState.Activity;
@@ -26,6 +29,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalInt;
+import java.util.concurrent.CancellationException;
 import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
@@ -283,8 +287,8 @@ public final class Rehearsing implements AutoCloseable {
     ///
     /// @param longest draws of a repetition
     private Optional<List<Sought>> sought(long longest) throws InterruptedException, ExecutionException {
-        Optional<Sought> stated = question.reference()
-                .map(reference -> new Sought(reference.value(), reference.error(), reference.source(), 0));
+        Optional<Sought> stated =
+                known().map(reference -> new Sought(reference.value(), reference.error(), reference.source(), 0));
         if (stated.isPresent() && question.asks().size() == 1) {
             return Optional.of(List.of(stated.get()));
         }
@@ -297,6 +301,14 @@ public final class Rehearsing implements AutoCloseable {
                         ? stated.get()
                         : sought(found.answers().get(k), found.draws()))
                 .toList());
+    }
+
+    private Optional<Known> known() {
+        try {
+            return Quadrature.found(question, () -> cancelled).flatMap(ReferenceValue::known);
+        } catch (CancellationException _) {
+            return Optional.empty();
+        }
     }
 
     private Optional<Mark> precise(Lane lane, long draws) throws InterruptedException, ExecutionException {

@@ -23,7 +23,8 @@ import java.util.stream.Stream;
 
 /// A whole run of all lanes in the background, with live grounds. Safe for all threads.
 ///
-/// One conducting thread hands out items and merges them; lanes take turns, the one with the fewest draws first.
+/// One conducting thread hands out items and merges them; lanes take turns, the one with the fewest draws first. A
+/// reference that is found by quadrature is sought meanwhile, and waited for at the end.
 public final class Study implements AutoCloseable {
     /// Nanoseconds at least from one look at a running study to the next: nobody reads faster, and grounds take time.
     /// Marks stand where they stand, looked at or not.
@@ -36,6 +37,7 @@ public final class Study implements AutoCloseable {
     private final CountDownLatch ended = new CountDownLatch(1);
     private long looked;
     private final StopWatch watch = new StopWatch();
+    private final Seeking reference;
 
     private final Object gate = new Object();
     private boolean paused;
@@ -52,6 +54,7 @@ public final class Study implements AutoCloseable {
         this.plan = plan;
         this.workers = new Workers(threads);
         this.listener = listener;
+        this.reference = new Seeking(question);
     }
 
     /// Starts at once.
@@ -84,6 +87,7 @@ public final class Study implements AutoCloseable {
             stopping = true;
             gate.notifyAll();
         }
+        reference.cancel();
         workers.cancel();
     }
 
@@ -112,6 +116,7 @@ public final class Study implements AutoCloseable {
     private void conduct() {
         try (workers) {
             publish(state);
+            reference.start();
             var recipes = plan.settled().stream()
                     .map(lane -> Recipe.of(question, lane, plan.seed()))
                     .toList();
@@ -121,6 +126,7 @@ public final class Study implements AutoCloseable {
             audits = plan.settled().stream().map(this::audit).toList();
             watch.start();
             run(runs);
+            reference.await();
             publish(look(Activity.FINISHED, runs));
         } catch (ExecutionException e) {
             fail(e.getCause());
@@ -186,7 +192,8 @@ public final class Study implements AutoCloseable {
         List<Trace> traces = IntStream.range(0, runs.size())
                 .mapToObj(i -> audits.get(i)
                         .map(audit -> runs.get(i).trace().beside(audit.trace()))
-                        .orElseGet(() -> runs.get(i).trace()))
+                        .orElseGet(() -> runs.get(i).trace())
+                        .with(reference.value()))
                 .toList();
         return new StudyState(
                 activity,

@@ -2,6 +2,7 @@ package dev.leadline.trace;
 
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Outermost;
+import dev.leadline.reference.ReferenceValue;
 import dev.leadline.scheme.Scheme;
 import java.util.List;
 import java.util.Optional;
@@ -20,6 +21,7 @@ import java.util.Optional;
 /// @param stopReason in words; empty while the lane runs or pauses
 /// @param audit independent draws from the inputs' own densities, which enter no answer of the lane; empty
 ///     where none are wanted
+/// @param reference what the first answer is compared with, as far as it was found; empty where a run did not look
 public record Trace(
         String lane,
         Scheme scheme,
@@ -30,7 +32,8 @@ public record Trace(
         List<Failure> failures,
         Course course,
         Optional<String> stopReason,
-        Optional<Trace> audit) {
+        Optional<Trace> audit,
+        Optional<ReferenceValue> reference) {
     public Trace {
         outcomes = List.copyOf(outcomes);
         marks = List.copyOf(marks);
@@ -38,7 +41,7 @@ public record Trace(
         failures = List.copyOf(failures);
     }
 
-    /// Of a number of draws fixed beforehand, without an audit.
+    /// Of a number of draws fixed beforehand, without an audit, compared with nothing.
     public Trace(
             String lane,
             Scheme scheme,
@@ -48,10 +51,21 @@ public record Trace(
             List<Spread> outcomes,
             List<Failure> failures,
             Optional<String> stopReason) {
-        this(lane, scheme, marks, blocks, outermost, outcomes, failures, Course.FIXED, stopReason, Optional.empty());
+        this(
+                lane,
+                scheme,
+                marks,
+                blocks,
+                outermost,
+                outcomes,
+                failures,
+                Course.FIXED,
+                stopReason,
+                Optional.empty(),
+                Optional.empty());
     }
 
-    /// Of a lane whose draws count 1 each.
+    /// Of a lane whose draws count 1 each, compared with nothing.
     public Trace(
             String lane,
             Scheme scheme,
@@ -62,10 +76,25 @@ public record Trace(
         this(lane, scheme, marks, blocks, Optional.empty(), List.of(), failures, stopReason);
     }
 
+    /// The same, compared with this.
+    public Trace with(Optional<ReferenceValue> other) {
+        return new Trace(lane, scheme, marks, blocks, outermost, outcomes, failures, course, stopReason, audit, other);
+    }
+
     /// The same beside its audit.
     public Trace beside(Trace plain) {
         return new Trace(
-                lane, scheme, marks, blocks, outermost, outcomes, failures, course, stopReason, Optional.of(plain));
+                lane,
+                scheme,
+                marks,
+                blocks,
+                outermost,
+                outcomes,
+                failures,
+                course,
+                stopReason,
+                Optional.of(plain),
+                reference);
     }
 
     public Optional<Mark> last() {

@@ -1,7 +1,8 @@
 package dev.leadline.chart;
 
-import dev.leadline.model.Reference;
 import dev.leadline.model.Tolerance;
+import dev.leadline.reference.ReferenceValue.Kind;
+import dev.leadline.reference.ReferenceValue.Known;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -13,12 +14,16 @@ import java.util.SplittableRandom;
 final class Invented {
     private Invented() {}
 
+    static Known stated(double value, double error, String source) {
+        return new Known(value, error, Kind.STATED, source, OptionalLong.empty());
+    }
+
     /// Rare event under independent draws: no hit at first; the second lane settles sooner.
     static Settling rareEvent(long draws) {
         return settling(
                 "chance per year",
                 "1/a",
-                Optional.of(new Reference(1.2568e-5, 4e-9, "invented")),
+                Optional.of(stated(1.2568e-5, 4e-9, "invented")),
                 relative(.1),
                 List.of(
                         hits("A", "independent", 1.2568e-5, draws, 3),
@@ -38,7 +43,7 @@ final class Invented {
         return settling(
                 "volume to dredge",
                 "m3",
-                Optional.of(new Reference(18_432.7, 6, "invented")),
+                Optional.of(stated(18_432.7, 6, "invented")),
                 absolute(25),
                 List.of(mean("A", "independent", 18_430, 5200, 4_000_000, 11)));
     }
@@ -51,7 +56,7 @@ final class Invented {
         return settling(
                 "delay cost per call",
                 "crowns",
-                Optional.of(new Reference(9.5, 0, "invented")),
+                Optional.of(stated(9.5, 0, "invented")),
                 Optional.empty(),
                 List.of(new Series("A", "independent", points, OptionalLong.empty(), 0)));
     }
@@ -108,7 +113,7 @@ final class Invented {
         return settling(
                 "illuminance on the quay",
                 "lx",
-                Optional.of(new Reference(21.5, .02, "invented")),
+                Optional.of(stated(21.5, .02, "invented")),
                 relative(.005),
                 List.of(
                         mean("A", "independent", 21.5, 6, 1_000_000, 1),
@@ -130,7 +135,7 @@ final class Invented {
         return settling(
                 "moment",
                 "kN m",
-                Optional.of(new Reference(1, 0, "")),
+                Optional.of(stated(1, 0, "")),
                 relative(.1),
                 List.of(new Series("A", "independent", List.of(points), OptionalLong.empty(), 0)));
     }
@@ -138,7 +143,7 @@ final class Invented {
     static Settling settling(
             String quantity,
             String unit,
-            Optional<Reference> reference,
+            Optional<Known> reference,
             Optional<Tolerance> tolerance,
             List<Series> lanes) {
         return new Settling("Invented", quantity, unit, .95, 20261201, reference, tolerance, lanes);

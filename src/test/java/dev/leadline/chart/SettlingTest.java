@@ -129,7 +129,7 @@ class SettlingTest {
         String caption = Caption.of(Invented.settling(
                 "chance per year",
                 "1/a",
-                Optional.of(new dev.leadline.model.Reference(1.2568e-5, 4e-9, "")),
+                Optional.of(Invented.stated(1.2568e-5, 4e-9, "")),
                 Invented.relative(.1),
                 List.of(lane)));
         for (var part : List.of(

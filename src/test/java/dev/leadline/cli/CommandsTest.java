@@ -369,6 +369,43 @@ class CommandsTest {
     }
 
     @Test
+    void comparesWithEachKindOfReference() throws IOException {
+        var integrated = leadline("run", with("reference", "{\"quadrature\": true}"), "--json")
+                .json();
+        var reference = integrated.required("reference");
+        assertEquals(1 / 3.0, reference.required("value").asDouble(), 1e-9);
+        double error = reference.required("error").asDouble();
+        assertTrue(error > 0 && error < 1e-9, reference.toString());
+        assertEquals("quadrature", reference.required("kind").asString());
+        assertTrue(reference.required("evaluations").asInt() > 0, reference.toString());
+        assertTrue(reference.required("source").asString().startsWith("quadrature, "), reference.toString());
+        String ground = integrated
+                .required("lanes")
+                .get(0)
+                .required("grounds")
+                .valueStream()
+                .filter(each -> each.required("code").asString().equals("reference"))
+                .map(each -> each.required("text").asString())
+                .findFirst()
+                .orElseThrow();
+        assertTrue(
+                ground.matches("[0-3]\\.\\d standard errors (above|below) the reference value by quadrature"), ground);
+        var closed = leadline("run", with("reference", "{\"formula\": \"1/3\"}"), "--json")
+                .json()
+                .required("reference");
+        assertEquals(1 / 3.0, closed.required("value").asDouble(), 0);
+        assertEquals("closed form", closed.required("kind").asString());
+        Path none = Files.writeString(
+                folder.resolve("none.leadline"),
+                Files.readString(with("reference", "{\"quadrature\": true}")).replace("x^2", "1/x"));
+        var unknown = leadline("run", none, "--json").json().required("reference");
+        assertTrue(unknown.required("value").isNull());
+        assertEquals(
+                "the integral does not seem to converge",
+                unknown.required("note").asString());
+    }
+
+    @Test
     void exitsWithOneWhereTheToleranceIsNotMetOrAnObjectionStands() throws IOException {
         assertEquals(
                 0, leadline("run", with("tolerance", "{\"absolute\": 0.02}")).exitCode());

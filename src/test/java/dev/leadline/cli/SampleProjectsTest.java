@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.leadline.model.Draft;
 import dev.leadline.project.ProjectFile;
 import java.io.IOException;
 import java.nio.file.Files;
@@ -70,7 +71,7 @@ class SampleProjectsTest {
         assertTrue(draft.notes().length() > 300, draft.notes());
         assertTrue(draft.notes().contains("invented"), draft.notes());
         draft.constants().forEach(constant -> assertTrue(!constant.source().isEmpty(), constant.name()));
-        assertTrue(!draft.reference().orElseThrow().source().isEmpty());
+        assertTrue(!stated(draft).source().isEmpty());
     }
 
     /// Values and standard deviations of one draw, found apart from this program: for the mooring line by 5e8
@@ -366,6 +367,27 @@ class SampleProjectsTest {
     }
 
     private static double leadlineReference(Path sample) {
-        return ProjectFile.read(sample).reference().orElseThrow().value();
+        return stated(ProjectFile.read(sample)).value();
+    }
+
+    private static Draft.ReferenceDraft.Value stated(Draft draft) {
+        return (Draft.ReferenceDraft.Value) draft.reference().orElseThrow();
+    }
+
+    /// The rule meets a kink and a jump on a circle: its bound holds, and is a twentieth of what is disputed at most.
+    @Test
+    void theVolumeIntegratedByARuleAgreesWithItsReference() throws IOException {
+        Path sample = SAMPLES.resolve("dredging-volume" + ProjectFile.EXTENSION);
+        String text = Files.readString(sample)
+                .replaceFirst("(?s)\"reference\": \\{.*?\\}", "\"reference\": {\"quadrature\": true}");
+        Path copy = Files.writeString(folder.resolve("integrated.leadline"), text);
+        var json = leadline("run", copy, "--lane", "A", "--json", "--draws", 100_000)
+                .json();
+        var reference = json.required("reference");
+        double error = reference.required("error").asDouble();
+        assertEquals("quadrature", reference.required("kind").asString());
+        assertEquals(leadlineReference(sample), reference.required("value").asDouble(), error + .01);
+        assertTrue(error > 0 && error < 25 / 20.0, reference.toString());
+        assertTrue(reference.required("evaluations").asLong() <= 10_100_000, reference.toString());
     }
 }

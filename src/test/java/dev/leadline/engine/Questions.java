@@ -86,7 +86,7 @@ public final class Questions {
     }
 
     public Questions reference(double value) {
-        reference = Optional.of(new Reference(value, 0, "test"));
+        reference = Optional.of(new Reference.Stated(value, 0, "test"));
         return this;
     }
 

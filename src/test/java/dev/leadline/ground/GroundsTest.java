@@ -11,6 +11,9 @@ import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.model.Stop;
+import dev.leadline.reference.ReferenceValue;
+import dev.leadline.reference.ReferenceValue.Kind;
+import dev.leadline.reference.ReferenceValue.Known;
 import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.Points;
@@ -25,6 +28,7 @@ import dev.leadline.trace.Trace;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalLong;
 import java.util.random.RandomGenerator;
 import java.util.random.RandomGeneratorFactory;
 import org.junit.jupiter.api.Test;
@@ -194,13 +198,47 @@ class GroundsTest {
     }
 
     private static List<Ground> judged(Question question, double... values) {
+        return Grounds.of(question, trace(question, values));
+    }
+
+    private static Trace trace(Question question, double... values) {
         var total = new Accumulator(1);
         total.add(new double[][] {values}, 0, values.length);
         var mark = new Mark(values.length, 0, Answers.of(question, Scheme.of(new Independent()), total));
-        return Grounds.of(
-                question,
-                new Trace(
-                        "A", Scheme.of(new Independent()), List.of(mark), List.of(total), List.of(), Optional.empty()));
+        return new Trace("A", Scheme.of(new Independent()), List.of(mark), List.of(total), List.of(), Optional.empty());
+    }
+
+    /// Mean 2.5, standard error .6455: a bound is taken off the distance, and told where it matters.
+    @Test
+    void referenceByQuadrature() {
+        var question = new Questions().uniform("x", 0, 1).mean("x").reference(1).build();
+        assertEquals(
+                "2.3 standard errors above the reference value by quadrature",
+                ground("reference", compared(question, new Known(1, .001, Kind.QUADRATURE, "", OptionalLong.of(9))))
+                        .text());
+        assertEquals(
+                "0.0 standard errors below the reference value by quadrature, beyond its own error of 0.600 at most",
+                ground("reference", compared(question, new Known(3, .6, Kind.QUADRATURE, "", OptionalLong.of(9))))
+                        .text());
+        assertEquals(
+                "2.3 standard errors above the reference value in closed form",
+                ground(
+                                "reference",
+                                compared(question, new Known(1, 1e-15, Kind.CLOSED_FORM, "1", OptionalLong.empty())))
+                        .text());
+        objects(ground("reference", compared(question, new Known(1e4, 1, Kind.QUADRATURE, "", OptionalLong.of(9)))));
+        var unknown = ground("reference", compared(question, new ReferenceValue.Unknown("the rule broke down")));
+        assertEquals(Status.NOT_DONE, unknown.status());
+        assertEquals("Quadrature found no reference value: the rule broke down", unknown.text());
+        assertEquals(
+                "The reference value is being computed by quadrature",
+                ground("reference", compared(question, new ReferenceValue.Sought()))
+                        .text());
+    }
+
+    private static List<Ground> compared(Question question, ReferenceValue reference) {
+        var trace = trace(question, 1, 2, 3, 4);
+        return Grounds.of(question, trace.with(Optional.of(reference)));
     }
 
     /// Few draws of lopsided outcomes lie 4 standard errors off far more often than one time in 10,000: 30 of a

@@ -106,7 +106,7 @@ class ProjectFileTest {
                     new AskDraft("ratio", List.of("q", "v"), OptionalDouble.empty(), OptionalDouble.empty(), "", "of"),
                     new AskDraft(
                             "distribution", List.of("q"), OptionalDouble.empty(), OptionalDouble.of(.9), "Pa", "")),
-            Optional.of(new ReferenceDraft(1.2568e-5, OptionalDouble.of(4e-9), "closed form")),
+            Optional.of(new ReferenceDraft.Value(1.2568e-5, OptionalDouble.of(4e-9), "closed form")),
             OptionalDouble.of(.99),
             Optional.of(new ToleranceDraft(OptionalDouble.of(25), OptionalDouble.of(.1), Optional.of("both"))),
             Optional.of(new IntervalDraft(Optional.of("hoeffding"), Optional.of(new Bounds(-1, 2)))),
@@ -348,5 +348,19 @@ class ProjectFileTest {
         assertEquals("fixed", Project.stopRule(draft));
         assertEquals("gaussian", draft.dependence().orElseThrow().copula());
         assertEquals(5000, Project.of(draft).plan().stop().draws());
+    }
+
+    @Test
+    void readsAndWritesEachKindOfReference() {
+        for (String reference : List.of(
+                "{\"value\": 0.5, \"error\": 0.001, \"source\": \"by hand\"}",
+                "{\"formula\": \"pi/4\"}",
+                "{\"quadrature\": true}")) {
+            var draft = ProjectFile.parse("""
+                    {"leadline": 1, "inputs": [{"name": "x", "range": [0, 1]}], "ask": {"integral": "x"},
+                     "reference": %s}""".formatted(reference));
+            assertTrue(ProjectFile.format(draft).contains("\"reference\": " + reference), ProjectFile.format(draft));
+            assertEquals(draft, ProjectFile.parse(ProjectFile.format(draft)));
+        }
     }
 }

@@ -54,6 +54,7 @@ public final class Workbench extends BorderPane {
                 model.project(),
                 model.inputs(),
                 model.achieved(),
+                model.reference(),
                 model.look(),
                 () -> new SketchView(model.dark(), background));
         var menus = Menus.of(model, this::copyAnswer, working::openLook, working::openAbout, quit);

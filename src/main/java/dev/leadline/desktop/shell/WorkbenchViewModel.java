@@ -14,6 +14,7 @@ import dev.leadline.desktop.working.Edits;
 import dev.leadline.desktop.working.InputsViewModel;
 import dev.leadline.desktop.working.LookViewModel;
 import dev.leadline.desktop.working.ProjectViewModel;
+import dev.leadline.desktop.working.ReferenceViewModel;
 import dev.leadline.ground.Ground;
 import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
@@ -60,6 +61,7 @@ public final class WorkbenchViewModel {
     private final LookViewModel look;
     private final InputsViewModel inputs;
     private final AchievedViewModel achieved;
+    private final ReferenceViewModel reference;
     private final PickerViewModel picker;
     private final LanesViewModel lanes;
     private final SuggestionViewModel suggestion;
@@ -85,6 +87,7 @@ public final class WorkbenchViewModel {
         look = new LookViewModel(project, this::ranAsItStands, background);
         inputs = new InputsViewModel(project);
         achieved = new AchievedViewModel(project, background);
+        reference = new ReferenceViewModel(project, background);
         picker = new PickerViewModel(project, inputs, dark, background);
         lanes = new LanesViewModel(project, run);
         suggestion = new SuggestionViewModel(project, lanes, SuggestionViewModel.Suggestions.engine(), background);
@@ -143,6 +146,10 @@ public final class WorkbenchViewModel {
 
     public InputsViewModel inputs() {
         return inputs;
+    }
+
+    public ReferenceViewModel reference() {
+        return reference;
     }
 
     public AchievedViewModel achieved() {

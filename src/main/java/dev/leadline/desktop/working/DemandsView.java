@@ -28,16 +28,11 @@ final class DemandsView {
     private final Field most;
     private final Field draws;
     private final Field seconds;
-    private final Field reference;
-    private final Field error;
-    private final Field source;
     private final Messages toleranceMessages = new Messages();
     private final Messages intervalMessages = new Messages();
     private final Messages stopMessages = new Messages();
-    private final Messages referenceMessages = new Messages();
     private final Fold toleranceFold;
     private final Fold stopFold;
-    private final Fold referenceFold;
     private final VBox folds;
     private boolean showing;
 
@@ -67,10 +62,6 @@ final class DemandsView {
                 .prompt("1000000");
         seconds = field("seconds", "seconds at most", "Seconds of computing at most", 5, model::seconds)
                 .prompt("no limit");
-        reference = field("reference", "reference value", "A value known from elsewhere", 9, model::reference);
-        error = field("reference-error", "its error", "Its standard error or bound", 6, model::referenceError);
-        source = field("reference-source", "its source", "Where it comes from", 16, model::referenceSource)
-                .growing();
         both.setOnAction(_ -> model.both(both.isSelected()));
         both.setTooltip(new Tooltip("Otherwise either will do"));
 
@@ -91,12 +82,7 @@ final class DemandsView {
                 "stop",
                 "When a run ends",
                 new VBox(6, flow(pair("after", draws, "draws"), pair("or", seconds, "s")), stopMessages));
-        referenceFold = new Fold(
-                "fold-reference",
-                "reference value",
-                "A value to compare the answer with",
-                new VBox(6, flow(pair("", reference, ""), pair("\u00b1", error, "")), source, referenceMessages));
-        folds = new VBox(toleranceFold, stopFold, referenceFold);
+        folds = new VBox(toleranceFold, stopFold);
     }
 
     private void bounds() {
@@ -123,11 +109,6 @@ final class DemandsView {
         most.show(model.mostText());
         show(draws, model::drawsText, "$.stop.draws");
         show(seconds, model::secondsText, "$.stop.seconds");
-        show(reference, model::referenceText, "$.reference.value");
-        show(error, model::referenceErrorText, "$.reference.error");
-        source.show(model.referenceSourceText());
-        error.setDisable(!model.hasReference());
-        source.setDisable(!model.hasReference());
         both.setSelected(model.isBoth());
         both.setVisible(model.hasTwoTolerances());
         both.setManaged(model.hasTwoTolerances());
@@ -142,13 +123,10 @@ final class DemandsView {
         least.showFault(unbounded);
         most.showFault(unbounded);
         stopMessages.show(project.problemsAt("$.stop"));
-        referenceMessages.show(project.problemsAt("$.reference"));
         toleranceFold.summary(model.toleranceSummary());
         stopFold.summary("after " + DemandsViewModel.stopWords(project.draft().get()));
-        referenceFold.summary(model.referenceSummary());
         openWhereFaulty(toleranceFold, !tolerance.isEmpty() || !wished.isEmpty());
         openWhereFaulty(stopFold, !project.problemsAt("$.stop").isEmpty());
-        openWhereFaulty(referenceFold, !project.problemsAt("$.reference").isEmpty());
     }
 
     /// A fault is never folded away.
@@ -169,13 +147,13 @@ final class DemandsView {
         return field;
     }
 
-    private static FlowPane flow(Node... nodes) {
+    static FlowPane flow(Node... nodes) {
         var flow = new FlowPane(12, 6, nodes);
         flow.setPrefWrapLength(280);
         return flow;
     }
 
-    private static HBox pair(String before, Node field, String after) {
+    static HBox pair(String before, Node field, String after) {
         var box = new HBox(5, label(before), field, label(after));
         box.setAlignment(Pos.CENTER_LEFT);
         return box;

@@ -5,7 +5,6 @@ import dev.leadline.interval.Bounds;
 import dev.leadline.interval.IntervalKind;
 import dev.leadline.model.Draft;
 import dev.leadline.model.Draft.IntervalDraft;
-import dev.leadline.model.Draft.ReferenceDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.model.Sentence;
@@ -16,7 +15,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalLong;
 
-/// How well the question is to be answered: numerical tolerance, confidence, stop rule, reference value.
+/// How well the question is to be answered: numerical tolerance, confidence, stop rule.
 public final class DemandsViewModel {
     private static final ToleranceDraft NO_TOLERANCE =
             new ToleranceDraft(OptionalDouble.empty(), OptionalDouble.empty(), Optional.empty());
@@ -202,55 +201,6 @@ public final class DemandsViewModel {
         return s.equals(NOTHING) ? Optional.empty() : Optional.of(s);
     }
 
-    void reference(String text) {
-        project.typeOptionalNumber(
-                "$.reference.value",
-                "reference value",
-                text,
-                (d, value) -> Edits.reference(
-                        d,
-                        value.isEmpty()
-                                ? Optional.empty()
-                                : Optional.of(d.reference()
-                                        .map(r -> new ReferenceDraft(value.getAsDouble(), r.error(), r.source()))
-                                        .orElse(new ReferenceDraft(value.getAsDouble(), OptionalDouble.empty(), "")))));
-    }
-
-    String referenceText() {
-        return project.fieldText(
-                "$.reference.value",
-                draft().reference().map(r -> OptionalDouble.of(r.value())).orElse(OptionalDouble.empty()));
-    }
-
-    boolean hasReference() {
-        return draft().reference().isPresent();
-    }
-
-    void referenceError(String text) {
-        project.typeOptionalNumber(
-                "$.reference.error",
-                "error of the reference value",
-                text,
-                (d, value) ->
-                        Edits.reference(d, d.reference().map(r -> new ReferenceDraft(r.value(), value, r.source()))));
-    }
-
-    String referenceErrorText() {
-        return project.fieldText(
-                "$.reference.error",
-                draft().reference().map(ReferenceDraft::error).orElse(OptionalDouble.empty()));
-    }
-
-    void referenceSource(String source) {
-        project.edit(
-                "$.reference.source",
-                d -> Edits.reference(d, d.reference().map(r -> new ReferenceDraft(r.value(), r.error(), source))));
-    }
-
-    String referenceSourceText() {
-        return draft().reference().map(ReferenceDraft::source).orElse("");
-    }
-
     /// As `±10 % at 95 %`.
     String toleranceSummary() {
         return Sentence.tolerance(draft()).orElse("none") + " at " + Sentence.confidence(draft());
@@ -264,10 +214,6 @@ public final class DemandsViewModel {
             s.seconds().ifPresent(t -> parts.add(Figures.duration(t)));
         });
         return parts.isEmpty() ? Figures.count(1_000_000) + " draws" : String.join(" or ", parts);
-    }
-
-    String referenceSummary() {
-        return draft().reference().map(r -> NumberText.show(r.value())).orElse("none");
     }
 
     static OptionalDouble inPercent(OptionalDouble part) {

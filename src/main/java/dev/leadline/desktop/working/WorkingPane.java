@@ -36,6 +36,7 @@ public final class WorkingPane extends BorderPane {
     private final Supplier<SketchView> sketches;
     private final TiedView tied;
     private final DemandsView demands;
+    private final ReferenceView reference;
     private final LookView look;
     private final AboutView about;
     private final ScrollPane scroll;
@@ -45,6 +46,7 @@ public final class WorkingPane extends BorderPane {
             ProjectViewModel project,
             InputsViewModel inputs,
             AchievedViewModel achieved,
+            ReferenceViewModel referenceModel,
             LookViewModel lookModel,
             Supplier<SketchView> sketches) {
         this.project = project;
@@ -54,6 +56,7 @@ public final class WorkingPane extends BorderPane {
         formulas = new FormulasViewModel(project, inputsModel);
         tied = new TiedView(new TiedViewModel(project), achieved);
         demands = new DemandsView(new DemandsViewModel(project));
+        reference = new ReferenceView(referenceModel);
         look = new LookView(lookModel);
         about = new AboutView(project);
         getStyleClass().addAll(Styles.PANE, "working");
@@ -88,7 +91,7 @@ public final class WorkingPane extends BorderPane {
         });
         addConstant.setId("add-constant");
 
-        var folds = new VBox(tied.fold(), demands.folds(), look.fold(), about.fold());
+        var folds = new VBox(tied.fold(), demands.folds(), reference.fold(), look.fold(), about.fold());
         folds.getStyleClass().add("folds");
         var content = new VBox(
                 section("steps", new Label()),
@@ -163,6 +166,7 @@ public final class WorkingPane extends BorderPane {
         tied.update();
         constants.forEach(ConstantRow::update);
         demands.update();
+        reference.update();
         about.update();
         paintSteps();
         generalMessages.show(unplaced());

@@ -213,17 +213,6 @@ class ProjectViewModelTest {
     }
 
     @Test
-    void aReferenceLeftEmptyIsNone() {
-        demands.reference("1");
-        demands.referenceError("0.001");
-        demands.referenceSource("by hand");
-        background.finishAll();
-        assertEquals(List.of(), project.problems().get());
-        demands.reference("");
-        assertTrue(project.draft().get().reference().isEmpty());
-    }
-
-    @Test
     void constantsAreEditedInTheirRow() {
         int row = constants.add("rho");
         constants.value(row, "1.25");
