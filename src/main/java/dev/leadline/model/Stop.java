@@ -25,6 +25,11 @@ public record Stop(StopRule rule, long draws, OptionalDouble seconds) {
         this(new StopRule.Fixed(), draws, seconds);
     }
 
+    /// A number of draws fixed beforehand, where another rule would decide: the usual one, within the budget.
+    public Stop fixed() {
+        return rule instanceof StopRule.Fixed ? this : new Stop(Math.min(draws, USUAL_DRAWS), seconds);
+    }
+
     /// The same budget with the rule of one lane: see [StopRule#within].
     public Stop within(Question question, Scheme scheme) {
         return new Stop(rule.within(question, scheme), draws, seconds);

@@ -29,8 +29,10 @@ public record Comparing(Question question, List<Plan> plans, Timing timing) {
         TIME
     }
 
-    /// Times the two lanes of a plan, which takes about a second on this thread.
-    public static Comparing of(Question question, Plan plan, Equal equal) {
+    /// Times the two lanes of a plan, which takes about a second on this thread. Each gets a number of draws fixed
+    /// beforehand, whatever the project's rule: lanes that stop where they please share no draws.
+    public static Comparing of(Question question, Plan given, Equal equal) {
+        Plan plan = new Plan(given.stop().fixed(), given.seed(), given.lanes());
         long draws = Math.min(plan.stop().draws(), TIMED_DRAWS);
         List<Recipe> recipes = plan.lanes().stream()
                 .map(lane -> Recipe.of(question, lane.within(draws), plan.seed(), Purpose.TIMING))

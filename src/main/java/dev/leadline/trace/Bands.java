@@ -37,7 +37,8 @@ import java.util.stream.IntStream;
 ///
 /// - Observations that follow one another: of a chance among plain draws the exact mixture, of a mean whose
 ///   outcomes have bounds the empirical Bernstein band, of a quantile of plain draws ranks; of all else the
-///   band that holds in the limit. Exact ones keep what they have said before.
+///   band that holds in the limit. Exact ones of chances and means keep what they have said before; ranks do
+///   not, or the band would depend on how many outcomes could be kept.
 /// - Replicated points, whose mean sharpens from one doubling to the next, are looked at from 128 points each
 ///   on, and splitting after 10, 20, 40 … repetitions, each look at a level of its own. In between, the
 ///   latest look's band stands.
@@ -213,6 +214,9 @@ public final class Bands {
                                 : Optional.empty());
         if (exact.isEmpty()) {
             return inTheLimit(shown, answer.estimate());
+        }
+        if (isRanked) {
+            return exact.get();
         }
         var so = kept.get(shown.index())
                 .map(before -> before.and(exact.get()))

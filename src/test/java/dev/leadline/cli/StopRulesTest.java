@@ -123,6 +123,29 @@ class StopRulesTest {
         assertTrue(watched.out().contains("The any-time band reaches "), watched.out());
     }
 
+    /// Lanes that stop where they please share no draws: they are compared by as many, whatever the rule.
+    @Test
+    void comparedLanesMakeAsManyDraws() throws IOException {
+        var file = project("{\"mean\": \"x\"}", """
+                , "tolerance": {"absolute": 0.05},
+                "lanes": [{"name": "A", "points": "independent"}, {"name": "B", "points": "antithetic"}]""");
+        for (var lane : leadline("compare", file, "--json").json().required("lanes")) {
+            assertEquals(1_000_000, lane.required("draws").asLong());
+        }
+    }
+
+    /// Repetitions of a watched lane are judged by its band: at least 99 % hold (METHODS §3).
+    @Test
+    void aRehearsalStopsByTheRule() throws IOException {
+        var file = project("{\"mean\": \"x\"}", ", \"tolerance\": {\"absolute\": 0.1}, \"reference\": {\"value\": 1}");
+        int repetitions = 300;
+        var outcome = leadline("rehearse", file, "--repetitions", repetitions, "--json");
+        var json = outcome.json();
+        var rehearsal = json.has("rehearsal") ? json.required("rehearsal") : json;
+        assertTrue(
+                rehearsal.required("rate").asDouble() >= .99 - 4 * Math.sqrt(.99 * .01 / repetitions), outcome.out());
+    }
+
     @Test
     void whatAFirstStageFoundIsTold() throws IOException {
         var file = project(

@@ -414,6 +414,29 @@ class StoppingRulesTest {
         assertEquals(45, first(trace).observations());
     }
 
+    /// Ranks of the band are found by a second pass where not all outcomes could be kept.
+    @Test
+    void theBandOfAQuantileDoesNotDependOnWhatIsKept() throws InterruptedException, ExecutionException {
+        var question = new Questions()
+                .normal("z")
+                .ask(new Estimand.Quantile(.9), "z")
+                .absoluteTolerance(1e-9)
+                .build();
+        var recipe = Recipe.of(question, Lane.of("A", Scheme.of(new Independent())), 11);
+        var stop = new Stop(ANY_TIME, 200_000, OptionalDouble.empty());
+        try (var workers = new Workers(1)) {
+            var few = new LaneRun(recipe, stop, workers, 500);
+            while (!few.finished()) {
+                few.advance(0);
+            }
+            var all = run(recipe, stop, workers);
+            assertEquals(first(all), first(few.trace()));
+            assertFalse(first(all).provisional());
+            assertTrue(few.trace().marks().stream()
+                    .anyMatch(mark -> mark.answers().getFirst().provisional()));
+        }
+    }
+
     @Test
     void asManyHitsAsAToleranceAsksFor() {
         assertEquals(97, StopRule.hits(RARE).map(HitsRule::hits).orElseThrow());
