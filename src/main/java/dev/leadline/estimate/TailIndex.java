@@ -16,8 +16,8 @@ import java.util.Arrays;
 /// Source: Zhang and Stephens (2009), Technometrics 51, 316-325; Vehtari, Simpson, Gelman, Yao and Gabry
 /// (2024), JMLR 25(72), for the prior, the number of values and 30 points more in the grid.
 ///
-/// Error: a relative 1e-10 in the shape, beside the same formulas in other languages (`TailIndexTest`).
-/// Cost: 40 ns for each of the values and the square root of their number, half a millisecond for 4,096.
+/// Error: a relative 1e-9 in shape and scale against the same formulas in another language (`TailIndexTest`).
+/// Cost: .04 ms for 95 values, .26 ms for 4,095.
 public record TailIndex(double shape, double raw, double scale, int values) {
     /// No tail: the largest values are equal, or are few.
     public static final TailIndex NONE = new TailIndex(Double.NaN, Double.NaN, Double.NaN, 0);
