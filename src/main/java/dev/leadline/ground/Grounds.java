@@ -3,6 +3,7 @@ package dev.leadline.ground;
 import dev.leadline.ground.Ground.Strength;
 import dev.leadline.interval.ToRounding;
 import dev.leadline.model.Question;
+import dev.leadline.trace.Rehearsal;
 import dev.leadline.trace.Trace;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -18,8 +19,8 @@ public final class Grounds {
         return of(question, trace, Optional.empty());
     }
 
-    /// @param rehearsed what a rehearsal of this set-up came to, where one was made
-    public static List<Ground> of(Question question, Trace trace, Optional<Rehearsed> rehearsed) {
+    /// @param rehearsal what a rehearsal of this set-up came to, where one was made
+    public static List<Ground> of(Question question, Trace trace, Optional<Rehearsal> rehearsal) {
         if (trace.last().isEmpty()) {
             return List.of();
         }
@@ -54,7 +55,7 @@ public final class Grounds {
         NumericalTolerance.judge(evidence).ifPresent(grounds::add);
         grounds.add(AgainstReference.judge(evidence));
         HiddenRegion.judge(evidence).ifPresent(grounds::add);
-        grounds.add(Rehearsal.judge(rehearsed));
+        grounds.addAll(Rehearsals.judge(evidence, rehearsal));
         grounds.add(EarlierRuns.judge());
         grounds.sort(Comparator.comparing(Ground::status, Comparator.comparingInt(Grounds::rank))
                 .thenComparing(
