@@ -2,6 +2,7 @@ package dev.leadline.engine;
 
 import dev.leadline.estimate.Landmark;
 import dev.leadline.formula.Program;
+import dev.leadline.interval.IntervalKind;
 import dev.leadline.model.Components;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
@@ -42,7 +43,10 @@ final class Pilot {
                 .mapToObj(a -> {
                     int formula = Components.firstFormula(question.asks(), a);
                     boolean integral = recipe.isWhole(formula);
-                    return Landmark.of(question.asks().get(a).estimand(), outcomes[formula], integral ? ones : weights);
+                    var found = Landmark.of(
+                            question.asks().get(a).estimand(), outcomes[formula], integral ? ones : weights);
+                    boolean isResampled = question.interval().kind() == IntervalKind.BOOTSTRAP_T;
+                    return isResampled ? found.keepingAll() : found;
                 })
                 .toList();
     }

@@ -64,6 +64,13 @@ public record Landmark(
     /// @param binsFrom,binsTo finite numbers between which kept values are sorted into bins of one width
     public record Window(double low, double high, double binsFrom, double binsTo) {}
 
+    /// The same for outcomes that are all kept.
+    public Landmark keepingAll() {
+        double low = Double.isNaN(from) ? 0 : from;
+        double high = Double.isNaN(to) ? 0 : to;
+        return with(List.of(new Window(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, low, high)));
+    }
+
     /// The same with other windows.
     Landmark with(List<Window> others) {
         return new Landmark(draws, from, to, centre, level, others, sight);

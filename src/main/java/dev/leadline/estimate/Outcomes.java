@@ -33,6 +33,7 @@ public final class Outcomes {
     private double weight;
     private long looked;
     private Optional<Jump> jump = Optional.empty();
+    private boolean settled;
 
     /// @param weighted whether draws have weights of their own
     /// @param most outcomes to keep of each window
@@ -46,6 +47,7 @@ public final class Outcomes {
     }
 
     public void merge(Catch item) {
+        settled = false;
         for (int i = 0; i < ranks.size(); i++) {
             ranks.get(i).merge(item.caught().get(i));
         }
@@ -60,6 +62,11 @@ public final class Outcomes {
 
     public boolean isWeighted() {
         return weighted;
+    }
+
+    /// Whether no more outcomes are to come, so that what takes long may be made of them.
+    public boolean isSettled() {
+        return settled;
     }
 
     /// Finite outcomes.
@@ -214,6 +221,7 @@ public final class Outcomes {
 
     /// Forgets which places were asked for, and what may be out of date.
     public void settle() {
+        settled = true;
         open.clear();
         looked = 0;
         coverage.forEach((_, intervals) -> intervals.forget());

@@ -2,6 +2,8 @@ package dev.leadline.interval;
 
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.numeric.Shortest;
+import dev.leadline.stream.Address;
+import dev.leadline.stream.Purpose;
 import dev.leadline.stream.StreamKey;
 import java.util.Arrays;
 import java.util.Locale;
@@ -40,6 +42,25 @@ public final class BootstrapT {
 
     private BootstrapT() {}
 
+    /// With random numbers that are always the same, and independent of those that draws come from.
+    ///
+    /// @param observations finite; not changed
+    public static Interval of(double[] observations, double level) {
+        return of(observations, level, StreamKey.of(new Address(0, Purpose.BOOTSTRAP, "", 0, "", 0)));
+    }
+
+    /// No interval, of more observations than are resampled.
+    public static Interval ofTooMany(long n, double level) {
+        return none(
+                level,
+                String.format(
+                        Locale.ROOT,
+                        "the bootstrap takes at most %,d observations, and there are %,d: so many do not need it; take"
+                                + " the skewness-corrected interval",
+                        MOST,
+                        n));
+    }
+
     /// @param observations finite; not changed
     /// @param key of the random numbers, of the purpose of a bootstrap; sample i takes those of item i
     public static Interval of(double[] observations, double level, StreamKey key) {
@@ -51,14 +72,7 @@ public final class BootstrapT {
             }
         }
         if (n > MOST) {
-            return none(
-                    level,
-                    String.format(
-                            Locale.ROOT,
-                            "the bootstrap takes at most %,d observations, and there are %,d: so many do not need it; take"
-                                    + " the skewness-corrected interval",
-                            MOST,
-                            n));
+            return ofTooMany(n, level);
         }
         if (n < LEAST) {
             return none(

@@ -1,12 +1,16 @@
 package dev.leadline.model;
 
+import dev.leadline.estimate.Estimand;
 import dev.leadline.interval.Bounds;
 import dev.leadline.interval.IntervalKind;
 import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.numeric.Shortest;
 import dev.leadline.problem.Nearest;
 import dev.leadline.problem.Problem;
+import dev.leadline.scheme.Proposal;
+import dev.leadline.scheme.Scheme;
 import java.util.Arrays;
+import java.util.List;
 import java.util.stream.Collectors;
 
 /// Makes the interval that is wanted of its draft.
@@ -28,6 +32,65 @@ final class Intervals {
                     "Add \"bounds\": [least, greatest].");
         }
         return new IntervalWish(kind, draft.bounds());
+    }
+
+    /// Whether the kind suits every answer and every lane.
+    static void check(IntervalWish wish, List<Ask> asks, List<Lane> lanes, Findings findings) {
+        if (wish.kind() == IntervalKind.AUTO) {
+            return;
+        }
+        String kind = wish.kind().word();
+        for (Ask ask : asks) {
+            boolean chance = ask.estimand() instanceof Estimand.Probability;
+            boolean mean = ask.estimand() instanceof Estimand.Mean || ask.estimand() instanceof Estimand.Integral;
+            boolean ofHits = wish.kind() == IntervalKind.CLOPPER_PEARSON || wish.kind() == IntervalKind.WILSON;
+            if (ofHits ? !chance : !mean) {
+                findings.add(
+                        "$.interval",
+                        "the interval \"%s\" is not for a %s"
+                                .formatted(
+                                        kind,
+                                        Draft.AskDraft.words(ask.estimand().word())),
+                        ofHits
+                                ? "It counts the hits of an event."
+                                : "It is made for means: a chance has intervals of its own, which hold where hits are"
+                                        + " few.",
+                        "Leave it out: each answer then gets the interval that suits it.");
+                return;
+            }
+        }
+        for (Lane lane : lanes) {
+            if (!suits(wish.kind(), lane.scheme())) {
+                findings.add(
+                        "$.interval",
+                        "the interval \"%s\" is not for lane %s".formatted(kind, lane.name()),
+                        "It needs %s; the lane is %s."
+                                .formatted(needed(wish.kind()), lane.scheme().inWords()),
+                        "Leave it out, or take a lane that has them.");
+                return;
+            }
+        }
+    }
+
+    private static boolean suits(IntervalKind kind, Scheme scheme) {
+        return switch (kind) {
+            case AUTO, STUDENT -> true;
+            case CLOPPER_PEARSON, WILSON, BOOTSTRAP_T -> scheme.isPlain();
+            case SKEWNESS_CORRECTED ->
+                scheme.controls().isEmpty()
+                        && scheme.drawFrom().filter(Proposal::selfNormalised).isEmpty();
+            case HOEFFDING, EMPIRICAL_BERNSTEIN -> scheme.controls().isEmpty() && !scheme.isWeighted();
+        };
+    }
+
+    private static String needed(IntervalKind kind) {
+        return switch (kind) {
+            case AUTO, STUDENT -> "nothing";
+            case CLOPPER_PEARSON, WILSON, BOOTSTRAP_T -> "independent draws that count 1 each";
+            case SKEWNESS_CORRECTED -> "a plain mean of observations";
+            case HOEFFDING, EMPIRICAL_BERNSTEIN ->
+                "observations within the bounds, which weights and control variates leave";
+        };
     }
 
     private static IntervalKind kind(String word, Findings findings) {

@@ -4,14 +4,22 @@ import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.CrossFit;
 import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Estimate;
+import dev.leadline.estimate.Outcomes;
 import dev.leadline.estimate.Regression;
 import dev.leadline.estimate.SelfNormalised;
+import dev.leadline.interval.BootstrapT;
+import dev.leadline.interval.Bounds;
 import dev.leadline.interval.ClopperPearson;
+import dev.leadline.interval.EmpiricalBernstein;
+import dev.leadline.interval.Hoeffding;
 import dev.leadline.interval.Interval;
+import dev.leadline.interval.IntervalKind;
 import dev.leadline.interval.NoHit;
+import dev.leadline.interval.SkewnessCorrected;
 import dev.leadline.interval.SplittingSteps;
 import dev.leadline.interval.Student;
 import dev.leadline.interval.ToRounding;
+import dev.leadline.interval.Wilson;
 import dev.leadline.model.Ask;
 import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
@@ -38,7 +46,10 @@ final class MeanAnswers {
         OptionalLong hits =
                 ask.estimand() instanceof Estimand.Probability ? hits(scheme, sums, k) : OptionalLong.empty();
         if (scheme.isPlain() && hits.isPresent()) {
-            var interval = ClopperPearson.of(hits.getAsLong(), sums.count(), sums.excluded(), level);
+            boolean isWilson = shown.question().interval().kind() == IntervalKind.WILSON;
+            var interval = isWilson
+                    ? Wilson.of(hits.getAsLong(), sums.count(), sums.excluded(), level)
+                    : ClopperPearson.of(hits.getAsLong(), sums.count(), sums.excluded(), level);
             return answer(ask, sums, Estimate.mean(sums, k), interval, hits);
         }
         if (scheme.points() instanceof Repetitions repetitions) {
@@ -66,8 +77,41 @@ final class MeanAnswers {
                 ? Student.none(
                         level,
                         "the control variates explain every outcome seen so far: no spread to build an interval from")
-                : Student.of(estimate, level);
+                : wished(shown, estimate);
         return answer(ask, sums, estimate, bounded(ask, interval), hits);
+    }
+
+    /// The interval of the kind that the question wants.
+    private static Interval wished(Shown shown, Estimate estimate) {
+        Accumulator sums = shown.sums();
+        int k = shown.first();
+        double level = shown.level();
+        var wish = shown.question().interval();
+        return switch (wish.kind()) {
+            case AUTO, STUDENT, CLOPPER_PEARSON, WILSON -> Student.of(estimate, level);
+            case SKEWNESS_CORRECTED -> SkewnessCorrected.of(sums, k, level);
+            case HOEFFDING -> {
+                Bounds bounds = wish.bounds().orElseThrow();
+                yield Hoeffding.of(sums, k, bounds.low(), bounds.high(), level);
+            }
+            case EMPIRICAL_BERNSTEIN -> {
+                Bounds bounds = wish.bounds().orElseThrow();
+                yield EmpiricalBernstein.of(sums, k, bounds.low(), bounds.high(), level);
+            }
+            case BOOTSTRAP_T -> resampled(shown, estimate);
+        };
+    }
+
+    /// From the observations themselves, at the end of a run, since it takes long; Student's until then.
+    private static Interval resampled(Shown shown, Estimate estimate) {
+        if (shown.sums().count() > BootstrapT.MOST) {
+            return BootstrapT.ofTooMany(shown.sums().count(), shown.level());
+        }
+        return shown.outcomes()
+                .filter(Outcomes::isSettled)
+                .flatMap(Outcomes::ends)
+                .map(ends -> BootstrapT.of(ends.getFirst(), shown.level()))
+                .orElseGet(() -> Student.of(estimate, shown.level()));
     }
 
     private static boolean isZero(Accumulator sums, int k) {
