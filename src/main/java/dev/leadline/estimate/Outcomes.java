@@ -182,7 +182,11 @@ public final class Outcomes {
 
     /// By how much outcomes exceed `x`, summed by their weights; `NaN` where `x` is not near the quantile.
     public double excessOver(double x) {
-        return ranks.getFirst().excessOver(x);
+        return ranks.reversed().stream()
+                .mapToDouble(within -> within.excessOver(x))
+                .filter(over -> !Double.isNaN(over))
+                .findFirst()
+                .orElse(Double.NaN);
     }
 
     /// Outcomes in the lowest and in the highest window, each in order, where all are kept and count 1 each.

@@ -68,7 +68,7 @@ class SecondPassTest {
             Answer again = last(run(question, points, most, 2));
             if (estimand instanceof Estimand.TailMean) {
                 // Sums are added in another order.
-                assertEquals(kept.estimate(), again.estimate(), 1e-3 * Math.abs(kept.estimate()));
+                assertEquals(kept.estimate(), again.estimate(), 1e-12 * Math.abs(kept.estimate()));
                 continue;
             }
             assertFalse(again.provisional(), "kept at most " + most);
