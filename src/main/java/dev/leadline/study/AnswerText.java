@@ -40,8 +40,7 @@ public final class AnswerText {
         boolean covers = answer.coverage().isPresent();
         facts.add((isBounded(answer) && !covers ? answer.interval().percent() + ", " : "") + "lane " + lane);
         if (covers && isBounded(answer)) {
-            facts.add(
-                    "the mean is " + mean(answer) + " with " + answer.interval().percent() + " confidence");
+            facts.add("mean " + mean(answer) + " at " + answer.interval().percent());
         }
         if (answer.hits().orElse(1) == 0) {
             facts.add("no hit in " + draws(answer));

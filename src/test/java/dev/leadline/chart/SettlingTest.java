@@ -1,6 +1,7 @@
 package dev.leadline.chart;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -77,11 +78,12 @@ class SettlingTest {
     @Test
     void takesEachAnswerOfARun() throws InterruptedException {
         var project = Project.of(ProjectFile.parse("""
-                {"leadline": 1, "title": "Three answers",
-                 "inputs": [{"name": "x", "unit": "m", "density": {"family": "uniform", "from": 0, "to": 2}}],
-                 "ask": [{"mean": "x", "unit": "m", "label": "mean depth"}, {"probability": "x > 3"}, {"mean": "x^2"}],
-                 "reference": {"value": 1}, "tolerance": {"relative": 0.1},
-                 "stop": {"rule": "fixed", "draws": 20000}, "seed": 11}"""));
+            {"leadline": 1, "title": "Three answers",
+             "inputs": [{"name": "x", "unit": "m", "density": {"family": "uniform", "from": 0, "to": 2}}],
+             "ask": [{"mean": "x", "unit": "m", "label": "mean depth"}, {"probability": "x > 3"}, {"mean": "x^2"}],
+             "reference": {"value": 1}, "tolerance": {"relative": 0.1},
+             "stop": {"rule": "fixed", "draws": 20000}, "seed": 11}\
+            """));
         List<Trace> traces;
         try (var study = Study.start(project.question(), project.plan(), 2, _ -> {})) {
             traces = study.await().lanes().stream().map(LaneState::trace).toList();
@@ -151,5 +153,38 @@ class SettlingTest {
         String caption = Caption.of(Invented.noHit());
         assertTrue(caption.contains("draws without a hit"), caption);
         assertTrue(caption.contains("interval 0 to 5.8×10⁻⁵"), caption);
+    }
+
+    @Test
+    void theAnyTimeBandLiesOutsideTheInterval() {
+        var points = List.of(
+                new Point(100, 1, .8, 1.2, .5, 1.5),
+                new Point(200, 1, .9, 1.1, .75, 1.25),
+                new Point(400, 1, .9, 1.1, .8, 1.2));
+        var banded = Invented.of(points.toArray(Point[]::new));
+        var picture = Picture.of(banded, View.FOLLOWING, Theme.LIGHT, 900, 520);
+        assertTrue(picture.values().contains(.8) && picture.values().contains(1.2));
+        assertTrue(banded.caption().contains("any-time band, which holds at every look"));
+        var reading = picture.at(picture.xOf(400), picture.yOf(1)).orElseThrow().text();
+        assertTrue(reading.contains("any-time band 0.80 to 1.20"), reading);
+        var plain = Invented.of(new Point(100, 1, .8, 1.2), new Point(200, 1, .9, 1.1));
+        assertFalse(plain.caption().contains("any-time"));
+        var image = picture.image(1);
+        int inBand = image.getRGB((int) picture.xOf(300), (int) picture.yOf(1.17));
+        int inInterval = image.getRGB((int) picture.xOf(300), (int) picture.yOf(1.07));
+        int outside = image.getRGB(
+                (int) picture.xOf(300), (int) picture.yOf(picture.values().high()) + 2);
+        assertTrue((outside & 0xff0000) > (inBand & 0xff0000), "the band is a fill");
+        assertTrue((inBand & 0xff0000) > (inInterval & 0xff0000), "the interval is a stronger one");
+    }
+
+    @Test
+    void whatIsProvisionalIsSaid() {
+        var points = List.of(new Point(100, 1, .8, 1.2), new Point(200, 1, .9, 1.1));
+        var series = new Series("A", "independent", points, OptionalLong.empty(), 0, true);
+        var settling = Invented.settling("fuel", "t", Optional.empty(), Optional.empty(), List.of(series));
+        assertTrue(settling.caption().contains("provisional"));
+        assertTrue(Picture.of(settling, View.FOLLOWING, Theme.LIGHT, 900, 520).remarks().stream()
+                .anyMatch(remark -> remark.startsWith("lane A: provisional")));
     }
 }

@@ -159,8 +159,7 @@ class AnswerTextTest {
         var a = distribution(1.970317, false);
         assertEquals("3.2 mm, u = 2.0 mm, 95 % of outcomes in [-0.9, 6.4] mm", AnswerText.value(a));
         assertEquals(
-                "3.2 mm, u = 2.0 mm, 95 % of outcomes in [-0.9, 6.4] mm"
-                        + " (lane A; the mean is 3.2060 ± 0.0039 mm with 95 % confidence)",
+                "3.2 mm, u = 2.0 mm, 95 % of outcomes in [-0.9, 6.4] mm" + " (lane A; mean 3.2060 ± 0.0039 mm at 95 %)",
                 AnswerText.of(a, "A"));
         assertEquals(
                 Optional.of("95 % of outcomes: [-0.9, 6.4] with half of the rest on either side,"
@@ -173,7 +172,7 @@ class AnswerTextTest {
 
     @Test
     void whatIsNotFoundYetIsProvisional() {
-        assertTrue(AnswerText.of(distribution(2, true), "A").endsWith("confidence; provisional)"));
+        assertTrue(AnswerText.of(distribution(2, true), "A").endsWith("95 %; provisional)"));
     }
 
     /// Fieller's limits of a ratio lie unevenly; a deviation is bounded on its logarithm.

@@ -9,6 +9,7 @@ import dev.leadline.model.Tolerance;
 import dev.leadline.model.UnitWords;
 import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
+import dev.leadline.study.Left;
 import dev.leadline.study.StudyState.Activity;
 import dev.leadline.trace.Answer;
 import java.util.ArrayList;
@@ -18,6 +19,9 @@ import java.util.stream.Stream;
 
 /// The rows of the lane table: the lanes of the project as they are written now, with what the run shows of each.
 final class LaneRows {
+    /// Limits of what is left are told where one is so many times the other.
+    private static final double FAR_APART = 1.4;
+
     private LaneRows() {}
 
     /// @param lane its index in the project
@@ -123,19 +127,29 @@ final class LaneRows {
 
     private static String left(State.Shown shown, LaneState lane, Answer a) {
         Optional<Tolerance> tolerance = shown.project().question().tolerance();
-        boolean met = tolerance
-                .filter(t -> t.met(a.estimate(), a.interval().reach(a.estimate())))
-                .isPresent();
-        if (met) {
-            return "met";
-        }
+        boolean met = tolerance.filter(t -> lane.trace().course().isMet(t, a)).isPresent();
         if (lane.trace().finished()) {
-            return tolerance.isPresent() ? "not met" : "none";
+            return met ? "met" : tolerance.isPresent() ? "not met" : "none";
         }
         var progress = Progress.of(lane.trace().marks(), shown.project().plan().stop());
-        return progress.secondsLeft().isPresent()
-                ? Figures.duration(progress.secondsLeft().getAsDouble())
-                : "";
+        var left = lane.left();
+        return left.filter(_ -> progress.drawsPerSecond().isPresent())
+                .map(draws -> between(draws, progress.drawsPerSecond().getAsDouble()))
+                .orElseGet(() -> progress.secondsLeft().isPresent()
+                        ? Figures.duration(progress.secondsLeft().getAsDouble())
+                        : "");
+    }
+
+    /// As `40 s`; with both limits where they are far apart, as `30 s to 2 min`.
+    private static String between(Left draws, double rate) {
+        double low = draws.low() / rate;
+        double high = draws.high() / rate;
+        if (!(high < Double.POSITIVE_INFINITY)) {
+            return "over " + Figures.duration(low);
+        }
+        return high > FAR_APART * low && high > 2
+                ? Figures.duration(low) + " to " + Figures.duration(high)
+                : Figures.duration(draws.value() / rate);
     }
 
     private static String why(LaneDraft draft, State.Shown shown, LaneState lane) {

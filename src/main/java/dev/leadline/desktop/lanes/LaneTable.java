@@ -81,7 +81,9 @@ final class LaneTable extends GridPane {
                 figures.add(figure);
                 add(figure, c, r);
             }
-            why.setMinWidth(0);
+            why.setMinWidth(60);
+            why.setWrapText(true);
+            why.setMinHeight(USE_PREF_SIZE);
             add(why, WHY, r);
         }
 
@@ -116,7 +118,7 @@ final class LaneTable extends GridPane {
             column.setHalignment(c >= VALUE && c <= LEFT ? HPos.RIGHT : HPos.LEFT);
             if (c == SCHEME || c == WHY) {
                 column.setHgrow(Priority.ALWAYS);
-                column.setMinWidth(c == SCHEME ? 110 : 50);
+                column.setMinWidth(c == SCHEME ? 110 : 100);
             }
             getColumnConstraints().add(column);
         }

@@ -2,8 +2,10 @@ package dev.leadline.desktop.run;
 
 import dev.leadline.desktop.style.Figures;
 import dev.leadline.model.Stop;
+import dev.leadline.study.Left;
 import dev.leadline.trace.Mark;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 
 /// How far a lane has come, from its marks and its stop rule.
@@ -29,6 +31,19 @@ public record Progress(long draws, double part, OptionalDouble drawsPerSecond, O
             left = OptionalDouble.of(Math.max(0, Math.min(toDraws, toTime)));
         }
         return new Progress(last.draws(), Math.clamp(Math.max(byDraws, byTime), 0, 1), rate, left);
+    }
+
+    /// With what is left as far as the stop rule says, which may come before the budget is used up.
+    public Progress foreseeing(Optional<Left> left) {
+        if (left.isEmpty() || !(left.get().value() < Double.POSITIVE_INFINITY)) {
+            return this;
+        }
+        double still = left.get().value();
+        var seconds = drawsPerSecond.isPresent()
+                ? OptionalDouble.of(
+                        Math.min(still / drawsPerSecond.getAsDouble(), secondsLeft.orElse(Double.POSITIVE_INFINITY)))
+                : secondsLeft;
+        return new Progress(draws, Math.max(part, draws / (draws + still)), drawsPerSecond, seconds);
     }
 
     /// As `3.1 million draws · 24 million a second · 40 s left`.

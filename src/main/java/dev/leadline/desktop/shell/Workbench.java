@@ -8,6 +8,7 @@ import dev.leadline.desktop.stage.StagePane;
 import dev.leadline.desktop.style.Styles;
 import dev.leadline.desktop.working.SketchView;
 import dev.leadline.desktop.working.WorkingPane;
+import dev.leadline.ground.Action;
 import dev.leadline.model.Sentence;
 import java.util.Arrays;
 import java.util.List;
@@ -38,7 +39,7 @@ public final class Workbench extends BorderPane {
 
     private final WorkbenchViewModel model;
     private final WorkingPane working;
-    private final GroundsPane grounds = new GroundsPane();
+    private final GroundsPane grounds = new GroundsPane(this::act);
     private final VBox top;
     private final VBox bottom;
     private final SplitPane panes;
@@ -151,6 +152,22 @@ public final class Workbench extends BorderPane {
                 model.picker().close();
                 model.lanes().open().set(true);
             }
+        }
+    }
+
+    /// Does what a ground offers.
+    private void act(Action action) {
+        switch (action) {
+            case Action.MoreDraws(var inAll) -> model.runLonger(inAll);
+            case Action.DrawWider _ -> {
+                model.lanes().open().set(true);
+                model.suggestion().search();
+            }
+            case Action.AddReference _ -> working.openReference();
+            case Action.Rehearse _ -> {}
+            case Action.RunOtherSeed _ -> model.runWithOtherSeed();
+            case Action.LookAtDraw(long draw) -> working.openLookAt(draw);
+            case Action.AskAnother _ -> working.focusFormula();
         }
     }
 

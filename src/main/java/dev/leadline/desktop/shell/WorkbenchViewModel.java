@@ -18,8 +18,10 @@ import dev.leadline.desktop.working.ReferenceViewModel;
 import dev.leadline.ground.Ground;
 import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Project;
 import dev.leadline.model.Sentence;
+import dev.leadline.model.Stop;
 import dev.leadline.problem.Problem;
 import dev.leadline.problem.Refusal;
 import dev.leadline.project.DataFolder;
@@ -27,11 +29,14 @@ import dev.leadline.project.ProjectFile;
 import dev.leadline.project.WholeFile;
 import dev.leadline.study.AnswerText;
 import dev.leadline.study.LaneState;
+import dev.leadline.trace.Mark;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.OptionalLong;
+import java.util.concurrent.ThreadLocalRandom;
 import javafx.beans.binding.Bindings;
 import javafx.beans.binding.BooleanBinding;
 import javafx.beans.binding.ObjectBinding;
@@ -293,7 +298,9 @@ public final class WorkbenchViewModel {
                     yield "building the tables of the densities";
                 }
                 var done = Progress.of(
-                        lane.get().trace().marks(), shown.project().plan().stop());
+                                lane.get().trace().marks(),
+                                shown.project().plan().stop())
+                        .foreseeing(lane.get().left());
                 yield switch (shown.study().activity()) {
                     case PREPARING -> "building the tables of the densities";
                     case RUNNING -> done.text();
@@ -317,6 +324,7 @@ public final class WorkbenchViewModel {
                         .map(lane -> Progress.of(
                                         lane.trace().marks(),
                                         shown.project().plan().stop())
+                                .foreseeing(lane.left())
                                 .part())
                         .orElse(-1.0);
             }
@@ -528,14 +536,48 @@ public final class WorkbenchViewModel {
                         failure -> tell("The picture could not be written", failure)));
     }
 
+    // ---- what can be done about doubts
+
+    /// More draws of the same question: the budget grows, and the run starts anew from the same seed.
+    void runLonger(OptionalLong inAll) {
+        long made = RunViewModel.shown(run.state().get())
+                .flatMap(s -> s.study().lanes().stream()
+                        .flatMap(lane -> lane.trace().last().stream())
+                        .map(Mark::draws)
+                        .max(Long::compare))
+                .orElse(Stop.USUAL_DRAWS);
+        long wanted = Math.clamp(inAll.orElse(4 * made), made + 1, Stop.MOST_DRAWS);
+        project.settle();
+        project.edit(
+                "$.stop.draws",
+                d -> Edits.stop(
+                        d,
+                        Optional.of(d.stop()
+                                .orElse(new StopDraft("", OptionalLong.empty(), OptionalDouble.empty()))
+                                .withDraws(OptionalLong.of(wanted))
+                                .withSeconds(OptionalDouble.empty()))));
+        project.settle();
+        startRun();
+    }
+
+    /// The same question by fresh draws.
+    void runWithOtherSeed() {
+        project.settle();
+        project.edit(
+                "$.seed",
+                d -> Edits.seed(d, OptionalLong.of(ThreadLocalRandom.current().nextLong(Long.MAX_VALUE))));
+        project.settle();
+        startRun();
+    }
+
     // ---- the run menu
 
     public void askSeed() {
         var seed = project.draft().get().seed();
         dialogs.askText(
                         "Seed",
-                        "A whole number from 0. The same seed gives the same digits again; another one gives fresh draws."
-                                + " Empty: a new one is drawn for each run and recorded.",
+                        "A whole number from 0. The same seed gives the same digits again; another one gives fresh"
+                                + " draws. Empty: a new one is drawn for each run and recorded.",
                         seed.isPresent() ? Long.toString(seed.getAsLong()) : "")
                 .ifPresent(this::setSeed);
     }

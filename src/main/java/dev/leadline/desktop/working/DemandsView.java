@@ -1,8 +1,12 @@
 package dev.leadline.desktop.working;
 
 import dev.leadline.desktop.style.Styles;
+import dev.leadline.desktop.working.DemandsViewModel.RuleField;
 import dev.leadline.interval.IntervalKind;
 import java.util.ArrayList;
+import java.util.EnumMap;
+import java.util.Locale;
+import java.util.Map;
 import java.util.function.Consumer;
 import java.util.function.Supplier;
 import javafx.geometry.Pos;
@@ -26,6 +30,10 @@ final class DemandsView {
     private final ComboBox<IntervalKind> interval = new ComboBox<>();
     private final Field least;
     private final Field most;
+    private final ComboBox<String> rule = new ComboBox<>();
+    private final Map<RuleField, Field> ruleFields = new EnumMap<>(RuleField.class);
+    private final Map<RuleField, HBox> rulePairs = new EnumMap<>(RuleField.class);
+    private final FlowPane ruleLine = flow();
     private final Field draws;
     private final Field seconds;
     private final Messages toleranceMessages = new Messages();
@@ -60,6 +68,34 @@ final class DemandsView {
         interval.valueProperty().addListener((_, _, kind) -> use.setText(kind == null ? "" : IntervalWords.use(kind)));
         draws = field("draws", "draws at most", "Evaluations at most, as 1e6", 9, model::draws)
                 .prompt("1000000");
+        rule.getItems().setAll(RuleWords.ALL);
+        rule.setConverter(new RuleWords());
+        rule.setId("stop-rule");
+        rule.setAccessibleText("stop rule");
+        var promise = new Tooltip();
+        promise.setWrapText(true);
+        promise.setMaxWidth(320);
+        rule.setTooltip(promise);
+        rule.valueProperty().addListener((_, _, word) -> promise.setText(word == null ? "" : RuleWords.promise(word)));
+        rule.setOnAction(_ -> {
+            if (!showing && rule.getValue() != null) {
+                model.rule(rule.getValue());
+            }
+        });
+        ruleField(RuleField.HITS, "at", "hits", "Hits to stop at; empty: as the relative tolerance asks", 7);
+        ruleField(
+                RuleField.GUARD_DRAWS, "not before", "draws", "Least draws before the rule looks; empty: the usual", 7);
+        ruleField(
+                RuleField.GUARD_HITS,
+                "and",
+                "hits",
+                "Least hits, or misses where those are rarer; empty: the usual",
+                5);
+        ruleField(
+                RuleField.FIRST, "first stage", "observations", "Observations of the first stage; empty: the usual", 7);
+        ruleField(
+                RuleField.INFLATION, "times", "deviation", "What the deviation of the first stage is multiplied by", 4);
+        ruleField(RuleField.DIGITS, "to", "digits", "Digits of the standard uncertainty that count: 1 or 2", 3);
         seconds = field("seconds", "seconds at most", "Seconds of computing at most", 5, model::seconds)
                 .prompt("no limit");
         both.setOnAction(_ -> model.both(both.isSelected()));
@@ -81,7 +117,12 @@ final class DemandsView {
                 "fold-stop",
                 "stop",
                 "When a run ends",
-                new VBox(6, flow(pair("after", draws, "draws"), pair("or", seconds, "s")), stopMessages));
+                new VBox(
+                        6,
+                        flow(pair("stop", rule, "")),
+                        ruleLine,
+                        flow(pair("at most", draws, "draws"), pair("or", seconds, "s")),
+                        stopMessages));
         folds = new VBox(toleranceFold, stopFold);
     }
 
@@ -91,6 +132,19 @@ final class DemandsView {
 
     Node folds() {
         return folds;
+    }
+
+    private void ruleField(RuleField which, String before, String after, String tip, int columns) {
+        var field = field(
+                "stop-" + which.name().toLowerCase(Locale.ROOT).replace('_', '-'),
+                which.what(),
+                tip,
+                columns,
+                text -> model.ruleField(which, text));
+        field.prompt("usual");
+        ruleFields.put(which, field);
+        rulePairs.put(which, pair(before, field, after));
+        ruleLine.getChildren().add(rulePairs.get(which));
     }
 
     void openTolerance() {
@@ -104,7 +158,17 @@ final class DemandsView {
         show(confidence, model::confidenceText, "$.confidence");
         showing = true;
         interval.setValue(model.interval());
+        rule.setValue(model.rule());
         showing = false;
+        ruleFields.forEach((which, field) -> {
+            boolean taken = which.belongsTo(model.rule());
+            rulePairs.get(which).setVisible(taken);
+            rulePairs.get(which).setManaged(taken);
+            show(field, () -> model.ruleFieldText(which), which.path());
+        });
+        boolean any = rulePairs.values().stream().anyMatch(Node::isVisible);
+        ruleLine.setVisible(any);
+        ruleLine.setManaged(any);
         least.show(model.leastText());
         most.show(model.mostText());
         show(draws, model::drawsText, "$.stop.draws");
@@ -124,7 +188,7 @@ final class DemandsView {
         most.showFault(unbounded);
         stopMessages.show(project.problemsAt("$.stop"));
         toleranceFold.summary(model.toleranceSummary());
-        stopFold.summary("after " + DemandsViewModel.stopWords(project.draft().get()));
+        stopFold.summary(DemandsViewModel.stopSummary(project.draft().get()));
         openWhereFaulty(toleranceFold, !tolerance.isEmpty() || !wished.isEmpty());
         openWhereFaulty(stopFold, !project.problemsAt("$.stop").isEmpty());
     }

@@ -4,13 +4,17 @@ import dev.leadline.desktop.style.Figures;
 import dev.leadline.interval.Bounds;
 import dev.leadline.interval.IntervalKind;
 import dev.leadline.model.Draft;
+import dev.leadline.model.Draft.GuardDraft;
 import dev.leadline.model.Draft.IntervalDraft;
 import dev.leadline.model.Draft.StopDraft;
 import dev.leadline.model.Draft.ToleranceDraft;
 import dev.leadline.model.Sentence;
+import dev.leadline.model.Stop;
+import dev.leadline.model.StopRule;
 import dev.leadline.problem.Problem;
 import java.math.BigDecimal;
 import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalLong;
@@ -197,8 +201,99 @@ public final class DemandsViewModel {
                 "$.stop.seconds", draft().stop().map(StopDraft::seconds).orElse(OptionalDouble.empty()));
     }
 
+    /// Empty for the usual one.
+    void rule(String rule) {
+        project.settle();
+        for (String path : List.of("hits", "guard", "first", "inflation", "digits")) {
+            project.forget("$.stop." + path);
+        }
+        project.edit(
+                "$.stop.rule", d -> Edits.stop(d, kept(d.stop().orElse(NOTHING).withRule(rule))));
+    }
+
+    String rule() {
+        return stop().rule();
+    }
+
+    /// Fields that a rule takes besides its budget.
+    enum RuleField {
+        HITS("hits", "number of hits", StopRule.Hits.WORD),
+        GUARD_DRAWS("guard.draws", "least number of draws", StopRule.AnyTime.WORD, StopRule.AsymptoticWidth.WORD),
+        GUARD_HITS("guard.hits", "least number of hits", StopRule.AnyTime.WORD, StopRule.AsymptoticWidth.WORD),
+        FIRST("first", "observations of the first stage", StopRule.TwoStage.WORD, StopRule.Stein.WORD),
+        INFLATION("inflation", "inflation of the standard deviation", StopRule.TwoStage.WORD),
+        DIGITS("digits", "digits that count", StopRule.Jcgm101.WORD);
+
+        private final String path;
+        private final String what;
+        private final List<String> rules;
+
+        RuleField(String path, String what, String... rules) {
+            this.path = "$.stop." + path;
+            this.what = what;
+            this.rules = List.of(rules);
+        }
+
+        String path() {
+            return path;
+        }
+
+        String what() {
+            return what;
+        }
+
+        boolean belongsTo(String rule) {
+            return rules.contains(rule);
+        }
+    }
+
+    void ruleField(RuleField field, String text) {
+        project.typeOptionalNumber(field.path, field.what, text, (d, value) -> {
+            var s = d.stop().orElse(NOTHING);
+            var whole = value.isPresent() ? OptionalLong.of(Math.round(value.getAsDouble())) : OptionalLong.empty();
+            var guard = s.guard().orElse(new GuardDraft(OptionalLong.empty(), OptionalLong.empty()));
+            return Edits.stop(
+                    d,
+                    kept(
+                            switch (field) {
+                                case HITS -> s.withHits(whole);
+                                case GUARD_DRAWS -> s.withGuard(kept(new GuardDraft(whole, guard.hits())));
+                                case GUARD_HITS -> s.withGuard(kept(new GuardDraft(guard.draws(), whole)));
+                                case FIRST -> s.withFirst(whole);
+                                case INFLATION -> s.withInflation(value);
+                                case DIGITS -> s.withDigits(whole);
+                            }));
+        });
+    }
+
+    String ruleFieldText(RuleField field) {
+        var s = stop();
+        var whole = switch (field) {
+            case HITS -> s.hits();
+            case GUARD_DRAWS -> s.guard().map(GuardDraft::draws).orElse(OptionalLong.empty());
+            case GUARD_HITS -> s.guard().map(GuardDraft::hits).orElse(OptionalLong.empty());
+            case FIRST -> s.first();
+            case DIGITS -> s.digits();
+            case INFLATION -> OptionalLong.empty();
+        };
+        return project.fieldText(
+                field.path,
+                field == RuleField.INFLATION
+                        ? s.inflation()
+                        : whole.isPresent() ? OptionalDouble.of(whole.getAsLong()) : OptionalDouble.empty());
+    }
+
+    private StopDraft stop() {
+        return draft().stop().orElse(NOTHING);
+    }
+
+    private static Optional<GuardDraft> kept(GuardDraft guard) {
+        return guard.draws().isEmpty() && guard.hits().isEmpty() ? Optional.empty() : Optional.of(guard);
+    }
+
     private static Optional<StopDraft> kept(StopDraft s) {
-        return s.equals(NOTHING) ? Optional.empty() : Optional.of(s);
+        boolean fixed = s.equals(new StopDraft(Stop.FIXED, OptionalLong.empty(), OptionalDouble.empty()));
+        return s.equals(NOTHING) || fixed ? Optional.empty() : Optional.of(s);
     }
 
     /// As `±10 % at 95 %`.
@@ -213,7 +308,22 @@ public final class DemandsViewModel {
             s.draws().ifPresent(n -> parts.add(Figures.count(n) + " draws"));
             s.seconds().ifPresent(t -> parts.add(Figures.duration(t)));
         });
-        return parts.isEmpty() ? Figures.count(1_000_000) + " draws" : String.join(" or ", parts);
+        long unsaid = isFixed(d) ? Stop.USUAL_DRAWS : Stop.PATIENT_DRAWS;
+        return parts.isEmpty() ? Figures.count(unsaid) + " draws" : String.join(" or ", parts);
+    }
+
+    /// As `once the any-time band is narrow, at most 200 million draws`.
+    static String stopSummary(Draft d) {
+        String named = d.stop().map(StopDraft::rule).orElse(RuleWords.USUAL);
+        if (isFixed(d)) {
+            return "after " + stopWords(d);
+        }
+        return RuleWords.words(named.isEmpty() ? StopRule.AnyTime.WORD : named) + ", at most " + stopWords(d);
+    }
+
+    private static boolean isFixed(Draft d) {
+        String named = d.stop().map(StopDraft::rule).orElse(RuleWords.USUAL);
+        return named.equals(Stop.FIXED) || named.isEmpty() && d.tolerance().isEmpty();
     }
 
     static OptionalDouble inPercent(OptionalDouble part) {

@@ -206,7 +206,7 @@ public final class Edits {
         return demands(d, d.reference(), d.confidence(), d.tolerance(), interval, d.stop(), d.seed());
     }
 
-    static Draft stop(Draft d, Optional<StopDraft> stop) {
+    public static Draft stop(Draft d, Optional<StopDraft> stop) {
         return demands(d, d.reference(), d.confidence(), d.tolerance(), d.interval(), stop, d.seed());
     }
 

@@ -65,6 +65,10 @@ final class LookView {
         draw.requestFocus();
     }
 
+    void show(long index) {
+        draw.setText(Long.toString(index));
+    }
+
     private void show(LookViewModel.State state) {
         table.getChildren().clear();
         why.setManaged(state instanceof LookViewModel.State.Empty);

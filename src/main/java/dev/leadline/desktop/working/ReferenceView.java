@@ -78,6 +78,11 @@ final class ReferenceView {
         return fold;
     }
 
+    void open() {
+        fold.open();
+        value.requestFocus();
+    }
+
     void update() {
         var project = model.project();
         var colouring = Colouring.of(project.draft().get());

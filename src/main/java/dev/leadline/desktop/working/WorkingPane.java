@@ -145,6 +145,17 @@ public final class WorkingPane extends BorderPane {
         reveal(demands.folds());
     }
 
+    public void openReference() {
+        reference.open();
+        reveal(reference.fold());
+    }
+
+    /// @param draw its index
+    public void openLookAt(long draw) {
+        openLook();
+        look.show(draw);
+    }
+
     public void openLook() {
         look.open();
         reveal(look.fold());

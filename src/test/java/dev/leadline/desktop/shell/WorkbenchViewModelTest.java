@@ -54,6 +54,21 @@ class WorkbenchViewModelTest {
     }
 
     @Test
+    void moreDrawsRunAgainWithALargerBudget() {
+        opened();
+        model.runLonger(OptionalLong.of(5_000_000));
+        background.finishAll();
+        assertEquals(
+                OptionalLong.of(5_000_000),
+                model.project().draft().get().stop().orElseThrow().draws());
+        assertFalse(model.canRun().get(), "it runs");
+        model.project().undo();
+        assertEquals(
+                OptionalLong.of(20_000),
+                model.project().draft().get().stop().orElseThrow().draws());
+    }
+
+    @Test
     void opensAFile() {
         assertFalse(model.started().get());
         opened();

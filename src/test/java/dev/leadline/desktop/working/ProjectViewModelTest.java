@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.leadline.desktop.Drafts;
 import dev.leadline.desktop.background.HeldBackground;
+import dev.leadline.desktop.working.DemandsViewModel.RuleField;
 import dev.leadline.interval.IntervalKind;
 import dev.leadline.model.DataFiles;
 import dev.leadline.model.Draft;
@@ -181,6 +182,37 @@ class ProjectViewModelTest {
         demands.interval(IntervalKind.AUTO);
         demands.bounds("", "");
         assertTrue(project.draft().get().interval().isEmpty());
+    }
+
+    @Test
+    void aStopRuleHasItsOwnFields() {
+        demands.rule("any-time");
+        demands.ruleField(RuleField.GUARD_DRAWS, "2000");
+        demands.ruleField(RuleField.GUARD_HITS, "30");
+        demands.draws("1e6");
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+        assertEquals("2000", demands.ruleFieldText(RuleField.GUARD_DRAWS));
+        assertEquals(
+                "once the any-time band is narrow, at most 1.00 million draws",
+                DemandsViewModel.stopSummary(project.draft().get()));
+        demands.rule("stein");
+        demands.ruleField(RuleField.FIRST, "many");
+        assertEquals("many", demands.ruleFieldText(RuleField.FIRST));
+        demands.rule("two-stage");
+        demands.ruleField(RuleField.INFLATION, "1.2");
+        background.finishAll();
+        assertEquals(List.of(), project.problems().get());
+        assertEquals("", demands.ruleFieldText(RuleField.GUARD_HITS));
+        demands.rule("hits");
+        background.finishAll();
+        assertEquals("$.stop.rule", project.problems().get().getFirst().place().path());
+        demands.rule("");
+        demands.draws("");
+        assertTrue(project.draft().get().stop().isEmpty());
+        assertEquals(
+                "once the any-time band is narrow, at most 100 million draws",
+                DemandsViewModel.stopSummary(project.draft().get()));
     }
 
     @Test
