@@ -8,6 +8,7 @@ import java.util.Locale;
 import java.util.function.Consumer;
 import javafx.beans.property.SimpleStringProperty;
 import javafx.beans.property.StringProperty;
+import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.Button;
 import javafx.scene.control.Label;
@@ -100,6 +101,7 @@ public final class GroundsPane extends BorderPane {
         var button = new Button(action.words());
         button.getStyleClass().addAll("small", "ground-action");
         button.setWrapText(true);
+        button.setAlignment(Pos.CENTER_LEFT);
         button.setMinHeight(USE_PREF_SIZE);
         button.setMaxWidth(Double.MAX_VALUE);
         button.setTooltip(new Tooltip(tip(action)));

@@ -24,7 +24,7 @@ final class AskRow extends VBox {
             "quantile", "a quantile of",
             "tailMean", "the tail mean of",
             "ratio", "the ratio of",
-            "standardDeviation", "the standard deviation of",
+            "standardDeviation", "the std. deviation of",
             "distribution", "the distribution of");
 
     private static final List<String> IN_ORDER = List.of(
@@ -72,7 +72,7 @@ final class AskRow extends VBox {
                 .prompt("unit");
         unit.setId("ask-unit-" + index);
         label = new Field("name of the answer", "What to call the answer", 8, t -> model.label(index, t), left)
-                .prompt("what to call it")
+                .prompt("name")
                 .growing();
         HBox.setHgrow(label, Priority.ALWAYS);
         remove.getStyleClass().addAll(Styles.LINK, "remove");
