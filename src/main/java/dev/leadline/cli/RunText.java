@@ -76,7 +76,9 @@ final class RunText {
         if (answers.isEmpty()) {
             line("  no answer yet");
         }
-        answers.forEach(this::answer);
+        for (int k = 0; k < answers.size(); k++) {
+            answer(k, answers.get(k));
+        }
         together(answers);
         line("  " + facts(lane, answers));
         lane.trace().audit().flatMap(Trace::last).ifPresent(this::audit);
@@ -116,8 +118,11 @@ final class RunText {
                         need.basis());
     }
 
-    private void answer(Answer answer) {
-        String label = project.question().asks().size() == 1 || answer.label().isEmpty() ? "" : answer.label() + ": ";
+    /// @param k which of the answers, from 0
+    private void answer(int k, Answer answer) {
+        String label = project.question().asks().size() == 1
+                ? ""
+                : (answer.label().isEmpty() ? "answer " + (k + 1) : answer.label()) + ": ";
         line("  " + label + console.bold(AnswerText.value(answer)) + chance(answer));
         AnswerText.coverage(answer).ifPresent(coverage -> line("  " + coverage));
         line("  " + AnswerText.interval(answer));

@@ -36,7 +36,7 @@ final class Settled {
         Estimate after = evidence.estimate(second, k);
         double error = StrictMath.hypot(before.standardError(), after.standardError());
         double z = (after.value() - before.value()) / error;
-        if (Double.isNaN(z) || Double.isInfinite(error)) {
+        if (!(error > 0) || Double.isNaN(z) || Double.isInfinite(error)) {
             return Optional.empty();
         }
         String text = evidence.of(k) + "the second half of the draws differs from the first by "

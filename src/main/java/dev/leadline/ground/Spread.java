@@ -2,6 +2,9 @@ package dev.leadline.ground;
 
 import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
+import dev.leadline.interval.EmpiricalBernstein;
+import dev.leadline.interval.Hoeffding;
+import dev.leadline.interval.Interval;
 import java.util.Optional;
 
 /// Whether a mean has a spread to build an interval from. There is none where it has not seen two different outcomes:
@@ -22,7 +25,11 @@ final class Spread {
             var interval = evidence.answers().get(k).interval();
             return interval.note()
                     .filter(_ -> Double.isNaN(interval.halfWidth()))
-                    .map(note -> unit(evidence.of(k) + note));
+                    .map(note -> isBounded(interval)
+                            ? doubted(evidence.of(k) + note, "State bounds that hold, or take another interval")
+                            : doubted(
+                                    evidence.of(k) + note,
+                                    "Measure the outcome in a unit in which it is of moderate size"));
         }
         return Optional.of(Ground.doubted(
                 "spread",
@@ -43,8 +50,11 @@ final class Spread {
         };
     }
 
-    private static Ground unit(String text) {
-        return Ground.doubted(
-                "spread", Strength.OBJECTION, text, "Measure the outcome in a unit in which it is of moderate size");
+    private static boolean isBounded(Interval interval) {
+        return interval.kind().equals(Hoeffding.KIND) || interval.kind().equals(EmpiricalBernstein.KIND);
+    }
+
+    private static Ground doubted(String text, String remedy) {
+        return Ground.doubted("spread", Strength.OBJECTION, text, remedy);
     }
 }

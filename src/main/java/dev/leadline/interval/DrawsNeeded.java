@@ -33,10 +33,23 @@ public record DrawsNeeded(double low, double value, double high) {
             return new DrawsNeeded(n, n, n);
         }
         double tail = (1 - level) / 2;
-        double low = odds(left, hits + 1, -LogOdds.upper(hits + 1, left, tail));
-        double high = hits == 0 ? Double.POSITIVE_INFINITY : odds(left, hits, LogOdds.upper(left, hits, tail));
-        double middle = hits == 0 ? Double.POSITIVE_INFINITY : (double) left / hits;
-        return new DrawsNeeded(n * (1 + low), n * (1 + middle), n * (1 + high));
+        var others = wait(left, hits, level);
+        return new DrawsNeeded(n * (1 + others.low()), n * (1 + others.value()), n * (1 + others.high()));
+    }
+
+    /// Of the same rule where it begins anew: none of the n draws is one of its own.
+    public static DrawsNeeded afresh(HitsRule rule, long hits, long n, double level) {
+        var all = wait(rule.hits(), hits, level);
+        return new DrawsNeeded(n * all.low(), n * all.value(), n * all.high());
+    }
+
+    /// The wait for so many hits over that for those seen.
+    private static DrawsNeeded wait(long wanted, long hits, double level) {
+        double tail = (1 - level) / 2;
+        double low = odds(wanted, hits + 1, -LogOdds.upper(hits + 1, wanted, tail));
+        return hits == 0
+                ? new DrawsNeeded(low, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY)
+                : new DrawsNeeded(low, (double) wanted / hits, odds(wanted, hits, LogOdds.upper(wanted, hits, tail)));
     }
 
     /// Those that are left after n draws.

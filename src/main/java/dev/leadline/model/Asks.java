@@ -5,6 +5,7 @@ import dev.leadline.formula.Working;
 import dev.leadline.model.Draft.AskDraft;
 import dev.leadline.model.Draft.From;
 import dev.leadline.numeric.Shortest;
+import dev.leadline.numeric.Significant;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -90,7 +91,9 @@ final class Asks {
                 path.substring(0, path.lastIndexOf('.') + 1) + name,
                 "%s is %s but must be between 0 and 1".formatted(name, Shortest.text(part)),
                 "It is a probability.",
-                "Write 0.99 for 99 %.");
+                part > 1 && part < 100
+                        ? "Write %s for %s %%.".formatted(Significant.text(part / 100, 6), Significant.text(part, 6))
+                        : "Write 0.99 for 99 %.");
         return Optional.empty();
     }
 

@@ -53,8 +53,10 @@ final class Intervals {
                                         Draft.AskDraft.words(ask.estimand().word())),
                         ofHits
                                 ? "It counts the hits of an event."
-                                : "It is made for means: a chance has intervals of its own, which hold where hits are"
-                                        + " few.",
+                                : chance
+                                        ? "It is made for means: a chance has intervals of its own, which hold where"
+                                                + " hits are few."
+                                        : "It is made for means: other answers have intervals of their own.",
                         "Leave it out: each answer then gets the interval that suits it.");
                 return;
             }

@@ -285,7 +285,9 @@ final class DraftReader {
     }
 
     private List<String> formulas(Fields fields, String word) {
-        return word.equals("ratio") ? fields.texts(word, 2, FORMULA) : List.of(fields.text(word, FORMULA));
+        return word.equals("ratio")
+                ? fields.texts(word, 2, FORMULA, "a formula in double quotes, numerator first,")
+                : List.of(fields.text(word, FORMULA));
     }
 
     private ReferenceDraft reference(Fields fields) {

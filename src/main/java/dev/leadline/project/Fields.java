@@ -85,7 +85,7 @@ final class Fields {
     }
 
     /// So many texts in a list; empty ones where it holds something else.
-    List<String> texts(String name, int count, int most) {
+    List<String> texts(String name, int count, int most, String expected) {
         List<Json> list = list(name, count);
         List<String> texts = new ArrayList<>();
         for (int i = 0; i < count; i++) {
@@ -95,7 +95,12 @@ final class Fields {
                 texts.add("");
             }
         }
-        checkElements(name, list, count, Json.Text.class, "a text of at most " + most + " characters");
+        checkElements(
+                name,
+                list,
+                count,
+                Json.Text.class,
+                String.format(Locale.ROOT, "%s of at most %,d characters", expected, most));
         return texts;
     }
 
@@ -111,7 +116,7 @@ final class Fields {
     }
 
     private void checkElements(String name, List<Json> list, int count, Class<? extends Json> kind, String expected) {
-        if (list.size() < count) {
+        if (list.size() < count && members.map().get(name) instanceof Json.Elements) {
             add(
                     name,
                     "%s has %d of %d elements".formatted(name, list.size(), count),

@@ -76,7 +76,9 @@ public record Stratified(SequencedMap<String, Integer> cells, Allocation allocat
     public String inWords() {
         return word() + " in "
                 + cells.entrySet().stream()
-                        .map(entry -> entry.getValue() + " cells of " + entry.getKey())
+                        .map(entry -> entry.getValue()
+                                + (entry.getValue() == 1 ? " cell of " : " cells of ")
+                                + entry.getKey())
                         .collect(Collectors.joining(" × "))
                 + switch (allocation) {
                     case Allocation.Equal _ -> "";

@@ -79,7 +79,7 @@ public record Need(String lane, Ratio draws, Optional<Ratio> seconds, String bas
             return Optional.of(timed(
                     question,
                     lane,
-                    DrawsNeeded.of(rule.get(), lane.hits(), Math.round(lane.draws()), question.confidence()),
+                    DrawsNeeded.afresh(rule.get(), lane.hits(), Math.round(lane.draws()), question.confidence()),
                     perDraw,
                     String.format(
                             Locale.ROOT,

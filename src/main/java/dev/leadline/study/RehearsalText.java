@@ -19,6 +19,11 @@ public final class RehearsalText {
     /// Misses of one side that are so many times those of the other are said to be on that side.
     private static final double LOPSIDED = 2;
 
+    /// An error below this part of the value is that of rounding.
+    private static final double EXACT = 1e-13;
+
+    private static final int EXACT_DIGITS = 15;
+
     private RehearsalText() {}
 
     /// As `91.7 % ± 0.6 %`, the standard error behind it; the lower limit where every interval holds its
@@ -34,8 +39,8 @@ public final class RehearsalText {
         }
         var likely = answer.rateInterval(.95);
         return answer.rate() == 1
-                ? "100 % (at least %s %%)".formatted(percent(likely.low(), RoundingMode.FLOOR))
-                : "0 % (at most %s %%)".formatted(percent(likely.high(), RoundingMode.CEILING));
+                ? "100 %% (at least %s %%)".formatted(percent(likely.low(), RoundingMode.FLOOR))
+                : "0 %% (at most %s %%)".formatted(percent(likely.high(), RoundingMode.CEILING));
     }
 
     private static String percent(double rate, RoundingMode mode) {
@@ -102,8 +107,12 @@ public final class RehearsalText {
     public static String sought(Rehearsed answer) {
         Sought sought = answer.sought();
         var rounding = Rounding.of(sought.value(), sought.error());
-        String value = rounding.value()
-                + rounding.uncertainty().map(error -> " ± " + error).orElse("")
+        boolean isExact = sought.error() < EXACT * Math.abs(sought.value());
+        String value = (isExact ? Significant.text(sought.value(), EXACT_DIGITS) : rounding.value())
+                + rounding.uncertainty()
+                        .filter(_ -> !isExact)
+                        .map(error -> " ± " + error)
+                        .orElse("")
                 + UnitWords.after(answer.ask().unit());
         String from = sought.draws() > 0
                 ? "from " + sought.source()
@@ -121,17 +130,19 @@ public final class RehearsalText {
     public static List<String> estimates(Rehearsed answer) {
         List<String> sentences = new ArrayList<>();
         double spread = answer.empiricalError();
+        String unit = UnitWords.after(answer.ask().unit());
         if (spread > 0) {
             sentences.add("Bias of the estimates %s, their standard error %s%s%s."
                     .formatted(
-                            with(answer.bias(), answer.biasMcse()),
-                            with(spread, answer.empiricalMcse()),
+                            with(answer.bias(), answer.biasMcse()) + unit,
+                            with(spread, answer.empiricalMcse()) + unit,
                             Double.isNaN(answer.reportedError())
                                     ? ""
-                                    : ", which they state as " + with(answer.reportedError(), answer.reportedMcse()),
+                                    : ", which they state as " + with(answer.reportedError(), answer.reportedMcse())
+                                            + unit,
                             Double.isNaN(answer.meanHalfWidth())
                                     ? ""
-                                    : "; mean half-width " + Significant.text(answer.meanHalfWidth(), 3)));
+                                    : "; mean half-width " + Significant.text(answer.meanHalfWidth(), 3) + unit));
         }
         return sentences;
     }

@@ -97,6 +97,24 @@ class RehearseTest {
         assertTrue(outcome.out().contains("holds as often as it says"), outcome.out());
     }
 
+    /// Hoeffding's intervals of 50 draws are twice as long as they need be, and none of them reaches 0.9. Of ten
+    /// repetitions that all hold, the exact lower limit of the rate is `.025^(1/10) = .6915`.
+    @Test
+    void saysWhereAllHoldOrNone() throws IOException {
+        for (String[] expected : new String[][] {
+            {"0.5", "10 of 10 intervals hold the value, 100 % (at least 69.1 %)"},
+            {"0.9", "0 of 10 intervals hold the value, 0 % (at most 30.9 %)"}
+        }) {
+            Files.writeString(project, """
+                {"leadline": 1, "inputs": [{"name": "u", "density": {"family": "uniform", "from": 0, "to": 1}}],
+                 "ask": {"mean": "u", "unit": "m"}, "reference": {"value": %s}, "interval": "hoeffding",
+                 "bounds": [0, 1], "stop": {"rule": "fixed", "draws": 50}, "seed": 1}
+                """.formatted(expected[0]));
+            var outcome = leadline("rehearse", project, "--repetitions", "10");
+            assertTrue(outcome.out().contains(expected[1]), outcome.out() + outcome.err());
+        }
+    }
+
     @Test
     void refuses() {
         for (String[] wrong : new String[][] {

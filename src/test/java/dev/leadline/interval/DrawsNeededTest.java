@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import dev.leadline.stream.Address;
 import dev.leadline.stream.Purpose;
 import dev.leadline.stream.Stream;
+import org.apache.commons.statistics.distribution.FDistribution;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -76,5 +77,18 @@ class DrawsNeededTest {
         }
         double error = Math.sqrt(.95 * .05 / runs);
         assertTrue((double) within / runs >= .95 - 4 * error, within + " of " + runs);
+    }
+
+    /// Whatever was seen, a run that begins anew needs all its hits: the ratio of two gamma variables is that of F.
+    /// One hit more stands in the lower limit, for the draws after the last one.
+    @ParameterizedTest(name = "{0} hits in 65,536 draws, {1} wanted")
+    @CsvSource({"822, 385", "40, 385", "385, 385"})
+    void hitsOfAnotherRunDoNotCount(int seen, int wanted) {
+        var needed = DrawsNeeded.afresh(new HitsRule(wanted, .95), seen, 65_536, .95);
+        double low = FDistribution.of(2.0 * wanted, 2.0 * (seen + 1)).inverseCumulativeProbability(.025);
+        double high = FDistribution.of(2.0 * wanted, 2.0 * seen).inverseCumulativeProbability(.975);
+        assertEquals(65_536.0 * wanted / (seen + 1) * low, needed.low(), 1e-6 * needed.low());
+        assertEquals(65_536.0 * wanted / seen, needed.value(), 1e-9 * needed.value());
+        assertEquals(65_536.0 * wanted / seen * high, needed.high(), 1e-6 * needed.high());
     }
 }
