@@ -134,7 +134,7 @@ class StopRulesTest {
         }
     }
 
-    /// Repetitions of a watched lane are judged by its band: at least 99 % hold (METHODS §3).
+    /// Repetitions of a watched lane are judged by its band: at least 99 % hold.
     @Test
     void aRehearsalStopsByTheRule() throws IOException {
         var file = project("{\"mean\": \"x\"}", ", \"tolerance\": {\"absolute\": 0.1}, \"reference\": {\"value\": 1}");
@@ -156,7 +156,7 @@ class StopRulesTest {
         var stage = lane.required("firstStage");
         assertEquals(10_000, stage.required("draws").asInt());
         assertFalse(stage.required("inAnswer").asBoolean());
-        // METHODS: kurtosis allowed for at alpha .05, 10,000 draws, inflation 1.2
+        // The kurtosis allowed for at alpha .05, 10,000 draws, inflation 1.2
         assertEquals(24.9393, number(stage.required("largestKurtosis")), 5e-5);
         assertEquals(lane.required("draws").asLong(), stage.required("wanted").asLong());
         assertEquals(

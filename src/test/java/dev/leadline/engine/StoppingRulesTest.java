@@ -176,7 +176,7 @@ class StoppingRulesTest {
         assertEquals(Judged.INTERVAL, trace.course().judged());
     }
 
-    /// To ±20 % at 95 % take 97 hits, which promise it; METHODS §3 by a script of its own.
+    /// To ±20 % at 95 % take 97 hits, which promise it (`HitsRuleTest`).
     @Test
     void anyTimeCountsHitsWhereItCan() throws InterruptedException {
         var trace = run(RARE, Scheme.of(new Independent()), ANY_TIME, 1_000_000, 2);
@@ -198,7 +198,8 @@ class StoppingRulesTest {
     }
 
     /// The estimate has no bias and the interval its level: exact distribution of the wait for hits. At the
-    /// end of the item instead, the interval would hold in about .54 of the runs (METHODS §3).
+    /// end of the item instead, the interval would hold in about .54 of the runs, as a simulation apart from
+    /// this code found.
     @Test
     void hitsAreUnbiasedAndHold() throws InterruptedException {
         int paths = 2000;
@@ -245,7 +246,7 @@ class StoppingRulesTest {
                         .01));
     }
 
-    /// At least 99 % of the runs end within the tolerance (METHODS §3).
+    /// At least 99 % of the runs end within the tolerance, as an independent simulation found.
     @ParameterizedTest(name = "{0}")
     @MethodSource("guarded")
     void anyTimeEndsWithinTheTolerance(String name, Question question, double truth) throws InterruptedException {
@@ -292,8 +293,9 @@ class StoppingRulesTest {
                 run(never, plain, told, 200_000, 1).stopReason().orElseThrow());
     }
 
-    /// Looks at nine doublings, 16 replicates of scrambled Sobol points in four dimensions: METHODS §3 has
-    /// .039 to .045 for looks at their levels, .31 to .42 for the plain interval looked at as often.
+    /// Looks at nine doublings, 16 replicates of scrambled Sobol points in four dimensions: an independent
+    /// simulation found .039 to .045 for looks at their levels, .31 to .42 for the plain interval looked at as
+    /// often.
     @Test
     void looksAtDoublingsHoldTogether() throws InterruptedException {
         int paths = 60;
