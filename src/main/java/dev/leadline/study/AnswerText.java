@@ -216,11 +216,14 @@ public final class AnswerText {
             return "no any-time band yet" + band.note().map(note -> ": " + note).orElse("");
         }
         Rounding rounding = Rounding.of(answer.estimate(), width(answer.estimate(), band));
-        String limits = Double.isNaN(band.high())
-                ? "from " + rounding.down(band.low())
-                : Double.isNaN(band.low())
-                        ? "up to " + rounding.up(band.high())
-                        : rounding.down(band.low()) + " to " + rounding.up(band.high());
+        String only = Significant.text(band.low(), ALL_DIGITS);
+        String limits = band.low() == band.high()
+                ? only + " to " + only
+                : Double.isNaN(band.high())
+                        ? "from " + rounding.down(band.low())
+                        : Double.isNaN(band.low())
+                                ? "up to " + rounding.up(band.high())
+                                : rounding.down(band.low()) + " to " + rounding.up(band.high());
         return "any-time band %s: it holds with %s however often one looks".formatted(limits, band.percent());
     }
 

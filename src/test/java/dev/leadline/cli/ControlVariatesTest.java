@@ -69,6 +69,20 @@ class ControlVariatesTest {
                 4 * error);
     }
 
+    /// Halves of which nothing is left but rounding do not tell whether they agree.
+    @Test
+    void withoutResidualsHalvesAreNotCompared() throws IOException {
+        var path = Files.writeString(folder.resolve("halves.leadline"), """
+                {"leadline": 1, "seed": 7, "inputs": [
+                 {"name": "n", "density": {"family": "poisson", "mean": 3}},
+                 {"name": "s", "density": {"family": "lognormal", "mean": 100, "sd": 120}},
+                 {"name": "cat", "density": {"family": "generalized-pareto", "location": 0, "scale": 50, "shape": 0.3}}],
+                 "ask": {"mean": "n*s + cat"}, "lanes": [{"name": "C", "points": "independent", "crossFitted": true,
+                 "controlVariates": [{"formula": "n*s", "mean": "exact"}, {"formula": "cat", "mean": 71.428571}]}]}""");
+        var outcome = leadline("run", path, "--quiet", "--draws", 100_000);
+        assertTrue(!outcome.out().contains("Infinity") && outcome.exitCode() == 0, outcome.out() + outcome.err());
+    }
+
     /// Each layout, each way to know a mean, weights, several answers: the value within four standard errors, and a
     /// standard error that is smaller than without. Two outcomes are controls themselves, which leaves
     /// nothing to chance.

@@ -66,6 +66,14 @@ class AnswerTextTest {
         assertEquals("cannot say yet (lane A; 1,000,000 draws)", AnswerText.of(none, "A"));
     }
 
+    /// A band between two outcomes that are the same one is written as the outcome.
+    @Test
+    void aBandOfOneValueIsThatValue() {
+        var a = answer(new Estimand.Quantile(.995), "", 8, 8, 8, OptionalLong.empty(), 0);
+        var band = new Interval(8, 8, .95, "any-time-quantile", "", Optional.empty());
+        assertEquals("any-time band 8 to 8: it holds with 95 % however often one looks", AnswerText.band(a, band));
+    }
+
     @Test
     void oneInHowManyIsForSmallChances() {
         var half = answer(new Estimand.Probability(), "1", .5, .49, .51, OptionalLong.of(500_000), 0);
