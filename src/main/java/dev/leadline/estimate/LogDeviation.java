@@ -3,14 +3,17 @@ package dev.leadline.estimate;
 /// The logarithm of the standard deviation of outcomes h, from observations that hold the means of `h - c`
 /// and of `(h - c)²` over their draws, for any fixed number c near the mean of h: single draws, folded
 /// ones, replicates, with weights or without. Its variance is that of the linear part (delta method), which
-/// is the limit of the jackknife.
+/// is the limit of the jackknife, and that of the square of the mean's error, which is all there is where
+/// outcomes lie equally far on either side of their mean. Of single draws without weights the two are the
+/// variance of the sample variance exactly.
 ///
 /// Of single draws without weights `Jackknife.ofVariance(sums, k).times(.5)` says the same from one
 /// component: the value to rounding, the variance to terms of the order of one over n (`LogDeviationTest`).
 ///
 /// Error: digits are lost in proportion to `(mean - c)²` over the variance.
 ///
-/// Source: Shao and Tu (1995), The Jackknife and Bootstrap, section 2.1.
+/// Sources: Shao and Tu (1995), The Jackknife and Bootstrap, section 2.1; Cramér (1946), Mathematical Methods
+/// of Statistics, (27.4.2), the exact variance.
 public final class LogDeviation {
     private LogDeviation() {}
 
@@ -55,6 +58,8 @@ public final class LogDeviation {
     /// @param spread of the linear parts of the variance
     private static Logarithm logarithm(double variance, double ofMean, double spread, double n) {
         double unbiased = variance + ofMean / n;
-        return new Logarithm(StrictMath.log(unbiased) / 2, Math.max(0, spread) / (4 * unbiased * unbiased * n), n - 1);
+        double ofSquare = 2 * (ofMean / unbiased) * (ofMean / unbiased) / (n * (n - 1));
+        double linear = Math.max(0, spread) / (unbiased * unbiased * n);
+        return new Logarithm(StrictMath.log(unbiased) / 2, (linear + ofSquare) / 4, n - 1);
     }
 }

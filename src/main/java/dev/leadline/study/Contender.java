@@ -1,6 +1,7 @@
 package dev.leadline.study;
 
 import dev.leadline.estimate.Accumulator;
+import dev.leadline.estimate.Estimand;
 import dev.leadline.estimate.Estimate;
 import dev.leadline.estimate.Jackknife;
 import dev.leadline.estimate.Logarithm;
@@ -10,6 +11,7 @@ import dev.leadline.scheme.Growing;
 import dev.leadline.scheme.Proposal;
 import dev.leadline.scheme.Scheme;
 import dev.leadline.trace.Answers;
+import dev.leadline.trace.Spread;
 import dev.leadline.trace.Trace;
 import java.util.Arrays;
 import java.util.List;
@@ -90,7 +92,26 @@ final class Contender {
     }
 
     Estimate estimate(Accumulator sums) {
-        return Answers.estimate(question, scheme(), sums, 0);
+        var seen = Answers.estimate(question, scheme(), sums, 0);
+        return new Estimate(origin() + seen.value(), seen.standardError(), seen.degrees());
+    }
+
+    /// From where sums of a tail mean and of a distribution are counted: it belongs to their value.
+    private double origin() {
+        return trace.outcomes().stream()
+                .findFirst()
+                .map(Spread::landmark)
+                .map(landmark -> switch (question.asks().getFirst().estimand()) {
+                    case Estimand.TailMean _ -> landmark.level();
+                    case Estimand.Distribution _ -> landmark.centre();
+                    case Estimand.Mean _,
+                            Estimand.Integral _,
+                            Estimand.Probability _,
+                            Estimand.Ratio _,
+                            Estimand.StandardDeviation _,
+                            Estimand.Quantile _ -> 0.0;
+                })
+                .orElse(0.0);
     }
 
     /// Whether observations differ, by more than rounding, so that there is a variance to compare.

@@ -57,6 +57,26 @@ class LogDeviationTest {
         assertEquals(1, log.variance() / variance, .04);
     }
 
+    /// Of as many ones as noughts no linear part is left; the variance of the sample variance is then
+    /// `2σ⁴/(n(n - 1))` (Cramér 1946, Mathematical Methods of Statistics, 27.4.2).
+    @ParameterizedTest
+    @ValueSource(ints = {2, 100, 1_000})
+    void hasAnErrorWhereOutcomesLieEquallyFarFromTheirMean(int n) {
+        double[] h = new double[n];
+        Arrays.fill(h, 0, n / 2, 1);
+        double[] ones = new double[n];
+        Arrays.fill(ones, 1);
+        for (double c : new double[] {.5, .47, 3}) {
+            double exact = 2.0 / n / (n - 1) / 4;
+            var about = about(h, c);
+            assertEquals(exact, LogDeviation.of(about, 0, 1).variance(), 1e-9 * exact);
+            double[] off = Arrays.stream(h).map(x -> x - c).toArray();
+            double[] squares = Arrays.stream(off).map(x -> x * x).toArray();
+            assertEquals(
+                    exact, LogDeviation.of(sums(off, squares, ones), 0, 1, 2).variance(), 1e-9 * exact);
+        }
+    }
+
     /// The same for every draw of an observation; equal weights change nothing.
     @Test
     void equalWeightsChangeNothing() {

@@ -7,9 +7,11 @@ import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Jackknife;
 import dev.leadline.estimate.LogDeviation;
 import dev.leadline.estimate.Logarithm;
+import org.apache.commons.statistics.distribution.BinomialDistribution;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 class LogScaleTest {
     @Test
@@ -43,6 +45,25 @@ class LogScaleTest {
         }
         CoverageTest.gate(coverage, byOne, repetitions, .0016);
         CoverageTest.gate(coverage, byTwo, repetitions, .0016);
+    }
+
+    /// The standard deviation of a fair coin, .5, is the greatest there is: a sum over all numbers of heads
+    /// of their exact chances (commons-statistics).
+    @ParameterizedTest
+    @ValueSource(ints = {10, 30, 100, 1_000})
+    void holdsForAFairCoin(int n) {
+        double covered = 0;
+        for (int heads = 1; heads < n; heads++) {
+            double[] values = new double[n];
+            double[] squares = new double[n];
+            for (int i = 0; i < n; i++) {
+                values[i] = i < heads ? .5 : -.5;
+                squares[i] = .25;
+            }
+            covered += BinomialDistribution.of(n, .5).probability(heads)
+                    * holds(LogDeviation.of(Observed.sums(values, squares), 0, 1), .5);
+        }
+        assertTrue(covered >= .95, "covers " + covered);
     }
 
     private static int holds(Logarithm logarithm, double sd) {

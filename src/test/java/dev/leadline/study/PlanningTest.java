@@ -157,6 +157,31 @@ class PlanningTest {
         assertEquals(
                 OptionalLong.empty(),
                 planned(question, new Antithetic(), 4096, 1).hits());
+        var longer = holding(
+                38_500,
+                seed -> planned(question, 65_536, seed).anyTime().orElseThrow().draws());
+        assertTrue(longer >= ENOUGH, "a pilot with hits enough for the rule: " + longer + " of " + SEEDS);
+    }
+
+    /// Of u between 10 and 11 the mean beyond the .9-quantile is 10.95, from the mean of the excess over
+    /// 10.9, .005, and that of its square, .001/3; the mean of the distribution is 10.5, with the variance
+    /// 1/12 (by hand). The level near the quantile comes from 4,096 draws: of the share beyond it, .1, a
+    /// standard error is 5 %, and of the variance, which goes with its cube, nearly 15.
+    @Test
+    void partsAreOfTheWholeValue() {
+        double ofTail = (.001 / 3 - .005 * .005) / .01;
+        partsOf(new Estimand.TailMean(.9), ofTail, 10.95);
+        partsOf(new Estimand.Distribution(.95), 1.0 / 12, 10.5);
+    }
+
+    private static void partsOf(Estimand estimand, double variance, double value) {
+        var question =
+                new Questions().uniform("u", 10, 11).ask(estimand, "u").build().to(relative(.001));
+        double width = .001 * value / 1.001;
+        double exact = Z * Z * variance / (width * width);
+        double needed =
+                planned(question, 65_536, 1).fixed().orElseThrow().draws().value();
+        assertEquals(exact, needed, .4 * exact, estimand.toString());
     }
 
     /// The median of u: n draws have it to `z / (2 √n)`. Limits of the .95-quantile need 72 draws, since
