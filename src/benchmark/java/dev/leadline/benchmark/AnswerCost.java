@@ -1,18 +1,16 @@
 package dev.leadline.benchmark;
 
 import com.sun.management.OperatingSystemMXBean;
-import dev.leadline.engine.LaneRun;
 import dev.leadline.engine.Questions;
 import dev.leadline.engine.Recipe;
-import dev.leadline.engine.Workers;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.estimate.Estimand;
-import dev.leadline.ground.Grounds;
 import dev.leadline.model.Lane;
 import dev.leadline.model.Plan;
 import dev.leadline.model.Question;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.Scheme;
+import dev.leadline.study.Study;
 import java.lang.management.ManagementFactory;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -27,9 +25,9 @@ import java.util.Locale;
 public final class AnswerCost {
     private static final OperatingSystemMXBean CLOCK =
             (OperatingSystemMXBean) ManagementFactory.getOperatingSystemMXBean();
-    private static final int DRAWS = 4_000_000;
-    private static final int WARM_UP = 4;
-    private static final int ROUNDS = 11;
+    private static final int DRAWS = 40_000_000;
+    private static final int WARM_UP = 2;
+    private static final int ROUNDS = 9;
     private static final String INTEGRAND = "x*sin(3*x) + log(1+x)";
 
     /// One kind of answer, asked of the same draws.
@@ -38,6 +36,7 @@ public final class AnswerCost {
         private final Question question;
         private final Plan plan;
         private final Recipe recipe;
+        private volatile int grounds;
         private final double[] time = new double[ROUNDS];
         private final double[] before = new double[ROUNDS];
 
@@ -67,13 +66,14 @@ public final class AnswerCost {
         /// A whole run, judged at every mark.
         double whole() throws Exception {
             long start = CLOCK.getProcessCpuTime();
-            try (var workers = new Workers(1)) {
-                var run = new LaneRun(recipe, plan.stop(), workers);
-                while (!run.finished()) {
-                    if (run.advance(0)) {
-                        Grounds.of(question, run.trace());
-                    }
-                }
+            try (var study = Study.start(
+                    question,
+                    plan,
+                    1,
+                    state -> grounds += state.lanes().stream()
+                            .mapToInt(lane -> lane.grounds().size())
+                            .sum())) {
+                study.await();
             }
             return (double) (CLOCK.getProcessCpuTime() - start) / DRAWS;
         }
@@ -114,8 +114,8 @@ public final class AnswerCost {
         var text = new StringBuilder("""
                 # Answers
 
-                Nanoseconds of processor time per draw of `%s` in a run of %,d draws, with the answer, its interval, its band and \
-                every ground at each mark; beside them those of the bare draws of the mean with their sums, measured just before in \
+                Nanoseconds of processor time per draw of `%s` in a run of %,d draws, with answers, intervals and bands at \
+                every mark and every ground at every look, thirty times a second; beside them those of the bare draws of the mean with their sums, measured just before in \
                 every round, and the ratio. Medians of %d rounds. Written by `AnswerCost`, which `mvn -B -Pbenchmark -DskipTests \
                 test` runs.
 

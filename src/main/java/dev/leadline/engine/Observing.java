@@ -14,14 +14,25 @@ final class Observing {
     private final Evaluation evaluation;
     private final double[][] components;
 
+    /// Of each thing asked: its first component and its first formula; then the first component of the controls.
+    private final int[] firsts;
+
+    private final int[] formulas;
+    private final int controls;
+
     Observing(Recipe recipe, Evaluation evaluation) {
         this.recipe = recipe;
         this.evaluation = evaluation;
         this.components = new double[recipe.components()][];
         List<Ask> asks = recipe.asks();
+        this.firsts = new int[asks.size()];
+        this.formulas = new int[asks.size()];
+        this.controls = Components.asked(asks);
         for (int a = 0; a < asks.size(); a++) {
             int formula = Components.firstFormula(asks, a);
             int first = Components.first(asks, a);
+            firsts[a] = first;
+            formulas[a] = formula;
             switch (asks.get(a).estimand()) {
                 case Estimand.Mean _, Estimand.Integral _, Estimand.Probability _ -> share(formula, first);
                 case Estimand.Ratio _ -> {
@@ -56,8 +67,8 @@ final class Observing {
     void observe(int rows) {
         List<Ask> asks = recipe.asks();
         for (int a = 0; a < asks.size(); a++) {
-            int first = Components.first(asks, a);
-            double[] outcome = evaluation.outcomes()[Components.firstFormula(asks, a)];
+            int first = firsts[a];
+            double[] outcome = evaluation.outcomes()[formulas[a]];
             Landmark landmark = recipe.landmarks().get(a);
             switch (asks.get(a).estimand()) {
                 case Estimand.Mean _, Estimand.Probability _ -> weigh(first, rows);
@@ -84,12 +95,12 @@ final class Observing {
             }
         }
         for (int c = 0; c < recipe.controls().size(); c++) {
-            double[] control = components[Components.asked(asks) + c];
+            double[] control = components[controls + c];
             double mean = recipe.controls().get(c).mean();
             for (int i = 0; i < rows; i++) {
                 control[i] -= mean;
             }
-            weigh(Components.asked(asks) + c, rows);
+            weigh(controls + c, rows);
         }
     }
 

@@ -27,6 +27,8 @@ public final class Sampler implements ItemWork {
     private final Optional<Extremes> extremes;
     private final List<Catch> caught;
     private final double[] sizes;
+    private final boolean[] weighed;
+    private final boolean[] whole;
 
     Sampler(Recipe recipe) {
         this(recipe, Folding.of(recipe));
@@ -48,6 +50,12 @@ public final class Sampler implements ItemWork {
                 .mapToObj(a -> new Catch(recipe.landmarks().get(a), recipe.isWeighed(formulas[a]), Program.BLOCK))
                 .toList();
         this.sizes = new double[Program.BLOCK];
+        this.weighed = new boolean[formulas.length];
+        this.whole = new boolean[formulas.length];
+        for (int a = 0; a < formulas.length; a++) {
+            weighed[a] = recipe.isWeighed(formulas[a]);
+            whole[a] = recipe.isWhole(formulas[a]);
+        }
     }
 
     @Override
@@ -86,16 +94,16 @@ public final class Sampler implements ItemWork {
 
     private void take(int rows, int from, Item item) {
         for (int a = 0; a < formulas.length; a++) {
-            if (recipe.isWeighed(formulas[a])) {
-                size(formulas[a], rows);
+            if (weighed[a]) {
+                size(a, rows);
             }
             caught.get(a).add(evaluation.outcomes()[formulas[a]], sizes, rows, from, item.draws());
         }
     }
 
-    /// What each draw counts for the outcome of a formula.
-    private void size(int formula, int rows) {
-        if (evaluation.isWeighted() && !recipe.isWhole(formula)) {
+    /// What each draw counts for the outcome of a thing asked.
+    private void size(int ask, int rows) {
+        if (evaluation.isWeighted() && !whole[ask]) {
             System.arraycopy(evaluation.weights(), 0, sizes, 0, rows);
         } else {
             Arrays.fill(sizes, 0, rows, 1);

@@ -6,7 +6,7 @@ import java.util.List;
 /// worker; outcomes that are not finite count nothing.
 public final class Catch {
     /// Outcomes that a picture sees of one item.
-    private static final int SHOWN = 1024;
+    private static final int SHOWN = 512;
 
     /// Steps from one to the next vary, so that they fall in step with no layout of points.
     private static final int ODD = 7919;
@@ -90,6 +90,14 @@ public final class Catch {
 
     private void show(double[] x, double[] w, int rows, int from, int all) {
         int step = Math.max(1, all / SHOWN);
+        if (step == 1) {
+            for (int i = 0; i < rows; i++) {
+                if (Double.isFinite(x[i])) {
+                    histogram.add(x[i], weighted ? w[i] : 1);
+                }
+            }
+            return;
+        }
         for (int k = Math.ceilDiv(from, step); (long) k * step < (long) from + rows; k++) {
             int i = k * step - from;
             int moved = Math.min(rows - 1, i + k * ODD % step);

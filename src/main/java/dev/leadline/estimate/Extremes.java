@@ -146,13 +146,35 @@ public final class Extremes {
         double greatest = Double.NEGATIVE_INFINITY;
         double sum = 0;
         double sumOfSquares = 0;
-        for (int i = 0; i < rows; i++) {
+        // Even and odd side by side: one of each would wait for itself.
+        double otherLeast = least;
+        double otherGreatest = greatest;
+        double otherSum = 0;
+        double otherSquares = 0;
+        int i = 0;
+        for (; i + 1 < rows; i += 2) {
+            double x = values[i];
+            double y = values[i + 1];
+            least = x < least ? x : least;
+            otherLeast = y < otherLeast ? y : otherLeast;
+            greatest = x > greatest ? x : greatest;
+            otherGreatest = y > otherGreatest ? y : otherGreatest;
+            sum += x;
+            otherSum += y;
+            sumOfSquares = Math.fma(x, x, sumOfSquares);
+            otherSquares = Math.fma(y, y, otherSquares);
+        }
+        if (i < rows) {
             double x = values[i];
             least = x < least ? x : least;
             greatest = x > greatest ? x : greatest;
             sum += x;
             sumOfSquares = Math.fma(x, x, sumOfSquares);
         }
+        least = Math.min(least, otherLeast);
+        greatest = Math.max(greatest, otherGreatest);
+        sum += otherSum;
+        sumOfSquares += otherSquares;
         if (!Double.isFinite(sum)) {
             double[] finite =
                     Arrays.stream(values, 0, rows).filter(Double::isFinite).toArray();

@@ -1,8 +1,7 @@
 package dev.leadline.estimate;
 
-/// How outcomes are spread, as a picture shows it: of bins of one width, what the outcomes in each weigh. Of long items
-/// of
-/// work it sees a thousand draws, spread over the item.
+/// How outcomes are spread, as a picture shows it: of bins of one width, what the outcomes in each weigh. Of
+/// long items of work it sees some five hundred draws, spread over the item.
 ///
 /// Confined to one worker until it is merged.
 public final class Histogram {
@@ -10,6 +9,7 @@ public final class Histogram {
 
     private final double from;
     private final double to;
+    private final double scale;
     private final double[] weights = new double[BINS];
     private double below;
     private double above;
@@ -20,6 +20,7 @@ public final class Histogram {
     public Histogram(double from, double to) {
         this.from = from;
         this.to = to;
+        this.scale = BINS / (to - from);
     }
 
     /// Adds one outcome, which is finite.
@@ -30,7 +31,7 @@ public final class Histogram {
         } else if (x > to) {
             above += w;
         } else {
-            weights[to > from ? (int) Math.min(BINS - 1, (x - from) / (to - from) * BINS) : 0] += w;
+            weights[to > from ? (int) Math.min(BINS - 1, (x - from) * scale) : 0] += w;
         }
     }
 

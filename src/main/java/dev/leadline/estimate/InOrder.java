@@ -16,7 +16,7 @@ import java.util.stream.IntStream;
 /// kept than may be, only the bins are counted: a rank is then known to lie between two outcomes, and a second pass
 /// over the same draws with that for a window finds it.
 final class InOrder {
-    private static final int BINS = 1024;
+    private static final int BINS = 16_384;
 
     private final Window window;
     private final boolean weighted;

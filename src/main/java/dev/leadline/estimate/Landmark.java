@@ -1,7 +1,9 @@
 package dev.leadline.estimate;
 
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
+import java.util.stream.IntStream;
 
 /// What pilot draws found of an outcome before a run, and the run then takes as given: where its middle lies, near what
 /// the quantile is, and between what values outcomes are to be kept one by one. Being the same for every observation it
@@ -76,12 +78,13 @@ public record Landmark(
         return new Landmark(draws, from, to, centre, level, others, sight);
     }
 
-    /// So many pilot draws show what the estimand needs: 200 beyond a quantile, as far as a million draws have them.
+    /// So many pilot draws show what the estimand needs: 200 beyond a quantile, as far as a million draws have
+    /// them, and so many that few outcomes lie near it.
     public static int pilotDraws(Estimand estimand) {
         return switch (estimand) {
             case Estimand.Quantile(double at) -> beyond(at);
             case Estimand.TailMean(double at) -> beyond(at);
-            case Estimand.Distribution _ -> LARGEST / 64;
+            case Estimand.Distribution _ -> MANY;
             case Estimand.Mean _,
                     Estimand.Integral _,
                     Estimand.Probability _,
@@ -92,13 +95,17 @@ public record Landmark(
 
     private static final int FEWEST = 4096;
     private static final int LARGEST = 1 << 20;
+
+    /// Windows about a quantile are the narrower the more there are.
+    private static final int MANY = 1 << 15;
+
     private static final double BEYOND = 200;
 
     /// With fewer pilot draws beyond it, the end of a window is no number.
     private static final double BEYOND_END = 10;
 
     private static int beyond(double at) {
-        return (int) Math.clamp(Math.ceil(BEYOND / Math.min(at, 1 - at)), FEWEST, LARGEST);
+        return (int) Math.clamp(Math.ceil(BEYOND / Math.min(at, 1 - at)), MANY, LARGEST);
     }
 
     /// @param outcomes of pilot draws; those that are not finite count nothing
@@ -176,19 +183,35 @@ public record Landmark(
     /// Pilot outcomes in rising order with their weights.
     private record Weighed(double[] values, double[] weights, double[] above, int draws) {
         static Weighed of(double[] outcomes, double[] weights) {
-            var order = new Integer[outcomes.length];
-            Arrays.setAll(order, i -> i);
-            Integer[] finite = Arrays.stream(order)
+            return Arrays.stream(weights).allMatch(w -> w == 1) ? ofEqual(outcomes) : ofWeighted(outcomes, weights);
+        }
+
+        private static Weighed ofEqual(double[] outcomes) {
+            double[] values =
+                    Arrays.stream(outcomes).filter(Double::isFinite).sorted().toArray();
+            double[] sizes = new double[values.length];
+            Arrays.fill(sizes, 1);
+            return of(values, sizes, outcomes.length);
+        }
+
+        private static Weighed ofWeighted(double[] outcomes, double[] weights) {
+            int[] order = IntStream.range(0, outcomes.length)
                     .filter(i -> Double.isFinite(outcomes[i]) && weights[i] > 0)
-                    .sorted((i, j) -> Double.compare(outcomes[i], outcomes[j]))
-                    .toArray(Integer[]::new);
-            double[] values = new double[finite.length];
-            double[] sizes = new double[finite.length];
-            Arrays.setAll(values, i -> outcomes[finite[i]]);
-            Arrays.setAll(sizes, i -> weights[finite[i]]);
-            double[] above = new double[finite.length];
+                    .boxed()
+                    .sorted(Comparator.comparingDouble(i -> outcomes[i]))
+                    .mapToInt(Integer::intValue)
+                    .toArray();
+            return of(
+                    Arrays.stream(order).mapToDouble(i -> outcomes[i]).toArray(),
+                    Arrays.stream(order).mapToDouble(i -> weights[i]).toArray(),
+                    outcomes.length);
+        }
+
+        /// @param values in rising order
+        private static Weighed of(double[] values, double[] sizes, int draws) {
+            double[] above = new double[values.length];
             double sum = 0;
-            for (int i = finite.length - 1; i >= 0; i--) {
+            for (int i = values.length - 1; i >= 0; i--) {
                 above[i] = sum;
                 sum += sizes[i];
             }
@@ -196,7 +219,7 @@ public record Landmark(
                 above[i] /= sum;
                 sizes[i] /= sum;
             }
-            return new Weighed(values, sizes, above, outcomes.length);
+            return new Weighed(values, sizes, above, draws);
         }
 
         int size() {

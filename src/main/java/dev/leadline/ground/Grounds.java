@@ -28,6 +28,7 @@ public final class Grounds {
         var grounds = new ArrayList<Ground>();
         for (int k = 0; k < evidence.answers().size(); k++) {
             Hits.judge(evidence, k).ifPresent(grounds::add);
+            TailDraws.judge(evidence, k).ifPresent(grounds::add);
             if (evidence.answers().get(k).interval().kind().equals(ToRounding.KIND)) {
                 grounds.add(Ground.shown(
                         "spread", evidence.of(k) + "every draw gives the same value up to rounding, by its weight"));

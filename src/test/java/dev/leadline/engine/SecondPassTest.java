@@ -83,7 +83,7 @@ class SecondPassTest {
                 .uniform("x", 0, 1)
                 .ask(new Estimand.Quantile(.5), "exp(x)")
                 .build();
-        Trace trace = run(question, new Independent(), 40, 1);
+        Trace trace = run(question, new Independent(), 5, 1);
         double exact = Math.exp(.5);
         long provisional = trace.marks().stream()
                 .filter(mark -> mark.answers().getFirst().provisional())

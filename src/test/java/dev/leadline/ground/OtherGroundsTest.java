@@ -332,4 +332,16 @@ class OtherGroundsTest {
         assertEquals("Make 12,000 draws", new Action.MoreDraws(OptionalLong.of(12_000)).words());
         assertTrue(Arrays.stream(Action.class.getPermittedSubclasses()).allMatch(Class::isRecord));
     }
+
+    /// Of 1,000 draws 10 lie beyond the .99 quantile, of 3,000 there are 30.
+    @Test
+    void tailMeansNeedDrawsBeyondTheQuantile() {
+        var question = normal(new Estimand.TailMean(.99), "z");
+        assertEquals(
+                "Only 10 draws lie beyond the quantile",
+                cautions("tail-draws", Judged.grounds(question, 1_000, 1)).text());
+        assertEquals(
+                "30 draws lie beyond the quantile",
+                shown("tail-draws", Judged.grounds(question, 3_000, 1)).text());
+    }
 }
