@@ -88,8 +88,9 @@ class SecondPassTest {
         long provisional = trace.marks().stream()
                 .filter(mark -> mark.answers().getFirst().provisional())
                 .count();
+        // A bin that holds one outcome tells it all the same, so that the marks of few draws are not provisional.
         assertTrue(
-                provisional > trace.marks().size() / 2,
+                provisional > trace.marks().size() / 3,
                 provisional + " of " + trace.marks().size());
         for (Mark mark : trace.marks()) {
             // Bins are narrow beside what chance does.
