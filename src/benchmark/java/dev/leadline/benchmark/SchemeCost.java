@@ -9,6 +9,7 @@ import dev.leadline.model.Lane;
 import dev.leadline.model.Question;
 import dev.leadline.scheme.Adaptation;
 import dev.leadline.scheme.Adaptation.Way;
+import dev.leadline.scheme.Allocation;
 import dev.leadline.scheme.Antithetic;
 import dev.leadline.scheme.Independent;
 import dev.leadline.scheme.LatinHypercube;
@@ -87,6 +88,9 @@ public final class SchemeCost {
                 of("antithetic", new Antithetic()),
                 of("stratified, 1,024 cells", new Stratified(new LinkedHashMap<>(Map.of("x", 1024)))),
                 of("stratified, 5 cells", new Stratified(new LinkedHashMap<>(Map.of("x", 5)))),
+                of(
+                        "stratified, 64 cells, shared",
+                        new Stratified(new LinkedHashMap<>(Map.of("x", 64)), new Allocation.Neyman())),
                 of("latin-hypercube, 100 points", new LatinHypercube(OptionalInt.of(100), 30)),
                 of("latin-hypercube, 10,000 points", new LatinHypercube(OptionalInt.of(10_000), 30)),
                 of("scrambled-sobol", new ScrambledSobol(16, Scrambling.NESTED)),

@@ -3,6 +3,7 @@ package dev.leadline.engine;
 import dev.leadline.estimate.Accumulator;
 import dev.leadline.formula.Program;
 import dev.leadline.scheme.Allocation;
+import java.util.Arrays;
 
 /// Observations that are the mean over cells of the means in them, which have different numbers of draws.
 /// Scratch of one worker.
@@ -13,8 +14,11 @@ final class CellMeans implements Folding {
     /// Of each cell of a pass.
     private final int[] draws;
 
-    /// What a draw of each cell counts, 1 on average.
-    private final double[] counts;
+    /// What each draw of a pass counts, 1 on average.
+    private final double[] ofDraws;
+
+    /// Of each cell, the first of its draws in a pass.
+    private final int[] begins;
 
     /// Cells of an observation, which may have several passes.
     private final int cells;
@@ -35,7 +39,17 @@ final class CellMeans implements Folding {
     /// @param turns passes of an observation
     CellMeans(Allocation.Found found, int turns, int components) {
         this.draws = found.draws().stream().mapToInt(Integer::intValue).toArray();
-        this.counts = found.counts();
+        this.begins = new int[draws.length];
+        int pass = 0;
+        for (int c = 0; c < draws.length; c++) {
+            begins[c] = pass;
+            pass += draws[c];
+        }
+        double[] counts = found.counts();
+        this.ofDraws = new double[pass];
+        for (int c = 0; c < draws.length; c++) {
+            Arrays.fill(ofDraws, begins[c], begins[c] + draws[c], counts[c]);
+        }
         this.cells = turns * draws.length;
         this.inCell = new double[components];
         this.before = new double[components];
@@ -99,33 +113,21 @@ final class CellMeans implements Folding {
 
     @Override
     public void count(double[] weights, int rows) {
-        int at = cell % draws.length;
-        int until = Math.min(rows, draws[at] - seen);
-        for (int row = 0; row < rows; ) {
-            for (; row < until; row++) {
-                weights[row] *= counts[at];
+        int at = begins[cell % draws.length] + seen;
+        for (int row = 0; row < rows; at = 0) {
+            int some = Math.min(rows - row, ofDraws.length - at);
+            for (int i = 0; i < some; i++) {
+                weights[row + i] *= ofDraws[at + i];
             }
-            at = (at + 1) % draws.length;
-            until = Math.min(rows, row + draws[at]);
+            row += some;
         }
     }
 
     @Override
     public double[][] counted(double[][] components, int rows) {
-        int at = cell % draws.length;
-        int until = Math.min(rows, draws[at] - seen);
-        for (int row = 0; row < rows; ) {
-            double count = counts[at];
-            for (int k = 0; k < counted.length; k++) {
-                double[] x = components[k];
-                double[] y = counted[k];
-                for (int i = row; i < until; i++) {
-                    y[i] = x[i] * count;
-                }
-            }
-            row = until;
-            at = (at + 1) % draws.length;
-            until = Math.min(rows, row + draws[at]);
+        for (int k = 0; k < counted.length; k++) {
+            System.arraycopy(components[k], 0, counted[k], 0, rows);
+            count(counted[k], rows);
         }
         return counted;
     }

@@ -5,8 +5,8 @@ import java.util.List;
 /// What an item of work has of the outcomes of one thing asked, beside the sums of its observations. Confined to one
 /// worker; outcomes that are not finite count nothing.
 public final class Catch {
-    /// Outcomes that a picture sees of one item.
-    private static final int SHOWN = 512;
+    /// Outcomes that a picture sees of one item at least, and of how many draws of a long one it sees one.
+    private static final int SHOWN = 64;
 
     /// Steps from one to the next vary, so that they fall in step with no layout of points.
     private static final int ODD = 7919;
@@ -89,7 +89,7 @@ public final class Catch {
     }
 
     private void show(double[] x, double[] w, int rows, int from, int all) {
-        int step = Math.max(1, all / SHOWN);
+        int step = Math.clamp(all / SHOWN, 1, SHOWN);
         if (step == 1) {
             for (int i = 0; i < rows; i++) {
                 if (Double.isFinite(x[i])) {

@@ -1,7 +1,7 @@
 package dev.leadline.estimate;
 
 /// How outcomes are spread, as a picture shows it: of bins of one width, what the outcomes in each weigh. Of
-/// long items of work it sees some five hundred draws, spread over the item.
+/// long items of work it sees one draw in 64, spread over the item.
 ///
 /// Confined to one worker until it is merged.
 public final class Histogram {
