@@ -4,8 +4,8 @@ import dev.leadline.estimate.Estimand;
 import dev.leadline.ground.Ground.Strength;
 import java.util.Optional;
 
-/// Whether enough draws lie beyond the quantile for the mean of what lies there. That
-/// 25 are enough is the rule for hits (common practice).
+/// Whether enough draws lie beyond the quantile for the mean of what lies there. That 25 are enough is the rule
+/// for hits (common practice).
 final class TailDraws {
     private static final long ENOUGH = 25;
 

@@ -20,11 +20,7 @@ final class Intervals {
     static IntervalWish of(IntervalDraft draft, Findings findings) {
         draft.bounds().ifPresent(bounds -> check(bounds, findings));
         IntervalKind kind = draft.kind().map(word -> kind(word, findings)).orElse(IntervalKind.AUTO);
-        boolean isBounded = switch (kind) {
-            case HOEFFDING, EMPIRICAL_BERNSTEIN -> true;
-            case AUTO, STUDENT, SKEWNESS_CORRECTED, CLOPPER_PEARSON, WILSON, BOOTSTRAP_T -> false;
-        };
-        if (isBounded && draft.bounds().isEmpty()) {
+        if (isBounded(kind) && draft.bounds().isEmpty()) {
             findings.add(
                     "$.interval",
                     "the interval \"%s\" needs bounds".formatted(kind.word()),
@@ -34,8 +30,23 @@ final class Intervals {
         return new IntervalWish(kind, draft.bounds());
     }
 
+    private static boolean isBounded(IntervalKind kind) {
+        return switch (kind) {
+            case HOEFFDING, EMPIRICAL_BERNSTEIN -> true;
+            case AUTO, STUDENT, SKEWNESS_CORRECTED, CLOPPER_PEARSON, WILSON, BOOTSTRAP_T -> false;
+        };
+    }
+
+    private static boolean isUnbounded(IntervalWish wish, List<Ask> asks, List<Input> inputs) {
+        return wish.bounds()
+                .map(stated -> asks.stream()
+                        .anyMatch(ask -> ObservedBounds.of(stated, ask.estimand(), inputs)
+                                .isEmpty()))
+                .orElse(false);
+    }
+
     /// Whether the kind suits every answer and every lane.
-    static void check(IntervalWish wish, List<Ask> asks, List<Lane> lanes, Findings findings) {
+    static void check(IntervalWish wish, List<Ask> asks, List<Input> inputs, List<Lane> lanes, Findings findings) {
         if (wish.kind() == IntervalKind.AUTO) {
             return;
         }
@@ -60,6 +71,14 @@ final class Intervals {
                         "Leave it out: each answer then gets the interval that suits it.");
                 return;
             }
+        }
+        if (isBounded(wish.kind()) && isUnbounded(wish, asks, inputs)) {
+            findings.add(
+                    "$.interval",
+                    "the interval \"%s\" is not for an integral over an unbounded range".formatted(kind),
+                    "A draw of it counts one over the density drawn from, so that it has no bounds.",
+                    "Leave it out, or give the integral a bounded range.");
+            return;
         }
         for (Lane lane : lanes) {
             if (!suits(wish.kind(), lane.scheme())) {

@@ -61,7 +61,7 @@ public record Project(Draft draft, Question question, Plan plan, List<Problem> n
         sound.ifPresent(formulas -> references.check(formulas, inputs, dependence, asks));
         List<Lane> lanes = Lanes.of(draft, inputs, sound, dependence, noting(files, read), findings);
         Stops.check(draft, asks, lanes, findings);
-        Intervals.check(interval, asks, lanes, findings);
+        Intervals.check(interval, asks, inputs, lanes, findings);
         findings.made(
                 _ -> draft.stop()
                         .flatMap(given -> given.draws().isPresent() ? Optional.of("$.stop.draws") : Optional.empty())

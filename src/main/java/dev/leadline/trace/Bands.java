@@ -17,8 +17,7 @@ import dev.leadline.interval.Looks;
 import dev.leadline.interval.RunningIntersection;
 import dev.leadline.interval.ToRounding;
 import dev.leadline.model.Components;
-import dev.leadline.model.Input;
-import dev.leadline.model.Input.Role;
+import dev.leadline.model.ObservedBounds;
 import dev.leadline.model.Question;
 import dev.leadline.model.Stop;
 import dev.leadline.model.Tolerance;
@@ -100,33 +99,11 @@ public final class Bands {
         boolean isGrowing = scheme.points() instanceof Growing
                 && !scheme.isWeighted()
                 && scheme.controls().isEmpty();
-        return question.interval().bounds().filter(_ -> isGrowing).flatMap(given -> switch (question.asks()
-                .get(ask)
-                .estimand()) {
-            case Estimand.Mean _ -> Optional.of(given);
-            case Estimand.Integral _ -> volume().map(v -> new Bounds(v * given.low(), v * given.high()));
-            case Estimand.Probability _,
-                    Estimand.Quantile _,
-                    Estimand.TailMean _,
-                    Estimand.Ratio _,
-                    Estimand.StandardDeviation _,
-                    Estimand.Distribution _ -> Optional.empty();
-        });
-    }
-
-    /// What the integrand is multiplied by, where that is one number.
-    private Optional<Double> volume() {
-        double volume = 1;
-        for (Input input : question.inputs()) {
-            switch (input.role()) {
-                case Role.Random() -> {}
-                case Role.Range(double low, double high) -> volume *= high - low;
-                case Role.UnboundedRange _ -> {
-                    return Optional.empty();
-                }
-            }
-        }
-        return Optional.of(volume);
+        return question.interval()
+                .bounds()
+                .filter(_ -> isGrowing)
+                .flatMap(stated ->
+                        ObservedBounds.of(stated, question.asks().get(ask).estimand(), question.inputs()));
     }
 
     /// Takes in the sums of the next item of work.

@@ -23,6 +23,7 @@ import dev.leadline.interval.Wilson;
 import dev.leadline.model.Ask;
 import dev.leadline.model.Input;
 import dev.leadline.model.Input.Role;
+import dev.leadline.model.ObservedBounds;
 import dev.leadline.scheme.Control;
 import dev.leadline.scheme.Growing;
 import dev.leadline.scheme.Independent;
@@ -86,20 +87,27 @@ final class MeanAnswers {
         Accumulator sums = shown.sums();
         int k = shown.first();
         double level = shown.level();
-        var wish = shown.question().interval();
-        return switch (wish.kind()) {
+        return switch (shown.question().interval().kind()) {
             case AUTO, STUDENT, CLOPPER_PEARSON, WILSON -> Student.of(estimate, level);
             case SKEWNESS_CORRECTED -> SkewnessCorrected.of(sums, k, level);
             case HOEFFDING -> {
-                Bounds bounds = wish.bounds().orElseThrow();
+                Bounds bounds = bounds(shown);
                 yield Hoeffding.of(sums, k, bounds.low(), bounds.high(), level);
             }
             case EMPIRICAL_BERNSTEIN -> {
-                Bounds bounds = wish.bounds().orElseThrow();
+                Bounds bounds = bounds(shown);
                 yield EmpiricalBernstein.of(sums, k, bounds.low(), bounds.high(), level);
             }
             case BOOTSTRAP_T -> resampled(shown, estimate);
         };
+    }
+
+    /// Of the observations; there are some wherever a kind is wanted that needs them.
+    private static Bounds bounds(Shown shown) {
+        var question = shown.question();
+        return ObservedBounds.of(
+                        question.interval().bounds().orElseThrow(), shown.ask().estimand(), question.inputs())
+                .orElseThrow();
     }
 
     /// From the observations themselves, at the end of a run, since it takes long; Student's until then.

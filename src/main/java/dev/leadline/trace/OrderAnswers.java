@@ -16,6 +16,8 @@ import java.util.Optional;
 
 /// Answers that follow from outcomes in their order: quantiles, tail means, distributions.
 final class OrderAnswers {
+    private static final Place NOWHERE = new Place(Double.NaN, Double.NaN);
+
     private OrderAnswers() {}
 
     static Answer quantile(Shown shown, double at) {
@@ -34,8 +36,6 @@ final class OrderAnswers {
         Place high = ranks.hasHigh() ? outcomes.ranked(ranks.high()) : NOWHERE;
         return answer(shown, place, Double.NaN, ranks.interval(low.value(), high.value()), low, high);
     }
-
-    private static final Place NOWHERE = new Place(Double.NaN, Double.NaN);
 
     /// Of all others: from the error of the share beyond a level near the quantile.
     private static Answer inverted(Shown shown, double at, Outcomes outcomes, Place place) {

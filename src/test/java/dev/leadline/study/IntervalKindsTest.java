@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import dev.leadline.model.Project;
 import dev.leadline.project.ProjectFile;
 import dev.leadline.trace.Answer;
+import dev.leadline.trace.Mark;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -56,6 +57,23 @@ class IntervalKindsTest {
     void boundsDecideItsLength() throws InterruptedException {
         Answer answer = run("{\"mean\": \"exp(x)\"}", ", \"interval\": \"hoeffding\", \"bounds\": [1, 2.72]", 5_000, 1);
         assertEquals(1.72 * Math.sqrt(Math.log(40) / 10_000), answer.interval().halfWidth(), 1e-12);
+    }
+
+    /// An integral counts the length of its range: ten times the integrand, ten times its bounds.
+    @Test
+    void boundsOfAnIntegrandCountTheVolume() throws InterruptedException {
+        Project project = Project.of(ProjectFile.parse("""
+                {"leadline": 1, "seed": 3, "stop": {"rule": "fixed", "draws": 5000},
+                 "inputs": [{"name": "x", "range": [0, 10]}],
+                 "ask": {"integral": "exp(-x)"}, "interval": "hoeffding", "bounds": [0, 1]}
+                """));
+        try (var study = Study.start(project.question(), project.plan(), 1, _ -> {})) {
+            Mark last = study.await().lanes().getFirst().trace().last().orElseThrow();
+            var interval = last.answers().getFirst().interval();
+            // The exact half-width, less what the limit 0 cuts off.
+            double half = 10 * Math.sqrt(Math.log(40) / 10_000);
+            assertEquals(last.answers().getFirst().estimate() + half, interval.high(), 1e-12);
+        }
     }
 
     @Test
